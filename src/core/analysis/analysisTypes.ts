@@ -1,0 +1,177 @@
+import type { BothReadings } from "../kinetics/index.ts";
+import type { DoseAmount } from "../regimen/index.ts";
+import type { UnitCode } from "../units/index.ts";
+
+/**
+ * What `derive(case)` returns: everything the screens, the summary and `recompute` show.
+ * Plain data (structured-cloneable). Times `…H` are elapsed hours from `clock.originMs`; amounts mg, concentrations mg/L.
+ */
+
+/** A value that can be traced: where it came from, with its formula and the numbers put into it. */
+export interface Traced {
+  readonly value: number;
+  readonly unit: UnitCode;
+  /** Formula in plain text, names as in the working. */
+  readonly formula: string;
+  /** The numbers that went in, by the names in the formula, with their units. */
+  readonly inputs: readonly { readonly name: string; readonly value: number; readonly unit: UnitCode }[];
+  readonly source: string;
+  readonly basis: string;
+}
+
+export type DoseStatus = "taken" | "missed" | "late" | "moved" | "after-now" | "before-now";
+
+export interface DoseMark {
+  readonly lineId: string;
+  readonly index: number;
+  readonly product: string;
+  readonly atH: number;
+  readonly scheduledH: number;
+  readonly amount: DoseAmount;
+  /** mg of the active moiety; 0 when it does not count (missed, or on the wrong side of the now line). */
+  readonly countedMg: number;
+  readonly status: DoseStatus;
+}
+
+export interface Curve {
+  readonly timesH: Float64Array;
+  /** mg/L */
+  readonly values: Float64Array;
+}
+
+export interface PatientFigures {
+  /** Latest value at or before the now line. */
+  readonly weight: Traced | null;
+  readonly creatinine: Traced | null;
+  readonly idealWeight: Traced | null;
+  readonly adjustedWeight: Traced | null;
+  readonly bodyMassIndex: Traced | null;
+  readonly creatinineClearance: Traced | null;
+  /** Which weight went into creatinineClearance. */
+  readonly clearanceWeight: "actual" | "ideal" | "adjusted" | null;
+}
+
+export interface ProductModel {
+  readonly product: string;
+  readonly absorptionRate: Traced; // /h
+  readonly lag: Traced; // h
+  readonly bioavailability: Traced; // 1
+  readonly readings: BothReadings;
+}
+
+/** The kinetics of one patient reading of the model (typical now; individual once levels adjust it). */
+export interface Model {
+  readonly clearance: Traced; // L/h
+  readonly volume: Traced; // L
+  readonly eliminationRate: Traced; // /h
+  readonly halfLife: Traced; // h
+  readonly products: readonly ProductModel[];
+}
+
+export interface SpanReadings {
+  readonly fromH: number;
+  readonly toH: number;
+  readonly peak: number;
+  readonly timeOfPeakH: number;
+  readonly lowest: number;
+  readonly timeOfLowestH: number;
+  readonly average: number;
+  readonly auc: number; // mg·h/L
+  readonly auc24: number; // mg·h/L, average × 24 h
+  /** null when the case has no concentration window. */
+  readonly hoursBelow: number | null;
+  readonly hoursWithin: number | null;
+  readonly hoursAbove: number | null;
+}
+
+export interface SteadyStateReadings {
+  /** The repeating pattern these refer to, h. */
+  readonly periodH: number;
+  readonly dosePerPeriodMg: number;
+  readonly peak: number;
+  /** Hours from the dose before it to the peak. */
+  readonly peakAfterDoseH: number;
+  readonly lowest: number;
+  readonly lowestAfterDoseH: number;
+  readonly average: number;
+  readonly auc24: number;
+  readonly swing: number;
+  readonly fluctuation: number;
+  /** AUC over the period at steady state / AUC over the first period. */
+  readonly accumulation: number;
+  /** Elapsed hours from the first dose of the pattern until 90 % of the way to steady state (slower of ka and ke). */
+  readonly timeTo90H: number;
+  /** The same as an instant on the case clock. */
+  readonly steady90AtH: number;
+  readonly slower: "absorption" | "elimination";
+}
+
+export interface OptionReadings {
+  readonly span: SpanReadings;
+  /** null with a reason code (messages) when the option has no repeating pattern. */
+  readonly steadyState: SteadyStateReadings | null;
+  readonly noSteadyState: "no-repeat" | "no-common-period" | null;
+  readonly dailyDoseMg: number | null;
+  readonly halfLifeH: number;
+}
+
+export interface OptionResult {
+  readonly id: string;
+  readonly doses: readonly DoseMark[];
+  readonly curve: Curve | null;
+  readonly typical: OptionReadings | null;
+  readonly individual: OptionReadings | null;
+}
+
+export interface LevelResult {
+  readonly id: string;
+  readonly atH: number;
+  /** mg/L */
+  readonly measured: number;
+  /** Half-width of the assay bar, mg/L (one residual standard deviation of the record), null if the record has none. */
+  readonly assaySd: number | null;
+  readonly predicted: number | null;
+  /** measured − predicted, mg/L */
+  readonly difference: number | null;
+  /** Hours since the last counted dose before it. */
+  readonly afterDoseH: number | null;
+  readonly excluded: string | null;
+  readonly belowLimit: boolean;
+}
+
+export type Gravity = "stop" | "check" | "note";
+
+export interface Concern {
+  /** Stable: code, or code:subject. */
+  readonly id: string;
+  readonly code: string;
+  readonly gravity: Gravity;
+  readonly about: { readonly kind: "case" | "patient" | "given" | "level" | "option" | "medicine"; readonly id?: string };
+  readonly data: Readonly<Record<string, unknown>>;
+}
+
+export interface Analysis {
+  readonly clock: {
+    /** Epoch milliseconds of hour 0: local midnight of the first day shown. */
+    readonly originMs: number;
+    readonly timeZone: string;
+    readonly nowH: number;
+    /** Span shown and swept. */
+    readonly fromH: number;
+    readonly toH: number;
+    /** Local midnights inside the span, for day lines (daylight-saving safe). */
+    readonly midnightsH: readonly number[];
+  };
+  readonly patient: PatientFigures;
+  /** null when something needed is missing; the concerns say what. */
+  readonly typical: Model | null;
+  readonly individual: Model | null;
+  readonly given: readonly DoseMark[];
+  readonly givenCurve: Curve | null;
+  readonly levels: readonly LevelResult[];
+  readonly options: readonly OptionResult[];
+  readonly concerns: readonly Concern[];
+  /** SHA-256 over the canonical JSON of the inputs that matter, hex. */
+  readonly fingerprint: string;
+  readonly engine: string;
+}

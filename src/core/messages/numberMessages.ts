@@ -1,0 +1,3 @@
+import type { MessageFunction } from "./index.ts";
+
+export const numberMessages: Readonly<Record<string, MessageFunction>> = {};

@@ -1,0 +1,93 @@
+import type { Analysis } from "../../core/analysis/index.ts";
+import type { Case, EditArguments, EditName } from "../../core/case/index.ts";
+import type { MedicineRecord } from "../../core/medicine/index.ts";
+import type { Issue, Result } from "../../core/result/index.ts";
+import type { CaseEntry, StorageState } from "./ports.ts";
+
+/** The state of the open workbench and what can be done to it. Screens read this through view/useWorkbench.ts. */
+
+export type Screen = "cases" | "bench" | "summary" | "medicines" | "settings";
+
+export interface Settings {
+  readonly pageSize: "A4" | "Letter";
+  /** How micrograms are written in print: "microgram" or "mcg". */
+  readonly microgram: "microgram" | "mcg";
+  readonly preparedBy: string;
+}
+
+export interface Saving {
+  readonly status: "unsaved" | "saving" | "saved" | "failed" | "read-only";
+  readonly savedAt: number | null;
+  /** Why, for failed and read-only: "quota", "newer", "other-tab", "closed", "failed", "lost". */
+  readonly reason: string | null;
+  readonly detail: string;
+}
+
+export interface AnalysisState {
+  readonly result: Analysis | null;
+  /** Revision of the case the result came from. */
+  readonly revision: number;
+  readonly status: "running" | "fresh" | "failed";
+  readonly failure: string | null;
+}
+
+export interface OpenCase {
+  readonly value: Case;
+  /** Counts every change, undo and redo included. */
+  readonly revision: number;
+  readonly role: "writer" | "reader";
+  readonly undo: readonly { readonly name: EditName }[];
+  readonly redo: readonly { readonly name: EditName }[];
+  readonly saving: Saving;
+  readonly analysis: AnalysisState;
+  /** A drag in progress: what is shown but not yet an edit. */
+  readonly preview: Case | null;
+}
+
+export interface Notice {
+  readonly id: number;
+  readonly gravity: "stop" | "check" | "note";
+  readonly issues: readonly Issue[];
+}
+
+export interface WorkbenchState {
+  readonly boot: { readonly kind: "opening" } | StorageState;
+  readonly screen: Screen;
+  readonly entries: readonly CaseEntry[];
+  /** Built-in records first, then the ward's own. */
+  readonly medicines: readonly MedicineRecord[];
+  readonly settings: Settings;
+  readonly open: OpenCase | null;
+  readonly notices: readonly Notice[];
+  readonly update: "none" | "waiting";
+
+  start(): Promise<void>;
+  acceptLoss(): Promise<void>;
+  show(screen: Screen): void;
+  newCase(fields: { label: string; medicine: string; timeZone: string; now: string }): Promise<void>;
+  openCase(id: string): Promise<void>;
+  /** Makes a fresh copy of a bundled demo case and opens it. */
+  openDemo(name: string): Promise<void>;
+  closeCase(): Promise<void>;
+  removeCase(id: string): Promise<void>;
+  /** Nothing is written unless the whole file is good; a case with the same id is kept beside it under a new id. */
+  importFile(name: string, text: string): Promise<Result<Case>>;
+  /** The open case as a file. Works also when nothing can be saved. */
+  exportFile(): { readonly name: string; readonly text: string } | null;
+
+  edit<N extends EditName>(name: N, args: EditArguments<N>): void;
+  /** During a drag: show the outcome of the edit without making it. */
+  previewEdit<N extends EditName>(name: N, args: EditArguments<N>): void;
+  cancelPreview(): void;
+  undo(): void;
+  redo(): void;
+
+  changeSettings(change: Partial<Settings>): Promise<void>;
+  notify(gravity: Notice["gravity"], issues: readonly Issue[]): void;
+  dismiss(id: number): void;
+  /** A new version of the program waits; `applyUpdate` saves first, then takes it. */
+  offerUpdate(apply: () => void): void;
+  applyUpdate(): Promise<void>;
+  /** Everything on disk: resolves when nothing is unsaved or saving (or it can't be saved). */
+  settle(): Promise<void>;
+}
