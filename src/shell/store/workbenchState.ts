@@ -1,5 +1,5 @@
 import type { Analysis } from "../../core/analysis/index.ts";
-import type { Case, EditArguments, EditName } from "../../core/case/index.ts";
+import type { Case, EditArguments, EditName, TargetWindow } from "../../core/case/index.ts";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
 import type { Issue, Result } from "../../core/result/index.ts";
 import type { CaseEntry, StorageState } from "./ports.ts";
@@ -50,12 +50,33 @@ export interface Notice {
   readonly issues: readonly Issue[];
 }
 
+/** A bundled demonstration, as offered on the cases screen. */
+export interface DemoEntry {
+  /** What `openDemo` is called with. */
+  readonly name: string;
+  readonly label: string;
+  readonly medicine: string;
+  /** One sentence: what it shows. */
+  readonly about: string;
+}
+
+/** A target window the ward keeps of its own, for one medicine. */
+export interface WardWindow {
+  readonly medicine: string;
+  readonly id: string;
+  readonly window: TargetWindow;
+}
+
 export interface WorkbenchState {
   readonly boot: { readonly kind: "opening" } | StorageState;
   readonly screen: Screen;
   readonly entries: readonly CaseEntry[];
   /** Built-in records first, then the ward's own. */
   readonly medicines: readonly MedicineRecord[];
+  /** Ids of those in `medicines` that are the ward's own and can be removed. */
+  readonly ownMedicines: readonly string[];
+  readonly wardWindows: readonly WardWindow[];
+  readonly demos: readonly DemoEntry[];
   readonly settings: Settings;
   readonly open: OpenCase | null;
   readonly notices: readonly Notice[];
@@ -74,6 +95,14 @@ export interface WorkbenchState {
   importFile(name: string, text: string): Promise<Result<Case>>;
   /** The open case as a file. Works also when nothing can be saved. */
   exportFile(): { readonly name: string; readonly text: string } | null;
+  /** A stored case as a file, without opening it. */
+  exportStored(id: string): Promise<Result<{ readonly name: string; readonly text: string }>>;
+
+  /** A ward's own record from the text of a JSON file; stored only if the whole file is good. A built-in id is refused. */
+  importMedicine(name: string, text: string): Promise<Result<MedicineRecord>>;
+  removeMedicine(id: string): Promise<Result<null>>;
+  saveWindow(medicine: string, id: string, window: TargetWindow): Promise<Result<null>>;
+  removeWindow(medicine: string, id: string): Promise<Result<null>>;
 
   edit<N extends EditName>(name: N, args: EditArguments<N>): void;
   /** During a drag: show the outcome of the edit without making it. */
