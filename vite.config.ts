@@ -2,20 +2,45 @@ import { fileURLToPath } from "node:url";
 import optimizeLocales from "@react-aria/optimize-locales-plugin";
 import react from "@vitejs/plugin-react";
 import { defineConfig } from "vitest/config";
+import { offlineWorker, policyIntoPage } from "./.ci/offlineBuild.ts";
+import { DEVELOPMENT_POLICY, SECURITY_HEADERS } from "./src/shell/offline/contentSecurityPolicy.ts";
 
 const at = (path: string) => fileURLToPath(new URL(path, import.meta.url));
 
 export default defineConfig({
   root: at("./src"),
   publicDir: at("./public"),
-  build: { outDir: at("./dist"), emptyOutDir: true, target: "es2022" },
+  // Relative addresses: the built folder works wherever a host puts it.
+  base: "./",
+  server: { host: "127.0.0.1", headers: { ...SECURITY_HEADERS, "Content-Security-Policy": DEVELOPMENT_POLICY } },
+  preview: { host: "127.0.0.1", headers: SECURITY_HEADERS },
+  build: {
+    outDir: at("./dist"),
+    emptyOutDir: true,
+    target: "es2022",
+    // Nothing inlined: the policy allows fonts and scripts from files only.
+    assetsInlineLimit: 0,
+    modulePreload: { polyfill: false },
+    chunkSizeWarningLimit: 1500,
+  },
   worker: { format: "es" },
-  plugins: [{ ...optimizeLocales.vite({ locales: ["en-GB"] }), enforce: "pre" }, react()],
+  plugins: [
+    { ...optimizeLocales.vite({ locales: ["en-GB"] }), enforce: "pre" },
+    react(),
+    policyIntoPage(),
+    offlineWorker(at("./src/shell/offline/serviceWorker.ts")),
+  ],
   test: {
     root: at("."),
+    allowOnly: false,
     projects: [
       {
-        test: { name: "unit", root: at("."), environment: "node", include: ["tests/{core,shell,architecture}/**/*.test.ts"] },
+        test: {
+          name: "unit",
+          root: at("."),
+          environment: "node",
+          include: ["tests/{core,shell,architecture}/**/*.test.ts"],
+        },
       },
       {
         test: { name: "outside", root: at("."), environment: "node", include: ["tests/outside/**/*.test.ts"] },
@@ -32,7 +57,13 @@ export default defineConfig({
         },
       },
       {
-        test: { name: "bench", root: at("."), environment: "node", include: [], benchmark: { include: ["tests/bench/**/*.bench.ts"] } },
+        test: {
+          name: "bench",
+          root: at("."),
+          environment: "node",
+          include: [],
+          benchmark: { include: ["tests/bench/**/*.bench.ts"] },
+        },
       },
     ],
   },
