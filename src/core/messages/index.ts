@@ -1,11 +1,13 @@
 import type { Issue } from "../result/index.ts";
 import { numberMessages } from "./numberMessages.ts";
+import { timeMessages } from "./timeMessages.ts";
 
 /** Every sentence a user can read about a fault, one function a code; a folder's sentences stand in one file each. */
 export type MessageFunction = (data: Readonly<Record<string, unknown>>) => string;
 
 const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...numberMessages,
+  ...timeMessages,
 };
 
 export const MESSAGE_CODES: readonly string[] = Object.keys(catalogue);
@@ -16,3 +18,6 @@ export function issueMessage(issue: Issue): string {
   if (!message) throw new RangeError(`no message for the code "${issue.code}"`);
   return message(issue.data);
 }
+
+export * from "./fieldWords.ts";
+export * from "./screenWords.ts";

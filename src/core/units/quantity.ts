@@ -6,19 +6,42 @@ import { z } from "zod";
  */
 export const UNIT_CODES = [
   // mass
-  "kg", "g", "mg", "ug", "[lb_av]",
+  "kg",
+  "g",
+  "mg",
+  "ug",
+  "[lb_av]",
   // length
-  "m", "cm", "[in_i]",
+  "m",
+  "cm",
+  "[in_i]",
   // volume
-  "L", "mL",
+  "L",
+  "mL",
   // time
-  "a", "mo", "d", "h", "min",
+  "a",
+  "mo",
+  "d",
+  "h",
+  "min",
   // mass concentration
-  "mg/L", "ug/mL", "ug/L", "ng/mL", "mg/dL", "g/L", "g/dL", "mg/mL",
+  "mg/L",
+  "ug/mL",
+  "ug/L",
+  "ng/mL",
+  "mg/dL",
+  "g/L",
+  "g/dL",
+  "mg/mL",
   // molar concentration
-  "mmol/L", "umol/L", "nmol/L",
+  "mmol/L",
+  "umol/L",
+  "nmol/L",
   // flow
-  "L/h", "mL/min", "L/h/kg", "L/kg",
+  "L/h",
+  "mL/min",
+  "L/h/kg",
+  "L/kg",
   // rate
   "/h",
   // molar mass
@@ -26,7 +49,8 @@ export const UNIT_CODES = [
   // exposure
   "mg.h/L",
   // pure number
-  "1", "%",
+  "1",
+  "%",
 ] as const;
 
 export type UnitCode = (typeof UNIT_CODES)[number];

@@ -1,0 +1,12 @@
+export { MONTHS, WEEKDAYS } from "./calendarWords.ts";
+export { clockInstant } from "./clockInstant.ts";
+export { type ClockOnDay, clockOnDay } from "./clockOnDay.ts";
+export { hoursBetween } from "./hoursBetween.ts";
+export { instantAddHours, instantIso, instantMs, instantSchema } from "./instant.ts";
+export { type InstantPhrase, instantPhraseRead, instantPhraseResolve, type PhraseWord } from "./instantPhrase.ts";
+export { instantRead } from "./instantRead.ts";
+export { type InstantForm, instantText } from "./instantText.ts";
+export { localMidnight, midnightsBetween } from "./localMidnight.ts";
+export { MS_PER_HOUR } from "./msPerHour.ts";
+export { timeZoneSchema } from "./timeZone.ts";
+export { type WallClock, wallClock } from "./wallClock.ts";

@@ -1,0 +1,11 @@
+export { type ForbiddenForm, forbiddenForms } from "./forbiddenForms.ts";
+export { type NumberPrintOptions, numberPlain, numberPrint } from "./numberPrint.ts";
+export { numberRead } from "./numberRead.ts";
+export { type Quantity, quantityIn, quantitySchema, UNIT_CODES, type UnitCode } from "./quantity.ts";
+export { quantityConvert } from "./quantityConvert.ts";
+export { type QuantityPrintOptions, quantityPrint } from "./quantityPrint.ts";
+export { type QuantityReadOptions, quantityRead } from "./quantityRead.ts";
+export { type MicrogramWord, type UnitStyle, unitSpoken } from "./unitSpoken.ts";
+export { unitsCompatible } from "./unitsCompatible.ts";
+export { type UnitDimension, unitDimension } from "./unitTable.ts";
+export { unitWordRead } from "./unitWordRead.ts";
