@@ -1,5 +1,6 @@
 import type { Issue } from "../result/index.ts";
 import { numberMessages } from "./numberMessages.ts";
+import { patientMessages } from "./patientMessages.ts";
 import { timeMessages } from "./timeMessages.ts";
 
 /** Every sentence a user can read about a fault, one function a code; a folder's sentences stand in one file each. */
@@ -7,6 +8,7 @@ export type MessageFunction = (data: Readonly<Record<string, unknown>>) => strin
 
 const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...numberMessages,
+  ...patientMessages,
   ...timeMessages,
 };
 

@@ -1,0 +1,12 @@
+export { adjustedWeight, adjustedWeightSource } from "./adjustedWeight.ts";
+export { ageQuestion } from "./ageQuestion.ts";
+export { bodyMassIndex, bodyMassIndexSource } from "./bodyMassIndex.ts";
+export { clearanceWeight, clearanceWeightSource } from "./clearanceWeight.ts";
+export { clearanceQuestion, cockcroftGault, cockcroftGaultSource } from "./cockcroftGault.ts";
+export { CREATININE_UMOL_PER_L_PER_MG_PER_DL, creatinineMgPerDl } from "./creatinineMgPerDl.ts";
+export { creatinineQuestion } from "./creatinineQuestion.ts";
+export type { Doubt } from "./doubt.ts";
+export type { FormulaSource, Sex } from "./formulaSource.ts";
+export { heightQuestion } from "./heightQuestion.ts";
+export { IDEAL_WEIGHT_LOWEST_CM, idealWeightDevine, idealWeightDevineSource } from "./idealWeightDevine.ts";
+export { weightQuestion } from "./weightQuestion.ts";
