@@ -1,14 +1,26 @@
 /** The medicine record: its schema, its formulas over the patient, the built-in records, and amounts of its products in mg. */
+export { COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
+export { type FormulaInput, formulaEvaluate } from "./covariateFormula.ts";
+export { doseMg, productDoseUnits } from "./doseMg.ts";
+export { FORMULA_FUNCTIONS, formulaFaults } from "./formulaRead.ts";
+export { medicineParse, recordIssues } from "./medicineParse.ts";
 export {
   BASES,
   type Basis,
   type Figure,
+  type Formula,
   kineticsSchema,
   type MedicineRecord,
-  medicineRecordSchema,
   type Product,
   productSchema,
+  type RecordWindow,
   recordWindowSchema,
   type Source,
   sourceSchema,
 } from "./medicineRecord.ts";
+export { medicineRecordSchema } from "./medicineRecordSchema.ts";
+export { productOf } from "./productOf.ts";
+export { windowChecks } from "./recordChecks.ts";
+export { type RecordFigure, recordFigures, unverifiedFigures } from "./recordFigures.ts";
+export { BUILT_IN_RECORDS, recordById } from "./records/index.ts";
+export { pathText, schemaIssues } from "./schemaIssues.ts";

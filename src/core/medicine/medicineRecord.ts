@@ -21,8 +21,12 @@ export const sourceSchema = z.strictObject({
 });
 
 const figureSchema = z.strictObject({ value: z.number(), unit: z.enum(UNIT_CODES), ...provenance });
-/** A formula over the patient's covariates; names allowed in it are listed in core/medicine/covariateFormula.ts. */
-const formulaSchema = z.strictObject({ formula: z.string().min(1).max(400), unit: z.enum(["L/h", "L"]), ...provenance });
+/** A formula over the patient's covariates; names allowed in it are listed in core/medicine/covariates.ts. */
+const formulaSchema = z.strictObject({
+  formula: z.string().min(1).max(400),
+  unit: z.enum(["L/h", "L"]),
+  ...provenance,
+});
 const statementSchema = z.strictObject({ text: z.string().min(1), ...provenance });
 const cautionSchema = z.strictObject({ text: z.string().min(1), category: z.string().min(1), ...provenance });
 
@@ -62,7 +66,8 @@ export const recordWindowSchema = z.strictObject({
   ...provenance,
 });
 
-export const medicineRecordSchema = z.strictObject({
+/** The shape alone; medicineRecordSchema adds the checks across fields. */
+export const recordShapeSchema = z.strictObject({
   format: z.literal("ebbline-medicine"),
   version: z.literal(1),
   id: z.string().min(1).max(64),
@@ -70,7 +75,11 @@ export const medicineRecordSchema = z.strictObject({
   recordVersion: z.int().min(1),
   name: z.string().min(1).max(80),
   invented: z.boolean(),
-  review: z.strictObject({ status: z.enum(["not-reviewed", "reviewed"]), by: z.string().optional(), on: z.string().optional() }),
+  review: z.strictObject({
+    status: z.enum(["not-reviewed", "reviewed"]),
+    by: z.string().optional(),
+    on: z.string().optional(),
+  }),
   matrix: z.string().min(1),
   molarMass: figureSchema,
   sources: z.record(z.string(), sourceSchema),
@@ -83,7 +92,12 @@ export const medicineRecordSchema = z.strictObject({
     residualProportional: figureSchema.optional(),
     residualAdditive: figureSchema.optional(),
   }),
-  population: z.strictObject({ text: z.string().min(1), ageMin: z.number().optional(), ageMax: z.number().optional(), ...provenance }),
+  population: z.strictObject({
+    text: z.string().min(1),
+    ageMin: z.number().optional(),
+    ageMax: z.number().optional(),
+    ...provenance,
+  }),
   products: z.array(productSchema).min(1),
   windows: z.array(recordWindowSchema),
   toxicFrom: figureSchema.optional(),
@@ -92,7 +106,9 @@ export const medicineRecordSchema = z.strictObject({
   cautions: z.array(cautionSchema),
 });
 
-export type MedicineRecord = z.infer<typeof medicineRecordSchema>;
+export type MedicineRecord = z.infer<typeof recordShapeSchema>;
 export type Product = z.infer<typeof productSchema>;
 export type Figure = z.infer<typeof figureSchema>;
 export type Source = z.infer<typeof sourceSchema>;
+export type Formula = z.infer<typeof formulaSchema>;
+export type RecordWindow = z.infer<typeof recordWindowSchema>;
