@@ -1,25 +1,7 @@
-import type { Issue } from "../result/index.ts";
-import { numberMessages } from "./numberMessages.ts";
-import { patientMessages } from "./patientMessages.ts";
-import { timeMessages } from "./timeMessages.ts";
-
-/** Every sentence a user can read about a fault, one function a code; a folder's sentences stand in one file each. */
-export type MessageFunction = (data: Readonly<Record<string, unknown>>) => string;
-
-const catalogue: Readonly<Record<string, MessageFunction>> = {
-  ...numberMessages,
-  ...patientMessages,
-  ...timeMessages,
-};
-
-export const MESSAGE_CODES: readonly string[] = Object.keys(catalogue);
-
-/** The sentence for an issue. An unknown code is a programmer's mistake and throws. */
-export function issueMessage(issue: Issue): string {
-  const message = catalogue[issue.code];
-  if (!message) throw new RangeError(`no message for the code "${issue.code}"`);
-  return message(issue.data);
-}
-
+export { benchWords } from "./benchWords.ts";
+export { type ConcernWords, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
+export { MESSAGE_CODES, issueMessage } from "./issueMessage.ts";
+export type { MessageFunction } from "./messageFunction.ts";
+export { windowQuantityWord } from "./windowWords.ts";
 export * from "./fieldWords.ts";
 export * from "./screenWords.ts";

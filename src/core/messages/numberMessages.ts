@@ -1,5 +1,5 @@
 import { UNIT_CODES, type UnitCode, unitSpoken } from "../units/index.ts";
-import type { MessageFunction } from "./index.ts";
+import type { MessageFunction } from "./messageFunction.ts";
 
 const said = (value: unknown): string => `"${String(value)}"`;
 const KNOWN: ReadonlySet<string> = new Set(UNIT_CODES);

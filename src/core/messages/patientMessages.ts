@@ -1,5 +1,5 @@
 import { numberPrint, quantityConvert, quantityPrint, type UnitCode } from "../units/index.ts";
-import type { MessageFunction } from "./index.ts";
+import type { MessageFunction } from "./messageFunction.ts";
 
 type Data = Readonly<Record<string, unknown>>;
 

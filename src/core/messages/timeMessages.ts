@@ -1,5 +1,5 @@
 import { instantMs, instantText, MONTHS } from "../time/index.ts";
-import type { MessageFunction } from "./index.ts";
+import type { MessageFunction } from "./messageFunction.ts";
 
 type Data = Readonly<Record<string, unknown>>;
 const strings = (value: unknown): readonly string[] => (Array.isArray(value) ? value.map(String) : []);

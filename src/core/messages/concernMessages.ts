@@ -1,0 +1,160 @@
+import type { Issue } from "../result/index.ts";
+import { instantText } from "../time/index.ts";
+import { numberPrint, type Quantity, quantityPrint } from "../units/index.ts";
+import type { TargetWindow } from "../case/index.ts";
+import { issueMessage } from "./issueMessage.ts";
+import { windowQuantityWord } from "./windowWords.ts";
+
+/** A concern as a human reads it: a title that says it all, and what to do about it. */
+export interface ConcernWords {
+  readonly title: string;
+  readonly text: string;
+}
+
+type Data = Readonly<Record<string, unknown>>;
+
+const number = (data: Data, key: string): number => data[key] as number;
+const text = (data: Data, key: string): string => data[key] as string;
+const figure = (value: number): string => numberPrint(value, { significant: 3 });
+const concentration = (value: number): string => `${figure(value)} mg per L`;
+const hours = (value: number): string => `${figure(value)} hours`;
+const when = (data: Data): string => instantText(number(data, "atMs"), text(data, "zone"), "dayClock");
+const plural = (count: number, one: string, many: string): string => `${count} ${count === 1 ? one : many}`;
+
+const FACTOR_WORDS: Readonly<Record<string, string>> = {
+  smoking: "Smoking",
+  "interacting-medicine": "Interacting medicine",
+  meal: "Meal",
+  vomiting: "Vomiting",
+  other: "Event",
+};
+
+const OBSERVATION_WORDS: Readonly<Record<string, string>> = {
+  weight: "Weight",
+  serumCreatinine: "Creatinine",
+  albumin: "Albumin",
+  level: "Level",
+};
+
+function outsideWindow(data: Data, side: "above" | "below"): ConcernWords {
+  const unit = text(data, "unit") === "mg.h/L" ? "mg hours per L" : "mg per L";
+  const found = side === "above" ? number(data, "most") : number(data, "least");
+  const edge = side === "above" ? number(data, "high") : number(data, "low");
+  const name = text(data, "quantity") as TargetWindow["quantity"];
+  const words =
+    name === "lowest-and-highest" ? (side === "above" ? "highest" : "lowest") : windowQuantityWord(name);
+  return {
+    title: `Option ${text(data, "option")} settles ${side} the target window`,
+    text: `Expected ${words} at steady state ${figure(found)} ${unit}; the window's ${side === "above" ? "upper" : "lower"} edge is ${figure(edge)}.`,
+  };
+}
+
+/** One function a concern code. */
+export const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = {
+  "model-incomplete": (data) => ({
+    title: "No prediction yet",
+    text: (data.issues as readonly Issue[]).map(issueMessage).join(" "),
+  }),
+  "line-not-counted": (data) => ({
+    title: `A dose line of ${text(data, "lane") === "given" ? "the given lane" : `option ${text(data, "lane")}`} is not counted`,
+    text: issueMessage(data.issue as Issue),
+  }),
+  "medicine-invented": (data) => ({
+    title: "Invented medicine: not for any patient",
+    text: `Every figure of ${text(data, "name")} is made up for demonstration.`,
+  }),
+  "option-toxic": (data) => ({
+    title: `Option ${text(data, "option")} reaches the toxic limit`,
+    text: `Highest predicted ${concentration(number(data, "peak"))}; the record's toxic limit is ${concentration(number(data, "from"))} (${text(data, "source")}).`,
+  }),
+  "age-outside-population": (data) => ({
+    title: "Age outside the population the figures come from",
+    text: `${figure(number(data, "age"))} years; the record's figures come from: ${text(data, "population")}. The prediction should not be relied on.`,
+  }),
+  "level-after-now": (data) => ({
+    title: `The level of ${when(data)} lies after the now line`,
+    text: "A level can't come from the future: correct its time, or move the now line.",
+  }),
+  "level-before-dose": (data) => ({
+    title: `The level of ${when(data)} was drawn before any counted dose`,
+    text: "Enter the doses given before it, or correct its time.",
+  }),
+  "level-while-absorbing": (data) => ({
+    title: `The level of ${when(data)} was drawn while still absorbing`,
+    text: `${hours(number(data, "afterDoseH"))} after the dose; absorption takes about ${hours(number(data, "absorbedH"))} (lag and three absorption half-lives). Not a trough.`,
+  }),
+  "level-far-off": (data) => ({
+    title: `The level of ${when(data)} is far from the prediction`,
+    text: `Measured ${concentration(number(data, "measured"))}, predicted ${concentration(number(data, "predicted"))}: ${figure(number(data, "ratio"))} times. Wrong time, missed dose, interaction, assay, or a patient unlike the typical one?`,
+  }),
+  "levels-not-used": (data) => ({
+    title: "Predictions are for the typical patient",
+    text: `${plural(number(data, "levels"), "level is", "levels are")} shown beside the prediction but not used to adjust it. If the difference matters, do not rely on the options without judging it.`,
+  }),
+  "option-above-window": (data) => outsideWindow(data, "above"),
+  "option-below-window": (data) => outsideWindow(data, "below"),
+  "first-dose-close": (data) => ({
+    title: `Option ${text(data, "option")} starts soon after the last dose given`,
+    text: `Last dose given ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}; the option's first follows ${hours(number(data, "gapH"))} later, its own interval is ${hours(number(data, "intervalH"))}.`,
+  }),
+  "dose-not-makeable": (data) => ({
+    title: `${figure(number(data, "amountMg"))} mg can't be made from the strengths in the record`,
+    text: `Option ${text(data, "option")}, ${text(data, "product")}: ${(data.strengths as number[]).map(figure).join(", ")} mg${text(data, "divisible") === "half" ? ", halves allowed" : ", whole only"}.`,
+  }),
+  "given-after-now": (data) => ({
+    title: `${plural(number(data, "count"), "dose", "doses")} on the given lane after the now line`,
+    text: "Shown, not counted. Doses still to come belong in an option.",
+  }),
+  "option-before-now": (data) => ({
+    title: `${plural(number(data, "count"), "dose", "doses")} of an option before the now line`,
+    text: "Shown, not counted. Doses already taken belong in the given lane.",
+  }),
+  "window-missing": (data) => ({
+    title: "No target window chosen",
+    text: `${number(data, "choices") > 1 ? `The record lists ${number(data, "choices")}; which applies is your decision.` : "Choose one, or enter the local one."} Hours in the window can't be given without it.`,
+  }),
+  "factor-not-used": (data) => ({
+    title: `${FACTOR_WORDS[text(data, "kind")] ?? "Event"} recorded, not in the model`,
+    text: `${text(data, "detail")}. The prediction does not take it into account.`,
+  }),
+  "value-confirmed": (data) => ({
+    title: "An improbable value was confirmed",
+    text: `${OBSERVATION_WORDS[text(data, "kind")] ?? "Value"} ${quantityPrint(data.quantity as Quantity, { style: "print", microgram: "microgram" })}: asked about when entered, and confirmed.`,
+  }),
+  "flip-flop": (data) => ({
+    title: data.close ? "Absorption and elimination rates lie close together" : "Slower absorption could be slower elimination",
+    text: `${text(data, "product")}: the model takes half-life ${hours(number(data, "eliminationHalfLifeH"))} for elimination and ${hours(number(data, "absorptionHalfLifeH"))} for absorption. Elimination of ${hours(number(data, "otherHalfLifeH"))} with volume ${figure(number(data, "otherVolume"))} L gives the same curve; clearance ${figure(number(data, "clearance"))} L per h is the same in both. Levels after this product alone can't tell; an intravenous or immediate-release reference can.`,
+  }),
+  "level-left-out": (data) => ({
+    title: `The level of ${when(data)} is left out`,
+    text: `Reason: ${text(data, "reason")}.`,
+  }),
+  "no-steady-state": (data) => ({
+    title: `Option ${text(data, "option")} has no steady state`,
+    text:
+      text(data, "reason") === "no-repeat"
+        ? "It does not repeat. Its readings are over the span shown."
+        : "Its lines have no common period within two weeks. Its readings are over the span shown.",
+  }),
+  "starts-from-nothing": () => ({
+    title: "The options start from nothing in the body",
+    text: "No dose given is counted. If the patient has been taking the medicine, enter the doses.",
+  }),
+  "kidney-unknown": (data) => ({
+    title: "Kidney function not estimated",
+    text: `Missing: ${(data.missing as string[]).join(", ")}.`,
+  }),
+  "record-not-reviewed": (data) => ({
+    title: "Medicine record not independently reviewed",
+    text: `${text(data, "name")}, record version ${number(data, "recordVersion")}: of ${number(data, "total")} figures, ${number(data, "memory")} recalled from memory and ${number(data, "commonPractice")} from common practice are unverified. Check against current product information.`,
+  }),
+};
+
+export function concernMessage(concern: { readonly code: string; readonly data: Data }): ConcernWords {
+  const words = concernMessages[concern.code];
+  if (!words) throw new RangeError(`no message for the concern "${concern.code}"`);
+  return words(concern.data);
+}
+
+/** Gravity in words: what stands before a concern's title. */
+export const GRAVITY_WORDS = { stop: "Do not rely", check: "Check", note: "Note" } as const;

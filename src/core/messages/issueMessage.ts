@@ -1,0 +1,21 @@
+import type { Issue } from "../result/index.ts";
+import type { MessageFunction } from "./messageFunction.ts";
+import { numberMessages } from "./numberMessages.ts";
+import { patientMessages } from "./patientMessages.ts";
+import { timeMessages } from "./timeMessages.ts";
+
+/** Every sentence a user can read about a fault, one function a code. A folder's sentences stand in one file: one import and one line here. */
+const catalogue: Readonly<Record<string, MessageFunction>> = {
+  ...numberMessages,
+  ...patientMessages,
+  ...timeMessages,
+};
+
+export const MESSAGE_CODES: readonly string[] = Object.keys(catalogue);
+
+/** The sentence for an issue. An unknown code is a programmer's mistake and throws. */
+export function issueMessage(issue: Issue): string {
+  const message = catalogue[issue.code];
+  if (!message) throw new RangeError(`no message for the code "${issue.code}"`);
+  return message(issue.data);
+}
