@@ -41,7 +41,7 @@ function errorCode(fault) {
 /** The same source the page is built from, through Vite, because Node 20 reads no TypeScript. */
 async function loadRecompute() {
   const { runnerImport } = await import("vite");
-  const { module } = await runnerImport(/** @type {string} */ (resolve(PROJECT, "src/core/analysis/recompute.ts")), {
+  const { module } = await runnerImport(/** @type {string} */ (resolve(PROJECT, "src/app/recompute.ts")), {
     root: PROJECT,
     configFile: false,
     logLevel: "silent",
