@@ -1,7 +1,7 @@
 import type { Analysis } from "../../core/analysis/index.ts";
 import type { Case, TargetWindow } from "../../core/case/index.ts";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
-import type { Result } from "../../core/result/index.ts";
+import type { Issue, Result } from "../../core/result/index.ts";
 
 /** The two ports the store is given. shell/storage and shell/workers fit them; the store knows nothing else of either. */
 
@@ -17,9 +17,19 @@ export interface CaseEntry {
 export type StorageState =
   | { readonly kind: "ready" }
   /** The database is gone or was emptied by the browser, although the marker says there was work in it. */
-  | { readonly kind: "lost"; readonly cases: number | null; readonly lastSavedAt: number | null; readonly detail: string }
-  /** Written by a newer version of Ebbline: readable, never written. */
-  | { readonly kind: "newer"; readonly found: number; readonly known: number }
+  | {
+      readonly kind: "lost";
+      /** "some": it is the database expected, but cases are missing from it or stand at an earlier save. */
+      readonly extent: "all" | "some";
+      /** How many cases are concerned; null when nothing was noted outside the database. */
+      readonly cases: number | null;
+      readonly lastSavedAt: number | null;
+      /** How many of them have a second copy, which `acceptLoss` puts back. */
+      readonly recoverable: number;
+      readonly detail: string;
+    }
+  /** Written by a newer version of Ebbline: never written; `readable` says whether this version may read it. */
+  | { readonly kind: "newer"; readonly found: number; readonly known: number; readonly readable: boolean }
   /** Another tab holds an older version open. */
   | { readonly kind: "blocked" }
   | { readonly kind: "unavailable"; readonly detail: string };
@@ -28,13 +38,25 @@ export type SaveOutcome =
   | { readonly ok: true; readonly savedAt: number }
   | { readonly ok: false; readonly reason: "quota" | "read-only" | "newer" | "closed" | "failed"; readonly detail: string };
 
+export type StorageChange =
+  /** Another tab saved or removed a case. */
+  | { readonly kind: "saved" | "removed"; readonly id: string }
+  /** A newer version took over the database: this tab can no longer read or write it. */
+  | { readonly kind: "superseded" }
+  /** The connection was dropped or the database deleted under us: what was saved may not be there any more. */
+  | { readonly kind: "gone" }
+  /** What blocked `open` is gone: call it again. */
+  | { readonly kind: "unblocked" }
+  /** Something to say that belongs to no call. */
+  | { readonly kind: "fault"; readonly issues: readonly Issue[] };
+
 export interface CaseRepository {
   open(): Promise<StorageState>;
-  /** After "lost" was shown and accepted: start afresh, marker rewritten. */
+  /** After "lost" was shown and accepted: second copies are put back, then the database as it is becomes the one expected. */
   acceptLoss(): Promise<void>;
   list(): Promise<readonly CaseEntry[]>;
   load(id: string): Promise<Result<Case>>;
-  /** One strict transaction; resolves when it is on disk. */
+  /** One strict transaction; resolves when it is on disk. One at a time a case. */
   save(value: Case): Promise<SaveOutcome>;
   remove(id: string): Promise<SaveOutcome>;
   /** One writer a case over all tabs (Web Locks). `onWriter` is called if the writer's place falls free later. */
@@ -49,12 +71,17 @@ export interface CaseRepository {
   listWindows(): Promise<readonly { readonly medicine: string; readonly id: string; readonly window: TargetWindow }[]>;
   saveWindow(medicine: string, id: string, window: TargetWindow): Promise<SaveOutcome>;
   removeWindow(medicine: string, id: string): Promise<SaveOutcome>;
-  /** Another tab saved or removed a case, or a newer version took over the database. */
-  subscribe(listener: (change: { readonly kind: "saved" | "removed"; readonly id: string } | { readonly kind: "superseded" }) => void): () => void;
+  subscribe(listener: (change: StorageChange) => void): () => void;
 }
 
+export type AnalysisAnswer =
+  | { readonly ok: true; readonly analysis: Analysis }
+  /** "deadline": stopped because it took too long. */
+  | { readonly ok: false; readonly reason: "deadline" | "failed"; readonly detail: string };
+
 export interface AnalysisRunner {
-  /** Latest wins: a call made while one runs replaces what waits. `null`: overtaken by a later call. */
-  run(value: Case): Promise<{ readonly ok: true; readonly analysis: Analysis } | { readonly ok: false; readonly detail: string } | null>;
+  /** Latest wins: a call made while one runs replaces what waits. `null`: overtaken by a later call before it began. */
+  run(value: Case): Promise<AnalysisAnswer | null>;
+  /** "page": the worker could not start, and the page itself does the work. */
   readonly where: "worker" | "page";
 }

@@ -18,8 +18,9 @@ export interface Settings {
 export interface Saving {
   readonly status: "unsaved" | "saving" | "saved" | "failed" | "read-only";
   readonly savedAt: number | null;
-  /** Why, for failed and read-only: "quota", "newer", "other-tab", "closed", "failed", "lost". */
-  readonly reason: string | null;
+  /** Why, for failed and read-only. */
+  readonly reason: "quota" | "newer" | "other-tab" | "closed" | "failed" | null;
+  /** The sentence for `reason`, ready to show; empty without one. */
   readonly detail: string;
 }
 
@@ -27,7 +28,10 @@ export interface AnalysisState {
   readonly result: Analysis | null;
   /** Revision of the case the result came from. */
   readonly revision: number;
+  /** True while `result` is that of a preview: shown, not to be printed. */
+  readonly ofPreview: boolean;
   readonly status: "running" | "fresh" | "failed";
+  /** A sentence, ready to show. */
   readonly failure: string | null;
 }
 
