@@ -1,0 +1,25 @@
+export { amountsAfterDose } from "./amountsAfterDose.ts";
+export { aucAfterDose } from "./aucAfterDose.ts";
+export {
+  type BothReadings,
+  bothReadings,
+  FLIP_FLOP_SETTLED_BY,
+  type FlipFlopReason,
+  type Reading,
+} from "./bothReadings.ts";
+export { concentrationAfterDose } from "./concentrationAfterDose.ts";
+export type { Course, Disposition } from "./course.ts";
+export { crossingsAfterDose } from "./crossingsAfterDose.ts";
+export { exposure } from "./exposure.ts";
+export type { LevelWindow } from "./exposureTally.ts";
+export { type Exposure, historyExposure } from "./historyExposure.ts";
+export { historyProfile } from "./historyProfile.ts";
+export type { Dose, OralKinetics } from "./oralKinetics.ts";
+export { patternProfile } from "./patternProfile.ts";
+export { type PatternSteadyState, patternSteadyState } from "./patternSteadyState.ts";
+export { peakAfterDose } from "./peakAfterDose.ts";
+export { profile } from "./profile.ts";
+export { type SteadyState, steadyState } from "./steadyState.ts";
+export { steadyStateConcentration } from "./steadyStateConcentration.ts";
+export { timeOfPeak } from "./timeOfPeak.ts";
+export { timeToSteadyState } from "./timeToSteadyState.ts";
