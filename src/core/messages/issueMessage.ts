@@ -2,12 +2,14 @@ import type { Issue } from "../result/index.ts";
 import type { MessageFunction } from "./messageFunction.ts";
 import { numberMessages } from "./numberMessages.ts";
 import { patientMessages } from "./patientMessages.ts";
+import { storageMessages } from "./storageMessages.ts";
 import { timeMessages } from "./timeMessages.ts";
 
 /** Every sentence a user can read about a fault, one function a code. A folder's sentences stand in one file: one import and one line here. */
 const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...numberMessages,
   ...patientMessages,
+  ...storageMessages,
   ...timeMessages,
 };
 
