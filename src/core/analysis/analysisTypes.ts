@@ -41,6 +41,7 @@ export interface Curve {
 
 export interface PatientFigures {
   /** Latest value at or before the now line. */
+  readonly heightCm: number | null;
   readonly weight: Traced | null;
   readonly creatinine: Traced | null;
   readonly idealWeight: Traced | null;

@@ -5,3 +5,4 @@ export type { MessageFunction } from "./messageFunction.ts";
 export { windowQuantityWord } from "./windowWords.ts";
 export * from "./fieldWords.ts";
 export * from "./screenWords.ts";
+export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";

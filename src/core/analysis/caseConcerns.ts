@@ -1,0 +1,55 @@
+import type { Concern, Gravity } from "./analysisTypes.ts";
+import type { ConcernContext, ConcernRule } from "./concernRule.ts";
+import { ageOutside } from "./concerns/ageOutside.ts";
+import { doseNotMakeable } from "./concerns/doseNotMakeable.ts";
+import { dosesAfterNow } from "./concerns/dosesAfterNow.ts";
+import { factorsUnused } from "./concerns/factorsUnused.ts";
+import { firstDoseClose } from "./concerns/firstDoseClose.ts";
+import { flipFlop } from "./concerns/flipFlop.ts";
+import { historyAssumed } from "./concerns/historyAssumed.ts";
+import { inventedMedicine } from "./concerns/inventedMedicine.ts";
+import { kidneyUnknown } from "./concerns/kidneyUnknown.ts";
+import { levelFarOff } from "./concerns/levelFarOff.ts";
+import { levelLeftOut } from "./concerns/levelLeftOut.ts";
+import { levelTiming } from "./concerns/levelTiming.ts";
+import { linesUnreadable } from "./concerns/linesUnreadable.ts";
+import { modelIncomplete } from "./concerns/modelIncomplete.ts";
+import { noSteadyState } from "./concerns/noSteadyState.ts";
+import { optionOutsideWindow } from "./concerns/optionOutsideWindow.ts";
+import { optionToxic } from "./concerns/optionToxic.ts";
+import { recordUnreviewed } from "./concerns/recordUnreviewed.ts";
+import { typicalOnly } from "./concerns/typicalOnly.ts";
+import { valuesConfirmed } from "./concerns/valuesConfirmed.ts";
+import { windowMissing } from "./concerns/windowMissing.ts";
+
+/** Every rule, in the order in which concerns of the same gravity are shown. */
+const RULES: readonly ConcernRule[] = [
+  modelIncomplete,
+  linesUnreadable,
+  inventedMedicine,
+  optionToxic,
+  ageOutside,
+  levelTiming,
+  levelFarOff,
+  typicalOnly,
+  optionOutsideWindow,
+  firstDoseClose,
+  doseNotMakeable,
+  dosesAfterNow,
+  windowMissing,
+  factorsUnused,
+  valuesConfirmed,
+  flipFlop,
+  levelLeftOut,
+  noSteadyState,
+  historyAssumed,
+  kidneyUnknown,
+  recordUnreviewed,
+];
+
+const ORDER: Readonly<Record<Gravity, number>> = { stop: 0, check: 1, note: 2 };
+
+/** What a human has to look at, gravest first. */
+export function caseConcerns(context: ConcernContext): Concern[] {
+  return RULES.flatMap((rule) => rule(context)).sort((a, b) => ORDER[a.gravity] - ORDER[b.gravity]);
+}

@@ -1,0 +1,25 @@
+import { type ConcernRule, concern } from "../concernRule.ts";
+
+/** An option whose steady state leaves the target window, judged by what the window is for. */
+export const optionOutsideWindow: ConcernRule = ({ case: { window }, options }) => {
+  if (!window) return [];
+  return options.flatMap((option) => {
+    const settled = option.typical?.steadyState;
+    if (!settled) return [];
+    const low = window.low.value;
+    const high = window.high.value;
+    const [least, most] = {
+      trough: [settled.lowest, settled.lowest],
+      peak: [settled.peak, settled.peak],
+      average: [settled.average, settled.average],
+      auc24: [settled.auc24, settled.auc24],
+      "lowest-and-highest": [settled.lowest, settled.peak],
+    }[window.quantity] as [number, number];
+    const about = { kind: "option", id: option.id } as const;
+    const data = { option: option.id, quantity: window.quantity, low, high, unit: window.low.unit, least, most };
+    return [
+      ...(most > high ? [concern("option-above-window", "check", about, data)] : []),
+      ...(least < low ? [concern("option-below-window", "check", about, data)] : []),
+    ];
+  });
+};

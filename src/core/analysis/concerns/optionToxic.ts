@@ -1,0 +1,17 @@
+import { quantityConvert } from "../../units/index.ts";
+import { sourceText } from "../typicalModel.ts";
+import { type ConcernRule, concern } from "../concernRule.ts";
+
+/** The highest predicted concentration reaches the record's toxic limit. */
+export const optionToxic: ConcernRule = ({ case: { medicine }, options }) => {
+  const limit = medicine.toxicFrom;
+  if (!limit) return [];
+  const from = quantityConvert({ value: limit.value, unit: limit.unit }, "mg/L", medicine.molarMass.value);
+  return options.flatMap((option) => {
+    if (!option.typical) return [];
+    const peak = Math.max(option.typical.span.peak, option.typical.steadyState?.peak ?? 0);
+    return peak >= from
+      ? [concern("option-toxic", "stop", { kind: "option", id: option.id }, { option: option.id, peak, from, source: sourceText(medicine, limit.source) })]
+      : [];
+  });
+};

@@ -1,0 +1,86 @@
+import type { Case } from "../case/index.ts";
+import { doseMg, productOf } from "../medicine/index.ts";
+import { type DoseLine, doseLineEndMs } from "../regimen/index.ts";
+import { instantMs, wallClock } from "../time/index.ts";
+
+const MINUTE_MS = 60_000;
+const DAY_MIN = 1_440;
+/** A common period longer than this (two weeks) is not treated as one repeating pattern. */
+const LONGEST_PERIOD_MIN = 14 * DAY_MIN;
+
+export interface RegimenPattern {
+  readonly periodH: number;
+  /** When the pattern begins: the first dose of the line that joins last. */
+  readonly startMs: number;
+  /** Doses within [0, periodH) from `startMs`, by product. */
+  readonly courses: ReadonlyMap<string, readonly { readonly time: number; readonly amount: number }[]>;
+  readonly dosePerPeriodMg: number;
+}
+
+export type PatternResult =
+  | { readonly ok: true; readonly pattern: RegimenPattern }
+  | { readonly ok: false; readonly reason: "no-repeat" | "no-common-period" };
+
+/**
+ * The pattern an option settles into, as if its last repeating lines went on for ever.
+ * Lines that end before the others are a lead-in (a loading dose, a lower first step) and are left out; so are exceptions.
+ * Periods are whole minutes; the common period is their least common multiple, at most two weeks.
+ * Clock-time lines count 24 h a day here; the change of a daylight-saving night is in the profile, not in the steady state.
+ */
+export function regimenPattern(value: Case, lines: readonly DoseLine[]): PatternResult {
+  const repeating = lines.filter((line) => line.repeat !== undefined);
+  if (repeating.length === 0) return { ok: false, reason: "no-repeat" };
+  const ends = repeating.map((line) => doseLineEndMs(line, value.timeZone) ?? Number.POSITIVE_INFINITY);
+  const lastEnd = Math.max(...ends);
+  const ongoing = repeating.filter((line, i) => ends[i] === lastEnd || ends[i]! + periodMin(line) * MINUTE_MS > lastEnd);
+  const period = ongoing.map(periodMin).reduce(leastCommonMultiple);
+  if (!Number.isInteger(period) || period > LONGEST_PERIOD_MIN) return { ok: false, reason: "no-common-period" };
+
+  const startMs = Math.max(...ongoing.map((line) => instantMs(line.start)));
+  const courses = new Map<string, { time: number; amount: number }[]>();
+  let dosePerPeriodMg = 0;
+  for (const line of ongoing) {
+    const mg = doseMg(line.amount, productOf(value.medicine, line.product));
+    if (!mg.ok) return { ok: false, reason: "no-repeat" };
+    const doses = courses.get(line.product) ?? [];
+    for (const minute of patternMinutes(line, startMs, period, value.timeZone)) {
+      doses.push({ time: minute / 60, amount: mg.value });
+      dosePerPeriodMg += mg.value;
+    }
+    courses.set(line.product, doses);
+  }
+  for (const doses of courses.values()) doses.sort((a, b) => a.time - b.time);
+  return { ok: true, pattern: { periodH: period / 60, startMs, courses, dosePerPeriodMg } };
+}
+
+function periodMin(line: DoseLine): number {
+  if (!line.repeat) throw new RangeError("a single dose has no period");
+  return "every" in line.repeat ? Math.round(line.repeat.every.value * 60) : DAY_MIN;
+}
+
+/** Minutes from the pattern's start at which the line gives a dose, within one period. */
+function patternMinutes(line: DoseLine, startMs: number, period: number, zone: string): number[] {
+  if (!line.repeat) return [];
+  const own = periodMin(line);
+  const offsets =
+    "every" in line.repeat
+      ? [(instantMs(line.start) - startMs) / MINUTE_MS]
+      : line.repeat.clock.map((time) => minuteOfDay(time) - minuteOfDay(wallClock(startMs, zone).time));
+  const minutes: number[] = [];
+  for (const offset of offsets) {
+    const first = ((offset % own) + own) % own;
+    for (let minute = first; minute < period; minute += own) minutes.push(minute);
+  }
+  return minutes;
+}
+
+function minuteOfDay(time: string): number {
+  return Number(time.slice(0, 2)) * 60 + Number(time.slice(3, 5));
+}
+
+function leastCommonMultiple(a: number, b: number): number {
+  let x = a;
+  let y = b;
+  while (y !== 0) [x, y] = [y, x % y];
+  return (a / x) * b;
+}

@@ -1,0 +1,162 @@
+import type { Analysis, Model, OptionResult, Traced } from "../analysis/index.ts";
+import type { Case } from "../case/index.ts";
+import { instantText } from "../time/index.ts";
+import { numberPrint, unitSpoken } from "../units/index.ts";
+
+/** The arithmetic of one figure: formula, numbers put in, result, and where the parts come from. */
+export interface WorkingWords {
+  readonly title: string;
+  readonly steps: readonly string[];
+  readonly result: string;
+  readonly sources: readonly string[];
+}
+
+/** Six digits: enough to check by hand, more than is shown on the bench. */
+const six = (value: number): string => numberPrint(value, { significant: 6 });
+
+/** A traced figure as "0.053 * min(weight, idealWeight) with weight = 58 kg …". */
+export function tracedWords(figure: Traced): string {
+  const unit = figure.unit === "1" ? "" : ` ${unitSpoken(figure.unit, "screen")}`;
+  const inputs = figure.inputs.map((input) => `${input.name} = ${six(input.value)}${input.unit === "1" ? "" : ` ${unitSpoken(input.unit, "screen")}`}`);
+  const formula = figure.formula === "" ? "" : `${figure.formula}${inputs.length > 0 ? `, with ${inputs.join(", ")}` : ""} = `;
+  return `${formula}${six(figure.value)}${unit}`;
+}
+
+const provenance = (name: string, figure: Traced): string => `${name}: ${figure.source} (${figure.basis})`;
+
+function modelSteps(model: Model): string[] {
+  return [
+    `CL = ${tracedWords(model.clearance)}`,
+    `V = ${tracedWords(model.volume)}`,
+    `ke = CL / V = ${six(model.clearance.value)} / ${six(model.volume.value)} = ${six(model.eliminationRate.value)} per h`,
+  ];
+}
+
+function modelSources(model: Model, option: OptionResult): string[] {
+  const used = new Set(option.doses.map((dose) => dose.product));
+  return [
+    provenance("CL", model.clearance),
+    provenance("V", model.volume),
+    ...model.products
+      .filter((product) => used.has(product.product))
+      .flatMap((product) => [
+        provenance(`ka of ${product.product}`, product.absorptionRate),
+        provenance(`F of ${product.product}`, product.bioavailability),
+        provenance(`lag of ${product.product}`, product.lag),
+      ]),
+  ];
+}
+
+function absorptionSteps(model: Model, option: OptionResult): string[] {
+  const used = new Set(option.doses.map((dose) => dose.product));
+  return model.products
+    .filter((product) => used.has(product.product))
+    .map(
+      (product) =>
+        `${product.product}: ka = ${six(product.absorptionRate.value)} per h, F = ${six(product.bioavailability.value)}, lag = ${six(product.lag.value)} h`,
+    );
+}
+
+const CURVE = "one dose: C(t) = F·D·ka / (V·(ka − ke)) · (e^(−ke·t) − e^(−ka·t)), t from the end of the lag";
+
+/** The working of one reading of one option; null when there is nothing to show. */
+export function readingWorking(value: Case, analysis: Analysis, optionId: string, row: string): WorkingWords | null {
+  const option = analysis.options.find((candidate) => candidate.id === optionId);
+  const model = analysis.typical;
+  if (!option?.typical || !model) return null;
+  const { steadyState, span } = option.typical;
+  const clock = (hours: number) => instantText(analysis.clock.originMs + hours * 3_600_000, value.timeZone, "dayClock");
+  const base = { sources: modelSources(model, option) };
+  const make = (title: string, steps: readonly string[], result: string): WorkingWords => ({ title, steps, result, ...base });
+  const settledSteps = () => [
+    ...modelSteps(model),
+    ...absorptionSteps(model, option),
+    CURVE,
+    `steady state: the same curve summed over all earlier doses of the pattern of ${six(steadyState!.periodH)} h (${six(steadyState!.dosePerPeriodMg)} mg); highest and lowest found where its slope is 0, or at a dose`,
+  ];
+  const spanSteps = () => [
+    ...modelSteps(model),
+    ...absorptionSteps(model, option),
+    CURVE,
+    `summed over every counted dose of the given lane and of option ${optionId}; found between doses on the curve itself, not on the drawing`,
+    `span: ${clock(span.fromH)} to ${clock(span.toH)}, ${six(span.toH - span.fromH)} h`,
+  ];
+  const exposed = () => {
+    const perDose = model.products.filter((product) => option.doses.some((dose) => dose.product === product.product));
+    const f = perDose.length === 1 ? six(perDose[0]!.bioavailability.value) : "F of each product";
+    return [
+      ...modelSteps(model),
+      `dose in the pattern of ${six(steadyState!.periodH)} h: ${six(steadyState!.dosePerPeriodMg)} mg, F = ${f}`,
+    ];
+  };
+  switch (row) {
+    case "peak":
+      return steadyState && make("Highest at steady state", settledSteps(), `${six(steadyState.peak)} mg/L`);
+    case "peakAfterDose":
+      return steadyState && make("Time from the dose to the highest", settledSteps(), `${six(steadyState.peakAfterDoseH)} h`);
+    case "lowest":
+      return steadyState && make("Lowest at steady state", settledSteps(), `${six(steadyState.lowest)} mg/L, ${six(steadyState.lowestAfterDoseH)} h after a dose`);
+    case "average":
+      return (
+        steadyState &&
+        make("Average at steady state", [...exposed(), `average = F·D / (CL · ${six(steadyState.periodH)} h)`], `${six(steadyState.average)} mg/L`)
+      );
+    case "auc24":
+      return (
+        steadyState &&
+        make("AUC in 24 hours at steady state", [...exposed(), `AUC = average · 24 h = ${six(steadyState.average)} · 24`], `${six(steadyState.auc24)} mg·h/L`)
+      );
+    case "halfLife":
+      return make("Half-life of elimination", [...modelSteps(model), `t½ = ln 2 / ke = 0.693147 / ${six(model.eliminationRate.value)}`], `${six(model.halfLife.value)} h`);
+    case "accumulation":
+      return (
+        steadyState &&
+        make(
+          "Accumulation",
+          [...settledSteps(), `AUC over one pattern at steady state / AUC over the first pattern after starting from nothing`],
+          `${six(steadyState.accumulation)} times`,
+        )
+      );
+    case "timeTo90":
+    case "steady90At":
+      return (
+        steadyState &&
+        make(
+          "90 % of the way to steady state",
+          [
+            ...modelSteps(model),
+            ...absorptionSteps(model, option),
+            `ln 10 / k, with k the slower rate: here ${steadyState.slower}`,
+            `counted from the first dose of the pattern`,
+          ],
+          `${six(steadyState.timeTo90H)} h: from ${clock(steadyState.steady90AtH)}`,
+        )
+      );
+    case "dailyDose":
+      return steadyState && make("Dose in 24 hours", [`${six(steadyState.dosePerPeriodMg)} mg · 24 / ${six(steadyState.periodH)} h`], `${six(option.typical.dailyDoseMg ?? 0)} mg`);
+    case "spanPeak":
+    case "spanPeakAt":
+      return make("Highest over the span", spanSteps(), `${six(span.peak)} mg/L at ${clock(span.timeOfPeakH)}`);
+    case "spanLowest":
+    case "spanLowestAt":
+      return make("Lowest over the span", spanSteps(), `${six(span.lowest)} mg/L at ${clock(span.timeOfLowestH)}`);
+    case "spanAverage":
+      return make(
+        "Average over the span",
+        [...spanSteps(), `AUC = ${six(span.auc)} mg·h/L by the exact integral between doses`, `average = AUC / ${six(span.toH - span.fromH)} h`],
+        `${six(span.average)} mg/L`,
+      );
+    case "hoursBelow":
+    case "hoursWithin":
+    case "hoursAbove":
+      return span.hoursWithin === null || !value.window
+        ? null
+        : make(
+            "Hours below, within and above the window",
+            [...spanSteps(), `window ${six(value.window.low.value)} to ${six(value.window.high.value)} mg/L; the crossings are solved for on each stretch between doses`],
+            `below ${six(span.hoursBelow ?? 0)} h, within ${six(span.hoursWithin)} h, above ${six(span.hoursAbove ?? 0)} h`,
+          );
+    default:
+      return null;
+  }
+}

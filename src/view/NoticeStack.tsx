@@ -1,0 +1,21 @@
+import { issueMessage } from "../core/messages/index.ts";
+import "./NoticeStack.css";
+import { Notice } from "./ui/Notice.tsx";
+import { useWorkbench } from "./useWorkbench.ts";
+
+/** Refusals and warnings from outside a form. They stay until they are closed. */
+export function NoticeStack() {
+  const notices = useWorkbench((state) => state.notices);
+  const dismiss = useWorkbench((state) => state.dismiss);
+  return (
+    <div className="notice-stack" role="region" aria-label="Notices" aria-live="polite">
+      {notices.map((notice) => (
+        <Notice key={notice.id} gravity={notice.gravity} onDismiss={() => dismiss(notice.id)}>
+          {notice.issues.map((issue, i) => (
+            <p key={i}>{issueMessage(issue)}</p>
+          ))}
+        </Notice>
+      ))}
+    </div>
+  );
+}

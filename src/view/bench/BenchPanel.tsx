@@ -1,0 +1,46 @@
+import { CaseEntry } from "../entry/CaseEntry.tsx";
+import { DoseEntry } from "../entry/DoseEntry.tsx";
+import { LevelEntry } from "../entry/LevelEntry.tsx";
+import { PatientPanel } from "../entry/PatientPanel.tsx";
+import { WindowEntry } from "../entry/WindowEntry.tsx";
+import { Dialog } from "../ui/Dialog.tsx";
+import { MedicinePanel } from "./MedicinePanel.tsx";
+import { OptionPanel } from "./OptionPanel.tsx";
+import { WorkingPanel } from "./WorkingPanel.tsx";
+
+export type BenchPanelKind = "case" | "patient" | "medicine" | "window" | "levels";
+
+/** Which drawer is open: one of the simple ones, the doses of a lane, an option, or the working of a reading. */
+export type OpenPanel =
+  | { readonly kind: BenchPanelKind }
+  | { readonly kind: "doses"; readonly lineId?: string }
+  | { readonly kind: "option"; readonly option: string; readonly lineId?: string }
+  | { readonly kind: "working"; readonly row: string; readonly option: string };
+
+const TITLES: Readonly<Record<BenchPanelKind | "doses", string>> = {
+  case: "Case",
+  patient: "Patient",
+  medicine: "Medicine",
+  window: "Target window",
+  levels: "Measured levels",
+  doses: "Doses given",
+};
+
+export function BenchPanel({ panel, onClose }: { readonly panel: OpenPanel; readonly onClose: () => void }) {
+  const title =
+    panel.kind === "option" ? `Option ${panel.option}` : panel.kind === "working" ? "Working" : TITLES[panel.kind];
+  return (
+    <Dialog title={title} isOpen onClose={onClose} place="side">
+      {panel.kind === "case" && <CaseEntry onDone={onClose} />}
+      {panel.kind === "patient" && <PatientPanel onDone={onClose} />}
+      {panel.kind === "medicine" && <MedicinePanel />}
+      {panel.kind === "window" && <WindowEntry onDone={onClose} />}
+      {panel.kind === "levels" && <LevelEntry onDone={onClose} />}
+      {panel.kind === "doses" && <DoseEntry lane="given" onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />}
+      {panel.kind === "option" && (
+        <OptionPanel option={panel.option} onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
+      )}
+      {panel.kind === "working" && <WorkingPanel row={panel.row} option={panel.option} />}
+    </Dialog>
+  );
+}

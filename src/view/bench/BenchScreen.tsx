@@ -1,0 +1,252 @@
+import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { type DoseMark, laneDoses } from "../../core/analysis/index.ts";
+import { optionNextId } from "../../core/case/index.ts";
+import { benchWords } from "../../core/messages/index.ts";
+import { productOf } from "../../core/medicine/index.ts";
+import { type DoseLine, doseLineText } from "../../core/regimen/index.ts";
+import { instantText } from "../../core/time/index.ts";
+import { unitSpoken } from "../../core/units/index.ts";
+import { optionStyle } from "../chart/ProfileChart.tsx";
+import { clockScale } from "../chart/clockScale.ts";
+import { Button } from "../ui/Button.tsx";
+import { useWorkbench } from "../useWorkbench.ts";
+import { BenchPanel, type OpenPanel } from "./BenchPanel.tsx";
+import "./BenchScreen.css";
+import { type BenchSpan, spanMoved, spanStart, spanWithin, spanZoomed } from "./benchSpan.ts";
+import { CaseStrip } from "./CaseStrip.tsx";
+import { ClockHead } from "./ClockHead.tsx";
+import { ConcernList } from "./ConcernList.tsx";
+import { DoseLane } from "./DoseLane.tsx";
+import { LaneLines, OptionHead } from "./OptionHead.tsx";
+import { ProfileRow, type ShownUnit } from "./ProfileRow.tsx";
+import { ReadingsTable } from "./ReadingsTable.tsx";
+import { useBenchKeys } from "./useBenchKeys.ts";
+import { useElementWidth } from "./useElementWidth.ts";
+
+/** Room at the right of the clock for the curves' names and the window's edges, px. */
+const RIGHT = 76;
+
+interface BenchScreenProps {
+  readonly onPrint: () => void;
+}
+
+/** The screen where a case is worked on: everything about it over one shared clock. */
+export function BenchScreen({ onPrint }: BenchScreenProps) {
+  const open = useWorkbench((state) => state.open);
+  const edit = useWorkbench((state) => state.edit);
+  const [panel, setPanel] = useState<OpenPanel | null>(null);
+  const [scale, setScale] = useState<"linear" | "log">("linear");
+  const [unit, setUnit] = useState<ShownUnit>("mg/L");
+  const [chosenSpan, setChosenSpan] = useState<BenchSpan | null>(null);
+  const clockColumn = useRef<HTMLDivElement>(null);
+  const width = useElementWidth(clockColumn, 900);
+  useBenchKeys();
+
+  const caseId = open?.value.id ?? null;
+  useEffect(() => {
+    // A different case starts with its own span.
+    if (caseId !== null) setChosenSpan(null);
+  }, [caseId]);
+
+  const analysis = open?.analysis.result ?? null;
+  const value = open ? (open.preview ?? open.value) : null;
+  const whole = analysis ? { fromH: analysis.clock.fromH, toH: analysis.clock.toH } : null;
+  const span = whole && analysis ? (chosenSpan ? spanWithin(whole, chosenSpan) : spanStart(whole, analysis.clock.nowH)) : null;
+
+  const lanes = useMemo(() => {
+    if (!value || !analysis) return null;
+    const { originMs } = analysis.clock;
+    const clock = {
+      originMs,
+      nowMs: originMs + analysis.clock.nowH * 3_600_000,
+      untilMs: originMs + analysis.clock.toH * 3_600_000,
+    };
+    const given = laneDoses(value, value.given, "given", clock).marks;
+    const options = value.options.map((option) => laneDoses(value, option.lines, "option", clock).marks);
+    const largest = Math.max(0, ...[given, ...options].flat().map((mark: DoseMark) => mark.amount.value));
+    return { given, options, largest };
+  }, [value, analysis]);
+
+  const close = useCallback(() => setPanel(null), []);
+  if (!open || !value) return null;
+  const isReader = open.role === "reader";
+  const lineTexts = (lines: readonly DoseLine[]) =>
+    lines.map((line) => ({
+      id: line.id,
+      text: doseLineText(line, { zone: value.timeZone, product: productOf(value.medicine, line.product) }),
+    }));
+  const clock = span ? clockScale(span.fromH, span.toH, 0, width - RIGHT) : null;
+  const nowX = clock && analysis && span && analysis.clock.nowH >= span.fromH && analysis.clock.nowH <= span.toH ? clock.x(analysis.clock.nowH) : null;
+  const midnightsX = clock && analysis && span ? analysis.clock.midnightsH.filter((hours) => hours > span.fromH && hours < span.toH).map(clock.x) : [];
+  const zoom = (factor: number) => {
+    if (whole && span && analysis) {
+      const middle = nowX !== null ? analysis.clock.nowH : (span.fromH + span.toH) / 2;
+      setChosenSpan(spanZoomed(whole, span, factor, middle));
+    }
+  };
+  const addOption = () => {
+    const id = optionNextId(value);
+    edit("optionAdd", { id, label: "" });
+    setPanel({ kind: "option", option: id });
+  };
+
+  return (
+    <div className="bench">
+      <CaseStrip open={open} analysis={analysis} onPanel={(kind) => setPanel({ kind })} onPrint={onPrint} />
+      <main className="bench-main">
+        <div className="bench-clock">
+          <div className="bench-corner">
+            <h1 className="bench-corner-title">{benchWords.profile}</h1>
+            <p className="bench-corner-text">
+              {value.medicine.matrix}, {unitSpoken(unit, "screen")}
+            </p>
+          </div>
+          <div className="bench-head" ref={clockColumn}>
+            {clock && analysis && (
+              <ClockHead
+                scale={clock}
+                width={width}
+                midnightsH={analysis.clock.midnightsH}
+                nowX={nowX}
+                originMs={analysis.clock.originMs}
+                zone={value.timeZone}
+              />
+            )}
+          </div>
+          <div className="bench-side">
+            <div className="bench-switches">
+              <Button kind="quiet" onPress={() => setUnit(unit === "mg/L" ? "umol/L" : "mg/L")}>
+                {unitSpoken(unit === "mg/L" ? "umol/L" : "mg/L", "screen")}
+              </Button>
+              <Button kind="quiet" onPress={() => setScale(scale === "linear" ? "log" : "linear")}>
+                {scale === "linear" ? benchWords.log : benchWords.linear}
+              </Button>
+              <Button kind="quiet" onPress={() => setPanel({ kind: "levels" })}>
+                {benchWords.addLevel}
+              </Button>
+            </div>
+            <div className="bench-zoom" role="group" aria-label="Part of the clock shown">
+              <Button kind="quiet" onPress={() => zoom(0.6)}>
+                {benchWords.closer}
+              </Button>
+              <Button kind="quiet" onPress={() => zoom(1 / 0.6)}>
+                {benchWords.wider}
+              </Button>
+              <Button kind="quiet" onPress={() => whole && span && setChosenSpan(spanMoved(whole, span, -0.4))}>
+                {benchWords.earlier}
+              </Button>
+              <Button kind="quiet" onPress={() => whole && span && setChosenSpan(spanMoved(whole, span, 0.4))}>
+                {benchWords.later}
+              </Button>
+            </div>
+          </div>
+          <div className="bench-profile">
+            {analysis && span ? (
+              <ProfileRow
+                value={value}
+                analysis={analysis}
+                span={span}
+                width={width}
+                right={RIGHT}
+                scale={scale}
+                unit={unit}
+              />
+            ) : (
+              <p className="bench-waiting">{benchWords.analysisStates.running}</p>
+            )}
+            {analysis && analysis.typical === null && <p className="bench-no-prediction">{benchWords.noPrediction}</p>}
+          </div>
+          {clock && analysis && lanes && (
+            <>
+              <DoseLane
+                lane="given"
+                name={benchWords.given}
+                value={value}
+                marks={lanes.given}
+                scale={clock}
+                width={width}
+                nowX={nowX}
+                midnightsX={midnightsX}
+                originMs={analysis.clock.originMs}
+                largest={lanes.largest}
+                style="given"
+                isReadOnly={isReader}
+                onOpenLine={(lineId) => setPanel({ kind: "doses", lineId })}
+                head={
+                  <>
+                    <button type="button" className="lane-line lane-title" onClick={() => setPanel({ kind: "doses" })}>
+                      {benchWords.given}
+                    </button>
+                    <LaneLines
+                      lines={lineTexts(value.given)}
+                      onOpenLine={(lineId) => setPanel({ kind: "doses", lineId })}
+                      onAdd={() => setPanel({ kind: "doses" })}
+                    />
+                  </>
+                }
+              />
+              {value.options.map((option, i) => (
+                <DoseLane
+                  key={option.id}
+                  lane={option.id}
+                  name={`Option ${option.id}`}
+                  value={value}
+                  marks={lanes.options[i] ?? []}
+                  scale={clock}
+                  width={width}
+                  nowX={nowX}
+                  midnightsX={midnightsX}
+                  originMs={analysis.clock.originMs}
+                  largest={lanes.largest}
+                  style={optionStyle(i)}
+                  isReadOnly={isReader}
+                  onOpenLine={(lineId) => setPanel({ kind: "option", option: option.id, lineId })}
+                  head={
+                    <OptionHead
+                      option={option}
+                      index={i}
+                      lines={lineTexts(option.lines)}
+                      onOpenLine={(lineId) => setPanel({ kind: "option", option: option.id, lineId })}
+                      onMenu={() => setPanel({ kind: "option", option: option.id })}
+                    />
+                  }
+                />
+              ))}
+              <div className="bench-foot-side">
+                <Button kind="quiet" onPress={addOption} isDisabled={isReader}>
+                  {benchWords.addOption}
+                </Button>
+              </div>
+              <div className="bench-foot">
+                {nowX !== null && (
+                  <button type="button" className="bench-now" style={{ left: nowX }} onClick={() => setPanel({ kind: "case" })}>
+                    now, {instantText(analysis.clock.originMs + analysis.clock.nowH * 3_600_000, value.timeZone, "dayClock")}
+                  </button>
+                )}
+              </div>
+            </>
+          )}
+        </div>
+        <aside className="bench-column" aria-label="Readings and concerns">
+          {open.analysis.status === "failed" && (
+            <p className="bench-stale" role="alert">
+              {benchWords.analysisStates.failed}: {open.analysis.failure}
+            </p>
+          )}
+          {value.options.length === 0 && <p className="bench-hint">{benchWords.noOptions}</p>}
+          {analysis && value.options.length > 0 && value.options.length === analysis.options.length && (
+            <ReadingsTable
+              value={value}
+              analysis={analysis}
+              unit={unit}
+              onWorking={(row, option) => setPanel({ kind: "working", row, option })}
+            />
+          )}
+          {analysis && <ConcernList concerns={analysis.concerns} />}
+          <p className="bench-intended">{benchWords.intended}</p>
+        </aside>
+      </main>
+      {panel && <BenchPanel panel={panel} onClose={close} />}
+    </div>
+  );
+}

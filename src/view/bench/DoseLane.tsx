@@ -1,0 +1,79 @@
+import { type ReactNode, useMemo, useState } from "react";
+import type { DoseMark } from "../../core/analysis/index.ts";
+import type { Case } from "../../core/case/index.ts";
+import { type CurveStyle } from "../chart/ProfileChart.tsx";
+import type { ClockScale } from "../chart/clockScale.ts";
+import { DoseToken } from "./DoseToken.tsx";
+import "./DoseLane.css";
+import { laneTokens } from "./laneTokens.ts";
+import { TokenBar } from "./TokenBar.tsx";
+
+interface DoseLaneProps {
+  readonly lane: string;
+  readonly name: string;
+  readonly value: Case;
+  readonly marks: readonly DoseMark[];
+  readonly scale: ClockScale;
+  readonly width: number;
+  readonly nowX: number | null;
+  readonly midnightsX: readonly number[];
+  readonly originMs: number;
+  readonly largest: number;
+  readonly style: CurveStyle;
+  readonly isReadOnly: boolean;
+  readonly onOpenLine: (lineId: string) => void;
+  readonly head: ReactNode;
+}
+
+export const LANE_HEIGHT = 84;
+const BASELINE = 52;
+
+/** A row of doses on the shared clock: tokens whose height is the dose, missed ones hollow. */
+export function DoseLane(props: DoseLaneProps) {
+  const { marks, scale, width, nowX } = props;
+  const [selected, setSelected] = useState<string | null>(null);
+  const tokens = useMemo(() => laneTokens(marks, scale, props.largest), [marks, scale, props.largest]);
+  const chosen = tokens.find((token) => token.key === selected) ?? null;
+  return (
+    <section className="lane" aria-label={props.name}>
+      <div className="lane-head">{props.head}</div>
+      <div className="lane-body">
+        <svg className="lane-row" width={width} height={LANE_HEIGHT} viewBox={`0 0 ${width} ${LANE_HEIGHT}`} role="group" aria-label={`${props.name}: doses`}>
+          {nowX !== null && <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height={LANE_HEIGHT} />}
+          {props.midnightsX.map((x) => (
+            <line key={x} className="lane-day" x1={x} x2={x} y1={0} y2={LANE_HEIGHT} />
+          ))}
+          {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2={LANE_HEIGHT} />}
+          {tokens.map((token) => (
+            <DoseToken
+              key={token.key}
+              token={token}
+              lane={props.lane}
+              baseline={BASELINE}
+              scale={scale}
+              originMs={props.originMs}
+              value={props.value}
+              style={props.style}
+              isSelected={token.key === selected}
+              isReadOnly={props.isReadOnly}
+              onSelect={() => setSelected(token.key === selected ? null : token.key)}
+              onOpenLine={() => props.onOpenLine(token.mark.lineId)}
+            />
+          ))}
+        </svg>
+        {chosen && (
+          <TokenBar
+            mark={chosen.mark}
+            lane={props.lane}
+            value={props.value}
+            originMs={props.originMs}
+            x={Math.min(Math.max(chosen.x, 8), width - 8)}
+            isReadOnly={props.isReadOnly}
+            onClose={() => setSelected(null)}
+            onOpenLine={() => props.onOpenLine(chosen.mark.lineId)}
+          />
+        )}
+      </div>
+    </section>
+  );
+}

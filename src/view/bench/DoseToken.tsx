@@ -1,0 +1,120 @@
+import type { KeyboardEvent } from "react";
+import type { DoseMark } from "../../core/analysis/index.ts";
+import type { Case } from "../../core/case/index.ts";
+import { instantIso, instantText } from "../../core/time/index.ts";
+import { quantityPrint } from "../../core/units/index.ts";
+import type { CurveStyle } from "../chart/ProfileChart.tsx";
+import type { ClockScale } from "../chart/clockScale.ts";
+import { useWorkbench } from "../useWorkbench.ts";
+import { tokenNudge, tokenSnap } from "./gestures/tokenSnap.ts";
+import { useTokenDrag } from "./gestures/useTokenDrag.ts";
+import type { LaneToken } from "./laneTokens.ts";
+import { useTokenActions } from "./useTokenActions.ts";
+
+interface DoseTokenProps {
+  readonly token: LaneToken;
+  readonly lane: string;
+  readonly baseline: number;
+  readonly scale: ClockScale;
+  readonly originMs: number;
+  readonly value: Case;
+  readonly style: CurveStyle;
+  readonly isSelected: boolean;
+  readonly isReadOnly: boolean;
+  readonly onSelect: () => void;
+  readonly onOpenLine: () => void;
+}
+
+const HOUR_MS = 3_600_000;
+const WIDTH = 15;
+const HIT = 26;
+
+const STATUS_WORDS: Readonly<Record<DoseMark["status"], string>> = {
+  taken: "",
+  missed: ", missed",
+  late: ", late",
+  moved: ", moved",
+  "after-now": ", after the now line: not counted",
+  "before-now": ", before the now line: not counted",
+};
+
+/** One dose: dragged along the clock, moved with arrow keys, opened with Enter. */
+export function DoseToken(props: DoseTokenProps) {
+  const { token, lane, scale, originMs, value, baseline } = props;
+  const { mark } = token;
+  const previewEdit = useWorkbench((state) => state.previewEdit);
+  const cancelPreview = useWorkbench((state) => state.cancelPreview);
+  const edit = useWorkbench((state) => state.edit);
+  const actions = useTokenActions(value, lane, mark, originMs);
+
+  const atMs = originMs + mark.atH * HOUR_MS;
+  const moved = (dx: number, isFine: boolean) => {
+    const ms = tokenSnap(atMs + (scale.hours(scale.left + dx) - scale.hours(scale.left)) * HOUR_MS, isFine);
+    return { lane, lineId: mark.lineId, index: mark.index, at: instantIso(ms, value.timeZone) };
+  };
+  const startDrag = useTokenDrag({
+    onMove: (dx, isFine) => previewEdit("doseMove", moved(dx, isFine)),
+    onDrop: (dx, isFine) => {
+      cancelPreview();
+      edit("doseMove", moved(dx, isFine));
+    },
+    onCancel: cancelPreview,
+    onPress: props.onSelect,
+  });
+
+  const onKeyDown = (event: KeyboardEvent) => {
+    if (event.ctrlKey || event.metaKey) return;
+    const done = () => {
+      event.preventDefault();
+      event.stopPropagation();
+    };
+    if (event.key === "ArrowLeft" || event.key === "ArrowRight") {
+      done();
+      if (!props.isReadOnly) actions.moveTo(tokenNudge(atMs, event.key === "ArrowLeft" ? -1 : 1, event.shiftKey));
+    } else if (event.key === "ArrowUp" || event.key === "ArrowDown") {
+      done();
+      if (!props.isReadOnly) actions.step(event.key === "ArrowUp" ? 1 : -1);
+    } else if (event.key === "Delete" || event.key === "Backspace") {
+      done();
+      if (!props.isReadOnly) actions.toggleMissed();
+    } else if (event.key === "Enter") {
+      done();
+      props.onOpenLine();
+    } else if (event.key === " ") {
+      done();
+      props.onSelect();
+    }
+  };
+
+  const amount = quantityPrint(mark.amount, { style: "screen", microgram: "microgram" });
+  const words = `${instantText(atMs, value.timeZone, "dayClock")}, ${amount}${STATUS_WORDS[mark.status]}`;
+  const isHollow = mark.status === "missed" || mark.status === "after-now" || mark.status === "before-now";
+  const y = baseline - token.height;
+  return (
+    // biome-ignore lint/a11y/useSemanticElements: a slider inside SVG has no HTML element of its own
+    <g
+      className={`token token-${props.style}${isHollow ? " token-hollow" : ""}${props.isSelected ? " token-selected" : ""}`}
+      role="slider"
+      tabIndex={0}
+      aria-label={`Dose ${mark.index + 1}`}
+      aria-valuenow={Math.round(mark.atH * 60) / 60}
+      aria-valuemin={scale.fromH}
+      aria-valuemax={scale.toH}
+      aria-valuetext={words}
+      aria-readonly={props.isReadOnly}
+      data-at={instantIso(atMs, value.timeZone)}
+      onKeyDown={onKeyDown}
+      {...(props.isReadOnly ? { onClick: props.onSelect } : { onPointerDown: startDrag })}
+    >
+      <title>{words}</title>
+      <rect className="token-hit" x={token.x - HIT / 2} y={baseline - 40} width={HIT} height={62} />
+      <rect className="token-body" x={token.x - WIDTH / 2} y={y} width={WIDTH} height={token.height} rx={WIDTH / 2.4} />
+      {mark.status === "late" || mark.status === "moved" ? (
+        <line className="token-scheduled" x1={scale.x(mark.scheduledH)} x2={token.x} y1={baseline + 4} y2={baseline + 4} />
+      ) : null}
+      <text className="token-label" x={token.x} y={baseline + 19}>
+        {token.label}
+      </text>
+    </g>
+  );
+}

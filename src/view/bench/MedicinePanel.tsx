@@ -1,0 +1,80 @@
+import { tracedWords } from "../../core/messages/index.ts";
+import { productOf } from "../../core/medicine/index.ts";
+import { numberPrint } from "../../core/units/index.ts";
+import { ChoiceField } from "../ui/ChoiceField.tsx";
+import { useWorkbench } from "../useWorkbench.ts";
+import "./OptionPanel.css";
+
+/** The case's medicine: its kinetics with this patient's numbers put in, both readings of each product, and a change of medicine. */
+export function MedicinePanel() {
+  const open = useWorkbench((state) => state.open);
+  const medicines = useWorkbench((state) => state.medicines);
+  const edit = useWorkbench((state) => state.edit);
+  if (!open) return null;
+  const { value } = open;
+  const model = open.analysis.result?.typical ?? null;
+  const hasLines = value.given.length > 0 || value.options.some((option) => option.lines.length > 0);
+  const figures = model
+    ? [
+        { name: "Clearance (CL)", figure: model.clearance },
+        { name: "Volume (V)", figure: model.volume },
+        { name: "Elimination rate (ke)", figure: model.eliminationRate },
+        { name: "Half-life", figure: model.halfLife },
+        ...model.products.flatMap((product) => {
+          const name = productOf(value.medicine, product.product).name;
+          return [
+            { name: `Absorption rate (ka), ${name}`, figure: product.absorptionRate },
+            { name: `Lag, ${name}`, figure: product.lag },
+            { name: `Bioavailability (F), ${name}`, figure: product.bioavailability },
+          ];
+        }),
+      ]
+    : [];
+  return (
+    <div className="medicine-panel">
+      <p>
+        {value.medicine.name}, record version {value.medicine.recordVersion},{" "}
+        {value.medicine.review.status === "reviewed" ? `reviewed by ${value.medicine.review.by}` : "not independently reviewed"}
+      </p>
+      {hasLines || open.role === "reader" ? (
+        <p>The medicine can be changed only while the case has no dose lines.</p>
+      ) : (
+        <ChoiceField
+          label="Medicine"
+          value={value.medicine.id}
+          choices={medicines.map((record) => ({ id: record.id, name: record.name }))}
+          onChange={(id) => {
+            const record = medicines.find((candidate) => candidate.id === id);
+            if (record && record.id !== value.medicine.id) edit("medicineSet", { record });
+          }}
+        />
+      )}
+      <dl>
+        {figures.map(({ name, figure }) => (
+          <div key={name}>
+            <dt>{name}</dt>
+            <dd className="medicine-panel-figure">{tracedWords(figure)}</dd>
+            <dd>
+              {figure.source} ({figure.basis})
+            </dd>
+          </div>
+        ))}
+      </dl>
+      {model?.products.map((product) => {
+        const { assumed, alternative } = product.readings;
+        const h = (hours: number) => `${numberPrint(hours, { significant: 3 })} h`;
+        return (
+          <section key={product.product}>
+            <h3>Both readings of the curve: {productOf(value.medicine, product.product).name}</h3>
+            <p>
+              Assumed: elimination {h(assumed.eliminationHalfLife)}, absorption {h(assumed.absorptionHalfLife)}, volume{" "}
+              {numberPrint(assumed.volume, { significant: 3 })} L. The other way round: elimination{" "}
+              {h(alternative.eliminationHalfLife)}, absorption {h(alternative.absorptionHalfLife)}, volume{" "}
+              {numberPrint(alternative.volume, { significant: 3 })} L. Clearance {numberPrint(assumed.clearance, { significant: 3 })} L/h in both.
+            </p>
+          </section>
+        );
+      })}
+    </div>
+  );
+}

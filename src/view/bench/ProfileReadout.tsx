@@ -1,0 +1,57 @@
+import { type Analysis, concentrationAt } from "../../core/analysis/index.ts";
+import type { Case } from "../../core/case/index.ts";
+import { instantText } from "../../core/time/index.ts";
+import type { CurveStyle } from "../chart/ProfileChart.tsx";
+import type { ProfileScene } from "../chart/profileScene.ts";
+import type { ShownUnit } from "./ProfileRow.tsx";
+import { curvesAt, readoutLines } from "./readoutLines.ts";
+
+interface ProfileReadoutProps {
+  readonly value: Case;
+  readonly analysis: Analysis;
+  readonly scene: ProfileScene;
+  readonly hours: number;
+  readonly unit: ShownUnit;
+  readonly styleOf: (id: string) => CurveStyle;
+}
+
+const LINE = 18;
+const CHAR = 7.1;
+const GAP = 14;
+
+/** Dotted line, a dot on each curve and a box with what they say. */
+export function ProfileReadout({ value, analysis, scene, hours, unit, styleOf }: ProfileReadoutProps) {
+  const x = scene.clock.x(hours);
+  const title = instantText(analysis.clock.originMs + hours * 3_600_000, value.timeZone, "dayClock");
+  const lines = readoutLines(value, analysis, hours, unit);
+  const width = Math.max(title.length * (CHAR + 0.6), ...lines.map((line) => line.length * CHAR)) + 22;
+  const height = 14 + LINE * (lines.length + 1);
+  const isLeft = x + GAP + width > scene.plot.right;
+  const boxX = isLeft ? Math.max(scene.plot.left, x - GAP - width) : x + GAP;
+  return (
+    <g className="readout" aria-hidden="true" pointerEvents="none">
+      <line className="readout-line" x1={x} x2={x} y1={scene.plot.top} y2={scene.plot.bottom} />
+      {curvesAt(value, analysis, hours).map((option) => {
+        const found = concentrationAt(analysis, option, [hours]);
+        return found ? (
+          <circle
+            key={option ?? "given"}
+            className={`readout-dot readout-${styleOf(option ?? "given")}`}
+            cx={x}
+            cy={scene.concentration.y(found[0]! * scene.factor)}
+            r={5}
+          />
+        ) : null;
+      })}
+      <rect className="readout-box" x={boxX} y={scene.plot.top + 6} width={width} height={height} rx={2} />
+      <text className="readout-title" x={boxX + 11} y={scene.plot.top + 6 + LINE + 2}>
+        {title}
+      </text>
+      {lines.map((line, i) => (
+        <text key={line} className="readout-text" x={boxX + 11} y={scene.plot.top + 6 + LINE * (i + 2) + 2}>
+          {line}
+        </text>
+      ))}
+    </g>
+  );
+}

@@ -1,0 +1,29 @@
+import { readingWorking } from "../../core/messages/index.ts";
+import { useWorkbench } from "../useWorkbench.ts";
+import "./OptionPanel.css";
+
+/** The arithmetic of one reading, so that a second person can check it by hand. */
+export function WorkingPanel({ row, option }: { readonly row: string; readonly option: string }) {
+  const open = useWorkbench((state) => state.open);
+  const analysis = open?.analysis.result;
+  const working = open && analysis ? readingWorking(open.value, analysis, option, row) : null;
+  if (!working) return <p>There is nothing to show for this reading now.</p>;
+  return (
+    <div className="working">
+      <h3>
+        {working.title}, option {option}, typical patient
+      </h3>
+      {working.steps.map((step) => (
+        <p key={step} className="working-line">
+          {step}
+        </p>
+      ))}
+      <p className="working-result">{working.result}</p>
+      <ul className="working-source">
+        {working.sources.map((source) => (
+          <li key={source}>{source}</li>
+        ))}
+      </ul>
+    </div>
+  );
+}
