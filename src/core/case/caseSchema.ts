@@ -12,9 +12,27 @@ const id = z.string().min(1).max(64);
 
 /** `confirmed`: an improbable value was asked about and the user said it is meant. */
 export const observationSchema = z.discriminatedUnion("kind", [
-  z.strictObject({ id, at: instantSchema, kind: z.literal("weight"), quantity: quantityIn("kg", "[lb_av]"), confirmed: z.literal(true).optional() }),
-  z.strictObject({ id, at: instantSchema, kind: z.literal("serumCreatinine"), quantity: quantityIn("mg/dL", "umol/L"), confirmed: z.literal(true).optional() }),
-  z.strictObject({ id, at: instantSchema, kind: z.literal("albumin"), quantity: quantityIn("g/L", "g/dL"), confirmed: z.literal(true).optional() }),
+  z.strictObject({
+    id,
+    at: instantSchema,
+    kind: z.literal("weight"),
+    quantity: quantityIn("kg", "[lb_av]"),
+    confirmed: z.literal(true).optional(),
+  }),
+  z.strictObject({
+    id,
+    at: instantSchema,
+    kind: z.literal("serumCreatinine"),
+    quantity: quantityIn("mg/dL", "umol/L"),
+    confirmed: z.literal(true).optional(),
+  }),
+  z.strictObject({
+    id,
+    at: instantSchema,
+    kind: z.literal("albumin"),
+    quantity: quantityIn("g/L", "g/dL"),
+    confirmed: z.literal(true).optional(),
+  }),
 ]);
 
 export const factorSchema = z.strictObject({

@@ -1,4 +1,9 @@
 /** The saved case: its shape, reading and printing it, and every change that can be made to it. */
+export { type CaseDiff, caseDiff, diffApply, diffInvert } from "./caseDiff.ts";
+export { caseFingerprint } from "./caseFingerprint.ts";
+export { caseNew } from "./caseNew.ts";
+export { caseParse, caseValidate } from "./caseParse.ts";
+export { casePrint } from "./casePrint.ts";
 export {
   CASE_FORMAT,
   CASE_VERSION,
@@ -9,14 +14,14 @@ export {
   type Level,
   levelSchema,
   type Observation,
-  observationSchema,
   type Option,
+  observationSchema,
   optionSchema,
   type Patient,
   patientSchema,
   type TargetWindow,
   windowSchema,
 } from "./caseSchema.ts";
-export { caseEdit, type EditArguments, EDIT_NAMES, type EditName } from "./edits/editRegistry.ts";
+export { caseEdit, EDIT_NAMES, type EditArguments, type EditName } from "./edits/editRegistry.ts";
 export type { Lane } from "./edits/lane.ts";
 export { optionNextId } from "./edits/optionEdits.ts";

@@ -27,11 +27,12 @@ export function formulaEvaluate(
   for (const name of namesIn(read.value)) {
     const value = covariates[name];
     if (value === undefined) faults.push(issue("formula-needs", { name }));
-    else if (!isAllowed(name, value)) faults.push(issue("formula-covariate", { name, found: value, unit: COVARIATES[name] }));
+    else if (!isAllowed(name, value))
+      faults.push(issue("formula-covariate", { name, found: value, unit: COVARIATES[name] }));
     else inputs.push({ name, value, unit: COVARIATES[name] });
   }
   if (faults.length > 0) return fail(...faults);
-  const value = valueOf(read.value, covariates);
+  const value = nodeValue(read.value, covariates);
   if (!Number.isFinite(value) || value <= 0) return fail(issue("formula-result", { formula, found: String(value) }));
   return succeed({ value, inputs });
 }
@@ -45,22 +46,22 @@ function namesIn(node: MathNode): CovariateName[] {
 }
 
 /** Walks a tree that formulaRead has let pass: no other node can occur. */
-function valueOf(node: MathNode, covariates: Covariates): number {
+function nodeValue(node: MathNode, covariates: Covariates): number {
   switch (node.type) {
     case "ConstantNode":
       return (node as unknown as { value: number }).value;
     case "SymbolNode":
       return covariates[nameOf(node) as CovariateName] as number;
     case "ParenthesisNode":
-      return valueOf((node as ParenthesisNode).content, covariates);
+      return nodeValue((node as ParenthesisNode).content, covariates);
     case "OperatorNode": {
       const { fn, args } = node as OperatorNode;
-      return (OPERATORS[fn] as Operation)(...args.map((each) => valueOf(each, covariates)));
+      return (OPERATORS[fn] as Operation)(...args.map((each) => nodeValue(each, covariates)));
     }
     case "FunctionNode": {
       const { fn, args } = node as FunctionNode;
       const known = FUNCTIONS[nameOf(fn as MathNode)] as { call: Operation };
-      return known.call(...args.map((each) => valueOf(each, covariates)));
+      return known.call(...args.map((each) => nodeValue(each, covariates)));
     }
     default:
       throw new RangeError(`formula: a part of kind "${node.type}" passed the check`);

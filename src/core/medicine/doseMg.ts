@@ -21,5 +21,7 @@ export function doseMg(amount: DoseAmount, product: Product): Result<number> {
   if (!Number.isFinite(value) || value <= 0) return fail(issue("dose-amount", { found: value, unit }, ["value"]));
   if (unit !== "mL") return succeed(quantityConvert(amount, "mg"));
   if (product.concentration) return succeed(value * quantityConvert(product.concentration, "mg/mL"));
-  return fail(issue("dose-unit-mismatch", { unit, product: product.name, allowed: productDoseUnits(product) }, ["unit"]));
+  return fail(
+    issue("dose-unit-mismatch", { unit, product: product.name, allowed: productDoseUnits(product) }, ["unit"]),
+  );
 }

@@ -16,7 +16,9 @@ export const OPERATORS: Readonly<Record<string, Operation>> = {
 };
 
 /** Functions a formula may call, with how many arguments they take. `log` is the natural logarithm. */
-export const FUNCTIONS: Readonly<Record<string, { readonly call: Operation; readonly least: number; readonly most: number }>> = {
+export const FUNCTIONS: Readonly<
+  Record<string, { readonly call: Operation; readonly least: number; readonly most: number }>
+> = {
   exp: { call: Math.exp as Operation, least: 1, most: 1 },
   log: { call: Math.log as Operation, least: 1, most: 1 },
   sqrt: { call: Math.sqrt as Operation, least: 1, most: 1 },
@@ -72,7 +74,9 @@ function nodeFaults(node: MathNode, formula: string): Issue[] {
       return isFiniteNumber(node) ? [] : [issue("formula-unreadable", { formula })];
     case "SymbolNode": {
       const name = nameOf(node);
-      return Object.hasOwn(COVARIATES, name) ? [] : [issue("formula-name", { formula, name, allowed: Object.keys(COVARIATES) })];
+      return Object.hasOwn(COVARIATES, name)
+        ? []
+        : [issue("formula-name", { formula, name, allowed: Object.keys(COVARIATES) })];
     }
     case "OperatorNode": {
       const { fn, implicit } = node as OperatorNode;

@@ -1,6 +1,7 @@
 /** The medicine record: its schema, its formulas over the patient, the built-in records, and amounts of its products in mg. */
-export { COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
+
 export { type FormulaInput, formulaEvaluate } from "./covariateFormula.ts";
+export { COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
 export { doseMg, productDoseUnits } from "./doseMg.ts";
 export { FORMULA_FUNCTIONS, formulaFaults } from "./formulaRead.ts";
 export { medicineParse, recordIssues } from "./medicineParse.ts";

@@ -28,7 +28,8 @@ export function recordIssues(issues: readonly Issue[], input: unknown, at: reado
 /** What a person calls the figure: the record's name, the product's name, the part. */
 function figureNames(input: unknown, at: readonly string[], figure: readonly (string | number)[]) {
   const record = at.reduce<unknown>((value, key) => fieldOf(value, key), input);
-  const product = figure[0] === "products" ? fieldOf(fieldOf(fieldOf(record, "products"), figure[1]), "name") : undefined;
+  const product =
+    figure[0] === "products" ? fieldOf(fieldOf(fieldOf(record, "products"), figure[1]), "name") : undefined;
   return { medicine: fieldOf(record, "name"), product, figure };
 }
 

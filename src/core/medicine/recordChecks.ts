@@ -108,7 +108,8 @@ export function windowChecks(
   const allowed = quantity === "auc24" ? "mg.h/L" : "mg/L";
   const faults: RecordFault[] = [];
   for (const [end, { unit }] of [["low", low] as const, ["high", high] as const]) {
-    if (unit !== allowed) faults.push({ code: "window-unit", path: [...path, end, "unit"], data: { found: unit, allowed, quantity } });
+    if (unit !== allowed)
+      faults.push({ code: "window-unit", path: [...path, end, "unit"], data: { found: unit, allowed, quantity } });
   }
   if (low.value < 0 || low.value >= high.value) {
     faults.push({ code: "window-order", path, data: { low: low.value, high: high.value, unit: low.unit } });
@@ -122,7 +123,9 @@ function formulaChecks(record: MedicineRecord): RecordFault[] {
     const path = ["kinetics", name, "formula"];
     const allowed = name === "clearance" ? "L/h" : "L";
     const unitFaults: RecordFault[] =
-      unit === allowed ? [] : [{ code: "record-unit", path: ["kinetics", name, "unit"], data: { found: unit, allowed } }];
+      unit === allowed
+        ? []
+        : [{ code: "record-unit", path: ["kinetics", name, "unit"], data: { found: unit, allowed } }];
     return [...unitFaults, ...formulaFaults(formula).map(({ code, data }) => ({ code, path, data }))];
   });
 }

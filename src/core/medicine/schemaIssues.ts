@@ -29,7 +29,8 @@ function faultIssues(fault: SchemaFault, input: unknown, base: Path): Issue[] {
     case "custom":
       return one(String(fault.params?.code ?? "value-malformed"), fault.params ?? {});
     case "invalid_union":
-      if (fault.errors.length > 0) return likeliestBranch(fault.errors).flatMap((each) => faultIssues(each, input, path));
+      if (fault.errors.length > 0)
+        return likeliestBranch(fault.errors).flatMap((each) => faultIssues(each, input, path));
       return found === undefined ? one("field-missing", {}) : one("value-not-listed", { allowed: optionsOf(fault) });
     case "invalid_type":
       return found === undefined ? one("field-missing", {}) : one("value-wrong-kind", { allowed: fault.expected });

@@ -1,3 +1,5 @@
+import { medicineMessages } from "./medicineMessages.ts";
+import { caseMessages } from "./caseMessages.ts";
 import type { Issue } from "../result/index.ts";
 import type { MessageFunction } from "./messageFunction.ts";
 import { numberMessages } from "./numberMessages.ts";
@@ -7,6 +9,8 @@ import { timeMessages } from "./timeMessages.ts";
 
 /** Every sentence a user can read about a fault, one function a code. A folder's sentences stand in one file: one import and one line here. */
 const catalogue: Readonly<Record<string, MessageFunction>> = {
+  ...medicineMessages,
+  ...caseMessages,
   ...numberMessages,
   ...patientMessages,
   ...storageMessages,

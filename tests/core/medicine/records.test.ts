@@ -1,6 +1,6 @@
 import { readdirSync, readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
-import { BUILT_IN_RECORDS, formulaEvaluate, medicineParse, productOf, recordById } from "../../../src/core/medicine/index.ts";
+import { BUILT_IN_RECORDS, medicineParse, recordById } from "../../../src/core/medicine/index.ts";
 
 const folder = new URL("../../../src/core/medicine/records/", import.meta.url);
 const files = readdirSync(folder).filter((name) => name.endsWith(".json"));

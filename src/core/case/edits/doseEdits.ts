@@ -13,12 +13,9 @@ interface DoseAddress {
 }
 
 /** "taken": as the line says; another amount, if one was noted, stays. */
-function doseMark(
-  value: Case,
-  { lane, lineId, index, status }: DoseAddress & { status: "missed" | "taken" },
-): Case {
+function doseMark(value: Case, { lane, lineId, index, status }: DoseAddress & { status: "missed" | "taken" }): Case {
   const line = laneLine(value, lane, lineId);
-  const scheduledMs = lineScheduledMs(line, index);
+  const scheduledMs = lineScheduledMs(line, index, value.timeZone);
   if (status === "missed") return laneWithLine(value, lane, lineWithException(line, index, { status }));
   const amount = exceptionOf(line, index)?.amount;
   const at = instantIso(scheduledMs, value.timeZone);
@@ -32,9 +29,10 @@ function doseScale(
 ): Case {
   const line = laneLine(value, lane, lineId);
   if (lane !== "given" || index === undefined) return laneWithLine(value, lane, { ...line, amount });
-  const scheduledMs = lineScheduledMs(line, index);
+  const scheduledMs = lineScheduledMs(line, index, value.timeZone);
   const present = exceptionOf(line, index);
-  if (present?.status === "missed") throw new RangeError(`index: dose ${index} of "${lineId}" was missed and has no amount`);
+  if (present?.status === "missed")
+    throw new RangeError(`index: dose ${index} of "${lineId}" was missed and has no amount`);
   const timing = present ?? { status: "moved" as const, at: instantIso(scheduledMs, value.timeZone) };
   return laneWithLine(value, lane, lineWithException(line, index, { ...timing, amount }));
 }

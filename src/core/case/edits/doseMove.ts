@@ -14,7 +14,7 @@ export function doseMove(
   { lane, lineId, index, at }: { lane: Lane; lineId: string; index: number; at: string },
 ): Case {
   const line = laneLine(value, lane, lineId);
-  const shiftMs = instantMs(at) - lineScheduledMs(line, index);
+  const shiftMs = instantMs(at) - lineScheduledMs(line, index, value.timeZone);
   const moved = lane === "given" ? doseAt(line, index, at, shiftMs) : lineShifted(value, line, shiftMs);
   return laneWithLine(value, lane, moved);
 }

@@ -15,7 +15,9 @@ export const medicineEdits = {
     const withProduct = (line: DoseLine): DoseLine => {
       const product = Object.hasOwn(products, line.product) ? (products[line.product] as string) : line.product;
       if (!record.products.some((each) => each.id === product)) {
-        throw new RangeError(`products: dose line "${line.id}" is of product "${product}", which "${record.id}" does not have`);
+        throw new RangeError(
+          `products: dose line "${line.id}" is of product "${product}", which "${record.id}" does not have`,
+        );
       }
       return product === line.product ? line : { ...line, product };
     };

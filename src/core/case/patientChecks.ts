@@ -1,0 +1,44 @@
+import { ageQuestion, creatinineQuestion, type Doubt, heightQuestion, weightQuestion } from "../patient/index.ts";
+import { type Issue, issue } from "../result/index.ts";
+import { instantMs } from "../time/index.ts";
+import { quantityConvert } from "../units/index.ts";
+import type { Observation, Patient } from "./caseSchema.ts";
+import { duplicateIds } from "./duplicateIds.ts";
+
+type Path = readonly (string | number)[];
+
+/** What can't be true of a patient. What is only improbable is asked about where it is entered, not here. */
+export function patientChecks({ age, height, observations, factors }: Patient): Issue[] {
+  const issues = duplicateIds(observations, ["patient", "observations"]);
+  if (age) issues.push(...impossible(ageQuestion(age.value), ["patient", "age", "value"]));
+  if (height) {
+    const heightCm = quantityConvert(height, "cm");
+    issues.push(...impossible(heightQuestion({ heightCm }), ["patient", "height", "value"]));
+  }
+  observations.forEach((each, i) => {
+    issues.push(...observationIssues(each, ["patient", "observations", i, "quantity", "value"]));
+  });
+  factors.forEach(({ from, to }, i) => {
+    if (to !== undefined && instantMs(to) < instantMs(from)) {
+      issues.push(issue("factor-order", { from, to }, ["patient", "factors", i, "to"]));
+    }
+  });
+  return issues;
+}
+
+function observationIssues(observation: Observation, path: Path): Issue[] {
+  switch (observation.kind) {
+    case "weight":
+      return impossible(weightQuestion({ weightKg: quantityConvert(observation.quantity, "kg") }), path);
+    case "serumCreatinine":
+      return impossible(creatinineQuestion(observation.quantity), path);
+    case "albumin": {
+      const { value, unit } = observation.quantity;
+      return value > 0 ? [] : [issue("albumin-not-positive", { found: value, unit }, path)];
+    }
+  }
+}
+
+function impossible(doubt: Doubt | null, path: Path): Issue[] {
+  return doubt?.verdict === "impossible" ? [{ ...doubt.issue, path }] : [];
+}

@@ -1,0 +1,144 @@
+import type { MessageFunction } from "./messageFunction.ts";
+
+type Data = Parameters<MessageFunction>[0];
+
+const said = (value: unknown): string => `"${String(value)}"`;
+
+/** "A, B or C" */
+function either(list: unknown): string {
+  const words = (Array.isArray(list) ? list : [list]).map(String);
+  const last = words.at(-1) ?? "";
+  return words.length < 2 ? last : `${words.slice(0, -1).join(", ")} or ${last}`;
+}
+
+const at = ({ path }: Data): string => (typeof path === "string" && path !== "" ? path : "the whole file");
+
+/** Kinds of value, as the schema calls them, in words. */
+const KINDS: Readonly<Record<string, string>> = {
+  number: "a number",
+  int: "a whole number",
+  string: "text in quotes",
+  boolean: "true or false",
+  array: "a list in square brackets",
+  object: "a group of fields in braces",
+  record: "a group of fields in braces",
+};
+
+/** What a field with a pattern of its own wants, by its name. */
+const INSTANT = "an instant with its offset, of a date that exists, such as 2026-03-04T09:00:00+00:00";
+const FORMS: Readonly<Record<string, string>> = {
+  at: INSTANT,
+  now: INSTANT,
+  start: INSTANT,
+  from: INSTANT,
+  to: INSTANT,
+  timeZone: "a named time zone such as Europe/Lisbon",
+  clock: "a 24-hour clock time such as 08:00",
+};
+
+function size(of: unknown): string {
+  if (of === "string") return " characters";
+  return of === "array" ? " entries" : "";
+}
+
+function range({ unit, above, least, most }: Data): string {
+  const ends = [
+    above === undefined ? "" : `above ${String(above)}`,
+    least === undefined ? "" : `at least ${String(least)}`,
+    most === undefined ? "" : `at most ${String(most)}`,
+  ].filter((each) => each !== "");
+  const number = least !== undefined && least === most ? `exactly ${String(least)}` : ends.join(" and ");
+  return unit === "1" ? number : `${number} ${String(unit)}`;
+}
+
+const FIGURES: Readonly<Record<string, string>> = {
+  molarMass: "molar mass",
+  clearance: "clearance",
+  volume: "volume",
+  absorptionRate: "absorption rate",
+  lag: "lag",
+  bioavailability: "bioavailability",
+  strengths: "strength",
+  concentration: "concentration",
+  residualProportional: "residual variability (proportional)",
+  residualAdditive: "residual variability (additive)",
+  windows: "window",
+  toxicFrom: "toxic limit",
+  population: "population",
+  doseLimits: "dose limit",
+  sampling: "sampling statement",
+  cautions: "caution",
+};
+
+function figureName({ figure, product }: Data): string {
+  const parts = Array.isArray(figure) ? figure : [];
+  const word = parts.findLast((each) => typeof each === "string" && Object.hasOwn(FIGURES, each));
+  const spread = parts[0] === "variability" && !String(word).startsWith("residual") ? "variability of the " : "";
+  const name = word === undefined ? "figure" : `${spread}${FIGURES[String(word)]}`;
+  return typeof product === "string" ? `${name} of the ${product}` : name;
+}
+
+/** Faults of a medicine record, of its formulas and of amounts of its products; and those that any stored file can have. */
+export const medicineMessages: Readonly<Record<string, MessageFunction>> = {
+  "field-unknown": (data) => `The field ${at(data)} is not known here.`,
+  "field-missing": (data) => `The field ${at(data)} is missing.`,
+  "value-wrong-kind": (data) =>
+    `${at(data)} is ${String(data.found)}; it must be ${KINDS[String(data.allowed)] ?? String(data.allowed)}.`,
+  "value-not-listed": (data) => `${at(data)} is ${String(data.found)}; it must be ${either(data.allowed)}.`,
+  "value-too-small": (data) =>
+    `${at(data)} is ${String(data.found)}; it must be at least ${String(data.minimum)}${size(data.of)}.`,
+  "value-too-big": (data) =>
+    `${at(data)} is ${String(data.found)}; it must be at most ${String(data.maximum)}${size(data.of)}.`,
+  "value-malformed": (data) =>
+    `${at(data)} is ${String(data.found)}; it must be ${FORMS[String(data.key)] ?? "written in another form"}.`,
+
+  "record-figure-without-source": (data) =>
+    `The ${figureName(data)}${typeof data.medicine === "string" ? ` in the record of ${data.medicine}` : ""} has no ${String(data.missing)} (${String(data.path)}): every figure needs one.`,
+  "record-source-unknown": (data) =>
+    `${at(data)} names the source ${said(data.source)}, which the record does not list.`,
+  "record-basis-invented": (data) => `${at(data)} says "invented", which only a record marked as invented may hold.`,
+  "record-invented-name": ({ name }) => `The invented medicine ${said(name)} must say "invented" in its name.`,
+  "record-unit": (data) => `${at(data)} is ${said(data.found)}; the unit here is ${said(data.allowed)}.`,
+  "record-range": (data) => `${at(data)} is ${String(data.found)}; it must be ${range(data)}.`,
+  "record-product-content": ({ product, isLiquid }) =>
+    isLiquid
+      ? `The liquid ${said(product)} must state a concentration and no strengths.`
+      : `The product ${said(product)} must state at least one strength and no concentration.`,
+  "record-duplicate": (data) => `${at(data)} stands there a second time (${String(data.found)}).`,
+  "record-name-turns": (data) => `${at(data)} holds a hidden mark that turns the direction of text.`,
+  "record-ages": ({ ageMin, ageMax }) =>
+    `The lowest age of the population, ${String(ageMin)}, is above the highest, ${String(ageMax)}.`,
+  "window-unit": (data) => `${at(data)} is ${said(data.found)}; a window of this kind is in ${said(data.allowed)}.`,
+  "window-order": ({ low, high, unit }) =>
+    `A window from ${String(low)} to ${String(high)} ${String(unit)} is empty: the low end must be 0 or more and below the high end.`,
+
+  "formula-too-long": ({ found, maximum }) =>
+    `The formula has ${String(found)} characters; at most ${String(maximum)} are read.`,
+  "formula-unreadable": ({ formula }) =>
+    `The formula ${said(formula)} cannot be read: it may hold numbers, known names, + - * / ^, brackets and exp, log, sqrt, min, max; write every * out.`,
+  "formula-name": ({ formula, name, allowed }) =>
+    `The formula ${said(formula)} uses ${said(name)}, which is not known: use ${either(allowed)}.`,
+  "formula-arguments": ({ formula, name, found, least, most }) =>
+    `The formula ${said(formula)} gives ${String(name)} ${String(found)} values; it takes ${least === most ? String(least) : `${String(least)} to ${String(most)}`}.`,
+  "formula-needs": ({ name }) =>
+    `The prediction needs ${COVARIATE_WORDS[String(name)] ?? String(name)}, which is not known for this patient.`,
+  "formula-covariate": ({ name, found, unit }) =>
+    `The prediction can't use ${COVARIATE_WORDS[String(name)] ?? String(name)} of ${String(found)} ${String(unit)}.`,
+  "formula-result": ({ formula, found }) =>
+    `The formula ${said(formula)} gives ${String(found)} for this patient, which is not a usable value.`,
+
+  "dose-amount": ({ found, unit }) =>
+    `A dose of ${String(found)} ${String(unit)} can't be given: write an amount above 0.`,
+  "dose-unit-mismatch": ({ unit, product, allowed }) =>
+    `The ${String(product)} is not given in ${String(unit)}: write ${either(allowed)}.`,
+};
+
+const COVARIATE_WORDS: Readonly<Record<string, string>> = {
+  weight: "a weight",
+  idealWeight: "an ideal weight (from sex and height)",
+  adjustedWeight: "an adjusted weight (from sex, height and weight)",
+  height: "a height",
+  age: "an age",
+  creatinineClearance: "a creatinine clearance (from age, sex, weight and serum creatinine)",
+  isFemale: "a sex",
+};
