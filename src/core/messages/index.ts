@@ -7,3 +7,4 @@ export { windowQuantityWord } from "./windowWords.ts";
 export * from "./fieldWords.ts";
 export * from "./screenWords.ts";
 export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";
+export * from "./entryWords.ts";

@@ -2,6 +2,7 @@ import { medicineMessages } from "./medicineMessages.ts";
 import { caseMessages } from "./caseMessages.ts";
 import type { Issue } from "../result/index.ts";
 import type { MessageFunction } from "./messageFunction.ts";
+import { entryMessages } from "./entryMessages.ts";
 import { numberMessages } from "./numberMessages.ts";
 import { patientMessages } from "./patientMessages.ts";
 import { storageMessages } from "./storageMessages.ts";
@@ -11,6 +12,7 @@ import { timeMessages } from "./timeMessages.ts";
 const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...medicineMessages,
   ...caseMessages,
+  ...entryMessages,
   ...numberMessages,
   ...patientMessages,
   ...storageMessages,

@@ -1,0 +1,99 @@
+import { medicinesWords, windowQuantityWord } from "../../core/messages/index.ts";
+import type { Basis, Figure, MedicineRecord, Product, RecordWindow } from "../../core/medicine/index.ts";
+import { numberPrint, quantityPrint, type UnitCode } from "../../core/units/index.ts";
+
+/** A line of a record's tables: what it is, its value in words, and how it is known. */
+export interface RecordRow {
+  readonly id: string;
+  readonly name: string;
+  readonly value: string;
+  readonly source: string;
+  readonly basis: Basis;
+  readonly note: string | undefined;
+}
+
+/** Six digits: enough for every published figure; 80 mg in 15 mL does not become sixteen digits. */
+const shown = (value: number, unit: UnitCode) => quantityPrint({ value, unit }, { style: "screen", significant: 6 });
+
+function figureRow(id: string, name: string, figure: Figure): RecordRow {
+  const { value, unit, source, basis, note } = figure;
+  return { id, name, value: shown(value, unit), source, basis, note };
+}
+
+export function kineticsRows(record: MedicineRecord): readonly RecordRow[] {
+  const { clearance, volume } = record.kinetics;
+  const formula = (id: "clearance" | "volume", one: typeof clearance): RecordRow => ({
+    id,
+    name: medicinesWords[id],
+    value: `${one.formula} (${one.unit})`,
+    source: one.source,
+    basis: one.basis,
+    note: one.note,
+  });
+  return [
+    formula("clearance", clearance),
+    formula("volume", volume),
+    figureRow("molarMass", medicinesWords.molarMass, record.molarMass),
+    ...(record.toxicFrom ? [figureRow("toxicFrom", medicinesWords.toxicFrom, record.toxicFrom)] : []),
+  ];
+}
+
+const VARIABILITY = ["clearance", "volume", "absorptionRate", "residualProportional", "residualAdditive"] as const;
+
+export function variabilityRows(record: MedicineRecord): readonly RecordRow[] {
+  return VARIABILITY.flatMap((name) => {
+    const figure = record.variability[name];
+    return figure ? [figureRow(name, medicinesWords[name], figure)] : [];
+  });
+}
+
+export function productRows(product: Product): readonly RecordRow[] {
+  return [
+    ...strengthRows(product),
+    ...(product.concentration ? [figureRow("concentration", medicinesWords.concentration, product.concentration)] : []),
+    figureRow("absorptionRate", medicinesWords.absorptionRate, product.absorptionRate),
+    figureRow("lag", medicinesWords.lag, product.lag),
+    figureRow("bioavailability", medicinesWords.bioavailability, product.bioavailability),
+  ];
+}
+
+/** Strengths known in the same way stand on one line: "100, 200, 300 mg". */
+function strengthRows(product: Product): readonly RecordRow[] {
+  const rows = new Map<string, RecordRow>();
+  for (const strength of product.strengths) {
+    const key = JSON.stringify([strength.unit, strength.source, strength.basis, strength.note]);
+    const before = rows.get(key);
+    const value = shown(strength.value, strength.unit);
+    rows.set(key, before ? { ...before, value: `${before.value}, ${value}` } : figureRow(key, medicinesWords.strength, strength));
+  }
+  return [...rows.values()];
+}
+
+/** "10 to 20 mg/L, lowest and highest" */
+export function windowValue(window: Pick<RecordWindow, "low" | "high" | "quantity">): string {
+  return `${numberPrint(window.low.value)} to ${shown(window.high.value, window.high.unit)}, ${windowQuantityWord(window.quantity)}`;
+}
+
+export function windowRows(record: MedicineRecord): readonly RecordRow[] {
+  return record.windows.map((window) => ({
+    id: window.id,
+    name: window.label,
+    value: windowValue(window),
+    source: window.source,
+    basis: window.basis,
+    note: window.note,
+  }));
+}
+
+/** Sources in the order they are written in the record, counted from 1: the number is what the tables point to. */
+export function sourceNumber(record: MedicineRecord, source: string): number {
+  return Object.keys(record.sources).indexOf(source) + 1;
+}
+
+/** "Hussein, 1997", or the title where no author is named. */
+export function sourceShort(record: MedicineRecord, id: string): string {
+  const source = record.sources[id];
+  if (!source) return id;
+  const who = source.authors?.split(/[,;]| and /)[0]?.trim() ?? source.title;
+  return source.year ? `${who}, ${source.year}` : who;
+}

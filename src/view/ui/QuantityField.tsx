@@ -1,0 +1,102 @@
+import { useState } from "react";
+import { issueMessage } from "../../core/messages/index.ts";
+import type { Issue } from "../../core/result/index.ts";
+import type { Quantity, UnitCode } from "../../core/units/index.ts";
+import { QuantityInput } from "./QuantityInput.tsx";
+import { isDraftEmpty, type QuantityDraft, quantityDraft, quantityDraftRead } from "./quantityDraft.ts";
+
+/** An odd value, asked about: every answer is a value to take; `isConfirmed` when it is the one that was typed. */
+export interface QuantityAsk<U extends UnitCode> {
+  readonly text: string;
+  readonly answers: readonly { readonly label: string; readonly value: Quantity<U>; readonly isConfirmed: boolean }[];
+}
+
+export interface QuantityFieldProps<U extends UnitCode> {
+  readonly label: string;
+  readonly value: Quantity<U> | null;
+  readonly units: readonly U[];
+  /** Unit chosen while there is no value. */
+  readonly unit: U;
+  readonly onCommit: (value: Quantity<U> | null, isConfirmed: boolean) => void;
+  /** A value that can't be meant is refused. */
+  readonly refuse?: (value: Quantity<U>) => Issue | null;
+  /** A value that is odd is asked about; it counts once it is answered. */
+  readonly ask?: (value: Quantity<U>) => QuantityAsk<U> | null;
+  readonly description?: string | undefined;
+  readonly isReadOnly?: boolean;
+}
+
+const isSame = (a: Quantity | null, b: Quantity | null) =>
+  a === b || (a !== null && b !== null && a.value === b.value && a.unit === b.unit);
+
+/** A quantity of the open case: counts on Enter, on leaving the field, or once the question is answered. Emptied: null. */
+export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) {
+  const { label, value, units, unit, onCommit, refuse, ask, description } = props;
+  const [draft, setDraft] = useState(() => quantityDraft(value, unit));
+  const [seen, setSeen] = useState(value);
+  const [fault, setFault] = useState<string>();
+  const [asked, setAsked] = useState<QuantityAsk<U>>();
+
+  const valueOf = (one: QuantityDraft<U>) => {
+    const read = quantityDraftRead(one, units);
+    return read.ok ? read.value : null;
+  };
+  // Undo, another tab or an answer changed it from outside: show that, but leave what reads the same as it was typed.
+  if (!isSame(seen, value)) {
+    setSeen(value);
+    if (!isSame(valueOf(draft), value)) {
+      setDraft(quantityDraft(value, unit));
+      setFault(undefined);
+      setAsked(undefined);
+    }
+  }
+
+  const take = (next: Quantity<U> | null, isConfirmed: boolean) => {
+    setAsked(undefined);
+    setFault(undefined);
+    if (next && !isSame(valueOf(draft), next)) setDraft(quantityDraft(next, unit));
+    else if (next && /\p{L}/u.test(draft.text)) setDraft(quantityDraft(next, unit));
+    onCommit(next, isConfirmed);
+  };
+  const commit = (left: QuantityDraft<U>) => {
+    if (isDraftEmpty(left)) {
+      if (value !== null) take(null, false);
+      return;
+    }
+    const next = valueOf(left);
+    if (next === null || isSame(next, value)) return;
+    const refusal = refuse?.(next);
+    if (refusal) {
+      setFault(issueMessage(refusal));
+      return;
+    }
+    const question = ask?.(next);
+    if (question) setAsked(question);
+    else take(next, false);
+  };
+  return (
+    <QuantityInput
+      label={label}
+      draft={draft}
+      units={units}
+      description={description}
+      isReadOnly={props.isReadOnly ?? false}
+      fault={fault}
+      question={
+        asked && {
+          text: asked.text,
+          answers: asked.answers.map((answer) => ({
+            label: answer.label,
+            onAnswer: () => take(answer.value, answer.isConfirmed),
+          })),
+        }
+      }
+      onChange={(next) => {
+        setFault(undefined);
+        setAsked(undefined);
+        setDraft(next);
+      }}
+      onLeave={commit}
+    />
+  );
+}

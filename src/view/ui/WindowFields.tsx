@@ -1,0 +1,73 @@
+import type { TargetWindow } from "../../core/case/index.ts";
+import { issueMessage, windowQuantityWord, windowWords } from "../../core/messages/index.ts";
+import { quantityPrint, unitSpoken } from "../../core/units/index.ts";
+import { ChoiceField } from "./ChoiceField.tsx";
+import { TextField } from "./TextField.tsx";
+import { type WindowDraft, windowDraftRead, windowUnits } from "./windowDraft.ts";
+import "./WindowFields.css";
+
+const ABOUT: readonly TargetWindow["quantity"][] = ["lowest-and-highest", "trough", "peak", "average", "auc24"];
+
+export interface WindowFieldsProps {
+  readonly draft: WindowDraft;
+  readonly onChange: (draft: WindowDraft) => void;
+  /** g/mol; for windows typed in a molar unit. */
+  readonly molarMass: number;
+  /** The form was sent: say what is missing. */
+  readonly isTold: boolean;
+}
+
+export function WindowFields({ draft, onChange, molarMass, isTold }: WindowFieldsProps) {
+  const read = windowDraftRead(draft, molarMass);
+  const faultOf = (path: string, text?: string) => {
+    const found = read.ok ? undefined : read.issues.find((one) => one.path[0] === path);
+    return found && (isTold || (text !== undefined && text.trim() !== "")) ? issueMessage(found) : undefined;
+  };
+  const units = windowUnits(draft.about);
+  const shown = (end: TargetWindow["low"]) => quantityPrint(end, { style: "screen", significant: 4 });
+  const isConverted = read.ok && read.value.low.unit !== draft.unit;
+  return (
+    <div className="window-fields">
+      <ChoiceField
+        label={windowWords.about}
+        value={draft.about}
+        prompt={windowWords.aboutPrompt}
+        choices={ABOUT.map((value) => ({ value, label: windowQuantityWord(value) }))}
+        onChoose={(about) => {
+          const allowed = windowUnits(about);
+          onChange({ ...draft, about, unit: allowed.includes(draft.unit) ? draft.unit : (allowed[0] ?? "mg/L") });
+        }}
+        fault={faultOf("about")}
+      />
+      <div className="window-fields-ends">
+        <TextField
+          label={windowWords.low}
+          value={draft.low}
+          onChange={(low) => onChange({ ...draft, low })}
+          fault={faultOf("low", draft.low)}
+        />
+        <TextField
+          label={windowWords.high}
+          value={draft.high}
+          onChange={(high) => onChange({ ...draft, high })}
+          fault={faultOf("high", draft.high)}
+          reading={isConverted ? windowWords.asStored(shown(read.value.low), shown(read.value.high)) : undefined}
+        />
+        <ChoiceField
+          label={windowWords.unit}
+          value={draft.unit}
+          choices={units.map((unit) => ({ value: unit, label: unitSpoken(unit, "screen") }))}
+          onChoose={(unit) => onChange({ ...draft, unit })}
+        />
+      </div>
+      <TextField
+        label={windowWords.basis}
+        value={draft.basis}
+        onChange={(basis) => onChange({ ...draft, basis })}
+        description={windowWords.basisHelp}
+        maxLength={400}
+        fault={faultOf("basis")}
+      />
+    </div>
+  );
+}
