@@ -1,5 +1,7 @@
 /** Fixed words of the screens: cases, medicines, settings. The same word stands for the same thing everywhere (docs/glossary.md). */
 
+import { windowQuantityWord } from "./windowWords.ts";
+
 export const placeWords = {
   cases: "Cases",
   bench: "Bench",
@@ -58,7 +60,10 @@ export const casesWords = {
 
 export const bootWords = {
   opening: "Opening the cases stored on this device …",
-  lostTitle: { all: "The cases stored on this device are gone", some: "Some of the cases stored on this device are gone" },
+  lostTitle: {
+    all: "The cases stored on this device are gone",
+    some: "Some of the cases stored on this device are gone",
+  },
   lostCount: (cases: number, when: string | null) =>
     `${cases === 1 ? "One case is" : `${cases} cases are`} concerned${when ? `; the last was saved ${when}` : ""}.`,
   lostWhy: {
@@ -75,7 +80,8 @@ export const bootWords = {
   newer: (found: number, known: number, isReadable: boolean) =>
     `The store on this device has version ${found}; this copy of Ebbline knows version ${known}. ${isReadable ? "Cases can be opened, read and exported" : "Cases can't be read here"}, and nothing is changed or stored, so that nothing of the newer version is lost. Reload to get the newer program.`,
   blockedTitle: "Another tab holds the store",
-  blocked: "An older version of Ebbline is open in another tab and keeps the store locked. Close the other tabs of Ebbline, then reload this one.",
+  blocked:
+    "An older version of Ebbline is open in another tab and keeps the store locked. Close the other tabs of Ebbline, then reload this one.",
   unavailableTitle: "Nothing can be stored in this browser",
   unavailable: (detail: string) =>
     `The browser does not let Ebbline keep anything here (${detail}). You can work, but a case lasts only as long as this tab: export it as a file before you close it.`,
@@ -84,17 +90,20 @@ export const bootWords = {
 
 export const medicinesWords = {
   heading: "Medicine records",
-  about: "A record holds a medicine's kinetics, products, windows and cautions. Every figure names its source and how it is known.",
+  about:
+    "A record holds a medicine's kinetics, products, windows and cautions. Every figure names its source and how it is known.",
   list: "Records",
   own: "the ward's own",
   builtIn: "built in",
   recordVersion: (version: number) => `record version ${version}`,
   notReviewed: "not independently reviewed",
-  reviewed: (by: string | undefined, on: string | undefined) => `reviewed${by ? ` by ${by}` : ""}${on ? `, ${on}` : ""}`,
+  reviewed: (by: string | undefined, on: string | undefined) =>
+    `reviewed${by ? ` by ${by}` : ""}${on ? `, ${on}` : ""}`,
   inventedTitle: "This medicine does not exist",
   invented: "The record is invented for demonstration. Its figures mean nothing for any real medicine.",
   unverifiedTitle: "Figures from memory",
-  unverified: (count: number, of: number) => `${count} of ${of} figures are from memory and unverified. Check them against the named source before you rely on them.`,
+  unverified: (count: number, of: number) =>
+    `${count} of ${of} figures are from memory and unverified. Check them against the named source before you rely on them.`,
   measuredIn: "measured in",
   appliesTo: "applies to",
   kinetics: "Kinetics",
@@ -135,7 +144,8 @@ export const medicinesWords = {
   importRecord: "Import a ward's record",
   importHelp: "A JSON file in Ebbline's own record format. A figure without a source is refused.",
   importedTitle: "Record stored",
-  imported: (name: string, version: number) => `“${name}”, record version ${version}, is stored on this device and can be chosen for a new case.`,
+  imported: (name: string, version: number) =>
+    `“${name}”, record version ${version}, is stored on this device and can be chosen for a new case.`,
   refusedTitle: (name: string) => `“${name}” was not imported`,
   remove: "Remove this record",
   removeTitle: "Remove this record?",
@@ -151,8 +161,15 @@ export const medicinesWords = {
   },
 } as const;
 
+export const windowQuantityWords = {
+  trough: windowQuantityWord("trough"),
+  peak: windowQuantityWord("peak"),
+  average: windowQuantityWord("average"),
+  auc24: windowQuantityWord("auc24"),
+  "lowest-and-highest": windowQuantityWord("lowest-and-highest"),
+} as const;
+
 export const settingsWords = {
-  heading: "Settings",
   print: "Print",
   pageSize: "Page size",
   microgram: "Micrograms are written as",
@@ -172,16 +189,18 @@ export const settingsWords = {
   },
   casesStored: "cases stored",
   persisted: "Promise of the browser not to clear it",
-  persistedYes: "given",
-  persistedNo: "not given: the browser may clear it when space is short",
-  persistedUnknown: "this browser does not say",
+  persistedState: {
+    given: "given",
+    "not given": "not given: the browser may clear it when space is short",
+    unknown: "this browser does not say",
+  },
   persistAsk: "Ask for it",
   backupTitle: "Keep a copy elsewhere",
   backup:
     "A browser can be told to clear its data when it closes, and hospital machines often are. Export a case from the Cases screen whenever it matters; the .ebbline.json file holds all of it, and importing it brings it back.",
   program: "Program",
   version: "version",
-  build: "build",
+  engine: "calculation",
   offline: "Works without a network",
   offlineYes: "yes, everything needed is stored on this machine",
   offlineNo: "not yet: load the page once more while the network is there",

@@ -5,6 +5,8 @@ import { FileDropArea } from "../ui/FileDropArea.tsx";
 import { FilePicker } from "../ui/FilePicker.tsx";
 import { fileSave } from "../ui/fileSave.ts";
 import { Notice } from "../ui/Notice.tsx";
+import { ScreenHead } from "../ui/ScreenHead.tsx";
+import { screenPlaces } from "../ui/screenPlaces.ts";
 import { timeZoneHere } from "../ui/timeZones.ts";
 import { useWorkbench } from "../useWorkbench.ts";
 import { BootNotice } from "./BootNotice.tsx";
@@ -27,6 +29,7 @@ export function CasesScreen() {
   const importFile = useWorkbench((state) => state.importFile);
   const exportStored = useWorkbench((state) => state.exportStored);
   const acceptLoss = useWorkbench((state) => state.acceptLoss);
+  const show = useWorkbench((state) => state.show);
   const [outcome, setOutcome] = useState<ImportOutcome | null>(null);
   const [exportFault, setExportFault] = useState<readonly Issue[]>([]);
   const [zone] = useState(timeZoneHere);
@@ -43,6 +46,7 @@ export function CasesScreen() {
 
   return (
     <FileDropArea word={casesWords.importDrop} onFile={(file) => void importOne(file)} isDisabled={!canWork}>
+      <ScreenHead places={screenPlaces("cases", show)} />
       <main className="cases-screen">
         <header className="cases-screen-head">
           <h1>{casesWords.heading}</h1>

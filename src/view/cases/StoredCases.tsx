@@ -49,7 +49,11 @@ export function StoredCases({ entries, zone, canRemove, onOpen, onExport, onRemo
                 <Button onPress={() => onOpen(entry.id)} name={`${casesWords.open} ${labelOf(entry)}`}>
                   {casesWords.open}
                 </Button>
-                <Button kind="quiet" onPress={() => onExport(entry.id)} name={`${casesWords.exportFile} ${labelOf(entry)}`}>
+                <Button
+                  kind="quiet"
+                  onPress={() => onExport(entry.id)}
+                  name={`${casesWords.exportFile} ${labelOf(entry)}`}
+                >
                   {casesWords.exportFile}
                 </Button>
                 <Button

@@ -1,6 +1,6 @@
 import type { ReactNode } from "react";
-import { medicinesWords } from "../../core/messages/index.ts";
 import { type MedicineRecord, type Product, unverifiedFigures } from "../../core/medicine/index.ts";
+import { medicinesWords } from "../../core/messages/index.ts";
 import { Notice } from "../ui/Notice.tsx";
 import { RecordStatements } from "./RecordStatements.tsx";
 import { RecordTable } from "./RecordTable.tsx";
@@ -78,7 +78,9 @@ export function RecordPage({ record, isOwn, wardWindows }: RecordPageProps) {
         <ol className="record-page-sources">
           {Object.entries(record.sources).map(([id, source]) => (
             <li key={id}>
-              {[source.authors, source.title, source.year, source.place].filter((part) => part !== undefined).join(". ")}
+              {[source.authors, source.title, source.year, source.place]
+                .filter((part) => part !== undefined)
+                .join(". ")}
             </li>
           ))}
         </ol>

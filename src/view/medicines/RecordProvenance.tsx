@@ -1,5 +1,5 @@
-import { medicinesWords } from "../../core/messages/index.ts";
 import type { Basis, MedicineRecord } from "../../core/medicine/index.ts";
+import { medicinesWords } from "../../core/messages/index.ts";
 import { GravityMark } from "../ui/GravityMark.tsx";
 import { sourceNumber, sourceShort } from "./recordRows.ts";
 

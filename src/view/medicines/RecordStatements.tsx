@@ -4,7 +4,12 @@ import { RecordProvenance } from "./RecordProvenance.tsx";
 export interface RecordStatementsProps {
   readonly heading: string;
   readonly record: MedicineRecord;
-  readonly statements: readonly { readonly text: string; readonly source: string; readonly basis: Basis; readonly note?: string | undefined }[];
+  readonly statements: readonly {
+    readonly text: string;
+    readonly source: string;
+    readonly basis: Basis;
+    readonly note?: string | undefined;
+  }[];
 }
 
 /** Sentences of the record (cautions, dose limits, sampling), each with its source; left out when there is none. */

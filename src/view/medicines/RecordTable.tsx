@@ -1,5 +1,5 @@
-import { medicinesWords } from "../../core/messages/index.ts";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
+import { medicinesWords } from "../../core/messages/index.ts";
 import { DataTable } from "../ui/DataTable.tsx";
 import { RecordProvenance } from "./RecordProvenance.tsx";
 import type { RecordRow } from "./recordRows.ts";

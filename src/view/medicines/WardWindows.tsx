@@ -1,7 +1,7 @@
 import { type FormEvent, useState } from "react";
 import type { TargetWindow } from "../../core/case/index.ts";
-import { issueMessage, medicinesWords } from "../../core/messages/index.ts";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
+import { issueMessage, medicinesWords } from "../../core/messages/index.ts";
 import type { Issue } from "../../core/result/index.ts";
 import type { WorkbenchState } from "../../shell/store/workbenchState.ts";
 import { Button } from "../ui/Button.tsx";
@@ -56,7 +56,11 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
             isHeadHidden: true,
             align: "end",
             cell: (row) => (
-              <Button kind="quiet" onPress={() => void remove(row.id)} name={`${medicinesWords.removeWindow} ${windowValue(row.window)}`}>
+              <Button
+                kind="quiet"
+                onPress={() => void remove(row.id)}
+                name={`${medicinesWords.removeWindow} ${windowValue(row.window)}`}
+              >
                 {medicinesWords.removeWindow}
               </Button>
             ),

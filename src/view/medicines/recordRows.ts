@@ -1,5 +1,5 @@
-import { medicinesWords, windowQuantityWord } from "../../core/messages/index.ts";
 import type { Basis, Figure, MedicineRecord, Product, RecordWindow } from "../../core/medicine/index.ts";
+import { medicinesWords, windowQuantityWord } from "../../core/messages/index.ts";
 import { numberPrint, quantityPrint, type UnitCode } from "../../core/units/index.ts";
 
 /** A line of a record's tables: what it is, its value in words, and how it is known. */
@@ -64,7 +64,10 @@ function strengthRows(product: Product): readonly RecordRow[] {
     const key = JSON.stringify([strength.unit, strength.source, strength.basis, strength.note]);
     const before = rows.get(key);
     const value = shown(strength.value, strength.unit);
-    rows.set(key, before ? { ...before, value: `${before.value}, ${value}` } : figureRow(key, medicinesWords.strength, strength));
+    rows.set(
+      key,
+      before ? { ...before, value: `${before.value}, ${value}` } : figureRow(key, medicinesWords.strength, strength),
+    );
   }
   return [...rows.values()];
 }

@@ -14,7 +14,15 @@ export interface ButtonProps {
   readonly hasInitialFocus?: boolean;
 }
 
-export function Button({ children, onPress, kind = "plain", type = "button", isDisabled = false, name, hasInitialFocus }: ButtonProps) {
+export function Button({
+  children,
+  onPress,
+  kind = "plain",
+  type = "button",
+  isDisabled = false,
+  name,
+  hasInitialFocus,
+}: ButtonProps) {
   return (
     <AriaButton
       className={`button button-${kind}`}

@@ -26,7 +26,15 @@ export interface DataTableProps<Row> {
 }
 
 /** A plain table; on a narrow screen each row folds into a list of head and value (the roles keep it a table). */
-export function DataTable<Row>({ caption, isCaptionHidden = false, columns, rows, rowKey, isRowFaint, empty }: DataTableProps<Row>) {
+export function DataTable<Row>({
+  caption,
+  isCaptionHidden = false,
+  columns,
+  rows,
+  rowKey,
+  isRowFaint,
+  empty,
+}: DataTableProps<Row>) {
   return (
     // biome-ignore-start lint/a11y/noRedundantRoles: display:block on a narrow screen takes the table's own roles away
     // biome-ignore-start lint/a11y/useSemanticElements: the same
@@ -35,7 +43,12 @@ export function DataTable<Row>({ caption, isCaptionHidden = false, columns, rows
       <thead role="rowgroup">
         <tr role="row">
           {columns.map((column) => (
-            <th key={column.id} role="columnheader" scope="col" className={`data-table-head data-table-${column.align ?? "start"}`}>
+            <th
+              key={column.id}
+              role="columnheader"
+              scope="col"
+              className={`data-table-head data-table-${column.align ?? "start"}`}
+            >
               {column.isHeadHidden ? <span className="visually-hidden">{column.head}</span> : column.head}
             </th>
           ))}

@@ -16,9 +16,21 @@ export interface DialogProps {
   readonly closeWord?: string;
 }
 
-export function Dialog({ title, isOpen, onClose, children, place = "centre", isAlert = false, closeWord = "Close" }: DialogProps) {
+export function Dialog({
+  title,
+  isOpen,
+  onClose,
+  children,
+  place = "centre",
+  isAlert = false,
+  closeWord = "Close",
+}: DialogProps) {
   return (
-    <ModalOverlay className={`dialog-overlay dialog-overlay-${place}`} isOpen={isOpen} onOpenChange={(open) => !open && onClose()}>
+    <ModalOverlay
+      className={`dialog-overlay dialog-overlay-${place}`}
+      isOpen={isOpen}
+      onOpenChange={(open) => !open && onClose()}
+    >
       <Modal className={`dialog dialog-${place}`}>
         <AriaDialog className="dialog-body" role={isAlert ? "alertdialog" : "dialog"}>
           <header className="dialog-head">

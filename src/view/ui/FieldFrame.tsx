@@ -29,7 +29,15 @@ export interface FieldFrameProps {
 }
 
 /** Label above, control, then what is said about it. Faults and questions appear in a polite live region. */
-export function FieldFrame({ label, isLabelHidden = false, description, reading, fault, question, children }: FieldFrameProps) {
+export function FieldFrame({
+  label,
+  isLabelHidden = false,
+  description,
+  reading,
+  fault,
+  question,
+  children,
+}: FieldFrameProps) {
   const id = useId();
   const described = [
     fault || question ? `${id}-said` : null,

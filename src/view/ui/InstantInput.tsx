@@ -37,7 +37,7 @@ export function InstantInput(props: InstantInputProps) {
   const isSaid = isTold || (isLeft && !isEmpty);
   const question: FieldQuestion | undefined =
     isTwice && isSaid
-      ? { text: issueMessage(problem), answers: twiceAnswers(problem.data["candidates"], zone, take) }
+      ? { text: issueMessage(problem), answers: twiceAnswers(problem.data.candidates, zone, take) }
       : undefined;
   function take(typed: string) {
     onChange(typed);

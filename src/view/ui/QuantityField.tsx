@@ -37,14 +37,14 @@ export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) 
   const [fault, setFault] = useState<string>();
   const [asked, setAsked] = useState<QuantityAsk<U>>();
 
-  const valueOf = (one: QuantityDraft<U>) => {
+  const readOf = (one: QuantityDraft<U>) => {
     const read = quantityDraftRead(one, units);
     return read.ok ? read.value : null;
   };
   // Undo, another tab or an answer changed it from outside: show that, but leave what reads the same as it was typed.
   if (!isSame(seen, value)) {
     setSeen(value);
-    if (!isSame(valueOf(draft), value)) {
+    if (!isSame(readOf(draft), value)) {
       setDraft(quantityDraft(value, unit));
       setFault(undefined);
       setAsked(undefined);
@@ -54,7 +54,7 @@ export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) 
   const take = (next: Quantity<U> | null, isConfirmed: boolean) => {
     setAsked(undefined);
     setFault(undefined);
-    if (next && !isSame(valueOf(draft), next)) setDraft(quantityDraft(next, unit));
+    if (next && !isSame(readOf(draft), next)) setDraft(quantityDraft(next, unit));
     else if (next && /\p{L}/u.test(draft.text)) setDraft(quantityDraft(next, unit));
     onCommit(next, isConfirmed);
   };
@@ -63,7 +63,7 @@ export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) 
       if (value !== null) take(null, false);
       return;
     }
-    const next = valueOf(left);
+    const next = readOf(left);
     if (next === null || isSame(next, value)) return;
     const refusal = refuse?.(next);
     if (refusal) {

@@ -2,7 +2,12 @@ import type { ReactNode } from "react";
 import "./ScreenHead.css";
 
 export interface ScreenHeadProps {
-  readonly places: readonly { readonly id: string; readonly word: string; readonly isCurrent: boolean; readonly onGo: () => void }[];
+  readonly places: readonly {
+    readonly id: string;
+    readonly word: string;
+    readonly isCurrent: boolean;
+    readonly onGo: () => void;
+  }[];
   readonly children?: ReactNode;
 }
 

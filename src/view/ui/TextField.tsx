@@ -42,7 +42,6 @@ export function TextField(props: TextFieldProps) {
           value: shown,
           readOnly: props.isReadOnly ?? false,
           autoComplete: "off",
-          // biome-ignore lint/a11y/noAutofocus: only asked for by dialogs and panels that were opened to type here
           autoFocus: props.hasInitialFocus ?? false,
           ...(props.maxLength === undefined ? {} : { maxLength: props.maxLength }),
           onChange: (event: { currentTarget: { value: string } }) =>

@@ -12,7 +12,10 @@ export function quantityDraft<U extends UnitCode>(value: Quantity<U> | null, uni
 }
 
 /** A unit typed after the number ("180 lb") counts before the one chosen beside the field. */
-export function quantityDraftRead<U extends UnitCode>(draft: QuantityDraft<U>, units: readonly U[]): Result<Quantity<U>> {
+export function quantityDraftRead<U extends UnitCode>(
+  draft: QuantityDraft<U>,
+  units: readonly U[],
+): Result<Quantity<U>> {
   return quantityRead(draft.text, { units, defaultUnit: draft.unit });
 }
 

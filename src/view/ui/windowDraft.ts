@@ -48,6 +48,7 @@ export function windowDraftRead(draft: WindowDraft, molarMassGPerMol: number): R
   }
   if (faults.length > 0 || about === null || !low.ok || !high.ok) return fail(...faults);
   const stored = unit === "mg.h/L" ? "mg.h/L" : "mg/L";
-  const end = (value: number) => ({ value: quantityConvert({ value, unit }, stored, molarMassGPerMol), unit: stored }) as const;
+  const end = (value: number) =>
+    ({ value: quantityConvert({ value, unit }, stored, molarMassGPerMol), unit: stored }) as const;
   return succeed({ quantity: about, low: end(low.value), high: end(high.value), basis });
 }
