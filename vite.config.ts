@@ -39,7 +39,7 @@ export default defineConfig({
           name: "unit",
           root: at("."),
           environment: "node",
-          include: ["tests/{core,shell,architecture}/**/*.test.ts"],
+          include: ["tests/{core,shell,architecture,commands}/**/*.test.ts"],
         },
       },
       {
