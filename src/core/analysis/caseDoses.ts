@@ -1,6 +1,6 @@
 import type { Case } from "../case/index.ts";
 import { doseMg, productOf } from "../medicine/index.ts";
-import { type DoseLine, doseLineExpand } from "../regimen/index.ts";
+import { type DoseLine, doseLineExpand, isEndlessLine } from "../regimen/index.ts";
 import type { Issue } from "../result/index.ts";
 import type { DoseMark } from "./analysisTypes.ts";
 
@@ -30,7 +30,7 @@ export function laneDoses(
   const hours = (ms: number) => (ms - clock.originMs) / HOUR_MS;
   for (const line of lines) {
     const product = productOf(value.medicine, line.product);
-    const untilMs = side === "given" && line.repeat && !isFinite(line) ? clock.nowMs : clock.untilMs;
+    const untilMs = side === "given" && isEndlessLine(line) ? clock.nowMs : clock.untilMs;
     const expanded = doseLineExpand(line, { zone: value.timeZone, untilMs });
     if (!expanded.ok) {
       issues.push(...expanded.issues.map((issue) => ({ lineId: line.id, issue })));
@@ -58,11 +58,6 @@ export function laneDoses(
   }
   marks.sort((a, b) => a.atH - b.atH);
   return { marks, issues };
-}
-
-function isFinite(line: DoseLine): boolean {
-  if (!line.repeat) return true;
-  return "every" in line.repeat ? line.repeat.count !== undefined : line.repeat.days !== undefined;
 }
 
 /** The doses that count, one course a product, as the kinetics core takes them. */

@@ -50,7 +50,7 @@ function outsideWindow(data: Data, side: "above" | "below"): ConcernWords {
 }
 
 /** One function a concern code. */
-export const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = {
+const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = {
   "model-incomplete": (data) => ({
     title: "No prediction yet",
     text: (data.issues as readonly Issue[]).map(issueMessage).join(" "),
@@ -150,6 +150,9 @@ export const concernMessages: Readonly<Record<string, (data: Data) => ConcernWor
   }),
 };
 
+export const CONCERN_CODES: readonly string[] = Object.keys(concernMessages);
+
+/** The words of a concern. An unknown code is a programmer's mistake and throws. */
 export function concernMessage(concern: { readonly code: string; readonly data: Data }): ConcernWords {
   const words = concernMessages[concern.code];
   if (!words) throw new RangeError(`no message for the concern "${concern.code}"`);

@@ -1,5 +1,5 @@
 export { benchWords } from "./benchWords.ts";
-export { type ConcernWords, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
+export { CONCERN_CODES, type ConcernWords, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
 export { editLabel } from "./editWords.ts";
 export { MESSAGE_CODES, issueMessage } from "./issueMessage.ts";
 export type { MessageFunction } from "./messageFunction.ts";

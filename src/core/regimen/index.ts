@@ -1,3 +1,4 @@
+export { type AmountSteps, amountSteps } from "./amountSteps.ts";
 export {
   clockTimeSchema,
   DOSE_UNITS,
@@ -8,3 +9,11 @@ export {
   doseAmountSchema,
   doseLineSchema,
 } from "./doseLine.ts";
+export { doseLineCount, doseLineEndMs, doseLineScheduledMs } from "./doseLineEndMs.ts";
+export { type DoseEvent, type DoseLineSpan, doseLineExpand, isEndlessLine, MOST_DOSES } from "./doseLineExpand.ts";
+export { doseLinePeriodHours } from "./doseLinePeriodHours.ts";
+export { type DoseLineTextContext, doseLineText } from "./doseLineText.ts";
+export type { DoseProduct } from "./doseProduct.ts";
+export type { DoseTextContext } from "./doseText/doseSegment.ts";
+export { doseTextRead } from "./doseTextRead.ts";
+export { type Divisible, type TabletCount, tabletsFor } from "./tabletsFor.ts";

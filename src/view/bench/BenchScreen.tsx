@@ -162,6 +162,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
                 lane="given"
                 name={benchWords.given}
                 value={value}
+                lines={value.given}
                 marks={lanes.given}
                 scale={clock}
                 width={width}
@@ -191,6 +192,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
                   lane={option.id}
                   name={`Option ${option.id}`}
                   value={value}
+                  lines={option.lines}
                   marks={lanes.options[i] ?? []}
                   scale={clock}
                   width={width}

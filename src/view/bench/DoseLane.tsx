@@ -1,17 +1,21 @@
 import { type ReactNode, useMemo, useState } from "react";
 import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
+import type { DoseLine } from "../../core/regimen/index.ts";
 import { type CurveStyle } from "../chart/ProfileChart.tsx";
 import type { ClockScale } from "../chart/clockScale.ts";
 import { DoseToken } from "./DoseToken.tsx";
 import "./DoseLane.css";
+import { lineReach } from "./gestures/lineReach.ts";
 import { laneTokens } from "./laneTokens.ts";
+import { LineEnd } from "./LineEnd.tsx";
 import { TokenBar } from "./TokenBar.tsx";
 
 interface DoseLaneProps {
   readonly lane: string;
   readonly name: string;
   readonly value: Case;
+  readonly lines: readonly DoseLine[];
   readonly marks: readonly DoseMark[];
   readonly scale: ClockScale;
   readonly width: number;
@@ -33,6 +37,11 @@ export function DoseLane(props: DoseLaneProps) {
   const { marks, scale, width, nowX } = props;
   const [selected, setSelected] = useState<string | null>(null);
   const tokens = useMemo(() => laneTokens(marks, scale, props.largest), [marks, scale, props.largest]);
+  const ends = props.lines.flatMap((line) => {
+    const reach = lineReach(line);
+    const last = marks.filter((mark) => mark.lineId === line.id).at(-1);
+    return reach && last && last.atH >= scale.fromH && last.atH <= scale.toH ? [{ line, reach, lastH: last.atH }] : [];
+  });
   const chosen = tokens.find((token) => token.key === selected) ?? null;
   return (
     <section className="lane" aria-label={props.name}>
@@ -58,6 +67,19 @@ export function DoseLane(props: DoseLaneProps) {
               isReadOnly={props.isReadOnly}
               onSelect={() => setSelected(token.key === selected ? null : token.key)}
               onOpenLine={() => props.onOpenLine(token.mark.lineId)}
+            />
+          ))}
+          {!props.isReadOnly && ends.map((end) => (
+            <LineEnd
+              key={end.line.id}
+              lane={props.lane}
+              line={end.line}
+              reach={end.reach}
+              lastH={end.lastH}
+              scale={scale}
+              baseline={BASELINE}
+              style={props.style}
+              onPress={() => props.onOpenLine(end.line.id)}
             />
           ))}
         </svg>

@@ -42,8 +42,8 @@ export function MedicinePanel() {
         <ChoiceField
           label="Medicine"
           value={value.medicine.id}
-          choices={medicines.map((record) => ({ id: record.id, name: record.name }))}
-          onChange={(id) => {
+          choices={medicines.map((record) => ({ value: record.id, label: record.name }))}
+          onChoose={(id) => {
             const record = medicines.find((candidate) => candidate.id === id);
             if (record && record.id !== value.medicine.id) edit("medicineSet", { record });
           }}
