@@ -1,9 +1,8 @@
 import { doseMg, productOf, windowChecks } from "../medicine/index.ts";
-import type { DoseLine } from "../regimen/index.ts";
+import { type DoseLine, doseLineCount, MOST_DOSES } from "../regimen/index.ts";
 import { type Issue, issue } from "../result/index.ts";
 import type { Case, Level, Option } from "./caseSchema.ts";
 import { duplicateIds } from "./duplicateIds.ts";
-import { lineDoseCount } from "./edits/lineSchedule.ts";
 import { patientChecks } from "./patientChecks.ts";
 
 type Path = readonly (string | number)[];
@@ -61,10 +60,13 @@ function lineChecks(line: DoseLine, { medicine, timeZone }: Case): Issue[] {
     return mg.ok ? [] : mg.issues.map((each) => ({ ...each, path: [...path, ...each.path] }));
   };
   const except = line.except ?? [];
+  const doses = doseLineCount(line, timeZone);
+  const tooMany = Number.isFinite(doses) && doses > MOST_DOSES;
   return [
     ...amountIssues(line.amount, ["amount"]),
+    ...(tooMany ? [issue("line-too-many-doses", { found: doses, most: MOST_DOSES }, ["repeat"])] : []),
     ...except.flatMap((each, i) => (each.amount ? amountIssues(each.amount, ["except", i, "amount"]) : [])),
-    ...exceptionChecks(line, timeZone),
+    ...exceptionChecks(line, doses),
   ];
 }
 
@@ -78,9 +80,8 @@ function repeatChecks({ repeat }: DoseLine): Issue[] {
   return twice.length === 0 ? [] : [issue("line-clock-twice", { found: twice[0] }, ["repeat", "clock"])];
 }
 
-function exceptionChecks(line: DoseLine, timeZone: string): Issue[] {
+function exceptionChecks(line: DoseLine, doses: number): Issue[] {
   const issues: Issue[] = [];
-  const doses = lineDoseCount(line, timeZone);
   const seen = new Set<number>();
   line.except?.forEach(({ index, status, at, amount }, i) => {
     const path = ["except", i];

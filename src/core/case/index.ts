@@ -22,6 +22,6 @@ export {
   type TargetWindow,
   windowSchema,
 } from "./caseSchema.ts";
-export { caseEdit, EDIT_NAMES, type EditArguments, type EditName } from "./edits/editRegistry.ts";
+export { caseEdit, caseEditTry, EDIT_NAMES, type EditArguments, type EditName } from "./edits/editRegistry.ts";
 export type { Lane } from "./edits/lane.ts";
 export { optionNextId } from "./edits/optionEdits.ts";

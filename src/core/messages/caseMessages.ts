@@ -49,6 +49,8 @@ export const caseMessages: Readonly<Record<string, MessageFunction>> = {
   "line-interval": ({ found, unit }) =>
     `A dose every ${String(found)} ${String(unit)} is impossible: the interval must be above 0.`,
   "line-clock-twice": ({ found }) => `The clock time ${String(found)} stands twice in one dose line.`,
+  "line-too-many-doses": ({ found, most }) =>
+    `A dose line has ${String(found)} doses: at most ${String(most)} are kept.`,
   "exception-beyond-line": ({ index, doses }) =>
     `An exception is for ${dose(index)} of a line that has ${String(doses)}.`,
   "exception-twice": ({ index }) => `There are two exceptions for ${dose(index)} of a line.`,

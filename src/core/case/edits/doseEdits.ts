@@ -1,10 +1,15 @@
-import type { DoseAmount, DoseLine, DoseRepeat } from "../../regimen/index.ts";
+import {
+  type DoseAmount,
+  type DoseLine,
+  type DoseRepeat,
+  doseLineCount,
+  doseLineScheduledMs,
+} from "../../regimen/index.ts";
 import { instantIso } from "../../time/index.ts";
 import type { Case } from "../caseSchema.ts";
-import { exceptionOf, lineWithException } from "./doseException.ts";
+import { exceptionOf, lineWithException, lineWithExceptions } from "./doseException.ts";
 import { doseMove } from "./doseMove.ts";
 import { type Lane, laneLine, laneWithLine } from "./lane.ts";
-import { lineScheduledMs } from "./lineSchedule.ts";
 
 interface DoseAddress {
   lane: Lane;
@@ -15,7 +20,7 @@ interface DoseAddress {
 /** "taken": as the line says; another amount, if one was noted, stays. */
 function doseMark(value: Case, { lane, lineId, index, status }: DoseAddress & { status: "missed" | "taken" }): Case {
   const line = laneLine(value, lane, lineId);
-  const scheduledMs = lineScheduledMs(line, index, value.timeZone);
+  const scheduledMs = doseLineScheduledMs(line, index, value.timeZone);
   if (status === "missed") return laneWithLine(value, lane, lineWithException(line, index, { status }));
   const amount = exceptionOf(line, index)?.amount;
   const at = instantIso(scheduledMs, value.timeZone);
@@ -29,7 +34,7 @@ function doseScale(
 ): Case {
   const line = laneLine(value, lane, lineId);
   if (lane !== "given" || index === undefined) return laneWithLine(value, lane, { ...line, amount });
-  const scheduledMs = lineScheduledMs(line, index, value.timeZone);
+  const scheduledMs = doseLineScheduledMs(line, index, value.timeZone);
   const present = exceptionOf(line, index);
   if (present?.status === "missed")
     throw new RangeError(`index: dose ${index} of "${lineId}" was missed and has no amount`);
@@ -37,13 +42,19 @@ function doseScale(
   return laneWithLine(value, lane, lineWithException(line, index, { ...timing, amount }));
 }
 
-/** Sets how far a repeat reaches: `count` doses, or `days` for clock times; neither: until further notice. */
+/**
+ * Sets how far a repeat reaches: `count` doses, or `days` for clock times; neither: until further notice.
+ * Exceptions of doses past the new end go with them.
+ */
 function lineStretch(
   value: Case,
   { lane, lineId, count, days }: { lane: Lane; lineId: string; count?: number; days?: number },
 ): Case {
   const line = laneLine(value, lane, lineId);
-  return laneWithLine(value, lane, { ...line, repeat: stretched(line, count, days) });
+  const changed: DoseLine = { ...line, repeat: stretched(line, count, days) };
+  const doses = doseLineCount(changed, value.timeZone);
+  const except = (line.except ?? []).filter((each) => each.index < doses);
+  return laneWithLine(value, lane, lineWithExceptions(changed, except));
 }
 
 function stretched(line: DoseLine, count: number | undefined, days: number | undefined): DoseRepeat {

@@ -4,14 +4,18 @@ export function exceptionOf(line: DoseLine, index: number): DoseException | unde
   return line.except?.find((each) => each.index === index);
 }
 
-/** The line with its exception for one dose replaced (or taken away: null), in order of index; no empty list is kept. */
+/** The line with its exception for one dose replaced, or taken away (null). */
 export function lineWithException(
   line: DoseLine,
   index: number,
   exception: Omit<DoseException, "index"> | null,
 ): DoseLine {
   const others = (line.except ?? []).filter((each) => each.index !== index);
-  const except = exception ? [...others, { index, ...exception }].sort((a, b) => a.index - b.index) : others;
+  return lineWithExceptions(line, exception ? [...others, { index, ...exception }] : others);
+}
+
+/** The line with these exceptions, in order of index; no empty list is kept. */
+export function lineWithExceptions(line: DoseLine, exceptions: readonly DoseException[]): DoseLine {
   const { except: _, ...rest } = line;
-  return except.length > 0 ? { ...rest, except } : rest;
+  return exceptions.length === 0 ? rest : { ...rest, except: [...exceptions].sort((a, b) => a.index - b.index) };
 }

@@ -1,30 +1,37 @@
-import type { DoseLine } from "../../regimen/index.ts";
-import { instantIso, instantMs } from "../../time/index.ts";
+import { type DoseLine, doseLineScheduledMs } from "../../regimen/index.ts";
+import { clockOnDay, instantMs, wallClock } from "../../time/index.ts";
 import type { Case } from "../caseSchema.ts";
 import { exceptionOf, lineWithException } from "./doseException.ts";
 import { type Lane, laneLine, laneWithLine } from "./lane.ts";
-import { lineScheduledMs } from "./lineSchedule.ts";
+import { lineShifted } from "./lineShift.ts";
 
 /**
  * Moves a dose to the instant `at`. Given lane: that dose alone, "late" after its scheduled time and "moved" before it.
- * Option: the whole line moves with it.
+ * Option: the whole line moves with it (lineShifted).
  */
 export function doseMove(
   value: Case,
   { lane, lineId, index, at }: { lane: Lane; lineId: string; index: number; at: string },
 ): Case {
   const line = laneLine(value, lane, lineId);
-  const shiftMs = instantMs(at) - lineScheduledMs(line, index, value.timeZone);
-  const moved = lane === "given" ? doseAt(line, index, at, shiftMs) : lineShifted(value, line, shiftMs);
+  const moved =
+    lane === "given"
+      ? doseTakenAt(line, index, at, value.timeZone)
+      : lineShifted(line, index, instantMs(at), value.timeZone);
   return laneWithLine(value, lane, moved);
 }
 
-function doseAt(line: DoseLine, index: number, at: string, shiftMs: number): DoseLine {
+function doseTakenAt(line: DoseLine, index: number, at: string, zone: string): DoseLine {
+  const scheduledMs = doseLineScheduledMs(line, index, zone);
   const amount = exceptionOf(line, index)?.amount;
-  if (shiftMs === 0 && !amount) return lineWithException(line, index, null);
+  const shiftMs = instantMs(at) - scheduledMs;
+  if (shiftMs === 0 && !amount && isPlainTime(line, scheduledMs, zone)) return lineWithException(line, index, null);
   return lineWithException(line, index, { status: shiftMs > 0 ? "late" : "moved", at, ...(amount && { amount }) });
 }
 
-function lineShifted(value: Case, line: DoseLine, shiftMs: number): DoseLine {
-  return { ...line, start: instantIso(instantMs(line.start) + shiftMs, value.timeZone) };
+/** Whether the line alone says when the dose is due: not so where the clocks skip its time or show it twice, and the exception settles it. */
+function isPlainTime({ repeat }: DoseLine, scheduledMs: number, zone: string): boolean {
+  if (!repeat || "every" in repeat) return true;
+  const { date, time } = wallClock(scheduledMs, zone);
+  return repeat.clock.includes(time) && clockOnDay(date, time, zone).kind === "once";
 }
