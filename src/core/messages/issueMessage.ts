@@ -6,6 +6,7 @@ import { entryMessages } from "./entryMessages.ts";
 import { numberMessages } from "./numberMessages.ts";
 import { patientMessages } from "./patientMessages.ts";
 import { storageMessages } from "./storageMessages.ts";
+import { summaryMessages } from "./summaryMessages.ts";
 import { timeMessages } from "./timeMessages.ts";
 
 /** Every sentence a user can read about a fault, one function a code. A folder's sentences stand in one file: one import and one line here. */
@@ -16,6 +17,7 @@ const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...numberMessages,
   ...patientMessages,
   ...storageMessages,
+  ...summaryMessages,
   ...timeMessages,
 };
 

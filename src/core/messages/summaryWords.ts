@@ -1,0 +1,315 @@
+/**
+ * The words of the printed summary. Amounts, concentrations and times arrive already printed (units in words, "per", never a slash).
+ * No sentence ends with the symbol of a unit: a full stop after it can be read as a digit.
+ */
+export const SUMMARY_TITLES = {
+  heading: "Oral regimen summary",
+  expectedSteady: "Expected at steady state",
+  expectedSpan: "Expected over the days shown",
+  hours: "Hours in the window",
+  kinetics: "Kinetic basis",
+  levels: "Levels",
+  nextLevel: "Next level",
+  cautions: "Cautions",
+  assumes: "This prediction assumes",
+  window: "Target window",
+  figures: "Figures, with formula and source",
+  flipFlop: "Two readings of one curve",
+  doses: "Doses counted",
+  sampling: "Sampling advice of the medicine record",
+  limits: "Dose limits of the medicine record",
+  concerns: "Concerns in full",
+  elements: "For the record",
+  sources: "Sources of the medicine record",
+  notes: "Notes of the case",
+  recompute: "Recompute every figure",
+} as const;
+
+export const SUMMARY_COLUMNS = {
+  drawn: "drawn",
+  afterDose: "after dose",
+  measured: "measured",
+  predicted: "predicted",
+  difference: "difference",
+  figure: "figure",
+  value: "value",
+  formula: "formula, and what went in",
+  source: "source and basis",
+  element: "element",
+  content: "this case",
+} as const;
+
+export const SUMMARY_BUTTONS = {
+  screen: "Summary, as it will be printed",
+  print: "Print",
+  refused: "Not printed now",
+  back: "Back to the bench",
+  working: "The figures are being worked out …",
+  noCase: "No case is open.",
+} as const;
+
+export const SUMMARY_STATEMENT =
+  "Supports, and does not replace, the judgement of a licensed professional and local policy. Check against the current product information before use.";
+
+export const NOT_RECORDED = "not recorded";
+export const WATERMARK = "demo — invented patient";
+
+/** Joins with commas and a last "and": "a, b and c". */
+export function listWords(items: readonly string[], last: "and" | "or" = "and"): string {
+  if (items.length < 2) return items[0] ?? "";
+  return `${items.slice(0, -1).join(", ")} ${last} ${items[items.length - 1]}`;
+}
+
+export function capitalised(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
+}
+
+const plural = (count: number, one: string, many = `${one}s`): string => (count === 1 ? one : many);
+const perKgWords = (perKg: string | null): string => (perKg ? `, ${perKg} per kg per day` : "");
+
+export const summaryHeadWords = {
+  sex: { female: "woman", male: "man" },
+  unlabelled: "case without a label",
+  sexUnknown: "sex not recorded",
+  ageUnknown: "age not recorded",
+  weightUnknown: "weight not recorded",
+  heightUnknown: "height not recorded",
+  revision: (count: number) => `case revision ${count}`,
+  readOnly: "read-only copy",
+  marks: (titles: readonly string[]) => titles.join(" · "),
+  details: (heading: string) => `${heading}: details`,
+  preparedBy: "prepared by, date, time",
+  checkedBy: "independently checked by, date, time",
+  footer: (program: string, record: string, fingerprint: string) => `Ebbline ${program} · ${record} · ${fingerprint}`,
+  record: (name: string, version: number) => `record “${name}” version ${version}`,
+  source: (id: string, text: string) => `${id}: ${text}`,
+  fingerprint: (groups: string) => `fingerprint ${groups}`,
+  recompute: (command: string) =>
+    `Export the case and run ${command} with its file: it prints every figure of this sheet and the same fingerprint.`,
+} as const;
+
+export const summaryChartWords = {
+  title: (medicine: string) => `${medicine} concentration over time`,
+  between: (low: string, high: string) => `predicted between ${low} and ${high} from the now line on`,
+  levels: (count: number) => `${count} ${plural(count, "level")} measured`,
+  unit: "mg per L",
+  given: "given",
+  proposed: "proposed",
+} as const;
+
+/** What is printed across the sheet. */
+export const summaryBannerWords = {
+  notForUse: (reason: string) => ({ title: "Not for use", text: reason }),
+  noOption: { title: "No option chosen", text: "There is no order on this sheet." },
+  severalOptions: (names: string) => ({
+    title: "More than one option chosen",
+    text: `${names}. There is no order on this sheet.`,
+  }),
+  emptyOption: (name: string) => ({ title: "Nothing to order", text: `${name} has no dose line.` }),
+  nothingLeft: (text: string) => ({ title: "A line with no dose to come", text }),
+  notMakeable: (text: string) => ({ title: "Cannot be given as written", text }),
+  unchecked: (name: string, unverified: string) => ({
+    title: "Unchecked",
+    text: `The record of ${name} is not independently reviewed; ${unverified}. Not an order until checked and signed below.`,
+  }),
+  unverified: (count: number, total: number) => `${count} of ${total} figures unverified`,
+} as const;
+
+/** The chosen option in plain sentences. */
+export const summaryOrderWords = {
+  option: (id: string, label: string) =>
+    ["", id, `Option ${id}`].includes(label) ? `Option ${id}` : `Option ${id}, ${label}`,
+  product: (medicine: string, strength: string, product: string) => `${capitalised(medicine)} ${strength} ${product}`,
+  productPlain: (medicine: string, product: string) => `${capitalised(medicine)} ${product}`,
+  liquid: (medicine: string, product: string, concentration: string) =>
+    `${capitalised(medicine)} ${product}, ${concentration}`,
+  /** "2 tablets", "half a tablet", "1 and a half tablets": a half in words, never a fraction that can be misread. */
+  pieces: (count: number, form: string) => {
+    const whole = Math.floor(count);
+    if (count === whole) return `${whole} ${plural(whole, form)}`;
+    return whole === 0 ? `half a ${form}` : `${whole} and a half ${form}s`;
+  },
+  ofStrength: (pieces: string, strength: string) => `${pieces} of ${strength}`,
+  together: (parts: readonly string[]) => `${listWords(parts)}, taken together,`,
+  byMouth: (take: string, schedule: string) => `${take} by mouth ${schedule}`,
+  concentration: (amount: string, volume: string) => `${amount} in ${volume}`,
+  liquidTake: (volume: string, amount: string) => `${volume} (${amount})`,
+  once: "once",
+  every: (hours: string, clock: readonly string[]) =>
+    clock.length === 0 ? `every ${hours} hours` : `every ${hours} hours, at ${listWords(clock)}`,
+  everyDay: (clock: readonly string[]) =>
+    clock.length === 1 ? `every day at ${clock[0]}` : `each time at ${listWords(clock)}, every day`,
+  firstDose: (when: string) => `First dose ${when}.`,
+  onlyDose: (when: string) => `One dose, ${when}.`,
+  lastDose: (count: number, when: string) => `${count} doses, the last ${when}.`,
+  untilReview: "No end date: until reviewed.",
+  clockChange: (when: string, clock: readonly string[]) =>
+    `The clocks change: the interval stays as written in elapsed hours, so from ${when} the dose falls at ${listWords(clock)}.`,
+  perDose: (amount: string) => `${amount} per dose.`,
+  total: (perDose: string, perDay: string, perKg: string | null, isAverage: boolean) =>
+    `${perDose} per dose, ${isAverage ? "on average " : ""}${perDay} per day${perKgWords(perKg)}.`,
+  settlesAt: (perDay: string, perKg: string | null, isAverage: boolean) =>
+    `Settles at ${isAverage ? "on average " : ""}${perDay} per day${perKgWords(perKg)}.`,
+  together24: (perDay: string, perKg: string | null, isAverage: boolean) =>
+    `Together ${isAverage ? "on average " : ""}${perDay} per day${perKgWords(perKg)}.`,
+  perKgUnknown: "Dose per kg: weight not recorded.",
+  swallowWhole: "Swallow whole.",
+  measureLiquid: "Measure with an oral syringe marked in mL only.",
+  replaces: (what: string) => `Replaces ${what}.`,
+  continues: (what: string) => `Continues ${what}, unchanged.`,
+  noneRunning: "No regimen was running at the now line.",
+  noneGiven: "No dose is recorded as given before.",
+  running: (amount: string, schedule: string) => `${amount} ${schedule}`,
+  runningOf: (product: string, amount: string, schedule: string) => `${product}, ${amount} ${schedule}`,
+  missed: (when: string) => `The dose of ${when} is left out.`,
+  moved: (when: string, to: string) => `The dose of ${when} is given on ${to} instead.`,
+  changed: (when: string, amount: string) => `The dose of ${when} is ${amount} instead.`,
+  beforeNow: (count: number) =>
+    `${count} ${plural(count, "dose")} before the now line ${plural(count, "is", "are")} not part of this order.`,
+  nothingLeft: (amount: string) => `${amount}: every dose of this line lies before the now line or is left out.`,
+  notMakeable: (amount: string, strengths: readonly string[], isHalf: boolean, form: string) =>
+    strengths.length === 0
+      ? `${amount}: the record lists no strength of this ${form}.`
+      : `${amount} cannot be made from ${isHalf ? `whole or half ${form}s` : `whole ${form}s`} of ${listWords(strengths, "or")}.`,
+} as const;
+
+/** Expected readings, hours in the window, kinetic basis. */
+export const summaryReadingWords = {
+  typical: "typical patient",
+  individual: "this patient",
+  titled: (title: string, rest: string) => `${title}, ${rest}`,
+  span: (from: string, to: string) => `${from} to ${to}`,
+  hours: (figure: string) => `${figure} ${figure === "1" ? "hour" : "hours"}`,
+  highest: (hours: string) => `Highest, ${hours} after a dose`,
+  lowestBefore: "Lowest, just before a dose",
+  lowestAfter: (hours: string) => `Lowest, ${hours} after a dose`,
+  highestAt: (when: string) => `Highest, ${when}`,
+  lowestAt: (when: string) => `Lowest, ${when}`,
+  average: "Average",
+  auc24: "AUC in 24 hours",
+  accumulation: "Accumulation",
+  times: (figure: string) => `${figure} times`,
+  steady90: "90 % of steady state from",
+  swing: "Highest over lowest",
+  noRepeat: "The option does not repeat, so it has no steady state.",
+  noCommonPeriod: "The lines have no common period within two weeks, so no steady state is given.",
+  chanceLeftOut: "One prediction, without its uncertainty: no range and no chance of staying in the window is given.",
+  below: (edge: string) => `Below ${edge}`,
+  within: (low: string, high: string) => `Within ${low} to ${high}`,
+  above: (edge: string) => `Above ${edge}`,
+  clearance: (isApparent: boolean) => (isApparent ? "Clearance, over bioavailability" : "Clearance"),
+  volume: (isApparent: boolean) => (isApparent ? "Volume, over bioavailability" : "Volume"),
+  halfLife: "Half-life",
+  absorption: (product: string) => `Absorption rate, ${product}`,
+  lag: (product: string) => `Lag before absorption, ${product}`,
+  bioavailability: (product: string) => `Bioavailability, ${product}`,
+  noModel: "No prediction: something the model needs is missing. See the concerns.",
+  flipFlop: (product: string, elimination: string, absorption: string, other: string, volume: string) =>
+    `${capitalised(product)}: the model takes a half-life of ${elimination} for elimination and ${absorption} for absorption. Elimination of ${other} with a volume of ${volume} draws the same curve, with the same clearance. Levels after this product alone cannot tell which; an intravenous or immediate-release reference can.`,
+  flipFlopShort: (product: string) =>
+    `Slow absorption from the ${product} and slow elimination draw the same curve; clearance is the same in both (see details).`,
+} as const;
+
+export const summaryLevelWords = {
+  none: "No level is recorded.",
+  compared: "Compared with the prediction, not used to adjust it.",
+  used: "Used to adjust the prediction.",
+  leftOut: (reason: string) => `left out: ${reason}`,
+  belowLimit: (limit: string) => `below the limit of ${limit}`,
+  asTyped: (typed: string, converted: string) => `${typed} (${converted})`,
+  noPrediction: "none",
+  noDose: "no dose before",
+  more: (figure: string) => `+ ${figure}`,
+  less: (figure: string) => `− ${figure}`,
+} as const;
+
+export const summaryNextLevelWords = {
+  draw: (day: string, from: string, to: string) => `${day}, between ${from} and ${to}, before the ${to} dose.`,
+  drawAcross: (from: string, to: string, dose: string) => `Between ${from} and ${to}, before the ${dose} dose.`,
+  because: (steady: string) => `It is the first dose at or after 90 % of steady state (${steady}).`,
+  writeTimes: "Write the time of the last dose and of the sample on the request.",
+  noOption: "No option is chosen, so no time can be given.",
+  noModel: "There is no prediction, so no time can be given.",
+  byQuestion: "Time the next level by the clinical question.",
+  endsBefore: (steady: string, last: string) =>
+    `The last dose of the option (${last}) comes before 90 % of steady state (${steady}). No steady level can be drawn.`,
+} as const;
+
+export const summaryAssumptionWords = {
+  typical:
+    "one-compartment model with first-order absorption, typical patient: levels are compared and not used to adjust",
+  individual: "one-compartment model with first-order absorption, adjusted by the levels that were not left out",
+  record: (name: string, version: number, review: string, unverified: string) =>
+    `record “${name}” version ${version}, ${review}; ${unverified}`,
+  notReviewed: "not independently reviewed",
+  reviewed: (by: string, on: string) => `reviewed by ${by}, ${on}`,
+  noDoses: "no dose given before",
+  doses: (counted: number) => `${counted} ${plural(counted, "dose")} taken as listed`,
+  missed: (list: string) => `missed: ${list}`,
+  late: (when: string, at: string) => `${when} taken ${at}`,
+  lateAll: (list: string) => `late or moved: ${list}`,
+  many: (list: string, more: number) => `${list}, and ${more} more (see details)`,
+  kidney: (value: string, formula: string, weight: string) => `kidney function ${value} (${formula}, ${weight} weight)`,
+  kidneyUnknown: "kidney function not recorded",
+  zone: (zone: string) => `clock times in the zone ${zone}`,
+  now: (when: string) => `doses up to the now line (${when}) as given, from it on as proposed`,
+} as const;
+
+export const summaryDetailWords = {
+  window: (about: string, low: string, high: string, basis: string) => `${about}, ${low} to ${high}; basis: ${basis}`,
+  measuredAt: (value: string, when: string) => `${value}, ${when}`,
+  cockcroftGault: "Cockcroft–Gault",
+  weight: "Weight",
+  creatinine: "Serum creatinine",
+  idealWeight: "Ideal weight",
+  adjustedWeight: "Adjusted weight",
+  bodyMassIndex: "Body mass index",
+  creatinineClearance: "Creatinine clearance, Cockcroft–Gault",
+  eliminationRate: "Elimination rate",
+  sourceAndBasis: (source: string, basis: string) => `${source}; ${basis}`,
+  input: (name: string, value: string) => `${name} = ${value}`,
+  line: (product: string, amount: string, schedule: string, start: string) =>
+    `${product}: ${amount} ${schedule}, from ${start}.`,
+  dose: (when: string, amount: string, status: string) => `${when}: ${amount}${status}`,
+  status: {
+    taken: "",
+    missed: ", missed, not counted",
+    late: ", late",
+    moved: ", moved",
+    "after-now": ", after the now line, not counted",
+    "before-now": ", before the now line, not counted",
+  },
+  earlier: (count: number, first: string) => `and ${count} earlier ${plural(count, "dose")} from ${first} on`,
+  noDoses: "No dose is recorded as given.",
+} as const;
+
+/** Rows of the details: what a note on a pharmacokinetic question should contain. */
+export const summaryElementWords = {
+  purpose: "Purpose and requester",
+  assay: "Medicine, specimen, assay",
+  assayUnknown: (medicine: string, matrix: string) => `${medicine}, ${matrix}; assay ${NOT_RECORDED}`,
+  regimen: "Regimen before",
+  duration: "Duration of therapy",
+  durationFrom: (when: string) => `first listed dose ${when}; earlier doses ${NOT_RECORDED}`,
+  salt: "Salt or base, brand",
+  steady: "Steady state at the levels",
+  kidney: "Kidney function",
+  liver: "Liver function",
+  albumin: "Albumin",
+  otherFactors: "Haematocrit, pregnancy, genotype",
+  smoking: "Smoking",
+  interactions: "Other medicines",
+  meals: "Food, vomiting, other events",
+  adherence: "Adherence",
+  adherenceMissed: (missed: number, listed: number) =>
+    `${missed} of ${listed} listed doses missed; how it was assessed ${NOT_RECORDED}`,
+  response: "Clinical response, signs of toxicity",
+  target: "Target",
+  interpretation: "Interpretation of the levels",
+  currentExposure: "Exposure on the regimen before",
+  monitoring: "Who acts on the level, when to call",
+  communication: "Told to whom, when; read back",
+  patientTold: "Patient told",
+  factor: (detail: string, from: string) => `${detail}, from ${from}`,
+  factorUntil: (detail: string, from: string, to: string) => `${detail}, ${from} to ${to}`,
+} as const;

@@ -1,0 +1,132 @@
+import {
+  SUMMARY_COLUMNS as columns,
+  summaryHeadWords,
+  SUMMARY_TITLES as titles,
+} from "../../core/messages/summaryWords.ts";
+import { GravityMark } from "../ui/GravityMark.tsx";
+import { SummaryBlock } from "./SummaryBlock.tsx";
+import { SummaryPaper } from "./SummaryPaper.tsx";
+import { SummaryRows } from "./SummaryRows.tsx";
+import type { SummaryDetails, SummaryModel } from "./summaryModel.ts";
+
+/** What the first sheet rests on: concerns in full, figures with formula and source, doses, elements, sources. */
+export function SummaryDetailsSheet({ model }: { readonly model: SummaryModel }) {
+  const { details } = model;
+  return (
+    <SummaryPaper model={model} heading={summaryHeadWords.details(model.heading)}>
+      <Concerns concerns={details.concerns} />
+      <Figures figures={details.figures} />
+      {details.flipFlop.length > 0 && <Sentences title={titles.flipFlop} sentences={details.flipFlop} />}
+      <Doses doses={details.doses} />
+      <div className="summary-columns summary-columns-even">
+        <div>
+          <SummaryBlock title={titles.elements}>
+            <SummaryRows rows={details.elements} />
+          </SummaryBlock>
+        </div>
+        <div>
+          <Bullets title={titles.sampling} items={details.sampling} />
+          <Bullets title={titles.limits} items={details.limits} />
+          {details.notes !== "" && <Sentences title={titles.notes} sentences={[details.notes]} />}
+          <SummaryBlock title={titles.recompute}>
+            <p>{details.recompute}</p>
+            <p className="summary-fingerprint">{details.fingerprint}</p>
+          </SummaryBlock>
+        </div>
+      </div>
+      <Bullets title={titles.sources} items={details.sources} isColumned />
+    </SummaryPaper>
+  );
+}
+
+function Concerns({ concerns }: Pick<SummaryDetails, "concerns">) {
+  if (concerns.length === 0) return null;
+  return (
+    <SummaryBlock title={titles.concerns}>
+      <ul className="summary-concerns">
+        {concerns.map((concern) => (
+          <li key={`${concern.title} ${concern.text}`}>
+            <GravityMark gravity={concern.gravity} />
+            <p>
+              {concern.word}: <strong>{concern.title}.</strong> {concern.text}
+            </p>
+          </li>
+        ))}
+      </ul>
+    </SummaryBlock>
+  );
+}
+
+function Figures({ figures }: Pick<SummaryDetails, "figures">) {
+  return (
+    <SummaryBlock title={titles.figures}>
+      <table className="summary-table summary-figures">
+        <thead>
+          <tr>
+            <th scope="col">{columns.figure}</th>
+            <th scope="col">{columns.value}</th>
+            <th scope="col">{columns.formula}</th>
+            <th scope="col">{columns.source}</th>
+          </tr>
+        </thead>
+        <tbody>
+          {figures.map((figure) => (
+            <tr key={figure.name}>
+              <th scope="row">{figure.name}</th>
+              <td>{figure.value}</td>
+              <td>{[figure.formula, figure.inputs].filter((part) => part !== "").join("; ")}</td>
+              <td>{figure.source}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </SummaryBlock>
+  );
+}
+
+function Doses({ doses }: Pick<SummaryDetails, "doses">) {
+  return (
+    <SummaryBlock title={titles.doses}>
+      {doses.lines.map((line) => (
+        <p key={line}>{line}</p>
+      ))}
+      {doses.doses.length > 0 && (
+        <ul className="summary-doses">
+          {doses.doses.map((dose, index) => (
+            <li key={index}>{dose}</li>
+          ))}
+        </ul>
+      )}
+      {doses.remark !== "" && <p className="summary-remark">{doses.remark}</p>}
+    </SummaryBlock>
+  );
+}
+
+function Sentences({ title, sentences }: { readonly title: string; readonly sentences: readonly string[] }) {
+  return (
+    <SummaryBlock title={title}>
+      {sentences.map((sentence) => (
+        <p key={sentence}>{sentence}</p>
+      ))}
+    </SummaryBlock>
+  );
+}
+
+interface BulletsProps {
+  readonly title: string;
+  readonly items: readonly string[];
+  readonly isColumned?: boolean;
+}
+
+function Bullets({ title, items, isColumned = false }: BulletsProps) {
+  if (items.length === 0) return null;
+  return (
+    <SummaryBlock title={title}>
+      <ul className={isColumned ? "summary-two" : undefined}>
+        {items.map((text) => (
+          <li key={text}>{text}</li>
+        ))}
+      </ul>
+    </SummaryBlock>
+  );
+}

@@ -1,0 +1,36 @@
+import { type ReactNode, useId } from "react";
+import { DemoWatermark } from "./DemoWatermark.tsx";
+import type { SummaryModel } from "./summaryModel.ts";
+
+interface SummaryPaperProps {
+  readonly model: SummaryModel;
+  readonly heading: string;
+  readonly children: ReactNode;
+}
+
+/** One sheet. Its head is a table header group in print, so it comes again on every page the sheet runs over to. */
+export function SummaryPaper({ model, heading, children }: SummaryPaperProps) {
+  const id = useId();
+  return (
+    <article className="summary-paper" aria-labelledby={id}>
+      <header className="summary-head">
+        <div className="summary-head-inner">
+          <div>
+            <h1 id={id}>{heading}</h1>
+            <p>
+              {model.label} · {model.person}
+            </p>
+          </div>
+          <div className="summary-when">
+            <p>{model.printed}</p>
+            <p>{model.revision}</p>
+          </div>
+          {model.watermark && <p className="summary-demo">{model.watermark}</p>}
+          {model.marks !== "" && <p className="summary-marks">{model.marks}</p>}
+        </div>
+      </header>
+      <div className="summary-body">{children}</div>
+      {model.watermark && <DemoWatermark />}
+    </article>
+  );
+}

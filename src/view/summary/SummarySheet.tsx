@@ -1,0 +1,166 @@
+import type { ReactNode } from "react";
+import {
+  SUMMARY_COLUMNS as columns,
+  summaryHeadWords,
+  SUMMARY_TITLES as titles,
+} from "../../core/messages/summaryWords.ts";
+import { GravityMark } from "../ui/GravityMark.tsx";
+import { SummaryBlock } from "./SummaryBlock.tsx";
+import { SummaryDetailsSheet } from "./SummaryDetailsSheet.tsx";
+import { SummaryPaper } from "./SummaryPaper.tsx";
+import { SummaryRows } from "./SummaryRows.tsx";
+import type { SummaryModel } from "./summaryModel.ts";
+import "./print.css";
+
+interface SummarySheetProps {
+  readonly model: SummaryModel;
+  /** The painted profile. */
+  readonly chart: ReactNode;
+}
+
+/** The summary as paper: the order and what it rests on, then the details. */
+export function SummarySheet({ model, chart }: SummarySheetProps) {
+  return (
+    <div className="summary-sheets" data-theme="paper" data-size={model.pageSize}>
+      <SummaryPaper model={model} heading={model.heading}>
+        {model.banners.map((banner) => (
+          <div key={`${banner.title} ${banner.text}`} className={`summary-banner summary-banner-${banner.gravity}`}>
+            <GravityMark gravity={banner.gravity} />
+            <p>
+              <strong>{banner.title}.</strong> {banner.text}
+            </p>
+          </div>
+        ))}
+        {model.order && <Order order={model.order} />}
+        <figure className="summary-chart">{chart}</figure>
+        <div className="summary-columns">
+          <div>
+            <Readings model={model} />
+            <Levels levels={model.levels} />
+          </div>
+          <div>
+            <SummaryBlock title={model.nextLevel.title}>
+              <p>{model.nextLevel.sentences.join(" ")}</p>
+            </SummaryBlock>
+            <SummaryBlock title={titles.cautions}>
+              <ul>
+                {model.concerns.map((concern) => (
+                  <li key={`${concern.title} ${concern.text}`}>
+                    <strong>{concern.title}.</strong> {concern.text}
+                  </li>
+                ))}
+                {model.cautions.map((text) => (
+                  <li key={text}>{text}</li>
+                ))}
+              </ul>
+            </SummaryBlock>
+            <SummaryBlock title={titles.assumes}>
+              <ul>
+                {model.assumes.map((text) => (
+                  <li key={text}>{text}</li>
+                ))}
+              </ul>
+            </SummaryBlock>
+          </div>
+        </div>
+        <div className="summary-signatures">
+          <p>
+            <span className="summary-signed">{model.preparedBy}</span>
+            {summaryHeadWords.preparedBy}
+          </p>
+          <p>
+            <span className="summary-signed" />
+            {summaryHeadWords.checkedBy}
+          </p>
+        </div>
+        <div className="summary-foot">
+          <p>{model.statement}</p>
+          <p>{model.footer}</p>
+        </div>
+      </SummaryPaper>
+      <SummaryDetailsSheet model={model} />
+    </div>
+  );
+}
+
+function Order({ order }: { readonly order: NonNullable<SummaryModel["order"]> }) {
+  return (
+    <section className="summary-order" aria-label={order.option}>
+      {order.lines.map((line, index) => (
+        <div key={index} className="summary-order-line">
+          <p className="summary-order-main">
+            {line.products.map((product) => (
+              <span key={product}>{product}</span>
+            ))}
+            <span>{line.instruction}</span>
+          </p>
+          {order.lines.length > 1 && <p>{line.sentences.join(" ")}</p>}
+        </div>
+      ))}
+      <p>{[...(order.lines.length === 1 ? (order.lines[0]?.sentences ?? []) : []), ...order.sentences].join(" ")}</p>
+      <p className="summary-order-option">{order.option}</p>
+    </section>
+  );
+}
+
+function Readings({ model }: { readonly model: SummaryModel }) {
+  const { expected, hours, kinetics } = model;
+  return (
+    <>
+      {expected && (
+        <SummaryBlock title={expected.title}>
+          <SummaryRows rows={expected.rows} />
+          <p className="summary-remark">{expected.remark}</p>
+        </SummaryBlock>
+      )}
+      {hours && (
+        <SummaryBlock title={hours.title} beside={hours.span}>
+          <SummaryRows rows={hours.rows} />
+        </SummaryBlock>
+      )}
+      <SummaryBlock title={kinetics.title}>
+        {kinetics.rows.length > 0 && <SummaryRows rows={kinetics.rows} />}
+        {kinetics.sentences.map((sentence) => (
+          <p key={sentence} className="summary-remark">
+            {sentence}
+          </p>
+        ))}
+      </SummaryBlock>
+    </>
+  );
+}
+
+function Levels({ levels }: { readonly levels: SummaryModel["levels"] }) {
+  return (
+    <SummaryBlock title={levels.title}>
+      {levels.rows.length > 0 && (
+        <table className="summary-table">
+          <thead>
+            <tr>
+              <th scope="col">{columns.drawn}</th>
+              <th scope="col">{columns.afterDose}</th>
+              <th scope="col">{columns.measured}</th>
+              <th scope="col">{columns.predicted}</th>
+              <th scope="col">{columns.difference}</th>
+            </tr>
+          </thead>
+          <tbody>
+            {levels.rows.map((row, index) => (
+              <tr key={index}>
+                <th scope="row">
+                  {row.drawn}
+                  {row.remark !== "" && <span className="summary-left-out">{row.remark}</span>}
+                </th>
+                <td>{row.afterDose}</td>
+                <td>{row.measured}</td>
+                <td>{row.predicted}</td>
+                <td>{row.difference}</td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      )}
+      <p className="summary-remark">{levels.remark}</p>
+    </SummaryBlock>
+  );
+}

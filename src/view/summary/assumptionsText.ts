@@ -1,0 +1,70 @@
+import type { DoseMark } from "../../core/analysis/index.ts";
+import { type MedicineRecord, unverifiedFigures } from "../../core/medicine/index.ts";
+import {
+  listWords,
+  NOT_RECORDED,
+  summaryBannerWords,
+  summaryDetailWords,
+  summaryAssumptionWords as words,
+} from "../../core/messages/summaryWords.ts";
+import { instantMs } from "../../core/time/index.ts";
+import { shownModel } from "./kineticsText.ts";
+import type { SummaryInput } from "./summaryInput.ts";
+import type { SummaryPrint } from "./summaryPrint.ts";
+
+/** Single doses are named on the first sheet up to this many; the details list them all. */
+const NAMED_DOSES = 4;
+
+export function assumptionsText(input: SummaryInput, print: SummaryPrint): readonly string[] {
+  const { medicine } = input.case;
+  const isIndividual = input.analysis.individual !== null && shownModel(input)?.model === input.analysis.individual;
+  return [
+    isIndividual ? words.individual : words.typical,
+    words.record(medicine.name, medicine.recordVersion, reviewWords(medicine), unverifiedWords(medicine)),
+    ...doseAssumptions(input.analysis.given, print),
+    kidneyWords(input, print),
+    words.now(print.at(instantMs(input.case.now), "full")),
+    words.zone(input.case.timeZone),
+  ];
+}
+
+function reviewWords({ review }: MedicineRecord): string {
+  return review.status === "reviewed"
+    ? words.reviewed(review.by ?? NOT_RECORDED, review.on ?? NOT_RECORDED)
+    : words.notReviewed;
+}
+
+/** Figures nobody has read in their source: recalled, rules of thumb, and made up. */
+export function unverifiedWords(record: MedicineRecord): string {
+  const { memory, commonPractice, invented, total } = unverifiedFigures(record);
+  return summaryBannerWords.unverified(memory + commonPractice + invented, total);
+}
+
+function doseAssumptions(given: readonly DoseMark[], print: SummaryPrint): readonly string[] {
+  if (given.length === 0) return [words.noDoses];
+  const when = (hours: number) => print.at(print.ms(hours), "dayClock");
+  const missed = given.filter(({ status }) => status === "missed").map(({ scheduledH }) => when(scheduledH));
+  const late = given
+    .filter((mark) => mark.countedMg > 0 && mark.atH !== mark.scheduledH)
+    .map((mark) => words.late(when(mark.scheduledH), when(mark.atH)));
+  const named = (list: readonly string[]) =>
+    list.length <= NAMED_DOSES
+      ? listWords(list)
+      : words.many(listWords(list.slice(0, NAMED_DOSES)), list.length - NAMED_DOSES);
+  return [
+    words.doses(given.filter(({ countedMg }) => countedMg > 0).length),
+    ...(missed.length > 0 ? [words.missed(named(missed))] : []),
+    ...(late.length > 0 ? [words.lateAll(named(late))] : []),
+  ];
+}
+
+export function kidneyWords({ analysis }: SummaryInput, print: SummaryPrint): string {
+  const { creatinineClearance, clearanceWeight } = analysis.patient;
+  return creatinineClearance && clearanceWeight
+    ? words.kidney(
+        print.quantity(creatinineClearance.value, creatinineClearance.unit),
+        summaryDetailWords.cockcroftGault,
+        clearanceWeight,
+      )
+    : words.kidneyUnknown;
+}

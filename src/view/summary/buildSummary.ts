@@ -1,0 +1,131 @@
+import {
+  capitalised,
+  listWords,
+  SUMMARY_STATEMENT,
+  SUMMARY_TITLES,
+  summaryChartWords,
+  WATERMARK,
+  summaryHeadWords as words,
+} from "../../core/messages/summaryWords.ts";
+import { assumptionsText } from "./assumptionsText.ts";
+import { dosesText } from "./dosesText.ts";
+import { expectedText, hoursText, shownReadings } from "./expectedText.ts";
+import { figuresText } from "./figuresText.ts";
+import { flipFlopText, kineticsText } from "./kineticsText.ts";
+import { levelsText } from "./levelsText.ts";
+import { nextLevelText } from "./nextLevelText.ts";
+import { noteElements } from "./noteElements.ts";
+import { printRefusal } from "./printRefusal.ts";
+import { concernsOfOption, concernText, summaryBanners } from "./summaryBanners.ts";
+import type { SummaryInput } from "./summaryInput.ts";
+import type { SummaryChart, SummaryDetails, SummaryModel } from "./summaryModel.ts";
+import { summaryOrder } from "./summaryOrder.ts";
+import { type SummaryPrint, summaryPrint } from "./summaryPrint.ts";
+
+/** How the figures of a case file are worked out again without a browser. */
+const RECOMPUTE_COMMAND = "npm run -s recompute -- FILE";
+/** Digits of the fingerprint on the first sheet; the details have all 64. */
+const FINGERPRINT_SHORT = 12;
+
+/** The printed summary as strings: pure, so that what is printed can be read and searched without a page. */
+export function buildSummary(input: SummaryInput): SummaryModel {
+  const print = summaryPrint(input);
+  const { case: value, analysis } = input;
+  const refusal = printRefusal(input);
+  const order = summaryOrder(input, print);
+  const banners = summaryBanners(input, refusal, order);
+  const record = words.record(value.medicine.name, value.medicine.recordVersion);
+  const fingerprint = words.fingerprint(fingerprintGroups(analysis.fingerprint.slice(0, FINGERPRINT_SHORT)));
+  const revision = [
+    words.revision(input.revision),
+    ...(input.saving.status === "read-only" ? [words.readOnly] : []),
+  ].join(", ");
+  const watermark = value.demo ? WATERMARK : null;
+  return {
+    pageSize: input.settings.pageSize,
+    heading: SUMMARY_TITLES.heading,
+    label: value.label === "" ? words.unlabelled : value.label,
+    person: personWords(input, print),
+    printed: print.at(input.printedAtMs, "full"),
+    revision,
+    running: [value.label, revision, fingerprint, ...(watermark ? [watermark] : [])]
+      .filter((part) => part !== "")
+      .join(" · "),
+    watermark,
+    marks: words.marks(banners.filter(({ gravity }) => gravity === "stop").map(({ title }) => title)),
+    banners,
+    order: order?.order ?? null,
+    chart: chartWords(input, print),
+    expected: expectedText(input, print),
+    hours: hoursText(input, print),
+    kinetics: kineticsText(input, print),
+    levels: levelsText(input, print),
+    nextLevel: nextLevelText(input, print),
+    concerns: concernsOfOption(input)
+      .filter(({ gravity, code }) => gravity === "check" && code !== "dose-not-makeable")
+      .map(concernText),
+    cautions: value.medicine.cautions.map(({ text }) => text),
+    assumes: assumptionsText(input, print),
+    preparedBy: input.settings.preparedBy.trim(),
+    statement: SUMMARY_STATEMENT,
+    footer: words.footer(input.programVersion, record, fingerprint),
+    details: details(input, print),
+  };
+}
+
+function details(input: SummaryInput, print: SummaryPrint): SummaryDetails {
+  const { medicine, notes } = input.case;
+  return {
+    figures: figuresText(input, print),
+    flipFlop: flipFlopText(input, print),
+    doses: dosesText(input, print),
+    sampling: medicine.sampling.map(({ text }) => text),
+    limits: medicine.doseLimits.map(({ text }) => text),
+    concerns: input.analysis.concerns.map(concernText),
+    elements: noteElements(input, print),
+    sources: Object.entries(medicine.sources).map(([id, { authors, title, year, place }]) =>
+      words.source(id, [authors, title, year, place].filter((part) => part !== undefined && part !== "").join(", ")),
+    ),
+    notes: notes.trim(),
+    fingerprint: fingerprintGroups(input.analysis.fingerprint),
+    recompute: words.recompute(RECOMPUTE_COMMAND),
+  };
+}
+
+/** "woman, 64 years, 58 kg, 162 cm", with what is missing said. */
+function personWords({ case: { patient }, analysis }: SummaryInput, print: SummaryPrint): string {
+  const { weight } = analysis.patient;
+  return [
+    patient.sex ? words.sex[patient.sex] : words.sexUnknown,
+    patient.age ? print.exact(patient.age) : words.ageUnknown,
+    weight ? print.quantity(weight.value, weight.unit, { significant: 4 }) : words.weightUnknown,
+    patient.height ? print.exact(patient.height) : words.heightUnknown,
+  ].join(", ");
+}
+
+function chartWords(input: SummaryInput, print: SummaryPrint): SummaryChart {
+  const { case: value, analysis } = input;
+  const readings = shownReadings(input)?.readings;
+  const said = [
+    summaryChartWords.title(capitalised(value.medicine.name)),
+    ...(readings
+      ? [summaryChartWords.between(print.concentration(readings.span.lowest), print.concentration(readings.span.peak))]
+      : []),
+    ...(value.levels.length > 0 ? [summaryChartWords.levels(value.levels.length)] : []),
+  ];
+  return {
+    title: listWords(said),
+    unit: summaryChartWords.unit,
+    before: summaryChartWords.given,
+    after: summaryChartWords.proposed,
+    days: analysis.clock.midnightsH
+      .filter((atH) => atH < analysis.clock.toH)
+      .map((atH) => ({ atH, text: print.at(print.ms(atH), "day") })),
+    levels: analysis.levels.map((level) => ({ id: level.id, text: print.figure(level.measured) })),
+  };
+}
+
+/** "7f3a 91c2 4e0d": in groups of four, to be read aloud and compared. */
+export function fingerprintGroups(hex: string): string {
+  return (hex.match(/.{1,4}/g) ?? []).join(" ");
+}

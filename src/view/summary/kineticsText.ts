@@ -1,0 +1,55 @@
+import type { Model } from "../../core/analysis/index.ts";
+import { productOf } from "../../core/medicine/index.ts";
+import { SUMMARY_TITLES as titles, summaryReadingWords as words } from "../../core/messages/summaryWords.ts";
+import type { SummaryInput } from "./summaryInput.ts";
+import type { SummaryModel } from "./summaryModel.ts";
+import { chosenOption } from "./summaryOrder.ts";
+import type { SummaryPrint } from "./summaryPrint.ts";
+
+/** The model the sheet is worked out with, and what its readings are called. */
+export function shownModel(input: SummaryInput): { readonly model: Model; readonly patient: string } | null {
+  const { individual, typical } = input.analysis;
+  if (input.case.fit.use === "individual" && individual) return { model: individual, patient: words.individual };
+  return typical ? { model: typical, patient: words.typical } : null;
+}
+
+export function kineticsText(input: SummaryInput, print: SummaryPrint): SummaryModel["kinetics"] {
+  const shown = shownModel(input);
+  if (!shown) return { title: titles.kinetics, rows: [], sentences: [words.noModel] };
+  const { model, patient } = shown;
+  const isApparent = input.case.medicine.kinetics.apparent;
+  return {
+    title: words.titled(titles.kinetics, patient),
+    rows: [
+      { label: words.clearance(isApparent), value: print.quantity(model.clearance.value, model.clearance.unit) },
+      { label: words.volume(isApparent), value: print.quantity(model.volume.value, model.volume.unit) },
+      { label: words.halfLife, value: print.hours(model.halfLife.value) },
+    ],
+    sentences: modifiedProducts(input).map((id) => words.flipFlopShort(productOf(input.case.medicine, id).name)),
+  };
+}
+
+/** The flip-flop reading of every modified-release product in use, in full. */
+export function flipFlopText(input: SummaryInput, print: SummaryPrint): readonly string[] {
+  const model = shownModel(input)?.model;
+  if (!model) return [];
+  return modifiedProducts(input).flatMap((id) => {
+    const found = model.products.find(({ product }) => product === id);
+    if (!found) return [];
+    const { assumed, alternative } = found.readings;
+    return [
+      words.flipFlop(
+        productOf(input.case.medicine, id).name,
+        print.hours(assumed.eliminationHalfLife),
+        print.hours(assumed.absorptionHalfLife),
+        print.hours(alternative.eliminationHalfLife),
+        print.quantity(alternative.volume, "L"),
+      ),
+    ];
+  });
+}
+
+function modifiedProducts(input: SummaryInput): readonly string[] {
+  const used = [...(chosenOption(input.case)?.lines ?? []), ...input.case.given].map(({ product }) => product);
+  return [...new Set(used)].filter((id) => productOf(input.case.medicine, id).release === "modified");
+}

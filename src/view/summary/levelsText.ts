@@ -1,0 +1,47 @@
+import type { LevelResult } from "../../core/analysis/index.ts";
+import { SUMMARY_TITLES as titles, summaryLevelWords as words } from "../../core/messages/summaryWords.ts";
+import { instantMs } from "../../core/time/index.ts";
+import { numberPrint } from "../../core/units/index.ts";
+import { shownModel } from "./kineticsText.ts";
+import type { SummaryInput } from "./summaryInput.ts";
+import type { SummaryLevel, SummaryModel } from "./summaryModel.ts";
+import type { SummaryPrint } from "./summaryPrint.ts";
+
+/** Every level, also one that was left out, with what was predicted for its time. */
+export function levelsText(input: SummaryInput, print: SummaryPrint): SummaryModel["levels"] {
+  const rows = [...input.case.levels]
+    .sort((a, b) => instantMs(a.at) - instantMs(b.at))
+    .map((level) => levelRow(input, level, print));
+  const isUsed = shownModel(input)?.model === input.analysis.individual && input.analysis.individual !== null;
+  return { title: titles.levels, rows, remark: rows.length === 0 ? words.none : isUsed ? words.used : words.compared };
+}
+
+function levelRow(
+  input: SummaryInput,
+  level: SummaryInput["case"]["levels"][number],
+  print: SummaryPrint,
+): SummaryLevel {
+  const result = input.analysis.levels.find(({ id }) => id === level.id);
+  const typed = print.exact(level.quantity);
+  const measured =
+    level.quantity.unit === "mg/L" || !result ? typed : words.asTyped(typed, print.concentration(result.measured));
+  const isBelow = level.kind === "below-limit";
+  return {
+    drawn: print.at(instantMs(level.at), "dayClock"),
+    afterDose: result?.afterDoseH == null ? words.noDose : print.hours(result.afterDoseH),
+    measured: isBelow ? words.belowLimit(measured) : measured,
+    predicted: result?.predicted == null ? words.noPrediction : print.concentration(result.predicted),
+    difference: result && !isBelow ? differenceText(result) : "",
+    remark: level.excluded === undefined ? "" : words.leftOut(level.excluded),
+  };
+}
+
+/** Rounded to the place the prediction is printed to, so that the row adds up for the eye. */
+function differenceText({ predicted, difference }: LevelResult): string {
+  if (predicted === null || difference === null) return "";
+  const magnitude = predicted > 0 ? Math.floor(Math.log10(predicted)) : 0;
+  const decimals = Math.min(6, Math.max(0, 2 - magnitude));
+  const figure = numberPrint(Math.abs(difference), { decimals });
+  if (figure === "0") return figure;
+  return difference > 0 ? words.more(figure) : words.less(figure);
+}

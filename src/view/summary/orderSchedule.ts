@@ -1,0 +1,81 @@
+import { summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import type { DoseLine } from "../../core/regimen/index.ts";
+import { instantMs, MS_PER_HOUR, wallClock } from "../../core/time/index.ts";
+import { numberPrint } from "../../core/units/index.ts";
+
+/** A day divided into more doses than this is told by its interval alone. */
+const MOST_CLOCK_TIMES = 6;
+
+/** The clock times of day at which an elapsed-hours repeat falls; empty when it does not come round to the same times each day. */
+export function everyClockTimes(startMs: number, everyH: number, zone: string): readonly string[] {
+  if (everyH % 24 === 0) return [wallClock(startMs, zone).time];
+  const count = 24 / everyH;
+  if (!Number.isInteger(count) || count > MOST_CLOCK_TIMES) return [];
+  const { hour, minute } = wallClock(startMs, zone);
+  const first = hour * 60 + minute;
+  const minutes = Array.from({ length: count }, (_, i) => (first + i * everyH * 60) % 1_440).sort((a, b) => a - b);
+  return minutes.every(Number.isInteger) ? minutes.map(clockOf) : [];
+}
+
+function clockOf(minuteOfDay: number): string {
+  const two = (value: number) => String(value).padStart(2, "0");
+  return `${two(Math.floor(minuteOfDay / 60))}:${two(minuteOfDay % 60)}`;
+}
+
+/** "every 12 hours, at 08:00 and 20:00"; "every day at 22:00"; "once". */
+export function orderSchedule(line: DoseLine, firstMs: number, zone: string): string {
+  const { repeat } = line;
+  if (!repeat) return words.once;
+  if ("clock" in repeat) return words.everyDay([...repeat.clock].sort());
+  const every = repeat.every.value;
+  return words.every(numberPrint(every), everyClockTimes(firstMs, every, zone));
+}
+
+/** The same without clock times: what a regimen that is replaced is called. */
+export function scheduleBrief(line: DoseLine): string {
+  const { repeat } = line;
+  if (!repeat) return words.once;
+  return "clock" in repeat
+    ? words.everyDay([...repeat.clock].sort())
+    : words.every(numberPrint(repeat.every.value), []);
+}
+
+/**
+ * Where an elapsed-hours repeat leaves the clock times it is ordered by, because the clocks change.
+ * null when it does not within the doses looked at.
+ */
+export function clockShift(
+  line: DoseLine,
+  scheduledMs: readonly number[],
+  zone: string,
+): { readonly fromMs: number; readonly clock: readonly string[] } | null {
+  const [firstMs] = scheduledMs;
+  if (!line.repeat || "clock" in line.repeat || firstMs === undefined) return null;
+  const every = line.repeat.every.value;
+  const ordered = everyClockTimes(firstMs, every, zone);
+  if (ordered.length === 0) return null;
+  const fromMs = scheduledMs.find((ms) => !ordered.includes(wallClock(ms, zone).time));
+  return fromMs === undefined ? null : { fromMs, clock: everyClockTimes(fromMs, every, zone) };
+}
+
+/** Same product, amount and rhythm: the order goes on with what was running. */
+export function isSameRegimen(a: DoseLine, b: DoseLine): boolean {
+  return (
+    a.product === b.product &&
+    a.amount.unit === b.amount.unit &&
+    a.amount.value === b.amount.value &&
+    rhythm(a) === rhythm(b)
+  );
+}
+
+function rhythm({ repeat, start }: DoseLine): string {
+  if (!repeat) return `once ${start}`;
+  return "clock" in repeat ? `clock ${[...repeat.clock].sort().join(" ")}` : `every ${repeat.every.value}`;
+}
+
+/** A given line that still runs at the now line: it repeats, has begun, and its end is less than one interval back. */
+export function isRunning(line: DoseLine, endMs: number | null, nowMs: number): boolean {
+  if (!line.repeat || instantMs(line.start) > nowMs) return false;
+  const intervalH = "clock" in line.repeat ? 24 : line.repeat.every.value;
+  return endMs === null || endMs + intervalH * MS_PER_HOUR > nowMs;
+}

@@ -1,0 +1,105 @@
+import type { Case, Option } from "../../core/case/index.ts";
+import { productOf } from "../../core/medicine/index.ts";
+import { listWords, summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import { type DoseLine, doseLineEndMs } from "../../core/regimen/index.ts";
+import { instantMs } from "../../core/time/index.ts";
+import { type OrderLine, orderLine } from "./orderLine.ts";
+import { isRunning, isSameRegimen, scheduleBrief } from "./orderSchedule.ts";
+import type { SummaryInput } from "./summaryInput.ts";
+import type { SummaryOrder } from "./summaryModel.ts";
+import type { SummaryPrint } from "./summaryPrint.ts";
+
+export interface OrderResult {
+  readonly order: SummaryOrder;
+  readonly notMakeable: readonly string[];
+  /** Lines without any dose to come, as sentences. */
+  readonly empty: readonly string[];
+}
+
+/** The one chosen option; null when none or more than one is. */
+export function chosenOption(value: Case): Option | null {
+  const chosen = value.options.filter((option) => option.chosen);
+  return chosen.length === 1 ? (chosen[0] ?? null) : null;
+}
+
+/** The chosen option in plain sentences; null when there is none that could be ordered. */
+export function summaryOrder(input: SummaryInput, print: SummaryPrint): OrderResult | null {
+  const option = chosenOption(input.case);
+  if (!option || option.lines.length === 0) return null;
+  const doses = input.analysis.options.find(({ id }) => id === option.id)?.doses ?? [];
+  const lines = option.lines.map((line) =>
+    orderLine(
+      input.case,
+      line,
+      doses.filter((mark) => mark.lineId === line.id),
+      print,
+    ),
+  );
+  return {
+    order: {
+      option: words.option(option.id, option.label),
+      lines: lines.map(({ line, mass }) =>
+        lines.length === 1 ? line : { ...line, sentences: [words.perDose(mass), ...line.sentences] },
+      ),
+      sentences: [...replacedSentence(input.case, option.lines, print), ...totalSentences(input, option, lines, print)],
+    },
+    notMakeable: lines.flatMap(({ notMakeable }) => notMakeable),
+    empty: lines.flatMap(({ mass, hasDoseToCome }) => (hasDoseToCome ? [] : [words.nothingLeft(mass)])),
+  };
+}
+
+/** What was running at the now line. */
+export function runningLines(value: Case): readonly DoseLine[] {
+  const nowMs = instantMs(value.now);
+  return value.given.filter((line) => isRunning(line, doseLineEndMs(line, value.timeZone), nowMs));
+}
+
+export function runningWords(
+  value: Case,
+  lines: readonly DoseLine[],
+  ordered: readonly DoseLine[],
+  print: SummaryPrint,
+): string {
+  return listWords(
+    lines.map((line) => {
+      const amount = print.exact(line.amount);
+      return ordered.some(({ product }) => product === line.product)
+        ? words.running(amount, scheduleBrief(line))
+        : words.runningOf(productOf(value.medicine, line.product).name, amount, scheduleBrief(line));
+    }),
+  );
+}
+
+function replacedSentence(value: Case, ordered: readonly DoseLine[], print: SummaryPrint): readonly string[] {
+  if (value.given.length === 0) return [words.noneGiven];
+  const running = runningLines(value);
+  if (running.length === 0) return [words.noneRunning];
+  const isSame =
+    running.length === ordered.length && running.every((line) => ordered.some((other) => isSameRegimen(line, other)));
+  const text = runningWords(value, running, ordered, print);
+  return [isSame ? words.continues(text) : words.replaces(text)];
+}
+
+/** "300 mg per dose, 600 mg per day, 10.3 mg per kg per day." */
+function totalSentences(
+  input: SummaryInput,
+  option: Option,
+  lines: readonly OrderLine[],
+  print: SummaryPrint,
+): readonly string[] {
+  const masses = [...new Set(lines.map(({ mass }) => mass))];
+  const readings = input.analysis.options.find(({ id }) => id === option.id)?.typical ?? null;
+  const perDayMg = readings?.dailyDoseMg ?? null;
+  const perDose = masses.length === 1 && masses[0] ? masses[0] : null;
+  if (perDayMg === null) return perDose ? [words.perDose(perDose)] : [];
+  const weight = input.analysis.patient.weight;
+  const perDay = print.quantity(perDayMg, "mg", { significant: 4 });
+  const perKg = weight ? print.quantity(perDayMg / weight.value, "mg") : null;
+  const isAverage = option.lines.some(({ repeat }) => repeat && "every" in repeat && 24 % repeat.every.value !== 0);
+  const isOneStep = option.lines.every(
+    ({ repeat }) => repeat && ("clock" in repeat ? repeat.days : repeat.count) === undefined,
+  );
+  const unknown = perKg ? [] : [words.perKgUnknown];
+  if (perDose && lines.length === 1) return [words.total(perDose, perDay, perKg, isAverage), ...unknown];
+  return [(isOneStep ? words.together24 : words.settlesAt)(perDay, perKg, isAverage), ...unknown];
+}

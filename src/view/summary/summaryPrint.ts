@@ -1,0 +1,47 @@
+import { summaryReadingWords } from "../../core/messages/summaryWords.ts";
+import { type InstantForm, instantText, MS_PER_HOUR } from "../../core/time/index.ts";
+import { type NumberPrintOptions, numberPrint, quantityPrint, type UnitCode } from "../../core/units/index.ts";
+import type { SummaryInput } from "./summaryInput.ts";
+
+/** Readings are printed to three significant digits: more is not known, and whole-number digits are never rounded away. */
+const SIGNIFICANT = 3;
+
+/** Figures and times of one summary, as they stand on paper. */
+export interface SummaryPrint {
+  readonly figure: (value: number, significant?: number) => string;
+  readonly quantity: (value: number, unit: UnitCode, options?: NumberPrintOptions) => string;
+  /** As written by a person or the record: not rounded. */
+  readonly exact: (quantity: { readonly value: number; readonly unit: UnitCode }) => string;
+  readonly concentration: (mgPerL: number) => string;
+  /** "5 hours" */
+  readonly hours: (hours: number) => string;
+  readonly ms: (atH: number) => number;
+  readonly at: (ms: number, form: InstantForm) => string;
+  /** "Wednesday 4 March 2026 at 20:00" */
+  readonly atClock: (ms: number) => string;
+}
+
+export function summaryPrint(input: Pick<SummaryInput, "case" | "analysis" | "settings">): SummaryPrint {
+  const { microgram } = input.settings;
+  const zone = input.case.timeZone;
+  const quantity = (
+    value: number,
+    unit: UnitCode,
+    options: NumberPrintOptions = { significant: SIGNIFICANT },
+  ): string =>
+    unit === "mg.h/L"
+      ? `${numberPrint(value, options)} mg hours per L`
+      : quantityPrint({ value, unit }, { style: "print", microgram, ...options });
+  const at = (ms: number, form: InstantForm) => instantText(ms, zone, form);
+  return {
+    figure: (value, significant = SIGNIFICANT) => numberPrint(value, { significant }),
+    quantity,
+    exact: ({ value, unit }) => quantity(value, unit, {}),
+    concentration: (mgPerL) => quantity(mgPerL, "mg/L"),
+    hours: (hours) =>
+      summaryReadingWords.hours(numberPrint(hours, { significant: hours < 1 ? 2 : hours < 100 ? 2 : 3 })),
+    ms: (atH) => input.analysis.clock.originMs + atH * MS_PER_HOUR,
+    at,
+    atClock: (ms) => `${at(ms, "dateYear")} at ${at(ms, "clock")}`,
+  };
+}
