@@ -59,7 +59,11 @@ export function createCaseCopies(openRoot: OpenDirectory | null): CaseCopies {
 function copyRead(text: string): CaseRow | null {
   try {
     const row = JSON.parse(text) as Partial<CaseRow> | null;
-    const isWhole = typeof row?.id === "string" && typeof row.text === "string" && Number.isInteger(row.revision) && row.checksum === textChecksum(row.text);
+    const isWhole =
+      typeof row?.id === "string" &&
+      typeof row.text === "string" &&
+      Number.isInteger(row.revision) &&
+      row.checksum === textChecksum(row.text);
     return isWhole ? (row as CaseRow) : null;
   } catch {
     return null;

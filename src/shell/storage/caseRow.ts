@@ -32,7 +32,8 @@ export function caseRowMake(value: Case, savedAt: number): Omit<CaseRow, "revisi
 /** The same parser as an import. A row that fails is left where it is; the first issue says which case. */
 export function caseRowRead(row: CaseRow): Result<Case> {
   const which = { id: row.id, label: typeof row.label === "string" ? row.label : "" };
-  if (typeof row.text !== "string" || textChecksum(row.text) !== row.checksum) return fail(issue("storage-row-damaged", which));
+  if (typeof row.text !== "string" || textChecksum(row.text) !== row.checksum)
+    return fail(issue("storage-row-damaged", which));
   const parsed = caseParse(row.text);
   if (!parsed.ok) return fail(issue("storage-row-unreadable", which), ...parsed.issues);
   if (parsed.value.id !== row.id) return fail(issue("storage-row-damaged", which));

@@ -58,7 +58,9 @@ export function createCaseRows({ connection, marker, copies, channel, locks, clo
 
   async function erase(id: string): Promise<SaveOutcome> {
     marker.noteRemoved(id); // before: the note must never ask for more than there is
-    const outcome = await saveAttempt(clock, () => connection.write(["cases"], (database) => database.table("cases").delete(id)));
+    const outcome = await saveAttempt(clock, () =>
+      connection.write(["cases"], (database) => database.table("cases").delete(id)),
+    );
     if (!outcome.ok) {
       const revision = seen.get(id);
       if (revision !== undefined) marker.noteSaved(id, revision, clock());
@@ -79,7 +81,8 @@ export function createCaseRows({ connection, marker, copies, channel, locks, clo
     try {
       await Promise.race([work(), late]);
     } catch (error) {
-      if (!copyFaultSaid) channel.emit({ kind: "fault", issues: [issue("storage-copy-failed", { detail: errorText(error) })] });
+      if (!copyFaultSaid)
+        channel.emit({ kind: "fault", issues: [issue("storage-copy-failed", { detail: errorText(error) })] });
       copyFaultSaid = true;
     } finally {
       clearTimeout(timer);

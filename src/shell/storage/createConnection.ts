@@ -75,7 +75,11 @@ export function createConnection(setting: DatabaseSetting, channel: ChangeChanne
     const start = setting.clock();
     do await new Promise((resolve) => setTimeout(resolve, 10));
     while (inFlight > 0 && setting.clock() - start < DRAIN_WAIT);
-    end(isDeletion ? new StorageRefusal("closed", "the database was deleted") : new StorageRefusal("newer", "a newer version took over"));
+    end(
+      isDeletion
+        ? new StorageRefusal("closed", "the database was deleted")
+        : new StorageRefusal("newer", "a newer version took over"),
+    );
     channel.emit({ kind: isDeletion ? "gone" : "superseded" });
   }
 

@@ -17,7 +17,9 @@ export function createDatabase(setting: DatabaseSetting): Dexie {
   const database = createDatabaseReader(setting);
   database.version(1).stores(STORES);
   // Same transaction as the creation: a database of ours is never without its identity.
-  database.on("populate", (transaction) => transaction.table("meta").add(metaRowMake(setting.newId(), setting.clock())));
+  database.on("populate", (transaction) =>
+    transaction.table("meta").add(metaRowMake(setting.newId(), setting.clock())),
+  );
   return database;
 }
 

@@ -19,7 +19,12 @@ export interface Opening {
 }
 
 /** Opens the database and says what was found, against what was noted outside it. */
-export function createOpening(connection: Connection, marker: LossMarker, copies: CaseCopies, channel: ChangeChannel): Opening {
+export function createOpening(
+  connection: Connection,
+  marker: LossMarker,
+  copies: CaseCopies,
+  channel: ChangeChannel,
+): Opening {
   let state: StorageState | null = null;
   let opening: Promise<StorageState> | null = null;
 
@@ -75,7 +80,8 @@ export function createOpening(connection: Connection, marker: LossMarker, copies
     await connection.connect("write");
     const identity = await connection.identity();
     const rows = await readRows();
-    if (!identity && rows.length > 0) return lost({ extent: "all", cases: null, lastSavedAt: null, detail: "the database has no identity" });
+    if (!identity && rows.length > 0)
+      return lost({ extent: "all", cases: null, lastSavedAt: null, detail: "the database has no identity" });
     let behind = casesBehind(noted?.heads ?? revisionsOf(copied), revisionsOf(rows));
     if (noted) behind = behind.filter((id) => marker.read()?.heads.has(id)); // one another tab removed meanwhile is not lost
     if (behind.length > 0) {
@@ -110,7 +116,8 @@ export function createOpening(connection: Connection, marker: LossMarker, copies
     return restored.length;
   }
 
-  const readRows = (): Promise<readonly CaseRow[]> => connection.read((database) => database.table<CaseRow>("cases").toArray());
+  const readRows = (): Promise<readonly CaseRow[]> =>
+    connection.read((database) => database.table<CaseRow>("cases").toArray());
 
   return { open, acceptLoss };
 }

@@ -12,7 +12,11 @@ export function createWardRows(connection: Connection, channel: ChangeChannel, c
     saveAttempt(clock, () => connection.write([table], work));
 
   /** Rows that can be read; what can't be is left where it is and said. */
-  async function listGood<Row, Value>(table: string, read: (row: Row) => Result<Value>, name: (row: Row) => string): Promise<Value[]> {
+  async function listGood<Row, Value>(
+    table: string,
+    read: (row: Row) => Result<Value>,
+    name: (row: Row) => string,
+  ): Promise<Value[]> {
     const rows = await connection.read((database) => database.table<Row>(table).toArray());
     const faults: Issue[] = [];
     const values = rows.flatMap((row) => {
@@ -29,7 +33,8 @@ export function createWardRows(connection: Connection, channel: ChangeChannel, c
     async readSetting(key: string): Promise<unknown> {
       return (await connection.read((database) => database.table<SettingRow, string>("settings").get(key)))?.value;
     },
-    writeSetting: (key: string, value: unknown) => write("settings", (database) => database.table<SettingRow>("settings").put({ key, value })),
+    writeSetting: (key: string, value: unknown) =>
+      write("settings", (database) => database.table<SettingRow>("settings").put({ key, value })),
 
     listMedicines: (): Promise<readonly MedicineRecord[]> =>
       listGood<MedicineRow, MedicineRecord>(
@@ -38,8 +43,11 @@ export function createWardRows(connection: Connection, channel: ChangeChannel, c
         ({ id }) => id,
       ),
     saveMedicine: (record: MedicineRecord) =>
-      write("medicines", (database) => database.table<MedicineRow>("medicines").put({ id: record.id, savedAt: clock(), record })),
-    removeMedicine: (id: string) => write("medicines", (database) => database.table<MedicineRow, string>("medicines").delete(id)),
+      write("medicines", (database) =>
+        database.table<MedicineRow>("medicines").put({ id: record.id, savedAt: clock(), record }),
+      ),
+    removeMedicine: (id: string) =>
+      write("medicines", (database) => database.table<MedicineRow, string>("medicines").delete(id)),
 
     listWindows: (): Promise<readonly WardWindow[]> =>
       listGood<WindowRow, WardWindow>("windows", windowRowRead, ({ medicine, id }) => `${medicine}: ${id}`),

@@ -54,5 +54,7 @@ function readMeta(database: IDBDatabase): Promise<Probe> {
 }
 
 export function errorText(error: unknown): string {
-  return error instanceof Error || error instanceof DOMException ? `${error.name}: ${error.message}`.trim() : String(error);
+  return error instanceof Error || error instanceof DOMException
+    ? `${error.name}: ${error.message}`.trim()
+    : String(error);
 }

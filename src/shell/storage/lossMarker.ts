@@ -40,7 +40,9 @@ export function createLossMarker(storage: MarkerStorage | null): LossMarker {
   };
 
   const headKeys = (of: MarkerStorage): string[] =>
-    Array.from({ length: of.length }, (_, index) => of.key(index)).filter((key) => key?.startsWith(HEAD_PREFIX) === true) as string[];
+    Array.from({ length: of.length }, (_, index) => of.key(index)).filter(
+      (key) => key?.startsWith(HEAD_PREFIX) === true,
+    ) as string[];
 
   const readMain = (of: MarkerStorage) => {
     try {
@@ -79,7 +81,10 @@ export function createLossMarker(storage: MarkerStorage | null): LossMarker {
       attempt((of) => {
         for (const key of headKeys(of)) of.removeItem(key);
         for (const { id, revision, savedAt } of rows) of.setItem(HEAD_PREFIX + id, `${revision} ${savedAt}`);
-        const lastSavedAt = rows.reduce<number | null>((latest, { savedAt }) => Math.max(latest ?? savedAt, savedAt), null);
+        const lastSavedAt = rows.reduce<number | null>(
+          (latest, { savedAt }) => Math.max(latest ?? savedAt, savedAt),
+          null,
+        );
         of.setItem(MARKER_KEY, JSON.stringify({ database, schema, lastSavedAt }));
       });
     },

@@ -22,7 +22,8 @@ interface Holding {
 export function createProbedLocks(makeChannel: MakeChannel, newId: () => string): WriterLocks {
   const channel = makeChannel("ebbline-writers");
   const holdings = new Map<string, Holding>();
-  const post = (kind: "ask" | "held" | "free", id: string, token: string): void => channel.postMessage({ kind, id, token });
+  const post = (kind: "ask" | "held" | "free", id: string, token: string): void =>
+    channel.postMessage({ kind, id, token });
 
   channel.onmessage = ({ data }: MessageEvent<unknown>) => {
     const { kind, id, token } = (data ?? {}) as { kind?: unknown; id?: unknown; token?: unknown };

@@ -19,7 +19,8 @@ export class StorageRefusal extends Error {
 /** An error and the errors inside it: Dexie answers a full disk with an AbortError whose `inner` is the QuotaExceededError. */
 function errorChain(error: unknown): unknown[] {
   const chain: unknown[] = [];
-  for (let at = error; at !== null && at !== undefined && !chain.includes(at); at = (at as { inner?: unknown }).inner) chain.push(at);
+  for (let at = error; at !== null && at !== undefined && !chain.includes(at); at = (at as { inner?: unknown }).inner)
+    chain.push(at);
   return chain;
 }
 
@@ -29,7 +30,9 @@ export function errorIsClosed(error: unknown): boolean {
   return errorChain(error).some(
     (each) =>
       ["DatabaseClosedError", "InvalidStateError"].includes(errorName(each)) ||
-      /connection to indexed database server lost|database connection is closing/i.test(String((each as Error).message)),
+      /connection to indexed database server lost|database connection is closing/i.test(
+        String((each as Error).message),
+      ),
   );
 }
 

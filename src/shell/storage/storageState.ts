@@ -12,7 +12,12 @@ export type StorageState =
       readonly recoverable: number;
       readonly detail: string;
     }
-  | { readonly kind: "newer"; readonly found: number; readonly known: number; /** false: not even readable by this version. */ readonly readable: boolean }
+  | {
+      readonly kind: "newer";
+      readonly found: number;
+      readonly known: number /** false: not even readable by this version. */;
+      readonly readable: boolean;
+    }
   | { readonly kind: "blocked" }
   | { readonly kind: "unavailable"; readonly detail: string };
 

@@ -26,7 +26,8 @@ export function storageVerdict(probe: Probe, marker: Marker | null, copied: numb
     return hadWork ? lost("the database is not there") : { kind: "good" };
   }
   const { meta } = probe;
-  if (meta && meta.schema > STORAGE_SCHEMA) return { kind: "newer", found: meta.schema, readable: meta.minReader <= STORAGE_SCHEMA };
+  if (meta && meta.schema > STORAGE_SCHEMA)
+    return { kind: "newer", found: meta.schema, readable: meta.minReader <= STORAGE_SCHEMA };
   if (marker?.loss) return lost(marker.loss);
   if (marker && hadWork && marker.database !== meta?.id) return lost("the database is another one");
   return { kind: "good" };

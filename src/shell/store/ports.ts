@@ -36,7 +36,11 @@ export type StorageState =
 
 export type SaveOutcome =
   | { readonly ok: true; readonly savedAt: number }
-  | { readonly ok: false; readonly reason: "quota" | "read-only" | "newer" | "closed" | "failed"; readonly detail: string };
+  | {
+      readonly ok: false;
+      readonly reason: "quota" | "read-only" | "newer" | "closed" | "failed";
+      readonly detail: string;
+    };
 
 export type StorageChange =
   /** Another tab saved or removed a case. */

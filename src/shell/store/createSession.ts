@@ -1,0 +1,176 @@
+import {
+  type Case,
+  caseDiff,
+  caseEdit,
+  caseValidate,
+  type EditArguments,
+  type EditName,
+} from "../../core/case/index.ts";
+import { issue } from "../../core/result/index.ts";
+import { ANALYSIS_NONE, createAnalysisFeed } from "./createAnalysisFeed.ts";
+import { createAutosave } from "./createAutosave.ts";
+import { HISTORY_EMPTY, type History, historyPush, historyRedo, historyUndo } from "./history.ts";
+import { readerSaving } from "./storageSentences.ts";
+import type { StoreContext } from "./storeContext.ts";
+import type { OpenCase, Saving } from "./workbenchState.ts";
+
+export interface Session {
+  readonly id: string;
+  edit<N extends EditName>(name: N, args: EditArguments<N>): void;
+  previewEdit<N extends EditName>(name: N, args: EditArguments<N>): void;
+  cancelPreview(): void;
+  undo(): void;
+  redo(): void;
+  /** The stored state takes the place of what is shown: for a reader only, history begins anew. */
+  replace(value: Case, role: OpenCase["role"], savedAt: number): void;
+  /** This tab can no longer write. What is not on disk stays in memory, and is said to be. */
+  freeze(): void;
+  /** What was on disk may not be there any more: written again. */
+  saveAgain(): void;
+  settle(): Promise<void>;
+  /** Nothing would be lost: all is on disk, or this very state was exported. */
+  isSafeToLeave(): boolean;
+  noteExport(): void;
+  stop(): void;
+}
+
+export interface SessionStart {
+  readonly value: Case;
+  readonly role: OpenCase["role"];
+  /** null: not stored yet. */
+  readonly savedAt: number | null;
+  readonly readerReason: "newer" | "other-tab";
+  readonly onSaved: (value: Case, savedAt: number) => void;
+}
+
+/** The open case: its edits, history, saving and analysis. Puts what it has into the state's `open`. */
+export function createSession(context: StoreContext, start: SessionStart): Session {
+  const { id } = start.value;
+  let history: History = HISTORY_EMPTY;
+  let exported: Case | null = null;
+  let isFrozen = false;
+  let isStopped = false;
+  let open: OpenCase = {
+    value: start.value,
+    revision: 1,
+    role: start.role,
+    ...HISTORY_EMPTY,
+    saving: start.role === "reader" ? readerSaving(start.readerReason, start.savedAt) : savedAs("saved", start.savedAt),
+    analysis: ANALYSIS_NONE,
+    preview: null,
+  };
+
+  function put(change: Partial<OpenCase>): void {
+    if (isStopped) return;
+    open = { ...open, ...change };
+    context.set({ open });
+  }
+
+  let autosave = makeAutosave(start.savedAt);
+  const feed = createAnalysisFeed(context.runner, (analysis) => put({ analysis }));
+
+  function makeAutosave(savedAt: number | null) {
+    return createAutosave({
+      save: (value) => context.repository.save(value),
+      report: (saving) =>
+        put({ saving: isFrozen && saving.status === "saved" ? readerSaving("newer", saving.savedAt) : saving }),
+      onSaved: start.onSaved,
+      savedAt,
+    });
+  }
+
+  /** The one way to a new state of the case. */
+  function change(value: Case, next: History): void {
+    history = next;
+    put({ value, revision: open.revision + 1, preview: null, undo: history.undo, redo: history.redo });
+    autosave.queue(value);
+    feed.ask(value, open.revision);
+  }
+
+  /** A state that could not be opened again is never made: an edit's outcome passes the same checks as a file. */
+  function outcome<N extends EditName>(name: N, args: EditArguments<N>) {
+    const value = caseEdit(open.value, name, args);
+    const checked = caseValidate(value);
+    return checked.ok ? { ok: true as const, value } : checked;
+  }
+
+  function mayChange(): boolean {
+    if (open.role === "writer") return true;
+    context.say("check", issue("edit-read-only"));
+    return false;
+  }
+
+  const session: Session = {
+    id,
+    edit(name, args) {
+      if (!mayChange()) return;
+      const result = outcome(name, args);
+      if (!result.ok) {
+        session.cancelPreview();
+        context.say("check", ...result.issues);
+        return;
+      }
+      const diff = caseDiff(open.value, result.value);
+      if (diff.length === 0) session.cancelPreview();
+      else change(result.value, historyPush(history, { name, diff }));
+    },
+    previewEdit(name, args) {
+      if (!mayChange()) return;
+      const result = outcome(name, args);
+      // A drag over a place where it can't be dropped stays at the last good one; the drop itself says why.
+      if (!result.ok) return;
+      put({ preview: result.value });
+      feed.askPreview(result.value, open.revision);
+    },
+    cancelPreview() {
+      if (!open.preview) return;
+      put({ preview: null });
+      feed.cancelPreview(open.value, open.revision);
+    },
+    undo() {
+      const step = mayChange() ? historyUndo(history, open.value) : null;
+      if (step) change(step.value, step.history);
+    },
+    redo() {
+      const step = mayChange() ? historyRedo(history, open.value) : null;
+      if (step) change(step.value, step.history);
+    },
+    replace(value, role, savedAt) {
+      autosave.stop();
+      autosave = makeAutosave(savedAt);
+      history = HISTORY_EMPTY;
+      const saving = role === "reader" ? readerSaving("other-tab", savedAt) : savedAs("saved", savedAt);
+      put({ value, role, saving, revision: open.revision + 1, preview: null, ...HISTORY_EMPTY });
+      feed.ask(value, open.revision);
+    },
+    freeze() {
+      isFrozen = true;
+      session.cancelPreview();
+      const { savedAt } = open.saving;
+      const reader = readerSaving("newer", savedAt);
+      put({ role: "reader", saving: autosave.isSaved() ? reader : { ...reader, status: "failed" } });
+    },
+    saveAgain() {
+      if (open.role === "writer") autosave.queue(open.value);
+    },
+    settle: () => autosave.settle(),
+    isSafeToLeave: () => autosave.isSaved() || exported === open.value,
+    noteExport() {
+      exported = open.value;
+    },
+    stop() {
+      isStopped = true;
+      autosave.stop();
+      feed.stop();
+    },
+  };
+
+  put({});
+  feed.ask(open.value, open.revision);
+  if (start.savedAt === null && start.role === "writer") autosave.queue(open.value);
+  return session;
+}
+
+function savedAs(status: Saving["status"], savedAt: number | null): Saving {
+  return { status: savedAt === null ? "unsaved" : status, savedAt, reason: null, detail: "" };
+}

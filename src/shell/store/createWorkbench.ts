@@ -1,0 +1,117 @@
+import { createStore, type StoreApi } from "zustand/vanilla";
+import { type Case, caseValidate } from "../../core/case/index.ts";
+import { issue } from "../../core/result/index.ts";
+import { bootActions } from "./bootActions.ts";
+import { caseActions } from "./caseActions.ts";
+import type { Session } from "./createSession.ts";
+import { settingsRead } from "./settings.ts";
+import type { StoreContext, WorkbenchSetting } from "./storeContext.ts";
+import { wardActions } from "./wardActions.ts";
+import type { DemoEntry, WorkbenchState } from "./workbenchState.ts";
+
+export type Workbench = StoreApi<WorkbenchState>;
+
+/** The state of the workbench and everything that can be done to it. */
+export function createWorkbench(setting: WorkbenchSetting): Workbench {
+  return createStore<WorkbenchState>()((set, get) => {
+    let notices = 0;
+    let turn: Promise<unknown> = Promise.resolve();
+    let takeUpdate: (() => void) | null = null;
+
+    const context: StoreContext = {
+      ...setting,
+      get,
+      set,
+      session: null,
+      ended: null,
+      say(gravity, ...issues) {
+        const isSaid = get().notices.some(
+          (each) => each.gravity === gravity && JSON.stringify(each.issues) === JSON.stringify(issues),
+        );
+        if (isSaid) return;
+        notices += 1;
+        set({ notices: [...get().notices, { id: notices, gravity, issues }] });
+      },
+      inTurn(work) {
+        const result = turn.then(work);
+        turn = result.catch(() => {});
+        return result;
+      },
+    };
+    const cases = caseActions(context);
+    const ward = wardActions(context);
+    const boot = bootActions(context, cases, ward);
+    const withOpen = (work: (session: Session) => void): void => {
+      if (context.session) work(context.session);
+      else context.say("check", issue("edit-no-case"));
+    };
+
+    return {
+      boot: { kind: "opening" },
+      screen: "cases",
+      entries: [],
+      medicines: setting.builtInRecords,
+      ownMedicines: [],
+      wardWindows: [],
+      demos: Object.entries(setting.demos).flatMap(([name, value]) => demoEntry(name, value)),
+      settings: settingsRead(undefined),
+      open: null,
+      notices: [],
+      update: "none",
+
+      start: boot.start,
+      acceptLoss: boot.acceptLoss,
+      show: (screen) => set({ screen }),
+      newCase: cases.newCase,
+      openCase: cases.openCase,
+      openDemo: cases.openDemo,
+      closeCase: cases.closeCase,
+      removeCase: cases.removeCase,
+      importFile: cases.importFile,
+      exportFile: cases.exportFile,
+      exportStored: cases.exportStored,
+      importMedicine: ward.importMedicine,
+      removeMedicine: ward.removeMedicine,
+      saveWindow: ward.saveWindow,
+      removeWindow: ward.removeWindow,
+      changeSettings: ward.changeSettings,
+
+      edit: (name, args) => withOpen((session) => session.edit(name, args)),
+      previewEdit: (name, args) => withOpen((session) => session.previewEdit(name, args)),
+      cancelPreview: () => context.session?.cancelPreview(),
+      undo: () => context.session?.undo(),
+      redo: () => context.session?.redo(),
+
+      notify: (gravity, issues) => context.say(gravity, ...issues),
+      dismiss: (id) => set({ notices: get().notices.filter((each) => each.id !== id) }),
+      offerUpdate(apply) {
+        takeUpdate = apply;
+        set({ update: "waiting" });
+      },
+      applyUpdate: () =>
+        context.inTurn(async () => {
+          await context.session?.settle();
+          if (context.session && !context.session.isSafeToLeave())
+            return context.say(
+              "stop",
+              issue("update-unsaved", { label: get().open?.value.label, id: context.session.id }),
+            );
+          takeUpdate?.();
+        }),
+      settle: async () => context.session?.settle(),
+    };
+  });
+}
+
+/** A demonstration that can't be read is not offered; a test holds every bundled one against the parser. */
+function demoEntry(name: string, value: unknown): DemoEntry[] {
+  const parsed = caseValidate(value);
+  return parsed.ok
+    ? [{ name, label: parsed.value.label, medicine: parsed.value.medicine.name, about: aboutCase(parsed.value) }]
+    : [];
+}
+
+/** What the case says of itself in the first line of its notes. */
+function aboutCase({ notes }: Case): string {
+  return notes.split("\n", 1)[0]?.trim() ?? "";
+}

@@ -1,0 +1,30 @@
+import type { MedicineRecord } from "../../core/medicine/index.ts";
+import type { Issue } from "../../core/result/index.ts";
+import type { Session } from "./createSession.ts";
+import type { AnalysisRunner, CaseRepository } from "./ports.ts";
+import type { Notice, WorkbenchState } from "./workbenchState.ts";
+
+/** What the store is made of: everything that touches the world comes in here. */
+export interface WorkbenchSetting {
+  readonly repository: CaseRepository;
+  readonly runner: AnalysisRunner;
+  /** Epoch milliseconds. */
+  readonly clock: () => number;
+  readonly newId: () => string;
+  /** Bundled demonstration cases, as read from their files, by name. */
+  readonly demos: Readonly<Record<string, unknown>>;
+  readonly builtInRecords: readonly MedicineRecord[];
+}
+
+/** What the groups of actions share. */
+export interface StoreContext extends WorkbenchSetting {
+  get(): WorkbenchState;
+  set(change: Partial<WorkbenchState>): void;
+  say(gravity: Notice["gravity"], ...issues: readonly Issue[]): void;
+  /** The open case's own machinery; null when none is open. */
+  session: Session | null;
+  /** Why this tab's storage is at an end, once it is: only a reload helps. */
+  ended: Issue | null;
+  /** One at a time: opening, closing and the like wait for each other. */
+  inTurn<T>(work: () => Promise<T>): Promise<T>;
+}
