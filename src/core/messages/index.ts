@@ -1,10 +1,11 @@
 export { benchWords } from "./benchWords.ts";
 export { CONCERN_CODES, type ConcernWords, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
 export { editLabel } from "./editWords.ts";
-export { MESSAGE_CODES, issueMessage } from "./issueMessage.ts";
-export type { MessageFunction } from "./messageFunction.ts";
-export { windowQuantityWord } from "./windowWords.ts";
-export * from "./fieldWords.ts";
-export * from "./screenWords.ts";
-export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";
 export * from "./entryWords.ts";
+export * from "./fieldWords.ts";
+export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
+export type { MessageFunction } from "./messageFunction.ts";
+export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./regimenWords.ts";
+export * from "./screenWords.ts";
+export { windowQuantityWord } from "./windowWords.ts";
+export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";

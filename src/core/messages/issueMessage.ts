@@ -1,10 +1,11 @@
-import { medicineMessages } from "./medicineMessages.ts";
-import { caseMessages } from "./caseMessages.ts";
 import type { Issue } from "../result/index.ts";
-import type { MessageFunction } from "./messageFunction.ts";
+import { caseMessages } from "./caseMessages.ts";
 import { entryMessages } from "./entryMessages.ts";
+import { medicineMessages } from "./medicineMessages.ts";
+import type { MessageFunction } from "./messageFunction.ts";
 import { numberMessages } from "./numberMessages.ts";
 import { patientMessages } from "./patientMessages.ts";
+import { regimenMessages } from "./regimenMessages.ts";
 import { storageMessages } from "./storageMessages.ts";
 import { summaryMessages } from "./summaryMessages.ts";
 import { timeMessages } from "./timeMessages.ts";
@@ -16,6 +17,7 @@ const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...entryMessages,
   ...numberMessages,
   ...patientMessages,
+  ...regimenMessages,
   ...storageMessages,
   ...summaryMessages,
   ...timeMessages,
