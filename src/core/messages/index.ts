@@ -4,6 +4,7 @@ export { editLabel } from "./editWords.ts";
 export * from "./entryWords.ts";
 export * from "./fieldWords.ts";
 export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
+export { laneLineWords } from "./laneWords.ts";
 export type { MessageFunction } from "./messageFunction.ts";
 export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./regimenWords.ts";
 export * from "./screenWords.ts";

@@ -1,9 +1,8 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { type DoseMark, laneDoses } from "../../core/analysis/index.ts";
 import { optionNextId } from "../../core/case/index.ts";
-import { benchWords } from "../../core/messages/index.ts";
-import { productOf } from "../../core/medicine/index.ts";
-import { type DoseLine, doseLineText } from "../../core/regimen/index.ts";
+import { benchWords, laneLineWords } from "../../core/messages/index.ts";
+import type { DoseLine } from "../../core/regimen/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { unitSpoken } from "../../core/units/index.ts";
 import { optionStyle } from "../chart/ProfileChart.tsx";
@@ -71,10 +70,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   if (!open || !value) return null;
   const isReader = open.role === "reader";
   const lineTexts = (lines: readonly DoseLine[]) =>
-    lines.map((line) => ({
-      id: line.id,
-      text: doseLineText(line, { zone: value.timeZone, product: productOf(value.medicine, line.product) }),
-    }));
+    lines.map((line) => ({ id: line.id, text: laneLineWords(line, value.timeZone) }));
   const clock = span ? clockScale(span.fromH, span.toH, 0, width - RIGHT) : null;
   const nowX = clock && analysis && span && analysis.clock.nowH >= span.fromH && analysis.clock.nowH <= span.toH ? clock.x(analysis.clock.nowH) : null;
   const midnightsX = clock && analysis && span ? analysis.clock.midnightsH.filter((hours) => hours > span.fromH && hours < span.toH).map(clock.x) : [];
