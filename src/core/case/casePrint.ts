@@ -5,13 +5,13 @@ import type { Case } from "./caseSchema.ts";
  * Names that are not here (the keys of a record's sources) follow in alphabetical order.
  */
 export const FIELD_ORDER: readonly string[] = (
-  "format version id recordVersion name invented label demo timeZone now at kind " +
+  "format version id index recordVersion name invented label demo timeZone now at kind " +
   "patient sex age height observations factors from to detail " +
   "medicine review status by on matrix molarMass sources title authors year place " +
   "kinetics variability clearance volume apparent absorptionRate residualProportional residualAdditive " +
   "population products product form release strengths concentration divisible swallowWhole lag bioavailability " +
   "windows toxicFrom doseLimits sampling cautions formula text category " +
-  "window quantity low high value unit given levels options lines amount start repeat every count clock days except index " +
+  "window quantity low high value unit given levels options lines amount start repeat every count clock days except " +
   "chosen confirmed excluded ageMin ageMax source basis note fit use residualModel notes"
 ).split(" ");
 
