@@ -1,5 +1,5 @@
 import type { MessageFunction } from "./messageFunction.ts";
-import { timeMessages } from "./timeMessages.ts";
+import { dateWords } from "./timeMessages.ts";
 
 type Data = Readonly<Record<string, unknown>>;
 
@@ -15,10 +15,9 @@ const strengthList = (strengths: unknown): string => {
   return list.length === 0 ? "no strength" : `${either(list, "and")} mg`;
 };
 const times = (count: unknown): string => {
-  const words = ["once", "twice"];
+  const words = ["Once", "Twice"];
   return words[Number(count) - 1] ?? `${String(count)} times`;
 };
-const clockSentence = (code: string, data: Data): string => timeMessages[code]?.(data) ?? "";
 const WAYS: Readonly<Record<string, string>> = {
   once: "how often",
   days: "for how long",
@@ -27,10 +26,10 @@ const WAYS: Readonly<Record<string, string>> = {
 };
 
 export const regimenMessages: Readonly<Record<string, MessageFunction>> = {
-  "dose-clock-skipped": (data: Data) =>
-    `Dose ${String(data.dose)} falls on a time that does not exist. ${clockSentence("clock-skipped", data)} Move that dose, for example "dose ${String(data.dose)} moved to ${texts(data.nearest)[1] ?? ""}".`,
-  "dose-clock-twice": (data: Data) =>
-    `Dose ${String(data.dose)} falls on a time that comes twice. ${clockSentence("clock-twice", data)} Say which, for example "dose ${String(data.dose)} moved to ${String(data.time)} first".`,
+  "dose-clock-skipped": ({ dose, date, time, zone, nearest }: Data) =>
+    `Dose ${String(dose)} falls on ${String(time)} on ${dateWords(date)}, which does not exist in ${String(zone)}, as the clocks go forward: add "dose ${String(dose)} moved to ${texts(nearest)[1] ?? ""}", or another time.`,
+  "dose-clock-twice": ({ dose, date, time, zone }: Data) =>
+    `Dose ${String(dose)} falls on ${String(time)} on ${dateWords(date)}, which comes twice in ${String(zone)}, as the clocks go back: add "dose ${String(dose)} moved to ${String(time)} first", or "second".`,
   "dose-exception-twice": ({ dose }: Data) => `Dose ${String(dose)} has two exceptions: leave one.`,
   "dose-exception-needs-at": ({ dose, status }: Data) =>
     `Dose ${String(dose)} is marked ${String(status)} without a time: write when, such as "dose ${String(dose)} ${String(status)} at 10:15".`,
@@ -85,7 +84,7 @@ export const regimenMessages: Readonly<Record<string, MessageFunction>> = {
     `${said(part)} does not say how often: write ${quoted(expected)}.`,
   "dose-text-needs-clock": ({ part, times: count }: Data) =>
     Number(count) > 1
-      ? `${said(part)} ${times(count)} a day needs its clock times: write them, such as "at 08:00 and 20:00".`
+      ? `${said(part)} ${times(count).toLowerCase()} a day needs its clock times: write them, such as "at 08:00 and 20:00".`
       : `${said(part)} daily needs its clock time: write it, such as "at 08:00".`,
   "dose-text-clock-count": ({ times: count, clocks }: Data) =>
     `${times(count)} a day does not go with ${texts(clocks).length === 1 ? "one clock time" : `${texts(clocks).length} clock times`} (${either(clocks, "and")}): make them agree.`,
@@ -93,7 +92,7 @@ export const regimenMessages: Readonly<Record<string, MessageFunction>> = {
     `${said(part)} each day can't carry "first", "second" or an offset: write the time alone.`,
   "dose-text-seconds": ({ part }: Data) => `${said(part)} has seconds: write a daily time to the minute.`,
   "dose-text-needs-time": ({ part, expected }: Data) =>
-    `${said(part)} does not say from which clock time: add it, such as ${said(expected)}.`,
+    `${said(part)} has no clock time: add it, such as ${said(expected)}.`,
   "dose-text-needs-day": ({ expected }: Data) =>
     `It is not clear on which day this began: add it, such as ${said(expected)}, or the number of doses given.`,
 };

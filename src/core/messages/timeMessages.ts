@@ -5,7 +5,7 @@ type Data = Readonly<Record<string, unknown>>;
 const strings = (value: unknown): readonly string[] => (Array.isArray(value) ? value.map(String) : []);
 
 /** "Sunday 29 March 2026", from "2026-03-29": a date needs no zone. */
-function dateWords(date: unknown): string {
+export function dateWords(date: unknown): string {
   return instantText(instantMs(`${String(date)}T12:00:00+00:00`), "UTC", "dateYear");
 }
 
@@ -33,6 +33,8 @@ export const timeMessages: Readonly<Record<string, MessageFunction>> = {
     `There is no ${String(day)} ${MONTHS[Number(month) - 1] ?? `month ${String(month)}`}${year === undefined ? "" : ` ${String(year)}`}: check the day and month.`,
   "instant-weekday": ({ date, said, actual }: Data) =>
     `${dateWords(date)} is a ${String(actual)}, not a ${String(said)}: check the date, or leave the weekday out.`,
+  "instant-needs-date": ({ part }: Data) =>
+    `"${String(part)}" alone can mean several days: add the date, such as ${String(part)} 4 March.`,
   "instant-needs-time": ({ date }: Data) => `${dateWords(date)} has no time with it: add one, such as 07:30.`,
   "instant-offset": ({ date, time, offset, candidates }: Data) =>
     `${String(time)} on ${dateWords(date)} is not at UTC${String(offset)}: write ${strings(candidates).map(offsetOf).join(" or ")}, or leave it out.`,

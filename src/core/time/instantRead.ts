@@ -1,5 +1,6 @@
 import { fail, issue, type Result } from "../result/index.ts";
-import { instantPhraseRead, instantPhraseResolve } from "./instantPhrase.ts";
+import { instantPhraseRead } from "./instantPhrase.ts";
+import { instantPhraseResolve } from "./instantPhraseResolve.ts";
 
 /**
  * Reads a typed instant: "2026-03-04 07:30", "4 March 2026 07:30", "Wed 4 March 07:30" (year nearest to now), "07:30" (today),

@@ -7,6 +7,8 @@ import { wordNumber } from "./wordNumber.ts";
 const COUNTED = /^(tablet|tab|capsule|cap)s?$/i;
 /** Words that make the number before them something other than an amount. */
 const NOT_AMOUNTS = /^(doses?|days?|weeks?|times?|hourly)$/i;
+/** Words that begin the next clause, so that the number before them stands without a unit. */
+const CLAUSE_WORDS = /^(once|twice|daily|every|each|from|at|on|for|and|then|of|starting|tomorrow|today)$/i;
 
 /** "300 mg", "5 mL", "2 tablets of 200 mg", "2 tablets", "half a tablet". */
 export function amountClause(words: readonly string[], from: number): ClauseRead<AmountPhrase> {
@@ -23,7 +25,7 @@ export function amountClause(words: readonly string[], from: number): ClauseRead
   const unitWord = words[from + 1];
   if (value === null || (unitWord !== undefined && NOT_AMOUNTS.test(unitWord))) return succeed(null);
   const part = words.slice(from, from + 2).join(" ");
-  if (unitWord === undefined || unitWord === "," || /^[\d:]/.test(unitWord)) {
+  if (unitWord === undefined || unitWord === "," || /^\d/.test(unitWord) || CLAUSE_WORDS.test(unitWord)) {
     return fail(issue("dose-text-needs-unit", { part: words[from], expected: "300 mg" }));
   }
   if (value <= 0) return fail(issue("dose-text-amount-not-positive", { part }));

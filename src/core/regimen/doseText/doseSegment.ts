@@ -46,6 +46,8 @@ export interface DoseSegment {
   doses?: number;
   iso?: string;
   date?: InstantPhrase["date"];
+  /** The day was said with "on" or alone, not with "from": a single day rather than the first of several. */
+  isDayOnly?: true;
   startTime?: ClockPhrase;
   clocks: ClockPhrase[];
   exceptions: ExceptionPhrase[];

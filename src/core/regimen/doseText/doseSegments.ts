@@ -36,12 +36,17 @@ function clauseRead(
   const segment = segments[segments.length - 1] ?? newSegment();
   const word = words[at] ?? "";
 
+  if (/^\d+\/\d+$/.test(word) && /^(a|tablets?|tabs?|capsules?|caps?)$/i.test(words[at + 1] ?? "")) {
+    return fail(issue("dose-text-fraction", { part: `${word} ${words[at + 1]}` }));
+  }
   const product = productAt(words, at, products);
   if (product) {
     const clash = segment.product !== undefined && segment.product !== product.id;
     segment.product = product.id;
     return clash ? fail(conflict(words.slice(at, product.next))) : succeed(product.next);
   }
+  const refused = refusedWord(words, at);
+  if (refused) return fail(refused);
   const exception = exceptionClause(words, at);
   if (!exception.ok) return exception;
   if (exception.value) {
@@ -68,8 +73,6 @@ function clauseRead(
     else return fail(conflict(words.slice(at, amount.value.next)));
     return succeed(amount.value.next);
   }
-  const refused = refusedWord(word);
-  if (refused) return fail(refused);
   const isTrailing = at + 1 === words.length && word !== ",";
   if (FILLERS.has(word.toLowerCase()) || (isJoinWord(word) && !isTrailing)) return succeed(at + 1);
   return fail(

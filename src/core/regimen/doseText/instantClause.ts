@@ -2,7 +2,8 @@ import { fail, issue, type Result, succeed } from "../../result/index.ts";
 import { type InstantPhrase, instantPhraseRead } from "../../time/index.ts";
 import type { ClauseRead, ClockPhrase, DoseSegment } from "./doseSegment.ts";
 
-export type InstantPart = Pick<DoseSegment, "clocks"> & Partial<Pick<DoseSegment, "iso" | "date" | "startTime">>;
+export type InstantPart = Pick<DoseSegment, "clocks"> &
+  Partial<Pick<DoseSegment, "iso" | "date" | "isDayOnly" | "startTime">>;
 
 const FROM = /^(from|starting|start|starts|beginning)$/i;
 
@@ -26,10 +27,11 @@ export function instantClause(words: readonly string[], from: number): ClauseRea
   const { value: first, next } = phrase.value;
   const clock = clockOf(first);
   if (isFrom) return succeed({ value: { ...dateOf(first), clocks: [], ...(clock ? { startTime: clock } : {}) }, next });
-  if (!clock) return succeed({ value: { ...dateOf(first), clocks: [] }, next });
+  const day = { ...dateOf(first), ...(first.date || first.iso ? { isDayOnly: true as const } : {}) };
+  if (!clock) return succeed({ value: { ...day, clocks: [] }, next });
   const more = moreClocks(words, next);
   if (!more.ok) return more;
-  return succeed({ value: { ...dateOf(first), clocks: [clock, ...more.value.clocks] }, next: more.value.next });
+  return succeed({ value: { ...day, clocks: [clock, ...more.value.clocks] }, next: more.value.next });
 }
 
 function clockOf(phrase: InstantPhrase): ClockPhrase | null {

@@ -32,13 +32,19 @@ const ABBREVIATIONS: Readonly<Record<string, string>> = {
 const VAGUE =
   /^(morning|mornings|noon|midday|afternoon|evening|evenings|night|nightly|midnight|bedtime|breakfast|lunch|dinner|supper)$/;
 
-/** A word that is understood but not taken: an error-prone abbreviation or a vague time of day. */
-export function refusedWord(word: string): Issue | null {
+const BEFORE_VAGUE = /^(in|with|before|after|during|at|the|every|each)$/;
+
+/** Words that are understood but not taken: an error-prone abbreviation, or a vague time of day such as "in the morning". */
+export function refusedWord(words: readonly string[], from: number): Issue | null {
+  const word = words[from] ?? "";
   const plain = word.toLowerCase().replace(/\./g, "");
   const expected = Object.hasOwn(ABBREVIATIONS, plain) ? ABBREVIATIONS[plain] : undefined;
   if (expected !== undefined) return issue("dose-text-abbreviation", { part: word, expected });
   const hours = /^q(\d+)(h|hr|hrs|hourly)$/.exec(plain);
   if (hours) return issue("dose-text-abbreviation", { part: word, expected: `every ${hours[1]} h` });
   if (/^(prn|needed)$/.test(plain)) return issue("dose-text-as-needed", { part: word });
-  return VAGUE.test(plain) ? issue("dose-text-vague-time", { part: word, expected: "at 08:00" }) : null;
+  let end = from;
+  while (end < from + 2 && BEFORE_VAGUE.test(words[end]?.toLowerCase() ?? "")) end += 1;
+  if (!VAGUE.test(words[end]?.toLowerCase() ?? "")) return null;
+  return issue("dose-text-vague-time", { part: words.slice(from, end + 1).join(" "), expected: "at 08:00" });
 }

@@ -10,7 +10,7 @@ export type SegmentRepeat =
 
 /** Decides between once, every so many hours, and each day at clock times. `clocksInText`: how many clock times all segments name together. */
 export function segmentRepeat(segment: DoseSegment, clocksInText: number, zone: string): Result<SegmentRepeat> {
-  const { once, everyH, isDaily, days, doses, endless, clocks, startTime } = segment;
+  const { once, everyH, isDaily, days, doses, endless, clocks, startTime, isDayOnly } = segment;
   const refuse = (code: string, data: Record<string, unknown> = {}): Result<SegmentRepeat> => fail(issue(code, data));
   const part = segment.amount?.part ?? "";
 
@@ -20,7 +20,7 @@ export function segmentRepeat(segment: DoseSegment, clocksInText: number, zone: 
     return refuse("dose-text-two-lengths", { part });
 
   const isRepeatedByClock =
-    clocks.length > 0 && (days !== undefined || endless || (doses ?? 1) > 1 || clocksInText > 1);
+    clocks.length > 0 && (days !== undefined || endless || (doses ?? 1) > 1 || (clocksInText > 1 && !isDayOnly));
   const isOnce = once || (everyH === undefined && !isDaily && doses === 1);
   if (isOnce) {
     if (days !== undefined || endless || (doses ?? 1) > 1) return refuse("dose-text-two-lengths", { part });

@@ -1,4 +1,4 @@
-import { fail, issue, type Result, succeed } from "../../result/index.ts";
+import { type Result, succeed } from "../../result/index.ts";
 import { numberRead } from "../../units/index.ts";
 
 const WORDS = ["one", "two", "three", "four", "five", "six", "seven", "eight", "nine", "ten", "eleven", "twelve"];
@@ -9,8 +9,7 @@ export function wordNumber(word: string | undefined): Result<number | null> {
   if (at >= 0) return succeed(at + 1);
   if (word === undefined || !/^[-+\u2010-\u2015\u2212]?[.,]?\p{Nd}/u.test(word) || word.includes(":"))
     return succeed(null);
-  const fraction = /^\d+\/\d+$/.test(word);
-  return fraction ? fail(issue("dose-text-fraction", { part: word })) : numberRead(word);
+  return numberRead(word);
 }
 
 /** As `wordNumber`, but only a whole number of at least 1. */
