@@ -15,10 +15,15 @@ await runCommand(async () => {
     folder: join(PROJECT, "dist"),
     port: PORT,
     seekPort: true,
-    onTaken: (port) => console.log(`Port ${port} is taken by another program; trying ${port + 1}.`),
+    onTaken: (port) => console.log(`Port ${port} is taken; trying ${port + 1}.`),
   });
   for (const signal of /** @type {const} */ (["SIGINT", "SIGTERM"])) {
     process.once(signal, () => void server.close());
+  }
+  if (server.port !== PORT) {
+    console.log(
+      `A browser keeps cases by address: those entered on port ${PORT} are not shown on port ${server.port}.`,
+    );
   }
   console.log("Ebbline is ready. Ctrl+C ends the server; a browser that has opened the page once needs it no longer.");
   console.log(server.url.replace(/\/$/, ""));
