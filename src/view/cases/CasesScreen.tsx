@@ -30,6 +30,7 @@ export function CasesScreen() {
   const exportStored = useWorkbench((state) => state.exportStored);
   const acceptLoss = useWorkbench((state) => state.acceptLoss);
   const show = useWorkbench((state) => state.show);
+  const hasOpenCase = useWorkbench((state) => state.open !== null);
   const [outcome, setOutcome] = useState<ImportOutcome | null>(null);
   const [exportFault, setExportFault] = useState<readonly Issue[]>([]);
   const [zone] = useState(timeZoneHere);
@@ -46,7 +47,7 @@ export function CasesScreen() {
 
   return (
     <FileDropArea word={casesWords.importDrop} onFile={(file) => void importOne(file)} isDisabled={!canWork}>
-      <ScreenHead places={screenPlaces("cases", show)} />
+      <ScreenHead places={screenPlaces("cases", show, hasOpenCase)} />
       <main className="cases-screen">
         <header className="cases-screen-head">
           <h1>{casesWords.heading}</h1>

@@ -22,6 +22,7 @@ export function MedicinesScreen() {
   const saveWindow = useWorkbench((state) => state.saveWindow);
   const removeWindow = useWorkbench((state) => state.removeWindow);
   const show = useWorkbench((state) => state.show);
+  const hasOpenCase = useWorkbench((state) => state.open !== null);
   const [chosen, setChosen] = useState<string | null>(null);
   const [outcome, setOutcome] = useState<{ readonly file: string; readonly result: Result<MedicineRecord> } | null>(
     null,
@@ -42,7 +43,7 @@ export function MedicinesScreen() {
   };
   return (
     <>
-      <ScreenHead places={screenPlaces("medicines", show)} />
+      <ScreenHead places={screenPlaces("medicines", show, hasOpenCase)} />
       <main className="medicines-screen">
         <header>
           <h1>{medicinesWords.heading}</h1>

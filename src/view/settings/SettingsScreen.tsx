@@ -17,11 +17,12 @@ export function SettingsScreen() {
   const boot = useWorkbench((state) => state.boot);
   const entries = useWorkbench((state) => state.entries);
   const show = useWorkbench((state) => state.show);
+  const hasOpenCase = useWorkbench((state) => state.open !== null);
   const persistence = usePersistence();
   const isOffline = "serviceWorker" in navigator && navigator.serviceWorker.controller !== null;
   return (
     <>
-      <ScreenHead places={screenPlaces("settings", show)} />
+      <ScreenHead places={screenPlaces("settings", show, hasOpenCase)} />
       <main className="settings-screen">
         <h1>{placeWords.settings}</h1>
         <section aria-labelledby="settings-print">

@@ -1,7 +1,7 @@
 import { useState } from "react";
 import { issueMessage } from "../../core/messages/index.ts";
 import type { Issue } from "../../core/result/index.ts";
-import { instantRead } from "../../core/time/index.ts";
+import { instantMs, instantRead } from "../../core/time/index.ts";
 import { InstantInput, instantTyped } from "./InstantInput.tsx";
 
 export interface InstantFieldProps {
@@ -14,6 +14,7 @@ export interface InstantFieldProps {
   readonly refuse?: (iso: string) => Issue | null;
   readonly description?: string | undefined;
   readonly isReadOnly?: boolean;
+  readonly isLabelHidden?: boolean;
 }
 
 /** An instant of the open case: counts on Enter or on leaving the field. */
@@ -30,7 +31,7 @@ export function InstantField(props: InstantFieldProps) {
   const commit = (left: string) => {
     const read = instantRead(left, zone, now);
     if (!read.ok) return;
-    if (Date.parse(read.value) === Date.parse(value)) {
+    if (instantMs(read.value) === instantMs(value)) {
       setText(instantTyped(value, zone));
       return;
     }
@@ -46,6 +47,7 @@ export function InstantField(props: InstantFieldProps) {
       now={now}
       description={description}
       isReadOnly={props.isReadOnly ?? false}
+      isLabelHidden={props.isLabelHidden ?? false}
       fault={fault}
       onChange={(next) => {
         setFault(undefined);

@@ -19,6 +19,7 @@ export interface InstantInputProps {
   readonly fault?: string | undefined;
   readonly description?: string | undefined;
   readonly isReadOnly?: boolean;
+  readonly isLabelHidden?: boolean;
 }
 
 /** The same instant as text that reads back to it, its offset added where the clock shows the time twice. */
@@ -50,6 +51,7 @@ export function InstantInput(props: InstantInputProps) {
   return (
     <FieldFrame
       label={label}
+      isLabelHidden={props.isLabelHidden ?? false}
       description={description}
       reading={read.ok ? fieldWords.understood(instantText(instantMs(read.value), zone, "full")) : undefined}
       fault={problem && isSaid && !isTwice ? issueMessage(problem) : fault}

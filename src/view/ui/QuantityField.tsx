@@ -11,6 +11,11 @@ export interface QuantityAsk<U extends UnitCode> {
   readonly answers: readonly { readonly label: string; readonly value: Quantity<U>; readonly isConfirmed: boolean }[];
 }
 
+export type QuantityLook<U extends UnitCode> =
+  | { readonly kind: "fine" }
+  | { readonly kind: "refused"; readonly issue: Issue }
+  | { readonly kind: "asked"; readonly ask: QuantityAsk<U> };
+
 export interface QuantityFieldProps<U extends UnitCode> {
   readonly label: string;
   readonly value: Quantity<U> | null;
@@ -18,12 +23,11 @@ export interface QuantityFieldProps<U extends UnitCode> {
   /** Unit chosen while there is no value. */
   readonly unit: U;
   readonly onCommit: (value: Quantity<U> | null, isConfirmed: boolean) => void;
-  /** A value that can't be meant is refused. */
-  readonly refuse?: (value: Quantity<U>) => Issue | null;
-  /** A value that is odd is asked about; it counts once it is answered. */
-  readonly ask?: (value: Quantity<U>) => QuantityAsk<U> | null;
+  /** A second look at what reads well: refused, or asked about until it is answered. */
+  readonly look?: (value: Quantity<U>) => QuantityLook<U>;
   readonly description?: string | undefined;
   readonly isReadOnly?: boolean;
+  readonly isLabelHidden?: boolean;
 }
 
 const isSame = (a: Quantity | null, b: Quantity | null) =>
@@ -31,7 +35,7 @@ const isSame = (a: Quantity | null, b: Quantity | null) =>
 
 /** A quantity of the open case: counts on Enter, on leaving the field, or once the question is answered. Emptied: null. */
 export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) {
-  const { label, value, units, unit, onCommit, refuse, ask, description } = props;
+  const { label, value, units, unit, onCommit, look, description } = props;
   const [draft, setDraft] = useState(() => quantityDraft(value, unit));
   const [seen, setSeen] = useState(value);
   const [fault, setFault] = useState<string>();
@@ -65,13 +69,9 @@ export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) 
     }
     const next = readOf(left);
     if (next === null || isSame(next, value)) return;
-    const refusal = refuse?.(next);
-    if (refusal) {
-      setFault(issueMessage(refusal));
-      return;
-    }
-    const question = ask?.(next);
-    if (question) setAsked(question);
+    const looked = look?.(next) ?? { kind: "fine" };
+    if (looked.kind === "refused") setFault(issueMessage(looked.issue));
+    else if (looked.kind === "asked") setAsked(looked.ask);
     else take(next, false);
   };
   return (
@@ -81,6 +81,7 @@ export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) 
       units={units}
       description={description}
       isReadOnly={props.isReadOnly ?? false}
+      isLabelHidden={props.isLabelHidden ?? false}
       fault={fault}
       question={
         asked && {

@@ -8,17 +8,19 @@ export interface RadioFieldProps<Value extends string> {
   readonly choices: readonly (Choice<Value> & { readonly detail?: string })[];
   readonly onChoose: (value: Value) => void;
   readonly description?: string;
+  readonly isReadOnly?: boolean;
   /** "row": few short words beside each other; "list": one below the other, with a detail each. */
   readonly arrangement?: "row" | "list";
 }
 
 /** Few answers, all in sight. */
 export function RadioField<Value extends string>(props: RadioFieldProps<Value>) {
-  const { label, value, choices, onChoose, description, arrangement = "row" } = props;
+  const { label, value, choices, onChoose, description, arrangement = "row", isReadOnly = false } = props;
   return (
     <RadioGroup
       className={`radio-field radio-field-${arrangement}`}
       value={value}
+      isReadOnly={isReadOnly}
       onChange={(chosen) => {
         const choice = choices.find((one) => one.value === chosen);
         if (choice) onChoose(choice.value);

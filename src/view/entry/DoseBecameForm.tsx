@@ -1,0 +1,102 @@
+import { type FormEvent, useState } from "react";
+import type { Case } from "../../core/case/index.ts";
+import { doseWords, issueMessage } from "../../core/messages/index.ts";
+import type { DoseAmount, DoseEvent, DoseLine } from "../../core/regimen/index.ts";
+import { type Issue, issue } from "../../core/result/index.ts";
+import { instantIso, instantMs, instantRead, instantText } from "../../core/time/index.ts";
+import { Button } from "../ui/Button.tsx";
+import { InstantInput, instantTyped } from "../ui/InstantInput.tsx";
+import { QuantityInput } from "../ui/QuantityInput.tsx";
+import { quantityDraft, quantityDraftRead } from "../ui/quantityDraft.ts";
+import { RadioField } from "../ui/RadioField.tsx";
+import { lineFault, lineWithDose } from "./lineLook.ts";
+
+export interface DoseBecameFormProps {
+  readonly value: Case;
+  readonly lane: string;
+  readonly line: DoseLine;
+  readonly dose: DoseEvent;
+  readonly units: readonly DoseAmount["unit"][];
+  readonly onLine: (line: DoseLine) => void;
+  readonly onCancel: () => void;
+}
+
+type Became = "taken" | "missed" | "at";
+
+/** What became of one dose: taken when due, missed, or taken at another time; and how much of it. One edit. */
+export function DoseBecameForm({ value, lane, line, dose, units, onLine, onCancel }: DoseBecameFormProps) {
+  const { timeZone: zone, now } = value;
+  const [became, setBecame] = useState<Became>(() => {
+    if (dose.status === "missed") return "missed";
+    return dose.atMs === dose.scheduledMs ? "taken" : "at";
+  });
+  const [atText, setAtText] = useState(() => instantTyped(instantIso(dose.atMs, zone), zone));
+  const [amount, setAmount] = useState(() => quantityDraft<DoseAmount["unit"]>(dose.amount, dose.amount.unit));
+  const [isSent, setSent] = useState(false);
+  const [fault, setFault] = useState<Issue | null>(null);
+
+  const at = instantRead(atText, zone, now);
+  const isLate = at.ok && instantMs(at.value) > instantMs(now);
+  const words = (iso: string) => instantText(instantMs(iso), zone, "dayClock");
+  const atFault = at.ok && isLate ? issue("dose-taken-after-now", { at: words(at.value), now: words(now) }) : null;
+  const send = (event: FormEvent) => {
+    event.preventDefault();
+    setSent(true);
+    const read = quantityDraftRead(amount, units);
+    if (became === "missed") return onLine(lineWithDose(value, lane, line, dose, { kind: "missed" }, dose.amount));
+    if (!read.ok || (became === "at" && (!at.ok || atFault))) return;
+    if (read.value.value <= 0)
+      return setFault(issue("dose-amount", { found: read.value.value, unit: read.value.unit }));
+    const how = became === "at" && at.ok ? ({ kind: "at", at: at.value } as const) : ({ kind: "taken" } as const);
+    const changed = lineWithDose(value, lane, line, dose, how, read.value);
+    const found = lineFault(changed, line, value);
+    setFault(found);
+    if (!found) onLine(changed);
+  };
+  return (
+    <form className="entry-panel-form dose-became" onSubmit={send} noValidate>
+      <RadioField
+        label={`${doseWords.dose} ${dose.index + 1}, ${doseWords.due} ${instantText(dose.scheduledMs, zone, "dayClock")}`}
+        value={became}
+        choices={[
+          { value: "taken", label: doseWords.taken },
+          { value: "at", label: doseWords.otherTime },
+          { value: "missed", label: doseWords.missed },
+        ]}
+        onChoose={setBecame}
+      />
+      {became === "missed" ? null : (
+        <div className="line-form-row">
+          <QuantityInput
+            label={doseWords.takenAmount}
+            draft={amount}
+            units={units}
+            isTold={isSent}
+            fault={fault ? issueMessage(fault) : undefined}
+            onChange={(next) => {
+              setFault(null);
+              setAmount(next);
+            }}
+          />
+          {became === "at" ? (
+            <InstantInput
+              label={doseWords.takenWhen}
+              text={atText}
+              zone={zone}
+              now={now}
+              isTold={isSent}
+              fault={isSent && atFault ? issueMessage(atFault) : undefined}
+              onChange={setAtText}
+            />
+          ) : null}
+        </div>
+      )}
+      <div className="entry-panel-buttons">
+        <Button type="submit">{doseWords.save}</Button>
+        <Button kind="quiet" onPress={onCancel}>
+          {doseWords.cancel}
+        </Button>
+      </div>
+    </form>
+  );
+}

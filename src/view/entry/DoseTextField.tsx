@@ -1,0 +1,85 @@
+import { type FormEvent, useState } from "react";
+import type { Case } from "../../core/case/index.ts";
+import { doseLineSentence, doseWords, issueMessage } from "../../core/messages/index.ts";
+import { type DoseLine, type DoseProduct, doseTextRead } from "../../core/regimen/index.ts";
+import { issue } from "../../core/result/index.ts";
+import { Button } from "../ui/Button.tsx";
+import { FieldFrame } from "../ui/FieldFrame.tsx";
+
+export interface DoseTextFieldProps {
+  readonly value: Case;
+  readonly lane: string;
+  readonly products: readonly DoseProduct[];
+  readonly product: string | null;
+  readonly text: string;
+  readonly label: string;
+  readonly sendWord: string;
+  readonly onText: (text: string) => void;
+  readonly onLines: (lines: readonly DoseLine[]) => void;
+}
+
+/** A regimen typed as it would be said. Its meaning is said back while it is typed; Enter takes it. */
+export function DoseTextField(props: DoseTextFieldProps) {
+  const { value, lane, products, product, text, label, sendWord, onText, onLines } = props;
+  const [isSent, setSent] = useState(false);
+  const read =
+    product === null
+      ? ({ ok: false, issues: [issue("dose-product-missing")] } as const)
+      : doseTextRead(text, {
+          zone: value.timeZone,
+          nowIso: value.now,
+          lane: lane === "given" ? "given" : "option",
+          products,
+          defaultProduct: product,
+          newId: () => crypto.randomUUID(),
+        });
+  const problem = read.ok ? undefined : read.issues[0];
+  const isEmpty = text.trim() === "";
+  const send = (event: FormEvent) => {
+    event.preventDefault();
+    setSent(true);
+    if (!read.ok) return;
+    onLines(read.value);
+    setSent(false);
+  };
+  return (
+    <form className="dose-text" onSubmit={send} noValidate>
+      <FieldFrame
+        label={label}
+        description={doseWords.textHelp}
+        fault={isSent && problem ? issueMessage(problem) : undefined}
+      >
+        {(wiring) => (
+          <div className="dose-text-line">
+            <input
+              {...wiring}
+              className="field-control"
+              type="text"
+              autoComplete="off"
+              spellCheck={false}
+              value={text}
+              onChange={(event) => {
+                setSent(false);
+                onText(event.currentTarget.value);
+              }}
+            />
+            <Button kind="main" type="submit">
+              {sendWord}
+            </Button>
+          </div>
+        )}
+      </FieldFrame>
+      {isEmpty || isSent ? null : (
+        <div className="dose-text-reading">
+          <p className="dose-text-reading-head">{read.ok ? doseWords.read : doseWords.notYet}</p>
+          {read.ok ? (
+            read.value.map((line) => <p key={line.id}>{doseLineSentence(line, { zone: value.timeZone, products })}.</p>)
+          ) : (
+            <p className="entry-panel-soft">{problem ? issueMessage(problem) : null}</p>
+          )}
+          {read.ok ? <p className="entry-panel-soft">{doseWords.enterAdds}</p> : null}
+        </div>
+      )}
+    </form>
+  );
+}

@@ -1,0 +1,98 @@
+import { type FormEvent, useState } from "react";
+import type { Case, Level } from "../../core/case/index.ts";
+import { issueMessage, levelWords } from "../../core/messages/index.ts";
+import type { Quantity } from "../../core/units/index.ts";
+import { Button } from "../ui/Button.tsx";
+import { InstantInput } from "../ui/InstantInput.tsx";
+import type { QuantityAsk } from "../ui/QuantityField.tsx";
+import { QuantityInput } from "../ui/QuantityInput.tsx";
+import { RadioField } from "../ui/RadioField.tsx";
+import { LEVEL_UNIT_CHOICES, type LevelDraft, type LevelUnit, levelDraftRead, levelLook } from "./levelDraft.ts";
+
+export interface LevelAddFormProps {
+  readonly value: Case;
+  readonly onAdd: (level: Omit<Level, "id">) => void;
+}
+
+/** A level is typed with the clock time it was drawn: no time is filled in beforehand. */
+export function LevelAddForm({ value, onAdd }: LevelAddFormProps) {
+  const empty: LevelDraft = {
+    quantity: { text: "", unit: value.levels.at(-1)?.quantity.unit ?? "mg/L" },
+    at: "",
+    kind: "measured",
+  };
+  const [draft, setDraft] = useState(empty);
+  const [isSent, setSent] = useState(false);
+  const [asked, setAsked] = useState<QuantityAsk<LevelUnit>>();
+
+  const read = levelDraftRead(draft, value);
+  const faultOf = (path: string) => {
+    const found = read.ok ? undefined : read.issues.find((one) => one.path[0] === path);
+    return found && isSent ? issueMessage(found) : undefined;
+  };
+  const change = (next: LevelDraft) => {
+    setDraft(next);
+    setAsked(undefined);
+    setSent(false);
+  };
+  const add = (quantity: Quantity<LevelUnit>, isConfirmed: boolean) => {
+    if (!read.ok) return;
+    onAdd({ ...read.value, quantity, ...(isConfirmed ? { confirmed: true } : {}) });
+    change({ ...empty, quantity: { text: "", unit: quantity.unit } });
+  };
+  const send = (event: FormEvent) => {
+    event.preventDefault();
+    setSent(true);
+    if (!read.ok) return;
+    const looked = levelLook(read.value.quantity, value.medicine);
+    if (looked.kind === "asked") setAsked(looked.ask);
+    else add(read.value.quantity, false);
+  };
+  return (
+    <form className="entry-panel-form" onSubmit={send} noValidate>
+      <div className="level-entry-row">
+        <QuantityInput
+          label={levelWords.value}
+          draft={draft.quantity}
+          units={LEVEL_UNIT_CHOICES}
+          isTold={isSent}
+          fault={faultOf("quantity")}
+          question={
+            asked && {
+              text: asked.text,
+              answers: asked.answers.map((answer) => ({
+                label: answer.label,
+                onAnswer: () => add(answer.value, answer.isConfirmed),
+              })),
+            }
+          }
+          onChange={(quantity) => change({ ...draft, quantity })}
+        />
+        <InstantInput
+          label={levelWords.drawnAt}
+          text={draft.at}
+          zone={value.timeZone}
+          now={value.now}
+          isTold={isSent}
+          fault={faultOf("at")}
+          description={levelWords.drawnHelp}
+          onChange={(at) => change({ ...draft, at })}
+        />
+      </div>
+      <RadioField
+        label={levelWords.kind}
+        value={draft.kind}
+        choices={[
+          { value: "measured", label: levelWords.measured },
+          { value: "below-limit", label: levelWords.belowLimit },
+        ]}
+        onChoose={(kind) => change({ ...draft, kind })}
+      />
+      <div>
+        <Button kind="main" type="submit">
+          {levelWords.add}
+        </Button>
+      </div>
+    </form>
+  );
+}

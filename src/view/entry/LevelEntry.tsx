@@ -1,0 +1,45 @@
+import { levelWords } from "../../core/messages/index.ts";
+import { useWorkbench } from "../useWorkbench.ts";
+import { LevelAddForm } from "./LevelAddForm.tsx";
+import { LevelTable } from "./LevelTable.tsx";
+import { PanelDone } from "./PanelDone.tsx";
+import "./entryPanel.css";
+import "./LevelEntry.css";
+
+export interface LevelEntryProps {
+  readonly onDone: () => void;
+}
+
+export function LevelEntry({ onDone }: LevelEntryProps) {
+  const open = useWorkbench((state) => state.open);
+  const edit = useWorkbench((state) => state.edit);
+  if (!open) return null;
+  const isReadOnly = open.role === "reader";
+  const { result, revision } = open.analysis;
+  const isStale = result !== null && revision !== open.revision;
+  return (
+    <div className="entry-panel">
+      <div className="level-entry-table">
+        <LevelTable
+          value={open.value}
+          results={result?.levels ?? []}
+          isReadOnly={isReadOnly}
+          onExclude={(id, reason) => edit("levelExclude", { id, reason })}
+          onRemove={(id) => edit("levelRemove", { id })}
+        />
+        {open.value.levels.length > 0 ? <p className="entry-panel-soft">{levelWords.predictedBy}</p> : null}
+        {isStale ? <p className="entry-panel-soft">{levelWords.stale}</p> : null}
+      </div>
+      {isReadOnly ? null : (
+        <section aria-labelledby="level-entry-add">
+          <h3 id="level-entry-add">{levelWords.add}</h3>
+          <LevelAddForm
+            value={open.value}
+            onAdd={(level) => edit("levelAdd", { level: { ...level, id: crypto.randomUUID() } })}
+          />
+        </section>
+      )}
+      <PanelDone onDone={onDone} />
+    </div>
+  );
+}

@@ -1,0 +1,168 @@
+import { type FormEvent, useState } from "react";
+import type { LevelResult } from "../../core/analysis/index.ts";
+import type { Case, Level } from "../../core/case/index.ts";
+import { issueMessage, levelWords } from "../../core/messages/index.ts";
+import { issue } from "../../core/result/index.ts";
+import { instantMs, instantText } from "../../core/time/index.ts";
+import { numberPrint, quantityPrint } from "../../core/units/index.ts";
+import { Button } from "../ui/Button.tsx";
+import { DataTable } from "../ui/DataTable.tsx";
+import { TextField } from "../ui/TextField.tsx";
+
+export interface LevelTableProps {
+  readonly value: Case;
+  readonly results: readonly LevelResult[];
+  readonly isReadOnly: boolean;
+  readonly onExclude: (id: string, reason: string | null) => void;
+  readonly onRemove: (id: string) => void;
+}
+
+const mgPerL = (value: number) => quantityPrint({ value, unit: "mg/L" }, { style: "screen", significant: 3 });
+
+/** Every level with what was predicted at that time; one left out stays, with its reason. */
+export function LevelTable({ value, results, isReadOnly, onExclude, onRemove }: LevelTableProps) {
+  const [leaving, setLeaving] = useState<string | null>(null);
+  const resultOf = (level: Level) => results.find((one) => one.id === level.id);
+  const nameOf = (level: Level) =>
+    `${measuredWords(level)} ${instantText(instantMs(level.at), value.timeZone, "dayClock")}`;
+  return (
+    <>
+      <DataTable
+        caption={levelWords.list}
+        rows={value.levels}
+        rowKey={(level) => level.id}
+        isRowFaint={(level) => level.excluded !== undefined}
+        empty={levelWords.none}
+        columns={[
+          {
+            id: "drawn",
+            head: levelWords.drawn,
+            isRowHead: true,
+            cell: (level) => (
+              <span>
+                {instantText(instantMs(level.at), value.timeZone, "dayClock")}
+                {level.excluded === undefined ? null : (
+                  <span className="level-entry-left">{levelWords.left(level.excluded)}</span>
+                )}
+              </span>
+            ),
+          },
+          {
+            id: "after",
+            head: levelWords.afterDose,
+            align: "end",
+            cell: (level) => {
+              const hours = resultOf(level)?.afterDoseH ?? null;
+              return hours === null ? "" : `${numberPrint(hours, { decimals: 1 })} h`;
+            },
+          },
+          { id: "measured", head: levelWords.measuredHead, align: "end", cell: measuredWords },
+          {
+            id: "predicted",
+            head: levelWords.predicted,
+            align: "end",
+            cell: (level) => {
+              const predicted = resultOf(level)?.predicted ?? null;
+              return predicted === null ? "" : mgPerL(predicted);
+            },
+          },
+          {
+            id: "difference",
+            head: levelWords.difference,
+            align: "end",
+            cell: (level) => {
+              const difference = resultOf(level)?.difference ?? null;
+              return difference === null ? "" : `${difference > 0 ? "+" : ""}${mgPerL(difference)}`;
+            },
+          },
+          {
+            id: "actions",
+            head: levelWords.actions,
+            isHeadHidden: true,
+            align: "end",
+            cell: (level) =>
+              isReadOnly ? null : (
+                <span className="level-entry-actions">
+                  {level.excluded === undefined ? (
+                    <Button
+                      kind="quiet"
+                      onPress={() => setLeaving(level.id)}
+                      name={`${levelWords.leaveOut} ${nameOf(level)}`}
+                    >
+                      {levelWords.leaveOut}
+                    </Button>
+                  ) : (
+                    <Button
+                      kind="quiet"
+                      onPress={() => onExclude(level.id, null)}
+                      name={`${levelWords.takeBack} ${nameOf(level)}`}
+                    >
+                      {levelWords.takeBack}
+                    </Button>
+                  )}
+                  <Button
+                    kind="quiet"
+                    onPress={() => onRemove(level.id)}
+                    name={`${levelWords.remove} ${nameOf(level)}`}
+                  >
+                    {levelWords.remove}
+                  </Button>
+                </span>
+              ),
+          },
+        ]}
+      />
+      {leaving !== null && value.levels.some((level) => level.id === leaving) ? (
+        <ReasonForm
+          key={leaving}
+          onCancel={() => setLeaving(null)}
+          onSave={(reason) => {
+            onExclude(leaving, reason);
+            setLeaving(null);
+          }}
+        />
+      ) : null}
+    </>
+  );
+}
+
+/** In the unit it was reported in. */
+function measuredWords(level: Level): string {
+  const shown = quantityPrint(level.quantity, { style: "screen" });
+  return level.kind === "below-limit" ? levelWords.below(shown) : shown;
+}
+
+function ReasonForm({
+  onSave,
+  onCancel,
+}: {
+  readonly onSave: (reason: string) => void;
+  readonly onCancel: () => void;
+}) {
+  const [reason, setReason] = useState("");
+  const [isSent, setSent] = useState(false);
+  const send = (event: FormEvent) => {
+    event.preventDefault();
+    setSent(true);
+    if (reason.trim()) onSave(reason.trim());
+  };
+  return (
+    <form className="entry-panel-form entry-panel-inset" onSubmit={send} noValidate>
+      <TextField
+        label={levelWords.reason}
+        value={reason}
+        onChange={setReason}
+        maxLength={200}
+        hasInitialFocus
+        description={levelWords.reasonHelp}
+        fault={isSent && !reason.trim() ? issueMessage(issue("level-reason-missing")) : undefined}
+      />
+      <div className="entry-panel-buttons">
+        <Button type="submit">{levelWords.reasonSave}</Button>
+        <Button kind="quiet" onPress={onCancel}>
+          {levelWords.cancel}
+        </Button>
+      </div>
+    </form>
+  );
+}

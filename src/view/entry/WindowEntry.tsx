@@ -1,0 +1,96 @@
+import { type FormEvent, useState } from "react";
+import type { TargetWindow } from "../../core/case/index.ts";
+import { windowQuantityWord, windowWords } from "../../core/messages/index.ts";
+import { numberPrint, quantityPrint } from "../../core/units/index.ts";
+import { Button } from "../ui/Button.tsx";
+import { RadioField } from "../ui/RadioField.tsx";
+import { WindowFields } from "../ui/WindowFields.tsx";
+import { EMPTY_WINDOW, windowDraft, windowDraftRead } from "../ui/windowDraft.ts";
+import { useWorkbench } from "../useWorkbench.ts";
+import { PanelDone } from "./PanelDone.tsx";
+import { type OfferedWindow, windowOfferOf, windowOffers } from "./windowOffers.ts";
+import "./entryPanel.css";
+
+export interface WindowEntryProps {
+  readonly onDone: () => void;
+}
+
+const OWN = "own";
+
+/** The window of the case: one of the record's, one of the ward's, or typed. None is chosen beforehand. */
+export function WindowEntry({ onDone }: WindowEntryProps) {
+  const open = useWorkbench((state) => state.open);
+  const wardWindows = useWorkbench((state) => state.wardWindows);
+  const edit = useWorkbench((state) => state.edit);
+  const current = open?.value.window;
+  const offers = open ? windowOffers(open.value.medicine, wardWindows) : [];
+  const offered = current ? windowOfferOf(current, offers) : null;
+  const [isOwn, setOwn] = useState(() => current !== undefined && offered === null);
+  const [draft, setDraft] = useState(() => (current ? windowDraft(current) : EMPTY_WINDOW));
+  const [isSent, setSent] = useState(false);
+  if (!open) return null;
+  const isReadOnly = open.role === "reader";
+  const molarMass = open.value.medicine.molarMass.value;
+
+  const send = (event: FormEvent) => {
+    event.preventDefault();
+    setSent(true);
+    const read = windowDraftRead(draft, molarMass);
+    if (read.ok) edit("windowSet", { window: read.value });
+  };
+  return (
+    <div className="entry-panel">
+      <p>
+        {windowWords.current}: <strong>{current ? windowSentence(current) : windowWords.none}</strong>
+      </p>
+      <RadioField
+        label={windowWords.choose}
+        arrangement="list"
+        isReadOnly={isReadOnly}
+        value={isOwn ? OWN : (offered?.id ?? null)}
+        choices={[
+          ...offers.map((offer) => ({ value: offer.id, label: offer.label, detail: offerDetail(offer) })),
+          { value: OWN, label: windowWords.own, detail: windowWords.ownDetail },
+        ]}
+        onChoose={(id) => {
+          setOwn(id === OWN);
+          const offer = offers.find((one) => one.id === id);
+          if (offer) edit("windowSet", { window: offer.window });
+        }}
+      />
+      {isOwn && !isReadOnly ? (
+        <form className="entry-panel-form entry-panel-inset" onSubmit={send} noValidate>
+          <WindowFields draft={draft} onChange={setDraft} molarMass={molarMass} isTold={isSent} />
+          <div>
+            <Button kind="main" type="submit">
+              {windowWords.set}
+            </Button>
+          </div>
+        </form>
+      ) : null}
+      {current && !isReadOnly ? (
+        <div>
+          <Button
+            kind="quiet"
+            onPress={() => {
+              setOwn(false);
+              edit("windowSet", { window: null });
+            }}
+          >
+            {windowWords.clear}
+          </Button>
+        </div>
+      ) : null}
+      <PanelDone onDone={onDone} />
+    </div>
+  );
+}
+
+function windowSentence({ low, high, quantity, basis }: TargetWindow): string {
+  const top = quantityPrint(high, { style: "screen", significant: 4 });
+  return `${numberPrint(low.value, { significant: 4 })} to ${top}, ${windowQuantityWord(quantity)} (${basis})`;
+}
+
+function offerDetail({ window, from }: OfferedWindow): string {
+  return `${windowQuantityWord(window.quantity)}; ${from === "record" ? windowWords.fromRecord : windowWords.fromWard}: ${window.basis}`;
+}

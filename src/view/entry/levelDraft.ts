@@ -1,0 +1,84 @@
+import type { Case, Level } from "../../core/case/index.ts";
+import type { MedicineRecord } from "../../core/medicine/index.ts";
+import { askWords, issueMessage } from "../../core/messages/index.ts";
+import { doseLineExpand } from "../../core/regimen/index.ts";
+import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
+import { instantMs, instantRead, instantText } from "../../core/time/index.ts";
+import { type Quantity, quantityConvert, quantityPrint } from "../../core/units/index.ts";
+import type { QuantityAsk, QuantityLook } from "../ui/QuantityField.tsx";
+import { type QuantityDraft, quantityDraftRead } from "../ui/quantityDraft.ts";
+
+export const LEVEL_UNIT_CHOICES = ["mg/L", "ug/mL", "ug/L", "ng/mL", "umol/L", "nmol/L", "mmol/L"] as const;
+export type LevelUnit = (typeof LEVEL_UNIT_CHOICES)[number];
+
+/** A level being typed. */
+export interface LevelDraft {
+  readonly quantity: QuantityDraft<LevelUnit>;
+  readonly at: string;
+  readonly kind: Level["kind"];
+}
+
+/** The level, or its faults: path "quantity" or "at". A level lies between the first dose given and the now line. */
+export function levelDraftRead(draft: LevelDraft, value: Case): Result<Omit<Level, "id">> {
+  const quantity = quantityDraftRead(draft.quantity, LEVEL_UNIT_CHOICES);
+  const at = instantRead(draft.at, value.timeZone, value.now);
+  const faults: Issue[] = [];
+  if (!quantity.ok) faults.push(...quantity.issues.map((one) => ({ ...one, path: ["quantity"] })));
+  else if (quantity.value.value <= 0) {
+    const { value: found, unit } = quantity.value;
+    faults.push(issue("level-not-positive", { found, unit }, ["quantity"]));
+  }
+  if (!at.ok) faults.push(...at.issues.map((one) => ({ ...one, path: ["at"] })));
+  else faults.push(...placeFaults(at.value, value));
+  if (faults.length > 0 || !quantity.ok || !at.ok) return fail(...faults);
+  return succeed({ at: at.value, quantity: quantity.value, kind: draft.kind });
+}
+
+function placeFaults(at: string, value: Case): readonly Issue[] {
+  const words = (ms: number) => instantText(ms, value.timeZone, "dayClock");
+  const atMs = instantMs(at);
+  const nowMs = instantMs(value.now);
+  if (atMs > nowMs) return [issue("level-after-now", { at: words(atMs), now: words(nowMs) }, ["at"])];
+  const firstMs = firstDoseMs(value);
+  if (firstMs === null) return [issue("level-no-dose", {}, ["at"])];
+  return atMs < firstMs ? [issue("level-before-dose", { at: words(atMs), first: words(firstMs) }, ["at"])] : [];
+}
+
+/** When the first dose of the given lane was taken; null without any. A line whose clock times can't be placed counts from its start. */
+export function firstDoseMs(value: Case): number | null {
+  const untilMs = instantMs(value.now);
+  const firsts = value.given.flatMap((line) => {
+    const doses = doseLineExpand(line, { zone: value.timeZone, untilMs });
+    if (!doses.ok) return [instantMs(line.start)];
+    return doses.value.filter((dose) => dose.status !== "missed").map((dose) => dose.atMs);
+  });
+  return firsts.length === 0 ? null : firsts.reduce((a, b) => Math.min(a, b));
+}
+
+/** A level this many times above the highest wanted, or below the lowest, is asked about: units slip by 1000, seldom by less. Basis: our choice, common practice. */
+const FAR = 20;
+/** Units in which a slip is offered to be put right, the commonest first. */
+const OFFERED = ["mg/L", "ug/L", "umol/L", "nmol/L"] as const;
+
+/** Asks about a level far from what the medicine is used at, and offers the units in which the same number would be near. */
+export function levelLook(typed: Quantity<LevelUnit>, record: MedicineRecord): QuantityLook<LevelUnit> {
+  const wanted = record.windows.filter((window) => window.high.unit === "mg/L");
+  if (wanted.length === 0) return { kind: "fine" };
+  const high = Math.max(...wanted.map((window) => window.high.value));
+  const low = Math.min(...wanted.map((window) => window.low.value || window.high.value));
+  const inMgPerL = (value: Quantity<LevelUnit>) => quantityConvert(value, "mg/L", record.molarMass.value);
+  const isNear = (mgPerL: number) => mgPerL <= high * FAR && mgPerL >= low / FAR;
+  if (isNear(inMgPerL(typed))) return { kind: "fine" };
+  const shown = (value: Quantity) => quantityPrint(value, { style: "screen", significant: 4 });
+  const others: QuantityAsk<LevelUnit>["answers"] = OFFERED.map((unit) => ({ value: typed.value, unit }))
+    .filter((other) => other.unit !== typed.unit && isNear(inMgPerL(other)))
+    .slice(0, 2)
+    .map((other) => ({ label: askWords.itIs(shown(other)), value: other, isConfirmed: false }));
+  const text = issueMessage(
+    issue("level-other-unit", { value: shown(typed), high: shown({ value: high, unit: "mg/L" }) }),
+  );
+  return {
+    kind: "asked",
+    ask: { text, answers: [{ label: askWords.itIs(shown(typed)), value: typed, isConfirmed: true }, ...others] },
+  };
+}
