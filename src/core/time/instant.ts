@@ -6,18 +6,19 @@ import { MS_PER_HOUR } from "./msPerHour.ts";
 const PATTERN =
   /^(19[7-9]\d|20\d\d|21\d\d)-(0[1-9]|1[0-2])-(0[1-9]|[12]\d|3[01])T([01]\d|2[0-3]):[0-5]\d(:[0-5]\d)?(Z|[+-](0\d|1[0-4]):[0-5]\d)$/;
 
-function isRealDate(iso: string): boolean {
+/** Whether a text is such an instant, of a date that exists. */
+export function isInstant(iso: string): boolean {
   if (!PATTERN.test(iso)) return false;
   const [year, month, day] = iso.slice(0, 10).split("-").map(Number) as [number, number, number];
   return day <= Temporal.PlainYearMonth.from({ year, month }).daysInMonth;
 }
 
 /** An instant as it stands in a saved case: "2026-03-04T09:00:00+00:00". The date must exist. */
-export const instantSchema = z.string().regex(PATTERN).refine(isRealDate);
+export const instantSchema = z.string().regex(PATTERN).refine(isInstant);
 
 /** Epoch milliseconds of an instant that passes `instantSchema`; anything else throws RangeError. */
 export function instantMs(iso: string): number {
-  if (!isRealDate(iso)) {
+  if (!isInstant(iso)) {
     throw new RangeError(`iso: "${iso}"; allowed ISO 8601 with offset, to the minute or second, of a date that exists`);
   }
   return Temporal.Instant.from(iso).epochMilliseconds;

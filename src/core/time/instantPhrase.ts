@@ -1,6 +1,6 @@
 import { fail, type Issue, issue, type Result, succeed } from "../result/index.ts";
 import { monthNumber, twoDigits, weekdayNumber } from "./calendarWords.ts";
-import { instantSchema } from "./instant.ts";
+import { isInstant } from "./instant.ts";
 
 /** A word of typed text; the words a phrase is read from. Commas are words of their own. */
 export type PhraseWord = string;
@@ -43,7 +43,7 @@ const OFFSET = /^\(?(?:utc)?([+-](?:0\d|1[0-4]):[0-5]\d)\)?$/i;
  */
 export function instantPhraseRead(words: readonly PhraseWord[], from: number): Result<Taken<InstantPhrase> | null> {
   const word = words[from] ?? "";
-  if (instantSchema.safeParse(word).success) return succeed({ value: { iso: word }, next: from + 1 });
+  if (isInstant(word)) return succeed({ value: { iso: word }, next: from + 1 });
   const refused = refusedForm(words, from);
   if (refused) return fail(refused);
 

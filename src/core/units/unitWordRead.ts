@@ -44,7 +44,7 @@ export function unitWordRead(word: string): UnitCode | null {
     .toLowerCase()
     .replace(/\s*\bper\b\s*/g, "/")
     .replace(/\s*([/·*.])\s*/g, "$1")
-    .replace(/[·*]/g, ".");
+    .replace(/[·*]|\s+/g, ".");
   const parts = lower.split("/").map((part) =>
     part
       .split(".")
