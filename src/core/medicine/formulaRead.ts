@@ -31,6 +31,8 @@ export const FORMULA_FUNCTIONS: readonly string[] = Object.keys(FUNCTIONS);
 const FORMULA_LENGTH = 400;
 /** Letters, digits, the five operators, brackets, comma: leaves no way to write text, access, assignment or comparison. */
 const FORMULA_CHARACTERS = /^[A-Za-z0-9_.+\-*/^(), ]*$/;
+/** Ours: far beyond any published model, far below what a stack holds. */
+const FORMULA_NESTING = 20;
 const HEXADECIMAL = /(^|[^A-Za-z0-9_.])0[A-Za-z]/;
 
 const math = create({ parseDependencies: parseDependencies as FactoryFunctionMap });
@@ -46,14 +48,13 @@ export function formulaRead(formula: string): Result<MathNode> {
   if (formula.length > FORMULA_LENGTH) {
     return fail(issue("formula-too-long", { found: formula.length, maximum: FORMULA_LENGTH }));
   }
-  if (!FORMULA_CHARACTERS.test(formula) || HEXADECIMAL.test(formula)) {
+  if (!FORMULA_CHARACTERS.test(formula) || HEXADECIMAL.test(formula) || nestingOf(formula) > FORMULA_NESTING) {
     return fail(issue("formula-unreadable", { formula }));
   }
   let node: MathNode;
   try {
     node = math.parse(formula);
   } catch {
-    // A syntax error, or brackets nested deeper than the stack.
     return fail(issue("formula-unreadable", { formula }));
   }
   const faults: Issue[] = [];
@@ -103,4 +104,15 @@ export function nameOf(node: MathNode): string {
 
 function isFiniteNumber(node: MathNode): boolean {
   return "value" in node && typeof node.value === "number" && Number.isFinite(node.value);
+}
+
+function nestingOf(formula: string): number {
+  let depth = 0;
+  let deepest = 0;
+  for (const character of formula) {
+    if (character === "(") depth += 1;
+    if (character === ")") depth -= 1;
+    deepest = Math.max(deepest, depth);
+  }
+  return deepest;
 }

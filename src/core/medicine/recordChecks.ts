@@ -39,7 +39,8 @@ function provenanceFaults(record: MedicineRecord): RecordFault[] {
   const visit = (value: unknown, path: Path): void => {
     if (typeof value !== "object" || value === null) return;
     const { source, basis } = value as { source?: unknown; basis?: unknown };
-    if (typeof source === "string" && !Object.hasOwn(record.sources, source)) {
+    // An empty one is the schema's to refuse.
+    if (typeof source === "string" && source !== "" && !Object.hasOwn(record.sources, source)) {
       faults.push({ code: "record-source-unknown", path: [...path, "source"], data: { source } });
     }
     if (basis === "invented" && !record.invented) {

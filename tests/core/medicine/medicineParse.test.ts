@@ -1,0 +1,208 @@
+import { describe, expect, it } from "vitest";
+import { type MedicineRecord, medicineParse, recordById } from "../../../src/core/medicine/index.ts";
+import { issueMessage } from "../../../src/core/messages/index.ts";
+import type { Issue } from "../../../src/core/result/index.ts";
+
+type Change = (record: MedicineRecord) => void;
+
+function changed(id: string, change: Change): unknown {
+  const record = structuredClone(recordById(id)) as MedicineRecord;
+  change(record);
+  return record;
+}
+
+type Part = Record<string, unknown>;
+
+function partOf(record: MedicineRecord, path: string): Part {
+  return path.split(".").reduce<unknown>((part, key) => (part as Part)[key], record) as Part;
+}
+
+/** Sets the field at a path such as "products.0.lag.value". */
+function put(path: string, value: unknown): Change {
+  return (record) => {
+    const at = path.lastIndexOf(".");
+    const part = at < 0 ? (record as unknown as Part) : partOf(record, path.slice(0, at));
+    part[path.slice(at + 1)] = value;
+  };
+}
+
+function take(path: string): Change {
+  return (record) => {
+    const at = path.lastIndexOf(".");
+    delete (at < 0 ? (record as unknown as Part) : partOf(record, path.slice(0, at)))[path.slice(at + 1)];
+  };
+}
+
+function issuesOf(json: unknown): readonly Issue[] {
+  const parsed = medicineParse(json);
+  return parsed.ok ? [] : parsed.issues;
+}
+
+/** Code and path of each issue; every one has a sentence. */
+function faults(id: string, change: Change): string[] {
+  return issuesOf(changed(id, change)).map((each) => {
+    expect(issueMessage(each)).toMatch(/^[A-Z"a-z].*[.:]$/);
+    expect(issueMessage(each)).not.toMatch(/undefined|\[object|NaN/);
+    return `${each.code} ${each.path.join(".")}`;
+  });
+}
+
+describe("a figure without its source", () => {
+  it("is refused with the figure named", () => {
+    const json = changed("theophylline", take("products.0.absorptionRate.source"));
+    const issues = issuesOf(json);
+    expect(issues.map((each) => [each.code, each.path])).toEqual([
+      ["record-figure-without-source", ["products", 0, "absorptionRate", "source"]],
+    ]);
+    expect(issueMessage(issues[0]!)).toBe(
+      "The absorption rate of the 12-hour modified-release tablet in the record of theophylline has no source (products[0].absorptionRate): every figure needs one.",
+    );
+  });
+
+  it.each([
+    ["molarMass", "molar mass"],
+    ["kinetics.clearance", "clearance"],
+    ["kinetics.volume", "volume"],
+    ["variability.clearance", "variability of the clearance"],
+    ["variability.residualProportional", "residual variability (proportional)"],
+    ["products.2.concentration", "concentration of the oral solution 80 mg in 15 mL"],
+    ["products.1.strengths.1", "strength of the immediate-release tablet"],
+    ["products.1.lag", "lag of the immediate-release tablet"],
+    ["products.1.bioavailability", "bioavailability of the immediate-release tablet"],
+    ["windows.1", "window"],
+    ["toxicFrom", "toxic limit"],
+    ["population", "population"],
+    ["doseLimits.0", "dose limit"],
+    ["sampling.2", "sampling statement"],
+    ["cautions.3", "caution"],
+  ])("%s: source, empty source and basis", (place, name) => {
+    for (const [missing, change] of [
+      ["source", take(`${place}.source`)],
+      ["source", put(`${place}.source`, "")],
+      ["basis", take(`${place}.basis`)],
+    ] as const) {
+      const issues = issuesOf(changed("theophylline", change));
+      expect(issues.map((each) => each.code)).toEqual(["record-figure-without-source"]);
+      expect(issueMessage(issues[0]!)).toContain(`The ${name} in the record of theophylline has no ${missing} (`);
+    }
+  });
+
+  it("every figure and statement of every record is guarded", () => {
+    let removed = 0;
+    const visit = (value: unknown, path: (string | number)[], found: (string | number)[][]): void => {
+      if (typeof value !== "object" || value === null) return;
+      if ("source" in value && "basis" in value) found.push(path);
+      for (const [key, each] of Object.entries(value))
+        visit(each, [...path, Array.isArray(value) ? Number(key) : key], found);
+    };
+    for (const id of ["theophylline", "lamotrigine", "demoxiline"]) {
+      const places: (string | number)[][] = [];
+      visit(recordById(id), [], places);
+      for (const place of places) {
+        const json = changed(id, take(`${place.join(".")}.source`));
+        expect(issuesOf(json).map((each) => each.code)).toEqual(["record-figure-without-source"]);
+        removed += 1;
+      }
+    }
+    expect(removed).toBeGreaterThan(100);
+  });
+});
+
+describe("across fields", () => {
+  it.each<[string, Change, string[]]>([
+    ["a source that is not listed", put("molarMass.source", "nowhere"), ["record-source-unknown molarMass.source"]],
+    [
+      "a name every object has is no source",
+      put("molarMass.source", "toString"),
+      ["record-source-unknown molarMass.source"],
+    ],
+    [
+      "an invented basis in a real record",
+      put("toxicFrom.basis", "invented"),
+      ["record-basis-invented toxicFrom.basis"],
+    ],
+    ["an unknown basis", put("toxicFrom.basis", "guessed"), ["value-not-listed toxicFrom.basis"]],
+    ["a product twice", put("products.1.id", "tablet-12h"), ["record-duplicate products.1"]],
+    ["a window twice", put("windows.1.id", "10-20"), ["record-duplicate windows.1"]],
+    ["a strength twice", put("products.0.strengths.1.value", 100), ["record-duplicate products.0.strengths.1"]],
+    ["a tablet without strengths", put("products.0.strengths", []), ["record-product-content products.0"]],
+    [
+      "a tablet with a concentration",
+      (r) => put("products.0.concentration", r.products[2]?.concentration)(r),
+      ["record-product-content products.0"],
+    ],
+    ["a liquid without concentration", take("products.2.concentration"), ["record-product-content products.2"]],
+    [
+      "a liquid with strengths",
+      (r) => put("products.2.strengths", r.products[1]?.strengths)(r),
+      ["record-product-content products.2"],
+    ],
+    ["no product", put("products", []), ["value-too-small products"]],
+    ["ka of 0", put("products.0.absorptionRate.value", 0), ["record-range products.0.absorptionRate.value"]],
+    [
+      "ka per hour in another unit",
+      put("products.0.absorptionRate.unit", "h"),
+      ["record-unit products.0.absorptionRate.unit"],
+    ],
+    ["F of 0", put("products.0.bioavailability.value", 0), ["record-range products.0.bioavailability.value"]],
+    ["F above 1", put("products.0.bioavailability.value", 1.01), ["record-range products.0.bioavailability.value"]],
+    ["F in percent", put("products.0.bioavailability.unit", "%"), ["record-unit products.0.bioavailability.unit"]],
+    ["a negative lag", put("products.0.lag.value", -0.1), ["record-range products.0.lag.value"]],
+    ["a strength of 0", put("products.0.strengths.0.value", 0), ["record-range products.0.strengths.0.value"]],
+    ["a strength in grams", put("products.0.strengths.0.unit", "g"), ["record-unit products.0.strengths.0.unit"]],
+    ["a molar mass of 0", put("molarMass.value", 0), ["record-range molarMass.value"]],
+    ["clearance in L", put("kinetics.clearance.unit", "L"), ["record-unit kinetics.clearance.unit"]],
+    ["volume in L/h", put("kinetics.volume.unit", "L/h"), ["record-unit kinetics.volume.unit"]],
+    ["an unknown covariate", put("kinetics.volume.formula", "0.5 * mass"), ["formula-name kinetics.volume.formula"]],
+    [
+      "a formula that does more than arithmetic",
+      put("kinetics.volume.formula", "weight = 2"),
+      ["formula-unreadable kinetics.volume.formula"],
+    ],
+    ["a window upside down", put("windows.0.low.value", 20), ["window-order windows.0"]],
+    ["a window below 0", put("windows.0.low.value", -1), ["window-order windows.0"]],
+    [
+      "an exposure window in mg/L",
+      put("windows.0.quantity", "auc24"),
+      ["window-unit windows.0.low.unit", "window-unit windows.0.high.unit"],
+    ],
+    ["ages upside down", put("population.ageMax", 2), ["record-ages population"]],
+    ["a hidden mark in a name", put("products.0.name", "tablet\u202e"), ["record-name-turns products.0.name"]],
+    ["a variability of 0", put("variability.clearance.value", 0), ["record-range variability.clearance.value"]],
+    ["a field that is not known", put("products.0.colour", "white"), ["field-unknown products.0.colour"]],
+    ["a field that is missing", take("matrix"), ["field-missing matrix"]],
+    ["a number as text", put("toxicFrom.value", "25.1"), ["value-wrong-kind toxicFrom.value"]],
+    ["another format", put("format", "else"), ["value-not-listed format"]],
+    ["another version", put("version", 2), ["value-not-listed version"]],
+    ["another kind of kinetics", put("kinetics.kind", "else"), ["value-not-listed kinetics.kind"]],
+    [
+      "two faults at once",
+      (r) =>
+        [take("matrix"), take("name")].forEach((each) => {
+          each(r);
+        }),
+      ["field-missing name", "field-missing matrix"],
+    ],
+  ])("%s", (_, change, expected) => {
+    expect(faults("theophylline", change)).toEqual(expected);
+  });
+
+  it("an invented medicine says so in its name", () => {
+    expect(faults("demoxiline", put("name", "demoxiline"))).toEqual(["record-invented-name name"]);
+  });
+
+  it("apparent figures hold the bioavailability already", () => {
+    expect(faults("lamotrigine", put("products.0.bioavailability.value", 0.98))).toEqual([
+      "record-range products.0.bioavailability.value",
+    ]);
+  });
+
+  it.each([null, undefined, 1, "text", [], [{}], {}])("%j is no record", (json) => {
+    expect(medicineParse(json).ok).toBe(false);
+  });
+
+  it("returns the record as it was given", () => {
+    const record: MedicineRecord | undefined = recordById("theophylline");
+    expect(medicineParse(record)).toEqual({ ok: true, value: record });
+  });
+});
