@@ -54,7 +54,9 @@ export function analysisClock(value: Case, halfLifeH: number | null): AnalysisCl
     nowH: hours(nowMs),
     fromH: 0,
     toH: hours(untilMs),
-    midnightsH: [...new Set([originMs, ...midnightsBetween(originMs, untilMs, zone), untilMs])].sort((a, b) => a - b).map(hours),
+    midnightsH: [...new Set([originMs, ...midnightsBetween(originMs, untilMs, zone), untilMs])]
+      .sort((a, b) => a - b)
+      .map(hours),
   };
 }
 

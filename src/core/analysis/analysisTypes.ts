@@ -147,7 +147,10 @@ export interface Concern {
   readonly id: string;
   readonly code: string;
   readonly gravity: Gravity;
-  readonly about: { readonly kind: "case" | "patient" | "given" | "level" | "option" | "medicine"; readonly id?: string };
+  readonly about: {
+    readonly kind: "case" | "patient" | "given" | "level" | "option" | "medicine";
+    readonly id?: string;
+  };
   readonly data: Readonly<Record<string, unknown>>;
 }
 

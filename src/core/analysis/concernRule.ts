@@ -19,12 +19,7 @@ export interface ConcernContext {
 /** One rule a file in concerns/; a new one adds its file, one line in caseConcerns.ts and its sentence in core/messages. */
 export type ConcernRule = (context: ConcernContext) => readonly Concern[];
 
-export function concern(
-  code: string,
-  gravity: Gravity,
-  about: Concern["about"],
-  data: Concern["data"] = {},
-): Concern {
+export function concern(code: string, gravity: Gravity, about: Concern["about"], data: Concern["data"] = {}): Concern {
   return { id: about.id === undefined ? code : `${code}:${about.id}`, code, gravity, about, data };
 }
 

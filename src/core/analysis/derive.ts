@@ -1,9 +1,9 @@
 import { type Case, caseFingerprint } from "../case/index.ts";
 import { historyProfile } from "../kinetics/index.ts";
-import type { Analysis, Curve, DoseMark, Model } from "./analysisTypes.ts";
 import { analysisClock } from "./analysisClock.ts";
-import { countedByProduct, laneDoses } from "./caseDoses.ts";
+import type { Analysis, Curve, DoseMark, Model } from "./analysisTypes.ts";
 import { caseConcerns } from "./caseConcerns.ts";
+import { countedByProduct, laneDoses } from "./caseDoses.ts";
 import { curveTimes } from "./curveTimes.ts";
 import { levelResults } from "./levelResults.ts";
 import { modelCourses, modelDisposition } from "./modelCourses.ts";

@@ -43,7 +43,7 @@ export function optionReadings(
 /** The case's window in mg/L, or null when it has none or it is about the AUC. */
 export function concentrationWindow(value: Case): { readonly low: number; readonly high: number } | null {
   const { window } = value;
-  if (!window || window.low.unit !== "mg/L" || window.high.unit !== "mg/L") return null;
+  if (window?.low.unit !== "mg/L" || window.high.unit !== "mg/L") return null;
   return { low: window.low.value, high: window.high.value };
 }
 

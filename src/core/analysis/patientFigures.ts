@@ -96,17 +96,24 @@ function clearance(
       { name: "creatinine", value: mgPerDl, unit: "mg/dL" },
     ],
   );
-  return { ...figure, source: `${figure.source}. Weight: ${clearanceWeightSource.formula} (${clearanceWeightSource.citation})` };
+  return {
+    ...figure,
+    source: `${figure.source}. Weight: ${clearanceWeightSource.formula} (${clearanceWeightSource.citation})`,
+  };
 }
 
 function quantityAsMgPerDl(observation: Observation): number {
-  if (observation.kind !== "serumCreatinine") throw new RangeError(`observation: "${observation.kind}"; allowed serumCreatinine`);
+  if (observation.kind !== "serumCreatinine")
+    throw new RangeError(`observation: "${observation.kind}"; allowed serumCreatinine`);
   return creatinineMgPerDl(observation.quantity);
 }
 
 function entered(observation: Observation | null, unit: "kg" | "mg/dL"): Traced | null {
   if (!observation) return null;
-  const value = observation.kind === "serumCreatinine" ? quantityAsMgPerDl(observation) : quantityConvert(observation.quantity, unit);
+  const value =
+    observation.kind === "serumCreatinine"
+      ? quantityAsMgPerDl(observation)
+      : quantityConvert(observation.quantity, unit);
   return { value, unit, formula: "", inputs: [], source: "entered", basis: "entered" };
 }
 

@@ -32,7 +32,9 @@ export function regimenPattern(value: Case, lines: readonly DoseLine[]): Pattern
   if (repeating.length === 0) return { ok: false, reason: "no-repeat" };
   const ends = repeating.map((line) => doseLineEndMs(line, value.timeZone) ?? Number.POSITIVE_INFINITY);
   const lastEnd = Math.max(...ends);
-  const ongoing = repeating.filter((line, i) => ends[i] === lastEnd || ends[i]! + periodMin(line) * MINUTE_MS > lastEnd);
+  const ongoing = repeating.filter(
+    (line, i) => ends[i] === lastEnd || ends[i]! + periodMin(line) * MINUTE_MS > lastEnd,
+  );
   const period = ongoing.map(periodMin).reduce(leastCommonMultiple);
   if (!Number.isInteger(period) || period > LONGEST_PERIOD_MIN) return { ok: false, reason: "no-common-period" };
 

@@ -1,7 +1,7 @@
+import type { TargetWindow } from "../case/index.ts";
 import type { Issue } from "../result/index.ts";
 import { instantText } from "../time/index.ts";
 import { numberPrint, type Quantity, quantityPrint } from "../units/index.ts";
-import type { TargetWindow } from "../case/index.ts";
 import { issueMessage } from "./issueMessage.ts";
 import { windowQuantityWord } from "./windowWords.ts";
 
@@ -41,8 +41,7 @@ function outsideWindow(data: Data, side: "above" | "below"): ConcernWords {
   const found = side === "above" ? number(data, "most") : number(data, "least");
   const edge = side === "above" ? number(data, "high") : number(data, "low");
   const name = text(data, "quantity") as TargetWindow["quantity"];
-  const words =
-    name === "lowest-and-highest" ? (side === "above" ? "highest" : "lowest") : windowQuantityWord(name);
+  const words = name === "lowest-and-highest" ? (side === "above" ? "highest" : "lowest") : windowQuantityWord(name);
   return {
     title: `Option ${text(data, "option")} settles ${side} the target window`,
     text: `Expected ${words} at steady state ${figure(found)} ${unit}; the window's ${side === "above" ? "upper" : "lower"} edge is ${figure(edge)}.`,
@@ -122,7 +121,9 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
     text: `${OBSERVATION_WORDS[text(data, "kind")] ?? "Value"} ${quantityPrint(data.quantity as Quantity, { style: "print", microgram: "microgram" })}: asked about when entered, and confirmed.`,
   }),
   "flip-flop": (data) => ({
-    title: data.close ? "Absorption and elimination rates lie close together" : "Slower absorption could be slower elimination",
+    title: data.close
+      ? "Absorption and elimination rates lie close together"
+      : "Slower absorption could be slower elimination",
     text: `${text(data, "product")}: the model takes half-life ${hours(number(data, "eliminationHalfLifeH"))} for elimination and ${hours(number(data, "absorptionHalfLifeH"))} for absorption. Elimination of ${hours(number(data, "otherHalfLifeH"))} with volume ${figure(number(data, "otherVolume"))} L gives the same curve; clearance ${figure(number(data, "clearance"))} L per h is the same in both. Levels after this product alone can't tell; an intravenous or immediate-release reference can.`,
   }),
   "level-left-out": (data) => ({

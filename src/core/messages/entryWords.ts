@@ -46,7 +46,7 @@ export const patientWords = {
   figuresNone:
     "Age, sex, height, weight and creatinine give ideal weight, body mass index and creatinine clearance here.",
   missing: (names: readonly string[]) => `Still needed: ${names.join(", ")}.`,
-  bodyMassIndex: "Body mass index",
+  bodyMassIndex: "Body mass index (kg/m²)",
   idealWeight: "Ideal weight (Devine)",
   adjustedWeight: "Adjusted weight",
   creatinineClearance: "Creatinine clearance (Cockcroft–Gault)",

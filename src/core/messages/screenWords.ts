@@ -19,6 +19,7 @@ export const casesWords = {
   storedNone: "No case is stored on this device yet.",
   caseLabel: "case",
   medicine: "medicine",
+  medicineLabel: "Medicine",
   savedWhen: "last saved",
   actions: "actions",
   demoMark: "demo, invented patient",

@@ -14,7 +14,6 @@ export const SUMMARY_TITLES = {
   assumes: "This prediction assumes",
   window: "Target window",
   figures: "Figures, with formula and source",
-  flipFlop: "Two readings of one curve",
   doses: "Doses counted",
   sampling: "Sampling advice of the medicine record",
   limits: "Dose limits of the medicine record",
@@ -82,7 +81,6 @@ export const summaryHeadWords = {
   checkedBy: "independently checked by, date, time",
   footer: (program: string, record: string, fingerprint: string) => `Ebbline ${program} · ${record} · ${fingerprint}`,
   record: (name: string, version: number) => `record “${name}” version ${version}`,
-  source: (id: string, text: string) => `${id}: ${text}`,
   fingerprint: (groups: string) => `fingerprint ${groups}`,
   recompute: (command: string) =>
     `Export the case and run ${command} with its file: it prints every figure of this sheet and the same fingerprint.`,
@@ -108,10 +106,10 @@ export const summaryBannerWords = {
   emptyOption: (name: string) => ({ title: "Nothing to order", text: `${name} has no dose line.` }),
   nothingLeft: (text: string) => ({ title: "A line with no dose to come", text }),
   notMakeable: (text: string) => ({ title: "Cannot be given as written", text }),
-  unchecked: (name: string, unverified: string) => ({
+  unchecked: {
     title: "Unchecked",
-    text: `The record of ${name} is not independently reviewed; ${unverified}. Not an order until checked and signed below.`,
-  }),
+    text: "The medicine record is not independently reviewed. Not an order until checked and signed below.",
+  },
   unverified: (count: number, total: number) => `${count} of ${total} figures unverified`,
 } as const;
 
@@ -193,7 +191,7 @@ export const summaryReadingWords = {
   swing: "Highest over lowest",
   noRepeat: "The option does not repeat, so it has no steady state.",
   noCommonPeriod: "The lines have no common period within two weeks, so no steady state is given.",
-  chanceLeftOut: "One prediction, without its uncertainty: no range and no chance of staying in the window is given.",
+  chanceLeftOut: "One prediction: no range and no chance of staying in the window is given.",
   below: (edge: string) => `Below ${edge}`,
   within: (low: string, high: string) => `Within ${low} to ${high}`,
   above: (edge: string) => `Above ${edge}`,
@@ -204,10 +202,8 @@ export const summaryReadingWords = {
   lag: (product: string) => `Lag before absorption, ${product}`,
   bioavailability: (product: string) => `Bioavailability, ${product}`,
   noModel: "No prediction: something the model needs is missing. See the concerns.",
-  flipFlop: (product: string, elimination: string, absorption: string, other: string, volume: string) =>
-    `${capitalised(product)}: the model takes a half-life of ${elimination} for elimination and ${absorption} for absorption. Elimination of ${other} with a volume of ${volume} draws the same curve, with the same clearance. Levels after this product alone cannot tell which; an intravenous or immediate-release reference can.`,
-  flipFlopShort: (product: string) =>
-    `Slow absorption from the ${product} and slow elimination draw the same curve; clearance is the same in both (see details).`,
+  flipFlop: (product: string, elimination: string, absorption: string) =>
+    `The model takes ${elimination} for elimination and ${absorption} for absorption from the ${product}; the two exchanged draw the same curve with the same clearance (see details).`,
 } as const;
 
 export const summaryLevelWords = {
@@ -224,9 +220,10 @@ export const summaryLevelWords = {
 } as const;
 
 export const summaryNextLevelWords = {
-  draw: (day: string, from: string, to: string) => `${day}, between ${from} and ${to}, before the ${to} dose.`,
-  drawAcross: (from: string, to: string, dose: string) => `Between ${from} and ${to}, before the ${dose} dose.`,
-  because: (steady: string) => `It is the first dose at or after 90 % of steady state (${steady}).`,
+  draw: (day: string, from: string, to: string, steady: string) =>
+    `${day}, between ${from} and ${to}, before the ${to} dose: the first dose at or after 90 % of steady state (${steady}).`,
+  drawAcross: (from: string, to: string, dose: string, steady: string) =>
+    `Between ${from} and ${to}, before the ${dose} dose: the first dose at or after 90 % of steady state (${steady}).`,
   writeTimes: "Write the time of the last dose and of the sample on the request.",
   noOption: "No option is chosen, so no time can be given.",
   noModel: "There is no prediction, so no time can be given.",
@@ -244,15 +241,16 @@ export const summaryAssumptionWords = {
   notReviewed: "not independently reviewed",
   reviewed: (by: string, on: string) => `reviewed by ${by}, ${on}`,
   noDoses: "no dose given before",
-  doses: (counted: number) => `${counted} ${plural(counted, "dose")} taken as listed`,
+  doses: (counted: number, missed: string, late: string) =>
+    [`${counted} ${plural(counted, "dose")} taken as listed`, missed, late].filter((part) => part !== "").join("; "),
   missed: (list: string) => `missed: ${list}`,
   late: (when: string, at: string) => `${when} taken ${at}`,
   lateAll: (list: string) => `late or moved: ${list}`,
   many: (list: string, more: number) => `${list}, and ${more} more (see details)`,
-  kidney: (value: string, formula: string, weight: string) => `kidney function ${value} (${formula}, ${weight} weight)`,
-  kidneyUnknown: "kidney function not recorded",
-  zone: (zone: string) => `clock times in the zone ${zone}`,
-  now: (when: string) => `doses up to the now line (${when}) as given, from it on as proposed`,
+  kidney: (value: string) => `kidney function ${value}`,
+  kidneyBy: (value: string, formula: string, weight: string) => `${value} (${formula}, ${weight} weight)`,
+  now: (when: string, zone: string) =>
+    `doses up to the now line (${when}) as given, from it on as proposed; clock times of ${zone}`,
 } as const;
 
 export const summaryDetailWords = {
@@ -266,7 +264,12 @@ export const summaryDetailWords = {
   bodyMassIndex: "Body mass index",
   creatinineClearance: "Creatinine clearance, Cockcroft–Gault",
   eliminationRate: "Elimination rate",
-  sourceAndBasis: (source: string, basis: string) => `${source}; ${basis}`,
+  numbered: (number: number) => `source ${number}`,
+  marked: (text: string) => `${text} *`,
+  cited: (text: string, number: number) => `${text} (${number})`,
+  markRemark: "(n) source n in the details; * from memory or common practice, unverified.",
+  sourcesRemark: "(n) source n in the details.",
+  sourceAndBasis: (source: string, basis: string) => (source === basis ? source : `${source}; ${basis}`),
   input: (name: string, value: string) => `${name} = ${value}`,
   line: (product: string, amount: string, schedule: string, start: string) =>
     `${product}: ${amount} ${schedule}, from ${start}.`,

@@ -17,8 +17,11 @@ const six = (value: number): string => numberPrint(value, { significant: 6 });
 /** A traced figure as "0.053 * min(weight, idealWeight) with weight = 58 kg …". */
 export function tracedWords(figure: Traced): string {
   const unit = figure.unit === "1" ? "" : ` ${unitSpoken(figure.unit, "screen")}`;
-  const inputs = figure.inputs.map((input) => `${input.name} = ${six(input.value)}${input.unit === "1" ? "" : ` ${unitSpoken(input.unit, "screen")}`}`);
-  const formula = figure.formula === "" ? "" : `${figure.formula}${inputs.length > 0 ? `, with ${inputs.join(", ")}` : ""} = `;
+  const inputs = figure.inputs.map(
+    (input) => `${input.name} = ${six(input.value)}${input.unit === "1" ? "" : ` ${unitSpoken(input.unit, "screen")}`}`,
+  );
+  const formula =
+    figure.formula === "" ? "" : `${figure.formula}${inputs.length > 0 ? `, with ${inputs.join(", ")}` : ""} = `;
   return `${formula}${six(figure.value)}${unit}`;
 }
 
@@ -67,7 +70,12 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
   const { steadyState, span } = option.typical;
   const clock = (hours: number) => instantText(analysis.clock.originMs + hours * 3_600_000, value.timeZone, "dayClock");
   const base = { sources: modelSources(model, option) };
-  const make = (title: string, steps: readonly string[], result: string): WorkingWords => ({ title, steps, result, ...base });
+  const make = (title: string, steps: readonly string[], result: string): WorkingWords => ({
+    title,
+    steps,
+    result,
+    ...base,
+  });
   const settledSteps = () => [
     ...modelSteps(model),
     ...absorptionSteps(model, option),
@@ -93,32 +101,55 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
     case "peak":
       return steadyState && make("Highest at steady state", settledSteps(), `${six(steadyState.peak)} mg/L`);
     case "peakAfterDose":
-      return steadyState && make("Time from the dose to the highest", settledSteps(), `${six(steadyState.peakAfterDoseH)} h`);
+      return (
+        steadyState && make("Time from the dose to the highest", settledSteps(), `${six(steadyState.peakAfterDoseH)} h`)
+      );
     case "lowest":
-      return steadyState && make("Lowest at steady state", settledSteps(), `${six(steadyState.lowest)} mg/L, ${six(steadyState.lowestAfterDoseH)} h after a dose`);
+      return (
+        steadyState &&
+        make(
+          "Lowest at steady state",
+          settledSteps(),
+          `${six(steadyState.lowest)} mg/L, ${six(steadyState.lowestAfterDoseH)} h after a dose`,
+        )
+      );
     case "average":
       return (
         steadyState &&
-        make("Average at steady state", [...exposed(), `average = F·D / (CL · ${six(steadyState.periodH)} h)`], `${six(steadyState.average)} mg/L`)
+        make(
+          "Average at steady state",
+          [...exposed(), `average = F·D / (CL · ${six(steadyState.periodH)} h)`],
+          `${six(steadyState.average)} mg/L`,
+        )
       );
     case "auc24":
       return (
         steadyState &&
-        make("AUC in 24 hours at steady state", [...exposed(), `AUC = average · 24 h = ${six(steadyState.average)} · 24`], `${six(steadyState.auc24)} mg·h/L`)
+        make(
+          "AUC in 24 hours at steady state",
+          [...exposed(), `AUC = average · 24 h = ${six(steadyState.average)} · 24`],
+          `${six(steadyState.auc24)} mg·h/L`,
+        )
       );
     case "halfLife":
-      return make("Half-life of elimination", [...modelSteps(model), `t½ = ln 2 / ke = 0.693147 / ${six(model.eliminationRate.value)}`], `${six(model.halfLife.value)} h`);
+      return make(
+        "Half-life of elimination",
+        [...modelSteps(model), `t½ = ln 2 / ke = 0.693147 / ${six(model.eliminationRate.value)}`],
+        `${six(model.halfLife.value)} h`,
+      );
     case "accumulation":
       return (
         steadyState &&
         make(
           "Accumulation",
-          [...settledSteps(), `AUC over one pattern at steady state / AUC over the first pattern after starting from nothing`],
+          [
+            ...settledSteps(),
+            `AUC over one pattern at steady state / AUC over the first pattern after starting from nothing`,
+          ],
           `${six(steadyState.accumulation)} times`,
         )
       );
     case "timeTo90":
-    case "steady90At":
       return (
         steadyState &&
         make(
@@ -133,17 +164,26 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         )
       );
     case "dailyDose":
-      return steadyState && make("Dose in 24 hours", [`${six(steadyState.dosePerPeriodMg)} mg · 24 / ${six(steadyState.periodH)} h`], `${six(option.typical.dailyDoseMg ?? 0)} mg`);
+      return (
+        steadyState &&
+        make(
+          "Dose in 24 hours",
+          [`${six(steadyState.dosePerPeriodMg)} mg · 24 / ${six(steadyState.periodH)} h`],
+          `${six(option.typical.dailyDoseMg ?? 0)} mg`,
+        )
+      );
     case "spanPeak":
-    case "spanPeakAt":
       return make("Highest over the span", spanSteps(), `${six(span.peak)} mg/L at ${clock(span.timeOfPeakH)}`);
     case "spanLowest":
-    case "spanLowestAt":
       return make("Lowest over the span", spanSteps(), `${six(span.lowest)} mg/L at ${clock(span.timeOfLowestH)}`);
     case "spanAverage":
       return make(
         "Average over the span",
-        [...spanSteps(), `AUC = ${six(span.auc)} mg·h/L by the exact integral between doses`, `average = AUC / ${six(span.toH - span.fromH)} h`],
+        [
+          ...spanSteps(),
+          `AUC = ${six(span.auc)} mg·h/L by the exact integral between doses`,
+          `average = AUC / ${six(span.toH - span.fromH)} h`,
+        ],
         `${six(span.average)} mg/L`,
       );
     case "hoursBelow":
@@ -153,7 +193,10 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         ? null
         : make(
             "Hours below, within and above the window",
-            [...spanSteps(), `window ${six(value.window.low.value)} to ${six(value.window.high.value)} mg/L; the crossings are solved for on each stretch between doses`],
+            [
+              ...spanSteps(),
+              `window ${six(value.window.low.value)} to ${six(value.window.high.value)} mg/L; the crossings are solved for on each stretch between doses`,
+            ],
             `below ${six(span.hoursBelow ?? 0)} h, within ${six(span.hoursWithin)} h, above ${six(span.hoursAbove ?? 0)} h`,
           );
     default:

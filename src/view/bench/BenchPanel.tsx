@@ -36,7 +36,9 @@ export function BenchPanel({ panel, onClose }: { readonly panel: OpenPanel; read
       {panel.kind === "medicine" && <MedicinePanel />}
       {panel.kind === "window" && <WindowEntry onDone={onClose} />}
       {panel.kind === "levels" && <LevelEntry onDone={onClose} />}
-      {panel.kind === "doses" && <DoseEntry lane="given" onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />}
+      {panel.kind === "doses" && (
+        <DoseEntry lane="given" onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
+      )}
       {panel.kind === "option" && (
         <OptionPanel option={panel.option} onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
       )}

@@ -5,8 +5,8 @@ import { benchWords, laneLineWords } from "../../core/messages/index.ts";
 import type { DoseLine } from "../../core/regimen/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { unitSpoken } from "../../core/units/index.ts";
-import { optionStyle } from "../chart/ProfileChart.tsx";
 import { clockScale } from "../chart/clockScale.ts";
+import { optionStyle } from "../chart/ProfileChart.tsx";
 import { Button } from "../ui/Button.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
 import { BenchPanel, type OpenPanel } from "./BenchPanel.tsx";
@@ -17,8 +17,9 @@ import { ClockHead } from "./ClockHead.tsx";
 import { ConcernList } from "./ConcernList.tsx";
 import { DoseLane } from "./DoseLane.tsx";
 import { LaneLines, OptionHead } from "./OptionHead.tsx";
-import { ProfileRow, type ShownUnit } from "./ProfileRow.tsx";
+import { ProfileRow } from "./ProfileRow.tsx";
 import { ReadingsTable } from "./ReadingsTable.tsx";
+import type { ShownUnit } from "./shownUnit.ts";
 import { useBenchKeys } from "./useBenchKeys.ts";
 import { useElementWidth } from "./useElementWidth.ts";
 
@@ -50,7 +51,8 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const analysis = open?.analysis.result ?? null;
   const value = open ? (open.preview ?? open.value) : null;
   const whole = analysis ? { fromH: analysis.clock.fromH, toH: analysis.clock.toH } : null;
-  const span = whole && analysis ? (chosenSpan ? spanWithin(whole, chosenSpan) : spanStart(whole, analysis.clock.nowH)) : null;
+  const span =
+    whole && analysis ? (chosenSpan ? spanWithin(whole, chosenSpan) : spanStart(whole, analysis.clock.nowH)) : null;
 
   const lanes = useMemo(() => {
     if (!value || !analysis) return null;
@@ -72,8 +74,14 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const lineTexts = (lines: readonly DoseLine[]) =>
     lines.map((line) => ({ id: line.id, text: laneLineWords(line, value.timeZone) }));
   const clock = span ? clockScale(span.fromH, span.toH, 0, width - RIGHT) : null;
-  const nowX = clock && analysis && span && analysis.clock.nowH >= span.fromH && analysis.clock.nowH <= span.toH ? clock.x(analysis.clock.nowH) : null;
-  const midnightsX = clock && analysis && span ? analysis.clock.midnightsH.filter((hours) => hours > span.fromH && hours < span.toH).map(clock.x) : [];
+  const nowX =
+    clock && analysis && span && analysis.clock.nowH >= span.fromH && analysis.clock.nowH <= span.toH
+      ? clock.x(analysis.clock.nowH)
+      : null;
+  const midnightsX =
+    clock && analysis && span
+      ? analysis.clock.midnightsH.filter((hours) => hours > span.fromH && hours < span.toH).map(clock.x)
+      : [];
   const zoom = (factor: number) => {
     if (whole && span && analysis) {
       const middle = nowX !== null ? analysis.clock.nowH : (span.fromH + span.toH) / 2;
@@ -217,8 +225,14 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
               </div>
               <div className="bench-foot">
                 {nowX !== null && (
-                  <button type="button" className="bench-now" style={{ left: nowX }} onClick={() => setPanel({ kind: "case" })}>
-                    now, {instantText(analysis.clock.originMs + analysis.clock.nowH * 3_600_000, value.timeZone, "dayClock")}
+                  <button
+                    type="button"
+                    className="bench-now"
+                    style={{ left: nowX }}
+                    onClick={() => setPanel({ kind: "case" })}
+                  >
+                    now,{" "}
+                    {instantText(analysis.clock.originMs + analysis.clock.nowH * 3_600_000, value.timeZone, "dayClock")}
                   </button>
                 )}
               </div>

@@ -1,9 +1,7 @@
 import type { ReactNode } from "react";
 import type { Analysis } from "../../core/analysis/index.ts";
-import { benchWords } from "../../core/messages/index.ts";
-import { editLabel } from "../../core/messages/index.ts";
-import { windowQuantityWord } from "../../core/messages/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
+import { benchWords, editLabel, windowQuantityWord } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, quantityPrint } from "../../core/units/index.ts";
 import type { OpenCase } from "../../shell/store/workbenchState.ts";
@@ -34,7 +32,9 @@ export function CaseStrip({ open, analysis, onPanel, onPrint }: CaseStripProps) 
   const weight = analysis?.patient.weight;
   const kidney = analysis?.patient.creatinineClearance;
   const { window } = value;
-  const productIds = [...new Set([...value.given, ...value.options.flatMap((option) => option.lines)].map((line) => line.product))];
+  const productIds = [
+    ...new Set([...value.given, ...value.options.flatMap((option) => option.lines)].map((line) => line.product)),
+  ];
   const products = productIds.map((id) => productOf(value.medicine, id).name);
   return (
     <header className="strip">
@@ -122,7 +122,12 @@ function SavingWords({ open }: { readonly open: OpenCase }) {
   const at = saving.savedAt === null ? "" : ` ${instantText(saving.savedAt, open.value.timeZone, "clock")}`;
   const words = `${benchWords.savedStates[saving.status]}${saving.status === "saved" ? at : ""}`;
   return (
-    <span className={`strip-saving strip-saving-${saving.status}`} role="status" data-saving={saving.status} data-revision={open.revision}>
+    <span
+      className={`strip-saving strip-saving-${saving.status}`}
+      role="status"
+      data-saving={saving.status}
+      data-revision={open.revision}
+    >
       {words}
     </span>
   );

@@ -25,12 +25,27 @@ export function ClockHead({ scale, width, midnightsH, nowX, originMs, zone }: Cl
     return [{ x: scale.x(from), day: words.slice(0, 2).join(" "), month: words.slice(2).join(" "), midnight }];
   });
   return (
-    <svg className="clock-head" width={width} height={CLOCK_HEAD_HEIGHT} viewBox={`0 0 ${width} ${CLOCK_HEAD_HEIGHT}`} aria-hidden="true">
-      {nowX !== null && <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height={CLOCK_HEAD_HEIGHT} />}
+    <svg
+      className="clock-head"
+      width={width}
+      height={CLOCK_HEAD_HEIGHT}
+      viewBox={`0 0 ${width} ${CLOCK_HEAD_HEIGHT}`}
+      aria-hidden="true"
+    >
+      {nowX !== null && (
+        <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height={CLOCK_HEAD_HEIGHT} />
+      )}
       {midnightsH
         .filter((midnight) => midnight > scale.fromH && midnight < scale.toH)
         .map((midnight) => (
-          <line key={midnight} className="lane-day" x1={scale.x(midnight)} x2={scale.x(midnight)} y1={0} y2={CLOCK_HEAD_HEIGHT} />
+          <line
+            key={midnight}
+            className="lane-day"
+            x1={scale.x(midnight)}
+            x2={scale.x(midnight)}
+            y1={0}
+            y2={CLOCK_HEAD_HEIGHT}
+          />
         ))}
       {days.map((day) => (
         <g key={day.midnight}>

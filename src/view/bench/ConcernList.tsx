@@ -1,6 +1,5 @@
 import type { Concern } from "../../core/analysis/index.ts";
-import { benchWords } from "../../core/messages/index.ts";
-import { concernMessage, GRAVITY_WORDS } from "../../core/messages/index.ts";
+import { benchWords, concernMessage, GRAVITY_WORDS } from "../../core/messages/index.ts";
 import { GravityMark } from "../ui/GravityMark.tsx";
 import "./ConcernList.css";
 

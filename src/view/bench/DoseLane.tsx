@@ -2,13 +2,13 @@ import { type ReactNode, useMemo, useState } from "react";
 import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import type { DoseLine } from "../../core/regimen/index.ts";
-import { type CurveStyle } from "../chart/ProfileChart.tsx";
 import type { ClockScale } from "../chart/clockScale.ts";
+import type { CurveStyle } from "../chart/ProfileChart.tsx";
 import { DoseToken } from "./DoseToken.tsx";
 import "./DoseLane.css";
 import { lineReach } from "./gestures/lineReach.ts";
-import { laneTokens } from "./laneTokens.ts";
 import { LineEnd } from "./LineEnd.tsx";
+import { laneTokens } from "./laneTokens.ts";
 import { TokenBar } from "./TokenBar.tsx";
 
 interface DoseLaneProps {
@@ -29,7 +29,6 @@ interface DoseLaneProps {
   readonly head: ReactNode;
 }
 
-export const LANE_HEIGHT = 84;
 const BASELINE = 52;
 
 /** A row of doses on the shared clock: tokens whose height is the dose, missed ones hollow. */
@@ -47,12 +46,12 @@ export function DoseLane(props: DoseLaneProps) {
     <section className="lane" aria-label={props.name}>
       <div className="lane-head">{props.head}</div>
       <div className="lane-body">
-        <svg className="lane-row" width={width} height={LANE_HEIGHT} viewBox={`0 0 ${width} ${LANE_HEIGHT}`} role="group" aria-label={`${props.name}: doses`}>
-          {nowX !== null && <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height={LANE_HEIGHT} />}
+        <svg className="lane-row" width={width} role="group" aria-label={`${props.name}: doses`}>
+          {nowX !== null && <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height="100%" />}
           {props.midnightsX.map((x) => (
-            <line key={x} className="lane-day" x1={x} x2={x} y1={0} y2={LANE_HEIGHT} />
+            <line key={x} className="lane-day" x1={x} x2={x} y1={0} y2="100%" />
           ))}
-          {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2={LANE_HEIGHT} />}
+          {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2="100%" />}
           {tokens.map((token) => (
             <DoseToken
               key={token.key}
@@ -69,19 +68,20 @@ export function DoseLane(props: DoseLaneProps) {
               onOpenLine={() => props.onOpenLine(token.mark.lineId)}
             />
           ))}
-          {!props.isReadOnly && ends.map((end) => (
-            <LineEnd
-              key={end.line.id}
-              lane={props.lane}
-              line={end.line}
-              reach={end.reach}
-              lastH={end.lastH}
-              scale={scale}
-              baseline={BASELINE}
-              style={props.style}
-              onPress={() => props.onOpenLine(end.line.id)}
-            />
-          ))}
+          {!props.isReadOnly &&
+            ends.map((end) => (
+              <LineEnd
+                key={end.line.id}
+                lane={props.lane}
+                line={end.line}
+                reach={end.reach}
+                lastH={end.lastH}
+                scale={scale}
+                baseline={BASELINE}
+                style={props.style}
+                onPress={() => props.onOpenLine(end.line.id)}
+              />
+            ))}
         </svg>
         {chosen && (
           <TokenBar

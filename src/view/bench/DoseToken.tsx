@@ -3,8 +3,8 @@ import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { instantIso, instantText } from "../../core/time/index.ts";
 import { quantityPrint } from "../../core/units/index.ts";
-import type { CurveStyle } from "../chart/ProfileChart.tsx";
 import type { ClockScale } from "../chart/clockScale.ts";
+import type { CurveStyle } from "../chart/ProfileChart.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
 import { tokenNudge, tokenSnap } from "./gestures/tokenSnap.ts";
 import { useTokenDrag } from "./gestures/useTokenDrag.ts";
@@ -91,7 +91,6 @@ export function DoseToken(props: DoseTokenProps) {
   const isHollow = mark.status === "missed" || mark.status === "after-now" || mark.status === "before-now";
   const y = baseline - token.height;
   return (
-    // biome-ignore lint/a11y/useSemanticElements: a slider inside SVG has no HTML element of its own
     <g
       className={`token token-${props.style}${isHollow ? " token-hollow" : ""}${props.isSelected ? " token-selected" : ""}`}
       role="slider"
@@ -110,7 +109,13 @@ export function DoseToken(props: DoseTokenProps) {
       <rect className="token-hit" x={token.x - HIT / 2} y={baseline - 40} width={HIT} height={62} />
       <rect className="token-body" x={token.x - WIDTH / 2} y={y} width={WIDTH} height={token.height} rx={WIDTH / 2.4} />
       {mark.status === "late" || mark.status === "moved" ? (
-        <line className="token-scheduled" x1={scale.x(mark.scheduledH)} x2={token.x} y1={baseline + 4} y2={baseline + 4} />
+        <line
+          className="token-scheduled"
+          x1={scale.x(mark.scheduledH)}
+          x2={token.x}
+          y1={baseline + 4}
+          y2={baseline + 4}
+        />
       ) : null}
       <text className="token-label" x={token.x} y={baseline + 19}>
         {token.label}

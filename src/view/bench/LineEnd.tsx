@@ -53,7 +53,6 @@ export function LineEnd({ lane, line, reach, lastH, scale, baseline, style, onPr
   const words = "days" in reach ? `${reach.days} days` : `${reach.count} doses`;
   const x = scale.x(lastH) + OFFSET;
   return (
-    // biome-ignore lint/a11y/useSemanticElements: a slider inside SVG has no HTML element of its own
     <g
       className={`line-end token-${style}`}
       role="slider"

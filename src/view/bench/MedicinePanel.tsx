@@ -1,5 +1,5 @@
-import { tracedWords } from "../../core/messages/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
+import { tracedWords } from "../../core/messages/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
 import { ChoiceField } from "../ui/ChoiceField.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
@@ -34,7 +34,9 @@ export function MedicinePanel() {
     <div className="medicine-panel">
       <p>
         {value.medicine.name}, record version {value.medicine.recordVersion},{" "}
-        {value.medicine.review.status === "reviewed" ? `reviewed by ${value.medicine.review.by}` : "not independently reviewed"}
+        {value.medicine.review.status === "reviewed"
+          ? `reviewed by ${value.medicine.review.by}`
+          : "not independently reviewed"}
       </p>
       {hasLines || open.role === "reader" ? (
         <p>The medicine can be changed only while the case has no dose lines.</p>
@@ -70,7 +72,8 @@ export function MedicinePanel() {
               Assumed: elimination {h(assumed.eliminationHalfLife)}, absorption {h(assumed.absorptionHalfLife)}, volume{" "}
               {numberPrint(assumed.volume, { significant: 3 })} L. The other way round: elimination{" "}
               {h(alternative.eliminationHalfLife)}, absorption {h(alternative.absorptionHalfLife)}, volume{" "}
-              {numberPrint(alternative.volume, { significant: 3 })} L. Clearance {numberPrint(assumed.clearance, { significant: 3 })} L/h in both.
+              {numberPrint(alternative.volume, { significant: 3 })} L. Clearance{" "}
+              {numberPrint(assumed.clearance, { significant: 3 })} L/h in both.
             </p>
           </section>
         );

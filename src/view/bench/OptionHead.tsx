@@ -14,11 +14,21 @@ interface OptionHeadProps {
 export function OptionHead({ option, index, lines, onOpenLine, onMenu }: OptionHeadProps) {
   return (
     <>
-      <button type="button" className="lane-line lane-title" onClick={onMenu} aria-label={`Option ${option.id}${option.chosen ? ", chosen" : ""}: open`}>
+      <button
+        type="button"
+        className="lane-line lane-title"
+        onClick={onMenu}
+        aria-label={`Option ${option.id}${option.chosen ? ", chosen" : ""}: open`}
+      >
         <OptionBadge id={option.id} index={index} isChosen={option.chosen} />
         <span>
           {option.label || (option.chosen ? "" : "")}
-          {option.chosen ? <span className="lane-chosen">{option.label ? " · " : ""}{benchWords.chosen}</span> : null}
+          {option.chosen ? (
+            <span className="lane-chosen">
+              {option.label ? " · " : ""}
+              {benchWords.chosen}
+            </span>
+          ) : null}
         </span>
       </button>
       <LaneLines lines={lines} onOpenLine={onOpenLine} onAdd={onMenu} />

@@ -3,8 +3,8 @@ import type { Case } from "../../core/case/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import type { CurveStyle } from "../chart/ProfileChart.tsx";
 import type { ProfileScene } from "../chart/profileScene.ts";
-import type { ShownUnit } from "./ProfileRow.tsx";
 import { curvesAt, readoutLines } from "./readoutLines.ts";
+import type { ShownUnit } from "./shownUnit.ts";
 
 interface ProfileReadoutProps {
   readonly value: Case;
@@ -31,7 +31,7 @@ export function ProfileReadout({ value, analysis, scene, hours, unit, styleOf }:
   return (
     <g className="readout" aria-hidden="true" pointerEvents="none">
       <line className="readout-line" x1={x} x2={x} y1={scene.plot.top} y2={scene.plot.bottom} />
-      {curvesAt(value, analysis, hours).map((option) => {
+      {curvesAt(analysis, hours).map((option) => {
         const found = concentrationAt(analysis, option, [hours]);
         return found ? (
           <circle

@@ -8,9 +8,8 @@ import { profileScene } from "../chart/profileScene.ts";
 import type { BenchSpan } from "./benchSpan.ts";
 import { ProfileReadout } from "./ProfileReadout.tsx";
 import { readoutLines } from "./readoutLines.ts";
+import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 import "./ProfileRow.css";
-
-export type ShownUnit = "mg/L" | "umol/L";
 
 interface ProfileRowProps {
   readonly value: Case;
@@ -24,11 +23,6 @@ interface ProfileRowProps {
 
 export const PROFILE_HEIGHT = 430;
 const MARGIN = { top: 14, bottom: 28, left: 0 };
-
-/** The factor from mg/L to the unit shown. */
-export function unitFactor(value: Case, unit: ShownUnit): number {
-  return unit === "mg/L" ? 1 : 1000 / value.medicine.molarMass.value;
-}
 
 /** The concentration-time curve on the shared clock, with a readout that follows the pointer or the arrow keys. */
 export function ProfileRow({ value, analysis, span, width, right, scale, unit }: ProfileRowProps) {
@@ -50,7 +44,9 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
       window: window && isConcentration ? { low: window.low.value, high: window.high.value } : null,
       curves: [
         ...(analysis.givenCurve ? [{ id: "given", name: "", ...analysis.givenCurve }] : []),
-        ...analysis.options.flatMap((option) => (option.curve ? [{ id: option.id, name: option.id, ...option.curve }] : [])),
+        ...analysis.options.flatMap((option) =>
+          option.curve ? [{ id: option.id, name: option.id, ...option.curve }] : [],
+        ),
       ],
       levels: analysis.levels.map((level) => ({
         id: level.id,
@@ -92,7 +88,6 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
     id === "given" ? ("given" as const) : optionStyle(value.options.findIndex((option) => option.id === id));
   const shownH = readoutH ?? clamp(analysis.clock.nowH);
   return (
-    // biome-ignore lint/a11y/useSemanticElements: a position on the clock, not a form range
     <div
       className="profile-row"
       role="slider"
@@ -106,14 +101,28 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
       onPointerDown={onPointerMove}
       onPointerLeave={() => setReadoutH(null)}
       onFocus={(event) => {
-        if (event.currentTarget.matches(":focus-visible")) setReadoutH((current) => current ?? clamp(analysis.clock.nowH));
+        if (event.currentTarget.matches(":focus-visible"))
+          setReadoutH((current) => current ?? clamp(analysis.clock.nowH));
       }}
       onBlur={() => setReadoutH(null)}
       onKeyDown={onKeyDown}
     >
-      <ProfileChart scene={scene} styleOf={style} chosen={chosen} mode="screen" title={profileTitle(value, analysis, unit)}>
+      <ProfileChart
+        scene={scene}
+        styleOf={style}
+        chosen={chosen}
+        mode="screen"
+        title={profileTitle(value, analysis, unit)}
+      >
         {readoutH !== null && (
-          <ProfileReadout value={value} analysis={analysis} scene={scene} hours={readoutH} unit={unit} styleOf={style} />
+          <ProfileReadout
+            value={value}
+            analysis={analysis}
+            scene={scene}
+            hours={readoutH}
+            unit={unit}
+            styleOf={style}
+          />
         )}
       </ProfileChart>
     </div>
@@ -126,7 +135,9 @@ function profileTitle(value: Case, analysis: Analysis, unit: ShownUnit): string 
     .flatMap((option) => {
       const settled = option.typical?.steadyState;
       return settled
-        ? [`option ${option.id} settles between ${numberPrint(settled.lowest, { significant: 3 })} and ${numberPrint(settled.peak, { significant: 3 })} mg/L`]
+        ? [
+            `option ${option.id} settles between ${numberPrint(settled.lowest, { significant: 3 })} and ${numberPrint(settled.peak, { significant: 3 })} mg/L`,
+          ]
         : [];
     })
     .join(", ");

@@ -2,7 +2,7 @@ import { useMemo } from "react";
 import type { Analysis } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { OptionBadge } from "./OptionBadge.tsx";
-import type { ShownUnit } from "./ProfileRow.tsx";
+import type { ShownUnit } from "./shownUnit.ts";
 import "./ReadingsTable.css";
 import { readingsGroups } from "./readingsRows.ts";
 
@@ -44,8 +44,13 @@ export function ReadingsTable({ value, analysis, unit, onWorking }: ReadingsTabl
                     {cell === null ? (
                       <span className="readings-none">none</span>
                     ) : (
-                      <button type="button" className="readings-cell" onClick={() => onWorking(row.id, analysis.options[i]!.id)}>
-                        {cell}
+                      <button
+                        type="button"
+                        className="readings-cell"
+                        onClick={() => onWorking(row.id, analysis.options[i]!.id)}
+                      >
+                        {cell.text}
+                        {cell.sub && <span className="readings-sub">{cell.sub}</span>}
                       </button>
                     )}
                   </td>

@@ -41,7 +41,9 @@ export function TokenBar(props: TokenBarProps) {
               <Button onPress={() => actions.step(1)}>More</Button>
             </>
           )}
-          <Button onPress={actions.toggleMissed}>{mark.status === "missed" ? "It was taken" : lane === "given" ? "Missed" : "Leave out"}</Button>
+          <Button onPress={actions.toggleMissed}>
+            {mark.status === "missed" ? "It was taken" : lane === "given" ? "Missed" : "Leave out"}
+          </Button>
           <Button onPress={props.onOpenLine}>Edit the line</Button>
         </div>
       )}

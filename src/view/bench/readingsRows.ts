@@ -1,14 +1,21 @@
 import type { Analysis, OptionResult } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
+import { benchWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
-import { type ShownUnit, unitFactor } from "./ProfileRow.tsx";
+import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 
 /** One row of the readings column: a name and one printed value an option; null where the option has none. */
 export interface ReadingsRow {
   readonly id: string;
   readonly name: string;
-  readonly cells: readonly (string | null)[];
+  readonly cells: readonly (ReadingCell | null)[];
+}
+
+export interface ReadingCell {
+  readonly text: string;
+  /** Said under it, smaller: when. */
+  readonly sub?: string;
 }
 
 export interface ReadingsGroup {
@@ -26,20 +33,33 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
   const exposure = (mgH: number) => `${three(mgH * factor)} ${unit === "mg/L" ? "mg·h/L" : "micromol·h/L"}`;
   const hours = (h: number) => `${numberPrint(h, { decimals: 1 })} h`;
   const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
-  const row = (id: string, name: string, of: (option: OptionResult) => string | null | undefined): ReadingsRow => ({
+  const row = (
+    id: string,
+    name: string,
+    of: (option: OptionResult) => string | ReadingCell | null | undefined,
+  ): ReadingsRow => ({
     id,
     name,
-    cells: analysis.options.map((option) => of(option) ?? null),
+    cells: analysis.options.map((option) => {
+      const found = of(option) ?? null;
+      return typeof found === "string" ? { text: found } : found;
+    }),
   });
-  const settled = (name: string, id: string, of: (s: NonNullable<NonNullable<OptionResult["typical"]>["steadyState"]>) => string) =>
-    row(id, name, (option) => option.typical?.steadyState && of(option.typical.steadyState));
-  const span = (name: string, id: string, of: (s: NonNullable<OptionResult["typical"]>["span"]) => string | null) =>
-    row(id, name, (option) => option.typical && of(option.typical.span));
+  const settled = (
+    name: string,
+    id: string,
+    of: (s: NonNullable<NonNullable<OptionResult["typical"]>["steadyState"]>) => string | ReadingCell,
+  ) => row(id, name, (option) => option.typical?.steadyState && of(option.typical.steadyState));
+  const span = (
+    name: string,
+    id: string,
+    of: (s: NonNullable<OptionResult["typical"]>["span"]) => string | ReadingCell | null,
+  ) => row(id, name, (option) => option.typical && of(option.typical.span));
   const inHours = (h: number | null) => (h === null ? null : hours(h));
   return [
     {
       id: "steady",
-      head: "Readings at steady state, typical patient",
+      head: benchWords.steadyHead,
       rows: [
         settled("Highest (Cmax)", "peak", (s) => concentration(s.peak)),
         settled("after the dose (Tmax)", "peakAfterDose", (s) => hours(s.peakAfterDoseH)),
@@ -48,10 +68,14 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
         settled("AUC in 24 h", "auc24", (s) => exposure(s.auc24)),
         row("halfLife", "Half-life", (option) => option.typical && hours(option.typical.halfLifeH)),
         settled("Accumulation", "accumulation", (s) => `${three(s.accumulation)} times`),
-        settled("90 % steady after", "timeTo90", (s) => hours(s.timeTo90H)),
-        settled("90 % steady from", "steady90At", (s) => clock(s.steady90AtH)),
+        settled("90 % steady after", "timeTo90", (s) => ({
+          text: hours(s.timeTo90H),
+          sub: `from ${clock(s.steady90AtH)}`,
+        })),
         row("dailyDose", "Dose in 24 h", (option) =>
-          option.typical?.dailyDoseMg === null || option.typical === null ? null : `${three(option.typical.dailyDoseMg)} mg`,
+          option.typical?.dailyDoseMg === null || option.typical === null
+            ? null
+            : `${three(option.typical.dailyDoseMg)} mg`,
         ),
       ],
     },
@@ -59,10 +83,8 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
       id: "span",
       head: `${clock(analysis.clock.nowH)} to ${clock(analysis.clock.toH)}, ${numberPrint(analysis.clock.toH - analysis.clock.nowH, { decimals: 0 })} h`,
       rows: [
-        span("Highest", "spanPeak", (s) => concentration(s.peak)),
-        span("at", "spanPeakAt", (s) => clock(s.timeOfPeakH)),
-        span("Lowest", "spanLowest", (s) => concentration(s.lowest)),
-        span("at", "spanLowestAt", (s) => clock(s.timeOfLowestH)),
+        span("Highest", "spanPeak", (s) => ({ text: concentration(s.peak), sub: clock(s.timeOfPeakH) })),
+        span("Lowest", "spanLowest", (s) => ({ text: concentration(s.lowest), sub: clock(s.timeOfLowestH) })),
         span("Average", "spanAverage", (s) => concentration(s.average)),
         span("Below the window", "hoursBelow", (s) => inHours(s.hoursBelow)),
         span("Within the window", "hoursWithin", (s) => inHours(s.hoursWithin)),

@@ -1,10 +1,10 @@
 import { type Analysis, concentrationAt, hoursSinceDose } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
-import { type ShownUnit, unitFactor } from "./ProfileRow.tsx";
+import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 
 /** Which curves exist at an instant: the doses given up to the now line, the options from it on. */
-export function curvesAt(value: Case, analysis: Analysis, hours: number): readonly (string | null)[] {
+export function curvesAt(analysis: Analysis, hours: number): readonly (string | null)[] {
   const options = analysis.options.filter((option) => option.curve !== null).map((option) => option.id);
   return hours < analysis.clock.nowH || options.length === 0 ? [null] : options;
 }
@@ -12,7 +12,7 @@ export function curvesAt(value: Case, analysis: Analysis, hours: number): readon
 /** What the readout says under its clock time: each curve's exact value and the hours since its last dose. */
 export function readoutLines(value: Case, analysis: Analysis, hours: number, unit: ShownUnit): string[] {
   const factor = unitFactor(value, unit);
-  return curvesAt(value, analysis, hours).flatMap((option) => {
+  return curvesAt(analysis, hours).flatMap((option) => {
     const found = concentrationAt(analysis, option, [hours]);
     if (!found) return [];
     const since = hoursSinceDose(analysis, option, hours);

@@ -13,7 +13,10 @@ export function useTokenActions(value: Case, lane: string, mark: DoseMark, origi
   return {
     moveTo: (ms: number) => edit("doseMove", { ...address, at: instantIso(Math.round(ms), value.timeZone) }),
     moveByMinutes: (minutes: number) =>
-      edit("doseMove", { ...address, at: instantIso(Math.round(originMs + mark.atH * 3_600_000 + minutes * 60_000), value.timeZone) }),
+      edit("doseMove", {
+        ...address,
+        at: instantIso(Math.round(originMs + mark.atH * 3_600_000 + minutes * 60_000), value.timeZone),
+      }),
     toggleMissed: () => edit("doseMark", { ...address, status: mark.status === "missed" ? "taken" : "missed" }),
     /** The next amount the product's strengths allow, up or down. */
     step: (direction: -1 | 1) => {
@@ -28,7 +31,10 @@ export function useTokenActions(value: Case, lane: string, mark: DoseMark, origi
       );
       const next = direction > 0 ? steps.up : steps.down;
       if (next === null) return;
-      const amount = mark.amount.unit === "mL" ? mark.amount : { value: quantityConvert({ value: next, unit: "mg" }, mark.amount.unit), unit: mark.amount.unit };
+      const amount =
+        mark.amount.unit === "mL"
+          ? mark.amount
+          : { value: quantityConvert({ value: next, unit: "mg" }, mark.amount.unit), unit: mark.amount.unit };
       edit("doseScale", lane === "given" ? { ...address, amount } : { lane, lineId: mark.lineId, amount });
     },
     remove: () => edit("lineRemove", { lane, id: mark.lineId }),

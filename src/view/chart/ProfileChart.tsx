@@ -157,13 +157,7 @@ function NowLine({
 }) {
   return (
     <g>
-      <line
-        className="profile-now"
-        x1={x}
-        x2={x}
-        y1={labels ? 2 : 0}
-        y2={labels ? scene.plot.bottom : scene.height}
-      />
+      <line className="profile-now" x1={x} x2={x} y1={labels ? 2 : 0} y2={labels ? scene.plot.bottom : scene.height} />
       {labels && (
         <>
           <text className="profile-tick profile-now-before" x={x - 7} y={12}>
@@ -192,9 +186,15 @@ function LevelMark({ level, right }: { level: ProfileScene["levels"][number]; ri
       {level.excluded ? (
         <circle className="profile-hollow" cx={level.x} cy={level.y} r={ARM} />
       ) : level.belowLimit ? (
-        <path className="profile-plus" d={`M${level.x - ARM} ${level.y}h${2 * ARM}m${-ARM} 0v${2 * ARM}l-4 -5m4 5l4 -5`} />
+        <path
+          className="profile-plus"
+          d={`M${level.x - ARM} ${level.y}h${2 * ARM}m${-ARM} 0v${2 * ARM}l-4 -5m4 5l4 -5`}
+        />
       ) : (
-        <path className="profile-plus" d={`M${level.x - ARM} ${level.y}h${2 * ARM}M${level.x} ${level.y - ARM}v${2 * ARM}`} />
+        <path
+          className="profile-plus"
+          d={`M${level.x - ARM} ${level.y}h${2 * ARM}M${level.x} ${level.y - ARM}v${2 * ARM}`}
+        />
       )}
       <text
         className={atRight ? "profile-level-value profile-level-value-left" : "profile-level-value"}

@@ -51,7 +51,12 @@ export interface ProfileScene {
   readonly nowX: number | null;
   readonly midnights: readonly { readonly hours: number; readonly x: number }[];
   readonly hourTicks: readonly ClockTick[];
-  readonly window: { readonly top: number; readonly bottom: number; readonly low: number; readonly high: number } | null;
+  readonly window: {
+    readonly top: number;
+    readonly bottom: number;
+    readonly low: number;
+    readonly high: number;
+  } | null;
   readonly curves: readonly {
     readonly id: string;
     readonly name: string;
@@ -78,7 +83,8 @@ function highestShown(input: ProfileInput): number {
   let highest = input.window ? input.window.high : 0;
   for (const curve of input.curves) {
     for (let i = 0; i < curve.timesH.length; i++) {
-      if (curve.timesH[i]! >= input.fromH && curve.timesH[i]! <= input.toH) highest = Math.max(highest, curve.values[i]!);
+      if (curve.timesH[i]! >= input.fromH && curve.timesH[i]! <= input.toH)
+        highest = Math.max(highest, curve.values[i]!);
     }
   }
   for (const level of input.levels) {

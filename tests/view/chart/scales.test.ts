@@ -17,7 +17,15 @@ describe("hourTicks", () => {
     const day = clockScale(0, 24, 0, 1200);
     expect(hourTicks(day, [0, 24], 46).map((tick) => tick.label)).toHaveLength(23);
     const week = clockScale(0, 168, 0, 700);
-    expect(hourTicks(week, [0, 24, 48, 72, 96, 120, 144, 168], 46).map((tick) => tick.label)).toEqual(["12", "12", "12", "12", "12", "12", "12"]);
+    expect(hourTicks(week, [0, 24, 48, 72, 96, 120, 144, 168], 46).map((tick) => tick.label)).toEqual([
+      "12",
+      "12",
+      "12",
+      "12",
+      "12",
+      "12",
+      "12",
+    ]);
     expect(hourTicks(clockScale(0, 1000, 0, 300), [0], 46)).toEqual([]);
   });
 

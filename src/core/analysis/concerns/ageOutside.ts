@@ -8,12 +8,17 @@ export const ageOutside: ConcernRule = ({ case: { patient, medicine } }) => {
   const outside = (ageMin !== undefined && age < ageMin) || (ageMax !== undefined && age > ageMax);
   return outside
     ? [
-        concern("age-outside-population", age < 18 ? "stop" : "check", { kind: "patient" }, {
-          age,
-          ageMin: ageMin ?? null,
-          ageMax: ageMax ?? null,
-          population: medicine.population.text,
-        }),
+        concern(
+          "age-outside-population",
+          age < 18 ? "stop" : "check",
+          { kind: "patient" },
+          {
+            age,
+            ageMin: ageMin ?? null,
+            ageMax: ageMax ?? null,
+            population: medicine.population.text,
+          },
+        ),
       ]
     : [];
 };

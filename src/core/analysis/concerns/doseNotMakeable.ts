@@ -13,13 +13,18 @@ export const doseNotMakeable: ConcernRule = ({ case: value }) =>
       return tabletsFor(mg.value, strengths, product.divisible)
         ? []
         : [
-            concern("dose-not-makeable", "check", { kind: "option", id: `${option.id}/${line.id}` }, {
-              option: option.id,
-              amountMg: mg.value,
-              product: product.name,
-              strengths,
-              divisible: product.divisible,
-            }),
+            concern(
+              "dose-not-makeable",
+              "check",
+              { kind: "option", id: `${option.id}/${line.id}` },
+              {
+                option: option.id,
+                amountMg: mg.value,
+                product: product.name,
+                strengths,
+                divisible: product.divisible,
+              },
+            ),
           ];
     }),
   );

@@ -7,7 +7,9 @@ export const dosesAfterNow: ConcernRule = ({ given, options }) => {
     ...(late > 0 ? [concern("given-after-now", "check", { kind: "given" }, { count: late })] : []),
     ...options.flatMap((option) => {
       const early = option.doses.filter((mark) => mark.status === "before-now").length;
-      return early > 0 ? [concern("option-before-now", "check", { kind: "option", id: option.id }, { count: early })] : [];
+      return early > 0
+        ? [concern("option-before-now", "check", { kind: "option", id: option.id }, { count: early })]
+        : [];
     }),
   ];
 };

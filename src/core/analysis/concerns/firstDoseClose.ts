@@ -1,4 +1,4 @@
-import { clockMs, type ConcernRule, concern } from "../concernRule.ts";
+import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 
 /** The option's first dose falls much sooner after the last dose given than the option's own doses follow each other. */
 export const firstDoseClose: ConcernRule = (context) => {
@@ -12,13 +12,18 @@ export const firstDoseClose: ConcernRule = (context) => {
     // Less than half the interval: our own rule, to be looked at, not a limit.
     return gapH < (second.atH - first.atH) / 2
       ? [
-          concern("first-dose-close", "check", { kind: "option", id: option.id }, {
-            option: option.id,
-            gapH,
-            intervalH: second.atH - first.atH,
-            lastMs: clockMs(context, last.atH),
-            zone: context.case.timeZone,
-          }),
+          concern(
+            "first-dose-close",
+            "check",
+            { kind: "option", id: option.id },
+            {
+              option: option.id,
+              gapH,
+              intervalH: second.atH - first.atH,
+              lastMs: clockMs(context, last.atH),
+              zone: context.case.timeZone,
+            },
+          ),
         ]
       : [];
   });

@@ -11,16 +11,21 @@ export const flipFlop: ConcernRule = ({ case: value, model, given, options }) =>
     const close = Math.abs(reading.absorptionRate.value / model.eliminationRate.value - 1) <= 0.2;
     if (product.release !== "modified" && !close) return [];
     return [
-      concern("flip-flop", close ? "check" : "note", { kind: "medicine", id: product.id }, {
-        product: product.name,
-        close,
-        flipped: reading.readings.assumed.flipFlop,
-        eliminationHalfLifeH: reading.readings.assumed.eliminationHalfLife,
-        absorptionHalfLifeH: reading.readings.assumed.absorptionHalfLife,
-        otherVolume: reading.readings.alternative.volume,
-        otherHalfLifeH: reading.readings.alternative.eliminationHalfLife,
-        clearance: reading.readings.assumed.clearance,
-      }),
+      concern(
+        "flip-flop",
+        close ? "check" : "note",
+        { kind: "medicine", id: product.id },
+        {
+          product: product.name,
+          close,
+          flipped: reading.readings.assumed.flipFlop,
+          eliminationHalfLifeH: reading.readings.assumed.eliminationHalfLife,
+          absorptionHalfLifeH: reading.readings.assumed.absorptionHalfLife,
+          otherVolume: reading.readings.alternative.volume,
+          otherHalfLifeH: reading.readings.alternative.eliminationHalfLife,
+          clearance: reading.readings.assumed.clearance,
+        },
+      ),
     ];
   });
 };

@@ -1,4 +1,4 @@
-import { clockMs, type ConcernRule, concern } from "../concernRule.ts";
+import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 
 /** A measured level beyond this ratio of the predicted one, either way, is pointed out (our own rule, not a published limit). */
 export const FAR_RATIO = 1.5;
@@ -9,13 +9,18 @@ export const levelFarOff: ConcernRule = (context) =>
     const ratio = level.measured / level.predicted;
     return ratio > FAR_RATIO || ratio < 1 / FAR_RATIO
       ? [
-          concern("level-far-off", "check", { kind: "level", id: level.id }, {
-            atMs: clockMs(context, level.atH),
-            zone: context.case.timeZone,
-            measured: level.measured,
-            predicted: level.predicted,
-            ratio,
-          }),
+          concern(
+            "level-far-off",
+            "check",
+            { kind: "level", id: level.id },
+            {
+              atMs: clockMs(context, level.atH),
+              zone: context.case.timeZone,
+              measured: level.measured,
+              predicted: level.predicted,
+              ratio,
+            },
+          ),
         ]
       : [];
   });

@@ -1,4 +1,4 @@
-import { clockMs, type ConcernRule, concern } from "../concernRule.ts";
+import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 
 /** A level before any dose, later than the now line, or drawn while the last dose was still being absorbed. */
 export const levelTiming: ConcernRule = (context) => {

@@ -1,6 +1,6 @@
 import { quantityConvert } from "../../units/index.ts";
-import { sourceText } from "../typicalModel.ts";
 import { type ConcernRule, concern } from "../concernRule.ts";
+import { sourceText } from "../typicalModel.ts";
 
 /** The highest predicted concentration reaches the record's toxic limit. */
 export const optionToxic: ConcernRule = ({ case: { medicine }, options }) => {
@@ -11,7 +11,14 @@ export const optionToxic: ConcernRule = ({ case: { medicine }, options }) => {
     if (!option.typical) return [];
     const peak = Math.max(option.typical.span.peak, option.typical.steadyState?.peak ?? 0);
     return peak >= from
-      ? [concern("option-toxic", "stop", { kind: "option", id: option.id }, { option: option.id, peak, from, source: sourceText(medicine, limit.source) })]
+      ? [
+          concern(
+            "option-toxic",
+            "stop",
+            { kind: "option", id: option.id },
+            { option: option.id, peak, from, source: sourceText(medicine, limit.source) },
+          ),
+        ]
       : [];
   });
 };

@@ -5,10 +5,15 @@ export const valuesConfirmed: ConcernRule = ({ case: value }) => [
   ...value.patient.observations
     .filter((observation) => observation.confirmed)
     .map((observation) =>
-      concern("value-confirmed", "check", { kind: "patient", id: observation.id }, {
-        kind: observation.kind,
-        quantity: observation.quantity,
-      }),
+      concern(
+        "value-confirmed",
+        "check",
+        { kind: "patient", id: observation.id },
+        {
+          kind: observation.kind,
+          quantity: observation.quantity,
+        },
+      ),
     ),
   ...value.levels
     .filter((level) => level.confirmed)

@@ -18,5 +18,7 @@ export function lineReachPulled(line: DoseLine, reach: LineReach, byHours: numbe
 
 /** One dose or one day more or less. */
 export function lineReachStepped(reach: LineReach, direction: -1 | 1): LineReach {
-  return "days" in reach ? { days: Math.max(1, reach.days + direction) } : { count: Math.max(1, reach.count + direction) };
+  return "days" in reach
+    ? { days: Math.max(1, reach.days + direction) }
+    : { count: Math.max(1, reach.count + direction) };
 }
