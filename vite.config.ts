@@ -22,6 +22,7 @@ export default defineConfig({
     assetsInlineLimit: 0,
     modulePreload: { polyfill: false },
     chunkSizeWarningLimit: 1500,
+    rolldownOptions: { checks: { pluginTimings: false } },
   },
   worker: { format: "es" },
   plugins: [

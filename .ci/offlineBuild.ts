@@ -37,11 +37,11 @@ export function offlineWorker(workerSource: string): Plugin {
     configResolved(config) {
       outDir = config.build.outDir;
     },
-    closeBundle: {
+    // Not closeBundle: that also runs after a failed build, and its own failure would hide the first.
+    writeBundle: {
       order: "post",
       sequential: true,
-      async handler(fault?: Error) {
-        if (fault) return;
+      async handler() {
         const files = listFiles(outDir);
         const buildId = digest(files.map((file) => `${file.sha256} ${file.path}`).join("\n")).slice(0, 12);
         await build({

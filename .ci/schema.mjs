@@ -5,6 +5,7 @@ import { fileURLToPath } from "node:url";
 import { runnerImport } from "vite";
 
 const root = fileURLToPath(new URL("../", import.meta.url));
+/** @param {string} path */
 const load = async (path) =>
   (await runnerImport(`${root}${path}`, { root, configFile: false, logLevel: "error" })).module;
 

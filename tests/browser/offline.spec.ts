@@ -60,6 +60,18 @@ test("an address inside the program that is no file leads to the program, offlin
   await expectProgram(page);
 });
 
+test("a page reloaded past the cache is taken into the worker's care again", async ({ page, context, program }) => {
+  await openAndStore(page);
+  const session = await context.newCDPSession(page);
+  const reloaded = page.waitForEvent("load");
+  await session.send("Page.reload", { ignoreCache: true });
+  await reloaded;
+  await page.waitForFunction(() => navigator.serviceWorker.controller !== null);
+  await goOffline(context, program.stop);
+  const response = await page.evaluate(() => fetch("icon.svg").then(({ status }) => status));
+  expect(response).toBe(200);
+});
+
 test("everything the build made is kept, so that nothing is missing offline", async ({ page, context, program }) => {
   await openAndStore(page);
   await goOffline(context, program.stop);

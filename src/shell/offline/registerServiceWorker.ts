@@ -56,7 +56,11 @@ async function watch(container: ServiceWorkerContainer, news: ServiceWorkerNews)
   if (registration.waiting && registration.active) offer(registration.waiting);
   follow(registration.installing);
   registration.addEventListener("updatefound", () => follow(registration.installing));
-  void container.ready.then(() => news.onReady?.());
+  void container.ready.then(({ active }) => {
+    // A page that was loading in the very moment the worker became active was missed by it, as is one reloaded past the cache.
+    if (container.controller === null) active?.postMessage("claim");
+    news.onReady?.();
+  });
 
   // Offline, the check fails: that is the normal case here and no news.
   const check = () => void registration.update().catch(() => undefined);

@@ -28,6 +28,7 @@ self.addEventListener("activate", (event) => {
 
 self.addEventListener("message", (event) => {
   if (event.data === "take-over") event.waitUntil(self.skipWaiting());
+  if (event.data === "claim") event.waitUntil(self.clients.claim());
 });
 
 self.addEventListener("fetch", (event) => {
