@@ -57,13 +57,12 @@ export function createCaseRows({ connection, marker, copies, channel, locks, clo
   }
 
   async function erase(id: string): Promise<SaveOutcome> {
-    marker.noteRemoved(id); // before: the note must never ask for more than there is
+    const takeBack = marker.noteRemoved(id); // before: the note must never ask for more than there is
     const outcome = await saveAttempt(clock, () =>
       connection.write(["cases"], (database) => database.table("cases").delete(id)),
     );
     if (!outcome.ok) {
-      const revision = seen.get(id);
-      if (revision !== undefined) marker.noteSaved(id, revision, clock());
+      takeBack();
       return outcome;
     }
     seen.delete(id);

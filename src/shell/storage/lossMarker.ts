@@ -26,13 +26,14 @@ export interface LossMarker {
   rewrite(database: string, schema: number, rows: readonly { id: string; revision: number; savedAt: number }[]): void;
   noteLoss(detail: string): void;
   noteSaved(id: string, revision: number, savedAt: number): void;
-  noteRemoved(id: string): void;
+  /** Returns how to take it back, for a removal that failed. */
+  noteRemoved(id: string): () => void;
 }
 
 /** `storage` null: not available; then nothing is noted and a loss is seen only where the browser reports it. */
 export function createLossMarker(storage: MarkerStorage | null): LossMarker {
   // A full or forbidden localStorage must not stop a save: the marker then asks for less than there is, which raises no false alarm.
-  const attempt = (work: (storage: MarkerStorage) => void): void => {
+  const attempt = (work: (storage: MarkerStorage) => unknown): void => {
     if (!storage) return;
     try {
       work(storage);
@@ -91,6 +92,13 @@ export function createLossMarker(storage: MarkerStorage | null): LossMarker {
 
     noteLoss: (detail) => attempt((of) => of.setItem(MARKER_KEY, JSON.stringify({ ...readMain(of), loss: detail }))),
     noteSaved: (id, revision, savedAt) => attempt((of) => of.setItem(HEAD_PREFIX + id, `${revision} ${savedAt}`)),
-    noteRemoved: (id) => attempt((of) => of.removeItem(HEAD_PREFIX + id)),
+    noteRemoved(id) {
+      let before: string | null = null;
+      attempt((of) => {
+        before = of.getItem(HEAD_PREFIX + id);
+        of.removeItem(HEAD_PREFIX + id);
+      });
+      return () => attempt((of) => before !== null && of.setItem(HEAD_PREFIX + id, before));
+    },
   };
 }
