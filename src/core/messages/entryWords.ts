@@ -115,6 +115,7 @@ export const doseWords = {
   notYet: "Not complete yet",
   add: "Add",
   enterAdds: "Enter adds it.",
+  enterReplaces: "Enter puts it in place of the line.",
   list: { given: "Doses given", option: "Doses of this option" },
   none: "No dose line yet.",
   line: "dose line",

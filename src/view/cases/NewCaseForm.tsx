@@ -46,7 +46,7 @@ export function NewCaseForm({ medicines, onCreate }: NewCaseFormProps) {
         fault={isSent && !label.trim() ? casesWords.labelMissing : undefined}
       />
       <ChoiceField
-        label={casesWords.medicine}
+        label={casesWords.medicineLabel}
         value={medicine}
         prompt={casesWords.medicinePrompt}
         onChoose={setMedicine}

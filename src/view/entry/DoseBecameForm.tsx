@@ -1,4 +1,4 @@
-import { type FormEvent, useState } from "react";
+import { type FormEvent, useEffect, useRef, useState } from "react";
 import type { Case } from "../../core/case/index.ts";
 import { doseWords, issueMessage } from "../../core/messages/index.ts";
 import type { DoseAmount, DoseEvent, DoseLine } from "../../core/regimen/index.ts";
@@ -35,6 +35,10 @@ export function DoseBecameForm({ value, lane, line, dose, units, onLine, onCance
   const [isSent, setSent] = useState(false);
   const [fault, setFault] = useState<Issue | null>(null);
 
+  const form = useRef<HTMLFormElement>(null);
+  // It opens below the table: the one who asked for it is taken there.
+  useEffect(() => form.current?.querySelector<HTMLInputElement>("input:checked")?.focus(), []);
+
   const at = instantRead(atText, zone, now);
   const isLate = at.ok && instantMs(at.value) > instantMs(now);
   const words = (iso: string) => instantText(instantMs(iso), zone, "dayClock");
@@ -54,7 +58,7 @@ export function DoseBecameForm({ value, lane, line, dose, units, onLine, onCance
     if (!found) onLine(changed);
   };
   return (
-    <form className="entry-panel-form dose-became" onSubmit={send} noValidate>
+    <form ref={form} className="entry-panel-form dose-became" onSubmit={send} noValidate>
       <RadioField
         label={`${doseWords.dose} ${dose.index + 1}, ${doseWords.due} ${instantText(dose.scheduledMs, zone, "dayClock")}`}
         value={became}

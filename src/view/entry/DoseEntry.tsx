@@ -5,7 +5,7 @@ import { ChoiceField } from "../ui/ChoiceField.tsx";
 import { DataTable } from "../ui/DataTable.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
 import { DoseTextField } from "./DoseTextField.tsx";
-import { doseProducts, doseProductUsual } from "./doseProducts.ts";
+import { doseProducts, doseProductsInFull, doseProductUsual } from "./doseProducts.ts";
 import { LineForm } from "./LineForm.tsx";
 import { PanelDone } from "./PanelDone.tsx";
 import "./entryPanel.css";
@@ -33,7 +33,8 @@ export function DoseEntry({ lane, onDone, lineId }: DoseEntryProps) {
   const isReadOnly = open.role === "reader";
   const product = chosen ?? doseProductUsual(value, lane);
   const edited = lines.find((line) => line.id === editing);
-  const sentence = (line: (typeof lines)[number]) => doseLineSentence(line, { zone: value.timeZone, products });
+  const sentence = (line: (typeof lines)[number]) =>
+    doseLineSentence(line, { zone: value.timeZone, products: doseProductsInFull(value.medicine) });
   return (
     <div className="entry-panel">
       {isReadOnly ? null : (
@@ -55,6 +56,8 @@ export function DoseEntry({ lane, onDone, lineId }: DoseEntryProps) {
             text={text}
             label={doseWords.text}
             sendWord={doseWords.add}
+            enterWord={doseWords.enterAdds}
+            hasInitialFocus={lineId === undefined}
             onText={setText}
             onLines={(added) => {
               edit("linesAdd", { lane, lines: added });

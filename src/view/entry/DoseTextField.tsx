@@ -5,6 +5,7 @@ import { type DoseLine, type DoseProduct, doseTextRead } from "../../core/regime
 import { issue } from "../../core/result/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { FieldFrame } from "../ui/FieldFrame.tsx";
+import { doseProductsInFull } from "./doseProducts.ts";
 
 export interface DoseTextFieldProps {
   readonly value: Case;
@@ -14,13 +15,18 @@ export interface DoseTextFieldProps {
   readonly text: string;
   readonly label: string;
   readonly sendWord: string;
+  /** Said under a text that reads well: what Enter does. */
+  readonly enterWord: string;
+  /** The text as it stands without the user: its reading need not be said back. */
+  readonly plainText?: string;
+  readonly hasInitialFocus?: boolean;
   readonly onText: (text: string) => void;
   readonly onLines: (lines: readonly DoseLine[]) => void;
 }
 
 /** A regimen typed as it would be said. Its meaning is said back while it is typed; Enter takes it. */
 export function DoseTextField(props: DoseTextFieldProps) {
-  const { value, lane, products, product, text, label, sendWord, onText, onLines } = props;
+  const { value, lane, products, product, text, label, sendWord, enterWord, plainText = "", onText, onLines } = props;
   const [isSent, setSent] = useState(false);
   const read =
     product === null
@@ -34,7 +40,7 @@ export function DoseTextField(props: DoseTextFieldProps) {
           newId: () => crypto.randomUUID(),
         });
   const problem = read.ok ? undefined : read.issues[0];
-  const isEmpty = text.trim() === "";
+  const isPlain = text.trim() === plainText;
   const send = (event: FormEvent) => {
     event.preventDefault();
     setSent(true);
@@ -57,6 +63,7 @@ export function DoseTextField(props: DoseTextFieldProps) {
               type="text"
               autoComplete="off"
               spellCheck={false}
+              autoFocus={props.hasInitialFocus ?? false}
               value={text}
               onChange={(event) => {
                 setSent(false);
@@ -69,15 +76,19 @@ export function DoseTextField(props: DoseTextFieldProps) {
           </div>
         )}
       </FieldFrame>
-      {isEmpty || isSent ? null : (
+      {isPlain || isSent ? null : (
         <div className="dose-text-reading">
           <p className="dose-text-reading-head">{read.ok ? doseWords.read : doseWords.notYet}</p>
           {read.ok ? (
-            read.value.map((line) => <p key={line.id}>{doseLineSentence(line, { zone: value.timeZone, products })}.</p>)
+            read.value.map((line) => (
+              <p key={line.id}>
+                {doseLineSentence(line, { zone: value.timeZone, products: doseProductsInFull(value.medicine) })}.
+              </p>
+            ))
           ) : (
             <p className="entry-panel-soft">{problem ? issueMessage(problem) : null}</p>
           )}
-          {read.ok ? <p className="entry-panel-soft">{doseWords.enterAdds}</p> : null}
+          {read.ok ? <p className="entry-panel-soft">{enterWord}</p> : null}
         </div>
       )}
     </form>

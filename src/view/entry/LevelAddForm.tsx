@@ -55,6 +55,7 @@ export function LevelAddForm({ value, onAdd }: LevelAddFormProps) {
           label={levelWords.value}
           draft={draft.quantity}
           units={LEVEL_UNIT_CHOICES}
+          hasInitialFocus
           isTold={isSent}
           fault={faultOf("quantity")}
           question={

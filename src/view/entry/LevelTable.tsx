@@ -4,7 +4,7 @@ import type { Case, Level } from "../../core/case/index.ts";
 import { issueMessage, levelWords } from "../../core/messages/index.ts";
 import { issue } from "../../core/result/index.ts";
 import { instantMs, instantText } from "../../core/time/index.ts";
-import { numberPrint, quantityPrint } from "../../core/units/index.ts";
+import { numberPrint, quantityConvert, quantityPrint } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { DataTable } from "../ui/DataTable.tsx";
 import { TextField } from "../ui/TextField.tsx";
@@ -17,12 +17,18 @@ export interface LevelTableProps {
   readonly onRemove: (id: string) => void;
 }
 
-const mgPerL = (value: number) => quantityPrint({ value, unit: "mg/L" }, { style: "screen", significant: 3 });
-
 /** Every level with what was predicted at that time; one left out stays, with its reason. */
 export function LevelTable({ value, results, isReadOnly, onExclude, onRemove }: LevelTableProps) {
   const [leaving, setLeaving] = useState<string | null>(null);
   const resultOf = (level: Level) => results.find((one) => one.id === level.id);
+  /** A concentration in mg/L as the level's own unit has it, to as many decimals as `beside` needs for three digits. */
+  const inUnitOf = (level: Level, mgPerL: number, beside: number) => {
+    const { unit } = level.quantity;
+    const convert = (amount: number) =>
+      quantityConvert({ value: amount, unit: "mg/L" }, unit, value.medicine.molarMass.value);
+    const decimals = Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(Math.abs(convert(beside)) || 1))));
+    return quantityPrint({ value: convert(mgPerL), unit }, { style: "screen", decimals });
+  };
   const nameOf = (level: Level) =>
     `${measuredWords(level)} ${instantText(instantMs(level.at), value.timeZone, "dayClock")}`;
   return (
@@ -63,7 +69,7 @@ export function LevelTable({ value, results, isReadOnly, onExclude, onRemove }: 
             align: "end",
             cell: (level) => {
               const predicted = resultOf(level)?.predicted ?? null;
-              return predicted === null ? "" : mgPerL(predicted);
+              return predicted === null ? "" : inUnitOf(level, predicted, predicted);
             },
           },
           {
@@ -71,8 +77,9 @@ export function LevelTable({ value, results, isReadOnly, onExclude, onRemove }: 
             head: levelWords.difference,
             align: "end",
             cell: (level) => {
-              const difference = resultOf(level)?.difference ?? null;
-              return difference === null ? "" : `${difference > 0 ? "+" : ""}${mgPerL(difference)}`;
+              const { difference = null, predicted = null } = resultOf(level) ?? {};
+              if (difference === null) return "";
+              return `${difference > 0 ? "+" : ""}${inUnitOf(level, difference, predicted ?? difference)}`;
             },
           },
           {

@@ -1,4 +1,4 @@
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import type { Case } from "../../core/case/index.ts";
 import { productDoseUnits, productOf } from "../../core/medicine/index.ts";
 import { doseWords, issueMessage } from "../../core/messages/index.ts";
@@ -30,11 +30,16 @@ export function LineForm({ value, lane, line, products, onLine, onReplace }: Lin
     setText(textOf(line, value, products));
     setProductFault(undefined);
   }
+  const head = useRef<HTMLHeadingElement>(null);
+  // It opens below the list: whoever opened it, by key or by a token on the lane, is taken there.
+  useEffect(() => head.current?.focus(), []);
   const units = DOSE_UNITS.filter((unit) => productDoseUnits(productOf(value.medicine, line.product)).includes(unit));
   const faultOf = (next: DoseLine) => lineFault(next, line, value);
   return (
     <section className="line-form entry-panel-inset" aria-labelledby="line-form-head">
-      <h3 id="line-form-head">{doseWords.editing}</h3>
+      <h3 id="line-form-head" ref={head} tabIndex={-1}>
+        {doseWords.editing}
+      </h3>
       <DoseTextField
         value={value}
         lane={lane}
@@ -43,6 +48,8 @@ export function LineForm({ value, lane, line, products, onLine, onReplace }: Lin
         text={text}
         label={doseWords.retype}
         sendWord={doseWords.replace}
+        enterWord={doseWords.enterReplaces}
+        plainText={textOf(line, value, products)}
         onText={setText}
         // The first keeps the line's id, so that it stays the one being edited.
         onLines={(lines) => onReplace(lines.map((one, index) => (index === 0 ? { ...one, id: line.id } : one)))}

@@ -91,6 +91,7 @@ function windowSentence({ low, high, quantity, basis }: TargetWindow): string {
   return `${numberPrint(low.value, { significant: 4 })} to ${top}, ${windowQuantityWord(quantity)} (${basis})`;
 }
 
-function offerDetail({ window, from }: OfferedWindow): string {
-  return `${windowQuantityWord(window.quantity)}; ${from === "record" ? windowWords.fromRecord : windowWords.fromWard}: ${window.basis}`;
+function offerDetail({ window, from, origin }: OfferedWindow): string {
+  const place = from === "record" ? windowWords.fromRecord : windowWords.fromWard;
+  return `${windowQuantityWord(window.quantity)}; ${place}: ${origin}`;
 }

@@ -4,11 +4,16 @@ import { medicinesWords } from "../../core/messages/index.ts";
 import { numberPrint, quantityPrint } from "../../core/units/index.ts";
 import type { WardWindow } from "../../shell/store/workbenchState.ts";
 
+/** Characters a case's basis may hold. */
+const BASIS_LONGEST = 400;
+
 /** A window that can be chosen as it stands. */
 export interface OfferedWindow {
   readonly id: string;
   readonly label: string;
   readonly from: "record" | "ward";
+  /** Where it comes from, without the label. */
+  readonly origin: string;
   readonly window: TargetWindow;
 }
 
@@ -18,11 +23,12 @@ export function windowOffers(record: MedicineRecord, ward: readonly WardWindow[]
       id: `record ${window.id}`,
       label: window.label,
       from: "record" as const,
+      origin: recordOrigin(record, window),
       window: {
         quantity: window.quantity,
         low: window.low,
         high: window.high,
-        basis: recordBasis(record, window),
+        basis: `${window.label}: ${recordOrigin(record, window)}`.slice(0, BASIS_LONGEST),
       },
     })),
     ...ward
@@ -31,6 +37,7 @@ export function windowOffers(record: MedicineRecord, ward: readonly WardWindow[]
         id: `ward ${id}`,
         label: `${numberPrint(window.low.value)} to ${quantityPrint(window.high, { style: "screen" })}`,
         from: "ward" as const,
+        origin: window.basis,
         window,
       })),
   ];
@@ -42,9 +49,9 @@ export function windowOfferOf(window: TargetWindow, offers: readonly OfferedWind
   return offers.find((offer) => key(offer.window) === key(window)) ?? null;
 }
 
-/** "ARUP Laboratories, Test 0090265 Theophylline (seen in the source)": at most what a case's basis may hold. */
-function recordBasis(record: MedicineRecord, window: RecordWindow): string {
+/** "ARUP Laboratories, Test 0090265 Theophylline (seen in the source)" */
+function recordOrigin(record: MedicineRecord, window: RecordWindow): string {
   const source = record.sources[window.source];
   const named = [source?.authors, source?.title, source?.year].filter((part) => part !== undefined).join(", ");
-  return `${window.label}: ${named || window.source} (${medicinesWords.bases[window.basis]})`.slice(0, 400);
+  return `${named || window.source} (${medicinesWords.bases[window.basis]})`;
 }

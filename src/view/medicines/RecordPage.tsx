@@ -43,11 +43,6 @@ export function RecordPage({ record, isOwn, wardWindows }: RecordPageProps) {
       ) : null}
       <RecordStatements heading={medicinesWords.appliesTo} record={record} statements={[population]} />
       <section>
-        <h3>{medicinesWords.kinetics}</h3>
-        {record.kinetics.apparent ? <p className="record-page-note">{medicinesWords.apparent}</p> : null}
-        <RecordTable caption={medicinesWords.kinetics} record={record} rows={kineticsRows(record)} />
-      </section>
-      <section>
         <h3>{medicinesWords.windows}</h3>
         <RecordTable
           caption={medicinesWords.windows}
@@ -56,6 +51,14 @@ export function RecordPage({ record, isOwn, wardWindows }: RecordPageProps) {
           empty={medicinesWords.windowsNone}
         />
         {wardWindows}
+      </section>
+      <RecordStatements heading={medicinesWords.cautions} record={record} statements={record.cautions} />
+      <RecordStatements heading={medicinesWords.doseLimits} record={record} statements={record.doseLimits} />
+      <RecordStatements heading={medicinesWords.sampling} record={record} statements={record.sampling} />
+      <section>
+        <h3>{medicinesWords.kinetics}</h3>
+        {record.kinetics.apparent ? <p className="record-page-note">{medicinesWords.apparent}</p> : null}
+        <RecordTable caption={medicinesWords.kinetics} record={record} rows={kineticsRows(record)} />
       </section>
       {record.products.map((product) => (
         <section key={product.id}>
@@ -70,9 +73,6 @@ export function RecordPage({ record, isOwn, wardWindows }: RecordPageProps) {
         <h3>{medicinesWords.variability}</h3>
         <RecordTable caption={medicinesWords.variability} record={record} rows={variabilityRows(record)} />
       </section>
-      <RecordStatements heading={medicinesWords.cautions} record={record} statements={record.cautions} />
-      <RecordStatements heading={medicinesWords.doseLimits} record={record} statements={record.doseLimits} />
-      <RecordStatements heading={medicinesWords.sampling} record={record} statements={record.sampling} />
       <section>
         <h3>{medicinesWords.sources}</h3>
         <ol className="record-page-sources">

@@ -93,10 +93,19 @@ export function sourceNumber(record: MedicineRecord, source: string): number {
   return Object.keys(record.sources).indexOf(source) + 1;
 }
 
-/** "Hussein, 1997", or the title where no author is named. */
+/** A title is cut here where it stands for a source in a table; the list below has it whole. */
+const SHORT = 40;
+
+/** "Hussein Z, 1997", or the beginning of the title where no author is named. */
 export function sourceShort(record: MedicineRecord, id: string): string {
   const source = record.sources[id];
   if (!source) return id;
-  const who = source.authors?.split(/[,;]| and /)[0]?.trim() ?? source.title;
+  const who = source.authors?.split(/[,;]| and /)[0]?.trim() ?? beginning(source.title);
   return source.year ? `${who}, ${source.year}` : who;
+}
+
+function beginning(title: string): string {
+  const part = title.split(/[:(]/)[0]?.trim() ?? title;
+  if (part.length <= SHORT) return part;
+  return `${part.slice(0, part.lastIndexOf(" ", SHORT)).replace(/[,;]$/, "")} …`;
 }

@@ -21,6 +21,7 @@ export interface QuantityInputProps<U extends UnitCode> {
   readonly reading?: string | undefined;
   readonly isLabelHidden?: boolean;
   readonly isReadOnly?: boolean;
+  readonly hasInitialFocus?: boolean;
 }
 
 /** A number typed as text with its unit in the same field. What was typed is never changed while it can't be read. */
@@ -54,6 +55,7 @@ export function QuantityInput<U extends UnitCode>(props: QuantityInputProps<U>) 
             autoComplete="off"
             spellCheck={false}
             readOnly={isReadOnly}
+            autoFocus={props.hasInitialFocus ?? false}
             value={draft.text}
             onChange={(event) => {
               setLeft(false);
