@@ -1,11 +1,11 @@
-import { type ClockOnDay, clockOnDay, instantMs, localMidnight, MS_PER_HOUR, wallClock } from "../time/index.ts";
+import { type ClockOnDay, clockOnDay, instantMs, localDays, MS_PER_HOUR, wallClock } from "../time/index.ts";
 import type { DoseLine } from "./doseLine.ts";
 
 /** A dose where the line puts it. A clock time of a day on which it is skipped or comes twice is not an instant yet. */
 export interface ScheduledDose {
   readonly index: number;
   readonly found: ClockOnDay;
-  /** Of a clock repeat. */
+  /** Of a clock time that is not one instant on its day. */
   readonly date?: string;
   readonly time?: string;
 }
@@ -33,24 +33,22 @@ function* clockDoses(
 ): Generator<ScheduledDose, void, undefined> {
   const times = [...new Set(clock)].sort();
   let index = 0;
-  let midnight = localMidnight(startMs, zone);
-  for (let day = 0; day < days; day += 1) {
-    const nextMidnight = localMidnight(midnight + 36 * MS_PER_HOUR, zone);
-    const { date } = wallClock(midnight, zone);
+  let day = 0;
+  for (const { startMs: midnight, isPlain } of localDays(startMs, zone)) {
+    if (day >= days) return;
+    day += 1;
+    const date = isPlain ? "" : wallClock(midnight, zone).date;
     for (const time of times) {
-      const found = placeAfterStart(timeOnDay(midnight, nextMidnight, date, time, zone), startMs);
-      if (found) {
-        yield { index, found, date, time };
-        index += 1;
-      }
+      const onDay = isPlain ? timeOnPlainDay(midnight, time) : clockOnDay(date, time, zone);
+      const found = placeAfterStart(onDay, startMs);
+      if (!found) continue;
+      yield found.kind === "once" ? { index, found } : { index, found, date, time };
+      index += 1;
     }
-    midnight = nextMidnight;
   }
 }
 
-/** On a day of 24 hours that begins at 00:00 the clocks don't change, so the look-up in the zone's table is saved. */
-function timeOnDay(midnight: number, nextMidnight: number, date: string, time: string, zone: string): ClockOnDay {
-  if (nextMidnight - midnight !== 24 * MS_PER_HOUR) return clockOnDay(date, time, zone);
+function timeOnPlainDay(midnight: number, time: string): ClockOnDay {
   const [hours = 0, minutes = 0] = time.split(":").map(Number);
   return { kind: "once", ms: midnight + (hours * 60 + minutes) * 60_000 };
 }

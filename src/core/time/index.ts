@@ -7,6 +7,7 @@ export { type InstantPhrase, instantPhraseRead, type PhraseWord } from "./instan
 export { instantPhraseResolve } from "./instantPhraseResolve.ts";
 export { instantRead } from "./instantRead.ts";
 export { type InstantForm, instantText } from "./instantText.ts";
+export { type LocalDay, localDays } from "./localDays.ts";
 export { localMidnight, midnightsBetween } from "./localMidnight.ts";
 export { MS_PER_HOUR } from "./msPerHour.ts";
 export { timeZoneSchema } from "./timeZone.ts";

@@ -2,7 +2,8 @@ import { describe, expect, it } from "vitest";
 import { forbiddenForms, numberPrint, quantityPrint, unitSpoken } from "../../../src/core/units/index.ts";
 
 /** The published rules for error-prone notation, numbered as in docs/methods/error-prone-notation.md. */
-const print = (value: number, unit: Parameters<typeof quantityPrint>[0]["unit"]) => quantityPrint({ value, unit }, { style: "print" }).replaceAll("\u00a0", " ");
+const print = (value: number, unit: Parameters<typeof quantityPrint>[0]["unit"]) =>
+  quantityPrint({ value, unit }, { style: "print" }).replaceAll("\u00a0", " ");
 
 describe("the formatter writes", () => {
   it.each([
@@ -89,7 +90,9 @@ describe("the search for forbidden forms", () => {
 
   it("has a case for every rule that a printed string can break (5 allows, the others forbid)", () => {
     const rules = new Set(CASES.map(([rule]) => rule));
-    expect([...rules].sort((a, b) => a - b)).toEqual([1, 2, 3, 4, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16, 17, 18, 19, 20]);
+    expect([...rules].sort((a, b) => a - b)).toEqual([
+      1, 2, 3, 4, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16, 17, 18, 19, 20,
+    ]);
   });
 
   it("says what it found", () => {

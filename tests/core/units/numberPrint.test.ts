@@ -38,12 +38,16 @@ describe("numberPrint", () => {
     expect(() => numberPlain(value)).toThrow(RangeError);
   });
 
-  it.each([{ significant: 0 }, { significant: 16 }, { significant: 2.5 }, { decimals: -1 }, { decimals: 16 }, { significant: 3, decimals: 1 }])(
-    "refuses the options %j",
-    (options) => {
-      expect(() => numberPrint(1, options)).toThrow(RangeError);
-    },
-  );
+  it.each([
+    { significant: 0 },
+    { significant: 16 },
+    { significant: 2.5 },
+    { decimals: -1 },
+    { decimals: 16 },
+    { significant: 3, decimals: 1 },
+  ])("refuses the options %j", (options) => {
+    expect(() => numberPrint(1, options)).toThrow(RangeError);
+  });
 
   it("keeps to the notation for every number: a leading zero, no trailing one, commas, no exponent", () => {
     fc.assert(
@@ -61,10 +65,14 @@ describe("numberPrint", () => {
 
   it("rounds to within half a unit of the last place kept (relative 1e-12 for the double itself)", () => {
     fc.assert(
-      fc.property(fc.double({ min: -1e6, max: 1e6, noNaN: true }), fc.integer({ min: 0, max: 6 }), (value, decimals) => {
-        const shown = Number(numberPrint(value, { decimals }).replaceAll(",", "").replace("\u2212", "-"));
-        expect(Math.abs(shown - value)).toBeLessThanOrEqual(0.5 * 10 ** -decimals + Math.abs(value) * 1e-12);
-      }),
+      fc.property(
+        fc.double({ min: -1e6, max: 1e6, noNaN: true }),
+        fc.integer({ min: 0, max: 6 }),
+        (value, decimals) => {
+          const shown = Number(numberPrint(value, { decimals }).replaceAll(",", "").replace("\u2212", "-"));
+          expect(Math.abs(shown - value)).toBeLessThanOrEqual(0.5 * 10 ** -decimals + Math.abs(value) * 1e-12);
+        },
+      ),
       { seed: 20260304, numRuns: 1000 },
     );
   });

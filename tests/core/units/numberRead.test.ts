@@ -81,10 +81,14 @@ describe("numberRead refuses", () => {
 
 it("takes back exactly what numberPlain writes, for every number of at most 15 digits", () => {
   fc.assert(
-    fc.property(fc.integer({ min: -999_999_999_999_999, max: 999_999_999_999_999 }), fc.integer({ min: -12, max: 0 }), (digits, power) => {
-      const value = Number(`${digits}e${power}`);
-      expect(numberRead(numberPlain(value))).toEqual({ ok: true, value: value === 0 ? 0 : value });
-    }),
+    fc.property(
+      fc.integer({ min: -999_999_999_999_999, max: 999_999_999_999_999 }),
+      fc.integer({ min: -12, max: 0 }),
+      (digits, power) => {
+        const value = Number(`${digits}e${power}`);
+        expect(numberRead(numberPlain(value))).toEqual({ ok: true, value: value === 0 ? 0 : value });
+      },
+    ),
     { seed: 20260304, numRuns: 1000 },
   );
 });

@@ -101,13 +101,18 @@ describe("exactness", () => {
 
 describe("refusals", () => {
   it("names both units when the dimensions differ", () => {
-    expect(() => quantityConvert({ value: 1, unit: "mg" }, "mL")).toThrow(/mg \(mass\) cannot be converted to mL \(volume\)/);
+    expect(() => quantityConvert({ value: 1, unit: "mg" }, "mL")).toThrow(
+      /mg \(mass\) cannot be converted to mL \(volume\)/,
+    );
   });
 
-  it.each([undefined, 0, -1, Number.NaN, Number.POSITIVE_INFINITY])("mass to molar with the molar mass %s", (molarMass) => {
-    expect(() => quantityConvert({ value: 1, unit: "mg/L" }, "umol/L", molarMass)).toThrow(RangeError);
-    expect(() => quantityConvert({ value: 1, unit: "umol/L" }, "mg/L", molarMass)).toThrow(RangeError);
-  });
+  it.each([undefined, 0, -1, Number.NaN, Number.POSITIVE_INFINITY])(
+    "mass to molar with the molar mass %s",
+    (molarMass) => {
+      expect(() => quantityConvert({ value: 1, unit: "mg/L" }, "umol/L", molarMass)).toThrow(RangeError);
+      expect(() => quantityConvert({ value: 1, unit: "umol/L" }, "mg/L", molarMass)).toThrow(RangeError);
+    },
+  );
 
   it.each([Number.NaN, Number.POSITIVE_INFINITY])("the value %s, also into its own unit", (value) => {
     expect(() => quantityConvert({ value, unit: "mg" }, "mg")).toThrow(RangeError);

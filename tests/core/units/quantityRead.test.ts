@@ -77,6 +77,9 @@ describe("quantityRead refuses", () => {
 
   it("a unit of the table that the field does not take, naming what it takes", () => {
     const result = quantityRead("58 cm", { units: ["kg", "[lb_av]"] });
-    expect(result).toMatchObject({ ok: false, issues: [{ code: "quantity-unit-refused", data: { unit: "cm", units: ["kg", "[lb_av]"] } }] });
+    expect(result).toMatchObject({
+      ok: false,
+      issues: [{ code: "quantity-unit-refused", data: { unit: "cm", units: ["kg", "[lb_av]"] } }],
+    });
   });
 });
