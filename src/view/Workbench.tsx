@@ -4,8 +4,8 @@ import { CasesScreen } from "./cases/CasesScreen.tsx";
 import { MedicinesScreen } from "./medicines/MedicinesScreen.tsx";
 import { SettingsScreen } from "./settings/SettingsScreen.tsx";
 import "./style/base.css";
-import { SummaryScreen } from "./summary/SummaryScreen.tsx";
 import { NoticeStack } from "./NoticeStack.tsx";
+import { SummaryScreen } from "./summary/SummaryScreen.tsx";
 import { UpdateBar } from "./UpdateBar.tsx";
 import { useWorkbench } from "./useWorkbench.ts";
 
@@ -18,7 +18,6 @@ export function Workbench() {
   useEffect(() => {
     document.title = label ? `${label} · Ebbline` : "Ebbline";
   }, [label]);
-  const isDemo = open?.value.demo === true && (screen === "bench" || screen === "summary");
   return (
     <>
       <UpdateBar />
@@ -33,11 +32,6 @@ export function Workbench() {
       ) : (
         <CasesScreen />
       )}
-      {isDemo && screen === "bench" ? (
-        <p className="demo-mark" aria-hidden="true">
-          demo
-        </p>
-      ) : null}
       <NoticeStack />
     </>
   );

@@ -26,7 +26,7 @@ export const benchWords = {
   noOptions: "No option yet. Add one to compare regimens.",
   noPrediction: "No prediction: the concerns say what is missing.",
   steadyHead: "Readings at steady state, typical patient",
-  demo: "demo: invented patient",
+  demoShort: "demo, invented",
   intended:
     "Supports, and does not replace, the judgement of a licensed professional and local policy. Check against current product information.",
   savedStates: {

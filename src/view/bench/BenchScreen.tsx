@@ -158,6 +158,11 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
             ) : (
               <p className="bench-waiting">{benchWords.analysisStates.running}</p>
             )}
+            {value.demo ? (
+              <p className="bench-demo" aria-hidden="true">
+                demo
+              </p>
+            ) : null}
             {analysis && analysis.typical === null && <p className="bench-no-prediction">{benchWords.noPrediction}</p>}
           </div>
           {clock && analysis && lanes && (

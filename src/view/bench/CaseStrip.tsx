@@ -3,7 +3,7 @@ import type { Analysis } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { benchWords, editLabel, windowQuantityWord } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
-import { numberPrint, quantityPrint } from "../../core/units/index.ts";
+import { numberPrint, quantityPrint, unitSpoken } from "../../core/units/index.ts";
 import type { OpenCase } from "../../shell/store/workbenchState.ts";
 import { Button } from "../ui/Button.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
@@ -51,21 +51,28 @@ export function CaseStrip({ open, analysis, onPanel, onPrint }: CaseStripProps) 
         <strong className="strip-label">{value.label || "untitled case"}</strong>
         <span className="strip-small">
           {person.length > 0 ? person.join(", ") : "patient not entered"}
-          {value.demo ? <em className="strip-demo"> · {benchWords.demo}</em> : null}
+          {value.demo ? <em className="strip-demo"> · {benchWords.demoShort}</em> : null}
         </span>
       </StripCell>
       <StripCell name="weight" onPress={() => onPanel("patient")}>
-        {weight ? `${numberPrint(weight.value, { significant: 4 })} kg` : <Missing />}
+        {weight ? <span className="strip-nowrap">{numberPrint(weight.value, { significant: 4 })} kg</span> : <Missing />}
       </StripCell>
       <StripCell name="kidney function" onPress={() => onPanel("patient")}>
-        {kidney ? `${numberPrint(kidney.value, { significant: 3 })} mL/min` : <Missing />}
+        {kidney ? <span className="strip-nowrap">{numberPrint(kidney.value, { significant: 3 })} mL/min</span> : <Missing />}
       </StripCell>
       <StripCell name="medicine" onPress={() => onPanel("medicine")}>
-        {[value.medicine.name, ...products].join(", ")}
+        <span>{value.medicine.name}</span>
+        {products.length > 0 ? <span className="strip-small">{products.join(", ")}</span> : null}
       </StripCell>
       <StripCell name="target window" onPress={() => onPanel("window")}>
         {window ? (
-          `${numberPrint(window.low.value, {})} to ${numberPrint(window.high.value, {})} ${window.low.unit === "mg/L" ? "mg/L" : "mg·h/L"}, ${windowQuantityWord(window.quantity)}`
+          <>
+            <span className="strip-nowrap">
+              {numberPrint(window.low.value, {})} to {numberPrint(window.high.value, {})}{" "}
+              {unitSpoken(window.low.unit, "screen")}
+            </span>
+            <span className="strip-small">{windowQuantityWord(window.quantity)}</span>
+          </>
         ) : (
           <Missing />
         )}
