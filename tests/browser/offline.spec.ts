@@ -46,6 +46,31 @@ test("opens and works after the server and the network are gone", async ({ page,
   await expectProgram(other);
 });
 
+test("a case is opened, computed, changed and found again without server and network", async ({
+  page,
+  context,
+  program,
+}) => {
+  await openAndStore(page);
+  await goOffline(context, program.stop);
+  await page.reload();
+  await page.getByRole("button", { name: "Open Harbour ward 3, bed 12" }).click();
+  const highest = page.getByRole("table", { name: /steady state/ }).getByRole("row", { name: /^Highest/ });
+  await expect(highest).toHaveText(/\d mg\/L.*\d mg\/L/s);
+  expect(page.workers().map((worker) => new URL(worker.url()).pathname)).toEqual([
+    expect.stringMatching(/^\/assets\/analysis\.worker-/),
+  ]);
+  await page.getByRole("button", { name: "Add an option" }).click();
+  await expect(page.getByRole("region", { name: "Option C" })).toBeVisible();
+  await expect(page.getByRole("status").filter({ hasText: /^saved/ })).toBeVisible();
+  const shown = await highest.textContent();
+
+  await page.reload();
+  await page.getByRole("table", { name: "Cases on this device" }).getByRole("button", { name: /^Open/ }).click();
+  await expect(page.getByRole("region", { name: "Option C" })).toBeVisible();
+  await expect.poll(() => highest.textContent()).toBe(shown);
+});
+
 test("an address inside the program that is no file leads to the program, offline as well", async ({
   page,
   context,

@@ -46,7 +46,6 @@ export const DEVELOPMENT_POLICY = policyText({
 const SHUT_FEATURES = [
   "accelerometer",
   "autoplay",
-  "bluetooth",
   "camera",
   "display-capture",
   "geolocation",

@@ -1,6 +1,6 @@
 import type { BrowserContext } from "@playwright/test";
 
-/** Collects what must never happen in any test: a request to another origin, a breach of the policy, an uncaught error. */
+/** Collects what must never happen in any test: a request to another origin, a breach of the policy, an error in the page or its console. */
 export interface Guard {
   /** Takes out the incidents a test provoked on purpose; what is left fails the test. */
   take(pattern: RegExp): string[];
@@ -8,6 +8,9 @@ export interface Guard {
 }
 
 const BREACH = "policy breach:";
+/** What a browser itself notes of a server that does not answer, which many a test wants. */
+const UNREACHED =
+  /^Failed to load resource|ERR_(INTERNET_DISCONNECTED|CONNECTION_REFUSED)|error occurred when fetching the script/;
 
 export async function guardContext(context: BrowserContext, origin: string): Promise<Guard> {
   const incidents: string[] = [];
@@ -24,7 +27,8 @@ export async function guardContext(context: BrowserContext, origin: string): Pro
   context.on("weberror", (fault) => incidents.push(`uncaught error: ${fault.error().stack ?? fault.error().message}`));
   context.on("console", (message) => {
     const text = message.text();
-    if (text.startsWith(BREACH) || text.includes("Content Security Policy")) incidents.push(`console: ${text}`);
+    const isBreach = text.startsWith(BREACH) || text.includes("Content Security Policy");
+    if (isBreach || (message.type() === "error" && !UNREACHED.test(text))) incidents.push(`console: ${text}`);
   });
   await context.addInitScript((mark) => {
     document.addEventListener("securitypolicyviolation", (event) => {
