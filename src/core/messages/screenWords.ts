@@ -49,6 +49,7 @@ export const casesWords = {
   importedTitle: "Imported",
   imported: (label: string) => `“${label}” is stored on this device.`,
   refusedTitle: (name: string) => `“${name}” was not imported`,
+  at: (path: readonly (string | number)[]) => `(at ${path.join(".")})`,
   exportFailedTitle: "Nothing was exported",
   refusedMore: (count: number) => `and ${count} more ${count === 1 ? "fault" : "faults"} in the same file.`,
   removeTitle: "Remove this case?",
@@ -106,7 +107,7 @@ export const medicinesWords = {
   unverified: (count: number, of: number) =>
     `${count} of ${of} figures are from memory and unverified. Check them against the named source before you rely on them.`,
   measuredIn: "measured in",
-  appliesTo: "applies to",
+  appliesTo: "Applies to",
   kinetics: "Kinetics",
   apparent: "Clearance and volume are per bioavailability (CL/F and V/F): products state a bioavailability of 1.",
   figure: "figure",

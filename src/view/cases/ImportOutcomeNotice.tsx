@@ -32,7 +32,8 @@ export function ImportOutcomeNotice({ outcome, onOpen, onDismiss }: ImportOutcom
       <ul className="cases-screen-faults">
         {shown.map((issue, index) => (
           <li key={index}>
-            {issue.path.length > 0 ? <code>{issue.path.join(".")}</code> : null} {issueMessage(issue)}
+            {issueMessage(issue)}
+            {issue.path.length > 1 ? <span> {casesWords.at(issue.path)}</span> : null}
           </li>
         ))}
         {more > 0 ? <li>{casesWords.refusedMore(more)}</li> : null}

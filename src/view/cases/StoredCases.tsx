@@ -33,12 +33,13 @@ export function StoredCases({ entries, zone, canRemove, onOpen, onExport, onRemo
             cell: (entry) => (
               <span>
                 <strong>{labelOf(entry)}</strong>
+                {entry.demo ? " " : null}
                 {entry.demo ? <span className="cases-screen-demo">{casesWords.demoMark}</span> : null}
               </span>
             ),
           },
           { id: "medicine", head: casesWords.medicine, cell: (entry) => entry.medicine },
-          { id: "saved", head: casesWords.savedWhen, cell: (entry) => instantText(entry.savedAt, zone, "full") },
+          { id: "saved", head: casesWords.savedWhen, cell: (entry) => instantText(entry.savedAt, zone, "typed") },
           {
             id: "actions",
             head: casesWords.actions,

@@ -63,6 +63,7 @@ export function DoseTextField(props: DoseTextFieldProps) {
               type="text"
               autoComplete="off"
               spellCheck={false}
+              // biome-ignore lint/a11y/noAutofocus: only in a panel that was opened to type here
               autoFocus={props.hasInitialFocus ?? false}
               value={text}
               onChange={(event) => {

@@ -1,6 +1,6 @@
 import { useState } from "react";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
-import { issueMessage, medicinesWords } from "../../core/messages/index.ts";
+import { casesWords, issueMessage, medicinesWords } from "../../core/messages/index.ts";
 import type { Issue, Result } from "../../core/result/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { Dialog } from "../ui/Dialog.tsx";
@@ -142,7 +142,8 @@ function IssueList({ issues }: { readonly issues: readonly Issue[] }) {
     <ul className="medicines-screen-faults">
       {issues.map((issue, index) => (
         <li key={index}>
-          {issue.path.length > 0 ? <strong>{issue.path.join(".")}</strong> : null} {issueMessage(issue)}
+          {issueMessage(issue)}
+          {issue.path.length > 1 ? <span className="medicines-screen-soft"> {casesWords.at(issue.path)}</span> : null}
         </li>
       ))}
     </ul>

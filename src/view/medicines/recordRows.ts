@@ -94,7 +94,7 @@ export function sourceNumber(record: MedicineRecord, source: string): number {
 }
 
 /** A title is cut here where it stands for a source in a table; the list below has it whole. */
-const SHORT = 40;
+const SHORT = 48;
 
 /** "Hussein Z, 1997", or the beginning of the title where no author is named. */
 export function sourceShort(record: MedicineRecord, id: string): string {
@@ -105,7 +105,8 @@ export function sourceShort(record: MedicineRecord, id: string): string {
 }
 
 function beginning(title: string): string {
-  const part = title.split(/[:(]/)[0]?.trim() ?? title;
+  const first = title.split(/[:(]/)[0]?.trim() ?? title;
+  const part = first.length < SHORT / 3 ? title : first;
   if (part.length <= SHORT) return part;
   return `${part.slice(0, part.lastIndexOf(" ", SHORT)).replace(/[,;]$/, "")} …`;
 }

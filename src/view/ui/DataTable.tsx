@@ -35,6 +35,14 @@ export function DataTable<Row>({
   isRowFaint,
   empty,
 }: DataTableProps<Row>) {
+  if (rows.length === 0 && empty) {
+    return (
+      <div className="data-table-none">
+        <p className={isCaptionHidden ? "visually-hidden" : "data-table-caption"}>{caption}</p>
+        <p>{empty}</p>
+      </div>
+    );
+  }
   return (
     // biome-ignore-start lint/a11y/noRedundantRoles: display:block on a narrow screen takes the table's own roles away
     // biome-ignore-start lint/a11y/useSemanticElements: the same
@@ -55,13 +63,6 @@ export function DataTable<Row>({
         </tr>
       </thead>
       <tbody role="rowgroup">
-        {rows.length === 0 && empty ? (
-          <tr role="row">
-            <td role="cell" className="data-table-empty" colSpan={columns.length}>
-              {empty}
-            </td>
-          </tr>
-        ) : null}
         {rows.map((row) => (
           <tr key={rowKey(row)} role="row" className={isRowFaint?.(row) ? "data-table-faint" : undefined}>
             {columns.map((column) => {

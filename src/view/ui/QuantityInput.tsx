@@ -55,6 +55,7 @@ export function QuantityInput<U extends UnitCode>(props: QuantityInputProps<U>) 
             autoComplete="off"
             spellCheck={false}
             readOnly={isReadOnly}
+            // biome-ignore lint/a11y/noAutofocus: only in a panel that was opened to type here
             autoFocus={props.hasInitialFocus ?? false}
             value={draft.text}
             onChange={(event) => {
