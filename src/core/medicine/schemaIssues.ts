@@ -14,7 +14,13 @@ export function pathText(path: Path): string {
  * `input` is what was parsed; the found value is looked up in it.
  */
 export function schemaIssues(error: z.ZodError, input: unknown): Issue[] {
-  return error.issues.flatMap((fault) => faultIssues(fault, input, []));
+  const issues = error.issues.flatMap((fault) => faultIssues(fault, input, []));
+  // A text that has the wrong form can fail a second check of its form: one fault all the same.
+  return issues.filter((each, i) => !issues.slice(0, i).some((earlier) => isSameFault(earlier, each)));
+}
+
+function isSameFault(a: Issue, b: Issue): boolean {
+  return a.code === b.code && a.path.length === b.path.length && a.path.every((part, i) => part === b.path[i]);
 }
 
 function faultIssues(fault: SchemaFault, input: unknown, base: Path): Issue[] {
