@@ -60,6 +60,6 @@ function impureWord(node: SyntaxNode, parent: SyntaxNode | null, key: string, is
 /** A name that stands for a value, not the name of a field. */
 function isReference(node: SyntaxNode, parent: SyntaxNode | null, key: string): boolean {
   if (node.type !== "Identifier" || !isNode(parent)) return false;
-  const isFieldName = (key === "property" || key === "key") && parent.computed !== true && parent.shorthand !== true;
+  const isFieldName = (key === "property" || key === "key") && parent.computed !== true;
   return !isFieldName;
 }

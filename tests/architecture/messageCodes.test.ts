@@ -23,7 +23,9 @@ describe("codes and sentences fit", () => {
     const raised = concernCodes(sources);
     expect(raised.length).toBeGreaterThan(5);
     expect(
-      raised.filter(({ code }) => !CONCERN_CODES.includes(code)).map(({ file, line, code }) => `${file}:${line} ${code}`),
+      raised
+        .filter(({ code }) => !CONCERN_CODES.includes(code))
+        .map(({ file, line, code }) => `${file}:${line} ${code}`),
     ).toEqual([]);
   });
 
