@@ -15,11 +15,9 @@ export const SUMMARY_TITLES = {
   window: "Target window",
   figures: "Figures, with formula and source",
   doses: "Doses counted",
-  sampling: "Sampling advice of the medicine record",
-  limits: "Dose limits of the medicine record",
   concerns: "Concerns in full",
   elements: "For the record",
-  sources: "Sources of the medicine record",
+  sources: "Sources",
   notes: "Notes of the case",
   recompute: "Recompute every figure",
 } as const;
@@ -48,7 +46,7 @@ export const SUMMARY_BUTTONS = {
 } as const;
 
 export const SUMMARY_STATEMENT =
-  "Supports, and does not replace, the judgement of a licensed professional and local policy. Check against the current product information before use.";
+  "Supports, and does not replace, a licensed professional's judgement and local policy. Check against current product information before use.";
 
 export const NOT_RECORDED = "not recorded";
 export const WATERMARK = "demo — invented patient";
@@ -83,7 +81,7 @@ export const summaryHeadWords = {
   record: (name: string, version: number) => `record “${name}” version ${version}`,
   fingerprint: (groups: string) => `fingerprint ${groups}`,
   recompute: (command: string) =>
-    `Export the case and run ${command} with its file: it prints every figure of this sheet and the same fingerprint.`,
+    `Export the case and run ${command} with its file: it prints the figures of this summary and the same fingerprint,`,
 } as const;
 
 export const summaryChartWords = {
@@ -192,18 +190,19 @@ export const summaryReadingWords = {
   noRepeat: "The option does not repeat, so it has no steady state.",
   noCommonPeriod: "The lines have no common period within two weeks, so no steady state is given.",
   chanceLeftOut: "One prediction: no range and no chance of staying in the window is given.",
-  below: (edge: string) => `Below ${edge}`,
-  within: (low: string, high: string) => `Within ${low} to ${high}`,
-  above: (edge: string) => `Above ${edge}`,
+  hoursOf: (title: string, low: string, high: string) => `${title} of ${low} to ${high}`,
+  below: "below",
+  within: "within",
+  above: "above",
   clearance: (isApparent: boolean) => (isApparent ? "Clearance, over bioavailability" : "Clearance"),
   volume: (isApparent: boolean) => (isApparent ? "Volume, over bioavailability" : "Volume"),
   halfLife: "Half-life",
-  absorption: (product: string) => `Absorption rate, ${product}`,
-  lag: (product: string) => `Lag before absorption, ${product}`,
-  bioavailability: (product: string) => `Bioavailability, ${product}`,
+  absorption: "Absorption rate",
+  lag: "Lag before absorption",
+  bioavailability: "Bioavailability",
   noModel: "No prediction: something the model needs is missing. See the concerns.",
   flipFlop: (product: string, elimination: string, absorption: string) =>
-    `The model takes ${elimination} for elimination and ${absorption} for absorption from the ${product}; the two exchanged draw the same curve with the same clearance (see details).`,
+    `Half-life taken as ${elimination} for elimination and ${absorption} for absorption from the ${product}; exchanged, they draw the same curve with the same clearance.`,
 } as const;
 
 export const summaryLevelWords = {
@@ -261,22 +260,27 @@ export const summaryDetailWords = {
   creatinine: "Serum creatinine",
   idealWeight: "Ideal weight",
   adjustedWeight: "Adjusted weight",
-  bodyMassIndex: "Body mass index",
   creatinineClearance: "Creatinine clearance, Cockcroft–Gault",
   eliminationRate: "Elimination rate",
-  numbered: (number: number) => `source ${number}`,
+  numbered: (number: number) => `(${number})`,
   marked: (text: string) => `${text} *`,
   cited: (text: string, number: number) => `${text} (${number})`,
   markRemark: "(n) source n in the details; * from memory or common practice, unverified.",
   sourcesRemark: "(n) source n in the details.",
-  sourceAndBasis: (source: string, basis: string) => (source === basis ? source : `${source}; ${basis}`),
+  sourceAndBasis: (source: string, basis: string) => `${source} ${basis}`,
+  bases: {
+    seen: "read",
+    memory: "from memory, unverified",
+    "common practice": "common practice",
+    invented: "invented",
+  },
   input: (name: string, value: string) => `${name} = ${value}`,
   line: (product: string, amount: string, schedule: string, start: string) =>
     `${product}: ${amount} ${schedule}, from ${start}.`,
   dose: (when: string, amount: string, status: string) => `${when}: ${amount}${status}`,
   status: {
     taken: "",
-    missed: ", missed, not counted",
+    missed: ", missed",
     late: ", late",
     moved: ", moved",
     "after-now": ", after the now line, not counted",
@@ -288,30 +292,30 @@ export const summaryDetailWords = {
 
 /** Rows of the details: what a note on a pharmacokinetic question should contain. */
 export const summaryElementWords = {
-  purpose: "Purpose and requester",
-  assay: "Medicine, specimen, assay",
-  assayUnknown: (medicine: string, matrix: string) => `${medicine}, ${matrix}; assay ${NOT_RECORDED}`,
+  purpose: "Purpose, requester",
+  assay: "Specimen, assay",
+  assayUnknown: (matrix: string) => `${matrix}; assay ${NOT_RECORDED}`,
   regimen: "Regimen before",
   duration: "Duration of therapy",
-  durationFrom: (when: string) => `first listed dose ${when}; earlier doses ${NOT_RECORDED}`,
+  durationFrom: (when: string) => `listed from ${when}; before ${NOT_RECORDED}`,
   salt: "Salt or base, brand",
-  steady: "Steady state at the levels",
+  steady: "Steady at the levels",
   kidney: "Kidney function",
   liver: "Liver function",
   albumin: "Albumin",
-  otherFactors: "Haematocrit, pregnancy, genotype",
+  haematocrit: "Haematocrit",
+  pregnancy: "Pregnancy, genotype",
   smoking: "Smoking",
   interactions: "Other medicines",
-  meals: "Food, vomiting, other events",
+  meals: "Food, vomiting, other",
   adherence: "Adherence",
-  adherenceMissed: (missed: number, listed: number) =>
-    `${missed} of ${listed} listed doses missed; how it was assessed ${NOT_RECORDED}`,
-  response: "Clinical response, signs of toxicity",
+  adherenceMissed: (missed: number, listed: number) => `${missed} of ${listed} doses missed; how known ${NOT_RECORDED}`,
+  response: "Response, toxicity",
   target: "Target",
-  interpretation: "Interpretation of the levels",
-  currentExposure: "Exposure on the regimen before",
-  monitoring: "Who acts on the level, when to call",
-  communication: "Told to whom, when; read back",
+  interpretation: "Interpretation",
+  currentExposure: "Exposure before",
+  monitoring: "Who acts on the level",
+  communication: "Told to, read back",
   patientTold: "Patient told",
   factor: (detail: string, from: string) => `${detail}, from ${from}`,
   factorUntil: (detail: string, from: string, to: string) => `${detail}, ${from} to ${to}`,

@@ -13,28 +13,32 @@ import type { SummaryDetails, SummaryModel } from "./summaryModel.ts";
 export function SummaryDetailsSheet({ model }: { readonly model: SummaryModel }) {
   const { details } = model;
   return (
-    <SummaryPaper model={model} heading={summaryHeadWords.details(model.heading)}>
+    <SummaryPaper model={model} heading={summaryHeadWords.details(model.heading)} isDetails>
       <Concerns concerns={details.concerns} />
       <Figures figures={details.figures} />
-      {details.flipFlop.length > 0 && <Sentences title={titles.flipFlop} sentences={details.flipFlop} />}
       <Doses doses={details.doses} />
-      <div className="summary-columns summary-columns-even">
-        <div>
-          <SummaryBlock title={titles.elements}>
-            <SummaryRows rows={details.elements} />
-          </SummaryBlock>
+      <SummaryBlock title={titles.elements}>
+        <div className="summary-elements">
+          <SummaryRows rows={details.elements} />
         </div>
-        <div>
-          <Bullets title={titles.sampling} items={details.sampling} />
-          <Bullets title={titles.limits} items={details.limits} />
-          {details.notes !== "" && <Sentences title={titles.notes} sentences={[details.notes]} />}
-          <SummaryBlock title={titles.recompute}>
-            <p>{details.recompute}</p>
-            <p className="summary-fingerprint">{details.fingerprint}</p>
-          </SummaryBlock>
-        </div>
-      </div>
-      <Bullets title={titles.sources} items={details.sources} isColumned />
+      </SummaryBlock>
+      {details.notes !== "" && (
+        <SummaryBlock title={titles.notes}>
+          <p className="summary-notes">{details.notes}</p>
+        </SummaryBlock>
+      )}
+      <SummaryBlock title={titles.sources}>
+        <ol className="summary-two summary-sources">
+          {details.sources.map((source) => (
+            <li key={source}>{source}</li>
+          ))}
+        </ol>
+      </SummaryBlock>
+      <SummaryBlock title={titles.recompute}>
+        <p>
+          {details.recompute} <span className="summary-fingerprint">{details.fingerprint}</span>
+        </p>
+      </SummaryBlock>
     </SummaryPaper>
   );
 }
@@ -98,35 +102,6 @@ function Doses({ doses }: Pick<SummaryDetails, "doses">) {
         </ul>
       )}
       {doses.remark !== "" && <p className="summary-remark">{doses.remark}</p>}
-    </SummaryBlock>
-  );
-}
-
-function Sentences({ title, sentences }: { readonly title: string; readonly sentences: readonly string[] }) {
-  return (
-    <SummaryBlock title={title}>
-      {sentences.map((sentence) => (
-        <p key={sentence}>{sentence}</p>
-      ))}
-    </SummaryBlock>
-  );
-}
-
-interface BulletsProps {
-  readonly title: string;
-  readonly items: readonly string[];
-  readonly isColumned?: boolean;
-}
-
-function Bullets({ title, items, isColumned = false }: BulletsProps) {
-  if (items.length === 0) return null;
-  return (
-    <SummaryBlock title={title}>
-      <ul className={isColumned ? "summary-two" : undefined}>
-        {items.map((text) => (
-          <li key={text}>{text}</li>
-        ))}
-      </ul>
     </SummaryBlock>
   );
 }

@@ -1,9 +1,15 @@
 import type { SummaryRow } from "./summaryModel.ts";
 
-/** Name and value, a line each; label and value never part. */
-export function SummaryRows({ rows }: { readonly rows: readonly SummaryRow[] }) {
+interface SummaryRowsProps {
+  readonly rows: readonly SummaryRow[];
+  /** Side by side instead of one below the other. */
+  readonly isBeside?: boolean;
+}
+
+/** Names with their values; a name and its value never part. */
+export function SummaryRows({ rows, isBeside = false }: SummaryRowsProps) {
   return (
-    <dl className="summary-rows">
+    <dl className={isBeside ? "summary-rows summary-rows-beside" : "summary-rows"}>
       {rows.map(({ label, value }) => (
         <div key={label}>
           <dt>{label}</dt>

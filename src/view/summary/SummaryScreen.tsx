@@ -11,7 +11,7 @@ import { buildSummary } from "./buildSummary.ts";
 import { printRefusal } from "./printRefusal.ts";
 import { SummarySheet } from "./SummarySheet.tsx";
 import { type SummaryInput, summaryInput } from "./summaryInput.ts";
-import { summaryScene } from "./summaryScene.ts";
+import { summaryDays, summaryNowLabels, summaryScene } from "./summaryScene.ts";
 import "./SummaryScreen.css";
 
 /** The summary on the desk: what will be printed, with the way to print it and back. */
@@ -57,8 +57,8 @@ function Preview({ input }: { readonly input: SummaryInput }) {
           mode="print"
           title={model.chart.title}
           unitLabel={model.chart.unit}
-          nowLabels={model.chart}
-          dayLabels={model.chart.days.map(({ atH, text }) => ({ x: scene.clock.x(atH), text }))}
+          nowLabels={summaryNowLabels(scene, model.chart)}
+          dayLabels={summaryDays(scene, model.chart)}
         />
       }
     />

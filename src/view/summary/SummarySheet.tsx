@@ -23,46 +23,58 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
   return (
     <div className="summary-sheets" data-theme="paper" data-size={model.pageSize}>
       <SummaryPaper model={model} heading={model.heading}>
-        {model.banners.map((banner) => (
-          <div key={`${banner.title} ${banner.text}`} className={`summary-banner summary-banner-${banner.gravity}`}>
-            <GravityMark gravity={banner.gravity} />
-            <p>
-              <strong>{banner.title}.</strong> {banner.text}
-            </p>
-          </div>
-        ))}
+        <Banners banners={model.banners} />
         {model.order && <Order order={model.order} />}
         <figure className="summary-chart">{chart}</figure>
         <div className="summary-columns">
           <div>
-            <Readings model={model} />
+            {model.expected && (
+              <SummaryBlock title={model.expected.title}>
+                <SummaryRows rows={model.expected.rows} />
+                <p className="summary-remark">{model.expected.remark}</p>
+              </SummaryBlock>
+            )}
             <Levels levels={model.levels} />
           </div>
           <div>
             <SummaryBlock title={model.nextLevel.title}>
               <p>{model.nextLevel.sentences.join(" ")}</p>
             </SummaryBlock>
-            <SummaryBlock title={titles.cautions}>
-              <ul>
-                {model.concerns.map((concern) => (
-                  <li key={`${concern.title} ${concern.text}`}>
-                    <strong>{concern.title}.</strong> {concern.text}
-                  </li>
-                ))}
-                {model.cautions.map((text) => (
-                  <li key={text}>{text}</li>
-                ))}
-              </ul>
-            </SummaryBlock>
-            <SummaryBlock title={titles.assumes}>
-              <ul>
-                {model.assumes.map((text) => (
-                  <li key={text}>{text}</li>
-                ))}
-              </ul>
+            {model.hours && (
+              <SummaryBlock title={model.hours.title}>
+                <SummaryRows rows={model.hours.rows} isBeside />
+                <p className="summary-remark">{model.hours.span}</p>
+              </SummaryBlock>
+            )}
+            <SummaryBlock title={model.kinetics.title}>
+              {model.kinetics.rows.length > 0 && <SummaryRows rows={model.kinetics.rows} isBeside />}
+              {model.kinetics.sentences.map((sentence) => (
+                <p key={sentence} className="summary-remark">
+                  {sentence}
+                </p>
+              ))}
             </SummaryBlock>
           </div>
         </div>
+        <SummaryBlock title={titles.cautions} beside={model.cautionsRemark}>
+          <ul className="summary-two summary-fine">
+            {model.concerns.map((concern) => (
+              <li key={`${concern.title} ${concern.text}`}>
+                <strong>{concern.title}.</strong> {concern.text}
+              </li>
+            ))}
+            {model.cautions.map((text) => (
+              <li key={text}>{text}</li>
+            ))}
+          </ul>
+        </SummaryBlock>
+        <SummaryBlock title={titles.assumes}>
+          <ul className="summary-two summary-fine">
+            {model.assumes.map((text) => (
+              <li key={text}>{text}</li>
+            ))}
+          </ul>
+        </SummaryBlock>
         <div className="summary-signatures">
           <p>
             <span className="summary-signed">{model.preparedBy}</span>
@@ -81,6 +93,22 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
       <SummaryDetailsSheet model={model} />
     </div>
   );
+}
+
+/** Everything grave in one frame, then what is unchecked. */
+function Banners({ banners }: Pick<SummaryModel, "banners">) {
+  return (["stop", "check"] as const).map((gravity) => {
+    const own = banners.filter((banner) => banner.gravity === gravity);
+    return own.length === 0 ? null : (
+      <div key={gravity} className={`summary-banner summary-banner-${gravity}`}>
+        {own.map((banner) => (
+          <p key={`${banner.title} ${banner.text}`}>
+            <GravityMark gravity={gravity} /> <strong>{banner.title}.</strong> {banner.text}
+          </p>
+        ))}
+      </div>
+    );
+  });
 }
 
 function Order({ order }: { readonly order: NonNullable<SummaryModel["order"]> }) {
@@ -103,38 +131,11 @@ function Order({ order }: { readonly order: NonNullable<SummaryModel["order"]> }
   );
 }
 
-function Readings({ model }: { readonly model: SummaryModel }) {
-  const { expected, hours, kinetics } = model;
-  return (
-    <>
-      {expected && (
-        <SummaryBlock title={expected.title}>
-          <SummaryRows rows={expected.rows} />
-          <p className="summary-remark">{expected.remark}</p>
-        </SummaryBlock>
-      )}
-      {hours && (
-        <SummaryBlock title={hours.title} beside={hours.span}>
-          <SummaryRows rows={hours.rows} />
-        </SummaryBlock>
-      )}
-      <SummaryBlock title={kinetics.title}>
-        {kinetics.rows.length > 0 && <SummaryRows rows={kinetics.rows} />}
-        {kinetics.sentences.map((sentence) => (
-          <p key={sentence} className="summary-remark">
-            {sentence}
-          </p>
-        ))}
-      </SummaryBlock>
-    </>
-  );
-}
-
 function Levels({ levels }: { readonly levels: SummaryModel["levels"] }) {
   return (
-    <SummaryBlock title={levels.title}>
+    <SummaryBlock title={levels.title} beside={levels.remark}>
       {levels.rows.length > 0 && (
-        <table className="summary-table">
+        <table className="summary-table summary-levels">
           <thead>
             <tr>
               <th scope="col">{columns.drawn}</th>
@@ -160,7 +161,6 @@ function Levels({ levels }: { readonly levels: SummaryModel["levels"] }) {
           </tbody>
         </table>
       )}
-      <p className="summary-remark">{levels.remark}</p>
     </SummaryBlock>
   );
 }

@@ -21,10 +21,9 @@ export function assumptionsText(input: SummaryInput, print: SummaryPrint): reado
   return [
     isIndividual ? words.individual : words.typical,
     words.record(medicine.name, medicine.recordVersion, reviewWords(medicine), unverifiedWords(medicine)),
-    ...doseAssumptions(input.analysis.given, print),
-    kidneyWords(input, print),
-    words.now(print.at(instantMs(input.case.now), "full")),
-    words.zone(input.case.timeZone),
+    doseAssumption(input.analysis.given, print),
+    words.kidney(kidneyWords(input, print)),
+    words.now(print.at(instantMs(input.case.now), "full"), input.case.timeZone),
   ];
 }
 
@@ -40,8 +39,8 @@ export function unverifiedWords(record: MedicineRecord): string {
   return summaryBannerWords.unverified(memory + commonPractice + invented, total);
 }
 
-function doseAssumptions(given: readonly DoseMark[], print: SummaryPrint): readonly string[] {
-  if (given.length === 0) return [words.noDoses];
+function doseAssumption(given: readonly DoseMark[], print: SummaryPrint): string {
+  if (given.length === 0) return words.noDoses;
   const when = (hours: number) => print.at(print.ms(hours), "dayClock");
   const missed = given.filter(({ status }) => status === "missed").map(({ scheduledH }) => when(scheduledH));
   const late = given
@@ -51,20 +50,20 @@ function doseAssumptions(given: readonly DoseMark[], print: SummaryPrint): reado
     list.length <= NAMED_DOSES
       ? listWords(list)
       : words.many(listWords(list.slice(0, NAMED_DOSES)), list.length - NAMED_DOSES);
-  return [
-    words.doses(given.filter(({ countedMg }) => countedMg > 0).length),
-    ...(missed.length > 0 ? [words.missed(named(missed))] : []),
-    ...(late.length > 0 ? [words.lateAll(named(late))] : []),
-  ];
+  return words.doses(
+    given.filter(({ countedMg }) => countedMg > 0).length,
+    missed.length > 0 ? words.missed(named(missed)) : "",
+    late.length > 0 ? words.lateAll(named(late)) : "",
+  );
 }
 
 export function kidneyWords({ analysis }: SummaryInput, print: SummaryPrint): string {
   const { creatinineClearance, clearanceWeight } = analysis.patient;
   return creatinineClearance && clearanceWeight
-    ? words.kidney(
+    ? words.kidneyBy(
         print.quantity(creatinineClearance.value, creatinineClearance.unit),
         summaryDetailWords.cockcroftGault,
         clearanceWeight,
       )
-    : words.kidneyUnknown;
+    : NOT_RECORDED;
 }

@@ -1,6 +1,6 @@
 import {
   capitalised,
-  listWords,
+  summaryDetailWords as detailWords,
   SUMMARY_STATEMENT,
   SUMMARY_TITLES,
   summaryChartWords,
@@ -8,14 +8,16 @@ import {
   summaryHeadWords as words,
 } from "../../core/messages/summaryWords.ts";
 import { assumptionsText } from "./assumptionsText.ts";
+import { type Citations, citations, isUnverified } from "./citations.ts";
 import { dosesText } from "./dosesText.ts";
-import { expectedText, hoursText, shownReadings } from "./expectedText.ts";
+import { expectedText, hoursText } from "./expectedText.ts";
 import { figuresText } from "./figuresText.ts";
-import { flipFlopText, kineticsText } from "./kineticsText.ts";
+import { kineticsText } from "./kineticsText.ts";
 import { levelsText } from "./levelsText.ts";
 import { nextLevelText } from "./nextLevelText.ts";
 import { noteElements } from "./noteElements.ts";
 import { printRefusal } from "./printRefusal.ts";
+import { shownReadings } from "./shownReadings.ts";
 import { concernsOfOption, concernText, summaryBanners } from "./summaryBanners.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryChart, SummaryDetails, SummaryModel } from "./summaryModel.ts";
@@ -27,9 +29,13 @@ const RECOMPUTE_COMMAND = "npm run -s recompute -- FILE";
 /** Digits of the fingerprint on the first sheet; the details have all 64. */
 const FINGERPRINT_SHORT = 12;
 
+/** Concerns whose sentence the first sheet has already: in a banner, under the levels and among the assumptions. */
+const SAID_ELSEWHERE: readonly string[] = ["dose-not-makeable", "levels-not-used"];
+
 /** The printed summary as strings: pure, so that what is printed can be read and searched without a page. */
 export function buildSummary(input: SummaryInput): SummaryModel {
   const print = summaryPrint(input);
+  const cite = citations(input.case.medicine);
   const { case: value, analysis } = input;
   const refusal = printRefusal(input);
   const order = summaryOrder(input, print);
@@ -62,31 +68,27 @@ export function buildSummary(input: SummaryInput): SummaryModel {
     levels: levelsText(input, print),
     nextLevel: nextLevelText(input, print),
     concerns: concernsOfOption(input)
-      .filter(({ gravity, code }) => gravity === "check" && code !== "dose-not-makeable")
+      .filter(({ gravity, code }) => gravity === "check" && !SAID_ELSEWHERE.includes(code))
       .map(concernText),
-    cautions: value.medicine.cautions.map(({ text }) => text),
+    cautions: value.medicine.cautions.map(cite.ofStatement),
+    cautionsRemark: value.medicine.cautions.some(isUnverified) ? detailWords.markRemark : detailWords.sourcesRemark,
     assumes: assumptionsText(input, print),
     preparedBy: input.settings.preparedBy.trim(),
     statement: SUMMARY_STATEMENT,
     footer: words.footer(input.programVersion, record, fingerprint),
-    details: details(input, print),
+    details: details(input, cite, print),
   };
 }
 
-function details(input: SummaryInput, print: SummaryPrint): SummaryDetails {
-  const { medicine, notes } = input.case;
+function details(input: SummaryInput, cite: Citations, print: SummaryPrint): SummaryDetails {
+  const { notes } = input.case;
   return {
-    figures: figuresText(input, print),
-    flipFlop: flipFlopText(input, print),
-    doses: dosesText(input, print),
-    sampling: medicine.sampling.map(({ text }) => text),
-    limits: medicine.doseLimits.map(({ text }) => text),
     concerns: input.analysis.concerns.map(concernText),
+    figures: figuresText(input, cite, print),
+    doses: dosesText(input, print),
     elements: noteElements(input, print),
-    sources: Object.entries(medicine.sources).map(([id, { authors, title, year, place }]) =>
-      words.source(id, [authors, title, year, place].filter((part) => part !== undefined && part !== "").join(", ")),
-    ),
     notes: notes.trim(),
+    sources: cite.list(),
     fingerprint: fingerprintGroups(input.analysis.fingerprint),
     recompute: words.recompute(RECOMPUTE_COMMAND),
   };
@@ -114,7 +116,7 @@ function chartWords(input: SummaryInput, print: SummaryPrint): SummaryChart {
     ...(value.levels.length > 0 ? [summaryChartWords.levels(value.levels.length)] : []),
   ];
   return {
-    title: listWords(said),
+    title: said.join("; "),
     unit: summaryChartWords.unit,
     before: summaryChartWords.given,
     after: summaryChartWords.proposed,

@@ -1,26 +1,10 @@
-import type { DoseMark, OptionReadings, OptionResult } from "../../core/analysis/index.ts";
+import type { DoseMark, OptionReadings } from "../../core/analysis/index.ts";
 import { SUMMARY_TITLES as titles, summaryReadingWords as words } from "../../core/messages/summaryWords.ts";
+import { shownReadings } from "./shownReadings.ts";
+import { steadyFromMs } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryModel, SummaryRow } from "./summaryModel.ts";
-import { chosenOption } from "./summaryOrder.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
-
-interface ShownReadings {
-  readonly option: OptionResult;
-  readonly readings: OptionReadings;
-  readonly patient: string;
-}
-
-/** Readings of the chosen option: of this patient where the case asks for it and there are any, else of the typical patient. */
-export function shownReadings(input: SummaryInput): ShownReadings | null {
-  const chosen = chosenOption(input.case);
-  const option = input.analysis.options.find(({ id }) => id === chosen?.id);
-  if (!option) return null;
-  if (input.case.fit.use === "individual" && option.individual) {
-    return { option, readings: option.individual, patient: words.individual };
-  }
-  return option.typical ? { option, readings: option.typical, patient: words.typical } : null;
-}
 
 export function expectedText(input: SummaryInput, print: SummaryPrint): SummaryModel["expected"] {
   const shown = shownReadings(input);
@@ -29,7 +13,7 @@ export function expectedText(input: SummaryInput, print: SummaryPrint): SummaryM
   return readings.steadyState
     ? {
         title: words.titled(titles.expectedSteady, patient),
-        rows: steadyRows(readings.steadyState, shown.option.doses, print),
+        rows: steadyRows(readings.steadyState, shown.option.doses, steadyFromMs(input, print), print),
         remark: words.chanceLeftOut,
       }
     : {
@@ -42,6 +26,7 @@ export function expectedText(input: SummaryInput, print: SummaryPrint): SummaryM
 function steadyRows(
   steady: NonNullable<OptionReadings["steadyState"]>,
   doses: readonly DoseMark[],
+  steadyMs: number | null,
   print: SummaryPrint,
 ): readonly SummaryRow[] {
   return [
@@ -55,7 +40,7 @@ function steadyRows(
     { label: words.average, value: print.concentration(steady.average) },
     { label: words.auc24, value: print.quantity(steady.auc24, "mg.h/L") },
     { label: words.accumulation, value: words.times(print.figure(steady.accumulation, 2)) },
-    { label: words.steady90, value: print.at(print.ms(steady.steady90AtH), "dayClock") },
+    { label: words.steady90, value: print.at(steadyMs ?? print.ms(steady.steady90AtH), "dayClock") },
   ];
 }
 
@@ -88,15 +73,14 @@ export function hoursText(input: SummaryInput, print: SummaryPrint): SummaryMode
   const window = input.case.window;
   if (!span || !window || span.hoursBelow === null || span.hoursWithin === null || span.hoursAbove === null)
     return null;
-  const [low, high] = [print.exact(window.low), print.exact(window.high)];
   const fromTo = words.span(print.at(print.ms(span.fromH), "dayClock"), print.at(print.ms(span.toH), "dayClock"));
   return {
-    title: titles.hours,
+    title: words.hoursOf(titles.hours, print.figure(window.low.value, 15), print.exact(window.high)),
     span: fromTo,
     rows: [
-      { label: words.below(low), value: print.hours(span.hoursBelow) },
-      { label: words.within(print.figure(window.low.value, 15), high), value: print.hours(span.hoursWithin) },
-      { label: words.above(high), value: print.hours(span.hoursAbove) },
+      { label: words.below, value: print.hours(span.hoursBelow) },
+      { label: words.within, value: print.hours(span.hoursWithin) },
+      { label: words.above, value: print.hours(span.hoursAbove) },
     ],
   };
 }

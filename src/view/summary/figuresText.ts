@@ -1,6 +1,7 @@
 import type { Traced } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
-import { summaryReadingWords, summaryDetailWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryReadingWords as readingWords, summaryDetailWords as words } from "../../core/messages/summaryWords.ts";
+import type { Citations } from "./citations.ts";
 import { shownModel } from "./kineticsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryFigure } from "./summaryModel.ts";
@@ -11,37 +12,37 @@ import type { SummaryPrint } from "./summaryPrint.ts";
 const INPUT_SIGNIFICANT = 5;
 
 /** Every figure the prediction stands on, with its formula, what went in and its source. */
-export function figuresText(input: SummaryInput, print: SummaryPrint): readonly SummaryFigure[] {
+export function figuresText(input: SummaryInput, cite: Citations, print: SummaryPrint): readonly SummaryFigure[] {
   const { patient } = input.analysis;
   const { medicine } = input.case;
   const model = shownModel(input)?.model;
   const used = new Set([...(chosenOption(input.case)?.lines ?? []), ...input.case.given].map(({ product }) => product));
-  const traced: (readonly [string, Traced | null | undefined])[] = [
-    [words.weight, patient.weight],
-    [words.creatinine, patient.creatinine],
-    [words.bodyMassIndex, patient.bodyMassIndex],
-    [words.idealWeight, patient.idealWeight],
-    [words.adjustedWeight, patient.adjustedWeight],
-    [words.creatinineClearance, patient.creatinineClearance],
-    [summaryReadingWords.clearance(medicine.kinetics.apparent), model?.clearance],
-    [summaryReadingWords.volume(medicine.kinetics.apparent), model?.volume],
-    [words.eliminationRate, model?.eliminationRate],
-    [summaryReadingWords.halfLife, model?.halfLife],
+  const figure = (name: string, traced: Traced | null | undefined) =>
+    traced ? [figureText(name, traced, cite, print)] : [];
+  return [
+    ...figure(words.weight, patient.weight),
+    ...figure(words.creatinine, patient.creatinine),
+    ...figure(words.idealWeight, patient.idealWeight),
+    ...figure(words.adjustedWeight, patient.clearanceWeight === "adjusted" ? patient.adjustedWeight : null),
+    ...figure(words.creatinineClearance, patient.creatinineClearance),
+    ...figure(readingWords.clearance(medicine.kinetics.apparent), model?.clearance),
+    ...figure(readingWords.volume(medicine.kinetics.apparent), model?.volume),
+    ...figure(words.eliminationRate, model?.eliminationRate),
+    ...figure(readingWords.halfLife, model?.halfLife),
     ...(model?.products ?? [])
       .filter(({ product }) => used.has(product))
       .flatMap((each) => {
-        const name = productOf(medicine, each.product).name;
+        const { name } = productOf(medicine, each.product);
         return [
-          [summaryReadingWords.absorption(name), each.absorptionRate],
-          [summaryReadingWords.lag(name), each.lag],
-          [summaryReadingWords.bioavailability(name), each.bioavailability],
-        ] as const;
+          ...figure(readingWords.absorption, each.absorptionRate),
+          ...figure(readingWords.lag, each.lag),
+          ...figure(readingWords.bioavailability, each.bioavailability),
+        ].map((row) => ({ ...row, inputs: [name, row.inputs].filter((part) => part !== "").join("; ") }));
       }),
   ];
-  return traced.flatMap(([name, figure]) => (figure ? [figureText(name, figure, print)] : []));
 }
 
-function figureText(name: string, figure: Traced, print: SummaryPrint): SummaryFigure {
+function figureText(name: string, figure: Traced, cite: Citations, print: SummaryPrint): SummaryFigure {
   return {
     name,
     value: print.quantity(figure.value, figure.unit, { significant: INPUT_SIGNIFICANT }),
@@ -49,7 +50,7 @@ function figureText(name: string, figure: Traced, print: SummaryPrint): SummaryF
     inputs: figure.inputs
       .map((each) => words.input(each.name, print.quantity(each.value, each.unit, { significant: INPUT_SIGNIFICANT })))
       .join("; "),
-    source: words.sourceAndBasis(figure.source, figure.basis),
+    source: cite.ofFigure(figure),
   };
 }
 

@@ -25,27 +25,17 @@ export function kineticsText(input: SummaryInput, print: SummaryPrint): SummaryM
       { label: words.volume(isApparent), value: print.quantity(model.volume.value, model.volume.unit) },
       { label: words.halfLife, value: print.hours(model.halfLife.value) },
     ],
-    sentences: modifiedProducts(input).map((id) => words.flipFlopShort(productOf(input.case.medicine, id).name)),
+    sentences: flipFlopSentences(input, model, print),
   };
 }
 
-/** The flip-flop reading of every modified-release product in use, in full. */
-export function flipFlopText(input: SummaryInput, print: SummaryPrint): readonly string[] {
-  const model = shownModel(input)?.model;
-  if (!model) return [];
+/** Which of the two half-lives the model takes for elimination, for every modified-release product in use. */
+function flipFlopSentences(input: SummaryInput, model: Model, print: SummaryPrint): readonly string[] {
   return modifiedProducts(input).flatMap((id) => {
-    const found = model.products.find(({ product }) => product === id);
-    if (!found) return [];
-    const { assumed, alternative } = found.readings;
-    return [
-      words.flipFlop(
-        productOf(input.case.medicine, id).name,
-        print.hours(assumed.eliminationHalfLife),
-        print.hours(assumed.absorptionHalfLife),
-        print.hours(alternative.eliminationHalfLife),
-        print.quantity(alternative.volume, "L"),
-      ),
-    ];
+    const assumed = model.products.find(({ product }) => product === id)?.readings.assumed;
+    if (!assumed) return [];
+    const { name } = productOf(input.case.medicine, id);
+    return [words.flipFlop(name, print.hours(assumed.eliminationHalfLife), print.hours(assumed.absorptionHalfLife))];
   });
 }
 

@@ -28,7 +28,7 @@ function levelRow(
   const isBelow = level.kind === "below-limit";
   return {
     drawn: print.at(instantMs(level.at), "dayClock"),
-    afterDose: result?.afterDoseH == null ? words.noDose : print.hours(result.afterDoseH),
+    afterDose: result?.afterDoseH == null ? words.noDose : print.quantity(result.afterDoseH, "h"),
     measured: isBelow ? words.belowLimit(measured) : measured,
     predicted: result?.predicted == null ? words.noPrediction : print.concentration(result.predicted),
     difference: result && !isBelow ? differenceText(result) : "",

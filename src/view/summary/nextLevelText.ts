@@ -5,7 +5,8 @@ import {
 } from "../../core/messages/summaryWords.ts";
 import { type DoseLine, doseLineExpand } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR } from "../../core/time/index.ts";
-import { shownReadings } from "./expectedText.ts";
+import { shownReadings } from "./shownReadings.ts";
+import { steadyFromMs } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryModel } from "./summaryModel.ts";
 import { chosenOption } from "./summaryOrder.ts";
@@ -31,7 +32,7 @@ function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] 
     return [reason, words.byQuestion, words.writeTimes];
   }
   const nowMs = instantMs(input.case.now);
-  const steadyMs = print.ms(steadyState.steady90AtH);
+  const steadyMs = steadyFromMs(input, print) ?? print.ms(steadyState.steady90AtH);
   const untilMs = Math.max(steadyMs, nowMs) + (steadyState.periodH + 24) * MS_PER_HOUR;
   const doses = doseInstants(option.lines, input.case.timeZone, untilMs);
   const doseMs = doses.find((ms) => ms >= steadyMs && ms >= nowMs);
@@ -40,15 +41,15 @@ function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] 
     const last = doses.at(-1);
     return last === undefined ? [words.noModel] : [words.endsBefore(steady, print.at(last, "full")), words.byQuestion];
   }
-  return [drawSentence(doseMs, print), words.because(steady), words.writeTimes];
+  return [drawSentence(doseMs, print.at(steadyMs, "dayClock"), print), words.writeTimes];
 }
 
-function drawSentence(doseMs: number, print: SummaryPrint): string {
+function drawSentence(doseMs: number, steady: string, print: SummaryPrint): string {
   const fromMs = doseMs - BEFORE_DOSE_MS;
   const day = print.at(doseMs, "dateYear");
   return print.at(fromMs, "dateYear") === day
-    ? words.draw(day, print.at(fromMs, "clock"), print.at(doseMs, "clock"))
-    : words.drawAcross(print.at(fromMs, "full"), print.at(doseMs, "full"), print.at(doseMs, "clock"));
+    ? words.draw(day, print.at(fromMs, "clock"), print.at(doseMs, "clock"), steady)
+    : words.drawAcross(print.at(fromMs, "full"), print.at(doseMs, "full"), print.at(doseMs, "clock"), steady);
 }
 
 function doseInstants(lines: readonly DoseLine[], zone: string, untilMs: number): readonly number[] {

@@ -10,7 +10,7 @@ import { instantMs } from "../../core/time/index.ts";
 import { kidneyWords } from "./assumptionsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryRow } from "./summaryModel.ts";
-import { runningLines, runningWords } from "./summaryOrder.ts";
+import { chosenOption, runningLines, runningWords } from "./summaryOrder.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
 /**
@@ -27,15 +27,19 @@ export function noteElements(input: SummaryInput, print: SummaryPrint): readonly
   const missed = analysis.given.filter(({ status }) => status === "missed").length;
   const rows: readonly (readonly [string, string])[] = [
     [words.purpose, NOT_RECORDED],
-    [words.assay, words.assayUnknown(medicine.name, medicine.matrix)],
-    [words.regimen, running.length > 0 ? runningWords(value, running, [], print) : NOT_RECORDED],
-    [words.duration, first ? words.durationFrom(print.at(print.ms(first.atH), "dateYear")) : NOT_RECORDED],
+    [words.assay, words.assayUnknown(medicine.matrix)],
+    [
+      words.regimen,
+      running.length > 0 ? runningWords(value, running, chosenOption(value)?.lines ?? [], print) : NOT_RECORDED,
+    ],
+    [words.duration, first ? words.durationFrom(print.at(print.ms(first.atH), "day")) : NOT_RECORDED],
     [words.salt, NOT_RECORDED],
     [words.steady, NOT_RECORDED],
     [words.kidney, kidneyWords(input, print)],
     [words.liver, NOT_RECORDED],
     [words.albumin, latest(value, "albumin", print)],
-    [words.otherFactors, NOT_RECORDED],
+    [words.haematocrit, NOT_RECORDED],
+    [words.pregnancy, NOT_RECORDED],
     [words.smoking, factors("smoking")],
     [words.interactions, factors("interacting-medicine")],
     [words.meals, factors("meal", "vomiting", "other")],

@@ -3,7 +3,6 @@ import { concernMessage, GRAVITY_WORDS } from "../../core/messages/concernMessag
 import { issueMessage } from "../../core/messages/index.ts";
 import { summaryBannerWords as words } from "../../core/messages/summaryWords.ts";
 import type { Issue } from "../../core/result/index.ts";
-import { unverifiedWords } from "./assumptionsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryBanner, SummaryConcern } from "./summaryModel.ts";
 import { chosenOption, type OrderResult } from "./summaryOrder.ts";
@@ -22,9 +21,7 @@ export function summaryBanners(
     ...concernsOfOption(input)
       .filter(({ gravity }) => gravity === "stop")
       .map((concern) => stop(concernMessage(concern))),
-    ...(medicine.review.status === "reviewed"
-      ? []
-      : [{ gravity: "check" as const, ...words.unchecked(medicine.name, unverifiedWords(medicine)) }]),
+    ...(medicine.review.status === "reviewed" ? [] : [{ gravity: "check" as const, ...words.unchecked }]),
   ];
 }
 

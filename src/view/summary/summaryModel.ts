@@ -65,10 +65,7 @@ export interface SummaryDoses {
 
 export interface SummaryDetails {
   readonly figures: readonly SummaryFigure[];
-  readonly flipFlop: readonly string[];
   readonly doses: SummaryDoses;
-  readonly sampling: readonly string[];
-  readonly limits: readonly string[];
   readonly concerns: readonly SummaryConcern[];
   /** What a pharmacokinetic note contains; "not recorded" where the case does not say. */
   readonly elements: readonly SummaryRow[];
@@ -110,6 +107,7 @@ export interface SummaryModel {
   /** Concerns of gravity "check"; those of gravity "stop" are banners. */
   readonly concerns: readonly SummaryConcern[];
   readonly cautions: readonly string[];
+  readonly cautionsRemark: string;
   readonly assumes: readonly string[];
   readonly preparedBy: string;
   readonly statement: string;

@@ -38,8 +38,7 @@ export function summaryPrint(input: Pick<SummaryInput, "case" | "analysis" | "se
     quantity,
     exact: ({ value, unit }) => quantity(value, unit, {}),
     concentration: (mgPerL) => quantity(mgPerL, "mg/L"),
-    hours: (hours) =>
-      summaryReadingWords.hours(numberPrint(hours, { significant: hours < 1 ? 2 : hours < 100 ? 2 : 3 })),
+    hours: (hours) => summaryReadingWords.hours(numberPrint(hours, { decimals: hours < 1 ? 2 : 1 })),
     ms: (atH) => input.analysis.clock.originMs + atH * MS_PER_HOUR,
     at,
     atClock: (ms) => `${at(ms, "dateYear")} at ${at(ms, "clock")}`,

@@ -4,17 +4,46 @@ import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryChart } from "./summaryModel.ts";
 import { chosenOption } from "./summaryOrder.ts";
 
-/** One unit of the drawing is about a CSS pixel on the sheet: 184 mm wide and 62 mm high. */
-const SIZE = { width: 696, height: 234 };
-const MARGIN = { top: 26, right: 40, bottom: 26, left: 34 };
+/** One unit of the drawing is about a CSS pixel on the sheet: 184 mm wide. */
+const WIDTH = 696;
+/** Letter is 18 mm shorter than A4; the profile gives way, not the words. */
+const HEIGHT = { A4: 172, Letter: 146 };
+/** Room at the right for the window's edges, which stand 34 units beyond the plot. */
+const MARGIN = { top: 26, right: 58, bottom: 24, left: 34 };
+
+/** A day's name takes about this much of the axis, in units of the drawing. */
+const DAY_NAME_WIDTH = 84;
+
+/** Names of the days where there is room for them: every day, or every second, third one. */
+export function summaryDays(
+  scene: ProfileScene,
+  words: SummaryChart,
+): readonly { readonly x: number; readonly text: string }[] {
+  const placed = words.days.map(({ atH, text }) => ({ x: scene.clock.x(atH), text }));
+  const dayWidth = (placed[1]?.x ?? scene.plot.right) - (placed[0]?.x ?? scene.plot.left);
+  const step = Math.max(1, Math.ceil(DAY_NAME_WIDTH / dayWidth));
+  return placed.filter((_, index) => index % step === 0);
+}
+
+/** Left of a now line this near to the axis there is no room for a word beside the unit. */
+const UNIT_WIDTH = 110;
+
+/** What stands on either side of the now line. */
+export function summaryNowLabels(
+  scene: ProfileScene,
+  words: SummaryChart,
+): { readonly before: string; readonly after: string } {
+  return { before: scene.nowX !== null && scene.nowX < UNIT_WIDTH ? "" : words.before, after: words.after };
+}
 
 /** The profile of the doses given and the chosen option, in mg per L, for print.css to set in millimetres. */
-export function summaryScene({ case: value, analysis }: SummaryInput, words: SummaryChart): ProfileScene {
+export function summaryScene({ case: value, analysis, settings }: SummaryInput, words: SummaryChart): ProfileScene {
   const { clock, givenCurve } = analysis;
   const chosen = analysis.options.find(({ id }) => id === chosenOption(value)?.id);
   const { window } = value;
   const scene = profileScene({
-    ...SIZE,
+    width: WIDTH,
+    height: HEIGHT[settings.pageSize],
     margin: MARGIN,
     fromH: clock.fromH,
     toH: clock.toH,

@@ -1,0 +1,21 @@
+import type { OptionReadings, OptionResult } from "../../core/analysis/index.ts";
+import { summaryReadingWords as words } from "../../core/messages/summaryWords.ts";
+import type { SummaryInput } from "./summaryInput.ts";
+import { chosenOption } from "./summaryOrder.ts";
+
+interface ShownReadings {
+  readonly option: OptionResult;
+  readonly readings: OptionReadings;
+  readonly patient: string;
+}
+
+/** Readings of the chosen option: of this patient where the case asks for it and there are any, else of the typical patient. */
+export function shownReadings(input: SummaryInput): ShownReadings | null {
+  const chosen = chosenOption(input.case);
+  const option = input.analysis.options.find(({ id }) => id === chosen?.id);
+  if (!option) return null;
+  if (input.case.fit.use === "individual" && option.individual) {
+    return { option, readings: option.individual, patient: words.individual };
+  }
+  return option.typical ? { option, readings: option.typical, patient: words.typical } : null;
+}
