@@ -1,11 +1,4 @@
-import {
-  type Case,
-  caseDiff,
-  caseEdit,
-  caseValidate,
-  type EditArguments,
-  type EditName,
-} from "../../core/case/index.ts";
+import { type Case, caseDiff, caseEditTry, type EditArguments, type EditName } from "../../core/case/index.ts";
 import { issue } from "../../core/result/index.ts";
 import { ANALYSIS_NONE, createAnalysisFeed } from "./createAnalysisFeed.ts";
 import { createAutosave } from "./createAutosave.ts";
@@ -60,10 +53,23 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
     preview: null,
   };
 
+  let isTogether = false;
+
   function put(change: Partial<OpenCase>): void {
     if (isStopped) return;
     open = { ...open, ...change };
-    context.set({ open });
+    if (!isTogether) context.set({ open });
+  }
+
+  /** One change of the state for all that `work` puts: nobody sees a new value beside the "saved" of the one before. */
+  function together(work: () => void): void {
+    isTogether = true;
+    try {
+      work();
+    } finally {
+      isTogether = false;
+    }
+    put({});
   }
 
   let autosave = makeAutosave(start.savedAt);
@@ -82,16 +88,11 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
   /** The one way to a new state of the case. */
   function change(value: Case, next: History): void {
     history = next;
-    put({ value, revision: open.revision + 1, preview: null, undo: history.undo, redo: history.redo });
-    autosave.queue(value);
-    feed.ask(value, open.revision);
-  }
-
-  /** A state that could not be opened again is never made: an edit's outcome passes the same checks as a file. */
-  function outcome<N extends EditName>(name: N, args: EditArguments<N>) {
-    const value = caseEdit(open.value, name, args);
-    const checked = caseValidate(value);
-    return checked.ok ? { ok: true as const, value } : checked;
+    together(() => {
+      put({ value, revision: open.revision + 1, preview: null, undo: history.undo, redo: history.redo });
+      autosave.queue(value);
+      feed.ask(value, open.revision);
+    });
   }
 
   function mayChange(): boolean {
@@ -104,7 +105,7 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
     id,
     edit(name, args) {
       if (!mayChange()) return;
-      const result = outcome(name, args);
+      const result = caseEditTry(open.value, name, args);
       if (!result.ok) {
         session.cancelPreview();
         context.say("check", ...result.issues);
@@ -116,16 +117,20 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
     },
     previewEdit(name, args) {
       if (!mayChange()) return;
-      const result = outcome(name, args);
-      // A drag over a place where it can't be dropped stays at the last good one; the drop itself says why.
+      const result = caseEditTry(open.value, name, args);
+      // A state that could not be opened again is never shown or made. A drag over a place where it can't be dropped stays at the last good one; the drop itself says why.
       if (!result.ok) return;
-      put({ preview: result.value });
-      feed.askPreview(result.value, open.revision);
+      together(() => {
+        put({ preview: result.value });
+        feed.askPreview(result.value, open.revision);
+      });
     },
     cancelPreview() {
       if (!open.preview) return;
-      put({ preview: null });
-      feed.cancelPreview(open.value, open.revision);
+      together(() => {
+        put({ preview: null });
+        feed.cancelPreview(open.value, open.revision);
+      });
     },
     undo() {
       const step = mayChange() ? historyUndo(history, open.value) : null;
@@ -140,8 +145,10 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
       autosave = makeAutosave(savedAt);
       history = HISTORY_EMPTY;
       const saving = role === "reader" ? readerSaving("other-tab", savedAt) : savedAs("saved", savedAt);
-      put({ value, role, saving, revision: open.revision + 1, preview: null, ...HISTORY_EMPTY });
-      feed.ask(value, open.revision);
+      together(() => {
+        put({ value, role, saving, revision: open.revision + 1, preview: null, ...HISTORY_EMPTY });
+        feed.ask(value, open.revision);
+      });
     },
     freeze() {
       isFrozen = true;
@@ -165,9 +172,10 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
     },
   };
 
-  put({});
-  feed.ask(open.value, open.revision);
-  if (start.savedAt === null && start.role === "writer") autosave.queue(open.value);
+  together(() => {
+    feed.ask(open.value, open.revision);
+    if (start.savedAt === null && start.role === "writer") autosave.queue(open.value);
+  });
   return session;
 }
 
