@@ -63,7 +63,7 @@ export const regimenMessages: Readonly<Record<string, MessageFunction>> = {
   "dose-text-strength": ({ part, product, strengths }: Data) =>
     `${said(part)} is a strength that the ${String(product)} does not have: it has ${strengthList(strengths)}.`,
   "dose-text-conflict": ({ part }: Data) =>
-    `${said(part)} comes on top of something already said: say it once, or join two amounts with "and".`,
+    `${said(part)} comes on top of something already said: say it once, or join two amounts with "and", each before its times.`,
   "dose-text-ambiguous": ({ part, about }: Data) =>
     `It is not clear ${about === "days" ? "for how long or how many doses" : (WAYS[String(about)] ?? "what")} ${said(part)} is meant: say it for each amount.`,
   "dose-text-interval": ({ part }: Data) => `${said(part)} is no interval: write one above 0, such as "every 12 h".`,

@@ -38,23 +38,19 @@ export function doseAmountWords(
 }
 
 function scheduleWords(line: DoseLine, zone: string): string {
-  const startMs = instantMs(line.start);
-  if (!line.repeat) return `once, on ${dayAndClock(startMs, zone, null)}`;
+  if (!line.repeat) return `once, on ${dayAndClock(instantMs(line.start), zone, null)}`;
   const often =
     "every" in line.repeat
       ? `every ${numberPrint(line.repeat.every.value)} ${line.repeat.every.value === 1 ? "hour" : "hours"}`
       : `each day at ${clockList(line.repeat.clock)}`;
   const count = doseLineCount(line, zone);
-  const firstMs = firstDoseMs(line, zone);
+  if (count === 0) return `${often}: no dose`;
+  const firstMs = doseLineScheduledMs(line, 0, zone);
   const first = `first dose ${dayAndClock(firstMs, zone, null)}`;
   const endMs = doseLineEndMs(line, zone);
   if (endMs === null) return `${often}, ${first}, until further notice`;
   if (count === 1) return `${often}, only dose ${dayAndClock(firstMs, zone, null)}: 1 dose`;
   return `${often}, ${first}, last ${dayAndClock(endMs, zone, firstMs)}: ${numberPrint(count)} doses`;
-}
-
-function firstDoseMs(line: DoseLine, zone: string): number {
-  return doseLineCount(line, zone) > 0 ? doseLineScheduledMs(line, 0, zone) : instantMs(line.start);
 }
 
 /** "Wednesday 4 March 2026 at 20:00"; the year is left out when it is that of `afterMs`. */

@@ -31,12 +31,19 @@ function issuesOf(dose: DoseLine, zone = LONDON, until = "2027-01-01T00:00:00+00
   return result.ok ? [] : result.issues;
 }
 
-const at = (dose: DoseLine, zone = LONDON, until?: string) => expand(dose, zone, until).map((event) => instantIso(event.atMs, zone));
+const at = (dose: DoseLine, zone = LONDON, until?: string) =>
+  expand(dose, zone, until).map((event) => instantIso(event.atMs, zone));
 
 describe("doseLineExpand", () => {
   it("a single dose", () => {
     expect(expand(line("2026-03-04T20:00:00+00:00"))).toEqual([
-      { index: 0, scheduledMs: instantMs("2026-03-04T20:00:00+00:00"), atMs: instantMs("2026-03-04T20:00:00+00:00"), amount, status: "taken" },
+      {
+        index: 0,
+        scheduledMs: instantMs("2026-03-04T20:00:00+00:00"),
+        atMs: instantMs("2026-03-04T20:00:00+00:00"),
+        amount,
+        status: "taken",
+      },
     ]);
   });
 
@@ -107,7 +114,15 @@ describe("exceptions", () => {
         ],
       }),
     );
-    expect(events.map((event) => [event.index, event.status, instantIso(event.scheduledMs, LONDON).slice(11, 16), instantIso(event.atMs, LONDON).slice(11, 16), event.amount.value])).toEqual([
+    expect(
+      events.map((event) => [
+        event.index,
+        event.status,
+        instantIso(event.scheduledMs, LONDON).slice(11, 16),
+        instantIso(event.atMs, LONDON).slice(11, 16),
+        event.amount.value,
+      ]),
+    ).toEqual([
       [0, "taken", "08:00", "08:00", 300],
       [1, "missed", "20:00", "20:00", 300],
       [2, "late", "08:00", "10:15", 300],
@@ -122,13 +137,28 @@ describe("exceptions", () => {
   });
 
   it("of a dose beyond the cut of a line without an end is not a fault", () => {
-    const dose = line(start, { repeat: { every: { value: 12, unit: "h" } }, except: [{ index: 40, status: "missed" }] });
+    const dose = line(start, {
+      repeat: { every: { value: 12, unit: "h" } },
+      except: [{ index: 40, status: "missed" }],
+    });
     expect(issuesOf(dose, LONDON, "2026-03-05T08:00:00+00:00")).toEqual([]);
   });
 
   it("two of one dose, or late without a time", () => {
-    expect(issuesOf(line(start, { repeat, except: [{ index: 1, status: "missed" }, { index: 1, status: "missed" }] })).map((i) => i.code)).toEqual(["dose-exception-twice"]);
-    expect(issuesOf(line(start, { repeat, except: [{ index: 1, status: "late" }] })).map((i) => i.code)).toEqual(["dose-exception-needs-at"]);
+    expect(
+      issuesOf(
+        line(start, {
+          repeat,
+          except: [
+            { index: 1, status: "missed" },
+            { index: 1, status: "missed" },
+          ],
+        }),
+      ).map((i) => i.code),
+    ).toEqual(["dose-exception-twice"]);
+    expect(issuesOf(line(start, { repeat, except: [{ index: 1, status: "late" }] })).map((i) => i.code)).toEqual([
+      "dose-exception-needs-at",
+    ]);
   });
 });
 
@@ -153,7 +183,10 @@ describe("a clock time that does not exist or comes twice", () => {
       },
     ]);
     expect(issuesOf(twice)).toMatchObject([
-      { code: "dose-clock-twice", data: { dose: 2, candidates: ["2026-10-25T01:30:00+01:00", "2026-10-25T01:30:00+00:00"] } },
+      {
+        code: "dose-clock-twice",
+        data: { dose: 2, candidates: ["2026-10-25T01:30:00+01:00", "2026-10-25T01:30:00+00:00"] },
+      },
     ]);
   });
 
@@ -241,11 +274,19 @@ describe("properties", () => {
 
   it("an elapsed-hours repeat depends on no zone, and its gaps are all equal", () => {
     fc.assert(
-      fc.property(starts, fc.integer({ min: 1, max: 48 }), fc.integer({ min: 2, max: 60 }), zones, (ms, hours, count, zone) => {
-        const dose = line(instantIso(ms, zone), { repeat: { every: { value: hours, unit: "h" }, count } });
-        const events = expand(dose, zone);
-        expect(events.map((event) => event.atMs)).toEqual(Array.from({ length: count }, (_, k) => ms + k * hours * HOUR));
-      }),
+      fc.property(
+        starts,
+        fc.integer({ min: 1, max: 48 }),
+        fc.integer({ min: 2, max: 60 }),
+        zones,
+        (ms, hours, count, zone) => {
+          const dose = line(instantIso(ms, zone), { repeat: { every: { value: hours, unit: "h" }, count } });
+          const events = expand(dose, zone);
+          expect(events.map((event) => event.atMs)).toEqual(
+            Array.from({ length: count }, (_, k) => ms + k * hours * HOUR),
+          );
+        },
+      ),
       settings,
     );
   });
@@ -254,7 +295,9 @@ describe("properties", () => {
     const times = fc.uniqueArray(fc.integer({ min: 240, max: 1439 }), { minLength: 1, maxLength: 4 });
     fc.assert(
       fc.property(starts, times, fc.integer({ min: 1, max: 400 }), zones, (ms, minutes, days, zone) => {
-        const clock = minutes.map((minute) => `${String(Math.floor(minute / 60)).padStart(2, "0")}:${String(minute % 60).padStart(2, "0")}`);
+        const clock = minutes.map(
+          (minute) => `${String(Math.floor(minute / 60)).padStart(2, "0")}:${String(minute % 60).padStart(2, "0")}`,
+        );
         const result = doseLineExpand(line(instantIso(ms, zone), { repeat: { clock, days } }), { zone, untilMs: 0 });
         if (!result.ok) {
           expect(result.issues.map((issue) => issue.code)).toEqual(["dose-none"]);
