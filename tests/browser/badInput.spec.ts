@@ -1,0 +1,163 @@
+import { readFileSync } from "node:fs";
+import { join } from "node:path";
+import type { Page } from "@playwright/test";
+import { PROJECT } from "../../.ci/install.mjs";
+import { expectSaved, openDemo } from "./support/caseSteps.ts";
+import { expect, test } from "./support/test.ts";
+
+const DEMO = "Harbour ward 3, bed 12";
+const adjustment = readFileSync(join(PROJECT, "demo-data/adjustment.ebbline.json"), "utf8");
+
+async function importFile(page: Page, name: string, text: string | Buffer): Promise<void> {
+  const chooser = page.waitForEvent("filechooser");
+  await page.getByRole("button", { name: "Import a case file" }).click();
+  await (await chooser).setFiles({ name, mimeType: "application/json", buffer: Buffer.from(text) });
+}
+
+test.describe("numbers and levels", () => {
+  test("1,5 is refused and never read as 15; what was typed stays", async ({ page }) => {
+    await openDemo(page, DEMO);
+    await page.getByRole("button", { name: "Levels", exact: true }).click();
+    const panel = page.getByRole("dialog");
+    const field = panel.getByRole("textbox", { name: "Concentration" });
+    const rows = await panel.getByRole("row").count();
+    await field.fill("1,5");
+    await panel.getByRole("textbox", { name: "Drawn at" }).fill("4 March 09:00");
+    await panel.getByRole("button", { name: "Add a level" }).click();
+    await expect(panel.getByText(/write 1\.5/i)).toBeVisible();
+    await expect(field).toHaveValue("1,5");
+    await expect(panel.getByRole("row")).toHaveCount(rows);
+  });
+
+  for (const [text, sentence] of [
+    ["", /enter|empty|missing|write/i],
+    ["-3", /above 0|negative|greater than 0|more than 0/i],
+    ["0", /above 0|greater than 0|more than 0/i],
+  ] as const) {
+    test(`a level of "${text}" is refused`, async ({ page }) => {
+      await openDemo(page, DEMO);
+      await page.getByRole("button", { name: "Levels", exact: true }).click();
+      const panel = page.getByRole("dialog");
+      const rows = await panel.getByRole("row").count();
+      await panel.getByRole("textbox", { name: "Concentration" }).fill(text);
+      await panel.getByRole("textbox", { name: "Drawn at" }).fill("4 March 09:00");
+      await panel.getByRole("button", { name: "Add a level" }).click();
+      await expect(panel.getByText(sentence).first()).toBeVisible();
+      await expect(panel.getByRole("row")).toHaveCount(rows);
+    });
+  }
+
+  for (const [drawn, sentence] of [
+    ["1 March 07:00", /before .*dose/i],
+    ["5 March 09:00", /now line/i],
+    ["29 March 2026 01:30", /does not exist|skip|now line/i],
+    ["4/3 09:00", /month by name|name of the month/i],
+  ] as const) {
+    test(`a level drawn ${drawn} is answered with a sentence`, async ({ page }) => {
+      await openDemo(page, DEMO);
+      await page.getByRole("button", { name: "Levels", exact: true }).click();
+      const panel = page.getByRole("dialog");
+      const rows = await panel.getByRole("row").count();
+      await panel.getByRole("textbox", { name: "Concentration" }).fill("6");
+      await panel.getByRole("textbox", { name: "Drawn at" }).fill(drawn);
+      await panel.getByRole("button", { name: "Add a level" }).click();
+      await expect(panel.getByText(sentence).first()).toBeVisible();
+      await expect(panel.getByRole("textbox", { name: "Concentration" })).toHaveValue("6");
+      await expect(panel.getByRole("row")).toHaveCount(rows);
+    });
+  }
+
+  test("a weight that looks like pounds is asked about, and the answer is recorded", async ({ page }) => {
+    await openDemo(page, DEMO);
+    await page.getByRole("button", { name: /^weight/ }).click();
+    const panel = page.getByRole("dialog");
+    await panel.getByRole("textbox", { name: "Weight" }).fill("180");
+    await panel.getByRole("textbox", { name: "Weight" }).press("Enter");
+    await expect(panel.getByText(/pounds/i).first()).toBeVisible();
+    await expect(panel.getByRole("rowheader", { name: "180 kg" })).toHaveCount(0);
+    await panel.getByRole("button", { name: /180.*(lb|pounds)/i }).click();
+    await expect(panel.getByRole("rowheader", { name: /180.lb|81\.6/ })).toBeVisible();
+  });
+});
+
+test.describe("dose text", () => {
+  for (const [text, sentence] of [
+    ["300 mg evry 12 h from 08:00", /evry/],
+    ["mg every 12 h from 08:00", /amount/i],
+    ["1,5 mg once at 20:00", /1\.5/],
+    ["-300 mg once at 20:00", /negative|above 0|-300|greater/i],
+    ["5 mL once at 20:00", /mL/],
+    ["300 mg q12h", /q12h/],
+    ["300 mg once at 25:00", /25:00/],
+  ] as const) {
+    test(`"${text}" is refused and says which part`, async ({ page }) => {
+      await openDemo(page, DEMO);
+      await page.getByRole("button", { name: "Option A, chosen: open" }).click();
+      const panel = page.getByRole("dialog");
+      const rows = await panel.getByRole("row").count();
+      const field = panel.getByRole("textbox", { name: "Type a dose" });
+      await field.fill(text);
+      await field.press("Enter");
+      await expect(panel.getByText(sentence).first()).toBeVisible();
+      await expect(field).toHaveValue(text);
+      await expect(panel.getByRole("row")).toHaveCount(rows);
+    });
+  }
+
+  test("a clock time that exists twice is asked about", async ({ page }) => {
+    const value = JSON.parse(adjustment) as Record<string, unknown>;
+    value.now = "2026-10-24T12:00:00+01:00";
+    value.given = [];
+    value.levels = [];
+    value.options = [];
+    await page.goto("/");
+    await importFile(page, "autumn.ebbline.json", JSON.stringify(value));
+    await page.getByRole("button", { name: "Given", exact: true }).click();
+    const panel = page.getByRole("dialog");
+    const field = panel.getByRole("textbox", { name: "Type a dose" });
+    await field.fill("300 mg once at 25 October 01:30");
+    await field.press("Enter");
+    await expect(panel.getByText(/twice/i).first()).toBeVisible();
+  });
+});
+
+test.describe("files", () => {
+  const newer = adjustment.replace(/"version": 1,/, '"version": 99,');
+  for (const [what, text, sentence] of [
+    ["a corrupt file", adjustment.replace('"label"', '"label'), /JSON|read|damaged|corrupt/i],
+    ["a truncated file", adjustment.slice(0, 1500), /truncated|ends|cut|JSON|incomplete/i],
+    ["a file of a newer version", newer, /newer version/i],
+    ["a file that is something else", '{"hello":1}', /not .*(case|Ebbline)/i],
+    ["a file with an unknown field", adjustment.replace('"label"', '"surprise": 1, "label"'), /surprise/],
+    ["a case whose record lacks a source", adjustment.replace(/"source": "[^"]+",\s*/, ""), /source/i],
+    ["a file that is too large", `${adjustment}${" ".repeat(6 * 1024 * 1024)}`, /too large|larger/i],
+  ] as const) {
+    test(`${what} is refused with a sentence and nothing is stored`, async ({ page }) => {
+      await openDemo(page, DEMO);
+      await expectSaved(page);
+      await page.goto("/");
+      const stored = page.getByRole("button", { name: /^Open / });
+      await expect(stored.first()).toBeVisible();
+      const count = await stored.count();
+      await importFile(page, "bad.ebbline.json", text);
+      await expect(page.getByText(sentence).first()).toBeVisible();
+      await page.reload();
+      await expect(stored).toHaveCount(count);
+    });
+  }
+
+  test("a good file is imported and gives the same case; exported, it is the same file again", async ({ page }) => {
+    await page.goto("/");
+    await importFile(page, "adjustment.ebbline.json", adjustment);
+    await expect(page.locator("[data-reading=peak]")).toBeVisible();
+    await expectSaved(page);
+    await page.goto("/");
+    const download = page.waitForEvent("download");
+    await page
+      .getByRole("button", { name: /^Export .*Harbour ward 3/ })
+      .first()
+      .click();
+    const file = await (await download).path();
+    expect(readFileSync(file, "utf8")).toBe(adjustment);
+  });
+});
