@@ -19,7 +19,6 @@ export const SUMMARY_TITLES = {
   elements: "For the record",
   sources: "Sources",
   notes: "Notes of the case",
-  recompute: "Recompute every figure",
 } as const;
 
 export const SUMMARY_COLUMNS = {
@@ -81,7 +80,7 @@ export const summaryHeadWords = {
   record: (name: string, version: number) => `record “${name}” version ${version}`,
   fingerprint: (groups: string) => `fingerprint ${groups}`,
   recompute: (command: string) =>
-    `Export the case and run ${command} with its file: it prints the figures of this summary and the same fingerprint,`,
+    `Export the case and run ${command} with its file: it prints the figures of this summary and this fingerprint:`,
 } as const;
 
 export const summaryChartWords = {
@@ -134,7 +133,7 @@ export const summaryOrderWords = {
   every: (hours: string, clock: readonly string[]) =>
     clock.length === 0 ? `every ${hours} hours` : `every ${hours} hours, at ${listWords(clock)}`,
   everyDay: (clock: readonly string[]) =>
-    clock.length === 1 ? `every day at ${clock[0]}` : `each time at ${listWords(clock)}, every day`,
+    clock.length === 1 ? `every day at ${clock[0]}` : `at each of ${listWords(clock)}, every day`,
   firstDose: (when: string) => `First dose ${when}.`,
   onlyDose: (when: string) => `One dose, ${when}.`,
   lastDose: (count: number, when: string) => `${count} doses, the last ${when}.`,
@@ -263,8 +262,8 @@ export const summaryDetailWords = {
   creatinineClearance: "Creatinine clearance, Cockcroft–Gault",
   eliminationRate: "Elimination rate",
   numbered: (number: number) => `(${number})`,
-  marked: (text: string) => `${text} *`,
-  cited: (text: string, number: number) => `${text} (${number})`,
+  marked: (text: string) => `${text}\u00a0*`,
+  cited: (text: string, number: number) => `${text}\u00a0(${number})`,
   markRemark: "(n) source n in the details; * from memory or common practice, unverified.",
   sourcesRemark: "(n) source n in the details.",
   sourceAndBasis: (source: string, basis: string) => `${source} ${basis}`,

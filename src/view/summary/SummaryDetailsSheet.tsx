@@ -34,11 +34,9 @@ export function SummaryDetailsSheet({ model }: { readonly model: SummaryModel })
           ))}
         </ol>
       </SummaryBlock>
-      <SummaryBlock title={titles.recompute}>
-        <p>
-          {details.recompute} <span className="summary-fingerprint">{details.fingerprint}</span>
-        </p>
-      </SummaryBlock>
+      <p className="summary-recompute">
+        {details.recompute} <span className="summary-fingerprint">{details.fingerprint}</span>
+      </p>
     </SummaryPaper>
   );
 }

@@ -1,6 +1,6 @@
 import { doseMg, type MedicineRecord, type Product } from "../../core/medicine/index.ts";
-import { summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
-import { type DoseAmount, tabletsFor } from "../../core/regimen/index.ts";
+import { listWords, summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import { type DoseAmount, type TabletCount, tabletsFor } from "../../core/regimen/index.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
 /** A dose as it is taken from the pack. */
@@ -9,6 +9,8 @@ export interface OrderAmount {
   readonly products: readonly string[];
   /** "1 tablet", "1 tablet of 300 mg and half a tablet of 200 mg, taken together,", "30 mL (300 mg)" */
   readonly take: string;
+  /** The same with every strength named, to stand in a sentence: "1 tablet of 300 mg". */
+  readonly named: string;
   /** "300 mg" */
   readonly mass: string;
   /** Why it can't be made up, or null. */
@@ -37,26 +39,45 @@ function piecesAmount(
   mass: string,
 ): OrderAmount {
   const strengths = product.strengths.map((strength) => strength.value);
-  const made = mg === null ? null : tabletsFor(mg, strengths, product.divisible);
+  const made = mg === null ? null : fewestTablets(mg, strengths, product.divisible);
   const strengthText = (value: number) => print.exact({ value, unit: "mg" });
   if (!made) {
     const listed = [...strengths].sort((a, b) => a - b).map(strengthText);
     return {
       products: [words.productPlain(record.name, product.name)],
       take: mass,
+      named: mass,
       mass,
       notMakeable: words.notMakeable(mass, listed, product.divisible === "half", form),
     };
   }
-  const products = made.map(({ strengthMg }) => words.product(record.name, strengthText(strengthMg), product.name));
+  const parts = made.map(({ strengthMg, count }) =>
+    words.ofStrength(words.pieces(count, form), strengthText(strengthMg)),
+  );
   const [only] = made;
-  const take =
-    made.length === 1 && only
-      ? words.pieces(only.count, form)
-      : words.together(
-          made.map(({ strengthMg, count }) => words.ofStrength(words.pieces(count, form), strengthText(strengthMg))),
-        );
-  return { products, take, mass, notMakeable: null };
+  return {
+    products: made.map(({ strengthMg }) => words.product(record.name, strengthText(strengthMg), product.name)),
+    take: made.length === 1 && only ? words.pieces(only.count, form) : words.together(parts),
+    named: listWords(parts),
+    mass,
+    notMakeable: null,
+  };
+}
+
+/** The fewest tablets; of as many, those of one strength, which are harder to mix up: 400 mg is 2 tablets of 200 mg rather than 300 mg and 100 mg. */
+function fewestTablets(
+  mg: number,
+  strengths: readonly number[],
+  divisible: Product["divisible"],
+): readonly TabletCount[] | null {
+  const fewest = tabletsFor(mg, strengths, divisible);
+  if (!fewest || fewest.length === 1) return fewest;
+  const total = (tablets: readonly TabletCount[]) => tablets.reduce((sum, { count }) => sum + count, 0);
+  const hasHalf = (tablets: readonly TabletCount[]) => tablets.some(({ count }) => !Number.isInteger(count));
+  const single = strengths
+    .map((strength) => tabletsFor(mg, [strength], divisible))
+    .find((tablets) => tablets && total(tablets) <= total(fewest) && (hasHalf(fewest) || !hasHalf(tablets)));
+  return single ?? fewest;
 }
 
 /** A millilitre fraction finer than this can't be read on an oral syringe; the volume is rounded to it in print. */
@@ -75,7 +96,13 @@ function liquidAmount(
 ): OrderAmount {
   const { concentration } = product;
   if (!concentration || mg === null) {
-    return { products: [words.productPlain(record.name, product.name)], take: mass, mass, notMakeable: null };
+    return {
+      products: [words.productPlain(record.name, product.name)],
+      take: mass,
+      named: mass,
+      mass,
+      notMakeable: null,
+    };
   }
   const perMl = words.concentration(
     print.quantity(concentration.value, "mg", { significant: CONCENTRATION_SIGNIFICANT }),
@@ -92,6 +119,7 @@ function liquidAmount(
         : words.liquid(record.name, product.name, perMl),
     ],
     take: words.liquidTake(volume, mass),
+    named: words.liquidTake(volume, mass),
     mass,
     notMakeable: null,
   };

@@ -1,7 +1,7 @@
 import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
-import { listWords, summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
 import type { DoseLine } from "../../core/regimen/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { orderAmount } from "./orderAmount.ts";
@@ -99,7 +99,7 @@ function exceptionSentences(value: Case, line: DoseLine, marks: readonly DoseMar
     if (mark.atH !== mark.scheduledH) sentences.push(words.moved(scheduled, print.at(print.ms(mark.atH), "dayClock")));
     if (mark.amount.value === line.amount.value && mark.amount.unit === line.amount.unit) continue;
     const amount = orderAmount(mark.amount, productOf(value.medicine, line.product), value.medicine, print);
-    sentences.push(words.changed(scheduled, listWords([...new Set([amount.mass, amount.take])])));
+    sentences.push(words.changed(scheduled, amount.named));
     products.push(...amount.products);
     if (amount.notMakeable) notMakeable.push(amount.notMakeable);
   }

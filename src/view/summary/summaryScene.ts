@@ -7,7 +7,7 @@ import { chosenOption } from "./summaryOrder.ts";
 /** One unit of the drawing is about a CSS pixel on the sheet: 184 mm wide. */
 const WIDTH = 696;
 /** Letter is 18 mm shorter than A4; the profile gives way, not the words. */
-const HEIGHT = { A4: 172, Letter: 146 };
+const HEIGHT = { A4: 188, Letter: 146 };
 /** Room at the right for the window's edges, which stand 34 units beyond the plot. */
 const MARGIN = { top: 26, right: 58, bottom: 24, left: 34 };
 
