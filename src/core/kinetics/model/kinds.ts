@@ -1,0 +1,2 @@
+/** Every kind of disposition, one line each. */
+export { oneCompartment } from "./oneCompartment.ts";

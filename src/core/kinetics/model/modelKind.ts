@@ -1,0 +1,28 @@
+import type { BothReadings } from "../bothReadings.ts";
+import type { Absorption } from "./absorption.ts";
+import type { Inflow, Stretch } from "./stretch.ts";
+
+/** One period of a repeating pattern, run from given amounts in the body. */
+export type PeriodRun = (body: Float64Array) => readonly { readonly stretch: Stretch; readonly length: number }[];
+
+/** Everything the rest of the folder needs to know about one kind of disposition. A kind is one object in one file. */
+export interface ModelKind<D extends { readonly kind: string }> {
+  readonly kind: D["kind"];
+  /** Doses add up: the level from two doses is the sum of the levels from each. */
+  readonly superposes: boolean;
+  readonly compartments: 1 | 2;
+  /** Throws a RangeError naming the figure out of range. */
+  check(name: string, disposition: D): void;
+  stretch(disposition: D, body: Float64Array, inflow: Inflow): Stretch;
+  /** The most that can be eliminated, mg/h: at this dose rate or above there is no steady state. Infinity where there is no limit. */
+  capacity(disposition: D): number;
+  /** mg in each compartment at the start of a period at steady state. `doseRate` mg/h, below the capacity. */
+  steadyBody(disposition: D, period: number, doseRate: number, run: PeriodRun): Float64Array;
+  /** h until elimination alone has come the given part of the way to steady state. */
+  hoursToSteady(disposition: D, doseRate: number, fraction: number): number;
+  /** Terminal, h; null where there is no one half-life. */
+  halfLife(disposition: D): number | null;
+  bothReadings(disposition: D, absorption: Absorption, bioavailability: number, lag: number): BothReadings | null;
+  /** h after the start of absorption until the distribution phase is over. */
+  distributionEnd(disposition: D, absorption: Absorption): number;
+}
