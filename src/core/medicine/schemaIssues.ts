@@ -49,7 +49,7 @@ function faultIssues(fault: SchemaFault, input: unknown, base: Path): Issue[] {
     case "invalid_format":
       return one("value-malformed", {});
     default:
-      return one("value-refused", {});
+      return one("value-malformed", {});
   }
 }
 

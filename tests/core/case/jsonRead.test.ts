@@ -20,7 +20,7 @@ describe("jsonRead", () => {
       }),
       { seed: 1, numRuns: 500 },
     );
-  });
+  }, 30_000);
 
   it("agrees with the built-in parser on what is not JSON", () => {
     const pieces = [
@@ -68,7 +68,7 @@ describe("jsonRead", () => {
       }),
       { seed: 2, numRuns: 5000 },
     );
-  });
+  }, 30_000);
 
   it.each([
     ['{"a": 1, "a": 2}', "file-field-twice", '"a"'],
@@ -147,7 +147,7 @@ describe("jsonRead", () => {
       expect(fault(`${text} `).code).toBe("file-too-large");
     }
     expect(fault("x".repeat(FILE_BYTES_MOST * 2)).code).toBe("file-too-large");
-  });
+  }, 60_000);
 
   it("makes objects that reach no prototype", () => {
     const read = jsonRead('{"toString": 1, "hasOwnProperty": 2}');

@@ -105,7 +105,7 @@ describe("a figure without its source", () => {
       }
     }
     expect(removed).toBeGreaterThan(100);
-  });
+  }, 30_000);
 });
 
 describe("across fields", () => {

@@ -1,3 +1,4 @@
+import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { BUILT_IN_RECORDS, recordById, recordFigures, unverifiedFigures } from "../../../src/core/medicine/index.ts";
 
@@ -40,6 +41,16 @@ describe("unverifiedFigures", () => {
       invented: 0,
       total: 16,
     });
+  });
+
+  it("docs/medicines.md states the counts of every record", () => {
+    const page = readFileSync(new URL("../../../docs/medicines.md", import.meta.url), "utf8");
+    for (const record of BUILT_IN_RECORDS) {
+      const { memory, invented, total } = unverifiedFigures(record);
+      const row = page.split("\n").find((line) => line.startsWith(`| \`${record.id}\` |`));
+      const cells = row?.split("|").map((cell) => cell.trim());
+      expect(cells?.slice(3, 5)).toEqual([String(total), record.invented ? `${invented} invented` : String(memory)]);
+    }
   });
 
   it("lets the least known strength speak for all", () => {
