@@ -9,6 +9,7 @@ import { Workbench } from "../view/Workbench.tsx";
 import { compose } from "./compose.ts";
 import { ErrorBoundary, Stopped } from "./ErrorBoundary.tsx";
 import { keepWork } from "./keepWork.ts";
+import { rememberPlace } from "./rememberPlace.ts";
 
 const root = createRoot(document.querySelector("#root")!);
 
@@ -30,7 +31,10 @@ function start(): void {
     </StrictMode>,
   );
   keepWork(store);
-  void store.getState().start();
+  void store
+    .getState()
+    .start()
+    .then(() => rememberPlace(store));
   registerServiceWorker({ onWaiting: (apply) => store.getState().offerUpdate(apply) });
 }
 

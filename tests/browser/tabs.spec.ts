@@ -1,4 +1,4 @@
-import { expectSaved, openDemo } from "./support/caseSteps.ts";
+import { expectSaved, openDemo, openStored } from "./support/caseSteps.ts";
 import { expect, test } from "./support/test.ts";
 
 test("two tabs on one case: one writes, the other reads, is told so, sees the changes and takes over when the first closes", async ({
@@ -7,11 +7,7 @@ test("two tabs on one case: one writes, the other reads, is told so, sees the ch
 }) => {
   await openDemo(page, "Harbour ward 3, bed 12");
   const second = await context.newPage();
-  await second.goto("/");
-  await second
-    .getByRole("button", { name: /Open .*Harbour ward 3/ })
-    .first()
-    .click();
+  await openStored(second, "Harbour ward 3, bed 12");
   await expect(second.locator("[data-saving]")).toHaveAttribute("data-saving", "read-only");
   await expect(second.getByText(/another tab/i).first()).toBeVisible();
   await expect(second.getByRole("button", { name: "Add an option" })).toBeDisabled();

@@ -17,6 +17,7 @@ export const benchWords = {
   addLevel: "Levels",
   earlier: "Earlier",
   later: "Later",
+  exportFile: "Export the case as a file",
   closer: "Closer",
   wider: "Wider",
   linear: "linear scale",

@@ -20,6 +20,7 @@ import { LaneLines, OptionHead } from "./OptionHead.tsx";
 import { ProfileRow } from "./ProfileRow.tsx";
 import { ReadingsTable } from "./ReadingsTable.tsx";
 import type { ShownUnit } from "./shownUnit.ts";
+import { SavingBar } from "./SavingBar.tsx";
 import { useBenchKeys } from "./useBenchKeys.ts";
 import { useElementWidth } from "./useElementWidth.ts";
 
@@ -97,6 +98,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   return (
     <div className="bench">
       <CaseStrip open={open} analysis={analysis} onPanel={(kind) => setPanel({ kind })} onPrint={onPrint} />
+      <SavingBar open={open} />
       <main className="bench-main">
         <div className="bench-clock">
           <div className="bench-corner">

@@ -43,3 +43,10 @@ export async function expectOfflineReady(page: Page): Promise<void> {
 export function reading(page: Page, row: string, option = 0): Locator {
   return page.locator(`[data-reading=${row}] .readings-cell`).nth(option);
 }
+
+/** Opens a stored case from the list. */
+export async function openStored(page: Page, label: string): Promise<void> {
+  await page.goto("/");
+  await page.getByRole("table").getByRole("button", { name: `Open ${label}` }).first().click();
+  await expect(page.locator("[data-reading=peak]")).toBeVisible();
+}
