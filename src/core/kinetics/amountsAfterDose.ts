@@ -1,4 +1,4 @@
-import { decay, decayDifference, decayDifferenceIntegral } from "../numerics/index.ts";
+import { decay, decayDifference, passedTwoSteps } from "../numerics/index.ts";
 import { argumentFinite, argumentNotNegative } from "./argumentCheck.ts";
 import { type OralKinetics, oralKineticsCheck } from "./oralKinetics.ts";
 
@@ -32,6 +32,6 @@ export function amountsAfterDose(
   return {
     gut: available * decay(ka, u),
     body: available * (ka * decayDifference(ka, ke, u)),
-    eliminated: available * (ke * (ka * decayDifferenceIntegral(ka, ke, u))),
+    eliminated: available * passedTwoSteps(ka, ke, u),
   };
 }

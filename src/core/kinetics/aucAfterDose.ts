@@ -1,11 +1,11 @@
-import { decayDifferenceIntegral } from "../numerics/index.ts";
+import { passedTwoSteps } from "../numerics/index.ts";
 import { argumentNotNegative, argumentRefuse } from "./argumentCheck.ts";
 import { type OralKinetics, oralKineticsCheck } from "./oralKinetics.ts";
 
 /**
  * The area under the level from a single dose to t hours after it.
  *
- * Formula: F·D·ka/V · Φ(t − lag), Φ = ∫φ (decayDifferenceIntegral); F·D/(ke·V) for t = Infinity.
+ * Formula: F·D/(ke·V) · the part eliminated by then (passedTwoSteps), which is 1 for t = Infinity.
  * @param kinetics see OralKinetics
  * @param amount mg, 0 or more
  * @param t h since the dose was taken, any number; Infinity (the default) for the whole area
@@ -23,6 +23,5 @@ export function aucAfterDose(kinetics: OralKinetics, amount: number, t = Infinit
   const available = bioavailability * amount;
   const u = t - lag;
   if (!(u > 0) || available === 0) return 0;
-  if (u === Infinity) return available / ke / volume;
-  return (available * (ka * decayDifferenceIntegral(ka, ke, u))) / volume;
+  return (available * passedTwoSteps(ka, ke, u)) / ke / volume;
 }

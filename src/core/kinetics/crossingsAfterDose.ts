@@ -37,7 +37,10 @@ export function crossingsAfterDose(kinetics: OralKinetics, amount: number, level
   const up = rootBracketed((u) => height(u) - level, slope, 0, top, 0, 0);
 
   let far = top;
-  for (let stride = 1 / Math.min(ka, ke); height(far) >= level; stride *= 2) far += stride;
+  for (let stride = 1 / Math.min(ka, ke); height(far) >= level && far < Number.MAX_VALUE; stride *= 2) {
+    far = Math.min(far + stride, Number.MAX_VALUE);
+  }
+  if (height(far) >= level) return [lag + up.root, Infinity];
   const down = rootBracketed(
     (u) => Math.log(height(u) / level),
     (u) => slope(u) / height(u),

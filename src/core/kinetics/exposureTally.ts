@@ -2,39 +2,36 @@ import { CompensatedSum } from "../numerics/index.ts";
 import { bodySegmentHours, bodySegmentPeak } from "./bodySegment.ts";
 import type { BodyState } from "./bodyState.ts";
 
-/** A window of levels, mg/L, 0 <= low <= high. */
+/** A window, 0 <= low <= high: of levels (mg/L) at the door, of amounts in the body (mg) within the tally. */
 export interface LevelWindow {
   low: number;
   high: number;
 }
 
-/** Gathers readings segment by segment. Levels mg/L, times h, area mg·h/L. */
+/** Gathers readings segment by segment: amounts in the body mg, times h, area mg·h; levels are these over the volume. */
 export class ExposureTally {
-  peak = -Infinity;
+  peakMg = -Infinity;
   timeOfPeak = 0;
-  lowest = Infinity;
+  lowestMg = Infinity;
   timeOfLowest = 0;
-  readonly #volume: number;
   readonly #window: LevelWindow | undefined;
   readonly #area = new CompensatedSum();
   readonly #below = new CompensatedSum();
   readonly #within = new CompensatedSum();
   readonly #above = new CompensatedSum();
 
-  constructor(volume: number, window?: LevelWindow) {
-    this.#volume = volume;
+  constructor(window?: LevelWindow) {
     this.#window = window;
   }
 
-  /** One instant's level. The earliest of equal ones stands. */
+  /** One instant. The earliest of equal ones stands. */
   instant(bodyMg: number, timeH: number): void {
-    const level = bodyMg / this.#volume;
-    if (level > this.peak) {
-      this.peak = level;
+    if (bodyMg > this.peakMg) {
+      this.peakMg = bodyMg;
       this.timeOfPeak = timeH;
     }
-    if (level < this.lowest) {
-      this.lowest = level;
+    if (bodyMg < this.lowestMg) {
+      this.lowestMg = bodyMg;
       this.timeOfLowest = timeH;
     }
   }
@@ -46,15 +43,16 @@ export class ExposureTally {
     if (peak !== undefined) this.instant(state.bodyAt(peak), at + (atRest + peak));
     this.#area.add(state.areaOver(length));
     if (this.#window === undefined) return;
-    const below = bodySegmentHours(state, length, peak, this.#window.low * this.#volume, "below");
-    const above = bodySegmentHours(state, length, peak, this.#window.high * this.#volume, "above");
+    const below = bodySegmentHours(state, length, peak, this.#window.low, "below");
+    const above = bodySegmentHours(state, length, peak, this.#window.high, "above");
     this.#below.add(below);
     this.#above.add(above);
     this.#within.add(Math.max(0, length - below - above));
   }
 
-  get auc(): number {
-    return this.#area.value / this.#volume;
+  /** mg·h */
+  get areaMgH(): number {
+    return this.#area.value;
   }
 
   /** Hours below, within and above the window; without one all hours count as within. The three add up to `total`. */

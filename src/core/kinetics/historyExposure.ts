@@ -81,7 +81,8 @@ export function historyExposure(
   }
   if (e > 0) state.advance(from - events.at[e - 1]! - events.rest[e - 1]!);
 
-  const tally = new ExposureTally(disposition.volume, window);
+  const { volume } = disposition;
+  const tally = new ExposureTally(window && { low: window.low * volume, high: window.high * volume });
   let at = from;
   let rest = 0;
   for (;;) {
@@ -99,6 +100,14 @@ export function historyExposure(
   }
   tally.instant(state.body, to);
 
-  const { peak, timeOfPeak, lowest, timeOfLowest, auc } = tally;
-  return { peak, timeOfPeak, lowest, timeOfLowest, auc, average: auc / (to - from), ...tally.hours(to - from) };
+  const auc = tally.areaMgH / volume;
+  return {
+    peak: tally.peakMg / volume,
+    timeOfPeak: tally.timeOfPeak,
+    lowest: tally.lowestMg / volume,
+    timeOfLowest: tally.timeOfLowest,
+    auc,
+    average: auc / (to - from),
+    ...tally.hours(to - from),
+  };
 }

@@ -1,6 +1,6 @@
 import { sumError } from "../numerics/index.ts";
 import type { AbsorptionEvents } from "./absorptionEvents.ts";
-import { argumentAboveZero, argumentRefuse } from "./argumentCheck.ts";
+import { argumentInterval, argumentRefuse } from "./argumentCheck.ts";
 import { BodyState } from "./bodyState.ts";
 import { type Course, coursesCheck, type Disposition, dispositionCheck } from "./course.ts";
 
@@ -37,8 +37,9 @@ function eventsWithin(courses: readonly Course[], period: number): AbsorptionEve
 
 export function patternCheck(disposition: Disposition, courses: readonly Course[], period: number): void {
   dispositionCheck(disposition);
-  argumentAboveZero("period", period, "h");
   coursesCheck(courses);
+  argumentInterval("period", period, disposition.ke);
+  for (const course of courses) argumentInterval("period", period, course.ka);
   for (const [index, course] of courses.entries()) {
     for (const [i, dose] of course.doses.entries()) {
       if (!(dose.time >= 0 && dose.time < period)) {
@@ -69,6 +70,9 @@ export function patternAtSteadyState(disposition: Disposition, courses: readonly
   state.set(0, gut);
   state.advance(period);
   const body = (fromOnePeriod + state.body) / -Math.expm1(-disposition.ke * period);
+  if (!(body < Infinity && gut.every(Number.isFinite))) {
+    argumentRefuse("the steady state of courses", Infinity, "mg", "doses small enough for a finite amount");
+  }
   return { events, body, gut };
 }
 

@@ -1,4 +1,4 @@
-import { CompensatedSum, decayDifferenceIntegral } from "../numerics/index.ts";
+import { CompensatedSum, passedTwoSteps } from "../numerics/index.ts";
 import { argumentRefuse } from "./argumentCheck.ts";
 import { BodyState } from "./bodyState.ts";
 import type { Course, Disposition } from "./course.ts";
@@ -56,7 +56,7 @@ export function patternSteadyState(
       const available = bioavailability * amount;
       total.add(available);
       const open = period - time - lag;
-      if (open > 0 && available > 0) first.add(available * (ke * (ka * decayDifferenceIntegral(ka, ke, open))));
+      if (open > 0 && available > 0) first.add(available * passedTwoSteps(ka, ke, open));
     }
   }
   const absorbed = total.value;
@@ -68,24 +68,24 @@ export function patternSteadyState(
     courses.map((course) => course.ka),
   );
   state.set(pattern.body, pattern.gut);
-  const tally = new ExposureTally(volume);
+  const tally = new ExposureTally();
   patternSweep(state, pattern.events, period, (at, rest, nextAt, nextRest) => {
     const length = nextAt - at + (nextRest - rest);
     if (length > 0) tally.segment(state, at, rest, length);
   });
 
-  const { peak, lowest } = tally;
+  const { peakMg, lowestMg } = tally;
+  const swingMg = peakMg - lowestMg;
   const auc = absorbed / ke / volume;
-  const average = auc / period;
   return {
-    peak,
+    peak: peakMg / volume,
     timeOfPeak: tally.timeOfPeak % period,
-    lowest,
+    lowest: lowestMg / volume,
     timeOfLowest: tally.timeOfLowest % period,
-    average,
+    average: auc / period,
     auc,
-    swing: peak > lowest ? (peak - lowest) / lowest : 0,
-    fluctuation: peak > lowest ? (peak - lowest) / average : 0,
+    swing: swingMg === 0 ? 0 : swingMg / lowestMg,
+    fluctuation: (swingMg / absorbed) * (ke * period),
     accumulation: absorbed / first.value,
   };
 }

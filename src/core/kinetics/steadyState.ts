@@ -1,7 +1,7 @@
-import { decay, decayDifferenceIntegral, expm1Excess } from "../numerics/index.ts";
-import { argumentAboveZero, argumentNotNegative } from "./argumentCheck.ts";
+import { decay, decayIntegral, expm1Excess, passedTwoSteps } from "../numerics/index.ts";
+import { argumentInterval, argumentNotNegative } from "./argumentCheck.ts";
 import { type OralKinetics, oralKineticsCheck } from "./oralKinetics.ts";
-import { steadyStateShape } from "./steadyStateConcentration.ts";
+import { steadyStatePart } from "./steadyStateConcentration.ts";
 
 export interface SteadyState {
   /** mg/L */
@@ -22,8 +22,8 @@ export interface SteadyState {
   fluctuation: number;
 }
 
-/** Below this many half-lives' worth of decay in an interval, peak − trough is computed without subtracting them. */
-const SLOW_BELOW = 1;
+/** Below this slow rate × interval, peak − trough is computed without subtracting them. */
+const SLOW_BELOW = 5;
 
 /** 1 − x/(e^x − 1), x >= 0. */
 function shortfall(x: number): number {
@@ -40,10 +40,10 @@ function steadyPeakTime(slow: number, fast: number, interval: number): number {
   const y = gap * z;
   if (y < Number.EPSILON / 4) return z;
   if (y < 0.5) return -Math.log1p(-y) / gap;
-  return Math.log((fast / slow) * (Math.expm1(-slow * interval) / Math.expm1(-fast * interval))) / gap;
+  return Math.log(decayIntegral(slow, interval) / decayIntegral(fast, interval)) / gap;
 }
 
-/** Peak − trough of steadyStateShape for a slow decay (slow·interval < 1), as a sum of positive terms. */
+/** Peak − trough of steadyStatePart, without the factor ka, for a slow decay (slow·interval < 5), as a sum of positive terms. */
 function steadyAmplitude(slow: number, fast: number, interval: number, u: number): number {
   const gap = fast - slow;
   const meanToPeak = 1 + expm1Excess(-gap * u);
@@ -59,7 +59,7 @@ function steadyAmplitude(slow: number, fast: number, interval: number, u: number
  *
  * Formula: peak = Css at u* = ln[K(1 − e^(−kτ))/(k(1 − e^(−Kτ)))]/(K − k) after absorption begins, k = min(ka, ke),
  * K = max(ka, ke); trough = Css at u = 0; average = F·D/(ke·V·τ); auc = F·D/(ke·V);
- * accumulation = auc/AUC(0→τ) of the first dose; swing and fluctuation as in SteadyState. For k·τ < 1 peak − trough is
+ * accumulation = auc/AUC(0→τ) of the first dose; swing and fluctuation as in SteadyState. For k·τ < 5 peak − trough is
  * computed as a sum of positive terms, so that a nearly flat curve keeps its digits.
  * @param kinetics see OralKinetics
  * @param amount mg, 0 or more
@@ -74,25 +74,26 @@ function steadyAmplitude(slow: number, fast: number, interval: number, u: number
 export function steadyState(kinetics: OralKinetics, amount: number, interval: number): SteadyState {
   oralKineticsCheck(kinetics);
   argumentNotNegative("amount", amount, "mg");
-  argumentAboveZero("interval", interval, "h");
+  argumentInterval("interval", interval, kinetics.ka);
+  argumentInterval("interval", interval, kinetics.ke);
   const { ka, ke, volume, bioavailability, lag } = kinetics;
   const slow = Math.min(ka, ke);
   const fast = Math.max(ka, ke);
   const top = steadyPeakTime(slow, fast, interval);
-  const peakShape = steadyStateShape(ka, ke, interval, top, interval - top);
-  const troughShape = steadyStateShape(ka, ke, interval, 0, interval);
+  const peakPart = steadyStatePart(ka, ke, interval, top, interval - top);
+  const troughPart = steadyStatePart(ka, ke, interval, 0, interval);
   const isSlow = slow * interval < SLOW_BELOW;
-  const amplitude = isSlow ? steadyAmplitude(slow, fast, interval, top) : peakShape - troughShape;
+  const amplitude = isSlow ? ka * steadyAmplitude(slow, fast, interval, top) : peakPart - troughPart;
   const dosed = bioavailability * amount;
   const first = interval - lag;
   return {
-    peak: (dosed * (ka * peakShape)) / volume,
+    peak: (dosed * peakPart) / volume,
     timeOfPeak: (lag + top) % interval,
-    trough: (dosed * (ka * troughShape)) / volume,
+    trough: (dosed * troughPart) / volume,
     average: dosed / ke / volume / interval,
     auc: dosed / ke / volume,
-    accumulation: first > 0 ? 1 / (ka * ke * decayDifferenceIntegral(ka, ke, first)) : Infinity,
-    swing: amplitude / troughShape,
-    fluctuation: amplitude * ka * ke * interval,
+    accumulation: first > 0 ? 1 / passedTwoSteps(ka, ke, first) : Infinity,
+    swing: amplitude / troughPart,
+    fluctuation: amplitude * (ke * interval),
   };
 }

@@ -1,18 +1,18 @@
 import { decay, decayIntegral } from "../numerics/index.ts";
-import { argumentAboveZero, argumentNotNegative, argumentRefuse } from "./argumentCheck.ts";
+import { argumentInterval, argumentNotNegative, argumentRefuse } from "./argumentCheck.ts";
 import { type OralKinetics, oralKineticsCheck } from "./oralKinetics.ts";
 
 /**
- * The steady-state shape for F·D·ka/V = 1, u h after absorption of a dose began; `rest` is interval − u, given apart
- * because the caller has it more exactly.
+ * The steady-state amount in the body for F·D = 1, u h after absorption of a dose began; `rest` is interval − u, given
+ * apart because the caller has it more exactly.
  */
-export function steadyStateShape(ka: number, ke: number, interval: number, u: number, rest: number): number {
+export function steadyStatePart(ka: number, ke: number, interval: number, u: number, rest: number): number {
   const slow = Math.min(ka, ke);
   const fast = Math.max(ka, ke);
   const gap = fast - slow;
   const shape =
     decay(slow, u) * decayIntegral(gap, u) + decay(fast, u) * decay(slow, interval) * decayIntegral(gap, rest);
-  return shape / -Math.expm1(-fast * interval) / -Math.expm1(-slow * interval);
+  return (ka * shape) / -Math.expm1(-fast * interval) / -Math.expm1(-slow * interval);
 }
 
 /**
@@ -35,7 +35,8 @@ export function steadyStateShape(ka: number, ke: number, interval: number, u: nu
 export function steadyStateConcentration(kinetics: OralKinetics, amount: number, interval: number, s: number): number {
   oralKineticsCheck(kinetics);
   argumentNotNegative("amount", amount, "mg");
-  argumentAboveZero("interval", interval, "h");
+  argumentInterval("interval", interval, kinetics.ka);
+  argumentInterval("interval", interval, kinetics.ke);
   if (!(s >= 0 && s <= interval)) argumentRefuse("s", s, "h", `0 to the interval, ${interval} h`);
   const { ka, ke, volume, bioavailability, lag } = kinetics;
   const available = bioavailability * amount;
@@ -44,5 +45,5 @@ export function steadyStateConcentration(kinetics: OralKinetics, amount: number,
   const shift = lag % interval;
   const u = s >= shift ? s - shift : interval - (shift - s);
   const rest = s >= shift ? interval - u : shift - s;
-  return (available * (ka * steadyStateShape(ka, ke, interval, u, rest))) / volume;
+  return (available * steadyStatePart(ka, ke, interval, u, rest)) / volume;
 }

@@ -5,7 +5,7 @@ import { sumError } from "./sumError.ts";
  *
  * Formula: Σ xᵢ.
  * Terms: any finite numbers, added with `add`; `value` is the sum so far.
- * Outside: overflows where the plain sum would.
+ * Outside: Infinity where the plain sum overflows.
  * Accuracy: 1 unit in the last place for terms of one sign, whatever their number (below 2^50).
  * Source: Neumaier's variant of compensated summation (from memory, unverified).
  * @example const s = new CompensatedSum(); for (let i = 0; i < 10; i++) s.add(0.1); s.value // 1
@@ -21,6 +21,6 @@ export class CompensatedSum {
   }
 
   get value(): number {
-    return this.#sum + this.#rest;
+    return Number.isFinite(this.#sum) ? this.#sum + this.#rest : this.#sum;
   }
 }

@@ -7,4 +7,5 @@ export { expm1Excess } from "./expm1Excess.ts";
 export { passedTwoSteps } from "./passedTwoSteps.ts";
 export { productError } from "./productError.ts";
 export { type Root, rootBracketed } from "./rootBracketed.ts";
+export { signChanges } from "./signChanges.ts";
 export { sumError } from "./sumError.ts";
