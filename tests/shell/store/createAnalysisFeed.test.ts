@@ -158,8 +158,12 @@ describe("a drag", () => {
     runner.asked[0]!.answer.resolve(null);
     runner.answer(1);
     await turns();
+    state().previewEdit("caseRename", { label: "p2" });
     state().cancelPreview();
     runner.answer(2);
+    await turns();
+    expect(shown()).toEqual(["p1", 1, "running", true]);
+    runner.answer(3);
     await turns();
     expect(shown()).toEqual(["zero", 1, "fresh", false]);
   });
