@@ -40,11 +40,18 @@ export default defineConfig({
           name: "unit",
           root: at("."),
           environment: "node",
+          testTimeout: 30_000,
           include: ["tests/{core,shell,architecture,commands}/**/*.test.ts"],
         },
       },
       {
-        test: { name: "outside", root: at("."), environment: "node", include: ["tests/outside/**/*.test.ts"] },
+        test: {
+          name: "outside",
+          root: at("."),
+          environment: "node",
+          testTimeout: 30_000,
+          include: ["tests/outside/**/*.test.ts"],
+        },
       },
       {
         plugins: [react()],

@@ -34,9 +34,10 @@ export function ensurePackages() {
   if (status !== 0) throw new SetupFault("npm ci failed, see above. It needs the network once.");
 }
 
-function arePackagesCurrent() {
-  const wanted = readPackages(join(PROJECT, "package-lock.json"));
-  const installed = readPackages(join(PROJECT, "node_modules", ".package-lock.json"));
+/** Whether exactly the packages of package-lock.json are installed: compared entry by entry, as dates of files tell nothing after a clone. */
+export function arePackagesCurrent(project = PROJECT) {
+  const wanted = readPackages(join(project, "package-lock.json"));
+  const installed = readPackages(join(project, "node_modules", ".package-lock.json"));
   if (!wanted) throw new SetupFault("package-lock.json is missing or not readable.");
   if (!installed) return false;
   for (const [path, entry] of Object.entries(wanted)) {
@@ -45,7 +46,7 @@ function arePackagesCurrent() {
     // An optional package is there or not by platform.
     if (!found && !entry.optional && !entry.devOptional) return false;
     if (found && found.version !== entry.version) return false;
-    if (found && !existsSync(join(PROJECT, path))) return false;
+    if (found && !existsSync(join(project, path))) return false;
   }
   return Object.keys(installed).every((path) => path in wanted);
 }
