@@ -1,0 +1,90 @@
+import type { ModelKind, PeriodRun } from "./modelKind.ts";
+import type { Inflow, Stretch } from "./stretch.ts";
+import {
+  type TwoCompartmentConstants,
+  type TwoCompartmentDisposition,
+  twoCompartmentCheck,
+  twoCompartmentConstants,
+} from "./twoCompartmentConstants.ts";
+import { twoCompartmentDistributionEnd } from "./twoCompartmentDistributionEnd.ts";
+import { TwoCompartmentResponse } from "./twoCompartmentResponse.ts";
+import { twoCompartmentTurns } from "./twoCompartmentTurns.ts";
+
+class TwoCompartmentStretch implements Stretch {
+  readonly #constants: TwoCompartmentConstants;
+  readonly #volume: number;
+  readonly #inflow: Inflow;
+  readonly #response: TwoCompartmentResponse;
+  readonly #slope: TwoCompartmentResponse;
+
+  constructor(constants: TwoCompartmentConstants, volume: number, body: Float64Array, inflow: Inflow) {
+    this.#constants = constants;
+    this.#volume = volume;
+    this.#inflow = inflow;
+    this.#response = new TwoCompartmentResponse(constants, body[0]!, body[1]!, inflow);
+    this.#slope = this.#response.derivative();
+  }
+
+  levelAt(u: number): number {
+    this.#response.goTo(u);
+    return this.#response.central / this.#volume;
+  }
+
+  slopeAt(u: number): number {
+    this.#slope.goTo(u);
+    return this.#slope.central / this.#volume;
+  }
+
+  turns(length: number): readonly number[] {
+    return twoCompartmentTurns(this.#constants, this.#slope, this.#inflow, length);
+  }
+
+  areaTo(u: number): number {
+    return this.#response.areaTo(u) / this.#volume;
+  }
+
+  bodyAt(u: number): Float64Array {
+    this.#response.goTo(u);
+    return Float64Array.of(this.#response.central, this.#response.peripheral);
+  }
+
+  eliminatedTo(u: number): number {
+    return this.#constants.k10 * this.#response.areaTo(u);
+  }
+}
+
+/**
+ * Formula: with x what one period leaves in a body that starts empty, (I − e^(A·P))⁻¹·x = x/(1 − e^(−α·P)) +
+ * (A + α·I)·x·D(P)/[(1 − e^(−α·P))·(1 − e^(−β·P))], D as in TwoCompartmentResponse. Every term is positive.
+ */
+function steadyBody(disposition: TwoCompartmentDisposition, period: number, run: PeriodRun): Float64Array {
+  const { alpha, beta, gap, alphaOverOut, alphaOverBack, k12, k21 } = twoCompartmentConstants(disposition);
+  const stretches = run(new Float64Array(2));
+  const last = stretches[stretches.length - 1]!;
+  const left = last.stretch.bodyAt(last.length);
+  const central = left[0]!;
+  const peripheral = left[1]!;
+  const lossAlpha = -Math.expm1(-alpha * period);
+  const lossBeta = -Math.expm1(-beta * period);
+  const difference = (Math.exp(-beta * period) * -Math.expm1(-gap * period)) / gap / lossAlpha / lossBeta;
+  return Float64Array.of(
+    central / lossAlpha + (alphaOverOut * central + k21 * peripheral) * difference,
+    peripheral / lossAlpha + (k12 * central + alphaOverBack * peripheral) * difference,
+  );
+}
+
+export const twoCompartment = {
+  kind: "two-compartment",
+  superposes: true,
+  compartments: 2,
+  check: twoCompartmentCheck,
+  stretch: (disposition, body, inflow) =>
+    new TwoCompartmentStretch(twoCompartmentConstants(disposition), disposition.volume, body, inflow),
+  capacity: () => Infinity,
+  steadyBody: (disposition, period, _doseRate, run) => steadyBody(disposition, period, run),
+  hoursToSteady: (disposition, _doseRate, fraction) => -Math.log1p(-fraction) / twoCompartmentConstants(disposition).beta,
+  halfLife: (disposition) => twoCompartmentConstants(disposition).betaHalfLife,
+  bothReadings: () => null,
+  distributionEnd: (disposition, absorption) =>
+    twoCompartmentDistributionEnd(twoCompartmentConstants(disposition), absorption),
+} as const satisfies ModelKind<TwoCompartmentDisposition>;
