@@ -48,6 +48,11 @@ describe("caseFingerprint", () => {
     ["stated basis of the window", (c) => (c.window!.basis = "other")],
     ["offset in which an instant is written", (c) => (c.now = "2026-03-04T13:00:00+01:00")],
     ["offset of a dose's start", (c) => (c.given[0]!.start = "2026-03-01T10:00:00+02:00")],
+    ["offset of an observation", (c) => (c.patient.observations[0]!.at = "2026-03-01T09:00:00+01:00")],
+    ["offset of a level", (c) => (c.levels[0]!.at = "2026-03-03T02:30:00-05:00")],
+    ["offset of a factor", (c) => (c.patient.factors[0]!.from = "2026-03-02T13:00:00+01:00")],
+    ["offset of a factor's end", (c) => (c.patient.factors[0]!.to = "2026-03-02T13:30:00+01:00")],
+    ["offset of an option's start", (c) => (c.options[0]!.lines[0]!.start = "2026-03-04T21:00:00+01:00")],
     ["offset of an exception", (c) => (c.given[0]!.except![0]!.at = "2026-03-02T10:30:00+01:00")],
   ])("does not depend on: %s", (_, change) => {
     expect(fingerprint(changed(change))).toBe(whole);
