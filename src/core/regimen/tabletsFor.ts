@@ -15,6 +15,7 @@ const HALF_COST = 1_000_000;
 
 /**
  * The fewest tablets that make an amount exactly: whole ones if they can, else with the fewest halves where the product may be halved.
+ * Among as few, those of a single strength come first, then the strongest.
  *
  * @param amountMg mg, above 0
  * @param strengthsMg content of one tablet, mg, each above 0; none for a liquid
@@ -30,7 +31,20 @@ export function tabletsFor(
   divisible: Divisible,
 ): readonly TabletCount[] | null {
   const whole = fewestPieces(amountMg, strengthsMg, false);
-  return whole ?? (divisible === "half" ? fewestPieces(amountMg, strengthsMg, true) : null);
+  if (whole) return oneStrength(amountMg, strengthsMg, whole) ?? whole;
+  return divisible === "half" ? fewestPieces(amountMg, strengthsMg, true) : null;
+}
+
+/** As many tablets of a single strength, if one makes the amount: 2 of 300 mg rather than 500 mg and 100 mg. */
+function oneStrength(
+  amountMg: number,
+  strengthsMg: readonly number[],
+  found: readonly TabletCount[],
+): readonly TabletCount[] | null {
+  const count = found.reduce((sum, each) => sum + each.count, 0);
+  const target = halfNanograms(amountMg);
+  const strengthMg = strengthsMg.find((mg) => (halfNanograms(mg) ?? 0) * count === target);
+  return strengthMg === undefined ? null : [{ strengthMg, count }];
 }
 
 function fewestPieces(

@@ -15,15 +15,7 @@ describe("tabletsFor", () => {
       ],
     ],
     [600, [200, 300], "whole", [[300, 2]]],
-    [
-      400,
-      [100, 200, 300],
-      "whole",
-      [
-        [300, 1],
-        [100, 1],
-      ],
-    ],
+    [400, [100, 200, 300], "whole", [[200, 2]]],
     [300, [200], "whole", null],
     [300, [200], "unknown", null],
     [300, [200], "half", [[200, 1.5]]],
@@ -40,6 +32,17 @@ describe("tabletsFor", () => {
     ],
     [150, [200, 100], "half", [[100, 1.5]]],
     [50, [200], "half", null],
+    // As few tablets: one strength before two, else the strongest first.
+    [600, [500, 300, 100], "whole", [[300, 2]]],
+    [
+      700,
+      [400, 300, 200, 100, 600],
+      "whole",
+      [
+        [600, 1],
+        [100, 1],
+      ],
+    ],
     // Taking the strongest first would fail here: 250 + … leaves 150.
     [400, [250, 200], "whole", [[200, 2]]],
     [
