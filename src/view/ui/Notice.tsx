@@ -1,9 +1,8 @@
 import type { ReactNode } from "react";
+import { fieldWords } from "../../core/messages/index.ts";
 import { Button } from "./Button.tsx";
 import { GravityMark, type MarkGravity } from "./GravityMark.tsx";
 import "./Notice.css";
-
-const WORDS: Readonly<Record<MarkGravity, string>> = { stop: "Stop", check: "Check", note: "Note" };
 
 export interface NoticeProps {
   readonly gravity: MarkGravity;
@@ -20,7 +19,7 @@ export function Notice({ gravity, title, children, onDismiss, isAnnounced = fals
     <div className={`notice notice-${gravity}`} {...(isAnnounced ? { role: "status" } : {})}>
       <p className="notice-head">
         <span className="notice-word">
-          <GravityMark gravity={gravity} /> {WORDS[gravity]}
+          <GravityMark gravity={gravity} /> {fieldWords.gravity[gravity]}
         </span>
         {title ? <strong className="notice-title">{title}</strong> : null}
       </p>

@@ -1,0 +1,142 @@
+import { screen, waitFor, within } from "@testing-library/react";
+import { describe, expect, test, vi } from "vitest";
+import { askWords, issueMessage, levelWords } from "../../../src/core/messages/index.ts";
+import { issue } from "../../../src/core/result/index.ts";
+import { LevelEntry } from "../../../src/view/entry/LevelEntry.tsx";
+import { caseFixture } from "../../core/analysis/caseFixture.ts";
+import { axeFaults } from "../ui/axeFaults.ts";
+import { renderWorkbench } from "../ui/renderWorkbench.tsx";
+
+const level = {
+  id: "l",
+  at: "2026-03-03T14:00:00+00:00",
+  quantity: { value: 5.3, unit: "mg/L" },
+  kind: "measured",
+} as const;
+const show = (change: Parameters<typeof caseFixture>[0] = {}) =>
+  renderWorkbench(<LevelEntry onDone={vi.fn()} />, { open: caseFixture(change) });
+const value = () => screen.getByRole<HTMLInputElement>("textbox", { name: levelWords.value });
+const drawn = () => screen.getByRole<HTMLInputElement>("textbox", { name: levelWords.drawnAt });
+const addButton = () => screen.getByRole("button", { name: levelWords.add });
+
+describe("LevelEntry", () => {
+  test("has no accessibility fault axe can see", async () => {
+    const { container } = await show({ levels: [level] });
+    expect(await axeFaults(container)).toEqual([]);
+  });
+
+  test("is added by keyboard alone, value, unit and clock time", async () => {
+    const shown = await show();
+    expect(value()).toHaveFocus();
+    await shown.user.keyboard("29 micromol/L");
+    await shown.user.tab();
+    await shown.user.tab();
+    expect(drawn()).toHaveFocus();
+    expect(drawn()).toHaveValue("");
+    await shown.user.keyboard("3 March 14:00{Enter}");
+    expect(shown.value().levels).toEqual([
+      {
+        id: expect.any(String),
+        at: "2026-03-03T14:00:00+00:00",
+        quantity: { value: 29, unit: "umol/L" },
+        kind: "measured",
+      },
+    ]);
+    expect(value()).toHaveValue("");
+  });
+
+  test("before the first dose it is refused with a sentence and nothing is lost", async () => {
+    const shown = await show();
+    await shown.user.type(value(), "5.2");
+    await shown.user.type(drawn(), "1 March 07:30{Enter}");
+    const sentence = issueMessage(
+      issue("level-before-dose", { at: "Sun 1 March, 07:30", first: "Sun 1 March, 08:00" }),
+    );
+    expect(drawn()).toHaveAccessibleDescription(expect.stringContaining(sentence));
+    expect(value()).toHaveValue("5.2");
+    expect(drawn()).toHaveValue("1 March 07:30");
+    expect(shown.value().levels).toEqual([]);
+  });
+
+  test("without any dose it says to enter the doses first", async () => {
+    const shown = await show({ given: [] });
+    await shown.user.type(value(), "5.2");
+    await shown.user.type(drawn(), "3 March 07:30{Enter}");
+    expect(drawn()).toHaveAccessibleDescription(expect.stringContaining(issueMessage(issue("level-no-dose"))));
+    expect(shown.value().levels).toEqual([]);
+  });
+
+  test("a missed first dose does not count as a dose", async () => {
+    const given = caseFixture().given.map((line) => ({ ...line, except: [{ index: 0, status: "missed" as const }] }));
+    const shown = await show({ given });
+    await shown.user.type(value(), "5.2");
+    await shown.user.type(drawn(), "1 March 12:00{Enter}");
+    const data = { at: "Sun 1 March, 12:00", first: "Sun 1 March, 20:00" };
+    expect(drawn()).toHaveAccessibleDescription(
+      expect.stringContaining(issueMessage(issue("level-before-dose", data))),
+    );
+  });
+
+  test("after the now line it is refused with a sentence and nothing is lost", async () => {
+    const shown = await show();
+    await shown.user.type(value(), "5.2");
+    await shown.user.type(drawn(), "tomorrow 07:30{Enter}");
+    const data = { at: "Thu 5 March, 07:30", now: "Wed 4 March, 12:00" };
+    expect(drawn()).toHaveAccessibleDescription(expect.stringContaining(issueMessage(issue("level-after-now", data))));
+    expect(value()).toHaveValue("5.2");
+    expect(shown.value().levels).toEqual([]);
+  });
+
+  test.each([
+    ["0", issue("level-not-positive", { found: 0, unit: "mg/L" })],
+    ["-3", issue("level-not-positive", { found: -3, unit: "mg/L" })],
+    ["1,5", issue("number-comma", { text: "1,5", suggestion: "1.5" })],
+  ])("%s is refused", async (typed, expected) => {
+    const shown = await show();
+    await shown.user.type(value(), typed);
+    await shown.user.type(drawn(), "3 March 07:30{Enter}");
+    expect(value()).toHaveAccessibleDescription(issueMessage(expected));
+    expect(value()).toHaveValue(typed);
+    expect(shown.value().levels).toEqual([]);
+  });
+
+  test("an empty form says what is missing", async () => {
+    const shown = await show();
+    await shown.user.click(addButton());
+    expect(value()).toBeInvalid();
+    expect(drawn()).toBeInvalid();
+    expect(shown.value().levels).toEqual([]);
+  });
+
+  test("a level a thousand times too high is asked about, and the unit it fits is offered", async () => {
+    const shown = await show();
+    await shown.user.type(value(), "5200");
+    await shown.user.type(drawn(), "3 March 14:00{Enter}");
+    expect(shown.value().levels).toEqual([]);
+    await shown.user.click(screen.getByRole("button", { name: askWords.itIs("5,200\u00a0microgram/L") }));
+    expect(shown.value().levels[0]).toMatchObject({ quantity: { value: 5200, unit: "ug/L" } });
+    expect(shown.value().levels[0]).not.toHaveProperty("confirmed");
+  });
+
+  test("is shown with predicted and difference, left out with a reason, taken back, removed", async () => {
+    const shown = await show({ levels: [level] });
+    const row = () => screen.getAllByRole("row")[1]!;
+    await waitFor(() => expect(shown.state().open?.analysis.status).toBe("fresh"));
+    const result = shown.state().open!.analysis.result!.levels[0]!;
+    expect(within(row()).getByText(`${result.predicted!.toFixed(2)} mg/L`)).toBeVisible();
+    expect(within(row()).getByText(`\u2212${(-result.difference!).toFixed(2)} mg/L`)).toBeVisible();
+
+    await shown.user.click(within(row()).getByRole("button", { name: new RegExp(`^${levelWords.leaveOut}`) }));
+    await shown.user.keyboard("{Enter}");
+    expect(shown.value().levels[0]).not.toHaveProperty("excluded");
+    expect(screen.getByRole("textbox", { name: levelWords.reason })).toBeInvalid();
+    await shown.user.keyboard("line contaminated{Enter}");
+    expect(shown.value().levels[0]?.excluded).toBe("line contaminated");
+    expect(within(row()).getByText(levelWords.left("line contaminated"))).toBeVisible();
+
+    await shown.user.click(within(row()).getByRole("button", { name: new RegExp(`^${levelWords.takeBack}`) }));
+    expect(shown.value().levels[0]).not.toHaveProperty("excluded");
+    await shown.user.click(within(row()).getByRole("button", { name: new RegExp(`^${levelWords.remove}`) }));
+    expect(shown.value().levels).toEqual([]);
+  });
+});
