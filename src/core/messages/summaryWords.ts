@@ -70,6 +70,7 @@ export const summaryHeadWords = {
   ageUnknown: "age not recorded",
   weightUnknown: "weight not recorded",
   heightUnknown: "height not recorded",
+  printed: (when: string) => `printed ${when}`,
   revision: (count: number) => `case revision ${count}`,
   readOnly: "read-only copy",
   marks: (titles: readonly string[]) => titles.join(" · "),
@@ -165,7 +166,7 @@ export const summaryOrderWords = {
   notMakeable: (amount: string, strengths: readonly string[], isHalf: boolean, form: string) =>
     strengths.length === 0
       ? `${amount}: the record lists no strength of this ${form}.`
-      : `${amount} cannot be made from ${isHalf ? `whole or half ${form}s` : `whole ${form}s`} of ${listWords(strengths, "or")}.`,
+      : `From ${isHalf ? `whole or half ${form}s` : `whole ${form}s`} of ${listWords(strengths, "or")}, ${amount} cannot be made.`,
 } as const;
 
 /** Expected readings, hours in the window, kinetic basis. */

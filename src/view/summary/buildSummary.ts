@@ -52,7 +52,7 @@ export function buildSummary(input: SummaryInput): SummaryModel {
     heading: SUMMARY_TITLES.heading,
     label: value.label === "" ? words.unlabelled : value.label,
     person: personWords(input, print),
-    printed: print.at(input.printedAtMs, "full"),
+    printed: words.printed(print.at(input.printedAtMs, "full")),
     revision,
     running: [value.label, revision, fingerprint, ...(watermark ? [watermark] : [])]
       .filter((part) => part !== "")

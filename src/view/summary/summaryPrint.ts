@@ -30,8 +30,13 @@ export function summaryPrint(input: Pick<SummaryInput, "case" | "analysis" | "se
     options: NumberPrintOptions = { significant: SIGNIFICANT },
   ): string =>
     unit === "mg.h/L"
-      ? `${numberPrint(value, options)} mg hours per L`
+      ? exposure(value, options)
       : quantityPrint({ value, unit }, { style: "print", microgram, ...options });
+  /** Below 1 mg in micrograms, as any mg amount. */
+  const exposure = (value: number, options: NumberPrintOptions): string =>
+    value !== 0 && Math.abs(value) < 1
+      ? `${numberPrint(value * 1000, options)} ${microgram} hours per L`
+      : `${numberPrint(value, options)} mg hours per L`;
   const at = (ms: number, form: InstantForm) => instantText(ms, zone, form);
   return {
     figure: (value, significant = SIGNIFICANT) => numberPrint(value, { significant }),

@@ -190,7 +190,7 @@ describe("the chosen option in plain sentences", () => {
     expect(banners[0]).toEqual({
       gravity: "stop",
       title: "Cannot be given as written",
-      text: "130 mg cannot be made from whole tablets of 100 mg, 200 mg, 300 mg or 450 mg.".replace(
+      text: "From whole tablets of 100 mg, 200 mg, 300 mg or 450 mg, 130 mg cannot be made.".replace(
         /(\d) mg/g,
         "$1\u00a0mg",
       ),
