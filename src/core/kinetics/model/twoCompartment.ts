@@ -82,7 +82,8 @@ export const twoCompartment = {
     new TwoCompartmentStretch(twoCompartmentConstants(disposition), disposition.volume, body, inflow),
   capacity: () => Infinity,
   steadyBody: (disposition, period, _doseRate, run) => steadyBody(disposition, period, run),
-  hoursToSteady: (disposition, _doseRate, fraction) => -Math.log1p(-fraction) / twoCompartmentConstants(disposition).beta,
+  hoursToSteady: (disposition, _doseRate, fraction) =>
+    -Math.log1p(-fraction) / twoCompartmentConstants(disposition).beta,
   halfLife: (disposition) => twoCompartmentConstants(disposition).betaHalfLife,
   bothReadings: () => null,
   distributionEnd: (disposition, absorption) =>

@@ -39,10 +39,8 @@ export class TwoCompartmentResponse {
     const isShort = alpha * u < CARRY_AS_LOSS_BELOW;
     // Over a short time the change is added to the amounts: rounding then does not build up from stretch to stretch.
     const own = isShort ? Math.expm1(-alpha * u) : leftAlpha;
-    let central =
-      this.#central * (own + alphaOverOut * difference) + this.#peripheral * (k21 * difference);
-    let peripheral =
-      this.#central * (k12 * difference) + this.#peripheral * (own + alphaOverBack * difference);
+    let central = this.#central * (own + alphaOverOut * difference) + this.#peripheral * (k21 * difference);
+    let peripheral = this.#central * (k12 * difference) + this.#peripheral * (own + alphaOverBack * difference);
     const { ka, gut, rate } = this.#inflow;
     for (let i = 0; i < ka.length; i++) {
       const k = ka[i]!;
@@ -66,8 +64,7 @@ export class TwoCompartmentResponse {
   areaTo(u: number): number {
     const { alpha, beta, alphaOverOut, k21 } = this.#constants;
     const chain = decayChain([alpha, beta, 0], u);
-    let area =
-      this.#central * (decayIntegral(alpha, u) + alphaOverOut * chain) + this.#peripheral * (k21 * chain);
+    let area = this.#central * (decayIntegral(alpha, u) + alphaOverOut * chain) + this.#peripheral * (k21 * chain);
     const { ka, gut, rate } = this.#inflow;
     for (let i = 0; i < ka.length; i++) {
       const k = ka[i]!;
