@@ -1,6 +1,6 @@
 import { doseMg, type MedicineRecord, type Product } from "../../core/medicine/index.ts";
 import { listWords, summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
-import { type DoseAmount, type TabletCount, tabletsFor } from "../../core/regimen/index.ts";
+import { type DoseAmount, tabletsFor } from "../../core/regimen/index.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
 /** A dose as it is taken from the pack. */
@@ -39,7 +39,7 @@ function piecesAmount(
   mass: string,
 ): OrderAmount {
   const strengths = product.strengths.map((strength) => strength.value);
-  const made = mg === null ? null : fewestTablets(mg, strengths, product.divisible);
+  const made = mg === null ? null : tabletsFor(mg, strengths, product.divisible);
   const strengthText = (value: number) => print.exact({ value, unit: "mg" });
   if (!made) {
     const listed = [...strengths].sort((a, b) => a - b).map(strengthText);
@@ -62,22 +62,6 @@ function piecesAmount(
     mass,
     notMakeable: null,
   };
-}
-
-/** The fewest tablets; of as many, those of one strength, which are harder to mix up: 400 mg is 2 tablets of 200 mg rather than 300 mg and 100 mg. */
-function fewestTablets(
-  mg: number,
-  strengths: readonly number[],
-  divisible: Product["divisible"],
-): readonly TabletCount[] | null {
-  const fewest = tabletsFor(mg, strengths, divisible);
-  if (!fewest || fewest.length === 1) return fewest;
-  const total = (tablets: readonly TabletCount[]) => tablets.reduce((sum, { count }) => sum + count, 0);
-  const hasHalf = (tablets: readonly TabletCount[]) => tablets.some(({ count }) => !Number.isInteger(count));
-  const single = strengths
-    .map((strength) => tabletsFor(mg, [strength], divisible))
-    .find((tablets) => tablets && total(tablets) <= total(fewest) && (hasHalf(fewest) || !hasHalf(tablets)));
-  return single ?? fewest;
 }
 
 /** A millilitre fraction finer than this can't be read on an oral syringe; the volume is rounded to it in print. */
