@@ -1,6 +1,7 @@
 import type { KeyboardEvent } from "react";
 import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
+import { type Product, productOf } from "../../core/medicine/index.ts";
 import { instantIso, instantText } from "../../core/time/index.ts";
 import { quantityPrint } from "../../core/units/index.ts";
 import type { ClockScale } from "../chart/clockScale.ts";
@@ -37,6 +38,12 @@ const STATUS_WORDS: Readonly<Record<DoseMark["status"], string>> = {
   "after-now": ", after the now line: not counted",
   "before-now": ", before the now line: not counted",
 };
+
+/** Release form by shape: a modified-release product is round-ended, an immediate-release tablet square-cornered, a liquid in between. */
+function tokenCorner(product: Product): number {
+  if (product.release === "modified") return WIDTH / 2.2;
+  return product.form === "liquid" ? 4.5 : 2;
+}
 
 /** One dose: dragged along the clock, moved with arrow keys, opened with Enter. */
 export function DoseToken(props: DoseTokenProps) {
@@ -86,6 +93,7 @@ export function DoseToken(props: DoseTokenProps) {
     }
   };
 
+  const product = productOf(value.medicine, mark.product);
   const amount = quantityPrint(mark.amount, { style: "screen", microgram: "microgram" });
   const words = `${instantText(atMs, value.timeZone, "dayClock")}, ${amount}${STATUS_WORDS[mark.status]}`;
   const isHollow = mark.status === "missed" || mark.status === "after-now" || mark.status === "before-now";
@@ -105,9 +113,16 @@ export function DoseToken(props: DoseTokenProps) {
       onKeyDown={onKeyDown}
       {...(props.isReadOnly ? { onClick: props.onSelect } : { onPointerDown: startDrag })}
     >
-      <title>{words}</title>
+      <title>{`${words}, ${product.name}`}</title>
       <rect className="token-hit" x={token.x - HIT / 2} y={baseline - 40} width={HIT} height={62} />
-      <rect className="token-body" x={token.x - WIDTH / 2} y={y} width={WIDTH} height={token.height} rx={WIDTH / 2.4} />
+      <rect
+        className="token-body"
+        x={token.x - WIDTH / 2}
+        y={y}
+        width={WIDTH}
+        height={token.height}
+        rx={tokenCorner(product)}
+      />
       {mark.status === "late" || mark.status === "moved" ? (
         <line
           className="token-scheduled"
