@@ -66,7 +66,6 @@ test("a case is opened, computed, changed and found again without server and net
   const shown = await highest.textContent();
 
   await page.reload();
-  await page.getByRole("table", { name: "Cases on this device" }).getByRole("button", { name: /^Open/ }).click();
   await expect(page.getByRole("region", { name: "Option C" })).toBeVisible();
   await expect.poll(() => highest.textContent()).toBe(shown);
 });

@@ -40,20 +40,22 @@ async function watch(container: ServiceWorkerContainer, news: ServiceWorkerNews)
     return;
   }
 
-  const offer = (worker: ServiceWorker) =>
+  const offer = () =>
     news.onWaiting(() => {
+      // The newest that waits, if another came since the offer; none waits if another tab has taken it already.
+      if (!registration.waiting) return location.reload();
       consented = true;
-      worker.postMessage("take-over");
+      registration.waiting.postMessage("take-over");
     });
   const follow = (worker: ServiceWorker | null) => {
     worker?.addEventListener("statechange", () => {
-      if (worker.state === "installed" && registration.active) offer(worker);
+      if (worker.state === "installed" && registration.active) offer();
       if (worker.state === "redundant" && !registration.active)
         news.onFailed?.("the program's files could not be stored");
     });
   };
 
-  if (registration.waiting && registration.active) offer(registration.waiting);
+  if (registration.waiting && registration.active) offer();
   follow(registration.installing);
   registration.addEventListener("updatefound", () => follow(registration.installing));
   void container.ready.then(({ active }) => {
