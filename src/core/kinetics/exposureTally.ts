@@ -58,13 +58,10 @@ export class ExposureTally {
   /** Hours below, within and above the window; without one all hours count as within. The three add up to `total`. */
   hours(total: number): { hoursBelow: number; hoursWithin: number; hoursAbove: number } {
     if (this.#window === undefined) return { hoursBelow: 0, hoursWithin: total, hoursAbove: 0 };
-    const below = this.#below.value;
-    const within = this.#within.value;
-    const above = this.#above.value;
-    // Rounding of the parts goes into the longest, where it is least.
-    const longest = Math.max(below, within, above);
-    if (longest === within) return { hoursBelow: below, hoursWithin: total - below - above, hoursAbove: above };
-    if (longest === below) return { hoursBelow: total - within - above, hoursWithin: within, hoursAbove: above };
-    return { hoursBelow: below, hoursWithin: within, hoursAbove: total - below - within };
+    const hours = [this.#below.value, this.#within.value, this.#above.value] as [number, number, number];
+    // Rounding of the parts goes into the longest, where it is least. Twice: the first correction is itself rounded.
+    const longest = hours.indexOf(Math.max(...hours));
+    for (let i = 0; i < 2; i++) hours[longest]! += total - (hours[0] + hours[1] + hours[2]);
+    return { hoursBelow: hours[0], hoursWithin: hours[1], hoursAbove: hours[2] };
   }
 }
