@@ -1,5 +1,6 @@
 import adjustment from "../../demo-data/adjustment.ebbline.json";
 import start from "../../demo-data/start.ebbline.json";
+import { derive } from "../core/analysis/index.ts";
 import { BUILT_IN_RECORDS } from "../core/medicine/index.ts";
 import { createCaseRepository } from "../shell/storage/createCaseRepository.ts";
 import { DATABASE_NAME } from "../shell/storage/storageSchema.ts";
@@ -25,7 +26,7 @@ export function compose(): Workbench {
   });
   const runner: AnalysisRunner = createAnalysisClient({
     startWorker: () => new Worker(new URL("../shell/workers/analysis.worker.ts", import.meta.url), { type: "module" }),
-    loadDerive: async () => (await import("../core/analysis/index.ts")).derive,
+    loadDerive: async () => derive,
   });
   const demos = { start, adjustment };
   return createWorkbench({ repository, runner, clock, newId, demos, builtInRecords: BUILT_IN_RECORDS });

@@ -7,24 +7,10 @@ const technical = ({ detail }: Readonly<Record<string, unknown>>): string => (de
 /** Where the work is kept: what stands in the way, and what to do. */
 export const storageMessages: Readonly<Record<string, MessageFunction>> = {
   // the database as a whole
-  "storage-lost": ({ extent, cases: count, recoverable, ...data }) => {
-    const what =
-      extent === "some"
-        ? `The browser's storage no longer holds ${cases(count)} as last saved`
-        : `The browser has lost this computer's Ebbline storage, which held ${count === null ? "an unknown number of cases" : cases(count)}`;
-    const back = recoverable
-      ? `${recoverable === count ? "all" : recoverable} can be put back from the second copy when you continue`
-      : "no second copy was found, so import the case files you exported";
-    return `${what}; ${back}${technical(data)}.`;
-  },
   "storage-newer": ({ readable }) =>
     readable
       ? "The stored cases were written by a newer version of Ebbline, so they can be read and exported here but not changed; reload the page to get the newer version."
       : "The stored cases were written by a newer version of Ebbline and can't be read by this one; reload the page to get the newer version.",
-  "storage-blocked": () =>
-    "Another tab holds an older version of Ebbline open; close all its other tabs and this one will go on by itself.",
-  "storage-unavailable": (data) =>
-    `This browser gives Ebbline no storage${technical(data)}, so nothing you enter is kept: export the case as a file before you close the page.`,
   "storage-superseded": () =>
     "A newer version of Ebbline has taken over the storage in another tab, so this tab can no longer save; export the case if it has unsaved changes, then reload the page.",
   "storage-restored": ({ cases: count }) =>
@@ -35,6 +21,8 @@ export const storageMessages: Readonly<Record<string, MessageFunction>> = {
     "This browser keeps no second copy of your cases (that needs https or this computer's own address), so export the cases that matter as files.",
   "storage-copy-failed": (data) =>
     `The case was saved, but its second copy was not${technical(data)}; export the cases that matter as files.`,
+  "storage-copies-unread": (data) =>
+    `The second copies of your cases could not be read${technical(data)}; reload the page before you go on, they may be readable then.`,
 
   // saving
   "save-quota": () =>
@@ -62,7 +50,6 @@ export const storageMessages: Readonly<Record<string, MessageFunction>> = {
   "storage-entry-unreadable": ({ table, name }) =>
     `A stored ${table === "windows" ? "target window" : "medicine record"} (${name}) can't be read and is left out.`,
   "case-writer-now": () => "The other tab has let go of this case: it was read again and you can change it here.",
-  "case-read-again": () => "Another tab saved this case; what you see is its latest state.",
   "remove-other-tab": (data) =>
     `The case ${named(data)} is open in another tab, so it was not removed; close it there first.`,
 

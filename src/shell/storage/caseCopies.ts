@@ -1,6 +1,9 @@
 import { textChecksum } from "./caseRow.ts";
 import type { CaseRow } from "./storageSchema.ts";
 
+/** How long any of it may take, ms. The copies are a safeguard: one that hangs must keep no save from being acknowledged and no opening from ending. */
+const WAIT = 2_000;
+
 /**
  * A second copy of every case, outside IndexedDB: one file a case in the origin private file system. A browser that deletes a damaged
  * IndexedDB leaves these alone. Each write goes to a swap file that replaces the old one when closed, so a copy is whole or the one before.
@@ -31,7 +34,7 @@ export function createCaseCopies(openRoot: OpenDirectory | null): CaseCopies {
   // An id comes from a file as well: only what can't be read as a path becomes a file name.
   const fileName = (id: string): string => encodeURIComponent(id).replaceAll(".", "%2E") + SUFFIX;
 
-  return {
+  const copies: CaseCopies = {
     isAvailable: true,
     async write(row) {
       const file = await (await openFolder()).getFileHandle(fileName(row.id), { create: true });
@@ -54,6 +57,21 @@ export function createCaseCopies(openRoot: OpenDirectory | null): CaseCopies {
       return rows;
     },
   };
+  return {
+    isAvailable: true,
+    write: (row) => within(WAIT, copies.write(row)),
+    remove: (id) => within(WAIT, copies.remove(id)),
+    read: () => within(WAIT, copies.read()),
+  };
+}
+
+/** `work`, or a rejection once it has taken longer than `wait` ms. */
+async function within<T>(wait: number, work: Promise<T>): Promise<T> {
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  const late = new Promise<never>((_, reject) => {
+    timer = setTimeout(() => reject(new Error(`no answer within ${wait} ms`)), wait);
+  });
+  return Promise.race([work, late]).finally(() => clearTimeout(timer));
 }
 
 function copyRead(text: string): CaseRow | null {

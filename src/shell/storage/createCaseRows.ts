@@ -10,9 +10,6 @@ import { type SaveOutcome, StorageRefusal, saveAttempt, saveFailure } from "./sa
 import type { CaseRow } from "./storageSchema.ts";
 import type { WriterLocks } from "./writerLocks.ts";
 
-/** How long a save waits for its second copy, ms. The copy is a safeguard: one that hangs must not keep a save from being acknowledged. */
-const COPY_WAIT = 2_000;
-
 export interface CaseRowsSetting {
   readonly connection: Connection;
   readonly marker: LossMarker;
@@ -48,7 +45,7 @@ export function createCaseRows({ connection, marker, copies, channel, locks, clo
       const revision = await put(row);
       seen.set(row.id, revision);
       marker.noteSaved(row.id, revision, row.savedAt);
-      await copyWithin(() => copies.write({ ...row, revision }));
+      await copy({ ...row, revision });
       channel.post("saved", row.id);
       return { ok: true, savedAt: row.savedAt };
     } catch (error) {
@@ -58,33 +55,29 @@ export function createCaseRows({ connection, marker, copies, channel, locks, clo
 
   async function erase(id: string): Promise<SaveOutcome> {
     const takeBack = marker.noteRemoved(id); // before: the note must never ask for more than there is
-    const outcome = await saveAttempt(clock, () =>
-      connection.write(["cases"], (database) => database.table("cases").delete(id)),
-    );
+    const outcome = await saveAttempt(clock, async () => {
+      connection.requireWrites();
+      // The copy goes first and must go: left behind, it would bring a removed case back after a loss.
+      await copies.remove(id);
+      await connection.write(["cases"], (database) => database.table("cases").delete(id));
+    });
     if (!outcome.ok) {
       takeBack();
       return outcome;
     }
     seen.delete(id);
-    await copyWithin(() => copies.remove(id));
     channel.post("removed", id);
     return outcome;
   }
 
   /** A second copy that fails does not undo a save; it is said once. */
-  async function copyWithin(work: () => Promise<void>): Promise<void> {
-    let timer: ReturnType<typeof setTimeout> | undefined;
-    const late = new Promise<never>((_, reject) => {
-      timer = setTimeout(() => reject(new Error("no answer")), COPY_WAIT);
-    });
+  async function copy(row: CaseRow): Promise<void> {
     try {
-      await Promise.race([work(), late]);
+      await copies.write(row);
     } catch (error) {
       if (!copyFaultSaid)
         channel.emit({ kind: "fault", issues: [issue("storage-copy-failed", { detail: errorText(error) })] });
       copyFaultSaid = true;
-    } finally {
-      clearTimeout(timer);
     }
   }
 

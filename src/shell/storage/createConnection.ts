@@ -19,6 +19,8 @@ export interface Connection {
   /** From here on writes are allowed, into the database of this identity only. `null` forbids them, with the reason. */
   permitWrites(identity: string): void;
   forbidWrites(refusal: StorageRefusal): void;
+  /** Throws the refusal while writes are forbidden, for work that goes with a write but not into the database. */
+  requireWrites(): void;
   /** True once this tab has given the database up: only a reload helps. */
   hasEnded(): boolean;
   identity(): Promise<string | null>;
@@ -99,8 +101,12 @@ export function createConnection(setting: DatabaseSetting, channel: ChangeChanne
     return work(database);
   }
 
-  async function write<T>(tables: readonly string[], work: (database: Dexie) => PromiseLike<T>): Promise<T> {
+  function requireWrites(): void {
     if (permitted === null) throw refusal;
+  }
+
+  async function write<T>(tables: readonly string[], work: (database: Dexie) => PromiseLike<T>): Promise<T> {
+    requireWrites();
     inFlight += 1;
     try {
       return await read((current) =>
@@ -135,6 +141,7 @@ export function createConnection(setting: DatabaseSetting, channel: ChangeChanne
       permitted = null;
       refusal = reason;
     },
+    requireWrites,
     hasEnded: () => hasEnded,
     identity: () => read(async (current) => metaRowRead(await current.table("meta").get("database"))?.id ?? null),
     async identityMake() {

@@ -1,3 +1,4 @@
+import { issue } from "../../core/result/index.ts";
 import type { CaseCopies } from "./caseCopies.ts";
 import type { ChangeChannel } from "./changeChannel.ts";
 import type { Connection } from "./createConnection.ts";
@@ -64,7 +65,7 @@ export function createOpening(
   async function openNow(): Promise<StorageState> {
     connection.disconnect();
     const noted = marker.read(); // before the database: another tab may be saving meanwhile
-    const copied = noted ? [] : await copies.read(); // without a marker a second copy is the only witness that there was work
+    const copied = noted ? [] : await copies.read().catch(() => []); // without a marker a second copy is the only witness that there was work
     const probe = await connection.probe();
     const verdict = storageVerdict(probe, noted, copied.length);
     if (verdict.kind === "unavailable") return verdict;
@@ -101,7 +102,11 @@ export function createOpening(
   /** Second copies of cases the database does not hold, or holds at an earlier save. */
   async function restorable(): Promise<readonly CaseRow[]> {
     const stored = revisionsOf(connection.isConnected() ? await readRows() : []);
-    return (await copies.read()).filter((copy) => (stored.get(copy.id) ?? -1) < copy.revision);
+    const copied = await copies.read().catch((error: unknown): readonly CaseRow[] => {
+      channel.emit({ kind: "fault", issues: [issue("storage-copies-unread", { detail: errorText(error) })] });
+      return [];
+    });
+    return copied.filter((copy) => (stored.get(copy.id) ?? -1) < copy.revision);
   }
 
   async function acceptLoss(): Promise<number> {

@@ -4,7 +4,7 @@ import { fail, type Issue, issue, type Result, succeed } from "../../core/result
 import { caseFile } from "./caseFile.ts";
 import { createSession, type Session, type SessionStart } from "./createSession.ts";
 import type { CaseEntry } from "./ports.ts";
-import { failureIssue, storageIssue } from "./storageSentences.ts";
+import { failureIssue } from "./storageSentences.ts";
 import type { StoreContext } from "./storeContext.ts";
 import type { WorkbenchState } from "./workbenchState.ts";
 
@@ -50,7 +50,7 @@ export function caseActions(context: StoreContext): CaseActions {
     if (context.ended) return context.ended;
     if (boot.kind === "ready" || boot.kind === "unavailable" || (mayRead && boot.kind === "newer" && boot.readable))
       return null;
-    return (boot.kind === "newer" ? storageIssue(boot) : null) ?? issue("storage-not-open");
+    return boot.kind === "newer" ? issue("storage-newer", { readable: boot.readable }) : issue("storage-not-open");
   }
 
   /** False when the open case has changes that would be lost. */

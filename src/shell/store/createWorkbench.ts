@@ -1,6 +1,6 @@
 import { createStore, type StoreApi } from "zustand/vanilla";
-import { type Case, caseValidate } from "../../core/case/index.ts";
-import { issue } from "../../core/result/index.ts";
+import { caseValidate } from "../../core/case/index.ts";
+import { type Issue, issue } from "../../core/result/index.ts";
 import { bootActions } from "./bootActions.ts";
 import { caseActions } from "./caseActions.ts";
 import type { Session } from "./createSession.ts";
@@ -46,6 +46,8 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
       else context.say("check", issue("edit-no-case"));
     };
 
+    const demos = demosRead(setting.demos);
+
     return {
       boot: { kind: "opening" },
       screen: "cases",
@@ -53,10 +55,10 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
       medicines: setting.builtInRecords,
       ownMedicines: [],
       wardWindows: [],
-      demos: Object.entries(setting.demos).flatMap(([name, value]) => demoEntry(name, value)),
+      demos: demos.good,
       settings: settingsRead(undefined),
       open: null,
-      notices: [],
+      notices: demos.faults.map((fault) => ({ id: ++notices, gravity: "stop", issues: [fault] })),
       update: "none",
 
       start: boot.start,
@@ -103,15 +105,18 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
   });
 }
 
-/** A demonstration that can't be read is not offered; a test holds every bundled one against the parser. */
-function demoEntry(name: string, value: unknown): DemoEntry[] {
-  const parsed = caseValidate(value);
-  return parsed.ok
-    ? [{ name, label: parsed.value.label, medicine: parsed.value.medicine.name, about: aboutCase(parsed.value) }]
-    : [];
-}
-
-/** What the case says of itself in the first line of its notes. */
-function aboutCase({ notes }: Case): string {
-  return notes.split("\n", 1)[0]?.trim() ?? "";
+/** One that can't be read is not offered, and named. */
+function demosRead(demos: Readonly<Record<string, unknown>>): { good: DemoEntry[]; faults: Issue[] } {
+  const good: DemoEntry[] = [];
+  const faults: Issue[] = [];
+  for (const [name, value] of Object.entries(demos)) {
+    const parsed = caseValidate(value);
+    if (!parsed.ok) faults.push(issue("demo-unreadable", { name }));
+    else {
+      const { label, medicine, notes } = parsed.value;
+      // What the case says of itself: the first line of its notes.
+      good.push({ name, label, medicine: medicine.name, about: notes.split("\n", 1)[0]?.trim() ?? "" });
+    }
+  }
+  return { good, faults };
 }

@@ -1,6 +1,6 @@
 import { issueMessage } from "../../core/messages/index.ts";
 import { type Issue, issue } from "../../core/result/index.ts";
-import type { SaveOutcome, StorageState } from "./ports.ts";
+import type { SaveOutcome } from "./ports.ts";
 import type { Saving } from "./workbenchState.ts";
 
 export type SavingReason = NonNullable<Saving["reason"]>;
@@ -28,18 +28,4 @@ const READER_CODES = { newer: "save-newer", "other-tab": "save-other-tab" } as c
 
 export function readerSaving(reason: keyof typeof READER_CODES, savedAt: number | null): Saving {
   return { status: "read-only", savedAt, reason, detail: issueMessage(issue(READER_CODES[reason])) };
-}
-
-const STATE_CODES: Readonly<Record<Exclude<StorageState["kind"], "ready">, string>> = {
-  lost: "storage-lost",
-  newer: "storage-newer",
-  blocked: "storage-blocked",
-  unavailable: "storage-unavailable",
-};
-
-/** What there is to say of the storage as a whole; null when it is ready. */
-export function storageIssue(state: StorageState): Issue | null {
-  if (state.kind === "ready") return null;
-  const { kind, ...data } = state;
-  return issue(STATE_CODES[kind], data);
 }

@@ -172,6 +172,28 @@ describe("second copies", () => {
     expect(heard).toEqual([{ kind: "fault", issues: [expect.objectContaining({ code: "storage-copy-failed" })] }]);
   });
 
+  test("a copy that can't be removed keeps its case: it would bring it back after a loss", async () => {
+    const tab = await browser.ready();
+    await tab.save(caseOf("a"));
+    browser.files.fail(new Error("locked"));
+    expect(await tab.remove("a")).toMatchObject({ ok: false, reason: "failed" });
+    expect(await tab.load("a")).toMatchObject({ ok: true });
+    browser.files.fail(null);
+    expect(await tab.remove("a")).toMatchObject({ ok: true });
+    expect(copies()).toEqual([]);
+  });
+
+  test("a case that may not be written keeps its copy", async () => {
+    await (await browser.ready()).save(caseOf("a"));
+    browser.kill();
+    const [meta] = (await rawRead(browser.indexedDB, "meta")) as object[];
+    await rawPut(browser.indexedDB, "meta", { ...meta, schema: 2 });
+    const tab = browser.tab();
+    await tab.open();
+    expect(await tab.remove("a")).toMatchObject({ ok: false, reason: "newer" });
+    expect(copies()).toHaveLength(1);
+  });
+
   test("an id from a file can't lead out of the folder", async () => {
     const tab = await browser.ready();
     await tab.save(caseOf("../a/b"));

@@ -201,6 +201,32 @@ describe("second copies", () => {
     expect(await browser.tab().open()).toMatchObject({ kind: "lost", cases: 1, recoverable: 1 });
   });
 
+  test.each([
+    ["are forbidden", () => Promise.reject(new DOMException("private window", "SecurityError"))],
+    ["hang", () => new Promise<FileSystemDirectoryHandle>(() => {})],
+  ])("that %s keep neither a first run nor a save from working", async (_, openPrivateFiles) => {
+    vi.useFakeTimers({ toFake: ["setTimeout", "clearTimeout"], shouldAdvanceTime: true, advanceTimeDelta: 500 });
+    try {
+      const tab = browser.tab({ openPrivateFiles });
+      expect(await tab.open()).toEqual({ kind: "ready" });
+      expect(await tab.save(caseOf("a"))).toMatchObject({ ok: true });
+    } finally {
+      vi.useRealTimers();
+    }
+  });
+
+  test("that can't be read after a loss are said, and the loss can still be accepted", async () => {
+    await withWork("a");
+    wipe();
+    const tab = browser.tab({ openPrivateFiles: () => Promise.reject(new Error("locked")) });
+    const heard: StorageChange[] = [];
+    tab.subscribe((change) => heard.push(change));
+    expect(await tab.open()).toMatchObject({ kind: "lost", cases: 1, recoverable: 0 });
+    expect(heard).toEqual([{ kind: "fault", issues: [expect.objectContaining({ code: "storage-copies-unread" })] }]);
+    await tab.acceptLoss();
+    expect(await tab.open()).toEqual({ kind: "ready" });
+  });
+
   test("a damaged copy is not put back, and stays", async () => {
     await withWork("a", "b");
     wipe();

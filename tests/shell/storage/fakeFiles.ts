@@ -25,6 +25,7 @@ export function createFakeFiles() {
       return fileHandle(files, name);
     },
     async removeEntry(name: string) {
+      if (failure) throw failure;
       if (!files.delete(name)) throw new DOMException("no such file", "NotFoundError");
     },
     async *values() {
@@ -43,7 +44,7 @@ export function createFakeFiles() {
   return {
     open: async () => root as unknown as FileSystemDirectoryHandle,
     files: (): Map<string, string> => folders.get("ebbline-copies") ?? new Map(),
-    /** From now on every write fails so. */
+    /** From now on every write and removal fails so. */
     fail: (error: Error | null): void => {
       failure = error;
     },

@@ -226,10 +226,13 @@ describe("demonstrations", () => {
     broken: { format: "ebbline-case", version: 1 },
   };
 
-  test("the good ones are offered, with what they say of themselves", async () => {
+  test("the good ones are offered, with what they say of themselves; a faulty one is named", async () => {
     const { state } = await startWorkbench({ demos });
     expect(state().demos.map(({ name }) => name)).toEqual(["start", "adjustment"]);
     for (const { label, medicine, about } of state().demos) expect([label, medicine, about]).not.toContain("");
+    expect(state().notices).toMatchObject([
+      { gravity: "stop", issues: [{ code: "demo-unreadable", data: { name: "broken" } }] },
+    ]);
   });
 
   test("each opening is a fresh copy, marked as a demonstration", async () => {
