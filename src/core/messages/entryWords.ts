@@ -93,6 +93,8 @@ export const levelWords = {
   afterDose: "after the dose",
   below: (limit: string) => `below ${limit}`,
   actions: "actions",
+  change: "Change",
+  save: "Save the change",
   leaveOut: "Leave out",
   takeBack: "Take back in",
   remove: "Remove",

@@ -5,6 +5,7 @@ import { type DoseLine, type DoseProduct, doseTextRead } from "../../core/regime
 import { issue } from "../../core/result/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { FieldFrame } from "../ui/FieldFrame.tsx";
+import { partId } from "../ui/partId.ts";
 import { doseProductsInFull } from "./doseProducts.ts";
 
 export interface DoseTextFieldProps {
@@ -37,7 +38,7 @@ export function DoseTextField(props: DoseTextFieldProps) {
           lane: lane === "given" ? "given" : "option",
           products,
           defaultProduct: product,
-          newId: () => crypto.randomUUID(),
+          newId: partId,
         });
   const problem = read.ok ? undefined : read.issues[0];
   const isPlain = text.trim() === plainText;
@@ -81,8 +82,8 @@ export function DoseTextField(props: DoseTextFieldProps) {
         <div className="dose-text-reading">
           <p className="dose-text-reading-head">{read.ok ? doseWords.read : doseWords.notYet}</p>
           {read.ok ? (
-            read.value.map((line) => (
-              <p key={line.id}>
+            read.value.map((line, index) => (
+              <p key={index}>
                 {doseLineSentence(line, { zone: value.timeZone, products: doseProductsInFull(value.medicine) })}.
               </p>
             ))

@@ -1,6 +1,7 @@
 import { levelWords } from "../../core/messages/index.ts";
+import { partId } from "../ui/partId.ts";
 import { useWorkbench } from "../useWorkbench.ts";
-import { LevelAddForm } from "./LevelAddForm.tsx";
+import { LevelForm } from "./LevelForm.tsx";
 import { LevelTable } from "./LevelTable.tsx";
 import { PanelDone } from "./PanelDone.tsx";
 import "./entryPanel.css";
@@ -25,6 +26,7 @@ export function LevelEntry({ onDone }: LevelEntryProps) {
           results={result?.levels ?? []}
           isReadOnly={isReadOnly}
           onExclude={(id, reason) => edit("levelExclude", { id, reason })}
+          onChange={(level) => edit("levelChange", { level })}
           onRemove={(id) => edit("levelRemove", { id })}
         />
         {open.value.levels.length > 0 ? <p className="entry-panel-soft">{levelWords.predictedBy}</p> : null}
@@ -33,9 +35,10 @@ export function LevelEntry({ onDone }: LevelEntryProps) {
       {isReadOnly ? null : (
         <section aria-labelledby="level-entry-add">
           <h3 id="level-entry-add">{levelWords.add}</h3>
-          <LevelAddForm
+          <LevelForm
             value={open.value}
-            onAdd={(level) => edit("levelAdd", { level: { ...level, id: crypto.randomUUID() } })}
+            word={levelWords.add}
+            onLevel={(level) => edit("levelAdd", { level: { ...level, id: partId() } })}
           />
         </section>
       )}

@@ -8,18 +8,21 @@ import { numberPrint, quantityConvert, quantityPrint } from "../../core/units/in
 import { Button } from "../ui/Button.tsx";
 import { DataTable } from "../ui/DataTable.tsx";
 import { TextField } from "../ui/TextField.tsx";
+import { LevelForm } from "./LevelForm.tsx";
 
 export interface LevelTableProps {
   readonly value: Case;
   readonly results: readonly LevelResult[];
   readonly isReadOnly: boolean;
+  readonly onChange: (level: Level) => void;
   readonly onExclude: (id: string, reason: string | null) => void;
   readonly onRemove: (id: string) => void;
 }
 
 /** Every level with what was predicted at that time; one left out stays, with its reason. */
-export function LevelTable({ value, results, isReadOnly, onExclude, onRemove }: LevelTableProps) {
-  const [leaving, setLeaving] = useState<string | null>(null);
+export function LevelTable({ value, results, isReadOnly, onChange, onExclude, onRemove }: LevelTableProps) {
+  const [opened, setOpened] = useState<{ readonly id: string; readonly form: "change" | "reason" } | null>(null);
+  const openedLevel = value.levels.find((level) => level.id === opened?.id);
   const resultOf = (level: Level) => results.find((one) => one.id === level.id);
   /** A concentration in mg/L as the level's own unit has it, to as many decimals as `beside` needs for three digits. */
   const inUnitOf = (level: Level, mgPerL: number, beside: number) => {
@@ -90,10 +93,17 @@ export function LevelTable({ value, results, isReadOnly, onExclude, onRemove }: 
             cell: (level) =>
               isReadOnly ? null : (
                 <span className="level-entry-actions">
+                  <Button
+                    kind="quiet"
+                    onPress={() => setOpened({ id: level.id, form: "change" })}
+                    name={`${levelWords.change} ${nameOf(level)}`}
+                  >
+                    {levelWords.change}
+                  </Button>
                   {level.excluded === undefined ? (
                     <Button
                       kind="quiet"
-                      onPress={() => setLeaving(level.id)}
+                      onPress={() => setOpened({ id: level.id, form: "reason" })}
                       name={`${levelWords.leaveOut} ${nameOf(level)}`}
                     >
                       {levelWords.leaveOut}
@@ -119,13 +129,29 @@ export function LevelTable({ value, results, isReadOnly, onExclude, onRemove }: 
           },
         ]}
       />
-      {leaving !== null && value.levels.some((level) => level.id === leaving) ? (
+      {openedLevel && opened?.form === "change" && !isReadOnly ? (
+        <div className="entry-panel-inset">
+          <LevelForm
+            key={openedLevel.id}
+            value={value}
+            level={openedLevel}
+            word={levelWords.save}
+            onCancel={() => setOpened(null)}
+            onLevel={(changed) => {
+              const { id, excluded } = openedLevel;
+              onChange({ ...changed, id, ...(excluded === undefined ? {} : { excluded }) });
+              setOpened(null);
+            }}
+          />
+        </div>
+      ) : null}
+      {openedLevel && opened?.form === "reason" && !isReadOnly ? (
         <ReasonForm
-          key={leaving}
-          onCancel={() => setLeaving(null)}
+          key={openedLevel.id}
+          onCancel={() => setOpened(null)}
           onSave={(reason) => {
-            onExclude(leaving, reason);
-            setLeaving(null);
+            onExclude(openedLevel.id, reason);
+            setOpened(null);
           }}
         />
       ) : null}

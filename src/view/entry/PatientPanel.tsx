@@ -1,6 +1,7 @@
 import type { Observation } from "../../core/case/index.ts";
 import { patientWords } from "../../core/messages/index.ts";
 import { quantityConvert } from "../../core/units/index.ts";
+import { partId } from "../ui/partId.ts";
 import { QuantityField } from "../ui/QuantityField.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
@@ -75,7 +76,7 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
         unit={weights.at(-1)?.quantity.unit ?? "kg"}
         look={(typed) => weightLook(typed, known)}
         onAdd={(at, quantity, isConfirmed) =>
-          add({ id: crypto.randomUUID(), at, kind: "weight", quantity, ...(isConfirmed ? { confirmed: true } : {}) })
+          add({ id: partId(), at, kind: "weight", quantity, ...(isConfirmed ? { confirmed: true } : {}) })
         }
       />
       <ObservationEntry
@@ -92,7 +93,7 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
         look={creatinineLook}
         onAdd={(at, quantity, isConfirmed) =>
           add({
-            id: crypto.randomUUID(),
+            id: partId(),
             at,
             kind: "serumCreatinine",
             quantity,

@@ -5,8 +5,9 @@ import { doseLineExpand } from "../../core/regimen/index.ts";
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
 import { instantMs, instantRead, instantText } from "../../core/time/index.ts";
 import { type Quantity, quantityConvert, quantityPrint } from "../../core/units/index.ts";
+import { instantTyped } from "../ui/InstantInput.tsx";
 import type { QuantityAsk, QuantityLook } from "../ui/QuantityField.tsx";
-import { type QuantityDraft, quantityDraftRead } from "../ui/quantityDraft.ts";
+import { type QuantityDraft, quantityDraft, quantityDraftRead } from "../ui/quantityDraft.ts";
 
 export const LEVEL_UNIT_CHOICES = ["mg/L", "ug/mL", "ug/L", "ng/mL", "umol/L", "nmol/L", "mmol/L"] as const;
 export type LevelUnit = (typeof LEVEL_UNIT_CHOICES)[number];
@@ -16,6 +17,15 @@ export interface LevelDraft {
   readonly quantity: QuantityDraft<LevelUnit>;
   readonly at: string;
   readonly kind: Level["kind"];
+}
+
+/** A level as text that reads back to it. */
+export function levelDraft(level: Level, zone: string): LevelDraft {
+  return {
+    quantity: quantityDraft(level.quantity, level.quantity.unit),
+    at: instantTyped(level.at, zone),
+    kind: level.kind,
+  };
 }
 
 /** The level, or its faults: path "quantity" or "at". A level lies between the first dose given and the now line. */

@@ -7,6 +7,7 @@ import type { WorkbenchState } from "../../shell/store/workbenchState.ts";
 import { Button } from "../ui/Button.tsx";
 import { DataTable } from "../ui/DataTable.tsx";
 import { Notice } from "../ui/Notice.tsx";
+import { partId } from "../ui/partId.ts";
 import { WindowFields } from "../ui/WindowFields.tsx";
 import { EMPTY_WINDOW, type WindowDraft, windowDraftRead } from "../ui/windowDraft.ts";
 import { windowValue } from "./recordRows.ts";
@@ -30,7 +31,7 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
     if (!draft) return;
     const read = windowDraftRead(draft, record.molarMass.value);
     if (!read.ok) return;
-    const outcome = await onSave(record.id, crypto.randomUUID(), read.value);
+    const outcome = await onSave(record.id, partId(), read.value);
     setFaults(outcome.ok ? [] : outcome.issues);
     if (!outcome.ok) return;
     setDraft(null);

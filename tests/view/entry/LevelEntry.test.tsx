@@ -118,6 +118,33 @@ describe("LevelEntry", () => {
     expect(shown.value().levels[0]).not.toHaveProperty("confirmed");
   });
 
+  test("is changed in a form, its reason for being left out kept", async () => {
+    const shown = await show({ levels: [{ ...level, excluded: "line contaminated" }] });
+    await shown.user.click(screen.getByRole("button", { name: new RegExp(`^${levelWords.change}`) }));
+    const form = within(screen.getByRole("form", { name: levelWords.save }));
+    const concentration = form.getByRole("textbox", { name: levelWords.value });
+    expect(concentration).toHaveFocus();
+    expect(concentration).toHaveValue("5.3");
+    await shown.user.clear(concentration);
+    await shown.user.type(concentration, "6.3{Enter}");
+    expect(shown.value().levels).toEqual([
+      { ...level, quantity: { value: 6.3, unit: "mg/L" }, excluded: "line contaminated" },
+    ]);
+    expect(screen.queryByRole("form", { name: levelWords.save })).toBeNull();
+  });
+
+  test("a confirmed odd value is not asked about again when only its time is changed", async () => {
+    const odd = { ...level, quantity: { value: 5200, unit: "mg/L" as const }, confirmed: true as const };
+    const shown = await show({ levels: [odd] });
+    await shown.user.click(screen.getByRole("button", { name: new RegExp(`^${levelWords.change}`) }));
+    const time = within(screen.getByRole("form", { name: levelWords.save })).getByRole("textbox", {
+      name: levelWords.drawnAt,
+    });
+    await shown.user.clear(time);
+    await shown.user.type(time, "3 March 15:00{Enter}");
+    expect(shown.value().levels).toEqual([{ ...odd, at: "2026-03-03T15:00:00+00:00" }]);
+  });
+
   test("is shown with predicted and difference, left out with a reason, taken back, removed", async () => {
     const shown = await show({ levels: [level] });
     const row = () => screen.getAllByRole("row")[1]!;

@@ -7,21 +7,32 @@ import { InstantInput } from "../ui/InstantInput.tsx";
 import type { QuantityAsk } from "../ui/QuantityField.tsx";
 import { QuantityInput } from "../ui/QuantityInput.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
-import { LEVEL_UNIT_CHOICES, type LevelDraft, type LevelUnit, levelDraftRead, levelLook } from "./levelDraft.ts";
+import {
+  LEVEL_UNIT_CHOICES,
+  type LevelDraft,
+  type LevelUnit,
+  levelDraft,
+  levelDraftRead,
+  levelLook,
+} from "./levelDraft.ts";
 
-export interface LevelAddFormProps {
+export interface LevelFormProps {
   readonly value: Case;
-  readonly onAdd: (level: Omit<Level, "id">) => void;
+  /** The level being changed; without one a new level is typed. */
+  readonly level?: Level;
+  readonly word: string;
+  readonly onCancel?: () => void;
+  readonly onLevel: (level: Omit<Level, "id" | "excluded">) => void;
 }
 
 /** A level is typed with the clock time it was drawn: no time is filled in beforehand. */
-export function LevelAddForm({ value, onAdd }: LevelAddFormProps) {
+export function LevelForm({ value, level, word, onLevel, onCancel }: LevelFormProps) {
   const empty: LevelDraft = {
     quantity: { text: "", unit: value.levels.at(-1)?.quantity.unit ?? "mg/L" },
     at: "",
     kind: "measured",
   };
-  const [draft, setDraft] = useState(empty);
+  const [draft, setDraft] = useState(() => (level ? levelDraft(level, value.timeZone) : empty));
   const [isSent, setSent] = useState(false);
   const [asked, setAsked] = useState<QuantityAsk<LevelUnit>>();
 
@@ -37,19 +48,23 @@ export function LevelAddForm({ value, onAdd }: LevelAddFormProps) {
   };
   const add = (quantity: Quantity<LevelUnit>, isConfirmed: boolean) => {
     if (!read.ok) return;
-    onAdd({ ...read.value, quantity, ...(isConfirmed ? { confirmed: true } : {}) });
+    onLevel({ ...read.value, quantity, ...(isConfirmed ? { confirmed: true } : {}) });
     change({ ...empty, quantity: { text: "", unit: quantity.unit } });
   };
   const send = (event: FormEvent) => {
     event.preventDefault();
     setSent(true);
     if (!read.ok) return;
-    const looked = levelLook(read.value.quantity, value.medicine);
+    const { quantity } = read.value;
+    const isAnswered =
+      level?.confirmed === true && level.quantity.value === quantity.value && level.quantity.unit === quantity.unit;
+    if (isAnswered) return add(quantity, true);
+    const looked = levelLook(quantity, value.medicine);
     if (looked.kind === "asked") setAsked(looked.ask);
-    else add(read.value.quantity, false);
+    else add(quantity, false);
   };
   return (
-    <form className="entry-panel-form" onSubmit={send} noValidate>
+    <form className="entry-panel-form" onSubmit={send} noValidate aria-label={word}>
       <div className="level-entry-row">
         <QuantityInput
           label={levelWords.value}
@@ -89,10 +104,15 @@ export function LevelAddForm({ value, onAdd }: LevelAddFormProps) {
         ]}
         onChoose={(kind) => change({ ...draft, kind })}
       />
-      <div>
+      <div className="entry-panel-buttons">
         <Button kind="main" type="submit">
-          {levelWords.add}
+          {word}
         </Button>
+        {onCancel ? (
+          <Button kind="quiet" onPress={onCancel}>
+            {levelWords.cancel}
+          </Button>
+        ) : null}
       </div>
     </form>
   );
