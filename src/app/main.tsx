@@ -2,6 +2,7 @@ import "../shell/workers/zodJitless.ts";
 
 import { StrictMode } from "react";
 import { createRoot } from "react-dom/client";
+import { issue } from "../core/result/index.ts";
 import { registerServiceWorker } from "../shell/offline/registerServiceWorker.ts";
 import type { Workbench as Store } from "../shell/store/createWorkbench.ts";
 import { WorkbenchProvider } from "../view/useWorkbench.ts";
@@ -35,7 +36,10 @@ function start(): void {
     .getState()
     .start()
     .then(() => rememberPlace(store));
-  registerServiceWorker({ onWaiting: (apply) => store.getState().offerUpdate(apply) });
+  registerServiceWorker({
+    onWaiting: (apply) => store.getState().offerUpdate(apply),
+    onFailed: (detail) => store.getState().notify("check", [issue("offline-not-ready", { detail })]),
+  });
 }
 
 start();

@@ -8,7 +8,10 @@ import type { UnitCode } from "../core/units/index.ts";
 export function recompute(text: string): { ok: true; output: unknown } | { ok: false; lines: readonly string[] } {
   const parsed = caseParse(text);
   if (!parsed.ok) {
-    return { ok: false, lines: parsed.issues.map((issue) => `${issue.path.join(".") || "file"}: ${issueMessage(issue)}`) };
+    return {
+      ok: false,
+      lines: parsed.issues.map((issue) => `${issue.path.join(".") || "file"}: ${issueMessage(issue)}`),
+    };
   }
   return { ok: true, output: recomputeOutput(parsed.value, derive(parsed.value)) };
 }
@@ -28,10 +31,12 @@ function recomputeOutput(value: Case, analysis: Analysis) {
     medicine: { id: value.medicine.id, recordVersion: value.medicine.recordVersion },
     span: { from: at(analysis.clock.nowH), to: at(analysis.clock.toH) },
     patient: Object.fromEntries(
-      (["weight", "creatinine", "idealWeight", "adjustedWeight", "bodyMassIndex", "creatinineClearance"] as const).map((name) => {
-        const figure = analysis.patient[name];
-        return [name, figure && { value: figure.value, unit: figure.unit }];
-      }),
+      (["weight", "creatinine", "idealWeight", "adjustedWeight", "bodyMassIndex", "creatinineClearance"] as const).map(
+        (name) => {
+          const figure = analysis.patient[name];
+          return [name, figure && { value: figure.value, unit: figure.unit }];
+        },
+      ),
     ),
     options: Object.fromEntries(
       analysis.options.map((option) => [

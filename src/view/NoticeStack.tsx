@@ -8,7 +8,7 @@ export function NoticeStack() {
   const notices = useWorkbench((state) => state.notices);
   const dismiss = useWorkbench((state) => state.dismiss);
   return (
-    <div className="notice-stack" role="region" aria-label="Notices" aria-live="polite">
+    <section className="notice-stack" aria-label="Notices" aria-live="polite">
       {notices.map((notice) => (
         <Notice key={notice.id} gravity={notice.gravity} onDismiss={() => dismiss(notice.id)}>
           {notice.issues.map((issue, i) => (
@@ -16,6 +16,6 @@ export function NoticeStack() {
           ))}
         </Notice>
       ))}
-    </div>
+    </section>
   );
 }

@@ -30,7 +30,8 @@ export function laneDoses(
   const hours = (ms: number) => (ms - clock.originMs) / HOUR_MS;
   for (const line of lines) {
     const product = productOf(value.medicine, line.product);
-    const untilMs = side === "given" && isEndlessLine(line) ? clock.nowMs : clock.untilMs;
+    // Until further notice on the given lane: up to the now line, not at it; a dose due right now is still to be given.
+    const untilMs = side === "given" && isEndlessLine(line) ? clock.nowMs - 1 : clock.untilMs;
     const expanded = doseLineExpand(line, { zone: value.timeZone, untilMs });
     if (!expanded.ok) {
       issues.push(...expanded.issues.map((issue) => ({ lineId: line.id, issue })));
@@ -43,7 +44,9 @@ export function laneDoses(
         break;
       }
       const outside = side === "given" ? event.atMs > clock.nowMs : event.atMs < clock.nowMs;
-      const status = outside ? (side === "given" ? "after-now" : "before-now") : event.status;
+      // An exception that only changes the amount leaves the dose where it was.
+      const asTaken = event.status === "moved" && event.atMs === event.scheduledMs ? "taken" : event.status;
+      const status = outside ? (side === "given" ? "after-now" : "before-now") : asTaken;
       marks.push({
         lineId: line.id,
         index: event.index,

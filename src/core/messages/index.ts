@@ -8,5 +8,6 @@ export { laneLineWords } from "./laneWords.ts";
 export type { MessageFunction } from "./messageFunction.ts";
 export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./regimenWords.ts";
 export * from "./screenWords.ts";
+export * from "./summaryWords.ts";
 export { windowQuantityWord } from "./windowWords.ts";
 export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";

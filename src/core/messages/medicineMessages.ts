@@ -1,3 +1,4 @@
+import { UNIT_CODES, unitSpoken } from "../units/index.ts";
 import type { MessageFunction } from "./messageFunction.ts";
 
 type Data = Parameters<MessageFunction>[0];
@@ -5,6 +6,12 @@ type Data = Parameters<MessageFunction>[0];
 const said = (value: unknown): string => `"${String(value)}"`;
 
 /** "A, B or C" */
+/** A unit in words where it is one the program knows; what a user typed otherwise stays as typed. */
+function unitWord(unit: unknown): string {
+  const known = UNIT_CODES.find((code) => code === unit);
+  return known ? unitSpoken(known, "screen") : String(unit);
+}
+
 function either(list: unknown): string {
   const words = (Array.isArray(list) ? list : [list]).map(String);
   const last = words.at(-1) ?? "";
@@ -130,7 +137,7 @@ export const medicineMessages: Readonly<Record<string, MessageFunction>> = {
   "dose-amount": ({ found, unit }) =>
     `A dose of ${String(found)} ${String(unit)} can't be given: write an amount above 0.`,
   "dose-unit-mismatch": ({ unit, product, allowed }) =>
-    `The ${String(product)} is not given in ${String(unit)}: write ${either(allowed)}.`,
+    `The ${String(product)} is not measured in ${unitWord(unit)}: write ${either((allowed as readonly unknown[]).map(unitWord))}.`,
 };
 
 const COVARIATE_WORDS: Readonly<Record<string, string>> = {

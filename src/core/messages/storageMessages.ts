@@ -24,6 +24,9 @@ export const storageMessages: Readonly<Record<string, MessageFunction>> = {
   "storage-copies-unread": (data) =>
     `The second copies of your cases could not be read${technical(data)}; reload the page before you go on, they may be readable then.`,
 
+  "offline-not-ready": (data) =>
+    `Ebbline could not be stored for use without the network${technical(data)}; it works while this address answers, and the cases are kept all the same.`,
+
   // saving
   "save-quota": () =>
     "The browser's storage is full: your changes are kept only while this page is open, so export the case now, then remove cases you no longer need.",

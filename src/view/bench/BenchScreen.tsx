@@ -16,11 +16,12 @@ import { CaseStrip } from "./CaseStrip.tsx";
 import { ClockHead } from "./ClockHead.tsx";
 import { ConcernList } from "./ConcernList.tsx";
 import { DoseLane } from "./DoseLane.tsx";
+import { FirstSteps } from "./FirstSteps.tsx";
 import { LaneLines, OptionHead } from "./OptionHead.tsx";
 import { ProfileRow } from "./ProfileRow.tsx";
 import { ReadingsTable } from "./ReadingsTable.tsx";
-import type { ShownUnit } from "./shownUnit.ts";
 import { SavingBar } from "./SavingBar.tsx";
+import type { ShownUnit } from "./shownUnit.ts";
 import { useBenchKeys } from "./useBenchKeys.ts";
 import { useElementWidth } from "./useElementWidth.ts";
 
@@ -252,15 +253,17 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
               {benchWords.analysisStates.failed}: {open.analysis.failure}
             </p>
           )}
-          {value.options.length === 0 && <p className="bench-hint">{benchWords.noOptions}</p>}
-          {analysis && value.options.length > 0 && value.options.length === analysis.options.length && (
-            <ReadingsTable
-              value={value}
-              analysis={analysis}
-              unit={unit}
-              onWorking={(row, option) => setPanel({ kind: "working", row, option })}
-            />
-          )}
+          {!isReader && <FirstSteps value={value} analysis={analysis} onPanel={setPanel} onAddOption={addOption} />}
+          {analysis &&
+            value.options.some((option) => option.lines.length > 0) &&
+            value.options.length === analysis.options.length && (
+              <ReadingsTable
+                value={value}
+                analysis={analysis}
+                unit={unit}
+                onWorking={(row, option) => setPanel({ kind: "working", row, option })}
+              />
+            )}
           {analysis && <ConcernList concerns={analysis.concerns} />}
           <p className="bench-intended">{benchWords.intended}</p>
         </aside>

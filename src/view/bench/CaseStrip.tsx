@@ -55,10 +55,18 @@ export function CaseStrip({ open, analysis, onPanel, onPrint }: CaseStripProps) 
         </span>
       </StripCell>
       <StripCell name="weight" onPress={() => onPanel("patient")}>
-        {weight ? <span className="strip-nowrap">{numberPrint(weight.value, { significant: 4 })} kg</span> : <Missing />}
+        {weight ? (
+          <span className="strip-nowrap">{numberPrint(weight.value, { significant: 4 })} kg</span>
+        ) : (
+          <Missing />
+        )}
       </StripCell>
       <StripCell name="kidney function" onPress={() => onPanel("patient")}>
-        {kidney ? <span className="strip-nowrap">{numberPrint(kidney.value, { significant: 3 })} mL/min</span> : <Missing />}
+        {kidney ? (
+          <span className="strip-nowrap">{numberPrint(kidney.value, { significant: 3 })} mL/min</span>
+        ) : (
+          <Missing />
+        )}
       </StripCell>
       <StripCell name="medicine" onPress={() => onPanel("medicine")}>
         <span>{value.medicine.name}</span>

@@ -47,6 +47,10 @@ export function reading(page: Page, row: string, option = 0): Locator {
 /** Opens a stored case from the list. */
 export async function openStored(page: Page, label: string): Promise<void> {
   await page.goto("/");
-  await page.getByRole("table").getByRole("button", { name: `Open ${label}` }).first().click();
+  await page
+    .getByRole("table")
+    .getByRole("button", { name: `Open ${label}` })
+    .first()
+    .click();
   await expect(page.locator("[data-reading=peak]")).toBeVisible();
 }

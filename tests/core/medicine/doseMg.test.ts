@@ -36,7 +36,7 @@ describe("doseMg", () => {
     const mg = doseMg({ value: 5, unit: "mL" }, tablet);
     expect(mg).toMatchObject({ ok: false, issues: [{ code: "dose-unit-mismatch", path: ["unit"] }] });
     expect(mg.ok ? "" : issueMessage(mg.issues[0]!)).toBe(
-      "The 12-hour modified-release tablet is not given in mL: write mg, g or ug.",
+      "The 12-hour modified-release tablet is not measured in mL: write mg, g or microgram.",
     );
     expect(productDoseUnits(tablet)).not.toContain("mL");
     expect(productDoseUnits(solution)).toContain("mL");

@@ -39,17 +39,17 @@ export const REFUSED_AMOUNTS: readonly RefusedCase[] = [
   [
     "5 mL every 12 h from 08:00",
     "dose-unit-mismatch",
-    "The 12-hour modified-release tablet is not given in mL: write mg, g or ug.",
+    "The 12-hour modified-release tablet is not measured in mL: write mg, g or microgram.",
   ],
   [
     "2 capsules of 200 mg once",
     "dose-unit-mismatch",
-    "The 12-hour modified-release tablet is not given in capsule: write mg, g or ug.",
+    "The 12-hour modified-release tablet is not measured in capsule: write mg, g or microgram.",
   ],
   [
     "2 tablets of oral solution once",
     "dose-unit-mismatch",
-    "The oral solution is not given in tablet: write mg, g, ug or mL.",
+    "The oral solution is not measured in tablet: write mg, g, microgram or mL.",
   ],
   [
     "2 tablets once",
