@@ -61,7 +61,10 @@ export class ExposureTally {
     const hours = [this.#below.value, this.#within.value, this.#above.value] as [number, number, number];
     // Rounding of the parts goes into the longest, where it is least. Twice: the first correction is itself rounded.
     const longest = hours.indexOf(Math.max(...hours));
-    for (let i = 0; i < 2; i++) hours[longest]! += total - (hours[0] + hours[1] + hours[2]);
+    for (let i = 0; i < 2; i++) {
+      const missing = total - (hours[0] + hours[1] + hours[2]);
+      if (Number.isFinite(missing)) hours[longest]! += missing;
+    }
     return { hoursBelow: hours[0], hoursWithin: hours[1], hoursAbove: hours[2] };
   }
 }

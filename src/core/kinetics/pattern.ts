@@ -70,7 +70,9 @@ export function patternAtSteadyState(disposition: Disposition, courses: readonly
   state.set(0, gut);
   state.advance(period);
   const body = (fromOnePeriod + state.body) / -Math.expm1(-disposition.ke * period);
-  if (!(body < Infinity && gut.every(Number.isFinite))) {
+  // What the sweep may meet at most: all that is there and all that is given.
+  const most = [...gut, ...events.amount].reduce((sum, amount) => sum + amount, body);
+  if (!(most < Infinity)) {
     argumentRefuse("the steady state of courses", Infinity, "mg", "doses small enough for a finite amount");
   }
   return { events, body, gut };

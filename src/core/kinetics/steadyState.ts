@@ -86,9 +86,11 @@ export function steadyState(kinetics: OralKinetics, amount: number, interval: nu
   const amplitude = isSlow ? ka * steadyAmplitude(slow, fast, interval, top) : peakPart - troughPart;
   const dosed = bioavailability * amount;
   const first = interval - lag;
+  // From the start of absorption to the next administration; `%` is exact.
+  const toNext = interval - (lag % interval);
   return {
     peak: (dosed * peakPart) / volume,
-    timeOfPeak: (lag + top) % interval,
+    timeOfPeak: top < toNext ? interval - toNext + top : top - toNext,
     trough: (dosed * troughPart) / volume,
     average: dosed / ke / volume / interval,
     auc: dosed / ke / volume,
