@@ -31,8 +31,6 @@ export const SUMMARY_COLUMNS = {
   value: "value",
   formula: "formula, and what went in",
   source: "source and basis",
-  element: "element",
-  content: "this case",
 } as const;
 
 export const SUMMARY_BUTTONS = {
@@ -96,12 +94,6 @@ export const summaryChartWords = {
 /** What is printed across the sheet. */
 export const summaryBannerWords = {
   notForUse: (reason: string) => ({ title: "Not for use", text: reason }),
-  noOption: { title: "No option chosen", text: "There is no order on this sheet." },
-  severalOptions: (names: string) => ({
-    title: "More than one option chosen",
-    text: `${names}. There is no order on this sheet.`,
-  }),
-  emptyOption: (name: string) => ({ title: "Nothing to order", text: `${name} has no dose line.` }),
   nothingLeft: (text: string) => ({ title: "A line with no dose to come", text }),
   notMakeable: (text: string) => ({ title: "Cannot be given as written", text }),
   unchecked: {
@@ -186,7 +178,6 @@ export const summaryReadingWords = {
   accumulation: "Accumulation",
   times: (figure: string) => `${figure} times`,
   steady90: "90 % of steady state from",
-  swing: "Highest over lowest",
   noRepeat: "The option does not repeat, so it has no steady state.",
   noCommonPeriod: "The lines have no common period within two weeks, so no steady state is given.",
   chanceLeftOut: "One prediction: no range and no chance of staying in the window is given.",

@@ -1,8 +1,4 @@
-import {
-  SUMMARY_COLUMNS as columns,
-  summaryHeadWords,
-  SUMMARY_TITLES as titles,
-} from "../../core/messages/summaryWords.ts";
+import { SUMMARY_COLUMNS as columns, summaryHeadWords, SUMMARY_TITLES as titles } from "../../core/messages/index.ts";
 import { GravityMark } from "../ui/GravityMark.tsx";
 import { SummaryBlock } from "./SummaryBlock.tsx";
 import { SummaryPaper } from "./SummaryPaper.tsx";

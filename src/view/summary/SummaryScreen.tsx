@@ -1,8 +1,7 @@
 import { useEffect, useLayoutEffect, useMemo, useState } from "react";
 import { flushSync } from "react-dom";
 import { version } from "../../../package.json";
-import { issueMessage } from "../../core/messages/index.ts";
-import { SUMMARY_BUTTONS as words } from "../../core/messages/summaryWords.ts";
+import { issueMessage, SUMMARY_BUTTONS as words } from "../../core/messages/index.ts";
 import { ProfileChart } from "../chart/ProfileChart.tsx";
 import { Button } from "../ui/Button.tsx";
 import { Notice } from "../ui/Notice.tsx";
@@ -24,21 +23,23 @@ export function SummaryScreen() {
   const refusal = input && printRefusal(input);
   return (
     <div className="summary-desk">
-      <div className="summary-bar">
+      <header className="summary-bar">
         <Button onPress={() => show("bench")}>{words.back}</Button>
         <p>{words.screen}</p>
         <Button kind="main" isDisabled={!input || refusal !== null} onPress={() => window.print()}>
           {words.print}
         </Button>
-      </div>
-      {refusal && (
-        <div className="summary-refusal">
-          <Notice gravity="stop" title={words.refused} isAnnounced>
-            <p>{issueMessage(refusal)}</p>
-          </Notice>
-        </div>
-      )}
-      {input ? <Preview input={input} /> : <p className="summary-empty">{open ? words.working : words.noCase}</p>}
+      </header>
+      <main>
+        {refusal && (
+          <div className="summary-refusal">
+            <Notice gravity="stop" title={words.refused} isAnnounced>
+              <p>{issueMessage(refusal)}</p>
+            </Notice>
+          </div>
+        )}
+        {input ? <Preview input={input} /> : <p className="summary-empty">{open ? words.working : words.noCase}</p>}
+      </main>
     </div>
   );
 }

@@ -1,15 +1,12 @@
 import type { ReactNode } from "react";
-import {
-  SUMMARY_COLUMNS as columns,
-  summaryHeadWords,
-  SUMMARY_TITLES as titles,
-} from "../../core/messages/summaryWords.ts";
+import { SUMMARY_COLUMNS as columns, summaryHeadWords, SUMMARY_TITLES as titles } from "../../core/messages/index.ts";
 import { GravityMark } from "../ui/GravityMark.tsx";
 import { SummaryBlock } from "./SummaryBlock.tsx";
 import { SummaryDetailsSheet } from "./SummaryDetailsSheet.tsx";
 import { SummaryPaper } from "./SummaryPaper.tsx";
 import { SummaryRows } from "./SummaryRows.tsx";
 import type { SummaryModel } from "./summaryModel.ts";
+import "./paper.css";
 import "./print.css";
 
 interface SummarySheetProps {

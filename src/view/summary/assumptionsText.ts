@@ -6,7 +6,7 @@ import {
   summaryBannerWords,
   summaryDetailWords,
   summaryAssumptionWords as words,
-} from "../../core/messages/summaryWords.ts";
+} from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { shownModel } from "./kineticsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";

@@ -6,7 +6,7 @@ import {
   summaryChartWords,
   WATERMARK,
   summaryHeadWords as words,
-} from "../../core/messages/summaryWords.ts";
+} from "../../core/messages/index.ts";
 import { assumptionsText } from "./assumptionsText.ts";
 import { type Citations, citations, isUnverified } from "./citations.ts";
 import { dosesText } from "./dosesText.ts";

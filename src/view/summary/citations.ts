@@ -1,6 +1,6 @@
 import type { Traced } from "../../core/analysis/index.ts";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
-import { summaryDetailWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryDetailWords as words } from "../../core/messages/index.ts";
 
 type Statement = MedicineRecord["cautions"][number] | MedicineRecord["sampling"][number];
 

@@ -1,6 +1,6 @@
 import type { DoseMark } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
-import { summaryDetailWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryDetailWords as words } from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { scheduleBrief } from "./orderSchedule.ts";
 import type { SummaryInput } from "./summaryInput.ts";

@@ -1,5 +1,5 @@
 import type { DoseMark, OptionReadings } from "../../core/analysis/index.ts";
-import { SUMMARY_TITLES as titles, summaryReadingWords as words } from "../../core/messages/summaryWords.ts";
+import { SUMMARY_TITLES as titles, summaryReadingWords as words } from "../../core/messages/index.ts";
 import { shownReadings } from "./shownReadings.ts";
 import { steadyFromMs } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";

@@ -1,6 +1,6 @@
 import type { Traced } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
-import { summaryReadingWords as readingWords, summaryDetailWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryReadingWords as readingWords, summaryDetailWords as words } from "../../core/messages/index.ts";
 import type { Citations } from "./citations.ts";
 import { shownModel } from "./kineticsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";

@@ -1,6 +1,6 @@
 import type { Model } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
-import { SUMMARY_TITLES as titles, summaryReadingWords as words } from "../../core/messages/summaryWords.ts";
+import { SUMMARY_TITLES as titles, summaryReadingWords as words } from "../../core/messages/index.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryModel } from "./summaryModel.ts";
 import { chosenOption } from "./summaryOrder.ts";

@@ -1,5 +1,5 @@
 import type { LevelResult } from "../../core/analysis/index.ts";
-import { SUMMARY_TITLES as titles, summaryLevelWords as words } from "../../core/messages/summaryWords.ts";
+import { SUMMARY_TITLES as titles, summaryLevelWords as words } from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
 import { shownModel } from "./kineticsText.ts";

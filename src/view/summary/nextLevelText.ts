@@ -2,7 +2,7 @@ import {
   summaryReadingWords,
   SUMMARY_TITLES as titles,
   summaryNextLevelWords as words,
-} from "../../core/messages/summaryWords.ts";
+} from "../../core/messages/index.ts";
 import { type DoseLine, doseLineExpand } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR } from "../../core/time/index.ts";
 import { shownReadings } from "./shownReadings.ts";

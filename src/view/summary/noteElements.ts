@@ -3,9 +3,9 @@ import {
   listWords,
   NOT_RECORDED,
   summaryDetailWords,
+  windowQuantityWord,
   summaryElementWords as words,
-} from "../../core/messages/summaryWords.ts";
-import { windowQuantityWord } from "../../core/messages/windowWords.ts";
+} from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { kidneyWords } from "./assumptionsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";

@@ -1,5 +1,5 @@
 import { doseMg, type MedicineRecord, type Product } from "../../core/medicine/index.ts";
-import { listWords, summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import { listWords, summaryOrderWords as words } from "../../core/messages/index.ts";
 import { type DoseAmount, tabletsFor } from "../../core/regimen/index.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 

@@ -1,7 +1,7 @@
 import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
-import { summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryOrderWords as words } from "../../core/messages/index.ts";
 import type { DoseLine } from "../../core/regimen/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { orderAmount } from "./orderAmount.ts";

@@ -1,4 +1,4 @@
-import { summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryOrderWords as words } from "../../core/messages/index.ts";
 import type { DoseLine } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR, wallClock } from "../../core/time/index.ts";
 import { numberPrint } from "../../core/units/index.ts";

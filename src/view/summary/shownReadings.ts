@@ -1,5 +1,5 @@
 import type { OptionReadings, OptionResult } from "../../core/analysis/index.ts";
-import { summaryReadingWords as words } from "../../core/messages/summaryWords.ts";
+import { summaryReadingWords as words } from "../../core/messages/index.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import { chosenOption } from "./summaryOrder.ts";
 

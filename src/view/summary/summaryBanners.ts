@@ -1,7 +1,5 @@
 import type { Concern } from "../../core/analysis/index.ts";
-import { concernMessage, GRAVITY_WORDS } from "../../core/messages/concernMessages.ts";
-import { issueMessage } from "../../core/messages/index.ts";
-import { summaryBannerWords as words } from "../../core/messages/summaryWords.ts";
+import { concernMessage, GRAVITY_WORDS, issueMessage, summaryBannerWords as words } from "../../core/messages/index.ts";
 import type { Issue } from "../../core/result/index.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryBanner, SummaryConcern } from "./summaryModel.ts";

@@ -1,6 +1,6 @@
 import type { Case, Option } from "../../core/case/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
-import { listWords, summaryOrderWords as words } from "../../core/messages/summaryWords.ts";
+import { listWords, summaryOrderWords as words } from "../../core/messages/index.ts";
 import { type DoseLine, doseLineEndMs } from "../../core/regimen/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { type OrderLine, orderLine } from "./orderLine.ts";

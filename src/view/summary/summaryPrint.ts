@@ -1,4 +1,4 @@
-import { summaryReadingWords } from "../../core/messages/summaryWords.ts";
+import { summaryReadingWords } from "../../core/messages/index.ts";
 import { type InstantForm, instantText, MS_PER_HOUR } from "../../core/time/index.ts";
 import { type NumberPrintOptions, numberPrint, quantityPrint, type UnitCode } from "../../core/units/index.ts";
 import type { SummaryInput } from "./summaryInput.ts";
