@@ -18,7 +18,7 @@ import { timeOfPeakAfterLag } from "./timeOfPeak.ts";
  * Accuracy: 1e-12 h or 4 units in the last place of the time, whichever is larger, as far as the curve's slope allows: close
  * to the peak an error of 1e-16 in C moves the crossing by about its square root (tests/core/kinetics/gridSingleDose.test.ts).
  * Source: standard result, derived here.
- * @example crossingsAfterDose({ ka: 1, ke: 0.15, volume: 30, bioavailability: 0.9, lag: 0 }, 600, 10) // [0.836…, 4.84…]
+ * @example crossingsAfterDose({ ka: 1, ke: 0.15, volume: 30, bioavailability: 0.9, lag: 0 }, 600, 10) // [0.9186668437332116, 4.897466849465542]
  */
 export function crossingsAfterDose(kinetics: OralKinetics, amount: number, level: number): number[] {
   oralKineticsCheck(kinetics);

@@ -40,7 +40,7 @@ export interface PatternSteadyState {
  * Accuracy: 5e-15 of the peak for levels (tests/core/kinetics/patternSteadyState.test.ts).
  * Source: standard result, derived in docs/methods/one-compartment-oral.md.
  * @example patternSteadyState({ ke: 0.1, volume: 30 }, [{ ka: 1, bioavailability: 1, lag: 0,
- *   doses: [{ time: 8, amount: 200 }, { time: 22, amount: 300 }] }], 24).average // 6.944…
+ *   doses: [{ time: 8, amount: 200 }, { time: 22, amount: 300 }] }], 24).average // 6.944444444444445
  */
 export function patternSteadyState(
   disposition: Disposition,

@@ -13,7 +13,7 @@ import { decayIntegral } from "./decayIntegral.ts";
  * Outside: not checked; 0 where the result is below the smallest double.
  * Accuracy: relative 1e-15, equal and near-equal rates included (tests/core/numerics/decayDifference.test.ts).
  * Source: standard result, derived here.
- * @example decayDifference(0.2, 1, 3) // 0.6237807097...
+ * @example decayDifference(0.2, 1, 3) // 0.6237807096577031
  */
 export function decayDifference(a: number, b: number, time: number): number {
   const slow = Math.min(a, b);

@@ -3,6 +3,7 @@ export { decay } from "./decay.ts";
 export { decayChain } from "./decayChain.ts";
 export { decayDifference } from "./decayDifference.ts";
 export { decayIntegral } from "./decayIntegral.ts";
+export { type Derivative, DormandPrince } from "./dormandPrince.ts";
 export { expm1Excess } from "./expm1Excess.ts";
 export { passedTwoSteps } from "./passedTwoSteps.ts";
 export { productError } from "./productError.ts";

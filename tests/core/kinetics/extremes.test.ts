@@ -88,10 +88,10 @@ it("nothing is ever not a number, at any magnitude: a result or a RangeError", {
         }
       }
     }),
-    { seed: 1022, numRuns: 1500 },
+    { seed: 1022, numRuns: 600 },
   );
   // The test would pass if everything were refused: most is answered. Steady state needs rate × interval within 1e±150.
-  for (const [name, count] of answered) expect(count, name).toBeGreaterThan(400);
+  for (const [name, count] of answered) expect(count, name).toBeGreaterThan(150);
   expect(answered.size).toBe(17);
 });
 
