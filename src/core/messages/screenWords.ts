@@ -1,7 +1,5 @@
 /** Fixed words of the screens: cases, medicines, settings. The same word stands for the same thing everywhere (docs/glossary.md). */
 
-import { windowQuantityWord } from "./windowWords.ts";
-
 export const placeWords = {
   cases: "Cases",
   bench: "Bench",
@@ -114,25 +112,38 @@ export const medicinesWords = {
   value: "value",
   source: "source",
   basis: "basis",
-  clearance: "clearance",
-  volume: "volume",
-  molarMass: "molar mass",
   variability: "Variability between patients, and of the assay",
-  residualProportional: "residual, in proportion",
-  residualAdditive: "residual, added",
-  absorptionRate: "absorption rate constant",
-  lag: "lag before absorption",
-  bioavailability: "bioavailability",
   strength: "strength",
-  concentration: "concentration",
   products: "Products",
+  /** Names of a record's figures, by the name of the field. */
+  figures: {
+    clearance: "clearance",
+    volume: "volume",
+    exchange: "exchange between the compartments",
+    peripheralVolume: "volume of the second compartment",
+    maximumRate: "highest rate of elimination",
+    halfMaximum: "concentration at half the highest rate",
+    molarMass: "molar mass",
+    toxicFrom: "toxic from",
+    residualProportional: "residual, in proportion",
+    residualAdditive: "residual, added",
+    concentration: "concentration",
+    absorptionRate: "absorption rate constant",
+    lag: "lag before absorption",
+    bioavailability: "bioavailability",
+    saltFactor: "active part of the labelled amount",
+    duration: "duration of the input",
+    fastFraction: "fraction absorbed fast",
+    slowRate: "absorption rate constant, slow part",
+    slowDuration: "duration of the slow part",
+    slowLag: "lag of the slow part",
+  } as Readonly<Record<string, string>>,
   release: { immediate: "immediate release", modified: "modified release" },
   divisible: { whole: "not to be divided", half: "may be halved", unknown: "whether it may be divided is not known" },
   swallowWhole: "swallow whole",
   windows: "Target windows",
   window: "window",
   windowsNone: "The record states no target window; one of your own can be entered on the bench.",
-  toxicFrom: "toxic from",
   wardWindows: "The ward's own windows",
   wardWindowsNone: "No window of the ward's own is stored for this medicine.",
   wardWindowAdd: "Add a window",
@@ -161,14 +172,6 @@ export const medicinesWords = {
     "common practice": "common practice",
     invented: "invented",
   },
-} as const;
-
-export const windowQuantityWords = {
-  trough: windowQuantityWord("trough"),
-  peak: windowQuantityWord("peak"),
-  average: windowQuantityWord("average"),
-  auc24: windowQuantityWord("auc24"),
-  "lowest-and-highest": windowQuantityWord("lowest-and-highest"),
 } as const;
 
 export const settingsWords = {

@@ -1,6 +1,6 @@
 import type { Basis, Figure, MedicineRecord, Product, RecordWindow } from "../../core/medicine/index.ts";
 import { medicinesWords, windowQuantityWord } from "../../core/messages/index.ts";
-import { numberPrint, quantityPrint, type UnitCode } from "../../core/units/index.ts";
+import { numberPrint, quantityPrint, type UnitCode, unitSpoken } from "../../core/units/index.ts";
 
 /** A line of a record's tables: what it is, its value in words, and how it is known. */
 export interface RecordRow {
@@ -20,41 +20,49 @@ function figureRow(id: string, name: string, figure: Figure): RecordRow {
   return { id, name, value: shown(value, unit), source, basis, note };
 }
 
-export function kineticsRows(record: MedicineRecord): readonly RecordRow[] {
-  const { clearance, volume } = record.kinetics;
-  const formula = (id: "clearance" | "volume", one: typeof clearance): RecordRow => ({
-    id,
-    name: medicinesWords[id],
-    value: `${one.formula} (${one.unit})`,
-    source: one.source,
-    basis: one.basis,
-    note: one.note,
-  });
-  return [
-    formula("clearance", clearance),
-    formula("volume", volume),
-    figureRow("molarMass", medicinesWords.molarMass, record.molarMass),
-    ...(record.toxicFrom ? [figureRow("toxicFrom", medicinesWords.toxicFrom, record.toxicFrom)] : []),
-  ];
+interface FormulaLike extends Omit<Figure, "value"> {
+  readonly formula: string;
 }
 
-const VARIABILITY = ["clearance", "volume", "absorptionRate", "residualProportional", "residualAdditive"] as const;
+const hasSource = (value: unknown): value is { readonly source: string } =>
+  typeof value === "object" && value !== null && "source" in value;
+const isFigure = (value: unknown): value is Figure => hasSource(value) && "value" in value;
+const isFormula = (value: unknown): value is FormulaLike => hasSource(value) && "formula" in value;
+const nameOf = (key: string): string => medicinesWords.figures[key] ?? key;
+
+/** Every figure among the fields of a part of the record, in the record's own order: a new kind of model needs no change here. */
+function figureRows(part: object): readonly RecordRow[] {
+  return Object.entries(part).flatMap(([key, field]) => (isFigure(field) ? [figureRow(key, nameOf(key), field)] : []));
+}
+
+export function kineticsRows(record: MedicineRecord): readonly RecordRow[] {
+  const formulas = Object.entries(record.kinetics).flatMap(([key, field]): RecordRow[] =>
+    isFormula(field)
+      ? [
+          {
+            id: key,
+            name: nameOf(key),
+            value: `${field.formula} (${unitSpoken(field.unit, "screen")})`,
+            source: field.source,
+            basis: field.basis,
+            note: field.note,
+          },
+        ]
+      : [],
+  );
+  return [...formulas, ...figureRows({ molarMass: record.molarMass, toxicFrom: record.toxicFrom })];
+}
 
 export function variabilityRows(record: MedicineRecord): readonly RecordRow[] {
-  return VARIABILITY.flatMap((name) => {
-    const figure = record.variability[name];
-    return figure ? [figureRow(name, medicinesWords[name], figure)] : [];
-  });
+  return figureRows(record.variability);
 }
 
 export function productRows(product: Product): readonly RecordRow[] {
-  return [
-    ...strengthRows(product),
-    ...(product.concentration ? [figureRow("concentration", medicinesWords.concentration, product.concentration)] : []),
-    figureRow("absorptionRate", medicinesWords.absorptionRate, product.absorptionRate),
-    figureRow("lag", medicinesWords.lag, product.lag),
-    figureRow("bioavailability", medicinesWords.bioavailability, product.bioavailability),
-  ];
+  const { strengths: _, ...fields } = product;
+  const parts = Object.values<unknown>(fields).flatMap((field) =>
+    typeof field === "object" && field !== null && !hasSource(field) ? [field] : [],
+  );
+  return [...strengthRows(product), ...figureRows(fields), ...parts.flatMap((part) => figureRows(part))];
 }
 
 /** Strengths known in the same way stand on one line: "100, 200, 300 mg". */
