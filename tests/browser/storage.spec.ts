@@ -53,6 +53,7 @@ test.describe("a database the browser threw away", () => {
     await after.page.goto("/");
     await expect(after.page.getByText(/second copy, which “Go on” puts back/)).toBeVisible();
     await after.page.getByRole("button", { name: "Go on" }).click();
+    await expect(after.page.getByText(/1 case put back/)).toBeVisible();
     await openStored(after.page, LABEL);
     await expect(dose(after.page)).toHaveAttribute("aria-valuetext", /20:15/);
     await moveDose(after.page);
