@@ -14,6 +14,11 @@ export interface ModelKind<D extends { readonly kind: string }> {
   /** Throws a RangeError naming the figure out of range. */
   check(name: string, disposition: D): void;
   stretch(disposition: D, body: Float64Array, inflow: Inflow): Stretch;
+  /**
+   * The kind as plain differential equations, for the cross-check: writes dx/dt of the compartments in mg/h, given x in mg from index
+   * `at` on and what flows into the first of them. Written from the definition, not from the closed forms.
+   */
+  equations(disposition: D, input: number, x: Float64Array, change: Float64Array, at: number): void;
   /** The most that can be eliminated, mg/h: at this dose rate or above there is no steady state. Infinity where there is no limit. */
   capacity(disposition: D): number;
   /** mg in each compartment at the start of a period at steady state. `doseRate` mg/h, below the capacity. */

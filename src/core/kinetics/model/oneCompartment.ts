@@ -94,6 +94,9 @@ export const oneCompartment = {
   },
   stretch: (disposition, body, inflow) =>
     new OneCompartmentStretch(rateOf(disposition), disposition.volume, body[0]!, inflow),
+  equations: ({ clearance, volume }, input, x, change, at) => {
+    change[at] = input - clearance * (x[at]! / volume);
+  },
   capacity: () => Infinity,
   steadyBody: (disposition, period, _doseRate, run) => steadyBody(disposition, period, run),
   hoursToSteady: (disposition, _doseRate, fraction) => -Math.log1p(-fraction) / rateOf(disposition),

@@ -78,6 +78,10 @@ export const saturable = {
   },
   stretch: (disposition, body, inflow) =>
     new SaturableStretch(saturationOf(disposition), disposition.volume, body[0]!, inflow),
+  equations: ({ vmax, km, volume }, input, x, change, at) => {
+    const level = x[at]! / volume;
+    change[at] = input - (vmax * level) / (km + level);
+  },
   capacity: ({ vmax }) => vmax,
   steadyBody,
   hoursToSteady: (disposition, doseRate, fraction) => {

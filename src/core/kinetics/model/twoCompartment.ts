@@ -80,6 +80,12 @@ export const twoCompartment = {
   check: twoCompartmentCheck,
   stretch: (disposition, body, inflow) =>
     new TwoCompartmentStretch(twoCompartmentConstants(disposition), disposition.volume, body, inflow),
+  equations: ({ clearance, volume, exchange, peripheralVolume }, input, x, change, at) => {
+    const central = x[at]! / volume;
+    const toPeripheral = exchange * (central - x[at + 1]! / peripheralVolume);
+    change[at] = input - clearance * central - toPeripheral;
+    change[at + 1] = toPeripheral;
+  },
   capacity: () => Infinity,
   steadyBody: (disposition, period, _doseRate, run) => steadyBody(disposition, period, run),
   hoursToSteady: (disposition, _doseRate, fraction) =>
