@@ -36,30 +36,38 @@ export function absorptionEventsOf(courses: readonly Course[]): AbsorptionEvents
   };
   const next = new Int32Array(courses.length);
   for (let i = 0; i < count; i++) {
-    let first = -1;
-    let firstAt = 0;
-    let firstRest = 0;
-    for (let c = 0; c < courses.length; c++) {
-      const course = courses[c]!;
-      const dose = course.doses[next[c]!];
-      if (dose === undefined) continue;
-      const at = dose.time + course.lag;
-      const rest = sumError(dose.time, course.lag, at);
-      if (first < 0 || at < firstAt || (at === firstAt && rest < firstRest)) {
-        first = c;
-        firstAt = at;
-        firstRest = rest;
-      }
-    }
-    const course = courses[first]!;
-    events.at[i] = firstAt;
-    events.rest[i] = firstRest;
-    events.course[i] = first;
-    events.amount[i] = course.bioavailability * course.doses[next[first]!]!.amount;
-    next[first] = next[first]! + 1;
+    const c = courses.length === 1 ? 0 : earliest(courses, next);
+    const { bioavailability, lag, doses } = courses[c]!;
+    const dose = doses[next[c]!]!;
+    const at = dose.time + lag;
+    events.at[i] = at;
+    events.rest[i] = sumError(dose.time, lag, at);
+    events.course[i] = c;
+    events.amount[i] = bioavailability * dose.amount;
+    next[c] = next[c]! + 1;
   }
   if (count > 0 && !(events.at[count - 1]! - events.at[0]! < Infinity)) {
     argumentRefuse("the time from the first dose to the last, lag included", Infinity, "h", "a finite number");
   }
   return events;
+}
+
+/** The course whose next dose begins to be absorbed first. */
+function earliest(courses: readonly Course[], next: Int32Array): number {
+  let first = -1;
+  let firstAt = 0;
+  let firstRest = 0;
+  for (let c = 0; c < courses.length; c++) {
+    const { lag, doses } = courses[c]!;
+    const dose = doses[next[c]!];
+    if (dose === undefined) continue;
+    const at = dose.time + lag;
+    const rest = sumError(dose.time, lag, at);
+    if (first < 0 || at < firstAt || (at === firstAt && rest < firstRest)) {
+      first = c;
+      firstAt = at;
+      firstRest = rest;
+    }
+  }
+  return first;
 }

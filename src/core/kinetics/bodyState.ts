@@ -35,6 +35,13 @@ export class BodyState {
   readonly #gap: Float64Array;
   readonly #gutRest: Float64Array;
   #bodyRest = 0;
+  /** The last step taken, h, and what it does (see #stepSet). */
+  #step = Number.NaN;
+  #bodyKept = 1;
+  #bodyLoss = 0;
+  readonly #part: Float64Array;
+  readonly #gutKept: Float64Array;
+  readonly #gutLoss: Float64Array;
 
   constructor(ke: number, ka: ArrayLike<number>) {
     this.ke = ke;
@@ -42,6 +49,9 @@ export class BodyState {
     this.gut = new Float64Array(ka.length);
     this.#gutRest = new Float64Array(ka.length);
     this.#gap = this.ka.map((rate) => rate - ke);
+    this.#part = new Float64Array(ka.length);
+    this.#gutKept = new Float64Array(ka.length);
+    this.#gutLoss = new Float64Array(ka.length);
   }
 
   /** Puts given amounts in place of the present ones. */
@@ -59,29 +69,34 @@ export class BodyState {
   /** Goes on by `u` h, 0 or more. */
   advance(u: number): void {
     if (!(u > 0)) return;
-    const lost = this.ke * u;
-    const left = Math.exp(-lost);
+    // Regular dosing meets the same gap again and again: its exponentials are evaluated once.
+    if (u !== this.#step) this.#stepSet(u);
     let absorbed = 0;
     for (let i = 0; i < this.ka.length; i++) {
       const amount = this.gut[i]!;
-      if (amount === 0) continue;
-      absorbed += amount * absorbedPart(this.ka[i]!, this.#gap[i]!, u, left);
-      const x = this.ka[i]! * u;
       const rest = this.#gutRest[i]!;
-      if (x < CARRY_AS_LOSS_BELOW) {
-        const loss = Math.expm1(-x);
-        this.#gutAdd(i, amount, rest + rest * loss, amount * loss);
-      } else {
-        const factor = Math.exp(-x);
-        this.#gutAdd(i, amount * factor, rest * factor, 0);
-      }
+      const kept = this.#gutKept[i]!;
+      const loss = this.#gutLoss[i]!;
+      absorbed += amount * this.#part[i]!;
+      this.#gutAdd(i, amount * kept, rest * (kept + loss), amount * loss);
     }
-    const body = this.body;
-    if (lost < CARRY_AS_LOSS_BELOW) {
-      const loss = Math.expm1(-lost);
-      this.#bodyAdd(body, this.#bodyRest + this.#bodyRest * loss, body * loss + absorbed);
-    } else {
-      this.#bodyAdd(body * left, this.#bodyRest * left, absorbed);
+    const kept = this.#bodyKept;
+    const loss = this.#bodyLoss;
+    this.#bodyAdd(this.body * kept, this.#bodyRest * (kept + loss), this.body * loss + absorbed);
+  }
+
+  /** What a step of `u` h does: amount → amount·kept + amount·loss, the first product exact over a short step. */
+  #stepSet(u: number): void {
+    this.#step = u;
+    const left = Math.exp(-this.ke * u);
+    const isShort = this.ke * u < CARRY_AS_LOSS_BELOW;
+    this.#bodyKept = isShort ? 1 : left;
+    this.#bodyLoss = isShort ? Math.expm1(-this.ke * u) : 0;
+    for (let i = 0; i < this.ka.length; i++) {
+      const x = this.ka[i]! * u;
+      this.#part[i] = absorbedPart(this.ka[i]!, this.#gap[i]!, u, left);
+      this.#gutKept[i] = x < CARRY_AS_LOSS_BELOW ? 1 : Math.exp(-x);
+      this.#gutLoss[i] = x < CARRY_AS_LOSS_BELOW ? Math.expm1(-x) : 0;
     }
   }
 

@@ -27,6 +27,7 @@ export { modelProfile } from "./model/modelProfile.ts";
 export { modelSteadyProfile } from "./model/modelSteadyProfile.ts";
 export { type ModelSteadyState, modelSteadyState } from "./model/modelSteadyState.ts";
 export { modelTimeToSteadyState } from "./model/modelTimeToSteadyState.ts";
+export { modelUnitResponse } from "./model/modelUnitResponse.ts";
 export { type TwoCompartmentConstants, twoCompartmentConstants } from "./model/twoCompartmentConstants.ts";
 export type { Dose, OralKinetics } from "./oralKinetics.ts";
 export { patternProfile } from "./patternProfile.ts";
