@@ -13,7 +13,7 @@ export function recompute(text: string): { ok: true; output: unknown } | { ok: f
       lines: parsed.issues.map((issue) => `${issue.path.join(".") || "file"}: ${issueMessage(issue)}`),
     };
   }
-  return { ok: true, output: recomputeOutput(parsed.value, derive(parsed.value)) };
+  return { ok: true, output: recomputeOutput(parsed.value, derive(parsed.value, { isCrossChecked: true })) };
 }
 
 const HOUR_MS = 3_600_000;
@@ -29,6 +29,13 @@ function recomputeOutput(value: Case, analysis: Analysis) {
     engine: analysis.engine,
     fingerprint: analysis.fingerprint,
     medicine: { id: value.medicine.id, recordVersion: value.medicine.recordVersion },
+    kinetics: analysis.typical && {
+      kind: analysis.typical.kind,
+      parameters: Object.fromEntries(
+        analysis.typical.parameters.map(({ symbol, figure }) => [symbol, quantity(figure.value, figure.unit)]),
+      ),
+      changes: analysis.typical.dispositions.slice(1).map((each) => at(each.from)),
+    },
     span: { from: at(analysis.clock.nowH), to: at(analysis.clock.toH) },
     patient: Object.fromEntries(
       (["weight", "creatinine", "idealWeight", "adjustedWeight", "bodyMassIndex", "creatinineClearance"] as const).map(
@@ -56,6 +63,10 @@ function recomputeOutput(value: Case, analysis: Analysis) {
       difference: quantity(level.difference, "mg/L"),
       excluded: level.excluded,
     })),
+    crossCheck: analysis.crossCheck && {
+      isAgreed: analysis.crossCheck.isAgreed,
+      worst: quantity(analysis.crossCheck.worst, "1"),
+    },
     concerns: analysis.concerns.map((concern) => concern.id),
   };
 }
@@ -72,7 +83,7 @@ function figures(readings: OptionReadings | null, model: Model | null, at: (hour
     auc: quantity(span.auc, "mg.h/L"),
     auc24: quantity(span.auc24, "mg.h/L"),
     halfLife: quantity(readings.halfLifeH, "h"),
-    clearance: quantity(model.clearance.value, "L/h"),
+    clearance: quantity(model.clearance?.value ?? null, "L/h"),
     volume: quantity(model.volume.value, "L"),
     hoursBelow: quantity(span.hoursBelow, "h"),
     hoursWithin: quantity(span.hoursWithin, "h"),

@@ -11,9 +11,7 @@ const SCREENS: readonly Screen[] = ["cases", "bench", "summary", "medicines", "s
 
 export function placeText({ screen, caseId }: Place): string {
   if (screen === "cases") return "";
-  return caseId !== null && (screen === "bench" || screen === "summary")
-    ? `#${screen}/${encodeURIComponent(caseId)}`
-    : `#${screen}`;
+  return caseId !== null && (screen === "bench" || screen === "summary") ? `#${screen}/${caseId}` : `#${screen}`;
 }
 
 export function placeRead(hash: string): Place {
@@ -21,7 +19,8 @@ export function placeRead(hash: string): Place {
   const screen = SCREENS.find((each) => each === name) ?? "cases";
   const needsCase = screen === "bench" || screen === "summary";
   if (!needsCase) return { screen, caseId: null };
-  return id ? { screen, caseId: decodeURIComponent(id) } : { screen: "cases", caseId: null };
+  // An id as this program makes them; anything else in the address leads to the list.
+  return id && /^[\w-]+$/.test(id) ? { screen, caseId: id } : { screen: "cases", caseId: null };
 }
 
 /** Keeps address and screen in step. Call once the store has started. */

@@ -1,4 +1,4 @@
-import type { BothReadings } from "../kinetics/index.ts";
+import type { Absorption, BothReadings, DispositionSpan } from "../kinetics/index.ts";
 import type { DoseAmount } from "../regimen/index.ts";
 import type { UnitCode } from "../units/index.ts";
 
@@ -54,19 +54,39 @@ export interface PatientFigures {
 
 export interface ProductModel {
   readonly product: string;
-  readonly absorptionRate: Traced; // /h
+  readonly absorption: Absorption;
+  /** First-order rate, /h (of the fast part where the input is mixed); null for a zero-order input. */
+  readonly absorptionRate: Traced | null;
+  /** What else the input needs: durations, fractions, the slow rate; by name. */
+  readonly inputFigures: readonly NamedFigure[];
   readonly lag: Traced; // h
   readonly bioavailability: Traced; // 1
-  readonly readings: BothReadings;
+  /** null where exchanging absorption and elimination has no meaning. */
+  readonly readings: BothReadings | null;
+}
+
+export interface NamedFigure {
+  /** As in the working: CL, V, Vmax … */
+  readonly symbol: string;
+  readonly words: string;
+  readonly figure: Traced;
 }
 
 /** The kinetics of one patient reading of the model (typical now; individual once levels adjust it). */
 export interface Model {
-  readonly clearance: Traced; // L/h
+  readonly kind: DispositionSpan["disposition"]["kind"];
+  /** The record's parameters with this patient's numbers put in, at the now line and before any effect of an event. */
+  readonly parameters: readonly NamedFigure[];
+  readonly clearance: Traced | null; // L/h; null where it depends on the level
   readonly volume: Traced; // L
-  readonly eliminationRate: Traced; // /h
-  readonly halfLife: Traced; // h
+  readonly eliminationRate: Traced | null; // /h
+  /** Of elimination; of the terminal phase with two compartments; null where it depends on the level. */
+  readonly halfLife: Traced | null; // h
   readonly products: readonly ProductModel[];
+  /** In force from when, elapsed hours on the case clock; the first from −Infinity. The last is the final state. */
+  readonly dispositions: readonly DispositionSpan[];
+  /** h after a dose until the distribution phase is over, by product; 0 with one compartment. */
+  readonly distributionEndH: Readonly<Record<string, number>>;
 }
 
 export interface SpanReadings {
@@ -111,9 +131,12 @@ export interface OptionReadings {
   readonly span: SpanReadings;
   /** null with a reason code (messages) when the option has no repeating pattern. */
   readonly steadyState: SteadyStateReadings | null;
-  readonly noSteadyState: "no-repeat" | "no-common-period" | null;
+  readonly noSteadyState: "no-repeat" | "no-common-period" | "dose-rate-at-or-above-vmax" | null;
   readonly dailyDoseMg: number | null;
-  readonly halfLifeH: number;
+  /** null where it depends on the level. */
+  readonly halfLifeH: number | null;
+  /** Whether the kinetics change after the now line: steady-state figures then refer to the final state. */
+  readonly refersToFinalState: boolean;
 }
 
 export interface OptionResult {
@@ -122,6 +145,15 @@ export interface OptionResult {
   readonly curve: Curve | null;
   readonly typical: OptionReadings | null;
   readonly individual: OptionReadings | null;
+}
+
+/** The second road: the same figures by plain numerical integration. */
+export interface CrossCheck {
+  /** Largest difference found anywhere, as a share of the largest level. */
+  readonly worst: number;
+  /** What differed most: "given", or an option's id. */
+  readonly where: string;
+  readonly isAgreed: boolean;
 }
 
 export interface LevelResult {
@@ -175,6 +207,8 @@ export interface Analysis {
   readonly levels: readonly LevelResult[];
   readonly options: readonly OptionResult[];
   readonly concerns: readonly Concern[];
+  /** null until it has been made (it follows the figures), or without a prediction. */
+  readonly crossCheck: CrossCheck | null;
   /** SHA-256 over the canonical JSON of the inputs that matter, hex. */
   readonly fingerprint: string;
   readonly engine: string;

@@ -9,29 +9,35 @@ import { flipFlop } from "./concerns/flipFlop.ts";
 import { historyAssumed } from "./concerns/historyAssumed.ts";
 import { inventedMedicine } from "./concerns/inventedMedicine.ts";
 import { kidneyUnknown } from "./concerns/kidneyUnknown.ts";
+import { kineticsChange } from "./concerns/kineticsChange.ts";
 import { levelFarOff } from "./concerns/levelFarOff.ts";
 import { levelLeftOut } from "./concerns/levelLeftOut.ts";
 import { levelTiming } from "./concerns/levelTiming.ts";
 import { linesUnreadable } from "./concerns/linesUnreadable.ts";
 import { modelIncomplete } from "./concerns/modelIncomplete.ts";
+import { neverSteady } from "./concerns/neverSteady.ts";
 import { noSteadyState } from "./concerns/noSteadyState.ts";
 import { optionOutsideWindow } from "./concerns/optionOutsideWindow.ts";
 import { optionToxic } from "./concerns/optionToxic.ts";
 import { recordUnreviewed } from "./concerns/recordUnreviewed.ts";
+import { roadsDiffer } from "./concerns/roadsDiffer.ts";
 import { typicalOnly } from "./concerns/typicalOnly.ts";
 import { valuesConfirmed } from "./concerns/valuesConfirmed.ts";
 import { windowMissing } from "./concerns/windowMissing.ts";
 
 /** Every rule, in the order in which concerns of the same gravity are shown. */
 const RULES: readonly ConcernRule[] = [
+  roadsDiffer,
   modelIncomplete,
   linesUnreadable,
   inventedMedicine,
   optionToxic,
+  neverSteady,
   ageOutside,
   levelTiming,
   levelFarOff,
   typicalOnly,
+  kineticsChange,
   optionOutsideWindow,
   firstDoseClose,
   doseNotMakeable,

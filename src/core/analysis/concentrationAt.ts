@@ -1,7 +1,7 @@
-import { historyProfile } from "../kinetics/index.ts";
+import { modelProfile } from "../kinetics/index.ts";
 import type { Analysis } from "./analysisTypes.ts";
 import { countedByProduct } from "./caseDoses.ts";
-import { modelCourses, modelDisposition } from "./modelCourses.ts";
+import { modelHistory } from "./modelInputs.ts";
 
 /**
  * Concentrations at chosen instants, mg/L, by the same sweep that drew the curve (not read off the drawing).
@@ -10,8 +10,8 @@ import { modelCourses, modelDisposition } from "./modelCourses.ts";
 export function concentrationAt(analysis: Analysis, option: string | null, hours: readonly number[]): number[] | null {
   if (!analysis.typical) return null;
   const doses = option === null ? [] : (analysis.options.find((candidate) => candidate.id === option)?.doses ?? []);
-  const courses = modelCourses(analysis.typical, countedByProduct([...analysis.given, ...doses]));
-  return [...historyProfile(modelDisposition(analysis.typical), courses, hours)];
+  const history = modelHistory(analysis.typical, countedByProduct([...analysis.given, ...doses]));
+  return [...modelProfile(history, hours)];
 }
 
 /** Hours since the last counted dose before an instant; null before the first. */

@@ -1,7 +1,16 @@
 import type { Case } from "../case/index.ts";
 import type { Issue } from "../result/index.ts";
 import type { AnalysisClock } from "./analysisClock.ts";
-import type { Concern, DoseMark, Gravity, LevelResult, Model, OptionResult, PatientFigures } from "./analysisTypes.ts";
+import type {
+  Concern,
+  CrossCheck,
+  DoseMark,
+  Gravity,
+  LevelResult,
+  Model,
+  OptionResult,
+  PatientFigures,
+} from "./analysisTypes.ts";
 
 /** All a rule may look at. */
 export interface ConcernContext {
@@ -14,6 +23,7 @@ export interface ConcernContext {
   readonly lineIssues: readonly { readonly lane: string; readonly lineId: string; readonly issue: Issue }[];
   readonly levels: readonly LevelResult[];
   readonly options: readonly OptionResult[];
+  readonly crossCheck: CrossCheck | null;
 }
 
 /** One rule a file in concerns/; a new one adds its file, one line in caseConcerns.ts and its sentence in core/messages. */

@@ -1,21 +1,30 @@
-import type { Course } from "../kinetics/index.ts";
+import type { ModelHistory } from "../kinetics/index.ts";
 
 /** Evenly spaced points of a drawn curve; more would not show on any screen. */
 const POINTS = 1_200;
 
 /**
- * Times at which a curve is drawn over [fromH, toH]: an even grid plus the instant each dose begins to be absorbed,
- * so that every corner of the curve is on it. Ascending, without repeats. Drawing only: no reading is taken from it.
+ * Times at which a curve is drawn over [fromH, toH]: an even grid plus the instants at which a dose begins or ends to be absorbed
+ * and the kinetics change, so that every corner of the curve is on it. Ascending, without repeats. Drawing only: no reading is taken from it.
  */
-export function curveTimes(courses: readonly Course[], fromH: number, toH: number): Float64Array {
+export function curveTimes(history: ModelHistory, fromH: number, toH: number): Float64Array {
   const times = new Set<number>([fromH, toH]);
+  const add = (hours: number) => {
+    if (hours > fromH && hours < toH) times.add(hours);
+  };
   const step = (toH - fromH) / POINTS;
-  for (let i = 1; i < POINTS; i++) times.add(fromH + i * step);
-  for (const course of courses) {
-    for (const dose of course.doses) {
-      const begins = dose.time + course.lag;
-      if (begins > fromH && begins < toH) times.add(begins);
+  for (let i = 1; i < POINTS; i++) add(fromH + i * step);
+  for (const { absorption, lag, doses } of history.inputs) {
+    for (const dose of doses) {
+      const begins = dose.time + lag;
+      add(begins);
+      if (absorption.kind === "zero-order") add(begins + absorption.duration);
+      if (absorption.kind === "mixed") {
+        add(begins + absorption.slowLag);
+        if (absorption.slow.kind === "zero-order") add(begins + absorption.slowLag + absorption.slow.duration);
+      }
     }
   }
+  for (const span of history.dispositions) add(span.from);
   return Float64Array.from(times).sort();
 }

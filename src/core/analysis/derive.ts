@@ -1,12 +1,14 @@
 import { type Case, caseFingerprint } from "../case/index.ts";
-import { historyProfile } from "../kinetics/index.ts";
+import { modelProfile } from "../kinetics/index.ts";
 import { analysisClock } from "./analysisClock.ts";
 import type { Analysis, Curve, DoseMark, Model } from "./analysisTypes.ts";
 import { caseConcerns } from "./caseConcerns.ts";
 import { countedByProduct, laneDoses } from "./caseDoses.ts";
+import { crossCheckFigures } from "./crossCheckFigures.ts";
 import { curveTimes } from "./curveTimes.ts";
+import { kineticsChanges } from "./kineticsChanges.ts";
 import { levelResults } from "./levelResults.ts";
-import { modelCourses, modelDisposition } from "./modelCourses.ts";
+import { modelHistory } from "./modelInputs.ts";
 import { optionReadings } from "./optionReadings.ts";
 import { patientFigures } from "./patientFigures.ts";
 import { typicalModel } from "./typicalModel.ts";
@@ -14,19 +16,25 @@ import { typicalModel } from "./typicalModel.ts";
 /** Part of the fingerprint: changes whenever the same case may give other figures. */
 export const ENGINE = "ebbline-core 1";
 
+export interface DeriveOptions {
+  /** Makes the cross-check too: the second road to every figure. It takes many times as long, so a drag goes without. */
+  readonly isCrossChecked?: boolean;
+}
+
 /**
  * The whole pipeline: a case in, everything the screens, the summary and `recompute` show out.
  * Pure and deterministic; the case's own now line is the only clock.
  */
-export function derive(value: Case): Analysis {
+export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = {}): Analysis {
   // 1. Patient: size and kidney function at the now line.
   const patient = patientFigures(value);
 
-  // 2. Model: the record's formulas with this patient's figures put in.
-  const { model: typical, issues: modelIssues } = typicalModel(value, patient);
+  // 2. Model: the record's formulas with this patient's figures put in, at the now line.
+  const { model: atNow, issues: modelIssues } = typicalModel(value, patient);
 
-  // 3. Clock: the span shown, from the first thing that happened to where the options have settled.
-  const clock = analysisClock(value, typical?.halfLife.value ?? null);
+  // 3. Clock: the span shown, from the first thing that happened to where the options have settled; and on it, what changes the kinetics.
+  const clock = analysisClock(value, atNow?.halfLife?.value ?? null);
+  const typical = atNow && { ...atNow, dispositions: kineticsChanges(value, patient, clock.originMs) };
 
   // 4. Doses: every line unfolded on the clock.
   const given = laneDoses(value, value.given, "given", clock);
@@ -58,7 +66,10 @@ export function derive(value: Case): Analysis {
     individual: null,
   }));
 
-  // 8. Concerns: what a human has to look at, gravest first.
+  // 8. Cross-check: the displayed profile and exposure by another road.
+  const crossCheck = isCrossChecked && typical ? crossCheckFigures(value, typical, given.marks, options, clock) : null;
+
+  // 9. Concerns: what a human has to look at, gravest first.
   const concerns = caseConcerns({
     case: value,
     clock,
@@ -72,9 +83,10 @@ export function derive(value: Case): Analysis {
     ],
     levels,
     options,
+    crossCheck,
   });
 
-  // 9. Fingerprint: the inputs that matter and the engine that turned them into figures.
+  // 10. Fingerprint: the inputs that matter and the engine that turned them into figures.
   const fingerprint = caseFingerprint(value, ENGINE);
 
   const { originMs, nowH, fromH, toH, midnightsH } = clock;
@@ -88,13 +100,14 @@ export function derive(value: Case): Analysis {
     levels,
     options,
     concerns,
+    crossCheck,
     fingerprint,
     engine: ENGINE,
   };
 }
 
 function curve(model: Model, marks: readonly DoseMark[], fromH: number, toH: number): Curve {
-  const courses = modelCourses(model, countedByProduct(marks));
-  const timesH = curveTimes(courses, fromH, toH);
-  return { timesH, values: historyProfile(modelDisposition(model), courses, timesH) };
+  const history = modelHistory(model, countedByProduct(marks));
+  const timesH = curveTimes(history, fromH, toH);
+  return { timesH, values: modelProfile(history, timesH) };
 }

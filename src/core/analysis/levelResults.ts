@@ -1,11 +1,11 @@
 import type { Case, Level } from "../case/index.ts";
-import { historyProfile } from "../kinetics/index.ts";
+import { modelProfile } from "../kinetics/index.ts";
 import type { MedicineRecord } from "../medicine/index.ts";
 import { instantMs } from "../time/index.ts";
 import { quantityConvert } from "../units/index.ts";
 import type { DoseMark, LevelResult, Model } from "./analysisTypes.ts";
 import { countedByProduct } from "./caseDoses.ts";
-import { modelCourses, modelDisposition } from "./modelCourses.ts";
+import { modelHistory } from "./modelInputs.ts";
 
 const HOUR_MS = 3_600_000;
 
@@ -36,9 +36,7 @@ export function levelResults(
   const atH = (level: Level) => (instantMs(level.at) - originMs) / HOUR_MS;
   const ordered = [...value.levels].sort((a, b) => atH(a) - atH(b));
   const counted = given.filter((mark) => mark.countedMg > 0);
-  const predicted = model
-    ? historyProfile(modelDisposition(model), modelCourses(model, countedByProduct(given)), ordered.map(atH))
-    : null;
+  const predicted = model ? modelProfile(modelHistory(model, countedByProduct(given)), ordered.map(atH)) : null;
   return ordered.map((level, i) => {
     const measured = levelMgPerL(level, value.medicine);
     const before = counted.filter((mark) => mark.atH < atH(level)).at(-1);

@@ -1,14 +1,8 @@
 import type { Case } from "../case/index.ts";
-import {
-  type Course,
-  type Disposition,
-  historyExposure,
-  patternSteadyState,
-  timeToSteadyState,
-} from "../kinetics/index.ts";
+import { modelExposure, modelSteadyState, modelTimeToSteadyState } from "../kinetics/index.ts";
 import type { DoseLine } from "../regimen/index.ts";
 import type { Model, OptionReadings, SpanReadings, SteadyStateReadings } from "./analysisTypes.ts";
-import { modelCourses, modelDisposition } from "./modelCourses.ts";
+import { finalDisposition, modelHistory, modelInputs } from "./modelInputs.ts";
 import { type RegimenPattern, regimenPattern } from "./regimenPattern.ts";
 
 const HOUR_MS = 3_600_000;
@@ -27,16 +21,17 @@ export function optionReadings(
   model: Model,
   clock: ReadingsClock,
 ): OptionReadings {
-  const disposition = modelDisposition(model);
-  const span = spanReadings(disposition, modelCourses(model, doses), clock, concentrationWindow(value));
+  const span = spanReadings(model, doses, clock, concentrationWindow(value));
   const pattern = regimenPattern(value, lines);
-  const settled = pattern.ok ? steadyStateReadings(disposition, model, pattern.pattern, clock.originMs) : null;
+  const settled = pattern.ok ? steadyStateReadings(model, pattern.pattern, clock.originMs) : null;
+  const hasSteadyState = settled !== null && settled !== "dose-rate-at-or-above-vmax";
   return {
     span,
-    steadyState: settled,
-    noSteadyState: pattern.ok ? null : pattern.reason,
+    steadyState: hasSteadyState ? settled : null,
+    noSteadyState: pattern.ok ? (hasSteadyState ? null : "dose-rate-at-or-above-vmax") : pattern.reason,
     dailyDoseMg: pattern.ok ? (pattern.pattern.dosePerPeriodMg * 24) / pattern.pattern.periodH : null,
-    halfLifeH: model.halfLife.value,
+    halfLifeH: model.halfLife?.value ?? null,
+    refersToFinalState: model.dispositions.some((each) => each.from > clock.fromH),
   };
 }
 
@@ -48,12 +43,12 @@ export function concentrationWindow(value: Case): { readonly low: number; readon
 }
 
 function spanReadings(
-  disposition: Disposition,
-  courses: readonly Course[],
+  model: Model,
+  doses: ReadonlyMap<string, readonly { readonly time: number; readonly amount: number }[]>,
   clock: ReadingsClock,
   window: { readonly low: number; readonly high: number } | null,
 ): SpanReadings {
-  const found = historyExposure(disposition, courses, clock.fromH, clock.toH, window ?? undefined);
+  const found = modelExposure(modelHistory(model, doses), clock.fromH, clock.toH, window ?? undefined);
   return {
     fromH: clock.fromH,
     toH: clock.toH,
@@ -71,17 +66,18 @@ function spanReadings(
 }
 
 function steadyStateReadings(
-  disposition: Disposition,
   model: Model,
   pattern: RegimenPattern,
   originMs: number,
-): SteadyStateReadings {
-  const courses = modelCourses(model, pattern.courses);
-  const settled = patternSteadyState(disposition, courses, pattern.periodH);
-  const doseTimes = courses.flatMap((course) => course.doses.map((dose) => dose.time));
-  const slowest = courses
-    .map((course) => timeToSteadyState({ ...course, ...disposition }, 0.9))
-    .reduce((a, b) => (b.hours > a.hours ? b : a));
+): SteadyStateReadings | "dose-rate-at-or-above-vmax" {
+  const disposition = finalDisposition(model);
+  const inputs = modelInputs(model, pattern.courses);
+  const settled = modelSteadyState(disposition, inputs, pattern.periodH);
+  if (settled.status === "none") return settled.reason;
+  const doseTimes = inputs.flatMap((input) => input.doses.map((dose) => dose.time));
+  const slowest = modelTimeToSteadyState(disposition, inputs, pattern.periodH, 0.9);
+  // A lead-in is itself forgotten at the same rate: one that outlasts the wait starts it anew at its last dose.
+  const waitFromMs = Math.max(pattern.startMs, pattern.leadInEndMs ?? Number.NEGATIVE_INFINITY);
   return {
     periodH: pattern.periodH,
     dosePerPeriodMg: pattern.dosePerPeriodMg,
@@ -95,7 +91,7 @@ function steadyStateReadings(
     fluctuation: settled.fluctuation,
     accumulation: settled.accumulation,
     timeTo90H: slowest.hours,
-    steady90AtH: (pattern.startMs - originMs) / HOUR_MS + slowest.hours,
+    steady90AtH: (waitFromMs - originMs) / HOUR_MS + slowest.hours,
     slower: slowest.slower,
   };
 }

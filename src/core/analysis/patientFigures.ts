@@ -79,6 +79,14 @@ export function patientFigures(value: Case): PatientFigures {
   };
 }
 
+/** Creatinine clearance with a given creatinine, mL/min, everything else as at the now line; null when it can't be worked out. */
+export function creatinineClearanceAt(value: Case, patient: PatientFigures, creatinine: Observation): number | null {
+  const { sex, age } = value.patient;
+  if (sex === undefined || age === undefined || age.value < ADULT_YEARS || patient.weight === null) return null;
+  const forClearance = clearanceWeight({ actualKg: patient.weight.value, idealKg: patient.idealWeight?.value ?? null });
+  return clearance(sex, age.value, forClearance, creatinine).value;
+}
+
 function clearance(
   sex: "female" | "male",
   ageYears: number,

@@ -14,7 +14,10 @@ export interface RegimenPattern {
   readonly startMs: number;
   /** Doses within [0, periodH) from `startMs`, by product. */
   readonly courses: ReadonlyMap<string, readonly { readonly time: number; readonly amount: number }[]>;
+  /** mg as the products are labelled (of a salt, mg of salt). */
   readonly dosePerPeriodMg: number;
+  /** When the last dose of the lead-in is due; null without one. */
+  readonly leadInEndMs: number | null;
 }
 
 export type PatternResult =
@@ -30,7 +33,7 @@ export type PatternResult =
 export function regimenPattern(value: Case, lines: readonly DoseLine[]): PatternResult {
   const repeating = lines.filter((line) => line.repeat !== undefined);
   if (repeating.length === 0) return { ok: false, reason: "no-repeat" };
-  const ends = repeating.map((line) => doseLineEndMs(line, value.timeZone) ?? Number.POSITIVE_INFINITY);
+  const ends = repeating.map((line) => lineEndMs(line, value.timeZone));
   const lastEnd = Math.max(...ends);
   const ongoing = repeating.filter(
     (line, i) => ends[i] === lastEnd || ends[i]! + periodMin(line) * MINUTE_MS > lastEnd,
@@ -42,17 +45,26 @@ export function regimenPattern(value: Case, lines: readonly DoseLine[]): Pattern
   const courses = new Map<string, { time: number; amount: number }[]>();
   let dosePerPeriodMg = 0;
   for (const line of ongoing) {
-    const mg = doseMg(line.amount, productOf(value.medicine, line.product));
+    const product = productOf(value.medicine, line.product);
+    const mg = doseMg(line.amount, product);
+    const saltFactor = product.saltFactor?.value ?? 1;
     if (!mg.ok) return { ok: false, reason: "no-repeat" };
     const doses = courses.get(line.product) ?? [];
     for (const minute of patternMinutes(line, startMs, period, value.timeZone)) {
       doses.push({ time: minute / 60, amount: mg.value });
-      dosePerPeriodMg += mg.value;
+      dosePerPeriodMg += mg.value / saltFactor;
     }
     courses.set(line.product, doses);
   }
+  const leadIn = lines.filter((line) => !ongoing.includes(line));
+  const leadInEndMs = leadIn.length === 0 ? null : Math.max(...leadIn.map((line) => lineEndMs(line, value.timeZone)));
   for (const doses of courses.values()) doses.sort((a, b) => a.time - b.time);
-  return { ok: true, pattern: { periodH: period / 60, startMs, courses, dosePerPeriodMg } };
+  return { ok: true, pattern: { periodH: period / 60, startMs, courses, dosePerPeriodMg, leadInEndMs } };
+}
+
+/** Infinity for a line until further notice. */
+function lineEndMs(line: DoseLine, zone: string): number {
+  return line.repeat ? (doseLineEndMs(line, zone) ?? Number.POSITIVE_INFINITY) : instantMs(line.start);
 }
 
 function periodMin(line: DoseLine): number {

@@ -1,8 +1,16 @@
 import type { Case } from "../case/index.ts";
-import { bothReadings } from "../kinetics/index.ts";
-import { type Figure, formulaEvaluate, type MedicineRecord } from "../medicine/index.ts";
+import { distributionEnd, modelBothReadings, modelHalfLife } from "../kinetics/index.ts";
+import {
+  type Figure,
+  formulaEvaluate,
+  kineticsFormulas,
+  type MedicineRecord,
+  productAbsorption,
+} from "../medicine/index.ts";
 import type { Issue } from "../result/index.ts";
-import type { Model, PatientFigures, ProductModel, Traced } from "./analysisTypes.ts";
+import type { Model, NamedFigure, PatientFigures, ProductModel, Traced } from "./analysisTypes.ts";
+import { type KineticsValues, kineticsDisposition } from "./kineticsDisposition.ts";
+import { patientCovariates } from "./patientCovariates.ts";
 
 /** Words of a source entry as they stand beside a figure. */
 export function sourceText(record: MedicineRecord, id: string): string {
@@ -22,63 +30,111 @@ function tracedFigure(record: MedicineRecord, figure: Figure): Traced {
   };
 }
 
+function derived(value: number, unit: Traced["unit"], formula: string, inputs: Traced["inputs"]): Traced {
+  return { value, unit, formula, inputs, source: "definition", basis: "derived" };
+}
+
+/** The model but for the changes on the case clock, which are laid out once the clock is known. */
+export type ModelAtNow = Omit<Model, "dispositions">;
+
 /**
- * The typical patient's kinetics: the record's formulas with this patient's figures put in.
+ * The typical patient's kinetics at the now line: the record's formulas with this patient's figures put in.
  * null with the reasons when a figure the formulas need is missing.
  */
-export function typicalModel(value: Case, patient: PatientFigures): { model: Model | null; issues: readonly Issue[] } {
+export function typicalModel(
+  value: Case,
+  patient: PatientFigures,
+): { readonly model: ModelAtNow | null; readonly issues: readonly Issue[] } {
   const record = value.medicine;
-  const covariates = {
-    weight: patient.weight?.value,
-    idealWeight: patient.idealWeight?.value,
-    adjustedWeight: patient.adjustedWeight?.value,
-    height: patient.heightCm ?? undefined,
-    age: value.patient.age?.value,
-    creatinineClearance: patient.creatinineClearance?.value,
-    isFemale: value.patient.sex === undefined ? undefined : value.patient.sex === "female" ? 1 : 0,
-  };
-  const clearance = formulaEvaluate(record.kinetics.clearance.formula, covariates);
-  const volume = formulaEvaluate(record.kinetics.volume.formula, covariates);
-  if (!clearance.ok || !volume.ok) {
-    const issues = [...(clearance.ok ? [] : clearance.issues), ...(volume.ok ? [] : volume.issues)];
-    return { model: null, issues };
+  const covariates = patientCovariates(value, patient, patient.creatinineClearance?.value);
+  const parameters: NamedFigure[] = [];
+  const values: Partial<Record<string, number>> = {};
+  const issues: Issue[] = [];
+  for (const { name, symbol, words, formula } of kineticsFormulas(record)) {
+    const result = formulaEvaluate(formula.formula, covariates);
+    if (!result.ok) {
+      issues.push(...result.issues);
+      continue;
+    }
+    values[name] = result.value.value;
+    const figure: Traced = {
+      value: result.value.value,
+      unit: formula.unit,
+      formula: formula.formula,
+      inputs: result.value.inputs,
+      source: sourceText(record, formula.source),
+      basis: formula.basis,
+    };
+    parameters.push({ symbol, words, figure });
   }
-  const traced = (part: typeof record.kinetics.clearance, result: typeof clearance.value): Traced => ({
-    value: result.value,
-    unit: part.unit,
-    formula: part.formula,
-    inputs: result.inputs,
-    source: sourceText(record, part.source),
-    basis: part.basis,
+  if (issues.length > 0) return { model: null, issues: withoutRepeats(issues) };
+
+  const disposition = kineticsDisposition(record, values as KineticsValues);
+  const figureOf = (symbol: string) => parameters.find((parameter) => parameter.symbol === symbol)?.figure ?? null;
+  const clearance = figureOf("CL");
+  const volume = figureOf("V") ?? figureOf("V1")!;
+  const halfLifeH = modelHalfLife(disposition);
+  const isOneCompartment = disposition.kind === "one-compartment";
+  const eliminationRate =
+    clearance === null
+      ? null
+      : derived(clearance.value / volume.value, "/h", "CL / V", [
+          { name: "CL", value: clearance.value, unit: "L/h" },
+          { name: "V", value: volume.value, unit: "L" },
+        ]);
+  const halfLife =
+    halfLifeH === null
+      ? null
+      : isOneCompartment
+        ? derived(halfLifeH, "h", "ln 2 / ke", [{ name: "ke", value: clearance!.value / volume.value, unit: "/h" }])
+        : derived(halfLifeH, "h", "ln 2 / the slower of the two exponential rates", []);
+  const products: ProductModel[] = record.products.map((product) => {
+    const absorption = productAbsorption(product);
+    return {
+      product: product.id,
+      absorption,
+      absorptionRate: product.absorptionRate ? tracedFigure(record, product.absorptionRate) : null,
+      inputFigures: Object.entries(product.input ?? {}).flatMap(([name, figure]) =>
+        typeof figure === "object" && figure !== undefined
+          ? [{ symbol: name, words: INPUT_WORDS[name] ?? name, figure: tracedFigure(record, figure) }]
+          : [],
+      ),
+      lag: tracedFigure(record, product.lag),
+      bioavailability: tracedFigure(record, product.bioavailability),
+      readings: modelBothReadings(disposition, absorption, product.bioavailability.value, product.lag.value),
+    };
   });
-  const cl = traced(record.kinetics.clearance, clearance.value);
-  const v = traced(record.kinetics.volume, volume.value);
-  const ke = cl.value / v.value;
-  const derived = (number: number, unit: Traced["unit"], formula: string, inputs: Traced["inputs"]): Traced => ({
-    value: number,
-    unit,
-    formula,
-    inputs,
-    source: "definition",
-    basis: "derived",
+  const distributionEndH = Object.fromEntries(
+    products.map((product) => [product.product, product.lag.value + distributionEnd(disposition, product.absorption)]),
+  );
+  return {
+    model: {
+      kind: disposition.kind,
+      parameters,
+      clearance,
+      volume,
+      eliminationRate,
+      halfLife,
+      products,
+      distributionEndH,
+    },
+    issues: [],
+  };
+}
+
+const INPUT_WORDS: Readonly<Record<string, string>> = {
+  duration: "Absorbed evenly over",
+  fastFraction: "Fast part of the dose",
+  slowRate: "Absorption rate of the slow part",
+  slowDuration: "Slow part absorbed evenly over",
+  slowLag: "Lag of the slow part",
+};
+
+/** The same missing covariate is told once, however many formulas need it. */
+function withoutRepeats(issues: readonly Issue[]): Issue[] {
+  const seen = new Set<string>();
+  return issues.filter((issue) => {
+    const key = JSON.stringify([issue.code, issue.data.name ?? issue.data]);
+    return !seen.has(key) && seen.add(key);
   });
-  const eliminationRate = derived(ke, "/h", "CL / V", [
-    { name: "CL", value: cl.value, unit: "L/h" },
-    { name: "V", value: v.value, unit: "L" },
-  ]);
-  const halfLife = derived(Math.LN2 / ke, "h", "ln 2 / ke", [{ name: "ke", value: ke, unit: "/h" }]);
-  const products: ProductModel[] = record.products.map((product) => ({
-    product: product.id,
-    absorptionRate: tracedFigure(record, product.absorptionRate),
-    lag: tracedFigure(record, product.lag),
-    bioavailability: tracedFigure(record, product.bioavailability),
-    readings: bothReadings({
-      ka: product.absorptionRate.value,
-      ke,
-      volume: v.value,
-      bioavailability: product.bioavailability.value,
-      lag: product.lag.value,
-    }),
-  }));
-  return { model: { clearance: cl, volume: v, eliminationRate, halfLife, products }, issues: [] };
 }

@@ -97,7 +97,7 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
     text: `Last dose given ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}; the option's first follows ${hours(number(data, "gapH"))} later, its own interval is ${hours(number(data, "intervalH"))}.`,
   }),
   "dose-not-makeable": (data) => ({
-    title: `${figure(number(data, "amountMg"))} mg can't be made from the strengths in the record`,
+    title: `${quantityPrint({ value: number(data, "amountMg"), unit: "mg" }, { style: "print", microgram: "microgram" })} can't be made from the strengths in the record`,
     text: `Option ${text(data, "option")}, ${text(data, "product")}: ${(data.strengths as number[]).map(figure).join(", ")} mg${text(data, "divisible") === "half" ? ", halves allowed" : ", whole only"}.`,
   }),
   "given-after-now": (data) => ({
@@ -115,6 +115,26 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
   "factor-not-used": (data) => ({
     title: `${FACTOR_WORDS[text(data, "kind")] ?? "Event"} recorded, not in the model`,
     text: `${text(data, "detail")}. The prediction does not take it into account.`,
+  }),
+  "factor-by-hand": (data) => ({
+    title: `${FACTOR_WORDS[text(data, "kind")] ?? "Event"}: clearance changed by hand`,
+    text: `${text(data, "detail")}. Clearance times ${figure(number(data, "clearance"))}${number(data, "volume") === 1 ? "" : `, volume times ${figure(number(data, "volume"))}`}${number(data, "onsetDays") > 0 ? `, reached in daily steps over ${figure(number(data, "onsetDays"))} days` : ", at once"}. The factor is the user's own figure, not the record's.`,
+  }),
+  "kinetics-change": (data) => ({
+    title: "The kinetics change during the course",
+    text: `${plural(number(data, "count"), "change", "changes")}, the last ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}. Steady-state figures refer to the final state.${number(data, "levelsBefore") > 0 ? ` ${plural(number(data, "levelsBefore"), "level was", "levels were")} drawn before it.` : ""}`,
+  }),
+  "never-steady": (data) => ({
+    title: `Option ${text(data, "option")} never reaches a steady state`,
+    text: "More is taken than this patient can ever eliminate: the level rises without end.",
+  }),
+  "roads-differ": (data) => ({
+    title: "The cross-check does not agree",
+    text: `The figures of ${text(data, "where") === "given" ? "the doses given" : `option ${text(data, "where")}`} come out otherwise by plain numerical integration (by ${numberPrint(number(data, "worst") * 100, { significant: 2 })} % of the largest level). Do not use them; report it.`,
+  }),
+  "level-while-distributing": (data) => ({
+    title: `The level of ${when(data)} was drawn before distribution was over`,
+    text: `${hours(number(data, "afterDoseH"))} after the dose; distribution takes until about ${hours(number(data, "distributedH"))} after it. It says little about the tissue.`,
   }),
   "value-confirmed": (data) => ({
     title: "An improbable value was confirmed",

@@ -179,6 +179,7 @@ export const summaryReadingWords = {
   times: (figure: string) => `${figure} times`,
   steady90: "90 % of steady state from",
   noRepeat: "The option does not repeat, so it has no steady state.",
+  neverSteady: "No steady state: more is taken than can be eliminated, and the level rises without end.",
   noCommonPeriod: "The lines have no common period within two weeks, so no steady state is given.",
   chanceLeftOut: "One prediction: no range and no chance of staying in the window is given.",
   hoursOf: (title: string, low: string, high: string) => `${title} of ${low} to ${high}`,
@@ -210,6 +211,7 @@ export const summaryLevelWords = {
 } as const;
 
 export const summaryNextLevelWords = {
+  notBefore: (hours: string) => `Never earlier than ${hours} after a dose: distribution is not over.`,
   draw: (day: string, from: string, to: string, steady: string) =>
     `${day}, between ${from} and ${to}, before the ${to} dose: the first dose at or after 90 % of steady state (${steady}).`,
   drawAcross: (from: string, to: string, dose: string, steady: string) =>
@@ -223,9 +225,20 @@ export const summaryNextLevelWords = {
 } as const;
 
 export const summaryAssumptionWords = {
-  typical:
-    "one-compartment model with first-order absorption, typical patient: levels are compared and not used to adjust",
-  individual: "one-compartment model with first-order absorption, adjusted by the levels that were not left out",
+  typical: (kind: string) => `${kind}, typical patient: levels are compared and not used to adjust`,
+  individual: (kind: string) => `${kind}, adjusted by the levels that were not left out`,
+  kinds: {
+    "one-compartment": "one-compartment model",
+    "two-compartment": "two-compartment model",
+    saturable: "one compartment, saturable elimination (Michaelis–Menten)",
+  },
+  changes: (count: number, last: string) =>
+    `kinetics change ${count === 1 ? "once" : `${count} times`} during the course, last ${last}; steady state refers to the final state`,
+  crossCheck: {
+    agreed: "cross-check: profile and exposure worked out again by plain numerical integration, and agree",
+    differs: "cross-check: does NOT agree with plain numerical integration; do not use",
+    none: "cross-check by numerical integration not made",
+  },
   record: (name: string, version: number, review: string, unverified: string) =>
     `record “${name}” version ${version}, ${review}; ${unverified}`,
   notReviewed: "not independently reviewed",

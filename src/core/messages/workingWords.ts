@@ -28,39 +28,56 @@ export function tracedWords(figure: Traced): string {
 const provenance = (name: string, figure: Traced): string => `${name}: ${figure.source} (${figure.basis})`;
 
 function modelSteps(model: Model): string[] {
-  return [
-    `CL = ${tracedWords(model.clearance)}`,
-    `V = ${tracedWords(model.volume)}`,
-    `ke = CL / V = ${six(model.clearance.value)} / ${six(model.volume.value)} = ${six(model.eliminationRate.value)} per h`,
-  ];
+  const steps = model.parameters.map(({ symbol, figure }) => `${symbol} = ${tracedWords(figure)}`);
+  if (model.kind === "one-compartment" && model.clearance && model.eliminationRate) {
+    steps.push(
+      `ke = CL / V = ${six(model.clearance.value)} / ${six(model.volume.value)} = ${six(model.eliminationRate.value)} per h`,
+    );
+  }
+  if (model.dispositions.length > 1) {
+    steps.push(
+      `${model.dispositions.length - 1} changes on the clock (kidney function measured again, events); steady state refers to the final state`,
+    );
+  }
+  return steps;
+}
+
+function usedProducts(model: Model, option: OptionResult) {
+  const used = new Set(option.doses.map((dose) => dose.product));
+  return model.products.filter((product) => used.has(product.product));
 }
 
 function modelSources(model: Model, option: OptionResult): string[] {
-  const used = new Set(option.doses.map((dose) => dose.product));
   return [
-    provenance("CL", model.clearance),
-    provenance("V", model.volume),
-    ...model.products
-      .filter((product) => used.has(product.product))
-      .flatMap((product) => [
-        provenance(`ka of ${product.product}`, product.absorptionRate),
-        provenance(`F of ${product.product}`, product.bioavailability),
-        provenance(`lag of ${product.product}`, product.lag),
-      ]),
+    ...model.parameters.map(({ symbol, figure }) => provenance(symbol, figure)),
+    ...usedProducts(model, option).flatMap((product) => [
+      ...(product.absorptionRate ? [provenance(`ka of ${product.product}`, product.absorptionRate)] : []),
+      ...product.inputFigures.map(({ words, figure }) => provenance(`${words}, ${product.product}`, figure)),
+      provenance(`F of ${product.product}`, product.bioavailability),
+      provenance(`lag of ${product.product}`, product.lag),
+    ]),
   ];
 }
 
 function absorptionSteps(model: Model, option: OptionResult): string[] {
-  const used = new Set(option.doses.map((dose) => dose.product));
-  return model.products
-    .filter((product) => used.has(product.product))
-    .map(
-      (product) =>
-        `${product.product}: ka = ${six(product.absorptionRate.value)} per h, F = ${six(product.bioavailability.value)}, lag = ${six(product.lag.value)} h`,
-    );
+  return usedProducts(model, option).map((product) =>
+    [
+      `${product.product}: F = ${six(product.bioavailability.value)}`,
+      ...(product.absorptionRate ? [`ka = ${six(product.absorptionRate.value)} per h`] : []),
+      ...product.inputFigures.map(({ words, figure }) => `${words.toLowerCase()} ${tracedWords(figure)}`),
+      `lag = ${six(product.lag.value)} h`,
+    ].join(", "),
+  );
 }
 
-const CURVE = "one dose: C(t) = F·D·ka / (V·(ka − ke)) · (e^(−ke·t) − e^(−ka·t)), t from the end of the lag";
+/** What one dose does, a line a kind of model. */
+const CURVES: Readonly<Record<Model["kind"], string>> = {
+  "one-compartment":
+    "one dose, first-order: C(t) = F·D·ka / (V·(ka − ke)) · (e^(−ke·t) − e^(−ka·t)), t from the end of the lag; other inputs by the same exponentials",
+  "two-compartment":
+    "one dose: three exponentials, the two of the compartments and that of absorption, t from the end of the lag",
+  saturable: "dC/dt = input / V − Vmax · C / (Km + C) / V: no closed form, solved to 1e-9; doses do not add up",
+};
 
 /** The working of one reading of one option; null when there is nothing to show. */
 export function readingWorking(value: Case, analysis: Analysis, optionId: string, row: string): WorkingWords | null {
@@ -79,13 +96,13 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
   const settledSteps = () => [
     ...modelSteps(model),
     ...absorptionSteps(model, option),
-    CURVE,
+    CURVES[model.kind],
     `steady state: the same curve summed over all earlier doses of the pattern of ${six(steadyState!.periodH)} h (${six(steadyState!.dosePerPeriodMg)} mg); highest and lowest found where its slope is 0, or at a dose`,
   ];
   const spanSteps = () => [
     ...modelSteps(model),
     ...absorptionSteps(model, option),
-    CURVE,
+    CURVES[model.kind],
     `summed over every counted dose of the given lane and of option ${optionId}; found between doses on the curve itself, not on the drawing`,
     `span: ${clock(span.fromH)} to ${clock(span.toH)}, ${six(span.toH - span.fromH)} h`,
   ];
@@ -118,7 +135,12 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         steadyState &&
         make(
           "Average at steady state",
-          [...exposed(), `average = F·D / (CL · ${six(steadyState.periodH)} h)`],
+          [
+            ...exposed(),
+            model.clearance
+              ? `average = F·D / (CL · ${six(steadyState.periodH)} h)`
+              : "average = AUC over the period / period, from the balance: the mean of Vmax · C / (Km + C) equals F·D / period",
+          ],
           `${six(steadyState.average)} mg/L`,
         )
       );
@@ -132,10 +154,13 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         )
       );
     case "halfLife":
-      return make(
-        "Half-life of elimination",
-        [...modelSteps(model), `t½ = ln 2 / ke = 0.693147 / ${six(model.eliminationRate.value)}`],
-        `${six(model.halfLife.value)} h`,
+      return (
+        model.halfLife &&
+        make(
+          "Half-life of elimination",
+          [...modelSteps(model), `t½ = ${tracedWords(model.halfLife)}`],
+          `${six(model.halfLife.value)} h`,
+        )
       );
     case "accumulation":
       return (
@@ -157,8 +182,10 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
           [
             ...modelSteps(model),
             ...absorptionSteps(model, option),
-            `ln 10 / k, with k the slower rate: here ${steadyState.slower}`,
-            `counted from the first dose of the pattern`,
+            model.kind === "saturable"
+              ? "Km·V / (Vmax − R)² · (2.303·Vmax − 0.9·R), R the dose rate (Winter, from memory, unverified)"
+              : `ln 10 / k, with k the slower rate: here ${steadyState.slower}`,
+            "counted from the first dose of the pattern, or from the last dose of a lead-in that goes on beyond it",
           ],
           `${six(steadyState.timeTo90H)} h: from ${clock(steadyState.steady90AtH)}`,
         )

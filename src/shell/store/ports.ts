@@ -85,7 +85,7 @@ export type AnalysisAnswer =
 
 export interface AnalysisRunner {
   /** Latest wins: a call made while one runs replaces what waits. `null`: overtaken by a later call before it began. */
-  run(value: Case): Promise<AnalysisAnswer | null>;
+  run(value: Case, options?: { readonly isCrossChecked?: boolean }): Promise<AnalysisAnswer | null>;
   /** "page": the worker could not start, and the page itself does the work. */
   readonly where: "worker" | "page";
 }

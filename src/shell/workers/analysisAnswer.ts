@@ -1,14 +1,16 @@
-import type { Analysis } from "../../core/analysis/index.ts";
+import type { Analysis, DeriveOptions } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import type { AnalysisQuestion, AnalysisReply } from "./analysisMessages.ts";
 
+export type Derive = (value: Case, options: DeriveOptions) => Analysis;
+
 /** The reply to a question, and what of it is handed over instead of copied. A failure is an answer, never thrown. */
 export function analysisAnswer(
-  { sequence, case: value }: AnalysisQuestion,
-  derive: (value: Case) => Analysis,
+  { sequence, case: value, isCrossChecked }: AnalysisQuestion,
+  derive: Derive,
 ): { readonly reply: AnalysisReply; readonly transfer: ArrayBuffer[] } {
   try {
-    const analysis = derive(value);
+    const analysis = derive(value, { isCrossChecked });
     return { reply: { sequence, analysis }, transfer: arrayBuffers(analysis) };
   } catch (error) {
     return { reply: { sequence, failure: failureText(error) }, transfer: [] };

@@ -5,6 +5,8 @@ import type { Case } from "../../core/case/index.ts";
 export interface AnalysisQuestion {
   readonly sequence: number;
   readonly case: Case;
+  /** The cross-check too, which takes many times as long. */
+  readonly isCrossChecked: boolean;
 }
 
 export type AnalysisReply =

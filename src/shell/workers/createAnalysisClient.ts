@@ -1,6 +1,6 @@
 import type { Analysis } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { analysisAnswer, failureText } from "./analysisAnswer.ts";
+import { analysisAnswer, type Derive, failureText } from "./analysisAnswer.ts";
 import type { AnalysisQuestion, AnalysisReply } from "./analysisMessages.ts";
 
 /** As long as one analysis may take before the worker is stopped and started again, ms. A full case takes well below a second. */
@@ -25,7 +25,7 @@ interface Job {
 }
 
 export interface AnalysisClient {
-  run(value: Case): Promise<Answer | null>;
+  run(value: Case, options?: { readonly isCrossChecked?: boolean }): Promise<Answer | null>;
   readonly where: "worker" | "page";
   stop(): void;
 }
@@ -36,7 +36,7 @@ export interface AnalysisClient {
  */
 export function createAnalysisClient(setting: {
   readonly startWorker: () => WorkerPort;
-  readonly loadDerive: () => Promise<(value: Case) => Analysis>;
+  readonly loadDerive: () => Promise<Derive>;
   readonly deadline?: number;
 }): AnalysisClient {
   const deadline = setting.deadline ?? ANALYSIS_DEADLINE;
@@ -135,11 +135,11 @@ export function createAnalysisClient(setting: {
   }
 
   return {
-    run(value) {
+    run(value, { isCrossChecked = false } = {}) {
       return new Promise((resolve) => {
         waiting?.answer(null);
         sequence += 1;
-        waiting = { question: { sequence, case: value }, answer: resolve };
+        waiting = { question: { sequence, case: value, isCrossChecked }, answer: resolve };
         if (!running) next();
       });
     },

@@ -1,3 +1,4 @@
+import type { Traced } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { tracedWords } from "../../core/messages/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
@@ -14,16 +15,20 @@ export function MedicinePanel() {
   const { value } = open;
   const model = open.analysis.result?.typical ?? null;
   const hasLines = value.given.length > 0 || value.options.some((option) => option.lines.length > 0);
-  const figures = model
+  const figures: { readonly name: string; readonly figure: Traced }[] = model
     ? [
-        { name: "Clearance (CL)", figure: model.clearance },
-        { name: "Volume (V)", figure: model.volume },
-        { name: "Elimination rate (ke)", figure: model.eliminationRate },
-        { name: "Half-life", figure: model.halfLife },
+        ...model.parameters.map(({ symbol, words, figure }) => ({ name: `${words} (${symbol})`, figure })),
+        ...(model.eliminationRate && model.kind === "one-compartment"
+          ? [{ name: "Elimination rate (ke)", figure: model.eliminationRate }]
+          : []),
+        ...(model.halfLife ? [{ name: "Half-life", figure: model.halfLife }] : []),
         ...model.products.flatMap((product) => {
           const name = productOf(value.medicine, product.product).name;
           return [
-            { name: `Absorption rate (ka), ${name}`, figure: product.absorptionRate },
+            ...(product.absorptionRate
+              ? [{ name: `Absorption rate (ka), ${name}`, figure: product.absorptionRate }]
+              : []),
+            ...product.inputFigures.map(({ words, figure }) => ({ name: `${words}, ${name}`, figure })),
             { name: `Lag, ${name}`, figure: product.lag },
             { name: `Bioavailability (F), ${name}`, figure: product.bioavailability },
           ];
@@ -63,6 +68,7 @@ export function MedicinePanel() {
         ))}
       </dl>
       {model?.products.map((product) => {
+        if (product.readings === null) return null;
         const { assumed, alternative } = product.readings;
         const h = (hours: number) => `${numberPrint(hours, { significant: 3 })} h`;
         return (

@@ -66,7 +66,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
         settled("Lowest", "lowest", (s) => concentration(s.lowest)),
         settled("Average", "average", (s) => concentration(s.average)),
         settled("AUC in 24 h", "auc24", (s) => exposure(s.auc24)),
-        row("halfLife", "Half-life", (option) => option.typical && hours(option.typical.halfLifeH)),
+        row("halfLife", "Half-life", (option) => inHours(option.typical?.halfLifeH ?? null)),
         settled("Accumulation", "accumulation", (s) => `${three(s.accumulation)} times`),
         settled("90 % steady after", "timeTo90", (s) => ({
           text: hours(s.timeTo90H),

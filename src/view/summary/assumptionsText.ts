@@ -17,9 +17,21 @@ const NAMED_DOSES = 4;
 
 export function assumptionsText(input: SummaryInput, print: SummaryPrint): readonly string[] {
   const { medicine } = input.case;
-  const isIndividual = input.analysis.individual !== null && shownModel(input)?.model === input.analysis.individual;
+  const model = shownModel(input)?.model;
+  const isIndividual = input.analysis.individual !== null && model === input.analysis.individual;
+  const kind = words.kinds[model?.kind ?? "one-compartment"];
+  const changes = model?.dispositions.slice(1) ?? [];
+  const { crossCheck } = input.analysis;
   return [
-    isIndividual ? words.individual : words.typical,
+    isIndividual ? words.individual(kind) : words.typical(kind),
+    ...(changes.length > 0
+      ? [words.changes(changes.length, print.at(print.ms(changes.at(-1)!.from), "dayClock"))]
+      : []),
+    crossCheck === null
+      ? words.crossCheck.none
+      : crossCheck.isAgreed
+        ? words.crossCheck.agreed
+        : words.crossCheck.differs,
     words.record(medicine.name, medicine.recordVersion, reviewWords(medicine), unverifiedWords(medicine)),
     doseAssumption(input.analysis.given, print),
     words.kidney(kidneyWords(input, print)),

@@ -1,4 +1,4 @@
-import type { Traced } from "../../core/analysis/index.ts";
+import type { NamedFigure, Traced } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { summaryReadingWords as readingWords, summaryDetailWords as words } from "../../core/messages/index.ts";
 import type { Citations } from "./citations.ts";
@@ -17,6 +17,9 @@ export function figuresText(input: SummaryInput, cite: Citations, print: Summary
   const { medicine } = input.case;
   const model = shownModel(input)?.model;
   const used = new Set([...(chosenOption(input.case)?.lines ?? []), ...input.case.given].map(({ product }) => product));
+  const isApparent = medicine.kinetics.apparent;
+  const parameterName = ({ symbol, words: name }: NamedFigure) =>
+    symbol === "CL" ? readingWords.clearance(isApparent) : symbol === "V" ? readingWords.volume(isApparent) : name;
   const figure = (name: string, traced: Traced | null | undefined) =>
     traced ? [figureText(name, traced, cite, print)] : [];
   return [
@@ -25,9 +28,8 @@ export function figuresText(input: SummaryInput, cite: Citations, print: Summary
     ...figure(words.idealWeight, patient.idealWeight),
     ...figure(words.adjustedWeight, patient.clearanceWeight === "adjusted" ? patient.adjustedWeight : null),
     ...figure(words.creatinineClearance, patient.creatinineClearance),
-    ...figure(readingWords.clearance(medicine.kinetics.apparent), model?.clearance),
-    ...figure(readingWords.volume(medicine.kinetics.apparent), model?.volume),
-    ...figure(words.eliminationRate, model?.eliminationRate),
+    ...(model?.parameters ?? []).flatMap((each) => figure(parameterName(each), each.figure)),
+    ...figure(words.eliminationRate, model?.kind === "one-compartment" ? model.eliminationRate : null),
     ...figure(readingWords.halfLife, model?.halfLife),
     ...(model?.products ?? [])
       .filter(({ product }) => used.has(product))
@@ -35,6 +37,7 @@ export function figuresText(input: SummaryInput, cite: Citations, print: Summary
         const { name } = productOf(medicine, each.product);
         return [
           ...figure(readingWords.absorption, each.absorptionRate),
+          ...each.inputFigures.flatMap((input) => figure(input.words, input.figure)),
           ...figure(readingWords.lag, each.lag),
           ...figure(readingWords.bioavailability, each.bioavailability),
         ].map((row) => ({ ...row, inputs: [name, row.inputs].filter((part) => part !== "").join("; ") }));

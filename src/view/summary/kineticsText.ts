@@ -21,18 +21,25 @@ export function kineticsText(input: SummaryInput, print: SummaryPrint): SummaryM
   return {
     title: words.titled(titles.kinetics, patient),
     rows: [
-      { label: words.clearance(isApparent), value: print.quantity(model.clearance.value, model.clearance.unit) },
-      { label: words.volume(isApparent), value: print.quantity(model.volume.value, model.volume.unit) },
-      { label: words.halfLife, value: print.hours(model.halfLife.value) },
+      ...parameterRows(model, isApparent, print),
+      ...(model.halfLife ? [{ label: words.halfLife, value: print.hours(model.halfLife.value) }] : []),
     ],
     sentences: flipFlopSentences(input, model, print),
   };
 }
 
+/** Clearance and volume by their own names; what other kinds of model have, by the record's. */
+function parameterRows(model: Model, isApparent: boolean, print: SummaryPrint) {
+  return model.parameters.map(({ symbol, words: name, figure }) => ({
+    label: symbol === "CL" ? words.clearance(isApparent) : symbol === "V" ? words.volume(isApparent) : name,
+    value: print.quantity(figure.value, figure.unit),
+  }));
+}
+
 /** Which of the two half-lives the model takes for elimination, for every modified-release product in use. */
 function flipFlopSentences(input: SummaryInput, model: Model, print: SummaryPrint): readonly string[] {
   return modifiedProducts(input).flatMap((id) => {
-    const assumed = model.products.find(({ product }) => product === id)?.readings.assumed;
+    const assumed = model.products.find(({ product }) => product === id)?.readings?.assumed;
     if (!assumed) return [];
     const { name } = productOf(input.case.medicine, id);
     return [words.flipFlop(name, print.hours(assumed.eliminationHalfLife), print.hours(assumed.absorptionHalfLife))];

@@ -5,6 +5,7 @@ import {
 } from "../../core/messages/index.ts";
 import { type DoseLine, doseLineExpand } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR } from "../../core/time/index.ts";
+import { shownModel } from "./kineticsText.ts";
 import { shownReadings } from "./shownReadings.ts";
 import { steadyFromMs } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
@@ -28,7 +29,11 @@ function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] 
   const { steadyState, noSteadyState } = shown.readings;
   if (!steadyState) {
     const reason =
-      noSteadyState === "no-common-period" ? summaryReadingWords.noCommonPeriod : summaryReadingWords.noRepeat;
+      noSteadyState === "dose-rate-at-or-above-vmax"
+        ? summaryReadingWords.neverSteady
+        : noSteadyState === "no-common-period"
+          ? summaryReadingWords.noCommonPeriod
+          : summaryReadingWords.noRepeat;
     return [reason, words.byQuestion, words.writeTimes];
   }
   const nowMs = instantMs(input.case.now);
@@ -41,7 +46,15 @@ function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] 
     const last = doses.at(-1);
     return last === undefined ? [words.noModel] : [words.endsBefore(steady, print.at(last, "full")), words.byQuestion];
   }
-  return [drawSentence(doseMs, print.at(steadyMs, "dayClock"), print), words.writeTimes];
+  return [drawSentence(doseMs, print.at(steadyMs, "dayClock"), print), ...distribution(input, print), words.writeTimes];
+}
+
+/** With two compartments a sample drawn too early says little: how long to wait after a dose at the least. */
+function distribution(input: SummaryInput, print: SummaryPrint): readonly string[] {
+  const model = shownModel(input)?.model;
+  const lines = chosenOption(input.case)?.lines ?? [];
+  if (model?.kind !== "two-compartment") return [];
+  return [words.notBefore(print.hours(Math.max(...lines.map(({ product }) => model.distributionEndH[product] ?? 0))))];
 }
 
 function drawSentence(doseMs: number, steady: string, print: SummaryPrint): string {

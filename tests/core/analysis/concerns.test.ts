@@ -104,6 +104,32 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     },
     base,
   ],
+  [
+    "factor-by-hand",
+    {
+      ...base,
+      patient: {
+        ...base.patient,
+        factors: [
+          { kind: "interacting-medicine", from: base.now, detail: "invented inhibitor", effect: { clearance: 0.5 } },
+        ],
+      },
+    },
+    base,
+  ],
+  [
+    "kinetics-change",
+    {
+      ...base,
+      patient: {
+        ...base.patient,
+        factors: [
+          { kind: "interacting-medicine", from: base.now, detail: "invented inhibitor", effect: { clearance: 0.5 } },
+        ],
+      },
+    },
+    base,
+  ],
   ["value-confirmed", { ...base, levels: [level({ confirmed: true })] }, { ...base, levels: [level()] }],
   ["flip-flop", base, { ...base, given: [], options: [option([line({ product: "tablet" })])] }],
   [

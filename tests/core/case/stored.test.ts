@@ -51,7 +51,7 @@ describe("version 1 gives the same numbers", () => {
     const { typical, levels, options } = derive(parsed.value);
     const steady = options[0]?.typical?.steadyState;
     const found: Record<keyof typeof expected, number | null | undefined> = {
-      clearance: typical?.clearance.value,
+      clearance: typical?.clearance?.value,
       volume: typical?.volume.value,
       firstLevel: levels[0]?.predicted,
       secondLevel: levels[1]?.predicted,

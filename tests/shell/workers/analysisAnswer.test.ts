@@ -14,7 +14,7 @@ test("arrays are handed over, not copied, and nothing kept by the analysis is ta
   const parsed = caseParse(readFileSync("demo-data/adjustment.ebbline.json", "utf8"));
   if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
   const answers = [0, 1].map((sequence) => {
-    const { reply, transfer } = analysisAnswer({ sequence, case: parsed.value }, derive);
+    const { reply, transfer } = analysisAnswer({ sequence, case: parsed.value, isCrossChecked: false }, derive);
     expect(transfer.length).toBeGreaterThan(1);
     const received = structuredClone(reply, { transfer });
     expect(transfer.every((buffer) => buffer.byteLength === 0)).toBe(true);

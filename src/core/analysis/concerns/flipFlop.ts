@@ -7,8 +7,9 @@ export const flipFlop: ConcernRule = ({ case: value, model, given, options }) =>
   const used = new Set([...given, ...options.flatMap((option) => option.doses)].map((mark) => mark.product));
   return model.products.flatMap((reading) => {
     const product = productOf(value.medicine, reading.product);
-    if (!used.has(reading.product)) return [];
-    const close = Math.abs(reading.absorptionRate.value / model.eliminationRate.value - 1) <= 0.2;
+    const { readings } = reading;
+    if (!used.has(reading.product) || readings === null) return [];
+    const close = readings.reason === "rates-within-20-percent";
     if (product.release !== "modified" && !close) return [];
     return [
       concern(
@@ -18,12 +19,12 @@ export const flipFlop: ConcernRule = ({ case: value, model, given, options }) =>
         {
           product: product.name,
           close,
-          flipped: reading.readings.assumed.flipFlop,
-          eliminationHalfLifeH: reading.readings.assumed.eliminationHalfLife,
-          absorptionHalfLifeH: reading.readings.assumed.absorptionHalfLife,
-          otherVolume: reading.readings.alternative.volume,
-          otherHalfLifeH: reading.readings.alternative.eliminationHalfLife,
-          clearance: reading.readings.assumed.clearance,
+          flipped: readings.assumed.flipFlop,
+          eliminationHalfLifeH: readings.assumed.eliminationHalfLife,
+          absorptionHalfLifeH: readings.assumed.absorptionHalfLife,
+          otherVolume: readings.alternative.volume,
+          otherHalfLifeH: readings.alternative.eliminationHalfLife,
+          clearance: readings.assumed.clearance,
         },
       ),
     ];

@@ -1,3 +1,4 @@
+import type { Absorption } from "../../kinetics/index.ts";
 import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 
 /** A level before any dose, later than the now line, or drawn while the last dose was still being absorbed. */
@@ -6,15 +7,36 @@ export const levelTiming: ConcernRule = (context) => {
   return levels.flatMap((level) => {
     const at = { atMs: clockMs(context, level.atH), zone: context.case.timeZone };
     const about = { kind: "level", id: level.id } as const;
+    if (level.excluded !== null) return [];
     if (level.atH > clock.nowH) return [concern("level-after-now", "stop", about, at)];
     if (level.afterDoseH === null) return [concern("level-before-dose", "stop", about, at)];
     const last = given.filter((mark) => mark.countedMg > 0 && mark.atH < level.atH).at(-1);
     const reading = model?.products.find((product) => product.product === last?.product);
     if (!reading || !model) return [];
-    // Three absorption half-lives after the lag: 88 % of the dose has left the gut (definition of a half-life).
-    const absorbedH = reading.lag.value + (3 * Math.LN2) / reading.absorptionRate.value;
-    return level.afterDoseH < absorbedH && level.excluded === null
+    const distributedH = model.distributionEndH[reading.product] ?? 0;
+    if (distributedH > reading.lag.value && level.afterDoseH < distributedH) {
+      return [
+        concern("level-while-distributing", "check", about, { ...at, afterDoseH: level.afterDoseH, distributedH }),
+      ];
+    }
+    const absorbedH = reading.lag.value + absorbedAfter(reading.absorption);
+    return level.afterDoseH < absorbedH
       ? [concern("level-while-absorbing", "note", about, { ...at, afterDoseH: level.afterDoseH, absorbedH })]
       : [];
   });
 };
+
+/** h until about nine tenths are absorbed: three half-lives of a rate leave 12 % in the gut (definition); an even input ends. */
+function absorbedAfter(absorption: Absorption): number {
+  const halfLives = (ka: number) => (3 * Math.LN2) / ka;
+  switch (absorption.kind) {
+    case "first-order":
+      return halfLives(absorption.ka);
+    case "zero-order":
+      return absorption.duration;
+    case "mixed": {
+      const slow = absorption.slow.kind === "first-order" ? halfLives(absorption.slow.ka) : absorption.slow.duration;
+      return Math.max(halfLives(absorption.fastKa), absorption.slowLag + slow);
+    }
+  }
+}
