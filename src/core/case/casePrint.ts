@@ -6,9 +6,10 @@ import type { Case } from "./caseSchema.ts";
  */
 export const FIELD_ORDER: readonly string[] = (
   "format version id index recordVersion name invented label demo timeZone now at kind " +
-  "patient sex age height observations factors from to detail " +
+  "patient sex age height observations factors from to detail effect onset " +
   "medicine review status by on matrix molarMass sources title authors year place " +
-  "kinetics variability clearance volume apparent absorptionRate residualProportional residualAdditive " +
+  "kinetics variability clearance maximumRate halfMaximum volume exchange peripheralVolume apparent " +
+  "absorptionRate input duration fastFraction slowRate slowDuration slowLag saltFactor residualProportional residualAdditive " +
   "population products product form release strengths concentration divisible swallowWhole lag bioavailability " +
   "windows toxicFrom doseLimits sampling cautions formula text category " +
   "window quantity low high value unit given levels options lines amount start repeat every count clock days except " +

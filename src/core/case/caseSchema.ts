@@ -40,6 +40,17 @@ export const factorSchema = z.strictObject({
   from: instantSchema,
   to: instantSchema.optional(),
   detail: z.string().max(200),
+  /**
+   * What it does to this patient's kinetics while it lasts, as a factor on clearance (saturable: on Vmax) and on volume.
+   * With an onset the clearance gets there in daily steps; the user's own figure, printed as such.
+   */
+  effect: z
+    .strictObject({
+      clearance: z.number().min(0.05).max(20),
+      volume: z.number().min(0.2).max(5).optional(),
+      onset: quantityIn("d").optional(),
+    })
+    .optional(),
 });
 
 export const patientSchema = z.strictObject({
@@ -99,5 +110,6 @@ export type Case = z.infer<typeof caseSchema>;
 export type Patient = z.infer<typeof patientSchema>;
 export type Observation = z.infer<typeof observationSchema>;
 export type Level = z.infer<typeof levelSchema>;
+export type Factor = z.infer<typeof factorSchema>;
 export type Option = z.infer<typeof optionSchema>;
 export type TargetWindow = z.infer<typeof windowSchema>;

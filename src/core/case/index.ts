@@ -9,6 +9,7 @@ export {
   CASE_VERSION,
   type Case,
   caseSchema,
+  type Factor,
   factorSchema,
   LEVEL_UNITS,
   type Level,

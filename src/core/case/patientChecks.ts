@@ -2,7 +2,7 @@ import { ageQuestion, creatinineQuestion, type Doubt, heightQuestion, weightQues
 import { type Issue, issue } from "../result/index.ts";
 import { instantMs } from "../time/index.ts";
 import { quantityConvert } from "../units/index.ts";
-import type { Observation, Patient } from "./caseSchema.ts";
+import type { Factor, Observation, Patient } from "./caseSchema.ts";
 import { duplicateIds } from "./duplicateIds.ts";
 
 type Path = readonly (string | number)[];
@@ -18,11 +18,24 @@ export function patientChecks({ age, height, observations, factors }: Patient): 
   observations.forEach((each, i) => {
     issues.push(...observationIssues(each, ["patient", "observations", i, "quantity", "value"]));
   });
-  factors.forEach(({ from, to }, i) => {
-    if (to !== undefined && instantMs(to) < instantMs(from)) {
-      issues.push(issue("factor-order", { from, to }, ["patient", "factors", i, "to"]));
-    }
+  factors.forEach((factor, i) => {
+    issues.push(...factorIssues(factor, ["patient", "factors", i]));
   });
+  return issues;
+}
+
+/** Ours: slower than any known enzyme induction; and one step a day is worked out for each day of it. */
+const LONGEST_ONSET_D = 365;
+
+function factorIssues({ from, to, effect }: Factor, path: Path): Issue[] {
+  const issues: Issue[] = [];
+  const lasts = to === undefined ? Number.POSITIVE_INFINITY : instantMs(to) - instantMs(from);
+  if (lasts < 0) issues.push(issue("factor-order", { from, to }, [...path, "to"]));
+  if (effect && lasts === 0) issues.push(issue("factor-effect-empty", { from }, [...path, "to"]));
+  const onset = effect?.onset?.value;
+  if (onset !== undefined && !(onset > 0 && onset <= LONGEST_ONSET_D)) {
+    issues.push(issue("factor-onset", { found: onset, most: LONGEST_ONSET_D }, [...path, "effect", "onset", "value"]));
+  }
   return issues;
 }
 

@@ -37,6 +37,12 @@ export function formulaEvaluate(
   return succeed({ value, inputs });
 }
 
+/** The covariates a formula uses, each once, in order of appearance; none for a formula that can't be read. */
+export function formulaCovariates(formula: string): readonly CovariateName[] {
+  const read = formulaRead(formula);
+  return read.ok ? namesIn(read.value) : [];
+}
+
 function namesIn(node: MathNode): CovariateName[] {
   const names = new Set<CovariateName>();
   node.traverse((each, _path, parent) => {

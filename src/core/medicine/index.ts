@@ -2,15 +2,19 @@
 
 export { type FormulaInput, formulaEvaluate } from "./covariateFormula.ts";
 export { COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
-export { doseMg, productDoseUnits } from "./doseMg.ts";
+export { covariatesOf } from "./covariatesOf.ts";
+export { doseLabelledMg, doseMg, productDoseUnits } from "./doseMg.ts";
+export { BASES, type Basis, type Figure, type Formula } from "./figureSchema.ts";
 export { FORMULA_FUNCTIONS, formulaFaults } from "./formulaRead.ts";
+export {
+  type Kinetics,
+  type KineticsFormula,
+  type KineticsFormulaName,
+  kineticsFormulas,
+  kineticsSchema,
+} from "./kineticsKinds.ts";
 export { medicineParse, recordIssues } from "./medicineParse.ts";
 export {
-  BASES,
-  type Basis,
-  type Figure,
-  type Formula,
-  kineticsSchema,
   type MedicineRecord,
   type Product,
   productSchema,
@@ -20,6 +24,7 @@ export {
   sourceSchema,
 } from "./medicineRecord.ts";
 export { medicineRecordSchema } from "./medicineRecordSchema.ts";
+export { productAbsorption } from "./productAbsorption.ts";
 export { productOf } from "./productOf.ts";
 export { windowChecks } from "./recordChecks.ts";
 export { type RecordFigure, recordFigures, unverifiedFigures } from "./recordFigures.ts";

@@ -1,17 +1,12 @@
 import { z } from "zod";
-import { quantityIn, UNIT_CODES } from "../units/index.ts";
+import { quantityIn } from "../units/index.ts";
+import { figureSchema, provenance } from "./figureSchema.ts";
+import { kineticsSchema } from "./kineticsKinds.ts";
 
 /**
  * A medicine record: kinetics, products, windows and cautions of one medicine, each figure with its source and basis.
  * The schema refuses a figure without one.
  */
-
-/** How a figure is known. `invented` is allowed only in a record marked `invented`. */
-export const BASES = ["seen", "memory", "common practice", "invented"] as const;
-export type Basis = (typeof BASES)[number];
-
-/** Every figure and every statement names an entry of the record's `sources` and the basis on which it is known. */
-const provenance = { source: z.string().min(1), basis: z.enum(BASES), note: z.string().optional() };
 
 export const sourceSchema = z.strictObject({
   title: z.string().min(1),
@@ -20,25 +15,22 @@ export const sourceSchema = z.strictObject({
   place: z.string().optional(),
 });
 
-const figureSchema = z.strictObject({ value: z.number(), unit: z.enum(UNIT_CODES), ...provenance });
-/** A formula over the patient's covariates; names allowed in it are listed in core/medicine/covariates.ts. */
-const formulaSchema = z.strictObject({
-  formula: z.string().min(1).max(400),
-  unit: z.enum(["L/h", "L"]),
-  ...provenance,
-});
 const statementSchema = z.strictObject({ text: z.string().min(1), ...provenance });
 const cautionSchema = z.strictObject({ text: z.string().min(1), category: z.string().min(1), ...provenance });
 
 /** One member a model kind; a new kind adds one member here. */
-const oneCompartmentOralSchema = z.strictObject({
-  kind: z.literal("one-compartment-oral"),
-  clearance: formulaSchema,
-  volume: formulaSchema,
-  /** true: the figures are CL/F and V/F, so bioavailability is already inside them and products state 1. */
-  apparent: z.boolean(),
-});
-export const kineticsSchema = z.discriminatedUnion("kind", [oneCompartmentOralSchema]);
+/** How a product is taken up where a single first-order rate does not say it. */
+const productInputSchema = z.discriminatedUnion("kind", [
+  z.strictObject({ kind: z.literal("zero-order"), duration: figureSchema }),
+  /** A fast part (by `absorptionRate`) and a slow one, by a rate or over a duration: exactly one of the two. */
+  z.strictObject({
+    kind: z.literal("mixed"),
+    fastFraction: figureSchema,
+    slowRate: figureSchema.optional(),
+    slowDuration: figureSchema.optional(),
+    slowLag: figureSchema,
+  }),
+]);
 
 export const productSchema = z.strictObject({
   id: z.string().min(1).max(64),
@@ -52,7 +44,11 @@ export const productSchema = z.strictObject({
   concentration: figureSchema.optional(),
   divisible: z.enum(["whole", "half", "unknown"]),
   swallowWhole: z.boolean(),
-  absorptionRate: figureSchema, // ka, /h
+  /** ka, /h; of the fast part where the input is mixed. Absent only where the input is zero-order. */
+  absorptionRate: figureSchema.optional(),
+  input: productInputSchema.optional(),
+  /** mg of the active moiety in 1 mg as the product is labelled; 1 when absent. */
+  saltFactor: figureSchema.optional(),
   lag: figureSchema, // h
   bioavailability: figureSchema, // 1
 });
@@ -87,6 +83,8 @@ export const recordShapeSchema = z.strictObject({
   /** Between-patient and residual variability, as published; shown, and used once levels adjust the prediction. */
   variability: z.strictObject({
     clearance: figureSchema.optional(),
+    maximumRate: figureSchema.optional(),
+    halfMaximum: figureSchema.optional(),
     volume: figureSchema.optional(),
     absorptionRate: figureSchema.optional(),
     residualProportional: figureSchema.optional(),
@@ -108,7 +106,5 @@ export const recordShapeSchema = z.strictObject({
 
 export type MedicineRecord = z.infer<typeof recordShapeSchema>;
 export type Product = z.infer<typeof productSchema>;
-export type Figure = z.infer<typeof figureSchema>;
 export type Source = z.infer<typeof sourceSchema>;
-export type Formula = z.infer<typeof formulaSchema>;
 export type RecordWindow = z.infer<typeof recordWindowSchema>;

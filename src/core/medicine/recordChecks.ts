@@ -1,6 +1,8 @@
 import type { UnitCode } from "../units/index.ts";
+import type { Figure } from "./figureSchema.ts";
 import { formulaFaults } from "./formulaRead.ts";
-import type { Figure, MedicineRecord, Product } from "./medicineRecord.ts";
+import { kineticsFormulas } from "./kineticsKinds.ts";
+import type { MedicineRecord, Product } from "./medicineRecord.ts";
 
 /** A fault found across fields, where the shape alone is right. */
 export interface RecordFault {
@@ -19,6 +21,7 @@ interface Bounds {
 }
 
 const POSITIVE_MG: Bounds = { unit: "mg", above: 0 };
+const HOURS: Bounds = { unit: "h", above: 0 };
 const VARIATION: Bounds = { unit: "%", above: 0, most: 500 };
 
 /** Everything the shape can't say: sources named, units and ranges, products that make sense, formulas that can be read. */
@@ -58,6 +61,8 @@ function figureFaults(record: MedicineRecord): RecordFault[] {
   return [
     ...boundsFaults(record.molarMass, { unit: "g/mol", above: 0 }, ["molarMass"]),
     ...boundsFaults(v.clearance, VARIATION, ["variability", "clearance"]),
+    ...boundsFaults(v.maximumRate, VARIATION, ["variability", "maximumRate"]),
+    ...boundsFaults(v.halfMaximum, VARIATION, ["variability", "halfMaximum"]),
     ...boundsFaults(v.volume, VARIATION, ["variability", "volume"]),
     ...boundsFaults(v.absorptionRate, VARIATION, ["variability", "absorptionRate"]),
     ...boundsFaults(v.residualProportional, VARIATION, ["variability", "residualProportional"]),
@@ -91,10 +96,36 @@ function productFaults(product: Product, isApparent: boolean, path: Path): Recor
     ...faults,
     ...product.strengths.flatMap((each, i) => boundsFaults(each, POSITIVE_MG, [...path, "strengths", i])),
     ...boundsFaults(product.concentration, { unit: "mg/mL", above: 0 }, [...path, "concentration"]),
-    ...boundsFaults(product.absorptionRate, { unit: "/h", above: 0 }, [...path, "absorptionRate"]),
+    ...inputFaults(product, path),
+    ...boundsFaults(product.saltFactor, { unit: "1", above: 0, most: 1 }, [...path, "saltFactor"]),
     ...boundsFaults(product.lag, { unit: "h", least: 0 }, [...path, "lag"]),
     ...boundsFaults(product.bioavailability, bioavailability, [...path, "bioavailability"]),
   ];
+}
+
+/** An absorption rate where something is absorbed by it and nowhere else; a mixed input's slow part in one way. */
+function inputFaults(product: Product, path: Path): RecordFault[] {
+  const { absorptionRate, input } = product;
+  const isZeroOrder = input?.kind === "zero-order";
+  const at = (name: string): Path => [...path, "input", name];
+  const faults: RecordFault[] = boundsFaults(absorptionRate, { unit: "/h", above: 0 }, [...path, "absorptionRate"]);
+  if ((absorptionRate === undefined) !== isZeroOrder) {
+    faults.push({ code: "record-absorption-rate", path, data: { product: product.name, isZeroOrder } });
+  }
+  if (input?.kind === "zero-order") faults.push(...boundsFaults(input.duration, HOURS, at("duration")));
+  if (input?.kind === "mixed") {
+    if ((input.slowRate === undefined) === (input.slowDuration === undefined)) {
+      const hasBoth = input.slowRate !== undefined;
+      faults.push({ code: "record-slow-part", path: [...path, "input"], data: { product: product.name, hasBoth } });
+    }
+    faults.push(
+      ...boundsFaults(input.fastFraction, { unit: "1", least: 0, most: 1 }, at("fastFraction")),
+      ...boundsFaults(input.slowRate, { unit: "/h", above: 0 }, at("slowRate")),
+      ...boundsFaults(input.slowDuration, HOURS, at("slowDuration")),
+      ...boundsFaults(input.slowLag, { unit: "h", least: 0 }, at("slowLag")),
+    );
+  }
+  return faults;
 }
 
 function windowFaults(record: MedicineRecord): RecordFault[] {
@@ -119,10 +150,8 @@ export function windowChecks(
 }
 
 function formulaChecks(record: MedicineRecord): RecordFault[] {
-  return (["clearance", "volume"] as const).flatMap((name) => {
-    const { formula, unit } = record.kinetics[name];
+  return kineticsFormulas(record).flatMap(({ name, unit: allowed, formula: { formula, unit } }) => {
     const path = ["kinetics", name, "formula"];
-    const allowed = name === "clearance" ? "L/h" : "L";
     const unitFaults: RecordFault[] =
       unit === allowed
         ? []

@@ -1,4 +1,6 @@
-import type { Basis, MedicineRecord } from "./medicineRecord.ts";
+import type { Basis, Figure } from "./figureSchema.ts";
+import { kineticsFormulas } from "./kineticsKinds.ts";
+import type { MedicineRecord } from "./medicineRecord.ts";
 
 /** One figure of a record, wherever it stands: what the reader may ask the source of. */
 export interface RecordFigure {
@@ -12,33 +14,34 @@ export interface RecordFigure {
 const TRUST: readonly Basis[] = ["seen", "common practice", "memory", "invented"];
 
 /**
- * The figures of a record, in its own order: molar mass, clearance, volume, variability, each product's content
- * (its strengths together count as one), absorption rate, lag and bioavailability, windows and the toxic limit.
+ * The figures of a record, in its own order: molar mass, the formulas of its kinetics, variability, each product's content
+ * (its strengths together count as one), absorption rate, input, salt factor, lag and bioavailability, windows and the toxic limit.
  * Statements (dose limits, sampling, cautions, population) are not figures.
  */
 export function recordFigures(record: MedicineRecord): RecordFigure[] {
-  const { kinetics, variability } = record;
-  const figures: RecordFigure[] = [
-    { path: ["molarMass"], ...provenance(record.molarMass) },
-    { path: ["kinetics", "clearance"], ...provenance(kinetics.clearance) },
-    { path: ["kinetics", "volume"], ...provenance(kinetics.volume) },
-  ];
-  for (const [name, figure] of Object.entries(variability)) {
-    if (figure) figures.push({ path: ["variability", name], ...provenance(figure) });
-  }
+  const figures: RecordFigure[] = [{ path: ["molarMass"], ...provenance(record.molarMass) }];
+  const add = (path: RecordFigure["path"], figure: Omit<Figure, "value" | "unit"> | undefined): void => {
+    if (figure) figures.push({ path, ...provenance(figure) });
+  };
+  for (const { name, formula } of kineticsFormulas(record)) add(["kinetics", name], formula);
+  for (const [name, figure] of Object.entries(record.variability)) add(["variability", name], figure);
   record.products.forEach((product, i) => {
     const at = (...rest: (string | number)[]) => ["products", i, ...rest];
     const leastKnown = [...product.strengths].sort((a, b) => TRUST.indexOf(b.basis) - TRUST.indexOf(a.basis))[0];
-    if (leastKnown) figures.push({ path: at("strengths"), ...provenance(leastKnown) });
-    if (product.concentration) figures.push({ path: at("concentration"), ...provenance(product.concentration) });
-    figures.push({ path: at("absorptionRate"), ...provenance(product.absorptionRate) });
-    figures.push({ path: at("lag"), ...provenance(product.lag) });
-    figures.push({ path: at("bioavailability"), ...provenance(product.bioavailability) });
+    add(at("strengths"), leastKnown);
+    add(at("concentration"), product.concentration);
+    add(at("absorptionRate"), product.absorptionRate);
+    for (const [name, figure] of Object.entries(product.input ?? {})) {
+      if (typeof figure === "object") add(at("input", name), figure);
+    }
+    add(at("saltFactor"), product.saltFactor);
+    add(at("lag"), product.lag);
+    add(at("bioavailability"), product.bioavailability);
   });
   record.windows.forEach((window, i) => {
-    figures.push({ path: ["windows", i], ...provenance(window) });
+    add(["windows", i], window);
   });
-  if (record.toxicFrom) figures.push({ path: ["toxicFrom"], ...provenance(record.toxicFrom) });
+  add(["toxicFrom"], record.toxicFrom);
   return figures;
 }
 

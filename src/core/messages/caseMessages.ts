@@ -38,6 +38,10 @@ export const caseMessages: Readonly<Record<string, MessageFunction>> = {
 
   "id-twice": ({ id }) => `The id ${said(id)} is used twice in one list.`,
   "factor-order": ({ from, to }) => `A factor ends at ${String(to)}, before it begins at ${String(from)}.`,
+  "factor-effect-empty": ({ from }) =>
+    `A factor with an effect ends at ${String(from)}, the moment it begins: it must last, or be taken away.`,
+  "factor-onset": ({ found, most }) =>
+    `An onset of ${String(found)} days can't be: write a number above 0 and up to ${String(most)}, or none for an effect that is there at once.`,
   "albumin-not-positive": ({ found, unit }) =>
     `An albumin of ${String(found)} ${String(unit)} is impossible: it must be above 0.`,
   "level-not-positive": ({ found, unit }) =>

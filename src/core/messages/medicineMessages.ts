@@ -62,7 +62,17 @@ const FIGURES: Readonly<Record<string, string>> = {
   molarMass: "molar mass",
   clearance: "clearance",
   volume: "volume",
+  exchange: "exchange between the compartments",
+  peripheralVolume: "volume of the second compartment",
+  maximumRate: "highest rate of elimination",
+  halfMaximum: "concentration at half the highest rate",
   absorptionRate: "absorption rate",
+  duration: "duration of the input",
+  fastFraction: "fraction absorbed fast",
+  slowRate: "absorption rate of the slow part",
+  slowDuration: "duration of the slow part",
+  slowLag: "lag of the slow part",
+  saltFactor: "active part of the labelled amount",
   lag: "lag",
   bioavailability: "bioavailability",
   strengths: "strength",
@@ -111,6 +121,12 @@ export const medicineMessages: Readonly<Record<string, MessageFunction>> = {
     isLiquid
       ? `The liquid ${said(product)} must state a concentration and no strengths.`
       : `The product ${said(product)} must state at least one strength and no concentration.`,
+  "record-absorption-rate": ({ product, isZeroOrder }) =>
+    isZeroOrder
+      ? `The product ${said(product)} is absorbed evenly over a duration and must state no absorption rate.`
+      : `The product ${said(product)} must state an absorption rate.`,
+  "record-slow-part": ({ product, hasBoth }) =>
+    `The slow part of the product ${said(product)} states ${hasBoth ? "both a rate and a duration" : "neither a rate nor a duration"}: it must state exactly one.`,
   "record-duplicate": (data) => `${at(data)} stands there a second time (${String(data.found)}).`,
   "record-name-turns": (data) => `${at(data)} holds a hidden mark that turns the direction of text.`,
   "record-ages": ({ ageMin, ageMax }) =>

@@ -39,6 +39,7 @@ export const UNIT_CODES = [
   "nmol/L",
   // flow
   "L/h",
+  "mg/h",
   "mL/min",
   "L/h/kg",
   "L/kg",

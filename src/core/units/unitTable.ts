@@ -8,6 +8,7 @@ export type UnitDimension =
   | "mass concentration"
   | "molar concentration"
   | "flow"
+  | "mass rate"
   | "flow per mass"
   | "volume per mass"
   | "rate"
@@ -56,6 +57,7 @@ export const UNIT_TABLE: Readonly<Record<UnitCode, UnitEntry>> = {
   "nmol/L": { dimension: "molar concentration", factor: 1n },
   "L/h": { dimension: "flow", factor: 1_000n },
   "mL/min": { dimension: "flow", factor: 60n },
+  "mg/h": { dimension: "mass rate", factor: 1n },
   "L/h/kg": { dimension: "flow per mass", factor: 1n },
   "L/kg": { dimension: "volume per mass", factor: 1n },
   "/h": { dimension: "rate", factor: 1n },

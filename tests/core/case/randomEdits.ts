@@ -69,6 +69,19 @@ function argumentsFor(
     kind: "weight" as const,
     quantity: { value: 40 + (c % 60), unit: "kg" as const },
   };
+  const newFactor = {
+    kind: of(["smoking", "interacting-medicine", "other"] as const, b) ?? ("other" as const),
+    from: at(c),
+    ...(d % 3 === 0 && { to: at(c + 1 + (e % 90)) }),
+    detail: `factor ${d}`,
+    ...(d % 2 && {
+      effect: {
+        clearance: 0.5 + (e % 4) / 2,
+        ...(e % 2 && { volume: 1.1 }),
+        ...(f % 2 && { onset: { value: 1 + (f % 14), unit: "d" as const } }),
+      },
+    }),
+  };
   const made: Picked = {
     caseRename: { label: `label ${a}` },
     notesSet: { notes: `notes ${a}` },
@@ -82,6 +95,11 @@ function argumentsFor(
     ...(observation && {
       observationChange: { observation: { ...newObservation, id: observation.id } },
       observationRemove: { id: observation.id },
+    }),
+    ...(value.patient.factors.length < 20 && { factorAdd: { factor: newFactor } }),
+    ...(value.patient.factors.length > 0 && {
+      factorChange: { index: c % value.patient.factors.length, factor: newFactor },
+      factorRemove: { index: c % value.patient.factors.length },
     }),
     medicineSet:
       a % 2

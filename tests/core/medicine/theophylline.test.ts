@@ -1,18 +1,17 @@
 import { describe, expect, it } from "vitest";
 import { timeOfPeak } from "../../../src/core/kinetics/index.ts";
-import { formulaEvaluate, productOf, recordById } from "../../../src/core/medicine/index.ts";
+import { formulaEvaluate, kineticsFormulas, productOf, recordById } from "../../../src/core/medicine/index.ts";
 
 const record = recordById("theophylline")!;
 
 /** The typical patient whose actual weight is the ideal weight. */
 function typical(productId: string) {
   const covariates = { weight: 70, idealWeight: 70 };
-  const cl = formulaEvaluate(record.kinetics.clearance.formula, covariates);
-  const v = formulaEvaluate(record.kinetics.volume.formula, covariates);
-  if (!cl.ok || !v.ok) throw new Error("formulas");
+  const [cl, v] = kineticsFormulas(record).map(({ formula }) => formulaEvaluate(formula.formula, covariates));
+  if (!cl?.ok || !v?.ok) throw new Error("formulas");
   const { absorptionRate, lag, bioavailability } = productOf(record, productId);
   return {
-    ka: absorptionRate.value,
+    ka: absorptionRate?.value ?? Number.NaN,
     ke: cl.value.value / v.value.value,
     volume: v.value.value,
     bioavailability: bioavailability.value,

@@ -3,6 +3,7 @@ import { caseValidate } from "../caseParse.ts";
 import type { Case } from "../caseSchema.ts";
 import { caseEdits } from "./caseEdits.ts";
 import { doseEdits } from "./doseEdits.ts";
+import { factorEdits } from "./factorEdits.ts";
 import { levelEdits } from "./levelEdits.ts";
 import { lineEdits } from "./lineEdits.ts";
 import { medicineEdits } from "./medicineEdits.ts";
@@ -15,6 +16,7 @@ const edits = {
   ...caseEdits,
   ...patientEdits,
   ...observationEdits,
+  ...factorEdits,
   ...medicineEdits,
   ...lineEdits,
   ...doseEdits,
