@@ -3,6 +3,7 @@ import { caseMessages } from "./caseMessages.ts";
 import { entryMessages } from "./entryMessages.ts";
 import { medicineMessages } from "./medicineMessages.ts";
 import type { MessageFunction } from "./messageFunction.ts";
+import { noncompartmentalMessages } from "./noncompartmentalMessages.ts";
 import { numberMessages } from "./numberMessages.ts";
 import { patientMessages } from "./patientMessages.ts";
 import { regimenMessages } from "./regimenMessages.ts";
@@ -15,6 +16,7 @@ const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...medicineMessages,
   ...caseMessages,
   ...entryMessages,
+  ...noncompartmentalMessages,
   ...numberMessages,
   ...patientMessages,
   ...regimenMessages,
