@@ -1,5 +1,4 @@
 import { writeFileSync } from "node:fs";
-import { cpus } from "node:os";
 import { bench, describe } from "vitest";
 import { type Dose, type OralKinetics, profile } from "../../src/core/kinetics/index.ts";
 import { timeInTurn } from "./timeInTurn.ts";
@@ -91,7 +90,7 @@ console.info(`profile, 100 to 100,000 doses: the cost of each grows ${growthRati
 if (process.env.WRITE_RESULTS === "1") {
   const results = {
     date: new Date().toISOString().slice(0, 10),
-    machine: `${cpus()[0]?.model ?? "unknown"}, Node ${process.version}`,
+    machine: `${process.platform} ${process.arch}, Node ${process.version}`,
     ratios,
     fasterThanDirectSum: fasterThanDirect,
     growth,
