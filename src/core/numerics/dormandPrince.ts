@@ -15,6 +15,9 @@ export class DormandPrince {
   readonly result: Float64Array;
   /** The estimated error of each of its components. */
   readonly error: Float64Array;
+  /** dy/dt at the start and at the end of the last step. */
+  readonly startChange: Float64Array;
+  readonly endChange: Float64Array;
   readonly #derivative: Derivative;
   readonly #stage: readonly Float64Array[];
   readonly #at: Float64Array;
@@ -25,25 +28,31 @@ export class DormandPrince {
     this.error = new Float64Array(size);
     this.#at = new Float64Array(size);
     this.#stage = WEIGHTS.map(() => new Float64Array(size));
+    this.startChange = this.#stage[0]!;
+    this.endChange = this.#stage[LAST]!;
   }
 
   /** From the state y over h; y is left as it is. */
   step(y: Float64Array, h: number): void {
     const { result, error } = this;
-    const at = this.#at;
-    for (const [s, row] of WEIGHTS.entries()) {
-      const target = s === WEIGHTS.length - 1 ? result : at;
-      for (let i = 0; i < y.length; i++) {
-        let sum = 0;
-        for (let j = 0; j < s; j++) sum += row[j]! * this.#stage[j]![i]!;
-        target[i] = y[i]! + h * sum;
-      }
-      this.#derivative(target, this.#stage[s]!);
+    const stage = this.#stage;
+    for (let s = 0; s <= LAST; s++) {
+      const target = s === LAST ? result : this.#at;
+      this.#combine(WEIGHTS[s]!, s, target);
+      for (let i = 0; i < y.length; i++) target[i] = y[i]! + h * target[i]!;
+      this.#derivative(target, stage[s]!);
     }
-    for (let i = 0; i < y.length; i++) {
-      let sum = 0;
-      for (const [s, weight] of ERROR.entries()) sum += weight * this.#stage[s]![i]!;
-      error[i] = h * sum;
+    this.#combine(ERROR, LAST + 1, error);
+    for (let i = 0; i < y.length; i++) error[i] = h * error[i]!;
+  }
+
+  /** Σ weightⱼ·stageⱼ of the first `count` stages. */
+  #combine(weights: readonly number[], count: number, target: Float64Array): void {
+    target.fill(0);
+    for (let j = 0; j < count; j++) {
+      const weight = weights[j]!;
+      const stage = this.#stage[j]!;
+      for (let i = 0; i < target.length; i++) target[i] = target[i]! + weight * stage[i]!;
     }
   }
 }
@@ -58,6 +67,7 @@ const WEIGHTS: readonly (readonly number[])[] = [
   [9017 / 3168, -355 / 33, 46732 / 5247, 49 / 176, -5103 / 18656],
   [35 / 384, 0, 500 / 1113, 125 / 192, -2187 / 6784, 11 / 84],
 ];
+const LAST = WEIGHTS.length - 1;
 
 /** Fifth-order minus fourth-order weights. */
 const ERROR: readonly number[] = [71 / 57600, 0, -71 / 16695, 71 / 1920, -17253 / 339200, 22 / 525, -1 / 40];

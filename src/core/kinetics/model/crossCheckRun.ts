@@ -4,23 +4,30 @@ import { type ModelDisposition, type ModelHistory, modelHistoryCheck } from "./m
 import type { ModelKind } from "./modelKind.ts";
 
 /** Error allowed in one step: of each amount, and of everything given so far. */
-const RELATIVE = 1e-11;
-const OF_ALL_GIVEN = 1e-13;
+const RELATIVE = 1e-9;
+const OF_ALL_GIVEN = 1e-12;
 /** No step is longer than this part of the time between two events. */
 const LONGEST_STEP = 1 / 16;
-/** A depot with less than this part of everything given is emptied at once: its fast rate then no longer holds up the steps. */
-const EMPTY_BELOW = 1e-17;
+/**
+ * A depot with less than this part of everything given is emptied at once: its fast rate then no longer holds up the steps. Above the
+ * error allowed, under which a depot never sinks.
+ */
+const EMPTY_BELOW = 1e-11;
 const MOST_STEPS = 1_000_000;
 /** Step control, as usual for a method of this order. */
 const SAFETY = 0.9;
 const LEAST_CHANGE = 0.2;
 const MOST_CHANGE = 5;
 
-/** A step on its way past: times h, from `at` over `h`. */
+/** A step on its way past: times h, from `at` over `h`; levels mg/L, slopes mg/L per h. */
 export interface CrossCheckStep {
   readonly at: number;
   readonly h: number;
-  /** The level u h into the step, mg/L, and its slope, mg/L per h; each call is a step of its own from the start of this one. */
+  readonly startLevel: number;
+  readonly endLevel: number;
+  readonly startSlope: number;
+  readonly endSlope: number;
+  /** u h into the step; each call is a step of its own from the start of this one. */
   levelAt(u: number): number;
   slopeAt(u: number): number;
 }
@@ -34,7 +41,7 @@ export class CrossCheckRun {
   readonly #kind: ModelKind<ModelDisposition>;
   readonly #solver: DormandPrince;
   readonly #trial: DormandPrince;
-  readonly #change: Float64Array;
+  readonly #ka: Float64Array;
   /** mg by depot, mg by compartment, mg·h/L. */
   readonly #y: Float64Array;
   /** Index of the first compartment, and of the area. */
@@ -55,7 +62,7 @@ export class CrossCheckRun {
     this.#area = this.#body + this.#kind.compartments;
     const size = this.#area + 1;
     this.#y = new Float64Array(size);
-    this.#change = new Float64Array(size);
+    this.#ka = Float64Array.from(this.#script.depots, ({ ka }) => ka);
     const derivative = (y: Float64Array, change: Float64Array) => this.#derivative(y, change);
     this.#solver = new DormandPrince(size, derivative);
     this.#trial = new DormandPrince(size, derivative);
@@ -111,8 +118,8 @@ export class CrossCheckRun {
 
   #derivative(y: Float64Array, change: Float64Array): void {
     let input = this.#mgPerH;
-    for (const [i, { ka }] of this.#script.depots.entries()) {
-      const absorbed = ka * y[i]!;
+    for (let i = 0; i < this.#body; i++) {
+      const absorbed = this.#ka[i]! * y[i]!;
       change[i] = -absorbed;
       input += absorbed;
     }
@@ -170,18 +177,24 @@ export class CrossCheckRun {
   }
 
   #show(h: number, seen: (step: CrossCheckStep) => void): void {
-    const stateAt = (u: number) => {
-      this.#trial.step(this.#y, u);
-      return this.#trial.result;
-    };
     const { volume } = this.#disposition;
+    const body = this.#body;
+    const trial = this.#trial;
+    const { result, startChange, endChange } = this.#solver;
     seen({
       at: this.#time,
       h,
-      levelAt: (u) => stateAt(u)[this.#body]! / volume,
+      startLevel: this.#y[body]! / volume,
+      endLevel: result[body]! / volume,
+      startSlope: startChange[body]! / volume,
+      endSlope: endChange[body]! / volume,
+      levelAt: (u) => {
+        trial.step(this.#y, u);
+        return trial.result[body]! / volume;
+      },
       slopeAt: (u) => {
-        this.#derivative(stateAt(u), this.#change);
-        return this.#change[this.#body]! / volume;
+        trial.step(this.#y, u);
+        return trial.endChange[body]! / volume;
       },
     });
   }

@@ -41,7 +41,10 @@ export function modelExposure(history: ModelHistory, from: number, to: number, w
   if (plain !== undefined) return historyExposure(plain.disposition, plain.courses, from, to, window);
   exposureArgumentsCheck(from, to, window);
   const tally = new StretchTally(window);
-  modelPlanRun(plan, from).go({ at: from, rest: 0 }, { at: to, rest: 0 }, (seen) => tally.add(seen));
+  const run = modelPlanRun(plan, from);
+  // Should the volume change at this very instant, the level before it is one of the two.
+  tally.level(run.level, from);
+  run.go({ at: from, rest: 0 }, { at: to, rest: 0 }, (seen) => tally.add(seen));
   const { peak, timeOfPeak, lowest, timeOfLowest, auc } = tally;
   return { peak, timeOfPeak, lowest, timeOfLowest, auc, average: auc / (to - from), ...tally.hours(to - from) };
 }

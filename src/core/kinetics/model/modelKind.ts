@@ -13,7 +13,8 @@ export interface ModelKind<D extends { readonly kind: string }> {
   readonly compartments: 1 | 2;
   /** Throws a RangeError naming the figure out of range. */
   check(name: string, disposition: D): void;
-  stretch(disposition: D, body: Float64Array, inflow: Inflow): Stretch;
+  /** From given amounts, over at most `length` h. */
+  stretch(disposition: D, body: Float64Array, inflow: Inflow, length: number): Stretch;
   /**
    * The kind as plain differential equations, for the cross-check: writes dx/dt of the compartments in mg/h, given x in mg from index
    * `at` on and what flows into the first of them. Written from the definition, not from the closed forms.

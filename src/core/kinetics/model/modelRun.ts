@@ -76,6 +76,11 @@ export class ModelRun {
     return amount;
   }
 
+  /** mg/L, just before whatever happens now. */
+  get level(): number {
+    return this.#kind.stretch(this.#disposition, this.#body, this.#inflow(), 0).levelAt(0);
+  }
+
   /** Puts given amounts in place of the present ones. */
   bodySet(body: Float64Array): void {
     this.#body = body;
@@ -98,7 +103,7 @@ export class ModelRun {
       const length = nextAt - at + (nextRest - rest);
       if (length > 0) {
         const inflow = this.#inflow();
-        const stretch = this.#kind.stretch(this.#disposition, this.#body, inflow);
+        const stretch = this.#kind.stretch(this.#disposition, this.#body, inflow, length);
         visit?.({ stretch, inflow, at, rest, nextAt, nextRest, length }, this);
         this.#advance(stretch, length);
       }

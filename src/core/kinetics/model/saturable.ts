@@ -76,8 +76,8 @@ export const saturable = {
     argumentAboveZero(`${name}.volume`, volume, "L");
     argumentAboveZero(`${name}.vmax / (km × volume)`, vmax / (km * volume), "/h");
   },
-  stretch: (disposition, body, inflow) =>
-    new SaturableStretch(saturationOf(disposition), disposition.volume, body[0]!, inflow),
+  stretch: (disposition, body, inflow, length) =>
+    new SaturableStretch(saturationOf(disposition), disposition.volume, body[0]!, inflow, length),
   equations: ({ vmax, km, volume }, input, x, change, at) => {
     const level = x[at]! / volume;
     change[at] = input - (vmax * level) / (km + level);

@@ -40,11 +40,17 @@ export interface SaturableSeries {
  * bₖ₊₁ = unit·(inflowₖ − vmax·eₖ)/(k + 1). The length is chosen so that each of the last three terms is below 1e-17 of the amount
  * at stake.
  * @param body mg, 0 or more
+ * @param hours how long the inflow lasts at most, above 0
  * @returns see SaturableSeries
  * Accuracy: relative 1e-15 of the amount at stake, rounding included.
  * Source: power-series method for differential equations (standard), derived in docs/methods/saturable-elimination.md.
  */
-export function saturableSeries({ vmax, half }: Saturation, body: number, inflow: SeriesInflow): SaturableSeries {
+export function saturableSeries(
+  { vmax, half }: Saturation,
+  body: number,
+  inflow: SeriesInflow,
+  hours: number,
+): SaturableSeries {
   const { ka, gut, rate } = inflow;
   const linearRate = vmax / half;
   const unit = 1 / Math.max(linearRate, ...ka);
@@ -66,7 +72,7 @@ export function saturableSeries({ vmax, half }: Saturation, body: number, inflow
     e[k + 1] = sum / total;
   }
   // What can be in the body at once: from a slow depot only what comes in about one time constant.
-  let atStake = body + rate / linearRate;
+  let atStake = body + rate * Math.min(hours, 1 / linearRate);
   for (let i = 0; i < ka.length; i++) atStake += gut[i]! * Math.min(1, ka[i]! / linearRate);
   let x = Number.POSITIVE_INFINITY;
   for (let k = TERMS - 2; k <= TERMS; k++) {

@@ -33,10 +33,12 @@ export class SaturableStretch implements Stretch {
   readonly #saturation: Saturation;
   readonly #volume: number;
   readonly #inflow: Inflow;
+  readonly #length: number;
   readonly #pieces: Piece[] = [];
   #last = 0;
 
-  constructor(saturation: Saturation, volume: number, body: number, inflow: Inflow) {
+  constructor(saturation: Saturation, volume: number, body: number, inflow: Inflow, length: number) {
+    this.#length = length;
     this.#saturation = saturation;
     this.#volume = volume;
     this.#inflow = inflow;
@@ -143,7 +145,7 @@ export class SaturableStretch implements Stretch {
     if (rate === 0 && atStake <= LINEAR_BELOW * this.#saturation.half) {
       return { start, end: Infinity, body, inflow, series: undefined, area, eliminated };
     }
-    const series = saturableSeries(this.#saturation, body, inflow);
+    const series = saturableSeries(this.#saturation, body, inflow, Math.max(0, this.#length - start));
     return { start, end: start + series.length, body, inflow, series, area, eliminated };
   }
 

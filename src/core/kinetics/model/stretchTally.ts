@@ -20,7 +20,7 @@ export class StretchTally {
   }
 
   /** One level. The earliest of equal ones stands. */
-  #level(level: number, timeH: number): void {
+  level(level: number, timeH: number): void {
     if (level > this.peak) {
       this.peak = level;
       this.timeOfPeak = timeH;
@@ -34,9 +34,9 @@ export class StretchTally {
   /** A stretch counts with both its ends: where the volume changes the level jumps, and both sides of the jump are levels. */
   add({ stretch, at, rest, nextAt, nextRest, length }: RunStretch): void {
     const turns = stretch.turns(length);
-    this.#level(stretch.levelAt(0), at + rest);
-    for (const turn of turns) this.#level(stretch.levelAt(turn), at + (rest + turn));
-    this.#level(stretch.levelAt(length), nextAt + nextRest);
+    this.level(stretch.levelAt(0), at + rest);
+    for (const turn of turns) this.level(stretch.levelAt(turn), at + (rest + turn));
+    this.level(stretch.levelAt(length), nextAt + nextRest);
     this.#area.add(stretch.areaTo(length));
     if (this.#window === undefined) return;
     const below = stretchHours(stretch, length, turns, this.#window.low, "below");
