@@ -13,11 +13,13 @@ function demo(name: string): Case {
 }
 
 describe("demo cases", () => {
-  it("are these two", () => {
-    expect(readdirSync(folder).sort()).toEqual(["adjustment.ebbline.json", "start.ebbline.json"]);
+  const names = ["adjustment", "kidney", "modified-release", "saturable", "start"];
+
+  it("are these five", () => {
+    expect(readdirSync(folder).sort()).toEqual(names.map((name) => `${name}.ebbline.json`));
   });
 
-  it.each(["adjustment", "start"])(
+  it.each(names)(
     "%s is marked as a demo, printed by casePrint, and holds the record as it is now",
     (name) => {
       const value = demo(name);
@@ -25,6 +27,7 @@ describe("demo cases", () => {
       expect(readFileSync(new URL(`${name}.ebbline.json`, folder), "utf8")).toBe(casePrint(value));
       // After a change of the record: node .ci/schema.mjs
       expect(value.medicine).toEqual(recordById(value.medicine.id));
+      expect(value.options.filter((each) => each.chosen)).toHaveLength(1);
     },
   );
 
@@ -43,9 +46,9 @@ describe("demo cases", () => {
     expect(Math.abs((clearance?.value ?? 0) - 52)).toBeLessThan(0.5);
   });
 
-  it("the start has no level, no dose given and two options, none chosen", () => {
+  it("the start has no level, no dose given and two options, the first chosen", () => {
     const value = demo("start");
     expect([value.levels, value.given]).toEqual([[], []]);
-    expect(value.options.map((each) => each.chosen)).toEqual([false, false]);
+    expect(value.options.map((each) => each.chosen)).toEqual([true, false]);
   });
 });
