@@ -1,4 +1,7 @@
 import adjustment from "../../demo-data/adjustment.ebbline.json";
+import kidney from "../../demo-data/kidney.ebbline.json";
+import modifiedRelease from "../../demo-data/modified-release.ebbline.json";
+import saturable from "../../demo-data/saturable.ebbline.json";
 import start from "../../demo-data/start.ebbline.json";
 import { derive } from "../core/analysis/index.ts";
 import { BUILT_IN_RECORDS } from "../core/medicine/index.ts";
@@ -28,7 +31,7 @@ export function compose(): Workbench {
     startWorker: () => new Worker(new URL("../shell/workers/analysis.worker.ts", import.meta.url), { type: "module" }),
     loadDerive: async () => derive,
   });
-  const demos = { start, adjustment };
+  const demos = { start, adjustment, modifiedRelease, saturable, kidney };
   return createWorkbench({ repository, runner, clock, newId, demos, builtInRecords: BUILT_IN_RECORDS });
 }
 

@@ -46,7 +46,9 @@ describe("kinetics that change on the clock", () => {
   });
 
   it("two events multiply while both last", () => {
-    const found = clearances(withFactors(inhibitor(), inhibitor({ from: "2026-03-04T08:00:00+00:00", effect: { clearance: 2 } })));
+    const found = clearances(
+      withFactors(inhibitor(), inhibitor({ from: "2026-03-04T08:00:00+00:00", effect: { clearance: 2 } })),
+    );
     expect(found.at(-1)![1]).toBe(usual);
   });
 
@@ -72,7 +74,10 @@ describe("kinetics that change on the clock", () => {
     const plain = derive(base);
     expect(found[3]!).toBeGreaterThan(
       modelProfile(
-        { dispositions: plain.typical!.dispositions, inputs: [{ absorption: product.absorption, bioavailability: 1, lag: 0, doses }] },
+        {
+          dispositions: plain.typical!.dispositions,
+          inputs: [{ absorption: product.absorption, bioavailability: 1, lag: 0, doses }],
+        },
         [70],
       )[0]!,
     );
