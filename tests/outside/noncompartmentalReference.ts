@@ -4,6 +4,7 @@ import {
   type LevelPoint,
   type NoncompartmentalOptions,
   noncompartmental,
+  type TerminalCandidate,
   terminalCandidates,
 } from "../../src/core/noncompartmental/index.ts";
 import { relativeError } from "./workedExample.ts";
@@ -86,11 +87,7 @@ export function referenceFaults({ points, dose, nca }: ReferenceSubject, toleran
   const logDown = analysed("linear-up-log-down", 0);
   const linear = analysed("linear", 0);
   const tied = analysed("linear-up-log-down", 1e-4);
-  const lines = (
-    name: string,
-    found: AfterOneDose["terminal"] | undefined,
-    wanted: Line,
-  ): [string, number, number][] => [
+  const lines = (name: string, found: TerminalCandidate | undefined, wanted: Line): [string, number, number][] => [
     [`${name}.n`, found?.indices.length ?? 0, wanted.n],
     [`${name}.tStart`, points[found?.indices[0] ?? -1]?.time ?? Number.NaN, wanted.tStart],
     [`${name}.tEnd`, points[found?.indices.at(-1) ?? -1]?.time ?? Number.NaN, wanted.tEnd],
@@ -99,7 +96,7 @@ export function referenceFaults({ points, dose, nca }: ReferenceSubject, toleran
     [`${name}.r2`, found?.rSquared ?? Number.NaN, wanted.r2],
     [`${name}.adjR2`, found?.adjustedRSquared ?? Number.NaN, wanted.adjR2],
   ];
-  const candidates = terminalCandidates(points) as readonly AfterOneDose["terminal"][];
+  const candidates = terminalCandidates(points);
   const { lambdaZ } = nca;
   const rows: [string, number, number | null][] = [
     ["cmax", logDown.cmax, nca.cmax],

@@ -30,12 +30,12 @@ export const noncompartmentalMessages: Readonly<Record<string, MessageFunction>>
   "nca-point-unknown": ({ count }) => `A point was picked that does not exist; there are ${number(count)}.`,
   "nca-level-zero-logged": ({ time }) =>
     `The level at ${hours(time)} is 0, which has no logarithm: leave it out of the terminal line.`,
-  "nca-terminal-few": ({ found, needed }) =>
-    `The terminal line has ${levels(found)} after the highest: it needs at least ${number(needed)}.`,
+  "nca-terminal-few": ({ found, needed, picked }) =>
+    `A terminal line needs at least ${levels(needed)}; ${picked ? `${number(found)} picked` : `after the highest there ${found === 1 ? "is" : "are"} ${number(found)}`}.`,
   "nca-terminal-before-peak": ({ time, peakTime }) =>
     `The level at ${hours(time)} lies before the highest, at ${hours(peakTime)}: it can't be on the terminal line.`,
   "nca-terminal-rises": ({ count, fromTime, toTime }) =>
-    `The ${number(count)} last levels, ${hours(fromTime)} to ${hours(toTime)}, do not fall: there is no half-life in them.`,
+    `The ${levels(count)} of the terminal line, ${hours(fromTime)} to ${hours(toTime)}, do not fall: there is no half-life in them.`,
   "nca-extrapolated-much": ({ share, limit }) =>
     `${percent(share)} of the area was not measured but carried on, more than ${percent(limit)}: clearance is uncertain.`,
   "nca-area-begins-late": ({ time }) =>

@@ -72,7 +72,9 @@ function chosenByFit(points: readonly LevelPoint[], tieWithin: number): Result<T
   const best = Math.max(...candidates.map((each) => each.adjustedRSquared));
   const found = candidates.findLast((each) => each.adjustedRSquared >= best - tieWithin);
   if (found) return succeed(found);
-  return fail(issue("nca-terminal-few", { found: points.length - 1 - peak, needed: FEWEST_POINTS }, ["terminal"]));
+  return fail(
+    issue("nca-terminal-few", { found: points.length - 1 - peak, needed: FEWEST_POINTS, picked: false }, ["terminal"]),
+  );
 }
 
 function chosenByUser(points: readonly LevelPoint[], choice: PointChoice): Result<TerminalCandidate> {
@@ -87,7 +89,9 @@ function chosenByUser(points: readonly LevelPoint[], choice: PointChoice): Resul
   const zero = indices.value.find((i) => points[i]!.value === 0);
   if (zero !== undefined) return zeroFault(points, zero);
   if (indices.value.length < FEWEST_POINTS) {
-    return fail(issue("nca-terminal-few", { found: indices.value.length, needed: FEWEST_POINTS }, ["terminal"]));
+    return fail(
+      issue("nca-terminal-few", { found: indices.value.length, needed: FEWEST_POINTS, picked: true }, ["terminal"]),
+    );
   }
   return succeed(candidate(points, indices.value));
 }
