@@ -1,3 +1,4 @@
+export { type AmountsOverTime, amountsOverTime } from "./amountsAt.ts";
 export type * from "./analysisTypes.ts";
 export { laneDoses } from "./caseDoses.ts";
 export { concentrationAt, hoursSinceDose } from "./concentrationAt.ts";

@@ -25,6 +25,8 @@ export const entryMessages: Readonly<Record<string, MessageFunction>> = {
   "dose-clock-list": ({ part }: Data) =>
     `"${String(part)}" is not a list of clock times: write them on the 24-hour clock, such as 08:00, 22:00.`,
   "dose-whole-number": ({ part }: Data) => `"${String(part)}" is not a whole number from 1 on.`,
+  "dose-share": ({ found }: Data) =>
+    `${String(found)} % of a dose can't be: write a share above 0 and below 100 %, such as 50 for half; nothing of it: mark it missed.`,
   "dose-taken-after-now": ({ at, now }: Data) =>
     `${String(at)} lies after the now line, ${String(now)}: it can't have been taken yet.`,
 };

@@ -149,6 +149,12 @@ export const doseWords = {
   takenAt: (clock: string, words: string) => `${words}: ${clock}`,
   change: "Change",
   otherTime: "taken at another time",
+  part: "vomited or partly taken",
+  share: "Share that counts",
+  shareHelp:
+    "Half taken: 50 %. Vomited soon after it was taken: what you judge stayed down. All of it lost: mark it missed.",
+  shareIs: (amount: string, whole: string) => `${amount} of ${whole} counts`,
+  partOf: (whole: string) => `part of ${whole}`,
   missed: "missed",
   takenWhen: "Taken at",
   takenAmount: "Amount taken",

@@ -2,6 +2,7 @@ export { benchWords } from "./benchWords.ts";
 export { CONCERN_CODES, type ConcernWords, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
 export { editLabel } from "./editWords.ts";
 export * from "./entryWords.ts";
+export { amountsWords, eventEffectWords, eventLine, eventName, eventWords, isEventMoment } from "./eventWords.ts";
 export * from "./fieldWords.ts";
 export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
 export { laneLineWords } from "./laneWords.ts";

@@ -1,6 +1,7 @@
 import type { Issue } from "../result/index.ts";
 import { caseMessages } from "./caseMessages.ts";
 import { entryMessages } from "./entryMessages.ts";
+import { eventMessages } from "./eventMessages.ts";
 import { medicineMessages } from "./medicineMessages.ts";
 import type { MessageFunction } from "./messageFunction.ts";
 import { noncompartmentalMessages } from "./noncompartmentalMessages.ts";
@@ -16,6 +17,7 @@ const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...medicineMessages,
   ...caseMessages,
   ...entryMessages,
+  ...eventMessages,
   ...noncompartmentalMessages,
   ...numberMessages,
   ...patientMessages,

@@ -1,5 +1,6 @@
 import { CaseEntry } from "../entry/CaseEntry.tsx";
 import { DoseEntry } from "../entry/DoseEntry.tsx";
+import { EventEntry } from "../entry/EventEntry.tsx";
 import { LevelEntry } from "../entry/LevelEntry.tsx";
 import { PatientPanel } from "../entry/PatientPanel.tsx";
 import { WindowEntry } from "../entry/WindowEntry.tsx";
@@ -14,16 +15,18 @@ export type BenchPanelKind = "case" | "patient" | "medicine" | "window" | "level
 export type OpenPanel =
   | { readonly kind: BenchPanelKind }
   | { readonly kind: "doses"; readonly lineId?: string }
+  | { readonly kind: "events"; readonly index?: number }
   | { readonly kind: "option"; readonly option: string; readonly lineId?: string }
   | { readonly kind: "working"; readonly row: string; readonly option: string };
 
-const TITLES: Readonly<Record<BenchPanelKind | "doses", string>> = {
+const TITLES: Readonly<Record<BenchPanelKind | "doses" | "events", string>> = {
   case: "Case",
   patient: "Patient",
   medicine: "Medicine",
   window: "Target window",
   levels: "Measured levels",
   doses: "Doses given",
+  events: "Events",
 };
 
 export function BenchPanel({ panel, onClose }: { readonly panel: OpenPanel; readonly onClose: () => void }) {
@@ -38,6 +41,9 @@ export function BenchPanel({ panel, onClose }: { readonly panel: OpenPanel; read
       {panel.kind === "levels" && <LevelEntry onDone={onClose} />}
       {panel.kind === "doses" && (
         <DoseEntry lane="given" onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
+      )}
+      {panel.kind === "events" && (
+        <EventEntry onDone={onClose} {...(panel.index === undefined ? {} : { index: panel.index })} />
       )}
       {panel.kind === "option" && (
         <OptionPanel option={panel.option} onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />

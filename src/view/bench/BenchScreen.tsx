@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { type DoseMark, laneDoses } from "../../core/analysis/index.ts";
 import { optionNextId } from "../../core/case/index.ts";
-import { benchWords, laneLineWords } from "../../core/messages/index.ts";
+import { amountsWords, benchWords, laneLineWords } from "../../core/messages/index.ts";
 import type { DoseLine } from "../../core/regimen/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { unitSpoken } from "../../core/units/index.ts";
@@ -9,6 +9,7 @@ import { clockScale } from "../chart/clockScale.ts";
 import { optionStyle } from "../chart/ProfileChart.tsx";
 import { Button } from "../ui/Button.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
+import { AmountsRow } from "./AmountsRow.tsx";
 import { BenchPanel, type OpenPanel } from "./BenchPanel.tsx";
 import "./BenchScreen.css";
 import { type BenchSpan, spanMoved, spanStart, spanWithin, spanZoomed } from "./benchSpan.ts";
@@ -16,6 +17,7 @@ import { CaseStrip } from "./CaseStrip.tsx";
 import { ClockHead } from "./ClockHead.tsx";
 import { ConcernList } from "./ConcernList.tsx";
 import { DoseLane } from "./DoseLane.tsx";
+import { EventsLane } from "./EventsLane.tsx";
 import { FirstSteps } from "./FirstSteps.tsx";
 import { LaneLines, OptionHead } from "./OptionHead.tsx";
 import { ProfileRow } from "./ProfileRow.tsx";
@@ -40,6 +42,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const [scale, setScale] = useState<"linear" | "log">("linear");
   const [unit, setUnit] = useState<ShownUnit>("mg/L");
   const [chosenSpan, setChosenSpan] = useState<BenchSpan | null>(null);
+  const [isWhereShown, setWhereShown] = useState(false);
   const clockColumn = useRef<HTMLDivElement>(null);
   const width = useElementWidth(clockColumn, 900);
   useBenchKeys();
@@ -128,6 +131,9 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
               <Button kind="quiet" onPress={() => setScale(scale === "linear" ? "log" : "linear")}>
                 {scale === "linear" ? benchWords.log : benchWords.linear}
               </Button>
+              <Button kind="quiet" onPress={() => setWhereShown(!isWhereShown)}>
+                {isWhereShown ? amountsWords.hide : amountsWords.show}
+              </Button>
               <Button kind="quiet" onPress={() => setPanel({ kind: "levels" })}>
                 {benchWords.addLevel}
               </Button>
@@ -170,6 +176,16 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
           </div>
           {clock && analysis && lanes && (
             <>
+              {isWhereShown && (
+                <AmountsRow
+                  value={value}
+                  analysis={analysis}
+                  scale={clock}
+                  width={width}
+                  nowX={nowX}
+                  midnightsX={midnightsX}
+                />
+              )}
               <DoseLane
                 lane="given"
                 name={benchWords.given}
@@ -226,6 +242,16 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
                   }
                 />
               ))}
+              <EventsLane
+                value={value}
+                analysis={analysis}
+                scale={clock}
+                width={width}
+                nowX={nowX}
+                midnightsX={midnightsX}
+                onOpenEvent={(index) => setPanel({ kind: "events", ...(index === undefined ? {} : { index }) })}
+                onOpenPatient={() => setPanel({ kind: "patient" })}
+              />
               <div className="bench-foot-side">
                 <Button kind="quiet" onPress={addOption} isDisabled={isReader}>
                   {benchWords.addOption}

@@ -4,6 +4,7 @@ import { doseWords, issueMessage } from "../../core/messages/index.ts";
 import type { DoseAmount, DoseEvent, DoseLine } from "../../core/regimen/index.ts";
 import { type Issue, issue } from "../../core/result/index.ts";
 import { instantIso, instantMs, instantRead, instantText } from "../../core/time/index.ts";
+import { quantityPrint } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { InstantInput, instantTyped } from "../ui/InstantInput.tsx";
 import { QuantityInput } from "../ui/QuantityInput.tsx";
@@ -21,9 +22,11 @@ export interface DoseBecameFormProps {
   readonly onCancel: () => void;
 }
 
-type Became = "taken" | "missed" | "at";
+type Became = "taken" | "missed" | "at" | "part";
 
-/** What became of one dose: taken when due, missed, or taken at another time; and how much of it. One edit. */
+const amountWords = (amount: DoseAmount) => quantityPrint(amount, { style: "screen", significant: 4 });
+
+/** What became of one dose: taken when due, missed, taken at another time, or only in part; and how much of it. One edit. */
 export function DoseBecameForm({ value, lane, line, dose, units, onLine, onCancel }: DoseBecameFormProps) {
   const { timeZone: zone, now } = value;
   const [became, setBecame] = useState<Became>(() => {
@@ -32,6 +35,7 @@ export function DoseBecameForm({ value, lane, line, dose, units, onLine, onCance
   });
   const [atText, setAtText] = useState(() => instantTyped(instantIso(dose.atMs, zone), zone));
   const [amount, setAmount] = useState(() => quantityDraft<DoseAmount["unit"]>(dose.amount, dose.amount.unit));
+  const [share, setShare] = useState(() => quantityDraft<"%">(null, "%"));
   const [isSent, setSent] = useState(false);
   const [fault, setFault] = useState<Issue | null>(null);
 
@@ -43,16 +47,30 @@ export function DoseBecameForm({ value, lane, line, dose, units, onLine, onCance
   const isLate = at.ok && instantMs(at.value) > instantMs(now);
   const words = (iso: string) => instantText(instantMs(iso), zone, "dayClock");
   const atFault = at.ok && isLate ? issue("dose-taken-after-now", { at: words(at.value), now: words(now) }) : null;
+  const part = quantityDraftRead(share, ["%"]);
+  const isShare = part.ok && part.value.value > 0 && part.value.value < 100;
+  const partAmount =
+    part.ok && isShare ? { ...line.amount, value: (line.amount.value * part.value.value) / 100 } : null;
+  const shareFault = part.ok && !isShare ? issue("dose-share", { found: part.value.value }) : fault;
   const send = (event: FormEvent) => {
     event.preventDefault();
     setSent(true);
+    if (became === "part") {
+      if (!partAmount) return;
+      // It stays where it was taken: only a missed dose had no time of its own.
+      const isMoved = dose.status !== "missed" && dose.atMs !== dose.scheduledMs;
+      const how = isMoved ? ({ kind: "at", at: instantIso(dose.atMs, zone) } as const) : ({ kind: "taken" } as const);
+      return keep(lineWithDose(value, lane, line, dose, how, partAmount));
+    }
     const read = quantityDraftRead(amount, units);
     if (became === "missed") return onLine(lineWithDose(value, lane, line, dose, { kind: "missed" }, dose.amount));
     if (!read.ok || (became === "at" && (!at.ok || atFault))) return;
     if (read.value.value <= 0)
       return setFault(issue("dose-amount", { found: read.value.value, unit: read.value.unit }));
     const how = became === "at" && at.ok ? ({ kind: "at", at: at.value } as const) : ({ kind: "taken" } as const);
-    const changed = lineWithDose(value, lane, line, dose, how, read.value);
+    keep(lineWithDose(value, lane, line, dose, how, read.value));
+  };
+  const keep = (changed: DoseLine) => {
     const found = lineFault(changed, line, value);
     setFault(found);
     if (!found) onLine(changed);
@@ -65,11 +83,32 @@ export function DoseBecameForm({ value, lane, line, dose, units, onLine, onCance
         choices={[
           { value: "taken", label: doseWords.taken },
           { value: "at", label: doseWords.otherTime },
+          { value: "part", label: doseWords.part },
           { value: "missed", label: doseWords.missed },
         ]}
-        onChoose={setBecame}
+        onChoose={(next) => {
+          setFault(null);
+          setSent(false);
+          setBecame(next);
+        }}
       />
-      {became === "missed" ? null : (
+      {became === "part" ? (
+        <QuantityInput
+          label={doseWords.share}
+          draft={share}
+          units={["%"]}
+          isTold={isSent}
+          fault={isSent && shareFault ? issueMessage(shareFault) : undefined}
+          description={doseWords.shareHelp}
+          reading={partAmount ? doseWords.shareIs(amountWords(partAmount), amountWords(line.amount)) : undefined}
+          onChange={(next) => {
+            setFault(null);
+            setSent(false);
+            setShare(next);
+          }}
+        />
+      ) : null}
+      {became === "missed" || became === "part" ? null : (
         <div className="line-form-row">
           <QuantityInput
             label={doseWords.takenAmount}

@@ -46,7 +46,7 @@ export function DoseTable({ value, lane, line, units, onLine }: DoseTableProps) 
             align: "end",
             cell: (one) => quantityPrint(one.amount, { style: "screen" }),
           },
-          { id: "became", head: doseWords.became, cell: (one) => becameWords(one, zone) },
+          { id: "became", head: doseWords.became, cell: (one) => becameWords(one, line, zone) },
           {
             id: "change",
             head: doseWords.actions,
@@ -91,9 +91,11 @@ export function DoseTable({ value, lane, line, units, onLine }: DoseTableProps) 
   );
 }
 
-function becameWords(dose: DoseEvent, zone: string): string {
+function becameWords(dose: DoseEvent, line: DoseLine, zone: string): string {
   const words = doseWords.takenAs[dose.status];
   const isElsewhere = dose.status !== "missed" && dose.atMs !== dose.scheduledMs;
   if (isElsewhere) return doseWords.takenAt(instantText(dose.atMs, zone, "dayClock"), words);
-  return dose.status === "missed" ? words : doseWords.taken;
+  if (dose.status === "missed") return words;
+  const isPart = dose.amount.unit === line.amount.unit && dose.amount.value < line.amount.value;
+  return isPart ? doseWords.partOf(quantityPrint(line.amount, { style: "screen" })) : doseWords.taken;
 }

@@ -224,6 +224,32 @@ describe("editing a line", () => {
     ]);
   });
 
+  test("a dose vomited or half taken is entered as the share that counts, where it was taken", async () => {
+    const { user, line, state } = await edit();
+    const change = (nth: number) =>
+      screen.getByRole("button", { name: new RegExp(`^${doseWords.change} dose ${nth},`) });
+    await user.click(change(3));
+    await user.click(screen.getByRole("radio", { name: doseWords.part }));
+    const share = screen.getByRole("textbox", { name: doseWords.share });
+    for (const [text, fault] of [
+      ["0", issue("dose-share", { found: 0 })],
+      ["100", issue("dose-share", { found: 100 })],
+      ["1,5", issue("number-comma", { text: "1,5", suggestion: "1.5" })],
+    ] as const) {
+      await user.clear(share);
+      await user.type(share, `${text}{Enter}`);
+      expect(share).toHaveAccessibleDescription(expect.stringContaining(issueMessage(fault)));
+      expect(line()).not.toHaveProperty("except");
+    }
+    await user.clear(share);
+    const steps = state().open!.undo.length;
+    await user.type(share, "50{Enter}");
+    expect(line().except).toEqual([
+      { index: 2, status: "moved", at: "2026-03-02T08:00:00+00:00", amount: { value: 100, unit: "mg" } },
+    ]);
+    expect(state().open!.undo.length).toBe(steps + 1);
+  });
+
   test("fewer doses than a mark needs is refused, and so is another kind of repeat; no mark is dropped", async () => {
     const given = [{ ...caseFixture().given[0]!, except: [{ index: 5, status: "missed" as const }] }];
     const { user, form, line } = await edit({ given });
