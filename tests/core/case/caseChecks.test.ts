@@ -144,6 +144,41 @@ const ROWS: readonly (readonly [string, Change, string, string])[] = [
     "factor-order",
     "patient.factors.0.to",
   ],
+  [
+    "a factor with an effect that is over as it begins",
+    (c) =>
+      (c.patient.factors[0] = {
+        ...c.patient.factors[0]!,
+        to: c.patient.factors[0]!.from,
+        effect: { clearance: 0.5 },
+      }),
+    "factor-effect-empty",
+    "patient.factors.0.to",
+  ],
+  ...[0, -1, 366].map((value): (typeof ROWS)[number] => [
+    `an onset of ${value} d`,
+    (c) => (c.patient.factors[0]!.effect = { clearance: 0.5, onset: { value, unit: "d" } }),
+    "factor-onset",
+    "patient.factors.0.effect.onset.value",
+  ]),
+  ...[0, 0.04, -1, 21].map((clearance): (typeof ROWS)[number] => [
+    `an effect of ${clearance} times the clearance`,
+    (c) => (c.patient.factors[0]!.effect = { clearance }),
+    clearance > 1 ? "value-too-big" : "value-too-small",
+    "patient.factors.0.effect.clearance",
+  ]),
+  [
+    "an effect on the volume of 0",
+    (c) => (c.patient.factors[0]!.effect = { clearance: 1, volume: 0 }),
+    "value-too-small",
+    "patient.factors.0.effect.volume",
+  ],
+  [
+    "an effect that is no number",
+    (c) => (c.patient.factors[0]!.effect = { clearance: Number.POSITIVE_INFINITY }),
+    "value-wrong-kind",
+    "patient.factors.0.effect.clearance",
+  ],
 ];
 
 describe("across fields", () => {
@@ -172,6 +207,17 @@ describe("across fields", () => {
     ["a liquid in mg", (c) => (c.given[1]!.amount = { value: 80, unit: "mg" })],
     ["no option chosen", (c) => (c.options[0]!.chosen = false)],
     ["no window", (c) => delete c.window],
+    [
+      "a factor with an effect, an onset and no end",
+      (c) =>
+        (c.patient.factors[0] = {
+          kind: "interacting-medicine",
+          from: "2026-03-01T00:00:00+00:00",
+          detail: "",
+          effect: { clearance: 0.05, volume: 5, onset: { value: 365, unit: "d" } },
+        }),
+    ],
+    ["a meal that is over as it begins", (c) => (c.patient.factors[0]!.to = c.patient.factors[0]!.from)],
   ])("%s is fine", (_, change) => {
     const value = structuredClone(sampleCase());
     change(value);

@@ -71,6 +71,8 @@ describe("caseFingerprint", () => {
     ["that a value was confirmed", (c) => delete c.patient.observations[2]!.confirmed],
     ["a factor", (c) => c.patient.factors.pop()],
     ["a factor's end", (c) => delete c.patient.factors[0]!.to],
+    ["a factor's effect", (c) => (c.patient.factors[0]!.effect = { clearance: 0.5 })],
+    ["a factor's onset", (c) => (c.patient.factors[0]!.effect = { clearance: 1, onset: { value: 3, unit: "d" } })],
     ["the record's version", (c) => (c.medicine.recordVersion = 2)],
     ["a figure of the record", (c) => (c.medicine.products[0]!.lag.value = 0.25)],
     ["a formula of the record", (c) => (c.medicine.kinetics.volume.formula = "0.5 * weight")],

@@ -91,6 +91,41 @@ describe("observations and levels", () => {
   });
 });
 
+describe("factors", () => {
+  const verapamil = {
+    kind: "interacting-medicine",
+    from: "2026-02-20T08:00:00+00:00",
+    detail: "invented",
+    effect: { clearance: 0.784, onset: { value: 4, unit: "d" } },
+  } as const;
+
+  it("are added at the end, changed in place, removed: an index stays that of the same factor", () => {
+    const [meal] = before.patient.factors;
+    const added = caseEdit(before, "factorAdd", { factor: verapamil });
+    expect(added).toEqual({ ...before, patient: { ...before.patient, factors: [meal, verapamil] } });
+    const stopped = { ...verapamil, to: "2026-03-03T08:00:00+00:00" };
+    const changed = caseEdit(added, "factorChange", { index: 1, factor: stopped });
+    expect(changed.patient.factors).toEqual([meal, stopped]);
+    expect(changed.patient.factors[0]).toBe(meal);
+    expect(caseEdit(changed, "factorRemove", { index: 0 }).patient.factors).toEqual([stopped]);
+    expect(caseEdit(changed, "factorRemove", { index: 1 })).toEqual(before);
+    expect(added.patient.observations).toBe(before.patient.observations);
+  });
+
+  it.each([-1, 1, 0.5, Number.NaN])("index %d is no factor's", (index) => {
+    expect(() => caseEdit(before, "factorRemove", { index })).toThrow(RangeError);
+    expect(() => caseEdit(before, "factorChange", { index, factor: verapamil })).toThrow(RangeError);
+  });
+
+  it("one that could not be opened again is refused with the reason", () => {
+    const factor = { ...verapamil, effect: { clearance: 0.5, onset: { value: 0, unit: "d" as const } } };
+    expect(caseEditTry(before, "factorAdd", { factor })).toMatchObject({
+      ok: false,
+      issues: [{ code: "factor-onset", path: ["patient", "factors", 1, "effect", "onset", "value"] }],
+    });
+  });
+});
+
 describe("medicine and window", () => {
   const products = { "tablet-12h": "capsule-slow", solution: "liquid" };
 

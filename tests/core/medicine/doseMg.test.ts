@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
-import { doseMg, productDoseUnits, productOf, recordById } from "../../../src/core/medicine/index.ts";
+import { doseLabelledMg, doseMg, productDoseUnits, productOf, recordById } from "../../../src/core/medicine/index.ts";
 import { issueMessage } from "../../../src/core/messages/index.ts";
 
 const record = recordById("theophylline")!;
@@ -40,6 +40,23 @@ describe("doseMg", () => {
     );
     expect(productDoseUnits(tablet)).not.toContain("mL");
     expect(productDoseUnits(solution)).toContain("mL");
+  });
+
+  it("counts the active moiety of a salt, and only there: the label stays as it is", () => {
+    const capsule = productOf(recordById("phenytoin")!, "capsule-er");
+    const mg = doseMg({ value: 300, unit: "mg" }, capsule);
+    // Relative tolerance 2.3e-16: one rounding.
+    expect(mg.ok && Math.abs(mg.value / 276 - 1)).toBeLessThan(2.3e-16);
+    expect(doseLabelledMg({ value: 300, unit: "mg" }, capsule)).toEqual({ ok: true, value: 300 });
+    for (const product of [tablet, solution]) {
+      expect(doseMg({ value: 300, unit: "mg" }, product)).toEqual(doseLabelledMg({ value: 300, unit: "mg" }, product));
+    }
+  });
+
+  it("a salt given as a liquid counts by concentration and salt factor", () => {
+    const salt = { ...solution, saltFactor: { value: 0.5, unit: "1", source: "x", basis: "seen" } } as const;
+    expect(doseMg({ value: 15, unit: "mL" }, salt)).toEqual({ ok: true, value: 40 });
+    expect(doseMg({ value: 0, unit: "mL" }, salt)).toMatchObject({ ok: false, issues: [{ code: "dose-amount" }] });
   });
 
   it.each([0, -1, Number.NaN, Number.POSITIVE_INFINITY])("refuses an amount of %d", (value) => {

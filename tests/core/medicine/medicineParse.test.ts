@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { type MedicineRecord, medicineParse, recordById } from "../../../src/core/medicine/index.ts";
+import { BUILT_IN_RECORDS, type MedicineRecord, medicineParse, recordById } from "../../../src/core/medicine/index.ts";
 import { issueMessage } from "../../../src/core/messages/index.ts";
 import type { Issue } from "../../../src/core/result/index.ts";
 
@@ -95,7 +95,7 @@ describe("a figure without its source", () => {
       for (const [key, each] of Object.entries(value))
         visit(each, [...path, Array.isArray(value) ? Number(key) : key], found);
     };
-    for (const id of ["theophylline", "lamotrigine", "demoxiline"]) {
+    for (const { id } of BUILT_IN_RECORDS) {
       const places: (string | number)[][] = [];
       visit(recordById(id), [], places);
       for (const place of places) {
@@ -195,6 +195,163 @@ describe("across fields", () => {
     expect(faults("lamotrigine", put("products.0.bioavailability.value", 0.98))).toEqual([
       "record-range products.0.bioavailability.value",
     ]);
+  });
+
+  const INPUT = "products.3.input";
+  const provenance = { source: "invented", basis: "invented" };
+  it.each<[string, string, Change, string[]]>([
+    [
+      "a two-phase product without a rate of its fast part",
+      "demoxiline",
+      take("products.3.absorptionRate"),
+      ["record-absorption-rate products.3"],
+    ],
+    [
+      "a plain product without an absorption rate",
+      "demoxiline",
+      take("products.0.absorptionRate"),
+      ["record-absorption-rate products.0"],
+    ],
+    [
+      "a rate beside a zero-order input, which has none",
+      "demoxiline",
+      put(INPUT, { kind: "zero-order", duration: { value: 4, unit: "h", ...provenance } }),
+      ["record-absorption-rate products.3"],
+    ],
+    [
+      "a duration of 0",
+      "demoxiline",
+      (r) =>
+        [
+          put(INPUT, { kind: "zero-order", duration: { value: 0, unit: "h", ...provenance } }),
+          take("products.3.absorptionRate"),
+        ].forEach((each) => {
+          each(r);
+        }),
+      [`record-range ${INPUT}.duration.value`],
+    ],
+    [
+      "a fast part above 1",
+      "demoxiline",
+      put(`${INPUT}.fastFraction.value`, 1.1),
+      [`record-range ${INPUT}.fastFraction.value`],
+    ],
+    [
+      "a fast part below 0",
+      "demoxiline",
+      put(`${INPUT}.fastFraction.value`, -0.1),
+      [`record-range ${INPUT}.fastFraction.value`],
+    ],
+    [
+      "a fast part in percent",
+      "demoxiline",
+      put(`${INPUT}.fastFraction.unit`, "%"),
+      [`record-unit ${INPUT}.fastFraction.unit`],
+    ],
+    [
+      "a slow part over 0 h",
+      "demoxiline",
+      put(`${INPUT}.slowDuration.value`, 0),
+      [`record-range ${INPUT}.slowDuration.value`],
+    ],
+    [
+      "a slow part before its time",
+      "demoxiline",
+      put(`${INPUT}.slowLag.value`, -1),
+      [`record-range ${INPUT}.slowLag.value`],
+    ],
+    ["a slow part without a way", "demoxiline", take(`${INPUT}.slowDuration`), [`record-slow-part ${INPUT}`]],
+    [
+      "a slow part in two ways",
+      "demoxiline",
+      put(`${INPUT}.slowRate`, { value: 0.1, unit: "/h", ...provenance }),
+      [`record-slow-part ${INPUT}`],
+    ],
+    [
+      "a slow rate of 0",
+      "demoxiline",
+      (r) =>
+        [take(`${INPUT}.slowDuration`), put(`${INPUT}.slowRate`, { value: 0, unit: "/h", ...provenance })].forEach(
+          (each) => {
+            each(r);
+          },
+        ),
+      [`record-range ${INPUT}.slowRate.value`],
+    ],
+    [
+      "a salt factor of 0",
+      "phenytoin",
+      put("products.0.saltFactor.value", 0),
+      ["record-range products.0.saltFactor.value"],
+    ],
+    [
+      "a salt factor above 1",
+      "phenytoin",
+      put("products.0.saltFactor.value", 1.09),
+      ["record-range products.0.saltFactor.value"],
+    ],
+    [
+      "a salt factor in percent",
+      "phenytoin",
+      put("products.0.saltFactor.unit", "%"),
+      ["record-unit products.0.saltFactor.unit"],
+    ],
+    ["Vmax in L/h", "phenytoin", put("kinetics.maximumRate.unit", "L/h"), ["record-unit kinetics.maximumRate.unit"]],
+    ["Km in L", "phenytoin", put("kinetics.halfMaximum.unit", "L"), ["record-unit kinetics.halfMaximum.unit"]],
+    ["V in L/h", "phenytoin", put("kinetics.volume.unit", "L/h"), ["record-unit kinetics.volume.unit"]],
+    ["no Km", "phenytoin", take("kinetics.halfMaximum"), ["field-missing kinetics.halfMaximum"]],
+    [
+      "a variability of Km of 0",
+      "phenytoin",
+      put("variability.halfMaximum.value", 0),
+      ["record-range variability.halfMaximum.value"],
+    ],
+    [
+      "a variability of Vmax in mg/h",
+      "phenytoin",
+      put("variability.maximumRate.unit", "mg/h"),
+      ["record-unit variability.maximumRate.unit"],
+    ],
+    ["exchange in L", "digoxin", put("kinetics.exchange.unit", "L"), ["record-unit kinetics.exchange.unit"]],
+    [
+      "a second volume in L/h",
+      "digoxin",
+      put("kinetics.peripheralVolume.unit", "L/h"),
+      ["record-unit kinetics.peripheralVolume.unit"],
+    ],
+    [
+      "an unknown covariate",
+      "digoxin",
+      put("kinetics.exchange.formula", "mass"),
+      ["formula-name kinetics.exchange.formula"],
+    ],
+    [
+      "a clearance of a saturable medicine",
+      "phenytoin",
+      (r) => put("kinetics.clearance", partOf(r, "kinetics.volume"))(r),
+      ["field-unknown kinetics.clearance"],
+    ],
+  ])("%s (%s)", (_, id, change, expected) => {
+    expect(faults(id, change)).toEqual(expected);
+  });
+
+  it.each([
+    ["phenytoin", "kinetics.maximumRate", "highest rate of elimination"],
+    ["phenytoin", "kinetics.halfMaximum", "concentration at half the highest rate"],
+    ["phenytoin", "variability.maximumRate", "variability of the highest rate of elimination"],
+    [
+      "phenytoin",
+      "products.0.saltFactor",
+      "active part of the labelled amount of the extended-release capsule (sodium salt)",
+    ],
+    ["digoxin", "kinetics.exchange", "exchange between the compartments"],
+    ["digoxin", "kinetics.peripheralVolume", "volume of the second compartment"],
+    ["demoxiline", "products.3.input.fastFraction", "fraction absorbed fast of the two-phase capsule"],
+    ["demoxiline", "products.3.input.slowDuration", "duration of the slow part of the two-phase capsule"],
+  ])("%s %s without a source is named", (id, place, name) => {
+    const issues = issuesOf(changed(id, take(`${place}.source`)));
+    expect(issues.map((each) => each.code)).toEqual(["record-figure-without-source"]);
+    expect(issueMessage(issues[0]!)).toContain(`The ${name} in the record of`);
   });
 
   it.each([null, undefined, 1, "text", [], [{}], {}])("%j is no record", (json) => {

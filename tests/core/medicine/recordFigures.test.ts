@@ -43,6 +43,24 @@ describe("unverifiedFigures", () => {
     });
   });
 
+  it("counts by hand: phenytoin", () => {
+    // Molar mass, Vmax, Km, V, 4 variabilities, two windows, toxic limit: 11.
+    // Products: content, ka, lag, F; a salt factor for the capsule: 13.
+    // From memory: molar mass, variability of Vmax; lag and F of all three; strength of the chewable tablet.
+    expect(unverifiedFigures(recordById("phenytoin")!)).toEqual({
+      memory: 9,
+      commonPractice: 0,
+      invented: 0,
+      total: 24,
+    });
+  });
+
+  it("counts by hand: digoxin", () => {
+    // Molar mass, CL, V1, Q, V2, 2 variabilities, four windows, toxic limit: 12. Two tablets with content, ka, lag, F: 8.
+    // From memory: molar mass, both variabilities; lag and F of both; the low strength.
+    expect(unverifiedFigures(recordById("digoxin")!)).toEqual({ memory: 8, commonPractice: 0, invented: 0, total: 20 });
+  });
+
   it("docs/medicines.md states the counts of every record", () => {
     const page = readFileSync(new URL("../../../docs/medicines.md", import.meta.url), "utf8");
     for (const record of BUILT_IN_RECORDS) {

@@ -95,6 +95,8 @@ describe("quantityPrint", () => {
     [{ value: 0.3, unit: "1" }, print, "0.3"],
     [{ value: 0.3, unit: "/h" }, print, "0.3\u00a0per h"],
     [{ value: 0.04, unit: "L/h/kg" }, print, "0.04\u00a0L per h per kg"],
+    [{ value: 17.3, unit: "mg/h" }, screen, "17.3\u00a0mg/h"],
+    [{ value: 17.3, unit: "mg/h" }, print, "17.3\u00a0mg per h"],
     [{ value: 310, unit: "mg.h/L" }, screen, "310\u00a0mg·h/L"],
     [{ value: 150, unit: "[lb_av]" }, screen, "150\u00a0lb"],
     [{ value: 0.125, unit: "mg" }, print, "125\u00a0microgram"],

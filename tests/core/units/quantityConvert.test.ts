@@ -139,4 +139,5 @@ describe("unitsCompatible", () => {
 it("unitDimension names the dimension", () => {
   expect(unitDimension("ug/mL")).toBe("mass concentration");
   expect(unitDimension("mg.h/L")).toBe("exposure");
+  expect(unitDimension("mg/h")).toBe("mass rate");
 });

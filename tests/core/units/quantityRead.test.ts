@@ -30,6 +30,8 @@ describe("quantityRead takes", () => {
     ["3.2 L/h", 3.2, "L/h"],
     ["3.2 litres per hour", 3.2, "L/h"],
     ["0.04 L/h/kg", 0.04, "L/h/kg"],
+    ["17.3 mg/h", 17.3, "mg/h"],
+    ["17.3 mg per hour", 17.3, "mg/h"],
     ["0.3 /h", 0.3, "/h"],
     ["0.3 per hour", 0.3, "/h"],
     ["300 mg.h/L", 300, "mg.h/L"],
