@@ -65,8 +65,7 @@ export const amountsWords = {
   eliminated: "eliminated",
   given: "doses given",
   option: (id: string) => `option ${id}`,
-  sum: "Together they are F × dose taken, the upper edge.",
-  atEnd: (taken: string, at: string) => `${taken} mg by ${at}.`,
+  sum: (taken: string, at: string) => `Together they are F × dose taken, the upper edge: ${taken} mg by ${at}.`,
 } as const;
 
 export function eventName({ kind, detail }: Factor): string {

@@ -17,8 +17,9 @@ interface AmountsRowProps {
   readonly midnightsX: readonly number[];
 }
 
-const HEIGHT = 170;
-const TOP = 14;
+const HEIGHT = 190;
+/** Leaves the sentence above the drawing its own strip. */
+const TOP = 34;
 const BOTTOM = HEIGHT - 12;
 
 /** Where the dose is under the chosen option: gut, body, eliminated, stacked up to all that was taken. */
@@ -42,7 +43,7 @@ export function AmountsRow({ value, analysis, scale, width, nowX, midnightsX }: 
   };
   const end = instantText(analysis.clock.originMs + scale.toH * MS_PER_HOUR, value.timeZone, "dayClock");
   const mg = (amount: number) => numberPrint(amount, { significant: 3 });
-  const atEnd = amountsWords.atEnd(mg(amounts.taken.at(-1) ?? 0), end);
+  const sum = amountsWords.sum(mg(amounts.taken.at(-1) ?? 0), end);
   const parts = scene.bands.map(({ part }) => `${names[part]} ${mg(amounts[part].at(-1) ?? 0)} mg`).join(", ");
   return (
     <section className="amounts" aria-label={amountsWords.title}>
@@ -50,9 +51,6 @@ export function AmountsRow({ value, analysis, scale, width, nowX, midnightsX }: 
         <h2 className="amounts-title">{amountsWords.title}</h2>
         <p>
           {ofWhat}, {amountsWords.unit}
-        </p>
-        <p>
-          {amountsWords.sum} {atEnd}
         </p>
       </div>
       <div className="amounts-plot">
@@ -62,7 +60,7 @@ export function AmountsRow({ value, analysis, scale, width, nowX, midnightsX }: 
           height={HEIGHT}
           viewBox={`0 0 ${width} ${HEIGHT}`}
           role="img"
-          aria-label={`${amountsWords.title}, ${ofWhat}. ${amountsWords.sum} ${atEnd} ${parts}.`}
+          aria-label={`${amountsWords.title}, ${ofWhat}. ${sum} ${parts}.`}
         >
           {nowX !== null && (
             <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height={HEIGHT} />
@@ -81,6 +79,9 @@ export function AmountsRow({ value, analysis, scale, width, nowX, midnightsX }: 
             </text>
           ))}
           {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2={HEIGHT} />}
+          <text className="amounts-sum" x={scale.left + 8} y={22}>
+            {sum}
+          </text>
           {scene.bands.map(({ part, labelY }) => (
             <text key={part} className="amounts-name" x={scale.right + 8} y={labelY + 4.5}>
               {names[part]}
