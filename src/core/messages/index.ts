@@ -8,6 +8,7 @@ export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
 export { laneLineWords } from "./laneWords.ts";
 export type { MessageFunction } from "./messageFunction.ts";
 export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./regimenWords.ts";
+export { richWords } from "./richWords.ts";
 export * from "./screenWords.ts";
 export * from "./summaryWords.ts";
 export { windowQuantityWord } from "./windowWords.ts";

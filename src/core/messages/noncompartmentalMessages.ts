@@ -66,4 +66,16 @@ export const noncompartmentalMessages: Readonly<Record<string, MessageFunction>>
   "nca-remaining-none": ({ time }) => `At ${hours(time)} nothing remains to be absorbed: end the stretch before.`,
   "nca-remaining-rises": ({ count }) =>
     `What remains to be absorbed does not fall over these ${levels(count)}: no rate comes of it.`,
+  "rich-no-dose": () => "The case has no dose given before the now line.",
+  "rich-levels-few": ({ found, needed }) =>
+    `The most measured levels after one dose and before the next: ${number(found)}; ${number(needed)} are needed.`,
+  "rich-irregular": () =>
+    "There are levels enough after a dose, but the doses before it are not equal at equal intervals: steady state can't be assumed, and the earlier doses are still in the levels.",
+  "rich-model-missing": () =>
+    "There are levels enough after a dose, but how long it takes to reach steady state is not known: the typical patient can't be worked out yet.",
+  "rich-not-steady": ({ run, needed }) =>
+    `There are levels enough after a dose, but regular doses had run for only ${number(run)} h before it; ${needed === null ? "at this dose no steady state is reached" : `steady state takes about ${number(needed)} h (five half-lives)`}. The earlier doses are still in the levels.`,
+  "rich-clearance-changed": () =>
+    "Clearance or volume changed while these levels were drawn: they do not belong to one rate.",
+  "rich-reason-missing": () => "Say why other points are taken.",
 };

@@ -1,0 +1,121 @@
+import { useMemo, useState } from "react";
+import { issueMessage, richWords } from "../../core/messages/index.ts";
+import type { AreaMethod } from "../../core/noncompartmental/index.ts";
+import { TerminalChart } from "../chart/TerminalChart.tsx";
+import { terminalScene } from "../chart/terminalScene.ts";
+import { DataTable } from "../ui/DataTable.tsx";
+import { Notice } from "../ui/Notice.tsx";
+import { RichPoints } from "./RichPoints.tsx";
+import { type RichUnit, richFigures, richUnits } from "./richFigures.ts";
+import type { RichOccasion } from "./richOccasions.ts";
+import { type RichReading, richFlags, richLineIndices, richLineIssues, richReading } from "./richReading.ts";
+
+interface RichOccasionViewProps {
+  readonly occasion: RichOccasion;
+  readonly method: AreaMethod;
+  readonly unit: RichUnit;
+  /** From mg/L to the unit shown. */
+  readonly factor: number;
+  /** An hour of the case's clock in words. */
+  readonly clock: (hours: number) => string;
+}
+
+/** Points of the terminal line the user took instead, and why. */
+interface Overrule {
+  readonly indices: readonly number[];
+  readonly reason: string;
+}
+
+const SIZE = { width: 600, height: 300, margin: { top: 24, right: 8, bottom: 40, left: 48 } };
+
+/** One dose's levels: the picture, what wants a look, the results and the points behind them. */
+export function RichOccasionView({ occasion, method, unit, factor, clock }: RichOccasionViewProps) {
+  const [overrule, setOverrule] = useState<Overrule | null>(null);
+  const reading = useMemo(() => richReading(occasion, method, overrule?.indices), [occasion, method, overrule]);
+  const { result } = reading;
+  const line = result.ok ? result.value.terminal : null;
+  const onLine = richLineIndices(reading);
+  const scene = terminalScene({
+    ...SIZE,
+    factor,
+    points: occasion.points.map(({ time, value }, i) => ({ time, value, isOnLine: onLine.includes(i) })),
+    line,
+    untilH: occasion.tau ?? 0,
+  });
+  const flags = richFlags(occasion, reading);
+  const show = richUnits(unit, factor);
+  return (
+    <>
+      <p>{occasion.tau === null ? richWords.oneDose : richWords.interval(show.hours(occasion.tau))}</p>
+      <figure className="rich-levels-figure">
+        <TerminalChart
+          scene={scene}
+          title={chartTitle(reading, occasion, show)}
+          unitLabel={unit === "mg/L" ? "mg/L" : "micromol/L"}
+          hoursLabel={richWords.hours}
+        />
+        <figcaption className="rich-levels-soft">
+          {line ? richWords.chartKey : richWords.chartNoLine}
+          {scene.notDrawn > 0 && ` ${richWords.notDrawn(scene.notDrawn)}`}
+        </figcaption>
+      </figure>
+      {!result.ok && (
+        <Notice gravity="stop" title={richWords.refused} isAnnounced>
+          {result.issues.map((each, i) => (
+            <p key={i}>{issueMessage(each)}</p>
+          ))}
+        </Notice>
+      )}
+      {flags.length > 0 && (
+        <Notice gravity="check" title={richWords.flagged}>
+          {flags.map((each) => (
+            <p key={each.code}>{issueMessage(each)}</p>
+          ))}
+        </Notice>
+      )}
+      {(line || overrule) && (
+        <p className={overrule ? "rich-levels-overruled" : "rich-levels-soft"}>
+          {overrule ? `${richWords.byHand(overrule.reason)} ${richWords.notKept}` : richWords.automatic}
+        </p>
+      )}
+      {result.ok && (
+        <>
+          <DataTable
+            caption={richWords.figures}
+            rows={richFigures(reading, unit, factor)}
+            rowKey={(row) => row.id}
+            columns={[
+              { id: "figure", head: richWords.figure, isRowHead: true, cell: (row) => row.name },
+              { id: "value", head: richWords.value, align: "end", cell: (row) => row.value },
+            ]}
+          />
+          {reading.absorbed && <p className="rich-levels-soft">{richWords.absorbedBy}</p>}
+        </>
+      )}
+      <RichPoints
+        occasion={occasion}
+        used={onLine}
+        absorbed={reading.absorbed}
+        isOverruled={overrule !== null}
+        show={show}
+        clock={clock}
+        faultOf={(indices) => richLineIssues(richReading(occasion, method, indices))[0] ?? null}
+        onOverrule={setOverrule}
+      />
+    </>
+  );
+}
+
+function chartTitle({ result }: RichReading, { points }: RichOccasion, show: ReturnType<typeof richUnits>): string {
+  const found = result.ok ? result.value : null;
+  const line =
+    found?.terminal && found.halfLife !== null
+      ? richWords.chartLine(
+          found.terminal.indices.length,
+          show.hours(found.terminal.fromTime),
+          show.hours(found.terminal.toTime),
+          show.hours(found.halfLife),
+        )
+      : richWords.chartNoLine;
+  return richWords.chartTitle(points.length, line);
+}
