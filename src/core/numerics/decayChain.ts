@@ -49,6 +49,7 @@ function chainSeries(ascending: readonly number[], time: number): number {
   const homogeneous = y.map(() => 1);
   let factorial = 1;
   let scale = decay(fastest, time);
+  if (scale === 0) return 0;
   for (let k = 2; k <= last; k++) factorial *= k;
   for (let k = 0; k < last; k++) scale *= time;
   const lead = 1 / factorial;

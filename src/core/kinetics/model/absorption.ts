@@ -1,5 +1,6 @@
-import { argumentAboveZero, argumentFraction, argumentNotNegative, argumentRefuse } from "../argumentCheck.ts";
+import { argumentFraction, argumentRefuse } from "../argumentCheck.ts";
 import type { Dose } from "../oralKinetics.ts";
+import { modelDelay, modelPositive } from "./modelArgument.ts";
 
 /** First-order absorption; ka in 1/h, above 0. */
 export interface FirstOrderAbsorption {
@@ -48,8 +49,8 @@ export interface AbsorptionPart {
 }
 
 function releaseCheck(name: string, release: FirstOrderAbsorption | ZeroOrderAbsorption): void {
-  if (release.kind === "first-order") argumentAboveZero(`${name}.ka`, release.ka, "/h");
-  else if (release.kind === "zero-order") argumentAboveZero(`${name}.duration`, release.duration, "h");
+  if (release.kind === "first-order") modelPositive(`${name}.ka`, release.ka, "/h");
+  else if (release.kind === "zero-order") modelPositive(`${name}.duration`, release.duration, "h");
   else argumentRefuse(`${name}.kind`, (release as { kind: unknown }).kind, "", "first-order or zero-order");
 }
 
@@ -60,21 +61,21 @@ export function absorptionCheck(name: string, absorption: Absorption): void {
     return;
   }
   argumentFraction(`${name}.fastFraction`, absorption.fastFraction);
-  argumentAboveZero(`${name}.fastKa`, absorption.fastKa, "/h");
+  modelPositive(`${name}.fastKa`, absorption.fastKa, "/h");
   releaseCheck(`${name}.slow`, absorption.slow);
-  argumentNotNegative(`${name}.slowLag`, absorption.slowLag, "h");
+  modelDelay(`${name}.slowLag`, absorption.slowLag);
 }
+
+/** A share below this carries nothing that a double could tell from nothing at the end. */
+const LEAST_SHARE = 1e-30;
 
 /** The parts that carry anything at all, already checked. */
 export function absorptionParts(absorption: Absorption, bioavailability: number, lag: number): AbsorptionPart[] {
-  if (absorption.kind !== "mixed")
-    return bioavailability > 0 ? [{ release: absorption, share: bioavailability, lag }] : [];
-  const { fastFraction, fastKa, slow, slowLag } = absorption;
-  const fast: AbsorptionPart = {
-    release: { kind: "first-order", ka: fastKa },
-    share: bioavailability * fastFraction,
-    lag,
-  };
-  const late: AbsorptionPart = { release: slow, share: bioavailability * (1 - fastFraction), lag: lag + slowLag };
-  return [fast, late].filter((part) => part.share > 0);
+  const parts: AbsorptionPart[] = [];
+  if (absorption.kind === "mixed") {
+    const { fastFraction, fastKa, slow, slowLag } = absorption;
+    parts.push({ release: { kind: "first-order", ka: fastKa }, share: bioavailability * fastFraction, lag });
+    parts.push({ release: slow, share: bioavailability * (1 - fastFraction), lag: lag + slowLag });
+  } else parts.push({ release: absorption, share: bioavailability, lag });
+  return parts.filter((part) => part.share >= LEAST_SHARE);
 }

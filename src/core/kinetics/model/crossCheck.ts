@@ -1,5 +1,5 @@
-import { timesCheck } from "../historyProfile.ts";
 import { CrossCheckRun } from "./crossCheckRun.ts";
+import { modelTimes } from "./modelArgument.ts";
 import type { ModelHistory } from "./modelHistory.ts";
 
 /**
@@ -19,7 +19,7 @@ import type { ModelHistory } from "./modelHistory.ts";
  */
 export function crossCheck(history: ModelHistory, times: ArrayLike<number>): Float64Array {
   const run = new CrossCheckRun(history);
-  return timesCheck(times).map((time) => {
+  return modelTimes(times).map((time) => {
     run.goTo(time);
     return run.level;
   });

@@ -1,4 +1,4 @@
-import { timesCheck } from "../historyProfile.ts";
+import { modelTimes } from "./modelArgument.ts";
 import type { ModelPart } from "./modelEvents.ts";
 import type { ModelHistory } from "./modelHistory.ts";
 import { modelPlanOf, modelPlanRun } from "./modelPlan.ts";
@@ -51,7 +51,7 @@ function gutAt({ inflow, length }: RunStretch, run: ModelRun, u: number): number
  */
 export function modelAmounts(history: ModelHistory, times: ArrayLike<number>): ModelAmounts {
   const plan = modelPlanOf(history);
-  const at = timesCheck(times);
+  const at = modelTimes(times);
   const gut = new Float64Array(at.length);
   const body = new Float64Array(at.length);
   const peripheral = new Float64Array(at.length);

@@ -1,6 +1,7 @@
-import { argumentFraction, argumentNotNegative } from "../argumentCheck.ts";
+import { argumentFraction } from "../argumentCheck.ts";
 import type { BothReadings } from "../bothReadings.ts";
 import { type Absorption, absorptionCheck } from "./absorption.ts";
+import { modelDelay } from "./modelArgument.ts";
 import { type ModelDisposition, modelDispositionCheck } from "./modelHistory.ts";
 
 /**
@@ -16,6 +17,6 @@ export function modelBothReadings(
   const kind = modelDispositionCheck("disposition", disposition);
   absorptionCheck("absorption", absorption);
   argumentFraction("bioavailability", bioavailability);
-  argumentNotNegative("lag", lag, "h");
+  modelDelay("lag", lag);
   return kind.bothReadings(disposition, absorption, bioavailability, lag);
 }

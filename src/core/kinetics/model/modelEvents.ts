@@ -56,6 +56,23 @@ export function modelInstant(a: number, b: number, rest: number): { at: number; 
   return { at: sum, rest: sumError(at, over, sum) };
 }
 
+/** A zero-order input must end this near to when it should, as a part of its duration. */
+const NEAR = 1e-9;
+
+/** When a zero-order input that begins at an instant ends, and its rate in mg/h. */
+export function zeroOrderEnd(
+  begin: { at: number; rest: number },
+  duration: number,
+  amount: number,
+): { end: { at: number; rest: number }; rate: number } {
+  const end = modelInstant(begin.at, duration, begin.rest);
+  const length = end.at - begin.at + (end.rest - begin.rest);
+  if (!(Math.abs(length / duration - 1) <= NEAR)) {
+    argumentRefuse("absorption.duration", duration, "h", `long enough to be told from 0 at ${begin.at} h`);
+  }
+  return { end, rate: amount / duration };
+}
+
 /** Every event of a history, in order; O(n log n) in their number. */
 export function modelEventsOf(parts: readonly ModelPart[], dispositions: readonly DispositionSpan[]): ModelEvent[] {
   const events: ModelEvent[] = [];
@@ -67,11 +84,9 @@ export function modelEventsOf(parts: readonly ModelPart[], dispositions: readonl
         events.push({ ...begin, change: { kind: "give", part, amount: share * amount } });
         continue;
       }
-      const rate = (share * amount) / release.duration;
-      if (rate === Infinity)
-        argumentRefuse("absorption.duration", release.duration, "h", "long enough for a finite rate");
+      const { end, rate } = zeroOrderEnd(begin, release.duration, share * amount);
       events.push({ ...begin, change: { kind: "start", part, rate } });
-      events.push({ ...modelInstant(begin.at, release.duration, begin.rest), change: { kind: "stop", part, rate } });
+      events.push({ ...end, change: { kind: "stop", part, rate } });
     }
   }
   for (let span = 1; span < dispositions.length; span++) {

@@ -1,15 +1,16 @@
-import { argumentFinite, argumentNotNegative, argumentRefuse } from "../argumentCheck.ts";
+import { argumentNotNegative, argumentRefuse } from "../argumentCheck.ts";
 import type { LevelWindow } from "../exposureTally.ts";
 import { type Exposure, historyExposure } from "../historyExposure.ts";
+import { modelTime } from "./modelArgument.ts";
 import type { ModelHistory } from "./modelHistory.ts";
 import { modelPlanCourses, modelPlanOf, modelPlanRun } from "./modelPlan.ts";
 import { StretchTally } from "./stretchTally.ts";
 
 /** Throws a RangeError for a stretch of time or a window out of range. */
 export function exposureArgumentsCheck(from: number, to: number, window?: LevelWindow): void {
-  argumentFinite("from", from, "h");
-  argumentFinite("to", to, "h");
-  if (!(to > from && to - from < Infinity)) argumentRefuse("to", to, "h", `after from, ${from} h, by a finite time`);
+  modelTime("from", from);
+  modelTime("to", to);
+  if (!(to > from)) argumentRefuse("to", to, "h", `after from, ${from} h`);
   if (window === undefined) return;
   argumentNotNegative("window.low", window.low, "mg/L");
   argumentNotNegative("window.high", window.high, "mg/L");

@@ -1,6 +1,7 @@
-import { argumentFinite, argumentFraction, argumentNotNegative, argumentRefuse } from "../argumentCheck.ts";
+import { argumentFraction, argumentRefuse } from "../argumentCheck.ts";
 import { absorptionCheck, type ModelInput } from "./absorption.ts";
 import * as kinds from "./kinds.ts";
+import { modelAmount, modelDelay, modelTime } from "./modelArgument.ts";
 import type { ModelKind } from "./modelKind.ts";
 
 type Kinds = (typeof kinds)[keyof typeof kinds];
@@ -51,14 +52,14 @@ export function modelInputsCheck(name: string, inputs: readonly ModelInput[]): v
     const input = `${name}[${index}]`;
     absorptionCheck(`${input}.absorption`, absorption);
     argumentFraction(`${input}.bioavailability`, bioavailability);
-    argumentNotNegative(`${input}.lag`, lag, "h");
+    modelDelay(`${input}.lag`, lag);
     let before = -Infinity;
     for (const [i, { time, amount }] of doses.entries()) {
-      argumentFinite(`${input}.doses[${i}].time`, time, "h");
+      modelTime(`${input}.doses[${i}].time`, time);
       if (time < before) {
         argumentRefuse(`${input}.doses[${i}].time`, time, "h", `not before that of the dose before it, ${before} h`);
       }
-      argumentNotNegative(`${input}.doses[${i}].amount`, amount, "mg");
+      modelAmount(`${input}.doses[${i}].amount`, amount);
       before = time;
       total += amount;
     }
@@ -78,7 +79,7 @@ export function modelHistoryCheck({ dispositions, inputs }: ModelHistory): Model
       argumentRefuse(`${name}.disposition.kind`, disposition.kind, "", `the kind of the first, ${kind.kind}`);
     }
     kind.check(`${name}.disposition`, disposition);
-    if (!(i === 0 && from === -Infinity)) argumentFinite(`${name}.from`, from, "h");
+    if (!(i === 0 && from === -Infinity)) modelTime(`${name}.from`, from);
     if (i > 0 && !(from > before))
       argumentRefuse(`${name}.from`, from, "h", `after that of the span before it, ${before} h`);
     before = from;

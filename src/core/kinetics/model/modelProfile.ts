@@ -1,4 +1,5 @@
-import { historyProfile, timesCheck } from "../historyProfile.ts";
+import { historyProfile } from "../historyProfile.ts";
+import { modelTimes } from "./modelArgument.ts";
 import type { ModelHistory } from "./modelHistory.ts";
 import { modelPlanCourses, modelPlanOf, modelPlanRun } from "./modelPlan.ts";
 
@@ -23,7 +24,7 @@ export function modelProfile(history: ModelHistory, times: ArrayLike<number>): F
   const plan = modelPlanOf(history);
   const plain = modelPlanCourses(plan);
   if (plain !== undefined) return historyProfile(plain.disposition, plain.courses, times);
-  const at = timesCheck(times);
+  const at = modelTimes(times);
   const levels = new Float64Array(at.length);
   const first = plan.events[0];
   if (first === undefined || at.length === 0) return levels;

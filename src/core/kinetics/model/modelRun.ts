@@ -34,7 +34,7 @@ export class ModelRun {
   readonly #kind: ModelKind<ModelDisposition>;
   readonly #parts: readonly ModelPart[];
   /** Of zero-order inputs, by part: how many run, and their rates together. */
-  readonly #running: Int32Array;
+  readonly #running: Float64Array;
   readonly #rates: CompensatedSum[];
   readonly #eliminated = new CompensatedSum();
   readonly #isBalanced: boolean;
@@ -60,7 +60,7 @@ export class ModelRun {
     this.#isBalanced = isBalanced;
     this.#body = new Float64Array(kind.compartments);
     this.gut = new Float64Array(parts.length);
-    this.#running = new Int32Array(parts.length);
+    this.#running = new Float64Array(parts.length);
     this.#rates = parts.map(() => new CompensatedSum());
   }
 

@@ -1,7 +1,7 @@
 import { argumentRefuse } from "../argumentCheck.ts";
-import { timesCheck } from "../historyProfile.ts";
 import { patternProfile } from "../patternProfile.ts";
 import type { ModelInput } from "./absorption.ts";
+import { modelTimes } from "./modelArgument.ts";
 import type { ModelDisposition } from "./modelHistory.ts";
 import { modelPlanCourses } from "./modelPlan.ts";
 import { steadyPatternOf, steadyRun } from "./modelSteadyRun.ts";
@@ -31,7 +31,7 @@ export function modelSteadyProfile(
   const { kind, absorbed, parts } = pattern;
   const plain = modelPlanCourses({ kind, parts, spans: [{ from: -Infinity, disposition }], events: [] });
   if (plain !== undefined) return patternProfile(plain.disposition, plain.courses, period, times);
-  const sorted = timesCheck(times);
+  const sorted = modelTimes(times);
   const levels = new Float64Array(sorted.length);
   if (!(absorbed > 0)) return levels;
   const capacity = kind.capacity(disposition);

@@ -1,6 +1,14 @@
-import { argumentAboveZero, argumentRefuse } from "../argumentCheck.ts";
+import { argumentRefuse } from "../argumentCheck.ts";
 import type { ModelInput } from "./absorption.ts";
-import { type ModelEvent, type ModelPart, modelEventsSort, modelInstant, modelPartsOf } from "./modelEvents.ts";
+import { modelPositive } from "./modelArgument.ts";
+import {
+  type ModelEvent,
+  type ModelPart,
+  modelEventsSort,
+  modelInstant,
+  modelPartsOf,
+  zeroOrderEnd,
+} from "./modelEvents.ts";
 import { type ModelDisposition, modelDispositionCheck, modelInputsCheck } from "./modelHistory.ts";
 import type { ModelKind } from "./modelKind.ts";
 import { ModelRun, type RunStretch } from "./modelRun.ts";
@@ -21,14 +29,13 @@ export function steadyPatternOf(
   period: number,
 ): SteadyPattern {
   const kind = modelDispositionCheck("disposition", disposition);
-  argumentAboveZero("period", period, "h");
+  modelPositive("period", period, "h");
   modelInputsCheck("inputs", inputs);
-  for (const [index, { doses, lag }] of inputs.entries()) {
+  for (const [index, { doses }] of inputs.entries()) {
     for (const [i, { time }] of doses.entries()) {
       if (!(time >= 0 && time < period)) {
         argumentRefuse(`inputs[${index}].doses[${i}].time`, time, "h", `0 to below the period, ${period} h`);
       }
-      if (time + lag === Infinity) argumentRefuse(`inputs[${index}].lag`, lag, "h", "a finite time after the dose");
     }
   }
   const parts = modelPartsOf(inputs);
@@ -41,7 +48,7 @@ export function steadyPatternOf(
 function wrapped(instant: { at: number; rest: number }, period: number): { at: number; rest: number } {
   // `%` is exact. A rest that reaches back before the period belongs to its end.
   const at = instant.at % period;
-  return { at: at + instant.rest < 0 ? at + period : at, rest: instant.rest };
+  return modelInstant(at + instant.rest < 0 ? at + period : at, 0, instant.rest);
 }
 
 /**
@@ -67,10 +74,7 @@ export function steadyRun(pattern: SteadyPattern): { body: Float64Array; stretch
         gut[part] = gut[part]! + (given * left) / -Math.expm1(-release.ka * period);
         continue;
       }
-      const rate = given / release.duration;
-      if (rate === Infinity)
-        argumentRefuse("absorption.duration", release.duration, "h", "long enough for a finite rate");
-      const finish = modelInstant(begin.at, release.duration, begin.rest);
+      const { end: finish, rate } = zeroOrderEnd(begin, release.duration, given);
       const end = wrapped(finish, period);
       // How many of its earlier repeats have begun and not ended when the period starts.
       before.push({ part, rate, count: Math.round((finish.at - end.at) / period) });

@@ -1,7 +1,7 @@
-import { argumentAboveZero } from "../argumentCheck.ts";
 import { type BothReadings, bothReadings } from "../bothReadings.ts";
 import type { Absorption } from "./absorption.ts";
 import { inflowDerivative, linearResponseArea, linearResponseAt, linearResponseCarried } from "./linearResponse.ts";
+import { modelPositive } from "./modelArgument.ts";
 import type { ModelKind, PeriodRun } from "./modelKind.ts";
 import { singleTurn } from "./singleTurn.ts";
 import { type Inflow, inflowAt, type Stretch } from "./stretch.ts";
@@ -88,9 +88,9 @@ export const oneCompartment = {
   superposes: true,
   compartments: 1,
   check: (name, disposition) => {
-    argumentAboveZero(`${name}.clearance`, disposition.clearance, "L/h");
-    argumentAboveZero(`${name}.volume`, disposition.volume, "L");
-    argumentAboveZero(`${name}.clearance / volume`, rateOf(disposition), "/h");
+    modelPositive(`${name}.clearance`, disposition.clearance, "L/h");
+    modelPositive(`${name}.volume`, disposition.volume, "L");
+    modelPositive(`${name}.clearance / volume`, rateOf(disposition), "/h");
   },
   stretch: (disposition, body, inflow) =>
     new OneCompartmentStretch(rateOf(disposition), disposition.volume, body[0]!, inflow),

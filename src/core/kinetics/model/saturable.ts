@@ -1,5 +1,5 @@
 import { rootBracketed } from "../../numerics/index.ts";
-import { argumentAboveZero } from "../argumentCheck.ts";
+import { modelPositive } from "./modelArgument.ts";
 import type { ModelKind, PeriodRun } from "./modelKind.ts";
 import type { Saturation } from "./saturableSeries.ts";
 import { SaturableStretch } from "./saturableStretch.ts";
@@ -71,10 +71,10 @@ export const saturable = {
   superposes: false,
   compartments: 1,
   check: (name, { vmax, km, volume }) => {
-    argumentAboveZero(`${name}.vmax`, vmax, "mg/h");
-    argumentAboveZero(`${name}.km`, km, "mg/L");
-    argumentAboveZero(`${name}.volume`, volume, "L");
-    argumentAboveZero(`${name}.vmax / (km × volume)`, vmax / (km * volume), "/h");
+    modelPositive(`${name}.vmax`, vmax, "mg/h");
+    modelPositive(`${name}.km`, km, "mg/L");
+    modelPositive(`${name}.volume`, volume, "L");
+    modelPositive(`${name}.vmax / (km × volume)`, vmax / (km * volume), "/h");
   },
   stretch: (disposition, body, inflow, length) =>
     new SaturableStretch(saturationOf(disposition), disposition.volume, body[0]!, inflow, length),

@@ -1,7 +1,11 @@
+import { type Inflow, inflowAt } from "./stretch.ts";
+
 /** Terms of the power series. 20 to 26 cost about the same for a stretch; see tests/bench. */
 const TERMS = 22;
-/** What is cut off a series, as a part of the amount at stake. */
+/** What is cut off a series, as a part of the amount at stake, or of the capacity that is free. */
 const CUT_OFF = 1e-17;
+/** A depot with less than this part of it is left out: a fast one that is all but empty would else dictate the unit of time. */
+const LEFT_OUT_BELOW = 1e-25;
 
 /** Elimination that saturates: rate = vmax·b/(half + b), b mg in the body. */
 export interface Saturation {
@@ -11,36 +15,29 @@ export interface Saturation {
   readonly half: number;
 }
 
-/** mg/h that flow in: Σ ka·gut·e^(−ka·u) + rate. */
-export interface SeriesInflow {
-  readonly ka: readonly number[];
-  readonly gut: readonly number[];
-  readonly rate: number;
-}
-
 /**
- * A power series for the amount in the body that holds for a short time: b(u) = Σ bₖ·(u/unit)^k, and the same for the saturated part
- * e = b/(half + b) of vmax.
+ * Power series that hold for a short time: the amount in the body b(u) = Σ bₖ·(u/unit)^k, the part of vmax that is free,
+ * half/(half + b), and the part that is used, b/(half + b).
  */
 export interface SaturableSeries {
   /** h */
   readonly unit: number;
-  /** h for which it holds. */
+  /** h for which they hold. */
   readonly length: number;
   readonly body: Float64Array;
-  readonly saturated: Float64Array;
-  /** half/(half + b) at the start: 1 − saturated[0] without the cancellation. */
-  readonly free: number;
+  readonly free: Float64Array;
+  /** −free but for the leading term, which is given for itself because 1 − free would cancel. */
+  readonly used: Float64Array;
 }
 
 /**
  * The series from a given state.
  *
- * Formula, with x = u/unit: (half + b)·e = b gives eₖ = (bₖ − Σ_{j=1..k} bⱼ·e_{k−j})/(half + b₀); b′ = inflow − vmax·e gives
- * bₖ₊₁ = unit·(inflowₖ − vmax·eₖ)/(k + 1). The length is chosen so that each of the last three terms is below 1e-17 of the amount
- * at stake.
+ * Formula, with x = u/unit: (half + b)·free = half gives freeₖ = −Σ_{j=1..k} bⱼ·free_{k−j}/(half + b₀); usedₖ = −freeₖ for k > 0;
+ * b′ = inflow − vmax·used gives bₖ₊₁ = unit·(inflowₖ − vmax·usedₖ)/(k + 1). The length is chosen so that each of the last three terms
+ * is below 1e-17 of the amount at stake, and of the free part.
  * @param body mg, 0 or more
- * @param hours how long the inflow lasts at most, above 0
+ * @param hours how long the inflow lasts at most, 0 or more
  * @returns see SaturableSeries
  * Accuracy: relative 1e-15 of the amount at stake, rounding included.
  * Source: power-series method for differential equations (standard), derived in docs/methods/saturable-elimination.md.
@@ -48,37 +45,46 @@ export interface SaturableSeries {
 export function saturableSeries(
   { vmax, half }: Saturation,
   body: number,
-  inflow: SeriesInflow,
+  inflow: Inflow,
   hours: number,
 ): SaturableSeries {
-  const { ka, gut, rate } = inflow;
+  const { rate } = inflow;
   const linearRate = vmax / half;
-  const unit = 1 / Math.max(linearRate, ...ka);
-  const b = new Float64Array(TERMS + 1);
-  const e = new Float64Array(TERMS + 1);
-  const term = ka.map((k, i) => k * gut[i]!);
+  // What can be in the body at once: from a slow depot only what comes in about one time constant.
+  let atStake = body + rate * Math.min(hours, 1 / linearRate);
+  for (const [i, k] of inflow.ka.entries()) atStake += inflow.gut[i]! * Math.min(1, k / linearRate);
+  const isIn = (_: unknown, i: number) => inflow.gut[i]! > LEFT_OUT_BELOW * atStake;
+  const ka = inflow.ka.filter(isIn);
+  const gut = inflow.gut.filter(isIn);
   const total = half + body;
+  // About the time in which anything changes: the coefficients then neither over- nor underflow.
+  const unit = 1 / Math.max(vmax / total, inflowAt({ ka, gut, rate }, 0) / total, ...ka);
+  const b = new Float64Array(TERMS + 1);
+  const free = new Float64Array(TERMS + 1);
+  const term = ka.map((k, i) => k * gut[i]!);
   b[0] = body;
-  e[0] = body / total;
+  free[0] = half / total;
+  let used = body / total;
   for (let k = 0; k < TERMS; k++) {
     let input = k === 0 ? rate : 0;
     for (let i = 0; i < ka.length; i++) {
       input += term[i]!;
       term[i] = (term[i]! * -ka[i]! * unit) / (k + 1);
     }
-    b[k + 1] = (unit * (input - vmax * e[k]!)) / (k + 1);
-    let sum = b[k + 1]!;
-    for (let j = 1; j <= k + 1; j++) sum -= b[j]! * e[k + 1 - j]!;
-    e[k + 1] = sum / total;
+    b[k + 1] = (unit * (input - vmax * used)) / (k + 1);
+    let sum = 0;
+    for (let j = 1; j <= k + 1; j++) sum += b[j]! * free[k + 1 - j]!;
+    used = sum / total;
+    free[k + 1] = -used;
   }
-  // What can be in the body at once: from a slow depot only what comes in about one time constant.
-  let atStake = body + rate * Math.min(hours, 1 / linearRate);
-  for (let i = 0; i < ka.length; i++) atStake += gut[i]! * Math.min(1, ka[i]! / linearRate);
   let x = Number.POSITIVE_INFINITY;
   for (let k = TERMS - 2; k <= TERMS; k++) {
     if (b[k] !== 0) x = Math.min(x, ((CUT_OFF * atStake) / Math.abs(b[k]!)) ** (1 / k));
+    if (free[k] !== 0) x = Math.min(x, ((CUT_OFF * free[0]!) / Math.abs(free[k]!)) ** (1 / k));
   }
-  return { unit, length: x * unit, body: b, saturated: e, free: half / total };
+  const usedSeries = free.map((value) => -value);
+  usedSeries[0] = body / total;
+  return { unit, length: x * unit, body: b, free, used: usedSeries };
 }
 
 /** Σ cₖ·x^k. */
@@ -95,14 +101,12 @@ export function seriesArea(coefficients: Float64Array, x: number): number {
   return sum * x;
 }
 
-/** The coefficients of (half/(half + b))². */
-export function seriesFreeSquared({ saturated, free }: SaturableSeries): Float64Array {
-  const w = saturated.map((value) => -value);
-  w[0] = free;
+/** The coefficients of the square of a series. */
+export function seriesSquared(coefficients: Float64Array): Float64Array {
   const square = new Float64Array(TERMS + 1);
   for (let k = 0; k <= TERMS; k++) {
     let sum = 0;
-    for (let j = 0; j <= k; j++) sum += w[j]! * w[k - j]!;
+    for (let j = 0; j <= k; j++) sum += coefficients[j]! * coefficients[k - j]!;
     square[k] = sum;
   }
   return square;

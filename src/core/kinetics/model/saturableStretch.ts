@@ -6,7 +6,7 @@ import {
   saturableSeries,
   seriesArea,
   seriesAt,
-  seriesFreeSquared,
+  seriesSquared,
 } from "./saturableSeries.ts";
 import { singleTurn } from "./singleTurn.ts";
 import { type Inflow, inflowAt, inflowSlopeAt, type Stretch } from "./stretch.ts";
@@ -14,7 +14,7 @@ import { type Inflow, inflowAt, inflowSlopeAt, type Stretch } from "./stretch.ts
 /** Below this part of Km × volume the elimination is in proportion to the amount, to the last digit. */
 const LINEAR_BELOW = 1e-17;
 /** A stretch that needs more pieces than this has a time constant far below any medicine's. */
-const MOST_PIECES = 50_000;
+const MOST_PIECES = 5_000;
 
 /** A piece of the stretch; areas are up to its start. Without a series it is the linear tail, which has no end. */
 interface Piece {
@@ -85,7 +85,7 @@ export class SaturableStretch implements Stretch {
     if (series === undefined) {
       return eliminated + this.#linearRate * linearResponseArea(this.#linearRate, body, inflow, u - start);
     }
-    return eliminated + this.#saturation.vmax * series.unit * seriesArea(series.saturated, (u - start) / series.unit);
+    return eliminated + this.#saturation.vmax * series.unit * seriesArea(series.used, (u - start) / series.unit);
   }
 
   /**
@@ -104,12 +104,8 @@ export class SaturableStretch implements Stretch {
         squared += length;
       } else {
         const { unit } = series;
-        const x = length / unit;
-        // free = 1 − saturated, term by term; the leading one is given apart because it would cancel.
-        const change = series.saturated.slice();
-        change[0] = 0;
-        free += length * series.free - unit * seriesArea(change, x);
-        squared += unit * seriesArea(seriesFreeSquared(series), x);
+        free += unit * seriesArea(series.free, length / unit);
+        squared += unit * seriesArea(seriesSquared(series.free), length / unit);
       }
       if (piece === at) break;
     }
@@ -165,7 +161,7 @@ export class SaturableStretch implements Stretch {
         piece.end,
         Math.max(0, seriesAt(series.body, x)),
         piece.area + unit * seriesArea(series.body, x),
-        piece.eliminated + vmax * unit * seriesArea(series.saturated, x),
+        piece.eliminated + vmax * unit * seriesArea(series.used, x),
       );
       pieces.push(piece);
     }

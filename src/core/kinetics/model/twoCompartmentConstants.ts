@@ -1,4 +1,4 @@
-import { argumentAboveZero } from "../argumentCheck.ts";
+import { modelPositive } from "./modelArgument.ts";
 
 /** A central compartment that exchanges with a peripheral one and eliminates in proportion to its level. */
 export interface TwoCompartmentDisposition {
@@ -39,13 +39,13 @@ export interface TwoCompartmentConstants {
 
 export function twoCompartmentCheck(name: string, disposition: TwoCompartmentDisposition): void {
   const { clearance, volume, exchange, peripheralVolume } = disposition;
-  argumentAboveZero(`${name}.clearance`, clearance, "L/h");
-  argumentAboveZero(`${name}.volume`, volume, "L");
-  argumentAboveZero(`${name}.exchange`, exchange, "L/h");
-  argumentAboveZero(`${name}.peripheralVolume`, peripheralVolume, "L");
-  argumentAboveZero(`${name}.clearance / volume`, clearance / volume, "/h");
-  argumentAboveZero(`${name}.exchange / volume`, exchange / volume, "/h");
-  argumentAboveZero(`${name}.exchange / peripheralVolume`, exchange / peripheralVolume, "/h");
+  modelPositive(`${name}.clearance`, clearance, "L/h");
+  modelPositive(`${name}.volume`, volume, "L");
+  modelPositive(`${name}.exchange`, exchange, "L/h");
+  modelPositive(`${name}.peripheralVolume`, peripheralVolume, "L");
+  modelPositive(`${name}.clearance / volume`, clearance / volume, "/h");
+  modelPositive(`${name}.exchange / volume`, exchange / volume, "/h");
+  modelPositive(`${name}.exchange / peripheralVolume`, exchange / peripheralVolume, "/h");
 }
 
 /**

@@ -216,8 +216,8 @@ describe("bad patterns", () => {
       24,
       "inputs[0].doses[0].time is -1 h; allowed: 0 to below the period, 24 h",
     ],
-    [[one], 0, "period is 0 h; allowed: a finite number above 0"],
-    [[one], Number.NaN, "period is NaN h; allowed: a finite number above 0"],
+    [[one], 0, "period is 0 h; allowed: above 0, 1e-30 to 1e+30"],
+    [[one], Number.NaN, "period is NaN h; allowed: above 0, 1e-30 to 1e+30"],
     [[], 24, "the sum of absorbed doses in the period is 0 mg; allowed: above 0"],
   ] as const)("%j every %d h", (list, period, message) => {
     expect(() => modelSteadyState(disposition, list, period)).toThrow(new RangeError(message));
