@@ -17,9 +17,11 @@ const { cases } = JSON.parse(readFileSync(new URL("../fixtures/ode_public.json",
   cases: Case[];
 };
 
-/** Of the largest level listed. */
-const LINEAR = 1e-12;
-const SATURABLE = 1e-8;
+/**
+ * Of the largest level listed. What was asked for is 1e-12 for the linear models and 1e-8 for saturable elimination; reached is
+ * 5e-16, and the bar stands close above that.
+ */
+const BAR = 1e-15;
 
 function modelOf({ model, inputs }: Case): { disposition: ModelDisposition; input: ModelInput } {
   const figure = (name: string) => {
@@ -80,8 +82,6 @@ describe("levels of models beyond first-order, one-compartment: 50-digit referen
   });
 
   test.each(cases.map((one) => [one.id, one] as const))("%s", (_id, one) => {
-    const error = errorOf(one);
-    if (process.env.SHOW) console.log(one.id, error);
-    expect(error).toBeLessThanOrEqual(one.model.includes("Michaelis") ? SATURABLE : LINEAR);
+    expect(errorOf(one)).toBeLessThanOrEqual(BAR);
   });
 });
