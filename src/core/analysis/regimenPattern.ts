@@ -1,5 +1,5 @@
 import type { Case } from "../case/index.ts";
-import { doseMg, productOf } from "../medicine/index.ts";
+import { doseLabelledMg, doseMg, productOf } from "../medicine/index.ts";
 import { type DoseLine, doseLineEndMs } from "../regimen/index.ts";
 import { instantMs, wallClock } from "../time/index.ts";
 
@@ -47,12 +47,12 @@ export function regimenPattern(value: Case, lines: readonly DoseLine[]): Pattern
   for (const line of ongoing) {
     const product = productOf(value.medicine, line.product);
     const mg = doseMg(line.amount, product);
-    const saltFactor = product.saltFactor?.value ?? 1;
-    if (!mg.ok) return { ok: false, reason: "no-repeat" };
+    const labelled = doseLabelledMg(line.amount, product);
+    if (!mg.ok || !labelled.ok) return { ok: false, reason: "no-repeat" };
     const doses = courses.get(line.product) ?? [];
     for (const minute of patternMinutes(line, startMs, period, value.timeZone)) {
       doses.push({ time: minute / 60, amount: mg.value });
-      dosePerPeriodMg += mg.value / saltFactor;
+      dosePerPeriodMg += labelled.value;
     }
     courses.set(line.product, doses);
   }

@@ -104,8 +104,13 @@ export function typicalModel(
       readings: modelBothReadings(disposition, absorption, product.bioavailability.value, product.lag.value),
     };
   });
+  // What a source says of sampling goes before what the model's own rates would give.
+  const earliest = record.earliestSample?.value;
   const distributionEndH = Object.fromEntries(
-    products.map((product) => [product.product, product.lag.value + distributionEnd(disposition, product.absorption)]),
+    products.map((product) => [
+      product.product,
+      earliest ?? product.lag.value + distributionEnd(disposition, product.absorption),
+    ]),
   );
   return {
     model: {

@@ -11,7 +11,7 @@ export const FIELD_ORDER: readonly string[] = (
   "kinetics variability clearance maximumRate halfMaximum volume exchange peripheralVolume apparent " +
   "absorptionRate input duration fastFraction slowRate slowDuration slowLag saltFactor residualProportional residualAdditive " +
   "population products product form release strengths concentration divisible swallowWhole lag bioavailability " +
-  "windows toxicFrom doseLimits sampling cautions formula text category " +
+  "windows toxicFrom earliestSample doseLimits sampling cautions formula text category " +
   "window quantity low high value unit given levels options lines amount start repeat every count clock days except " +
   "chosen confirmed excluded ageMin ageMax source basis note fit use residualModel notes"
 ).split(" ");

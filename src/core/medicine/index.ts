@@ -1,5 +1,6 @@
 /** The medicine record: its schema, its formulas over the patient, the built-in records, and amounts of its products in mg. */
 
+export { concentrationUnit } from "./concentrationUnit.ts";
 export { type FormulaInput, formulaEvaluate } from "./covariateFormula.ts";
 export { COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
 export { covariatesOf } from "./covariatesOf.ts";

@@ -99,6 +99,8 @@ export const recordShapeSchema = z.strictObject({
   products: z.array(productSchema).min(1),
   windows: z.array(recordWindowSchema),
   toxicFrom: figureSchema.optional(),
+  /** Hours after a dose before which a level is not to be drawn, where a source says so. */
+  earliestSample: figureSchema.optional(),
   doseLimits: z.array(statementSchema),
   sampling: z.array(statementSchema),
   cautions: z.array(cautionSchema),

@@ -68,6 +68,7 @@ function figureFaults(record: MedicineRecord): RecordFault[] {
     ...boundsFaults(v.residualProportional, VARIATION, ["variability", "residualProportional"]),
     ...boundsFaults(v.residualAdditive, { unit: "mg/L", above: 0 }, ["variability", "residualAdditive"]),
     ...boundsFaults(record.toxicFrom, { unit: "mg/L", above: 0 }, ["toxicFrom"]),
+    ...boundsFaults(record.earliestSample, { unit: "h", above: 0, most: 168 }, ["earliestSample"]),
   ];
 }
 

@@ -42,6 +42,7 @@ export function recordFigures(record: MedicineRecord): RecordFigure[] {
     add(["windows", i], window);
   });
   add(["toxicFrom"], record.toxicFrom);
+  add(["earliestSample"], record.earliestSample);
   return figures;
 }
 

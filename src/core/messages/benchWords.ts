@@ -15,6 +15,7 @@ export const benchWords = {
   addOption: "Add an option",
   addDoses: "Add doses",
   addLevel: "Levels",
+  rich: "without a model",
   earlier: "Earlier",
   later: "Later",
   exportFile: "Export the case as a file",

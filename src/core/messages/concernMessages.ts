@@ -16,7 +16,9 @@ type Data = Readonly<Record<string, unknown>>;
 const number = (data: Data, key: string): number => data[key] as number;
 const text = (data: Data, key: string): string => data[key] as string;
 const figure = (value: number): string => numberPrint(value, { significant: 3 });
-const concentration = (value: number): string => `${figure(value)} mg per L`;
+/** Low ones in micrograms: fewer decimals. */
+const concentration = (value: number): string =>
+  Math.abs(value) < 0.1 && value !== 0 ? `${figure(value * 1000)} microgram per L` : `${figure(value)} mg per L`;
 const hours = (value: number): string => `${figure(value)} hours`;
 const when = (data: Data): string => instantText(number(data, "atMs"), text(data, "zone"), "dayClock");
 const plural = (count: number, one: string, many: string): string => `${count} ${count === 1 ? one : many}`;
@@ -37,14 +39,15 @@ const OBSERVATION_WORDS: Readonly<Record<string, string>> = {
 };
 
 function outsideWindow(data: Data, side: "above" | "below"): ConcernWords {
-  const unit = text(data, "unit") === "mg.h/L" ? "mg hours per L" : "mg per L";
+  const isArea = text(data, "unit") === "mg.h/L";
+  const print = (value: number) => (isArea ? `${figure(value)} mg hours per L` : concentration(value));
   const found = side === "above" ? number(data, "most") : number(data, "least");
   const edge = side === "above" ? number(data, "high") : number(data, "low");
   const name = text(data, "quantity") as TargetWindow["quantity"];
   const words = name === "lowest-and-highest" ? (side === "above" ? "highest" : "lowest") : windowQuantityWord(name);
   return {
     title: `Option ${text(data, "option")} settles ${side} the target window`,
-    text: `Expected ${words} at steady state ${figure(found)} ${unit}; the window's ${side === "above" ? "upper" : "lower"} edge is ${figure(edge)}.`,
+    text: `Expected ${words} at steady state ${print(found)}; the window's ${side === "above" ? "upper" : "lower"} edge is ${print(edge)}.`,
   };
 }
 
@@ -118,7 +121,7 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
   }),
   "factor-by-hand": (data) => ({
     title: `${FACTOR_WORDS[text(data, "kind")] ?? "Event"}: clearance changed by hand`,
-    text: `${text(data, "detail")}. Clearance times ${figure(number(data, "clearance"))}${number(data, "volume") === 1 ? "" : `, volume times ${figure(number(data, "volume"))}`}${number(data, "onsetDays") > 0 ? `, reached in daily steps over ${figure(number(data, "onsetDays"))} days` : ", at once"}. The factor is the user's own figure, not the record's.`,
+    text: `${text(data, "detail")}. Clearance ${figure(number(data, "clearance") * 100)} % of usual${number(data, "volume") === 1 ? "" : `, volume ${figure(number(data, "volume") * 100)} %`}${number(data, "onsetDays") > 0 ? `, reached in daily steps over ${figure(number(data, "onsetDays"))} days` : ", at once"}. That is the user's own figure, not the record's.`,
   }),
   "kinetics-change": (data) => ({
     title: "The kinetics change during the course",

@@ -81,6 +81,7 @@ const FIGURES: Readonly<Record<string, string>> = {
   residualAdditive: "residual variability (additive)",
   windows: "window",
   toxicFrom: "toxic limit",
+  earliestSample: "earliest sampling time",
   population: "population",
   doseLimits: "dose limit",
   sampling: "sampling statement",

@@ -74,8 +74,10 @@ export const noncompartmentalMessages: Readonly<Record<string, MessageFunction>>
   "rich-model-missing": () =>
     "There are levels enough after a dose, but how long it takes to reach steady state is not known: the typical patient can't be worked out yet.",
   "rich-not-steady": ({ run, needed }) =>
-    `There are levels enough after a dose, but regular doses had run for only ${number(run)} h before it; ${needed === null ? "at this dose no steady state is reached" : `steady state takes about ${number(needed)} h (five half-lives)`}. The earlier doses are still in the levels.`,
+    `There are levels enough after a dose, but regular doses had run for only ${number(run)} h before it; ${needed === null ? "at this dose no steady state is reached" : `steady state, to within 3 %, takes about ${number(needed)} h`}. The earlier doses are still in the levels.`,
   "rich-clearance-changed": () =>
     "Clearance or volume changed while these levels were drawn: they do not belong to one rate.",
+  "rich-saturates": () =>
+    "Elimination of this medicine saturates: no half-life holds, and clearance, volume and what is carried on hold for these levels only, not for another dose.",
   "rich-reason-missing": () => "Say why other points are taken.",
 };

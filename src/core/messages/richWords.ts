@@ -8,7 +8,7 @@ export const richWords = {
   occasionInterval: (dose: string, at: string, count: number) => `${dose} ${at}, at steady state: ${count} levels`,
   oneDose: "The case has no dose before this one.",
   interval: (tau: string) =>
-    `Equal doses every ${tau} have run for five half-lives of the typical patient: steady state is taken as reached (common practice).`,
+    `Equal doses every ${tau} have run long enough for the typical patient to be within 3 % of steady state (five half-lives, where there is one; common practice).`,
   method: "Areas between the levels",
   methods: {
     "linear-up-log-down": {
@@ -21,6 +21,8 @@ export const richWords = {
   chartTitle: (count: number, line: string) => `Log plot of ${count} levels over the hours after the dose. ${line}`,
   chartLine: (points: number, from: string, to: string, halfLife: string) =>
     `The terminal line lies on ${points} levels from ${from} to ${to} and halves in ${halfLife}.`,
+  chartLineAlone: (points: number, from: string, to: string) =>
+    `The terminal line lies on ${points} levels from ${from} to ${to}.`,
   chartNoLine: "There is no terminal line.",
   chartKey: "Full marks lie on the terminal line; it is dashed where it is carried on.",
   notDrawn: (count: number) =>
@@ -60,7 +62,7 @@ export const richWords = {
   stale: "The figures are being worked out again.",
   waiting: "The case is being worked out.",
   absorbedBy:
-    "Absorbed: by Wagner–Nelson with the terminal rate as the rate of elimination. Where absorption is the slower of the two (flip-flop), that rate is the absorption rate, and neither the share absorbed nor ka holds.",
+    "Absorbed: by Wagner–Nelson with the terminal rate as the rate of elimination. Where absorption is the slower of the two (flip-flop), that rate is the absorption rate, and neither the share absorbed nor ka holds. A share above 100 % shows how far the levels and that rate disagree.",
   names: {
     cmax: "Highest level measured (Cmax)",
     tmax: "after the dose (Tmax)",
@@ -70,8 +72,9 @@ export const richWords = {
     aucLinear: "AUC measured, linear",
     aucLogDown: "AUC measured, linear up, log down",
     aucInfinity: "AUC to infinity",
+    aucPredicted: "the same from the last level on the line",
     aucInterval: "AUC in the interval",
-    carriedOn: "of it carried on, not measured",
+    carriedOn: "Part of the AUC carried on, not measured",
     average: "Average level",
     aumcInfinity: "AUMC to infinity",
     mrt: "Mean residence time",
@@ -83,5 +86,4 @@ export const richWords = {
   fit: (points: number, adjusted: string) => `${points} levels, adjusted R² ${adjusted}`,
   upTo: (hours: string) => `up to ${hours}`,
   inInterval: (hours: string) => `in ${hours}`,
-  bothLast: (observed: string, predicted: string) => `${observed}; ${predicted} from the line's own last level`,
 } as const;

@@ -125,6 +125,7 @@ export const medicinesWords = {
     halfMaximum: "concentration at half the highest rate",
     molarMass: "molar mass",
     toxicFrom: "toxic from",
+    earliestSample: "no level before, after a dose",
     residualProportional: "residual, in proportion",
     residualAdditive: "residual, added",
     concentration: "concentration",

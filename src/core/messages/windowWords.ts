@@ -1,4 +1,5 @@
 import type { TargetWindow } from "../case/index.ts";
+import { numberPrint, quantityConvert, unitSpoken } from "../units/index.ts";
 
 /** What a target window is about, in words. */
 const WORDS: Readonly<Record<TargetWindow["quantity"], string>> = {
@@ -11,4 +12,13 @@ const WORDS: Readonly<Record<TargetWindow["quantity"], string>> = {
 
 export function windowQuantityWord(quantity: TargetWindow["quantity"]): string {
   return WORDS[quantity];
+}
+
+/** "5 to 15 mg/L"; a concentration in the unit the medicine is read in. */
+export function windowRangeWords({ low, high }: TargetWindow, shown: "mg/L" | "ug/L"): string {
+  if (low.unit === "mg.h/L" || high.unit === "mg.h/L") {
+    return `${numberPrint(low.value, {})} to ${numberPrint(high.value, {})} mg·h/L`;
+  }
+  const figure = (end: typeof low) => numberPrint(quantityConvert(end, shown), {});
+  return `${figure(low)} to ${figure(high)} ${unitSpoken(shown, "screen")}`;
 }

@@ -4,12 +4,14 @@ import { EventEntry } from "../entry/EventEntry.tsx";
 import { LevelEntry } from "../entry/LevelEntry.tsx";
 import { PatientPanel } from "../entry/PatientPanel.tsx";
 import { WindowEntry } from "../entry/WindowEntry.tsx";
+import { RichLevelsPanel } from "../rich/RichLevelsPanel.tsx";
 import { Dialog } from "../ui/Dialog.tsx";
 import { MedicinePanel } from "./MedicinePanel.tsx";
 import { OptionPanel } from "./OptionPanel.tsx";
+import type { ShownUnit } from "./shownUnit.ts";
 import { WorkingPanel } from "./WorkingPanel.tsx";
 
-export type BenchPanelKind = "case" | "patient" | "medicine" | "window" | "levels";
+export type BenchPanelKind = "case" | "patient" | "medicine" | "window" | "levels" | "rich";
 
 /** Which drawer is open: one of the simple ones, the doses of a lane, an option, or the working of a reading. */
 export type OpenPanel =
@@ -25,11 +27,18 @@ const TITLES: Readonly<Record<BenchPanelKind | "doses" | "events", string>> = {
   medicine: "Medicine",
   window: "Target window",
   levels: "Measured levels",
+  rich: "Levels without a model",
   doses: "Doses given",
   events: "Events",
 };
 
-export function BenchPanel({ panel, onClose }: { readonly panel: OpenPanel; readonly onClose: () => void }) {
+interface BenchPanelProps {
+  readonly panel: OpenPanel;
+  readonly unit: ShownUnit;
+  readonly onClose: () => void;
+}
+
+export function BenchPanel({ panel, unit, onClose }: BenchPanelProps) {
   const title =
     panel.kind === "option" ? `Option ${panel.option}` : panel.kind === "working" ? "Working" : TITLES[panel.kind];
   return (
@@ -39,6 +48,7 @@ export function BenchPanel({ panel, onClose }: { readonly panel: OpenPanel; read
       {panel.kind === "medicine" && <MedicinePanel />}
       {panel.kind === "window" && <WindowEntry onDone={onClose} />}
       {panel.kind === "levels" && <LevelEntry onDone={onClose} />}
+      {panel.kind === "rich" && <RichLevelsPanel unit={unit} />}
       {panel.kind === "doses" && (
         <DoseEntry lane="given" onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
       )}

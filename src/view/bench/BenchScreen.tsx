@@ -23,12 +23,15 @@ import { LaneLines, OptionHead } from "./OptionHead.tsx";
 import { ProfileRow } from "./ProfileRow.tsx";
 import { ReadingsTable } from "./ReadingsTable.tsx";
 import { SavingBar } from "./SavingBar.tsx";
-import type { ShownUnit } from "./shownUnit.ts";
+import { shownUnits } from "./shownUnit.ts";
 import { useBenchKeys } from "./useBenchKeys.ts";
 import { useElementWidth } from "./useElementWidth.ts";
 
 /** Room at the right of the clock for the curves' names and the window's edges, px. */
 const RIGHT = 76;
+
+/** Levels from which they can say something without a model. */
+const RICH_FROM = 4;
 
 interface BenchScreenProps {
   readonly onPrint: () => void;
@@ -40,7 +43,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const edit = useWorkbench((state) => state.edit);
   const [panel, setPanel] = useState<OpenPanel | null>(null);
   const [scale, setScale] = useState<"linear" | "log">("linear");
-  const [unit, setUnit] = useState<ShownUnit>("mg/L");
+  const [isMolar, setMolar] = useState(false);
   const [chosenSpan, setChosenSpan] = useState<BenchSpan | null>(null);
   const [isWhereShown, setWhereShown] = useState(false);
   const clockColumn = useRef<HTMLDivElement>(null);
@@ -76,6 +79,8 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const close = useCallback(() => setPanel(null), []);
   if (!open || !value) return null;
   const isReader = open.role === "reader";
+  const units = shownUnits(value);
+  const unit = isMolar ? units.molar : units.mass;
   const lineTexts = (lines: readonly DoseLine[]) =>
     lines.map((line) => ({ id: line.id, text: laneLineWords(line, value.timeZone) }));
   const clock = span ? clockScale(span.fromH, span.toH, 0, width - RIGHT) : null;
@@ -125,8 +130,8 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
           </div>
           <div className="bench-side">
             <div className="bench-switches">
-              <Button kind="quiet" onPress={() => setUnit(unit === "mg/L" ? "umol/L" : "mg/L")}>
-                {unitSpoken(unit === "mg/L" ? "umol/L" : "mg/L", "screen")}
+              <Button kind="quiet" onPress={() => setMolar(!isMolar)}>
+                {unitSpoken(isMolar ? units.mass : units.molar, "screen")}
               </Button>
               <Button kind="quiet" onPress={() => setScale(scale === "linear" ? "log" : "linear")}>
                 {scale === "linear" ? benchWords.log : benchWords.linear}
@@ -137,6 +142,11 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
               <Button kind="quiet" onPress={() => setPanel({ kind: "levels" })}>
                 {benchWords.addLevel}
               </Button>
+              {value.levels.length >= RICH_FROM && (
+                <Button kind="quiet" onPress={() => setPanel({ kind: "rich" })}>
+                  {benchWords.rich}
+                </Button>
+              )}
             </div>
             <div className="bench-zoom" role="group" aria-label="Part of the clock shown">
               <Button kind="quiet" onPress={() => zoom(0.6)}>
@@ -294,7 +304,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
           <p className="bench-intended">{benchWords.intended}</p>
         </aside>
       </main>
-      {panel && <BenchPanel panel={panel} onClose={close} />}
+      {panel && <BenchPanel panel={panel} unit={unit} onClose={close} />}
     </div>
   );
 }

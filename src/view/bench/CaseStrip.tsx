@@ -1,9 +1,9 @@
 import type { ReactNode } from "react";
 import type { Analysis } from "../../core/analysis/index.ts";
-import { productOf } from "../../core/medicine/index.ts";
-import { benchWords, editLabel, windowQuantityWord } from "../../core/messages/index.ts";
+import { concentrationUnit, productOf } from "../../core/medicine/index.ts";
+import { benchWords, editLabel, windowQuantityWord, windowRangeWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
-import { numberPrint, quantityPrint, unitSpoken } from "../../core/units/index.ts";
+import { numberPrint, quantityPrint } from "../../core/units/index.ts";
 import type { OpenCase } from "../../shell/store/workbenchState.ts";
 import { Button } from "../ui/Button.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
@@ -75,10 +75,7 @@ export function CaseStrip({ open, analysis, onPanel, onPrint }: CaseStripProps) 
       <StripCell name="target window" onPress={() => onPanel("window")}>
         {window ? (
           <>
-            <span className="strip-nowrap">
-              {numberPrint(window.low.value, {})} to {numberPrint(window.high.value, {})}{" "}
-              {unitSpoken(window.low.unit, "screen")}
-            </span>
+            <span className="strip-nowrap">{windowRangeWords(window, concentrationUnit(value.medicine))}</span>
             <span className="strip-small">{windowQuantityWord(window.quantity)}</span>
           </>
         ) : (

@@ -130,18 +130,22 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
 }
 
 function profileTitle(value: Case, analysis: Analysis, unit: ShownUnit): string {
-  const window = value.window ? `target window ${value.window.low.value} to ${value.window.high.value} mg/L, ` : "";
+  const factor = unitFactor(value, unit);
+  const three = (mgPerL: number) => numberPrint(mgPerL * factor, { significant: 3 });
+  const shown = unitSpoken(unit, "screen");
+  const window =
+    value.window?.low.unit === "mg/L"
+      ? `target window ${three(value.window.low.value)} to ${three(value.window.high.value)} ${shown}, `
+      : "";
   const options = analysis.options
     .flatMap((option) => {
       const settled = option.typical?.steadyState;
       return settled
-        ? [
-            `option ${option.id} settles between ${numberPrint(settled.lowest, { significant: 3 })} and ${numberPrint(settled.peak, { significant: 3 })} mg/L`,
-          ]
+        ? [`option ${option.id} settles between ${three(settled.lowest)} and ${three(settled.peak)} ${shown}`]
         : [];
     })
     .join(", ");
-  return `Predicted ${value.medicine.name} concentration in ${unitSpoken(unit, "screen")} over time: ${window}${options || "no option with a steady state"}`;
+  return `Predicted ${value.medicine.name} concentration in ${shown} over time: ${window}${options || "no option with a steady state"}`;
 }
 
 function readoutWords(value: Case, analysis: Analysis, hours: number, unit: ShownUnit): string {

@@ -3,7 +3,7 @@ import type { Case } from "../../core/case/index.ts";
 import { benchWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
-import { type ShownUnit, unitFactor } from "./shownUnit.ts";
+import { exposureSpoken, type ShownUnit, unitFactor } from "./shownUnit.ts";
 
 /** One row of the readings column: a name and one printed value an option; null where the option has none. */
 export interface ReadingsRow {
@@ -30,7 +30,7 @@ const three = (value: number) => numberPrint(value, { significant: 3 });
 export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit): readonly ReadingsGroup[] {
   const factor = unitFactor(value, unit);
   const concentration = (mgPerL: number) => `${three(mgPerL * factor)} ${unitSpoken(unit, "screen")}`;
-  const exposure = (mgH: number) => `${three(mgH * factor)} ${unit === "mg/L" ? "mg·h/L" : "micromol·h/L"}`;
+  const exposure = (mgH: number) => `${three(mgH * factor)} ${exposureSpoken(unit)}`;
   const hours = (h: number) => `${numberPrint(h, { decimals: 1 })} h`;
   const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
   const row = (

@@ -1,6 +1,6 @@
 import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { doseMg, productOf } from "../../core/medicine/index.ts";
+import { doseLabelledMg, productOf } from "../../core/medicine/index.ts";
 import { amountSteps } from "../../core/regimen/index.ts";
 import { instantIso } from "../../core/time/index.ts";
 import { quantityConvert } from "../../core/units/index.ts";
@@ -22,7 +22,7 @@ export function useTokenActions(value: Case, lane: string, mark: DoseMark, origi
     step: (direction: -1 | 1) => {
       if (mark.status === "missed") return;
       const product = productOf(value.medicine, mark.product);
-      const mg = doseMg(mark.amount, product);
+      const mg = doseLabelledMg(mark.amount, product);
       if (!mg.ok || product.form === "liquid") return;
       const steps = amountSteps(
         mg.value,

@@ -50,7 +50,10 @@ export function kineticsRows(record: MedicineRecord): readonly RecordRow[] {
         ]
       : [],
   );
-  return [...formulas, ...figureRows({ molarMass: record.molarMass, toxicFrom: record.toxicFrom })];
+  return [
+    ...formulas,
+    ...figureRows({ molarMass: record.molarMass, toxicFrom: record.toxicFrom, earliestSample: record.earliestSample }),
+  ];
 }
 
 export function variabilityRows(record: MedicineRecord): readonly RecordRow[] {

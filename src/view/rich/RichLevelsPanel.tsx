@@ -2,7 +2,7 @@ import { useMemo, useState } from "react";
 import { issueMessage, richWords } from "../../core/messages/index.ts";
 import type { AreaMethod } from "../../core/noncompartmental/index.ts";
 import { instantText } from "../../core/time/index.ts";
-import { quantityPrint } from "../../core/units/index.ts";
+import { quantityConvert, quantityPrint } from "../../core/units/index.ts";
 import { ChoiceField } from "../ui/ChoiceField.tsx";
 import { Notice } from "../ui/Notice.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
@@ -24,8 +24,9 @@ export function RichLevelsPanel({ unit = "mg/L" }: { readonly unit?: RichUnit })
   const open = useWorkbench((state) => state.open);
   const [method, setMethod] = useState<AreaMethod>("linear-up-log-down");
   const [chosenId, setChosenId] = useState<string | null>(null);
+  const value = open?.value ?? null;
   const analysis = open?.analysis.result ?? null;
-  const found = useMemo(() => analysis && richOccasions(analysis), [analysis]);
+  const found = useMemo(() => value && analysis && richOccasions(value, analysis), [value, analysis]);
   if (!open) return null;
   if (!analysis || !found) return <p>{richWords.waiting}</p>;
 
@@ -64,7 +65,7 @@ export function RichLevelsPanel({ unit = "mg/L" }: { readonly unit?: RichUnit })
             occasion={occasion}
             method={method}
             unit={unit}
-            factor={unit === "mg/L" ? 1 : 1000 / medicine.molarMass.value}
+            factor={quantityConvert({ value: 1, unit: "mg/L" }, unit, medicine.molarMass.value)}
             clock={clock}
           />
         </>

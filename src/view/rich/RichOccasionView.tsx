@@ -1,6 +1,7 @@
 import { useMemo, useState } from "react";
 import { issueMessage, richWords } from "../../core/messages/index.ts";
 import type { AreaMethod } from "../../core/noncompartmental/index.ts";
+import { unitSpoken } from "../../core/units/index.ts";
 import { TerminalChart } from "../chart/TerminalChart.tsx";
 import { terminalScene } from "../chart/terminalScene.ts";
 import { DataTable } from "../ui/DataTable.tsx";
@@ -51,7 +52,7 @@ export function RichOccasionView({ occasion, method, unit, factor, clock }: Rich
         <TerminalChart
           scene={scene}
           title={chartTitle(reading, occasion, show)}
-          unitLabel={unit === "mg/L" ? "mg/L" : "micromol/L"}
+          unitLabel={unitSpoken(unit, "screen")}
           hoursLabel={richWords.hours}
         />
         <figcaption className="rich-levels-soft">
@@ -82,11 +83,11 @@ export function RichOccasionView({ occasion, method, unit, factor, clock }: Rich
         <>
           <DataTable
             caption={richWords.figures}
-            rows={richFigures(reading, unit, factor)}
+            rows={richFigures(reading, occasion.saturates, unit, factor)}
             rowKey={(row) => row.id}
             columns={[
-              { id: "figure", head: richWords.figure, isRowHead: true, cell: (row) => row.name },
-              { id: "value", head: richWords.value, align: "end", cell: (row) => row.value },
+              { id: "figure", head: richWords.figure, isRowHead: true, isHeadHidden: true, cell: (row) => row.name },
+              { id: "value", head: richWords.value, isHeadHidden: true, align: "end", cell: (row) => row.value },
             ]}
           />
           {reading.absorbed && <p className="rich-levels-soft">{richWords.absorbedBy}</p>}
@@ -106,16 +107,18 @@ export function RichOccasionView({ occasion, method, unit, factor, clock }: Rich
   );
 }
 
-function chartTitle({ result }: RichReading, { points }: RichOccasion, show: ReturnType<typeof richUnits>): string {
+function chartTitle(
+  { result }: RichReading,
+  { points, saturates }: RichOccasion,
+  show: ReturnType<typeof richUnits>,
+): string {
   const found = result.ok ? result.value : null;
-  const line =
-    found?.terminal && found.halfLife !== null
-      ? richWords.chartLine(
-          found.terminal.indices.length,
-          show.hours(found.terminal.fromTime),
-          show.hours(found.terminal.toTime),
-          show.hours(found.halfLife),
-        )
-      : richWords.chartNoLine;
-  return richWords.chartTitle(points.length, line);
+  if (!found?.terminal) return richWords.chartTitle(points.length, richWords.chartNoLine);
+  const { indices, fromTime, toTime } = found.terminal;
+  const line = [indices.length, show.hours(fromTime), show.hours(toTime)] as const;
+  const words =
+    found.halfLife === null || saturates
+      ? richWords.chartLineAlone(...line)
+      : richWords.chartLine(...line, show.hours(found.halfLife));
+  return richWords.chartTitle(points.length, words);
 }

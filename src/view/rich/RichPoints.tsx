@@ -53,7 +53,7 @@ export function RichPoints(props: RichPointsProps) {
   };
 
   const peak = occasion.points.reduce((best, { value }, i) => (value > occasion.points[best]!.value ? i : best), 0);
-  const time = (row: Row) => `${numberPrint(row.time, { decimals: 2 })} h`;
+  const time = (row: Row) => `${numberPrint(row.time, { decimals: 2 })}\u00a0h`;
   const columns: DataColumn<Row>[] = [
     { id: "time", head: richWords.time, isRowHead: true, cell: time },
     {
@@ -73,7 +73,7 @@ export function RichPoints(props: RichPointsProps) {
             id: "absorbed",
             head: richWords.absorbed,
             align: "end" as const,
-            cell: (row: Row) => `${numberPrint(absorbed.points[row.index]!.fraction * 100, { decimals: 0 })} %`,
+            cell: (row: Row) => `${numberPrint(absorbed.points[row.index]!.fraction * 100, { decimals: 0 })}\u00a0%`,
           },
         ]
       : []),

@@ -1,10 +1,10 @@
 import { richWords } from "../../core/messages/index.ts";
-import type { AfterOneDose, ToInfinity, WithinInterval } from "../../core/noncompartmental/index.ts";
-import { numberPrint } from "../../core/units/index.ts";
+import type { AfterOneDose, WithinInterval } from "../../core/noncompartmental/index.ts";
+import { numberPrint, unitSpoken } from "../../core/units/index.ts";
 import type { RichReading } from "./richReading.ts";
 
 /** The unit concentrations are shown in. */
-export type RichUnit = "mg/L" | "umol/L";
+export type RichUnit = "mg/L" | "ug/L" | "umol/L" | "nmol/L";
 
 export interface RichFigure {
   readonly id: string;
@@ -13,22 +13,31 @@ export interface RichFigure {
 }
 
 const three = (value: number) => numberPrint(value, { significant: 3 });
-const percent = (share: number) => `${numberPrint(share * 100, { significant: 3 })} %`;
+/** Keeps a number on one line with its unit. */
+const NBSP = "\u00a0";
+const percent = (share: number) => `${three(share * 100)}${NBSP}%`;
 
 /** Numbers with their units as the panel writes them; `factor` turns mg/L into the unit shown. */
 export function richUnits(unit: RichUnit, factor: number) {
-  const amount = unit === "mg/L" ? "mg" : "micromol";
+  const amount = unitSpoken(unit, "screen").replace(/\/L$/, "");
   return {
-    level: (value: number) => `${three(value * factor)} ${amount}/L`,
-    area: (value: number) => `${three(value * factor)} ${amount}·h/L`,
-    moment: (value: number) => `${three(value * factor)} ${amount}·h²/L`,
-    hours: (value: number) => `${three(value)} h`,
-    rate: (value: number) => `${three(value)} per h`,
+    level: (value: number) => `${three(value * factor)}${NBSP}${amount}/L`,
+    area: (value: number) => `${three(value * factor)}${NBSP}${amount}·h/L`,
+    moment: (value: number) => `${three(value * factor)}${NBSP}${amount}·h²/L`,
+    hours: (value: number) => `${three(value)}${NBSP}h`,
+    rate: (value: number) => `${three(value)}${NBSP}per${NBSP}h`,
+    clearance: (value: number) => `${three(value)}${NBSP}L/h`,
+    volume: (value: number) => `${three(value)}${NBSP}L`,
   };
 }
 
-/** The table of results, in the order a reader checks them. */
-export function richFigures(reading: RichReading, unit: RichUnit, factor: number): readonly RichFigure[] {
+/** The table of results, in the order a reader checks them; without a half-life where elimination saturates. */
+export function richFigures(
+  reading: RichReading,
+  saturates: boolean,
+  unit: RichUnit,
+  factor: number,
+): readonly RichFigure[] {
   const { result, residuals } = reading;
   if (!result.ok) return [];
   const found = result.value;
@@ -40,7 +49,7 @@ export function richFigures(reading: RichReading, unit: RichUnit, factor: number
   return [
     ...figure("cmax", show.level(found.cmax)),
     ...figure("tmax", show.hours(found.tmax)),
-    ...figure("halfLife", found.halfLife === null ? null : show.hours(found.halfLife)),
+    ...figure("halfLife", found.halfLife === null || saturates ? null : show.hours(found.halfLife)),
     ...figure("rate", line && show.rate(line.rate)),
     ...figure("fit", line && richWords.fit(line.indices.length, numberPrint(line.adjustedRSquared, { decimals: 4 }))),
     ...(found.kind === "one-dose" ? oneDoseFigures(found) : intervalFigures(found)),
@@ -50,20 +59,16 @@ export function richFigures(reading: RichReading, unit: RichUnit, factor: number
 
   function oneDoseFigures({ auc, observed, predicted, tlast }: AfterOneDose): RichFigure[] {
     const to = (value: number) => `${show.area(value)} ${richWords.upTo(show.hours(tlast))}`;
-    const carried = (pick: (each: ToInfinity) => number, print: (value: number) => string) =>
-      richWords.bothLast(print(pick(observed)), print(pick(predicted)));
     return [
       ...figure("aucLinear", to(auc.linear)),
       ...figure("aucLogDown", to(auc["linear-up-log-down"])),
-      ...figure(
-        "aucInfinity",
-        carried((each) => each.auc, show.area),
-      ),
+      ...figure("aucInfinity", show.area(observed.auc)),
+      ...figure("aucPredicted", show.area(predicted.auc)),
       ...figure("carriedOn", percent(observed.extrapolatedShare)),
       ...figure("aumcInfinity", show.moment(observed.aumc)),
       ...figure("mrt", show.hours(observed.mrt)),
-      ...figure("clearance", `${three(observed.clearance)} L/h`),
-      ...figure("volume", `${three(observed.volume)} L`),
+      ...figure("clearance", show.clearance(observed.clearance)),
+      ...figure("volume", show.volume(observed.volume)),
     ];
   }
 
@@ -72,8 +77,8 @@ export function richFigures(reading: RichReading, unit: RichUnit, factor: number
       ...figure("aucInterval", `${show.area(interval.auc)} ${richWords.inInterval(show.hours(interval.tau))}`),
       ...figure("carriedOn", percent(interval.extrapolatedShare)),
       ...figure("average", show.level(interval.average)),
-      ...figure("clearance", `${three(interval.clearance)} L/h`),
-      ...figure("volume", interval.volume === null ? null : `${three(interval.volume)} L`),
+      ...figure("clearance", show.clearance(interval.clearance)),
+      ...figure("volume", interval.volume === null ? null : show.volume(interval.volume)),
     ];
   }
 }

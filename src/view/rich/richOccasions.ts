@@ -1,4 +1,5 @@
 import type { Analysis, DoseMark, LevelResult, Model } from "../../core/analysis/index.ts";
+import type { Case } from "../../core/case/index.ts";
 import { modelTimeToSteadyState } from "../../core/kinetics/index.ts";
 import { type Issue, issue } from "../../core/result/index.ts";
 
@@ -8,7 +9,7 @@ const FEWEST_LEVELS = 4;
 const JUST_BEFORE_H = 0.5;
 /** Intervals that differ by less than this part count as equal. Ours: an hour or so of twelve. */
 const SAME_INTERVAL = 0.1;
-/** Five half-lives, common practice: within 1/32 of steady state. */
+/** Within 1/32 of steady state, which where there is a half-life takes five. Common practice. */
 const SETTLED_FRACTION = 31 / 32;
 
 export interface RichPoint {
@@ -33,6 +34,8 @@ export interface RichOccasion {
   readonly tau: number | null;
   readonly points: readonly RichPoint[];
   readonly measured: number;
+  /** Elimination saturates, so that no half-life holds. */
+  readonly saturates: boolean;
   /** What to keep in mind about it. */
   readonly cautions: readonly Issue[];
 }
@@ -53,7 +56,8 @@ interface Administration {
 }
 
 /** Which doses of the case have levels enough to be read without a model; most levels first. */
-export function richOccasions(analysis: Analysis): RichOccasions {
+export function richOccasions({ medicine }: Case, analysis: Analysis): RichOccasions {
+  const saturates = medicine.kinetics.kind === "saturable-oral";
   const doses = administrations(analysis.given);
   const levels = analysis.levels.filter((level) => !level.belowLimit && level.excluded === null);
   if (doses.length === 0) return { occasions: [], lacks: [issue("rich-no-dose")] };
@@ -69,8 +73,9 @@ export function richOccasions(analysis: Analysis): RichOccasions {
     const measured = measuredOf(points);
     if (measured < FEWEST_LEVELS) continue;
     const dose = doses[index]!;
-    const common = { id: String(dose.atH), doseAtH: dose.atH, doseMg: dose.mg, points, measured };
+    const common = { id: String(dose.atH), doseAtH: dose.atH, doseMg: dose.mg, points, measured, saturates };
     const cautions = cautionsOf(analysis.typical, dose.atH, points.at(-1)!.atH);
+    if (saturates) cautions.push(issue("rich-saturates"));
     if (index === 0) {
       occasions.push({ ...common, kind: "one-dose", tau: null, cautions });
       continue;
@@ -123,7 +128,7 @@ function pointsAfter(doses: readonly Administration[], index: number, levels: re
   return index === 0 ? [{ time: 0, value: 0, from: "nothing-before", atH }, ...after] : after;
 }
 
-/** The interval at steady state, h, or why there is none: equal doses at equal intervals have to run for five half-lives. */
+/** The interval at steady state, h, or why there is none: equal doses at equal intervals have to run until the typical patient has settled. */
 function steadyInterval(doses: readonly Administration[], index: number, model: Model | null): number | Issue {
   const dose = doses[index]!;
   const next = doses[index + 1];

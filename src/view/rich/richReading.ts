@@ -49,15 +49,9 @@ export function richLineIndices({ result }: RichReading): readonly number[] {
 }
 
 /** Everything that wants a look, each sentence once. */
-export function richFlags(occasion: RichOccasion, { result, residuals, absorbed }: RichReading): readonly Issue[] {
+export function richFlags(occasion: RichOccasion, { result, residuals }: RichReading): readonly Issue[] {
   if (!result.ok) return occasion.cautions;
   const lineIssues = result.value.kind === "interval" ? result.value.terminalIssues : [];
-  const all = [
-    ...occasion.cautions,
-    ...lineIssues,
-    ...result.value.flags,
-    ...(residuals?.flags ?? []),
-    ...(absorbed?.flags ?? []),
-  ];
+  const all = [...occasion.cautions, ...lineIssues, ...result.value.flags, ...(residuals?.flags ?? [])];
   return all.filter((each, i) => all.findIndex((other) => other.code === each.code) === i);
 }

@@ -1,3 +1,4 @@
+import { concentrationUnit } from "../../core/medicine/index.ts";
 import {
   capitalised,
   summaryDetailWords as detailWords,
@@ -7,6 +8,7 @@ import {
   WATERMARK,
   summaryHeadWords as words,
 } from "../../core/messages/index.ts";
+import { unitSpoken } from "../../core/units/index.ts";
 import { assumptionsText } from "./assumptionsText.ts";
 import { type Citations, citations, isUnverified } from "./citations.ts";
 import { dosesText } from "./dosesText.ts";
@@ -115,15 +117,17 @@ function chartWords(input: SummaryInput, print: SummaryPrint): SummaryChart {
       : []),
     ...(value.levels.length > 0 ? [summaryChartWords.levels(value.levels.length)] : []),
   ];
+  const shownUnit = concentrationUnit(value.medicine);
+  const shownFactor = shownUnit === "ug/L" ? 1000 : 1;
   return {
     title: said.join("; "),
-    unit: summaryChartWords.unit,
+    unit: unitSpoken(shownUnit, "print", input.settings.microgram),
     before: summaryChartWords.given,
     after: summaryChartWords.proposed,
     days: analysis.clock.midnightsH
       .filter((atH) => atH < analysis.clock.toH)
       .map((atH) => ({ atH, text: print.at(print.ms(atH), "day") })),
-    levels: analysis.levels.map((level) => ({ id: level.id, text: print.figure(level.measured) })),
+    levels: analysis.levels.map((level) => ({ id: level.id, text: print.figure(level.measured * shownFactor) })),
   };
 }
 

@@ -1,4 +1,4 @@
-import { doseMg, type MedicineRecord, type Product } from "../../core/medicine/index.ts";
+import { doseLabelledMg, type MedicineRecord, type Product } from "../../core/medicine/index.ts";
 import { listWords, summaryOrderWords as words } from "../../core/messages/index.ts";
 import { type DoseAmount, tabletsFor } from "../../core/regimen/index.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
@@ -23,7 +23,7 @@ export function orderAmount(
   record: MedicineRecord,
   print: SummaryPrint,
 ): OrderAmount {
-  const mg = doseMg(amount, product);
+  const mg = doseLabelledMg(amount, product);
   const mass = mg.ok ? print.exact({ value: mg.value, unit: "mg" }) : print.exact(amount);
   return product.form === "liquid"
     ? liquidAmount(amount, product, record, print, mg.ok ? mg.value : null, mass)

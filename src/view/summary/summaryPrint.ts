@@ -1,3 +1,4 @@
+import { concentrationUnit } from "../../core/medicine/index.ts";
 import { summaryReadingWords } from "../../core/messages/index.ts";
 import { type InstantForm, instantText, MS_PER_HOUR } from "../../core/time/index.ts";
 import { type NumberPrintOptions, numberPrint, quantityPrint, type UnitCode } from "../../core/units/index.ts";
@@ -24,17 +25,19 @@ export interface SummaryPrint {
 export function summaryPrint(input: Pick<SummaryInput, "case" | "analysis" | "settings">): SummaryPrint {
   const { microgram } = input.settings;
   const zone = input.case.timeZone;
+  const shownUnit = concentrationUnit(input.case.medicine);
   const quantity = (
     value: number,
     unit: UnitCode,
     options: NumberPrintOptions = { significant: SIGNIFICANT },
-  ): string =>
-    unit === "mg.h/L"
-      ? exposure(value, options)
-      : quantityPrint({ value, unit }, { style: "print", microgram, ...options });
+  ): string => {
+    if (unit === "mg.h/L") return exposure(value, options);
+    const shown = unit === "mg/L" && shownUnit === "ug/L" ? { value: value * 1000, unit: shownUnit } : { value, unit };
+    return quantityPrint(shown, { style: "print", microgram, ...options });
+  };
   /** Below 1 mg in micrograms, as any mg amount. */
   const exposure = (value: number, options: NumberPrintOptions): string =>
-    value !== 0 && Math.abs(value) < 1
+    shownUnit === "ug/L" || (value !== 0 && Math.abs(value) < 1)
       ? `${numberPrint(value * 1000, options)} ${microgram} hours per L`
       : `${numberPrint(value, options)} mg hours per L`;
   const at = (ms: number, form: InstantForm) => instantText(ms, zone, form);

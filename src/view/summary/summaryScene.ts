@@ -1,3 +1,4 @@
+import { concentrationUnit } from "../../core/medicine/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
 import { type ProfileScene, profileScene } from "../chart/profileScene.ts";
 import type { SummaryInput } from "./summaryInput.ts";
@@ -36,11 +37,12 @@ export function summaryNowLabels(
   return { before: scene.nowX !== null && scene.nowX < UNIT_WIDTH ? "" : words.before, after: words.after };
 }
 
-/** The profile of the doses given and the chosen option, in mg per L, for print.css to set in millimetres. */
+/** The profile of the doses given and the chosen option, in the unit its concentrations are printed in, for print.css to set in millimetres. */
 export function summaryScene({ case: value, analysis, settings }: SummaryInput, words: SummaryChart): ProfileScene {
   const { clock, givenCurve } = analysis;
   const chosen = analysis.options.find(({ id }) => id === chosenOption(value)?.id);
   const { window } = value;
+  const factor = concentrationUnit(value.medicine) === "ug/L" ? 1000 : 1;
   const scene = profileScene({
     width: WIDTH,
     height: HEIGHT[settings.pageSize],
@@ -50,7 +52,7 @@ export function summaryScene({ case: value, analysis, settings }: SummaryInput, 
     nowH: clock.nowH,
     midnightsH: clock.midnightsH,
     scale: "linear",
-    factor: 1,
+    factor,
     window: window?.low.unit === "mg/L" ? { low: window.low.value, high: window.high.value } : null,
     curves: [
       ...(givenCurve ? [{ id: "given", name: "", ...givenCurve }] : []),
@@ -63,7 +65,9 @@ export function summaryScene({ case: value, analysis, settings }: SummaryInput, 
       sd: level.assaySd,
       excluded: level.excluded !== null,
       belowLimit: level.belowLimit,
-      label: words.levels.find(({ id }) => id === level.id)?.text ?? numberPrint(level.measured, { significant: 3 }),
+      label:
+        words.levels.find(({ id }) => id === level.id)?.text ??
+        numberPrint(level.measured * factor, { significant: 3 }),
     })),
   });
   // On paper the days are named at their midnights; hour figures would run into them.

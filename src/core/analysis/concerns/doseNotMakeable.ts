@@ -1,4 +1,4 @@
-import { doseMg, productOf } from "../../medicine/index.ts";
+import { doseLabelledMg, productOf } from "../../medicine/index.ts";
 import { tabletsFor } from "../../regimen/index.ts";
 import { type ConcernRule, concern } from "../concernRule.ts";
 
@@ -7,7 +7,7 @@ export const doseNotMakeable: ConcernRule = ({ case: value }) =>
   value.options.flatMap((option) =>
     option.lines.flatMap((line) => {
       const product = productOf(value.medicine, line.product);
-      const mg = doseMg(line.amount, product);
+      const mg = doseLabelledMg(line.amount, product);
       if (product.form === "liquid" || !mg.ok) return [];
       const strengths = product.strengths.map((strength) => strength.value);
       return tabletsFor(mg.value, strengths, product.divisible)
