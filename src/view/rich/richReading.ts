@@ -13,7 +13,7 @@ import type { RichOccasion } from "./richOccasions.ts";
 
 export interface RichReading {
   readonly result: Result<Noncompartmental>;
-  /** Only after one dose, and only where there is a terminal line. */
+  /** Only after one dose, where there is a terminal line and elimination does not saturate. */
   readonly residuals: ResidualsReading | null;
   /** The same; with the terminal rate as elimination rate. */
   readonly absorbed: WagnerNelson | null;
@@ -27,7 +27,9 @@ export function richReading(occasion: RichOccasion, method: AreaMethod, terminal
     tau === null
       ? noncompartmental(points, { dose: doseMg, method, ...picked })
       : noncompartmental(points, { dose: doseMg, method, tau, ...picked });
-  if (!result.ok || result.value.kind !== "one-dose") return { result, residuals: null, absorbed: null };
+  const isFirstOrder = !occasion.saturates;
+  if (!result.ok || result.value.kind !== "one-dose" || !isFirstOrder)
+    return { result, residuals: null, absorbed: null };
   const residuals = residualsMethod(points, picked);
   const absorbed = wagnerNelson(points, result.value.terminal.rate, method);
   return {

@@ -1,11 +1,13 @@
 import { screen, within } from "@testing-library/react";
 import { describe, expect, test } from "vitest";
 import type { Case } from "../../../src/core/case/index.ts";
+import { recordById } from "../../../src/core/medicine/index.ts";
 import { issueMessage, richWords } from "../../../src/core/messages/index.ts";
 import { noncompartmental } from "../../../src/core/noncompartmental/index.ts";
 import { issue } from "../../../src/core/result/index.ts";
 import { numberPrint } from "../../../src/core/units/index.ts";
 import { RichLevelsPanel } from "../../../src/view/rich/RichLevelsPanel.tsx";
+import { asText } from "../ui/asText.ts";
 import { axeFaults } from "../ui/axeFaults.ts";
 import { renderWorkbench } from "../ui/renderWorkbench.tsx";
 import { levelsOf, ORAL_LEVELS, richCase } from "./richCase.ts";
@@ -20,7 +22,7 @@ const cell = (name: string) =>
   within(screen.getByRole("row", { name: new RegExp(`^${escaped(name)} \\d`) })).getAllByRole("cell")[0]!;
 const escaped = (text: string) => text.replace(/[.*+?^${}()|[\]\\]/g, "\\$&");
 const check = (hours: string) =>
-  screen.getByRole<HTMLInputElement>("checkbox", { name: new RegExp(` at ${escaped(hours)}$`) });
+  screen.getByRole<HTMLInputElement>("checkbox", { name: new RegExp(` at ${escaped(hours.replace(" ", "\u00a0"))}$`) });
 const ticked = () => screen.getAllByRole<HTMLInputElement>("checkbox").filter((box) => box.checked).length;
 
 const points = [
@@ -65,9 +67,9 @@ describe("RichLevelsPanel after one dose", () => {
     const { terminal, halfLife } = expected();
     const words = richWords.chartLine(
       terminal.indices.length,
-      `${three(terminal.fromTime)} h`,
-      `${three(terminal.toTime)} h`,
-      `${three(halfLife)} h`,
+      `${three(terminal.fromTime)}\u00a0h`,
+      `${three(terminal.toTime)}\u00a0h`,
+      `${three(halfLife)}\u00a0h`,
     );
     const picture = screen.getByRole("img", { name: richWords.chartTitle(11, words) });
     expect(picture.querySelectorAll(".terminal-point-on")).toHaveLength(terminal.indices.length);
@@ -90,6 +92,18 @@ describe("RichLevelsPanel after one dose", () => {
     expect(cell(richWords.names.clearance)).toHaveTextContent(`${three(expected().observed.clearance)} L/h`);
   });
 
+  test("shows no half-life of a medicine whose elimination saturates, and says why", async () => {
+    const medicine = recordById("phenytoin")!;
+    const line = { ...richCase(1, []).given[0]!, product: medicine.products[0]!.id };
+    await show(richCase(1, ORAL_LEVELS, { medicine, given: [line] }));
+    expect(screen.queryByText(richWords.names.halfLife)).toBeNull();
+    expect(screen.getByRole("img", { name: /^Log plot/ })).not.toHaveAccessibleName(/halves/);
+    expect(screen.getByText(issueMessage(issue("rich-saturates")))).toBeVisible();
+    expect(screen.queryByText(richWords.names.ka)).toBeNull();
+    expect(screen.queryByText(richWords.absorbed)).toBeNull();
+    expect(cell(richWords.names.cmax)).toHaveTextContent("9.75 mg/L");
+  });
+
   test("a large part carried on is pointed out", async () => {
     await show(richCase(1, ORAL_LEVELS.slice(0, 9)));
     expect(screen.getByText(/of the area was not measured but carried on, more than 20 %/)).toBeVisible();
@@ -108,16 +122,16 @@ describe("RichLevelsPanel after one dose", () => {
 describe("the user's overrule", () => {
   test("wants a reason, then the figures follow it and the reason stands beside them", async () => {
     const { user } = await show(richCase(1, ORAL_LEVELS));
-    const before = cell(richWords.names.halfLife).textContent;
+    const before = cell(richWords.names.halfLife).textContent!;
     const automatic = expected().terminal.indices;
     await user.click(check("5 h"));
     expect(screen.getByText(richWords.changed)).toBeVisible();
-    expect(cell(richWords.names.halfLife)).toHaveTextContent(before!);
+    expect(cell(richWords.names.halfLife)).toHaveTextContent(asText(before));
 
     await user.click(screen.getByRole("button", { name: richWords.use }));
     const reason = screen.getByRole("textbox", { name: richWords.reason });
     expect(reason).toHaveAccessibleDescription(expect.stringContaining(issueMessage(issue("rich-reason-missing"))));
-    expect(cell(richWords.names.halfLife)).toHaveTextContent(before!);
+    expect(cell(richWords.names.halfLife)).toHaveTextContent(asText(before));
 
     await user.type(reason, "distribution still going on{Enter}");
     const indices = automatic.includes(6) ? automatic.filter((each) => each !== 6) : [6, ...automatic];
@@ -129,7 +143,7 @@ describe("the user's overrule", () => {
     expect(screen.queryByText(richWords.changed)).toBeNull();
 
     await user.click(screen.getByRole("button", { name: richWords.automaticAgain }));
-    expect(cell(richWords.names.halfLife)).toHaveTextContent(before!);
+    expect(cell(richWords.names.halfLife)).toHaveTextContent(asText(before));
     expect(screen.getByText(richWords.automatic)).toBeVisible();
   });
 
@@ -143,14 +157,14 @@ describe("the user's overrule", () => {
 
   test("points that make no line are refused with the reason, and the figures stay", async () => {
     const { user } = await show(richCase(1, ORAL_LEVELS));
-    const before = cell(richWords.names.halfLife).textContent;
+    const before = cell(richWords.names.halfLife).textContent!;
     for (const box of screen.getAllByRole<HTMLInputElement>("checkbox")) if (box.checked) await user.click(box);
     await user.click(check("24 h"));
     await user.type(screen.getByRole("textbox", { name: richWords.reason }), "to see{Enter}");
     expect(
       screen.getByText(issueMessage(issue("nca-terminal-few", { found: 1, needed: 3, picked: true }))),
     ).toBeVisible();
-    expect(cell(richWords.names.halfLife)).toHaveTextContent(before!);
+    expect(cell(richWords.names.halfLife)).toHaveTextContent(asText(before));
     await user.click(screen.getByRole("button", { name: richWords.back }));
     expect(ticked()).toBe(expected().terminal.indices.length);
   });

@@ -1,10 +1,11 @@
 import { describe, expect, it } from "vitest";
 import { derive } from "../../../src/core/analysis/index.ts";
 import type { Case } from "../../../src/core/case/index.ts";
+import { recordById } from "../../../src/core/medicine/index.ts";
 import { richOccasions } from "../../../src/view/rich/richOccasions.ts";
 import { at, levelsOf, ORAL_LEVELS, richCase } from "./richCase.ts";
 
-const found = (value: Case) => richOccasions(derive(value));
+const found = (value: Case) => richOccasions(value, derive(value));
 const codes = (value: Case) => found(value).lacks.map(({ code }) => code);
 /** Four levels after the dose `hours` after the first, the last just before the next. */
 const fourAfter = (hours: number) =>
@@ -115,5 +116,14 @@ describe("richOccasions", () => {
     expect(changedAt(60).lacks[0]!.data.run).toBe(24);
     expect(changedAt(90).occasions[0]!.cautions.map(({ code }) => code)).toEqual(["rich-clearance-changed"]);
     expect(changedAt(-24).occasions[0]!.cautions).toEqual([]);
+  });
+
+  it("of a medicine whose elimination saturates it says that no half-life holds", () => {
+    const medicine = recordById("phenytoin")!;
+    const line = { ...richCase(1, []).given[0]!, product: medicine.products[0]!.id };
+    const [occasion] = found(richCase(1, ORAL_LEVELS, { medicine, given: [line] })).occasions;
+    expect(occasion!.saturates).toBe(true);
+    expect(occasion!.cautions.map(({ code }) => code)).toEqual(["rich-saturates"]);
+    expect(found(richCase(1, ORAL_LEVELS)).occasions[0]!.saturates).toBe(false);
   });
 });
