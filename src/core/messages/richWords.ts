@@ -43,7 +43,7 @@ export const richWords = {
     "nothing-before": "not measured: 0, as no dose was given before",
   },
   automatic: "The points of the terminal line were found by best fit (adjusted R²).",
-  byHand: (reason: string) => `The points of the terminal line were chosen by hand: ${reason}`,
+  byHand: (reason: string) => `The points of the terminal line were chosen by hand: “${reason}”.`,
   notKept: "The choice lasts as long as this panel is open.",
   changed: "These points are not used yet: the figures still belong to the points before.",
   reason: "Why other points?",
