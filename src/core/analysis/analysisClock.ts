@@ -26,7 +26,7 @@ export interface AnalysisClock {
  * The span of a case: from local midnight before the first thing that happened (at most two weeks back)
  * to local midnight after the options have run or settled (three days to two weeks ahead). Hour 0 is its beginning.
  */
-export function analysisClock(value: Case, halfLifeH: number | null): AnalysisClock {
+export function analysisClock(value: Case, halfLifeH: number | null, isSaturable = false): AnalysisClock {
   const zone = value.timeZone;
   const nowMs = instantMs(value.now);
   const past = [...value.given.map((line) => line.start), ...value.levels.map((level) => level.at)]
@@ -35,7 +35,8 @@ export function analysisClock(value: Case, halfLifeH: number | null): AnalysisCl
   const earliest = Math.max(Math.min(nowMs, ...past), nowMs - LONGEST_PAST_MS);
   const originMs = localMidnight(earliest, zone);
 
-  const settle = (halfLifeH ?? 0) * HALF_LIVES_SHOWN * HOUR_MS;
+  // Without a half-life (saturable elimination) the approach is slow: as far as is ever shown.
+  const settle = isSaturable ? LONGEST_FUTURE_MS : (halfLifeH ?? 0) * HALF_LIVES_SHOWN * HOUR_MS;
   const ends = value.options.flatMap((option) =>
     option.lines.map((line) => {
       const end = doseLineEndMs(line, zone);

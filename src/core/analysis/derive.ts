@@ -33,7 +33,7 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
   const { model: atNow, issues: modelIssues } = typicalModel(value, patient);
 
   // 3. Clock: the span shown, from the first thing that happened to where the options have settled; and on it, what changes the kinetics.
-  const clock = analysisClock(value, atNow?.halfLife?.value ?? null);
+  const clock = analysisClock(value, atNow?.halfLife?.value ?? null, atNow?.kind === "saturable");
   const typical = atNow && { ...atNow, dispositions: kineticsChanges(value, patient, clock.originMs) };
 
   // 4. Doses: every line unfolded on the clock.

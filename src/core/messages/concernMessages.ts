@@ -51,6 +51,16 @@ function outsideWindow(data: Data, side: "above" | "below"): ConcernWords {
   };
 }
 
+function unverifiedWords(data: Data): string {
+  const parts = [
+    [number(data, "memory"), "recalled from memory"],
+    [number(data, "commonPractice"), "from common practice"],
+    [number(data, "invented"), "invented"],
+  ] as const;
+  const named = parts.filter(([count]) => count > 0).map(([count, words]) => `${count} ${words}`);
+  return named.length === 0 ? "all read in their source" : `${named.join(" and ")}, not verified`;
+}
+
 /** One function a concern code. */
 const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = {
   "model-incomplete": (data) => ({
@@ -170,7 +180,7 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
   }),
   "record-not-reviewed": (data) => ({
     title: "Medicine record not independently reviewed",
-    text: `${text(data, "name")}, record version ${number(data, "recordVersion")}: of ${number(data, "total")} figures, ${number(data, "memory")} recalled from memory and ${number(data, "commonPractice")} from common practice are unverified. Check against current product information.`,
+    text: `${text(data, "name")}, record version ${number(data, "recordVersion")}: of ${number(data, "total")} figures, ${unverifiedWords(data)}. Check against current product information.`,
   }),
 };
 

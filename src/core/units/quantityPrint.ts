@@ -13,7 +13,7 @@ const NO_BREAK_SPACE = "\u00a0";
 
 /**
  * A number and its unit for the eye, joined by a non-breaking space.
- * A decimal mg amount below 1 mg that is a whole number of micrograms is written in micrograms: 0.125 mg prints as 125 microgram.
+ * A decimal mg amount below 1 mg is written in micrograms, with the decimals that saves: 0.125 mg prints as 125 microgram, 0.0625 mg as 62.5.
  */
 export function quantityPrint(quantity: Quantity, options: QuantityPrintOptions): string {
   const { style, microgram = "microgram" } = options;
@@ -35,6 +35,7 @@ function asMicrograms(
   if (whole !== "0" || fraction === "") return null;
   const mg = Number(`${rounded.isNegative ? "-" : ""}0.${fraction}`);
   const ug = quantityConvert({ value: mg, unit: "mg" }, "ug");
-  if (decimalText(decimalOf(ug)).fraction !== "") return null;
+  // Only where it saves decimals: 0.0625 mg is 62.5 microgram, but nothing is won for an amount of many decimals in both.
+  if (decimalText(decimalOf(ug)).fraction.length > Math.max(0, fraction.length - 3)) return null;
   return { quantity: { value: ug, unit: "ug" }, number: numberPrint(ug) };
 }

@@ -122,7 +122,7 @@ interface StripCellProps {
 function StripCell({ name, onPress, children, isWide = false }: StripCellProps) {
   return (
     <button type="button" className={`strip-cell${isWide ? " strip-cell-wide" : ""}`} onClick={onPress}>
-      <span className={isWide ? "visually-hidden" : "strip-small"}>{name}</span>
+      <span className={isWide ? "visually-hidden" : "strip-small strip-nowrap"}>{name}</span>
       <span className="strip-value">{children}</span>
     </button>
   );

@@ -15,6 +15,8 @@ export interface LaneToken {
 
 const TALLEST = 36;
 const SHORTEST = 12;
+/** From one token to the next of the same time, px. */
+const SIDE_BY_SIDE = 26;
 /** Room an amount needs under its token, px. */
 const LABEL_ROOM = 30;
 
@@ -22,9 +24,11 @@ const LABEL_ROOM = 30;
 export function laneTokens(marks: readonly DoseMark[], scale: ClockScale, largest: number): LaneToken[] {
   const shown = marks.filter((mark) => mark.atH >= scale.fromH && mark.atH <= scale.toH);
   return shown.map((mark, i) => {
-    const x = scale.x(mark.atH);
-    const next = shown[i + 1];
-    const previous = shown[i - 1];
+    const sameTime = shown.filter((other) => other.atH === mark.atH);
+    // Doses of several lines at one time stand side by side.
+    const x = scale.x(mark.atH) + sameTime.indexOf(mark) * SIDE_BY_SIDE;
+    const next = shown.slice(i + 1).find((other) => other.atH > mark.atH);
+    const previous = shown.slice(0, i).findLast((other) => other.atH < mark.atH);
     const room = Math.min(
       next ? scale.x(next.atH) - x : Number.POSITIVE_INFINITY,
       previous ? x - scale.x(previous.atH) : Number.POSITIVE_INFINITY,

@@ -2,7 +2,7 @@ import type { Analysis, OptionResult } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { benchWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
-import { numberPrint, unitSpoken } from "../../core/units/index.ts";
+import { numberPrint, quantityPrint, unitSpoken } from "../../core/units/index.ts";
 import { exposureSpoken, type ShownUnit, unitFactor } from "./shownUnit.ts";
 
 /** One row of the readings column: a name and one printed value an option; null where the option has none. */
@@ -26,11 +26,17 @@ export interface ReadingsGroup {
 
 const three = (value: number) => numberPrint(value, { significant: 3 });
 
+/** A unit of more characters than this would break the cells. */
+const LONGEST_UNIT = 5;
+
 /** The readings of every option, side by side, in the unit shown. */
 export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit): readonly ReadingsGroup[] {
   const factor = unitFactor(value, unit);
-  const concentration = (mgPerL: number) => `${three(mgPerL * factor)} ${unitSpoken(unit, "screen")}`;
-  const exposure = (mgH: number) => `${three(mgH * factor)} ${exposureSpoken(unit)}`;
+  // A long unit stands once in the head instead of in every cell.
+  const spoken = unitSpoken(unit, "screen");
+  const isLong = spoken.length > LONGEST_UNIT;
+  const concentration = (mgPerL: number) => `${three(mgPerL * factor)}${isLong ? "" : ` ${spoken}`}`;
+  const exposure = (mgH: number) => `${three(mgH * factor)}${isLong ? "" : ` ${exposureSpoken(unit)}`}`;
   const hours = (h: number) => `${numberPrint(h, { decimals: 1 })} h`;
   const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
   const row = (
@@ -59,7 +65,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
   return [
     {
       id: "steady",
-      head: benchWords.steadyHead,
+      head: `${benchWords.steadyHead}${isLong ? `; ${spoken}, AUC ${exposureSpoken(unit)}` : ""}`,
       rows: [
         settled("Highest (Cmax)", "peak", (s) => concentration(s.peak)),
         settled("after the dose (Tmax)", "peakAfterDose", (s) => hours(s.peakAfterDoseH)),
@@ -75,7 +81,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
         row("dailyDose", "Dose in 24 h", (option) =>
           option.typical?.dailyDoseMg === null || option.typical === null
             ? null
-            : `${three(option.typical.dailyDoseMg)} mg`,
+            : quantityPrint({ value: option.typical.dailyDoseMg, unit: "mg" }, { style: "screen", significant: 3 }),
         ),
       ],
     },

@@ -28,10 +28,10 @@ export function kineticsText(input: SummaryInput, print: SummaryPrint): SummaryM
   };
 }
 
-/** Clearance and volume by their own names; what other kinds of model have, by the record's. */
+/** Clearance and volume by their own names, what other kinds of model have by its symbol; the details say more. */
 function parameterRows(model: Model, isApparent: boolean, print: SummaryPrint) {
-  return model.parameters.map(({ symbol, words: name, figure }) => ({
-    label: symbol === "CL" ? words.clearance(isApparent) : symbol === "V" ? words.volume(isApparent) : name,
+  return model.parameters.map(({ symbol, figure }) => ({
+    label: symbol === "CL" ? words.clearance(isApparent) : symbol === "V" ? words.volume(isApparent) : symbol,
     value: print.quantity(figure.value, figure.unit),
   }));
 }

@@ -23,22 +23,30 @@ function levelRow(
 ): SummaryLevel {
   const result = input.analysis.levels.find(({ id }) => id === level.id);
   const typed = print.exact(level.quantity);
-  const measured =
-    level.quantity.unit === "mg/L" || !result ? typed : words.asTyped(typed, print.concentration(result.measured));
+  const isInShownUnit = result !== undefined && print.shownFactor === shownFactorOf(level.quantity.unit);
+  const measured = isInShownUnit || !result ? typed : words.asTyped(typed, print.concentration(result.measured));
   const isBelow = level.kind === "below-limit";
   return {
     drawn: print.at(instantMs(level.at), "dayClock"),
     afterDose: result?.afterDoseH == null ? words.noDose : print.quantity(result.afterDoseH, "h"),
     measured: isBelow ? words.belowLimit(measured) : measured,
     predicted: result?.predicted == null ? words.noPrediction : print.concentration(result.predicted),
-    difference: result && !isBelow ? differenceText(result) : "",
+    difference: result && !isBelow ? differenceText(result, print) : "",
     remark: level.excluded === undefined ? "" : words.leftOut(level.excluded),
   };
 }
 
+/** Units that are the printed one by another name: nothing is added in brackets for them. */
+function shownFactorOf(unit: string): number | null {
+  if (unit === "mg/L" || unit === "ug/mL") return 1;
+  return unit === "ug/L" || unit === "ng/mL" ? 1000 : null;
+}
+
 /** Rounded to the place the prediction is printed to, so that the row adds up for the eye. */
-function differenceText({ predicted, difference }: LevelResult): string {
-  if (predicted === null || difference === null) return "";
+function differenceText(level: LevelResult, print: SummaryPrint): string {
+  if (level.predicted === null || level.difference === null) return "";
+  const predicted = level.predicted * print.shownFactor;
+  const difference = level.difference * print.shownFactor;
   const magnitude = predicted > 0 ? Math.floor(Math.log10(predicted)) : 0;
   const decimals = Math.min(6, Math.max(0, 2 - magnitude));
   const figure = numberPrint(Math.abs(difference), { decimals });

@@ -14,6 +14,8 @@ export interface SummaryPrint {
   /** As written by a person or the record: not rounded. */
   readonly exact: (quantity: { readonly value: number; readonly unit: UnitCode }) => string;
   readonly concentration: (mgPerL: number) => string;
+  /** From mg/L to the unit concentrations are printed in. */
+  readonly shownFactor: number;
   /** "5 hours" */
   readonly hours: (hours: number) => string;
   readonly ms: (atH: number) => number;
@@ -46,6 +48,7 @@ export function summaryPrint(input: Pick<SummaryInput, "case" | "analysis" | "se
     quantity,
     exact: ({ value, unit }) => quantity(value, unit, {}),
     concentration: (mgPerL) => quantity(mgPerL, "mg/L"),
+    shownFactor: shownUnit === "ug/L" ? 1000 : 1,
     hours: (hours) => summaryReadingWords.hours(numberPrint(hours, { decimals: hours < 1 ? 2 : 1 })),
     ms: (atH) => input.analysis.clock.originMs + atH * MS_PER_HOUR,
     at,

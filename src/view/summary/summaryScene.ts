@@ -13,7 +13,8 @@ const HEIGHT = { A4: 188, Letter: 146 };
 const MARGIN = { top: 26, right: 58, bottom: 24, left: 34 };
 
 /** A day's name takes about this much of the axis, in units of the drawing. */
-const DAY_NAME_WIDTH = 84;
+const DAY_CHARACTER_WIDTH = 8.4;
+const DAY_GAP = 8;
 
 /** Names of the days where there is room for them: every day, or every second, third one. */
 export function summaryDays(
@@ -21,8 +22,9 @@ export function summaryDays(
   words: SummaryChart,
 ): readonly { readonly x: number; readonly text: string }[] {
   const placed = words.days.map(({ atH, text }) => ({ x: scene.clock.x(atH), text }));
+  const longest = Math.max(0, ...placed.map(({ text }) => text.length));
   const dayWidth = (placed[1]?.x ?? scene.plot.right) - (placed[0]?.x ?? scene.plot.left);
-  const step = Math.max(1, Math.ceil(DAY_NAME_WIDTH / dayWidth));
+  const step = Math.max(1, Math.ceil((longest * DAY_CHARACTER_WIDTH + DAY_GAP) / dayWidth));
   return placed.filter((_, index) => index % step === 0);
 }
 
