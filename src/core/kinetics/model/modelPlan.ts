@@ -9,6 +9,7 @@ export interface ModelPlan {
   readonly kind: ModelKind<ModelDisposition>;
   readonly parts: readonly ModelPart[];
   readonly spans: readonly DispositionSpan[];
+  /** Made when first asked for: the plain courses do without. */
   readonly events: readonly ModelEvent[];
 }
 
@@ -24,7 +25,16 @@ export function modelPlanOf(history: ModelHistory): ModelPlan {
     ({ disposition }, i) => i === 0 || !isSame(disposition, history.dispositions[i - 1]!.disposition),
   );
   const parts = modelPartsOf(history.inputs);
-  return { kind, parts, spans, events: modelEventsOf(parts, spans) };
+  let events: readonly ModelEvent[] | undefined;
+  return {
+    kind,
+    parts,
+    spans,
+    get events() {
+      events ??= modelEventsOf(parts, spans);
+      return events;
+    },
+  };
 }
 
 /** A run of the plan that has come to the instant `start`, h, through whatever happened before it. */
@@ -43,7 +53,7 @@ export function modelPlanRun({ kind, parts, spans, events }: ModelPlan, start: n
 export function modelPlanCourses({
   spans,
   parts,
-}: ModelPlan): { disposition: Disposition; courses: Course[] } | undefined {
+}: Pick<ModelPlan, "spans" | "parts">): { disposition: Disposition; courses: Course[] } | undefined {
   const disposition = spans.length === 1 ? spans[0]!.disposition : undefined;
   if (disposition?.kind !== "one-compartment") return undefined;
   const courses: Course[] = [];

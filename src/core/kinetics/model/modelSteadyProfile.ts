@@ -29,7 +29,7 @@ export function modelSteadyProfile(
 ): Float64Array {
   const pattern = steadyPatternOf(disposition, inputs, period);
   const { kind, absorbed, parts } = pattern;
-  const plain = modelPlanCourses({ kind, parts, spans: [{ from: -Infinity, disposition }], events: [] });
+  const plain = modelPlanCourses({ parts, spans: [{ from: -Infinity, disposition }] });
   if (plain !== undefined) return patternProfile(plain.disposition, plain.courses, period, times);
   const sorted = modelTimes(times);
   const levels = new Float64Array(sorted.length);

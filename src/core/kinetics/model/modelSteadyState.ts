@@ -46,7 +46,7 @@ export function modelSteadyState(
   if (doseRate >= vmax) return { status: "none", reason: "dose-rate-at-or-above-vmax", doseRate, vmax };
 
   const spans = [{ from: -Infinity, disposition }];
-  const plain = modelPlanCourses({ kind, parts, spans, events: [] });
+  const plain = modelPlanCourses({ parts, spans });
   if (plain !== undefined) {
     return { status: "settled", ...patternSteadyState(plain.disposition, plain.courses, period) };
   }

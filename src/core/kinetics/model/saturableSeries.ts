@@ -1,9 +1,9 @@
-import { type Inflow, inflowAt } from "./stretch.ts";
+import type { Inflow } from "./stretch.ts";
 
-/** Terms of the power series. 20 to 26 cost about the same for a stretch; see tests/bench. */
-const TERMS = 22;
+/** Terms of the power series: more cost more a piece and need fewer pieces; from 26 on a dosing interval costs about the same. */
+const TERMS = 30;
 /** What is cut off a series, as a part of the amount at stake, or of the capacity that is free. */
-const CUT_OFF = 1e-17;
+const CUT_OFF = 1e-16;
 /** A depot with less than this part of it is left out: a fast one that is all but empty would else dictate the unit of time. */
 const LEFT_OUT_BELOW = 1e-25;
 
@@ -16,8 +16,8 @@ export interface Saturation {
 }
 
 /**
- * Power series that hold for a short time: the amount in the body b(u) = Σ bₖ·(u/unit)^k, the part of vmax that is free,
- * half/(half + b), and the part that is used, b/(half + b).
+ * Power series that hold for a short time: the amount in the body b(u) = Σ bₖ·(u/unit)^k, and the part of vmax that is free,
+ * half/(half + b). The part that is used is 1 − free: −freeₖ but for the leading term.
  */
 export interface SaturableSeries {
   /** h */
@@ -26,8 +26,8 @@ export interface SaturableSeries {
   readonly length: number;
   readonly body: Float64Array;
   readonly free: Float64Array;
-  /** −free but for the leading term, which is given for itself because 1 − free would cancel. */
-  readonly used: Float64Array;
+  /** b/(half + b) at the start; 1 − free would cancel. */
+  readonly used: number;
 }
 
 /**
@@ -35,7 +35,7 @@ export interface SaturableSeries {
  *
  * Formula, with x = u/unit: (half + b)·free = half gives freeₖ = −Σ_{j=1..k} bⱼ·free_{k−j}/(half + b₀); usedₖ = −freeₖ for k > 0;
  * b′ = inflow − vmax·used gives bₖ₊₁ = unit·(inflowₖ − vmax·usedₖ)/(k + 1). The length is chosen so that each of the last three terms
- * is below 1e-17 of the amount at stake, and of the free part.
+ * is below 1e-16 of the amount at stake, and of the free part.
  * @param body mg, 0 or more
  * @param hours how long the inflow lasts at most, 0 or more
  * @returns see SaturableSeries
@@ -52,39 +52,51 @@ export function saturableSeries(
   const linearRate = vmax / half;
   // What can be in the body at once: from a slow depot only what comes in about one time constant.
   let atStake = body + rate * Math.min(hours, 1 / linearRate);
-  for (const [i, k] of inflow.ka.entries()) atStake += inflow.gut[i]! * Math.min(1, k / linearRate);
-  const isIn = (_: unknown, i: number) => inflow.gut[i]! > LEFT_OUT_BELOW * atStake;
-  const ka = inflow.ka.filter(isIn);
-  const gut = inflow.gut.filter(isIn);
+  for (let i = 0; i < inflow.ka.length; i++) atStake += inflow.gut[i]! * Math.min(1, inflow.ka[i]! / linearRate);
   const total = half + body;
+  const ka: number[] = [];
+  /** Of each depot, mg/h × unit^k/k!. */
+  const term: number[] = [];
+  let fastest = (vmax + rate) / total;
+  for (let i = 0; i < inflow.ka.length; i++) {
+    const amount = inflow.gut[i]!;
+    if (!(amount > LEFT_OUT_BELOW * atStake)) continue;
+    const k = inflow.ka[i]!;
+    ka.push(k);
+    term.push(k * amount);
+    fastest = Math.max(fastest, k, (k * amount) / total);
+  }
   // About the time in which anything changes: the coefficients then neither over- nor underflow.
-  const unit = 1 / Math.max(vmax / total, inflowAt({ ka, gut, rate }, 0) / total, ...ka);
+  const unit = 1 / fastest;
   const b = new Float64Array(TERMS + 1);
   const free = new Float64Array(TERMS + 1);
-  const term = ka.map((k, i) => k * gut[i]!);
   b[0] = body;
   free[0] = half / total;
   let used = body / total;
-  for (let k = 0; k < TERMS; k++) {
-    let input = k === 0 ? rate : 0;
+  for (let k = 1; k <= TERMS; k++) {
+    let input = k === 1 ? rate : 0;
     for (let i = 0; i < ka.length; i++) {
       input += term[i]!;
-      term[i] = (term[i]! * -ka[i]! * unit) / (k + 1);
+      term[i] = (term[i]! * -ka[i]! * unit) / k;
     }
-    b[k + 1] = (unit * (input - vmax * used)) / (k + 1);
+    b[k] = (unit * (input - vmax * used)) / k;
     let sum = 0;
-    for (let j = 1; j <= k + 1; j++) sum += b[j]! * free[k + 1 - j]!;
+    for (let j = 1; j <= k; j++) sum += b[j]! * free[k - j]!;
     used = sum / total;
-    free[k + 1] = -used;
+    free[k] = -used;
   }
+  const x = Math.min(seriesReach(b, CUT_OFF * atStake), seriesReach(free, CUT_OFF * free[0]!));
+  return { unit, length: x * unit, body: b, free, used: body / total };
+}
+
+/** Up to which x each of the last three terms stays below a bound. */
+function seriesReach(coefficients: Float64Array, bound: number): number {
   let x = Number.POSITIVE_INFINITY;
   for (let k = TERMS - 2; k <= TERMS; k++) {
-    if (b[k] !== 0) x = Math.min(x, ((CUT_OFF * atStake) / Math.abs(b[k]!)) ** (1 / k));
-    if (free[k] !== 0) x = Math.min(x, ((CUT_OFF * free[0]!) / Math.abs(free[k]!)) ** (1 / k));
+    const size = Math.abs(coefficients[k]!);
+    if (size > 0) x = Math.min(x, (bound / size) ** (1 / k));
   }
-  const usedSeries = free.map((value) => -value);
-  usedSeries[0] = body / total;
-  return { unit, length: x * unit, body: b, free, used: usedSeries };
+  return x;
 }
 
 /** Σ cₖ·x^k. */
@@ -96,9 +108,19 @@ export function seriesAt(coefficients: Float64Array, x: number): number {
 
 /** ∫₀ˣ Σ cₖ·s^k ds. */
 export function seriesArea(coefficients: Float64Array, x: number): number {
+  return x * (coefficients[0]! + seriesAreaRest(coefficients, x));
+}
+
+/** ∫₀ˣ of the part of vmax in use. */
+export function seriesUsedArea({ free, used }: SaturableSeries, x: number): number {
+  return x * (used - seriesAreaRest(free, x));
+}
+
+/** Σ_{k>0} cₖ·x^k/(k + 1). */
+function seriesAreaRest(coefficients: Float64Array, x: number): number {
   let sum = 0;
-  for (let k = TERMS; k >= 0; k--) sum = sum * x + coefficients[k]! / (k + 1);
-  return sum * x;
+  for (let k = TERMS; k > 0; k--) sum = (sum + coefficients[k]! / (k + 1)) * x;
+  return sum;
 }
 
 /** The coefficients of the square of a series. */

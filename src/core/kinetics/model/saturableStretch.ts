@@ -7,6 +7,7 @@ import {
   seriesArea,
   seriesAt,
   seriesSquared,
+  seriesUsedArea,
 } from "./saturableSeries.ts";
 import { singleTurn } from "./singleTurn.ts";
 import { type Inflow, inflowAt, inflowSlopeAt, type Stretch } from "./stretch.ts";
@@ -85,7 +86,7 @@ export class SaturableStretch implements Stretch {
     if (series === undefined) {
       return eliminated + this.#linearRate * linearResponseArea(this.#linearRate, body, inflow, u - start);
     }
-    return eliminated + this.#saturation.vmax * series.unit * seriesArea(series.used, (u - start) / series.unit);
+    return eliminated + this.#saturation.vmax * series.unit * seriesUsedArea(series, (u - start) / series.unit);
   }
 
   /**
@@ -161,7 +162,7 @@ export class SaturableStretch implements Stretch {
         piece.end,
         Math.max(0, seriesAt(series.body, x)),
         piece.area + unit * seriesArea(series.body, x),
-        piece.eliminated + vmax * unit * seriesArea(series.used, x),
+        piece.eliminated + vmax * unit * seriesUsedArea(series, x),
       );
       pieces.push(piece);
     }

@@ -15,14 +15,13 @@ class TwoCompartmentStretch implements Stretch {
   readonly #volume: number;
   readonly #inflow: Inflow;
   readonly #response: TwoCompartmentResponse;
-  readonly #slope: TwoCompartmentResponse;
+  #derivative: TwoCompartmentResponse | undefined;
 
   constructor(constants: TwoCompartmentConstants, volume: number, body: Float64Array, inflow: Inflow) {
     this.#constants = constants;
     this.#volume = volume;
     this.#inflow = inflow;
     this.#response = new TwoCompartmentResponse(constants, body[0]!, body[1]!, inflow);
-    this.#slope = this.#response.derivative();
   }
 
   levelAt(u: number): number {
@@ -31,8 +30,14 @@ class TwoCompartmentStretch implements Stretch {
   }
 
   slopeAt(u: number): number {
-    this.#slope.goTo(u);
-    return this.#slope.central / this.#volume;
+    const slope = this.#slope;
+    slope.goTo(u);
+    return slope.central / this.#volume;
+  }
+
+  get #slope(): TwoCompartmentResponse {
+    this.#derivative ??= this.#response.derivative();
+    return this.#derivative;
   }
 
   turns(length: number): readonly number[] {

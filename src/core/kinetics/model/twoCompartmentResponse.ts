@@ -47,12 +47,12 @@ export class TwoCompartmentResponse {
       const amount = gut[i]! * k;
       const leftK = Math.exp(-k * u);
       const first = decayDifferenceOf(alpha, k, u, leftAlpha, leftK);
-      const chain = chainOfThree(alpha, beta, k, u, leftAlpha, leftBeta, leftK);
+      const chain = chainOfThree(alpha, beta, k, u, leftAlpha, leftBeta, leftK, difference);
       central += amount * (first + alphaOverOut * chain);
       peripheral += amount * (k12 * chain);
     }
     if (rate !== 0) {
-      const chain = decayChain([alpha, beta, 0], u);
+      const chain = chainOfThree(alpha, beta, 0, u, leftAlpha, leftBeta, 1, difference);
       central += rate * (decayIntegral(alpha, u) + alphaOverOut * chain);
       peripheral += rate * (k12 * chain);
     }
@@ -91,7 +91,7 @@ export class TwoCompartmentResponse {
 /** From this (fastest − slowest)·u on a chain of three is a difference that loses less than a factor 3. */
 const DIFFERENCE_FROM = 2;
 
-/** decayChain of alpha > beta and k, their decays given: one level after another needs it quick. */
+/** decayChain of alpha > beta and k, their decays and the difference of the first two given: one level after another needs it quick. */
 function chainOfThree(
   alpha: number,
   beta: number,
@@ -100,12 +100,12 @@ function chainOfThree(
   leftAlpha: number,
   leftBeta: number,
   leftK: number,
+  difference: number,
 ): number {
   const spread = Math.max(alpha, k) - Math.min(beta, k);
   if (spread * u < DIFFERENCE_FROM) return decayChain([alpha, beta, k], u);
-  const withAlpha = decayDifferenceOf(alpha, k, u, leftAlpha, leftK);
+  if (k > alpha) return (difference - decayDifferenceOf(alpha, k, u, leftAlpha, leftK)) / spread;
   const withBeta = decayDifferenceOf(beta, k, u, leftBeta, leftK);
-  if (k > alpha) return (decayDifferenceOf(alpha, beta, u, leftAlpha, leftBeta) - withAlpha) / spread;
-  if (k < beta) return (withBeta - decayDifferenceOf(alpha, beta, u, leftAlpha, leftBeta)) / spread;
-  return (withBeta - withAlpha) / spread;
+  if (k < beta) return (withBeta - difference) / spread;
+  return (withBeta - decayDifferenceOf(alpha, k, u, leftAlpha, leftK)) / spread;
 }
