@@ -36,6 +36,7 @@ export const benchWords = {
   },
   noPrediction: "No prediction: the concerns say what is missing.",
   steadyHead: "Readings at steady state, typical patient",
+  steadyHeadFinal: "Readings at steady state of the final kinetics, typical patient",
   demoShort: "demo, invented",
   intended:
     "Supports, and does not replace, the judgement of a licensed professional and local policy. Check against current product information.",

@@ -1,4 +1,5 @@
 import type { Traced } from "../../core/analysis/index.ts";
+import { twoCompartmentConstants } from "../../core/kinetics/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { tracedWords } from "../../core/messages/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
@@ -14,6 +15,7 @@ export function MedicinePanel() {
   if (!open) return null;
   const { value } = open;
   const model = open.analysis.result?.typical ?? null;
+  const final = model?.dispositions.at(-1)?.disposition;
   const hasLines = value.given.length > 0 || value.options.some((option) => option.lines.length > 0);
   const figures: { readonly name: string; readonly figure: Traced }[] = model
     ? [
@@ -56,6 +58,7 @@ export function MedicinePanel() {
           }}
         />
       )}
+      {final?.kind === "two-compartment" && <Constants disposition={final} />}
       <dl>
         {figures.map(({ name, figure }) => (
           <div key={name}>
@@ -85,5 +88,18 @@ export function MedicinePanel() {
         );
       })}
     </div>
+  );
+}
+
+/** Micro and macro constants of two compartments, in the final state. */
+function Constants({ disposition }: { readonly disposition: Parameters<typeof twoCompartmentConstants>[0] }) {
+  const found = twoCompartmentConstants(disposition);
+  const perH = (rate: number) => `${numberPrint(rate, { significant: 4 })} per h`;
+  return (
+    <p>
+      Rates: k10 {perH(found.k10)}, k12 {perH(found.k12)}, k21 {perH(found.k21)}; exponential rates: fast{" "}
+      {perH(found.alpha)}, terminal {perH(found.beta)}; volume at steady state{" "}
+      {numberPrint(found.volumeSteady, { significant: 4 })} L.
+    </p>
   );
 }

@@ -34,6 +34,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
   const factor = unitFactor(value, unit);
   // A long unit stands once in the head instead of in every cell.
   const spoken = unitSpoken(unit, "screen");
+  const hasChanges = (analysis.typical?.dispositions.length ?? 1) > 1;
   const isLong = spoken.length > LONGEST_UNIT;
   const concentration = (mgPerL: number) => `${three(mgPerL * factor)}${isLong ? "" : ` ${spoken}`}`;
   const exposure = (mgH: number) => `${three(mgH * factor)}${isLong ? "" : ` ${exposureSpoken(unit)}`}`;
@@ -65,7 +66,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
   return [
     {
       id: "steady",
-      head: `${benchWords.steadyHead}${isLong ? `; ${spoken}, AUC ${exposureSpoken(unit)}` : ""}`,
+      head: `${hasChanges ? benchWords.steadyHeadFinal : benchWords.steadyHead}${isLong ? `; ${spoken}, AUC ${exposureSpoken(unit)}` : ""}`,
       rows: [
         settled("Highest (Cmax)", "peak", (s) => concentration(s.peak)),
         settled("after the dose (Tmax)", "peakAfterDose", (s) => hours(s.peakAfterDoseH)),
