@@ -9,12 +9,16 @@ export function modelPositive(name: string, value: number, unit: string): void {
   if (!(value >= LEAST && value <= MOST)) argumentRefuse(name, value, unit, `above 0, ${LEAST} to ${MOST}`);
 }
 
+export const isModelAmount = (value: number) => value === 0 || (value >= LEAST && value <= MOST);
+
 export function modelAmount(name: string, value: number): void {
-  if (value !== 0 && !(value >= LEAST && value <= MOST)) argumentRefuse(name, value, "mg", `0, or ${LEAST} to ${MOST}`);
+  if (!isModelAmount(value)) argumentRefuse(name, value, "mg", `0, or ${LEAST} to ${MOST}`);
 }
 
+export const isModelTime = (value: number) => Math.abs(value) <= MOST;
+
 export function modelTime(name: string, value: number): void {
-  if (!(Math.abs(value) <= MOST)) argumentRefuse(name, value, "h", `-${MOST} to ${MOST}`);
+  if (!isModelTime(value)) argumentRefuse(name, value, "h", `-${MOST} to ${MOST}`);
 }
 
 /** h, 0 or more. */

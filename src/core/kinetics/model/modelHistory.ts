@@ -1,7 +1,7 @@
 import { argumentFraction, argumentRefuse } from "../argumentCheck.ts";
 import { absorptionCheck, type ModelInput } from "./absorption.ts";
 import * as kinds from "./kinds.ts";
-import { modelAmount, modelDelay, modelTime } from "./modelArgument.ts";
+import { isModelAmount, isModelTime, modelAmount, modelDelay, modelTime } from "./modelArgument.ts";
 import type { ModelKind } from "./modelKind.ts";
 
 type Kinds = (typeof kinds)[keyof typeof kinds];
@@ -47,24 +47,23 @@ export function modelDispositionCheck(name: string, disposition: ModelDispositio
 }
 
 export function modelInputsCheck(name: string, inputs: readonly ModelInput[]): void {
-  let total = 0;
   for (const [index, { absorption, bioavailability, lag, doses }] of inputs.entries()) {
     const input = `${name}[${index}]`;
     absorptionCheck(`${input}.absorption`, absorption);
     argumentFraction(`${input}.bioavailability`, bioavailability);
     modelDelay(`${input}.lag`, lag);
     let before = -Infinity;
-    for (const [i, { time, amount }] of doses.entries()) {
-      modelTime(`${input}.doses[${i}].time`, time);
+    for (let i = 0; i < doses.length; i++) {
+      const { time, amount } = doses[i]!;
+      // Names are put together only for what is refused: there may be very many doses.
+      if (!isModelTime(time)) modelTime(`${input}.doses[${i}].time`, time);
       if (time < before) {
         argumentRefuse(`${input}.doses[${i}].time`, time, "h", `not before that of the dose before it, ${before} h`);
       }
-      modelAmount(`${input}.doses[${i}].amount`, amount);
+      if (!isModelAmount(amount)) modelAmount(`${input}.doses[${i}].amount`, amount);
       before = time;
-      total += amount;
     }
   }
-  if (total === Infinity) argumentRefuse("the sum of all doses", total, "mg", "a finite number");
 }
 
 /** Throws a RangeError for a history outside the ranges above; gives the kind of its dispositions. */
