@@ -11,7 +11,7 @@ import type { ModelHistory } from "./modelHistory.ts";
  * @param times h, ascending, finite
  * @returns mg/L at each time, as modelProfile
  * Outside: bad arguments throw RangeError; a history that would take more than a million steps throws Error.
- * Accuracy: 2e-9 of the largest level (tests/core/kinetics/model/crossCheck.test.ts).
+ * Accuracy: 1e-8 of the largest level (tests/core/kinetics/model/crossCheck.test.ts).
  * Source: see DormandPrince.
  * @example crossCheck({ dispositions: [{ from: -Infinity, disposition: { kind: "one-compartment", clearance: 3, volume: 30 } }],
  *   inputs: [{ absorption: { kind: "zero-order", duration: 4 }, bioavailability: 1, lag: 0, doses: [{ time: 0, amount: 300 }] }] }, [4])

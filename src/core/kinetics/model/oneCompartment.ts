@@ -1,10 +1,10 @@
+import { signChanges } from "../../numerics/index.ts";
 import { type BothReadings, bothReadings } from "../bothReadings.ts";
 import type { Absorption } from "./absorption.ts";
 import { inflowDerivative, linearResponseArea, linearResponseAt, linearResponseCarried } from "./linearResponse.ts";
 import { modelPositive } from "./modelArgument.ts";
 import type { ModelKind, PeriodRun } from "./modelKind.ts";
-import { singleTurn } from "./singleTurn.ts";
-import { type Inflow, inflowAt, type Stretch } from "./stretch.ts";
+import { type Inflow, inflowAt, type Stretch, stretchReach } from "./stretch.ts";
 
 /** One compartment, elimination in proportion to the level. */
 export interface OneCompartmentDisposition {
@@ -40,15 +40,17 @@ class OneCompartmentStretch implements Stretch {
     return linearResponseAt(this.#ke, this.#bodySlope, this.#inflowSlope, u) / this.#volume;
   }
 
-  /** b′ + ke·b = inflow, which only falls, so e^(ke·u)·b′ only falls: b′ changes sign at most once, from rising to falling. */
+  /**
+   * (D + ke)·b′ = inflow′ and the inflow only falls, so e^(ke·u)·b′ only falls: b′ changes sign at most once, from rising to falling.
+   * The slope is computed as a response of its own, without the constant input, so that its sign holds out on a plateau.
+   */
   turns(length: number): readonly number[] {
+    if (!(this.#bodySlope > 0)) return [];
     const ke = this.#ke;
-    return singleTurn(
-      (u) => this.slopeAt(u),
-      (u) => inflowAt(this.#inflowSlope, u) / this.#volume - ke * this.slopeAt(u),
-      length,
-      (u) => inflowAt(this.#inflow, u) / this.#volume + ke * this.levelAt(u),
-    );
+    const slope = (u: number) => linearResponseAt(ke, this.#bodySlope, this.#inflowSlope, u);
+    const bend = (u: number) => inflowAt(this.#inflowSlope, u) - ke * slope(u);
+    const far = stretchReach(length, Math.min(ke, ...this.#inflow.ka));
+    return signChanges(slope, bend, [0, far]).filter((turn) => turn < length);
   }
 
   areaTo(u: number): number {

@@ -1,3 +1,4 @@
+import { signChanges } from "../../numerics/index.ts";
 import { argumentRefuse } from "../argumentCheck.ts";
 import { linearResponseArea, linearResponseAt } from "./linearResponse.ts";
 import {
@@ -9,11 +10,12 @@ import {
   seriesSquared,
   seriesUsedArea,
 } from "./saturableSeries.ts";
-import { singleTurn } from "./singleTurn.ts";
-import { type Inflow, inflowAt, inflowSlopeAt, type Stretch } from "./stretch.ts";
+import { type Inflow, inflowAt, inflowSlopeAt, type Stretch, stretchReach } from "./stretch.ts";
 
 /** Below this part of Km × volume the elimination is in proportion to the amount, to the last digit. */
 const LINEAR_BELOW = 1e-17;
+/** A slope smaller than this part of what it is the difference of has no sign that could be trusted. */
+const NOISE = 1e-14;
 /** A stretch that needs more pieces than this has a time constant far below any medicine's. */
 const MOST_PIECES = 5_000;
 
@@ -54,18 +56,31 @@ export class SaturableStretch implements Stretch {
     return this.#bodySlopeAt(u) / this.#volume;
   }
 
-  /** (D + f′(b))·b′ = inflow′ with f the elimination: as f′ > 0 and the inflow only falls, b′ changes sign at most once. */
+  /**
+   * (D + f′(b))·b′ = inflow′ with f the elimination: as f′ > 0 and the inflow only falls, b′ changes sign at most once, from rising to
+   * falling. On a plateau the sign drowns in rounding, so the first piece is sought at whose end the level falls for certain: pieces
+   * are shorter than anything that happens.
+   */
   turns(length: number): readonly number[] {
-    const { vmax, half } = this.#saturation;
-    return singleTurn(
-      (u) => this.#bodySlopeAt(u),
-      (u) => {
-        const total = half + this.#bodyAt(u);
-        return inflowSlopeAt(this.#inflow, u) - vmax * (half / total / total) * this.#bodySlopeAt(u);
-      },
-      length,
-      (u) => inflowAt(this.#inflow, u) + this.#eliminationAt(u),
-    );
+    if (!(this.#bodySlopeAt(0) > 0)) return [];
+    this.#at(length);
+    const tail = this.#pieces.find(({ series }) => series === undefined);
+    const far = tail === undefined ? length : stretchReach(length, Math.min(this.#linearRate, ...this.#inflow.ka));
+    const ends = this.#pieces.map(({ start }) => start).filter((start) => start > 0 && start < far);
+    let rising = 0;
+    for (const end of [...ends, far]) {
+      const slope = this.#bodySlopeAt(end);
+      if (slope < -NOISE * this.#eliminationAt(end)) {
+        const bracket = [rising, end];
+        return signChanges(
+          (u) => this.#bodySlopeAt(u),
+          (u) => this.#bodyBendAt(u),
+          bracket,
+        ).slice(0, 1);
+      }
+      if (slope > 0) rising = end;
+    }
+    return [];
   }
 
   areaTo(u: number): number {
@@ -132,6 +147,12 @@ export class SaturableStretch implements Stretch {
 
   #bodySlopeAt(u: number): number {
     return inflowAt(this.#inflow, u) - this.#eliminationAt(u);
+  }
+
+  #bodyBendAt(u: number): number {
+    const { vmax, half } = this.#saturation;
+    const total = half + this.#bodyAt(u);
+    return inflowSlopeAt(this.#inflow, u) - vmax * (half / total / total) * this.#bodySlopeAt(u);
   }
 
   #piece(start: number, body: number, area: number, eliminated: number): Piece {

@@ -15,6 +15,14 @@ export function inflowAt({ ka, gut, rate }: Inflow, u: number): number {
   return input;
 }
 
+/** At this many times the slowest time constant every decay is below 1e-260: what is left has no turn. */
+const NOTHING_LEFT = 600;
+
+/** How far on a decaying curve still has a slope to speak of, h: the stretch's length or less. */
+export function stretchReach(length: number, slowest: number): number {
+  return Math.min(length, NOTHING_LEFT / slowest);
+}
+
 /** How fast the inflow changes, mg/h², 0 or less: within a stretch it only falls. */
 export function inflowSlopeAt({ ka, gut }: Inflow, u: number): number {
   let slope = 0;

@@ -1,5 +1,5 @@
 import type { ModelKind, PeriodRun } from "./modelKind.ts";
-import type { Inflow, Stretch } from "./stretch.ts";
+import { type Inflow, inflowSlopeAt, type Stretch } from "./stretch.ts";
 import {
   type TwoCompartmentConstants,
   type TwoCompartmentDisposition,
@@ -41,7 +41,11 @@ class TwoCompartmentStretch implements Stretch {
   }
 
   turns(length: number): readonly number[] {
-    return twoCompartmentTurns(this.#constants, this.#slope, this.#inflow, length);
+    const slope = this.#slope;
+    slope.goTo(0);
+    const { central, peripheral } = slope;
+    const start = { central, peripheral, inflow: inflowSlopeAt(this.#inflow, 0) };
+    return twoCompartmentTurns(this.#constants, start, this.#inflow, length);
   }
 
   areaTo(u: number): number {

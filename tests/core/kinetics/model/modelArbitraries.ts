@@ -14,7 +14,14 @@ export const KINDS = ["one-compartment", "two-compartment", "saturable"] as cons
 export type Kind = (typeof KINDS)[number];
 export const LINEAR_KINDS = ["one-compartment", "two-compartment"] as const;
 
-const powerOfTen = (min: number, max: number) => fc.double({ min, max, noNaN: true }).map((x) => 10 ** x);
+/**
+ * Evenly over [min, max]. Not `fc.double`: that is even over the bit patterns of doubles, so that nearly all of its numbers lie
+ * close to 0, and nearly all powers of ten made of them close to 1.
+ */
+export const even = (min: number, max: number) =>
+  fc.integer({ min: 0, max: 1_000_000 }).map((n) => min + ((max - min) * n) / 1_000_000);
+
+export const powerOfTen = (min: number, max: number) => even(min, max).map((x) => 10 ** x);
 
 /** Quarter hours, so that shifting and splitting times rounds nothing. */
 export const quarter = (min: number, max: number) => fc.integer({ min: min * 4, max: max * 4 }).map((n) => n / 4);
@@ -23,7 +30,7 @@ const firstOrder = powerOfTen(-1.7, 0.8).map((ka) => ({ kind: "first-order", ka 
 const zeroOrder = quarter(1, 40).map((duration) => ({ kind: "zero-order", duration }) as const);
 const mixed = fc
   .record({
-    fastFraction: fc.double({ min: 0, max: 1, noNaN: true }),
+    fastFraction: even(0, 1),
     fastKa: powerOfTen(-0.5, 0.8),
     slow: fc.oneof(firstOrder, zeroOrder),
     slowLag: fc.oneof(fc.constant(0), quarter(0, 6)),
@@ -32,7 +39,7 @@ const mixed = fc
 
 export const absorption: fc.Arbitrary<Absorption> = fc.oneof(firstOrder, zeroOrder, mixed);
 
-const volume = fc.double({ min: 5, max: 200, noNaN: true });
+const volume = even(5, 200);
 const rate = powerOfTen(-2, 0);
 
 const dispositions: Record<Kind, fc.Arbitrary<ModelDisposition>> = {
@@ -49,7 +56,7 @@ const dispositions: Record<Kind, fc.Arbitrary<ModelDisposition>> = {
       peripheralVolume: d.ratio * d.volume,
     })),
   saturable: fc
-    .record({ volume, vmax: fc.double({ min: 5, max: 80, noNaN: true }), km: powerOfTen(-0.5, 1.5) })
+    .record({ volume, vmax: even(5, 80), km: powerOfTen(-0.5, 1.5) })
     .map((d) => ({ kind: "saturable", ...d })),
 };
 
@@ -61,7 +68,7 @@ export const doses: fc.Arbitrary<Dose[]> = fc
 
 export const input: fc.Arbitrary<ModelInput> = fc.record({
   absorption,
-  bioavailability: fc.double({ min: 0.1, max: 1, noNaN: true }),
+  bioavailability: even(0.1, 1),
   lag: fc.oneof(fc.constant(0), quarter(0, 3)),
   doses,
 });

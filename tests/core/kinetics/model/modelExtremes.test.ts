@@ -1,12 +1,13 @@
 import fc from "fast-check";
 import { expect, test } from "vitest";
 import * as core from "../../../../src/core/kinetics/index.ts";
+import { even, powerOfTen } from "./modelArbitraries.ts";
 
 /** All magnitudes that are let in, with a liking for the edges and for those of medicines. */
 const positive = fc.oneof(
   fc.constantFrom(1e-30, 1, 1e30),
-  fc.double({ min: -30, max: 30, noNaN: true }).map((x) => Math.min(1e30, Math.max(1e-30, 10 ** x))),
-  fc.double({ min: -4, max: 4, noNaN: true }).map((x) => 10 ** x),
+  even(-29.999, 29.999).map((x) => 10 ** x),
+  powerOfTen(-4, 4),
 );
 const delay = fc.oneof(fc.constant(0), positive);
 const part = fc.oneof(
@@ -66,7 +67,7 @@ test("nothing is ever not a number or negative, at any magnitude: a result or a 
     mg2: positive,
     t: positive,
     period: positive,
-    within: fc.double({ min: 0, max: 0.99, noNaN: true }),
+    within: even(0, 0.99),
     level: positive,
   });
   fc.assert(
