@@ -1,9 +1,16 @@
 import type { Case } from "../case/index.ts";
 import { doseLabelledMg, doseMg, productOf } from "../medicine/index.ts";
-import { type DoseLine, doseLineEndMs } from "../regimen/index.ts";
+import {
+  type DoseLine,
+  type DoseRepeat,
+  doseLineEndMs,
+  doseLineGapHours,
+  doseLinePeriodHours,
+} from "../regimen/index.ts";
 import { instantMs, wallClock } from "../time/index.ts";
 
 const MINUTE_MS = 60_000;
+const HOUR_MS = 60 * MINUTE_MS;
 const DAY_MIN = 1_440;
 /** A common period longer than this (two weeks) is not treated as one repeating pattern. */
 const LONGEST_PERIOD_MIN = 14 * DAY_MIN;
@@ -28,7 +35,7 @@ export type PatternResult =
  * The pattern an option settles into, as if its last repeating lines went on for ever.
  * Lines that end before the others are a lead-in (a loading dose, a lower first step) and are left out; so are exceptions.
  * Periods are whole minutes; the common period is their least common multiple, at most two weeks.
- * Clock-time lines count 24 h a day here; the change of a daylight-saving night is in the profile, not in the steady state.
+ * Clock-time lines count 24 h a day here, on weekdays seven days a week; the change of a daylight-saving night is in the profile, not in the steady state.
  */
 export function regimenPattern(value: Case, lines: readonly DoseLine[]): PatternResult {
   const repeating = lines.filter((line) => line.repeat !== undefined);
@@ -36,7 +43,7 @@ export function regimenPattern(value: Case, lines: readonly DoseLine[]): Pattern
   const ends = repeating.map((line) => lineEndMs(line, value.timeZone));
   const lastEnd = Math.max(...ends);
   const ongoing = repeating.filter(
-    (line, i) => ends[i] === lastEnd || ends[i]! + periodMin(line) * MINUTE_MS > lastEnd,
+    (line, i) => ends[i] === lastEnd || ends[i]! + (doseLineGapHours(line) ?? 0) * HOUR_MS > lastEnd,
   );
   const period = ongoing.map(periodMin).reduce(leastCommonMultiple);
   if (!Number.isInteger(period) || period > LONGEST_PERIOD_MIN) return { ok: false, reason: "no-common-period" };
@@ -68,8 +75,9 @@ function lineEndMs(line: DoseLine, zone: string): number {
 }
 
 function periodMin(line: DoseLine): number {
-  if (!line.repeat) throw new RangeError("a single dose has no period");
-  return "every" in line.repeat ? Math.round(line.repeat.every.value * 60) : DAY_MIN;
+  const hours = doseLinePeriodHours(line);
+  if (hours === null) throw new RangeError("a single dose has no period");
+  return Math.round(hours * 60);
 }
 
 /** Minutes from the pattern's start at which the line gives a dose, within one period. */
@@ -79,13 +87,22 @@ function patternMinutes(line: DoseLine, startMs: number, period: number, zone: s
   const offsets =
     "every" in line.repeat
       ? [(instantMs(line.start) - startMs) / MINUTE_MS]
-      : line.repeat.clock.map((time) => minuteOfDay(time) - minuteOfDay(wallClock(startMs, zone).time));
+      : clockOffsets(line.repeat, wallClock(startMs, zone));
   const minutes: number[] = [];
   for (const offset of offsets) {
     const first = ((offset % own) + own) % own;
     for (let minute = first; minute < period; minute += own) minutes.push(minute);
   }
   return minutes;
+}
+
+/** Minutes from the pattern's start to each clock time on its day, or on each of its weekdays; before wrapping into the period. */
+function clockOffsets(
+  { clock, weekdays }: Extract<DoseRepeat, { clock: string[] }>,
+  start: { readonly time: string; readonly weekday: number },
+): number[] {
+  const days = weekdays?.map((day) => day - start.weekday) ?? [0];
+  return days.flatMap((day) => clock.map((time) => day * DAY_MIN + minuteOfDay(time) - minuteOfDay(start.time)));
 }
 
 function minuteOfDay(time: string): number {

@@ -12,7 +12,7 @@ export const FIELD_ORDER: readonly string[] = (
   "absorptionRate input duration fastFraction slowRate slowDuration slowLag saltFactor residualProportional residualAdditive " +
   "population products product form release strengths concentration divisible swallowWhole lag bioavailability " +
   "windows toxicFrom earliestSample doseLimits sampling cautions formula text category " +
-  "window quantity low high value unit given levels options lines amount start repeat every count clock days except " +
+  "window quantity low high value unit given levels options lines amount start repeat every count clock days weekdays except " +
   "chosen confirmed excluded ageMin ageMax source basis note fit use residualModel notes"
 ).split(" ");
 

@@ -140,6 +140,8 @@ export const doseWords = {
   clockTimes: "Clock times",
   clockTimesHelp: "Separate them with a comma: 08:00, 22:00",
   days: "Number of days",
+  weekdays: "On weekdays",
+  weekdaysHelp: "None marked: every day.",
   doses: "Each dose of this line",
   dose: "dose",
   due: "due",

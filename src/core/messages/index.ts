@@ -11,5 +11,6 @@ export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./r
 export { richWords } from "./richWords.ts";
 export * from "./screenWords.ts";
 export * from "./summaryWords.ts";
+export { weekdayList, weekdayName } from "./weekdayWords.ts";
 export { windowQuantityWord, windowRangeWords } from "./windowWords.ts";
 export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";

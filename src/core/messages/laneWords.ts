@@ -1,6 +1,7 @@
 import type { DoseLine } from "../regimen/index.ts";
 import { instantMs, instantText } from "../time/index.ts";
 import { numberPrint, quantityPrint } from "../units/index.ts";
+import { weekdayList } from "./weekdayWords.ts";
 
 /** A dose line in the few words that fit beside its lane: "300 mg every 12 h from Wed 4 March, 20:00, 10 doses". */
 export function laneLineWords(line: DoseLine, zone: string): string {
@@ -14,5 +15,6 @@ export function laneLineWords(line: DoseLine, zone: string): string {
     return `${amount} every ${numberPrint(repeat.every.value, {})} h from ${start}${reach}${exceptions}`;
   }
   const reach = repeat.days === undefined ? "" : `, ${repeat.days} ${repeat.days === 1 ? "day" : "days"}`;
-  return `${amount} at ${repeat.clock.join(" and ")} from ${start}${reach}${exceptions}`;
+  const on = repeat.weekdays ? ` on ${weekdayList(repeat.weekdays, "short")}` : "";
+  return `${amount} at ${repeat.clock.join(" and ")}${on} from ${start}${reach}${exceptions}`;
 }

@@ -1,3 +1,4 @@
+import { WEEKDAYS } from "../time/index.ts";
 import type { MessageFunction } from "./messageFunction.ts";
 import { dateWords } from "./timeMessages.ts";
 
@@ -23,6 +24,7 @@ const WAYS: Readonly<Record<string, string>> = {
   days: "for how long",
   date: "from which day",
   product: "of which product",
+  weekdays: "on which weekdays",
 };
 
 export const regimenMessages: Readonly<Record<string, MessageFunction>> = {
@@ -90,6 +92,19 @@ export const regimenMessages: Readonly<Record<string, MessageFunction>> = {
     `${times(count)} a day does not go with ${texts(clocks).length === 1 ? "one clock time" : `${texts(clocks).length} clock times`} (${either(clocks, "and")}): make them agree.`,
   "dose-text-daily-which": ({ part }: Data) =>
     `${said(part)} each day can't carry "first", "second" or an offset: write the time alone.`,
+  "line-weekdays-order": () =>
+    "Weekdays of a dose line are numbers from 1 (Monday) to 7 (Sunday), in ascending order, each once.",
+  "dose-text-weekday-twice": ({ part }: Data) => `${said(part)} names a weekday twice: name it once.`,
+  "dose-text-weekday-once": ({ part }: Data) =>
+    `${said(part)} for a single dose can mean several days: write the date, such as "once on 4 March at 08:00".`,
+  "dose-text-weekdays-and": ({ part, weekdays, hours }: Data) =>
+    `${said(part)} is said to be taken ${hours === undefined ? "daily" : `every ${String(hours)} h`} and also ${said(weekdays)}: leave one of them out.`,
+  "dose-text-weekdays-day": ({ part }: Data) =>
+    `${said(part)} stands beside a single day: if that is the first day, write it with "from", as in "from 4 March".`,
+  "dose-text-one-weekday": ({ part, weekday }: Data) => {
+    const name = WEEKDAYS[Number(weekday) - 1] ?? "";
+    return `${said(part)} may be one ${name} or each: write "every ${name}", or the date, such as "once on 4 March at 08:00".`;
+  },
   "dose-text-seconds": ({ part }: Data) => `${said(part)} has seconds: write a daily time to the minute.`,
   "dose-text-needs-time": ({ part, expected }: Data) =>
     `${said(part)} has no clock time: add it, such as ${said(expected)}.`,

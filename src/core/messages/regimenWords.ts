@@ -2,12 +2,16 @@ import {
   type DoseAmount,
   type DoseLine,
   type DoseProduct,
+  type DoseRepeat,
   doseLineCount,
   doseLineEndMs,
   doseLineScheduledMs,
 } from "../regimen/index.ts";
 import { instantMs, instantText, wallClock } from "../time/index.ts";
 import { type MicrogramWord, numberPrint, quantityConvert, quantityPrint, type UnitStyle } from "../units/index.ts";
+
+import { listWords } from "./summaryWords.ts";
+import { weekdayList } from "./weekdayWords.ts";
 
 export interface DoseSentenceContext {
   readonly zone: string;
@@ -42,7 +46,7 @@ function scheduleWords(line: DoseLine, zone: string): string {
   const often =
     "every" in line.repeat
       ? `every ${numberPrint(line.repeat.every.value)} ${line.repeat.every.value === 1 ? "hour" : "hours"}`
-      : `each day at ${clockList(line.repeat.clock)}`;
+      : clockWords(line.repeat);
   const count = doseLineCount(line, zone);
   if (count === 0) return `${often}: no dose`;
   const firstMs = doseLineScheduledMs(line, 0, zone);
@@ -59,10 +63,10 @@ function dayAndClock(ms: number, zone: string, afterMs: number | null): string {
   return `${instantText(ms, zone, isSameYear ? "date" : "dateYear")} at ${instantText(ms, zone, "clock")}`;
 }
 
-function clockList(clock: readonly string[]): string {
-  const times = [...new Set(clock)].sort();
-  const last = times.pop() ?? "";
-  return times.length === 0 ? last : `${times.join(", ")} and ${last}`;
+/** "each day at 08:00", "at 08:00 on Monday, Wednesday and Friday". */
+function clockWords({ clock, weekdays }: Extract<DoseRepeat, { clock: string[] }>): string {
+  const times = listWords([...new Set(clock)].sort());
+  return weekdays ? `at ${times} on ${weekdayList(weekdays)}` : `each day at ${times}`;
 }
 
 function exceptionWords(line: DoseLine, product: DoseProduct | undefined, context: DoseSentenceContext): string[] {

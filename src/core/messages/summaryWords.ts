@@ -127,6 +127,9 @@ export const summaryOrderWords = {
     clock.length === 0 ? `every ${hours} hours` : `every ${hours} hours, at ${listWords(clock)}`,
   everyDay: (clock: readonly string[]) =>
     clock.length === 1 ? `every day at ${clock[0]}` : `at each of ${listWords(clock)}, every day`,
+  /** `days`: "Monday, Wednesday and Friday". */
+  onWeekdays: (days: string, clock: readonly string[]) =>
+    clock.length === 1 ? `on ${days} at ${clock[0]}` : `on ${days}, at each of ${listWords(clock)}`,
   firstDose: (when: string) => `First dose ${when}.`,
   onlyDose: (when: string) => `One dose, ${when}.`,
   lastDose: (count: number, when: string) => `${count} doses, the last ${when}.`,

@@ -10,10 +10,22 @@ export const clockTimeSchema = z.string().regex(/^([01]\d|2[0-3]):[0-5]\d$/);
 
 /** Elapsed-hours repeat. Without `count`: until further notice (given lane: to the now line; option: to the end of the span shown). */
 const everySchema = z.strictObject({ every: quantityIn("h"), count: z.int().min(1).max(10_000).optional() });
-/** Wall-clock repeat, once a day at each clock time; `days` counts calendar days from that of `start`. Without `days`: until further notice. */
+/** Weekdays of a repeat, 1 for Monday to 7 for Sunday, ascending, each once. */
+const weekdaysSchema = z
+  .array(z.int().min(1).max(7))
+  .min(1)
+  .max(7)
+  .refine((days) => days.every((day, i) => i === 0 || day > (days[i - 1] ?? 0)), {
+    params: { code: "line-weekdays-order" },
+  });
+/**
+ * Wall-clock repeat, once a day at each clock time; `days` counts calendar days from that of `start`. Without `days`: until further notice.
+ * With `weekdays`, only the days that fall on one of them carry doses; without, every day does.
+ */
 const clockSchema = z.strictObject({
   clock: z.array(clockTimeSchema).min(1).max(24),
   days: z.int().min(1).max(3_660).optional(),
+  weekdays: weekdaysSchema.optional(),
 });
 
 /**

@@ -1,4 +1,4 @@
-import { instantMs, instantText } from "../time/index.ts";
+import { instantMs, instantText, WEEKDAYS } from "../time/index.ts";
 import { numberPlain } from "../units/index.ts";
 import type { DoseAmount, DoseException, DoseLine } from "./doseLine.ts";
 import type { DoseProduct } from "./doseProduct.ts";
@@ -26,11 +26,20 @@ function repeatText({ repeat }: DoseLine, start: string): string {
     const count = repeat.count === undefined ? "" : `, ${repeat.count} ${repeat.count === 1 ? "dose" : "doses"}`;
     return `every ${numberPlain(repeat.every.value)} h from ${start}${count}`;
   }
-  const times = [...repeat.clock].sort();
-  const last = times.pop() ?? "";
-  const list = times.length === 0 ? last : `${times.join(", ")} and ${last}`;
+  const list = listText([...repeat.clock].sort());
   const days = repeat.days === undefined ? "" : ` for ${repeat.days} ${repeat.days === 1 ? "day" : "days"}`;
-  return `daily at ${list} from ${start}${days}`;
+  return `${repeat.weekdays ? `at ${list} ${weekdaysText(repeat.weekdays)}` : `daily at ${list}`} from ${start}${days}`;
+}
+
+/** One weekday as "every Mon": "on Mon" could be a single one. */
+function weekdaysText(weekdays: readonly number[]): string {
+  const names = weekdays.map((day) => (WEEKDAYS[day - 1] ?? "").slice(0, 3));
+  return `${names.length === 1 ? "every" : "on"} ${listText(names)}`;
+}
+
+function listText(items: readonly string[]): string {
+  const last = items.at(-1) ?? "";
+  return items.length < 2 ? last : `${items.slice(0, -1).join(", ")} and ${last}`;
 }
 
 function exceptionText({ index, status, at, amount }: DoseException, instant: (iso: string) => string): string {

@@ -11,7 +11,7 @@ export {
 } from "./doseLine.ts";
 export { doseLineCount, doseLineEndMs, doseLineScheduledMs } from "./doseLineEndMs.ts";
 export { type DoseEvent, type DoseLineSpan, doseLineExpand, isEndlessLine, MOST_DOSES } from "./doseLineExpand.ts";
-export { doseLinePeriodHours } from "./doseLinePeriodHours.ts";
+export { doseLineGapHours, doseLinePeriodHours } from "./doseLinePeriodHours.ts";
 export { type DoseLineTextContext, doseLineText } from "./doseLineText.ts";
 export type { DoseProduct } from "./doseProduct.ts";
 export type { DoseTextContext } from "./doseText/doseSegment.ts";

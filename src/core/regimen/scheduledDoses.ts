@@ -1,5 +1,5 @@
 import { type ClockOnDay, clockOnDay, instantMs, localDays, MS_PER_HOUR, wallClock } from "../time/index.ts";
-import type { DoseLine } from "./doseLine.ts";
+import type { DoseLine, DoseRepeat } from "./doseLine.ts";
 
 /** A dose where the line puts it. A clock time of a day on which it is skipped or comes twice is not an instant yet. */
 export interface ScheduledDose {
@@ -21,22 +21,27 @@ export function* scheduledDoses(line: DoseLine, zone: string): Generator<Schedul
       yield { index, found: { kind: "once", ms: startMs + Math.round(index * every.value * MS_PER_HOUR) } };
     }
   } else {
-    yield* clockDoses(startMs, line.repeat.clock, line.repeat.days ?? Number.POSITIVE_INFINITY, zone);
+    yield* clockDoses(startMs, line.repeat, zone);
   }
 }
 
 function* clockDoses(
   startMs: number,
-  clock: readonly string[],
-  days: number,
+  { clock, days = Number.POSITIVE_INFINITY, weekdays }: Extract<DoseRepeat, { clock: string[] }>,
   zone: string,
 ): Generator<ScheduledDose, void, undefined> {
   const times = [...new Set(clock)].sort();
   let index = 0;
   let day = 0;
+  let weekday = 0;
+  let isAfterPlain = false;
   for (const { startMs: midnight, isPlain } of localDays(startMs, zone)) {
     if (day >= days) return;
     day += 1;
+    // The calendar is asked only after a day with a change of the clocks, which may have left a date out.
+    if (weekdays) weekday = isAfterPlain ? (weekday % 7) + 1 : wallClock(midnight, zone).weekday;
+    isAfterPlain = isPlain;
+    if (weekdays && !weekdays.includes(weekday)) continue;
     const date = isPlain ? "" : wallClock(midnight, zone).date;
     for (const time of times) {
       const onDay = isPlain ? timeOnPlainDay(midnight, time) : clockOnDay(date, time, zone);

@@ -7,6 +7,7 @@ import { QuantityField } from "../ui/QuantityField.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
 import { TextField } from "../ui/TextField.tsx";
 import { repeatKind } from "./lineLook.ts";
+import { WeekdayField } from "./WeekdayField.tsx";
 
 export interface RepeatFieldsProps {
   readonly line: DoseLine;
@@ -79,6 +80,22 @@ export function RepeatFields({ line, zone, faultOf, onLine }: RepeatFieldsProps)
             }}
           />
         </div>
+      ) : null}
+      {repeat && "clock" in repeat ? (
+        <WeekdayField
+          value={repeat.weekdays}
+          fault={faults.weekdays}
+          onChange={(weekdays) => {
+            const { weekdays: _, ...daily } = repeat;
+            // Other days are other doses: a mark would come to stand at one it was not made for.
+            const isMarked = (line.except ?? []).length > 0;
+            take(
+              "weekdays",
+              weekdays ? { ...daily, weekdays } : daily,
+              isMarked ? issue("dose-line-has-exceptions") : undefined,
+            );
+          }}
+        />
       ) : null}
       {repeat && "clock" in repeat ? (
         <div className="line-form-row">

@@ -1,5 +1,5 @@
-import { summaryOrderWords as words } from "../../core/messages/index.ts";
-import type { DoseLine } from "../../core/regimen/index.ts";
+import { weekdayList, summaryOrderWords as words } from "../../core/messages/index.ts";
+import { type DoseLine, type DoseRepeat, doseLineGapHours } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR, wallClock } from "../../core/time/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
 
@@ -26,18 +26,22 @@ function clockOf(minuteOfDay: number): string {
 export function orderSchedule(line: DoseLine, firstMs: number, zone: string): string {
   const { repeat } = line;
   if (!repeat) return words.once;
-  if ("clock" in repeat) return words.everyDay([...repeat.clock].sort());
+  if ("clock" in repeat) return clockSchedule(repeat);
   const every = repeat.every.value;
   return words.every(numberPrint(every), everyClockTimes(firstMs, every, zone));
+}
+
+/** "every day at 22:00"; "on Monday, Wednesday and Friday at 08:00". */
+function clockSchedule({ clock, weekdays }: Extract<DoseRepeat, { clock: string[] }>): string {
+  const times = [...clock].sort();
+  return weekdays ? words.onWeekdays(weekdayList(weekdays), times) : words.everyDay(times);
 }
 
 /** The same without clock times: what a regimen that is replaced is called. */
 export function scheduleBrief(line: DoseLine): string {
   const { repeat } = line;
   if (!repeat) return words.once;
-  return "clock" in repeat
-    ? words.everyDay([...repeat.clock].sort())
-    : words.every(numberPrint(repeat.every.value), []);
+  return "clock" in repeat ? clockSchedule(repeat) : words.every(numberPrint(repeat.every.value), []);
 }
 
 /**
@@ -70,12 +74,12 @@ export function isSameRegimen(a: DoseLine, b: DoseLine): boolean {
 
 function rhythm({ repeat, start }: DoseLine): string {
   if (!repeat) return `once ${start}`;
-  return "clock" in repeat ? `clock ${[...repeat.clock].sort().join(" ")}` : `every ${repeat.every.value}`;
+  if ("every" in repeat) return `every ${repeat.every.value}`;
+  return `clock ${[...repeat.clock].sort().join(" ")} on ${repeat.weekdays?.join(" ") ?? "every day"}`;
 }
 
-/** A given line that still runs at the now line: it repeats, has begun, and its end is less than one interval back. */
+/** A given line that still runs at the now line: it repeats, has begun, and its end is less than one interval back (on weekdays, the longest gap between two). */
 export function isRunning(line: DoseLine, endMs: number | null, nowMs: number): boolean {
   if (!line.repeat || instantMs(line.start) > nowMs) return false;
-  const intervalH = "clock" in line.repeat ? 24 : line.repeat.every.value;
-  return endMs === null || endMs + intervalH * MS_PER_HOUR > nowMs;
+  return endMs === null || endMs + (doseLineGapHours(line) ?? 0) * MS_PER_HOUR > nowMs;
 }

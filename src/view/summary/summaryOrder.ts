@@ -95,7 +95,9 @@ function totalSentences(
   const weight = input.analysis.patient.weight;
   const perDay = print.quantity(perDayMg, "mg", { significant: 4 });
   const perKg = weight ? print.quantity(perDayMg / weight.value, "mg") : null;
-  const isAverage = option.lines.some(({ repeat }) => repeat && "every" in repeat && 24 % repeat.every.value !== 0);
+  const isAverage = option.lines.some(
+    ({ repeat }) => repeat && ("every" in repeat ? 24 % repeat.every.value !== 0 : (repeat.weekdays?.length ?? 7) < 7),
+  );
   const isOneStep = option.lines.every(
     ({ repeat }) => repeat && ("clock" in repeat ? repeat.days : repeat.count) === undefined,
   );

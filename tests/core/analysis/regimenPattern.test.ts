@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { regimenPattern } from "../../../src/core/analysis/regimenPattern.ts";
-import type { DoseLine } from "../../../src/core/regimen/index.ts";
+import { historyExposure, patternSteadyState } from "../../../src/core/kinetics/index.ts";
+import { type DoseLine, doseLineExpand } from "../../../src/core/regimen/index.ts";
 import { caseFixture } from "./caseFixture.ts";
 
 const value = caseFixture();
@@ -76,6 +77,62 @@ describe("regimenPattern", () => {
   it("exceptions don't change it", () => {
     const plain = line(300, "2026-03-05T08:00:00+00:00", every(12, 10));
     expect(pattern({ ...plain, except: [{ index: 2, status: "missed" }] })).toEqual(pattern(plain));
+  });
+
+  it("weekdays repeat after a week, counted from the pattern's start", () => {
+    // Starts on Wednesday 4 March at 20:00; the doses are at 08:00.
+    const found = pattern(line(200, "2026-03-04T20:00:00+00:00", { clock: ["08:00"], weekdays: [1, 3, 5] }));
+    expect(found.periodH).toBe(168);
+    expect(found.dosePerPeriodMg).toBe(600);
+    expect(found.courses.get("tablet-12h")!.map((dose) => dose.time)).toEqual([36, 108, 156]);
+    const beside = pattern(
+      line(200, "2026-03-04T08:00:00+00:00", { clock: ["08:00"], weekdays: [7] }),
+      line(100, "2026-03-04T08:00:00+00:00", every(12)),
+    );
+    expect([beside.periodH, beside.dosePerPeriodMg]).toEqual([168, 14 * 100 + 200]);
+  });
+
+  it("a line on weekdays that ends before a weekend is ongoing beside one that ends in it", () => {
+    const found = pattern(
+      line(200, "2026-03-02T08:00:00+00:00", { clock: ["08:00"], days: 28, weekdays: [1, 2, 3, 4, 5] }),
+      line(300, "2026-03-02T10:00:00+00:00", { clock: ["10:00"], days: 28, weekdays: [6, 7] }),
+    );
+    expect(found.dosePerPeriodMg).toBe(5 * 200 + 2 * 300);
+    // A Monday line that ended a week and more before is a lead-in.
+    const led = pattern(
+      line(200, "2026-03-02T08:00:00+00:00", { clock: ["08:00"], days: 7, weekdays: [1] }),
+      line(300, "2026-03-09T08:00:00+00:00", { clock: ["08:00"], days: 7 }),
+    );
+    expect([led.periodH, led.dosePerPeriodMg]).toEqual([24, 300]);
+  });
+
+  it("steady state of a Monday, Wednesday and Friday line is what many weeks of its doses come to", () => {
+    const zone = "UTC";
+    const kinetics = { ka: 0.4, bioavailability: 1, lag: 0.5 };
+    // A half-life of 46 h: a week is 3.6 of them, thirty weeks leave 2^-108.
+    const disposition = { ke: 0.015, volume: 28 };
+    const dosed = line(300, "2026-01-07T12:00:00+00:00", { clock: ["08:00", "21:30"], weekdays: [1, 3, 5] });
+    const found = regimenPattern({ ...value, timeZone: zone }, [dosed]);
+    if (!found.ok) throw new Error(found.reason);
+    const { pattern: weekly } = found;
+    const settled = patternSteadyState(
+      disposition,
+      [{ ...kinetics, doses: weekly.courses.get("tablet-12h")! }],
+      weekly.periodH,
+    );
+    const WEEKS = 30;
+    const untilMs = weekly.startMs + WEEKS * 168 * 3_600_000;
+    const events = doseLineExpand(dosed, { zone, untilMs });
+    if (!events.ok) throw new Error("the line can't be laid out");
+    const doses = events.value.map(({ atMs }) => ({ time: (atMs - weekly.startMs) / 3_600_000, amount: 300 }));
+    expect(doses.length).toBe(WEEKS * 6);
+    const last = historyExposure(disposition, [{ ...kinetics, doses }], (WEEKS - 1) * 168, WEEKS * 168);
+    // Both roads carry 5e-15 of the peak a level; a hundred steps of time rounding leave 1e-12.
+    for (const key of ["peak", "lowest", "average", "auc"] as const) {
+      expect(Math.abs(settled[key] / last[key] - 1), key).toBeLessThan(1e-12);
+    }
+    expect(Math.abs(settled.timeOfPeak - (last.timeOfPeak - (WEEKS - 1) * 168))).toBeLessThan(1e-9);
+    expect(Math.abs(settled.timeOfLowest - (last.timeOfLowest - (WEEKS - 1) * 168))).toBeLessThan(1e-9);
   });
 
   it("two products keep their own courses", () => {

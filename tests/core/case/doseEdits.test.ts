@@ -139,6 +139,45 @@ describe("doseMove of an option moves its line", () => {
     expect(taken(move(withLine("A", clock), index, at), "A").map((each) => each.slice(8))).toEqual(expected);
   });
 
+  describe("on weekdays", () => {
+    // Monday 2 March 2026.
+    const monday = { start: "2026-03-02T08:00:00+00:00", repeat: { clock: ["08:00"], days: 7, weekdays: [1, 3, 7] } };
+    const repeatOf = (value: Case) => lineOf(value, "A").repeat;
+
+    it("within its day, the weekdays stay", () => {
+      const moved = move(withLine("A", monday), 1, "2026-03-04T21:00:00+00:00");
+      expect(repeatOf(moved)).toEqual({ clock: ["21:00"], days: 7, weekdays: [1, 3, 7] });
+      expect(taken(moved, "A")).toEqual(["2026-03-02T21:00", "2026-03-04T21:00", "2026-03-08T21:00"]);
+    });
+
+    it("over midnight, they move along, and back again", () => {
+      const value = withLine("A", { ...monday, except: [{ index: 1, status: "missed" }] });
+      const later = move(value, 0, "2026-03-03T01:00:00+00:00");
+      expect(repeatOf(later)).toEqual({ clock: ["01:00"], days: 7, weekdays: [1, 2, 4] });
+      expect(taken(later, "A")).toEqual(["2026-03-03T01:00", "2026-03-09T01:00"]);
+      expect(move(later, 0, "2026-03-02T08:00:00+00:00")).toEqual(value);
+      const earlier = move(value, 0, "2026-03-01T23:00:00+00:00");
+      expect(repeatOf(earlier)).toEqual({ clock: ["23:00"], days: 7, weekdays: [2, 6, 7] });
+      expect(taken(earlier, "A")).toEqual(["2026-03-01T23:00", "2026-03-07T23:00"]);
+    });
+
+    it("over midnight with two clock times, which would part them, the line stays", () => {
+      const value = withLine("A", { ...monday, repeat: { ...monday.repeat, clock: ["08:00", "22:00"] } });
+      expect(move(value, 1, "2026-03-03T01:00:00+00:00")).toEqual(value);
+      expect(repeatOf(move(value, 1, "2026-03-02T20:00:00+00:00"))).toEqual({
+        clock: ["08:00", "20:00"],
+        days: 7,
+        weekdays: [1, 3, 7],
+      });
+    });
+
+    it("stretched, they stay", () => {
+      const longer = caseEdit(withLine("A", monday), "lineStretch", { lane: "A", lineId: "x", days: 14 });
+      expect(repeatOf(longer)).toEqual({ clock: ["08:00"], days: 14, weekdays: [1, 3, 7] });
+      expect(taken(longer, "A")).toHaveLength(6);
+    });
+  });
+
   it("a clock line that starts late on its first day keeps its number of doses", () => {
     const value = withLine("A", { start: "2026-03-01T20:00:00+00:00", repeat: { clock: ["08:00", "12:00"], days: 3 } });
     expect(taken(value, "A")).toHaveLength(4);

@@ -52,7 +52,8 @@ function argumentsFor(
       {},
       { repeat: { every: { value: 4 + (n % 20), unit: "h" as const }, count: 1 + (n % 9) } },
       { repeat: { clock: ["08:00", "22:00"], days: 1 + (n % 9) } },
-    ][n % 3],
+      { repeat: { clock: ["20:00"], days: 7 + (n % 9), weekdays: [1, 3 + (n % 5)] } },
+    ][n % 4],
   });
   const option = of(value.options, b);
   const level = of(value.levels, a);

@@ -5,6 +5,7 @@ import {
   doseLineCount,
   doseLineEndMs,
   doseLineExpand,
+  doseLineGapHours,
   doseLinePeriodHours,
   doseLineScheduledMs,
   MOST_DOSES,
@@ -96,6 +97,64 @@ describe("doseLineExpand", () => {
   it("a decimal interval does not drift: dose k is k intervals from the start, to the millisecond", () => {
     const dose = line("2026-03-04T08:00:00+00:00", { repeat: { every: { value: 0.1, unit: "h" }, count: 1001 } });
     expect(expand(dose).at(-1)?.atMs).toBe(instantMs("2026-03-04T08:00:00+00:00") + 100 * HOUR);
+  });
+});
+
+describe("weekdays", () => {
+  it("only those days have doses, by the wall clock over the change to summer time; index counts doses", () => {
+    // 29 March 2026, a Sunday, has 23 hours in London.
+    const dose = line("2026-03-26T08:00:00+00:00", { repeat: { clock: ["08:00"], days: 7, weekdays: [1, 5, 7] } });
+    expect(at(dose)).toEqual(["2026-03-27T08:00:00+00:00", "2026-03-29T08:00:00+01:00", "2026-03-30T08:00:00+01:00"]);
+    expect(expand(dose).map((event) => event.index)).toEqual([0, 1, 2]);
+    expect([doseLineCount(dose, LONDON), doseLineEndMs(dose, LONDON)]).toEqual([
+      3,
+      instantMs("2026-03-30T08:00:00+01:00"),
+    ]);
+    expect(doseLineScheduledMs(dose, 1, LONDON)).toBe(instantMs("2026-03-29T08:00:00+01:00"));
+  });
+
+  it("and back, in a zone that is not on whole hours", () => {
+    // 1 November 2026, a Sunday, has 25 hours in St John's.
+    const dose = line("2026-10-29T20:00:00-02:30", { repeat: { clock: ["08:00", "20:00"], weekdays: [4, 7] } });
+    expect(at(dose, ST_JOHNS, "2026-11-06T00:00:00-03:30")).toEqual([
+      "2026-10-29T20:00:00-02:30",
+      "2026-11-01T08:00:00-03:30",
+      "2026-11-01T20:00:00-03:30",
+      "2026-11-05T08:00:00-03:30",
+      "2026-11-05T20:00:00-03:30",
+    ]);
+  });
+
+  it("a skipped clock time is a fault on a listed day only", () => {
+    const start = "2026-03-28T01:30:00+00:00";
+    const on = (weekdays: number[]) => line(start, { repeat: { clock: ["01:30"], days: 3, weekdays } });
+    expect(issuesOf(on([6, 7]))).toMatchObject([{ code: "dose-clock-skipped", data: { dose: 2 } }]);
+    expect(at(on([1, 6]))).toEqual(["2026-03-28T01:30:00+00:00", "2026-03-30T01:30:00+01:00"]);
+  });
+
+  it("keep in step where a zone left a date out", () => {
+    // Apia had no Friday 30 December 2011.
+    const dose = line("2011-12-28T08:00:00-10:00", { repeat: { clock: ["08:00"], days: 6, weekdays: [4, 5, 6, 7] } });
+    expect(at(dose, "Pacific/Apia")).toEqual([
+      "2011-12-29T08:00:00-10:00",
+      "2011-12-31T08:00:00+14:00",
+      "2012-01-01T08:00:00+14:00",
+    ]);
+  });
+
+  it("a length without any of its days has no dose, which is said", () => {
+    // Wednesday and Thursday.
+    const dose = line("2026-03-04T08:00:00+00:00", { repeat: { clock: ["08:00"], days: 2, weekdays: [1] } });
+    expect(issuesOf(dose).map((issue) => issue.code)).toEqual(["dose-none"]);
+    expect([doseLineCount(dose, LONDON), doseLineEndMs(dose, LONDON)]).toEqual([0, null]);
+  });
+
+  it("repeat after 168 h; the longest gap reaches over the weekend", () => {
+    const on = (weekdays: number[]) => line("2026-03-04T08:00:00+00:00", { repeat: { clock: ["08:00"], weekdays } });
+    expect(doseLinePeriodHours(on([1, 3, 5]))).toBe(168);
+    expect([[1, 3, 5], [2], [1, 2, 3, 4, 5, 6, 7], [6, 7], [3, 7]].map((days) => doseLineGapHours(on(days)))).toEqual([
+      72, 168, 24, 144, 96,
+    ]);
   });
 });
 
@@ -290,6 +349,24 @@ describe("properties", () => {
       settings,
     );
   });
+
+  it("a repeat on weekdays is the daily one without its other days", () => {
+    const weekdays = fc.subarray([1, 2, 3, 4, 5, 6, 7], { minLength: 1 });
+    fc.assert(
+      fc.property(starts, weekdays, fc.integer({ min: 1, max: 400 }), zones, (ms, listed, days, zone) => {
+        const repeat = { clock: ["08:00", "21:30"], days };
+        const whole = doseLineExpand(line(instantIso(ms, zone), { repeat }), { zone, untilMs: 0 });
+        const some = line(instantIso(ms, zone), { repeat: { ...repeat, weekdays: listed } });
+        const found = doseLineExpand(some, { zone, untilMs: 0 });
+        const wanted = (whole.ok ? whole.value : [])
+          .map((event) => event.atMs)
+          .filter((at) => listed.includes(wallClock(at, zone).weekday));
+        expect(found.ok ? found.value.map((event) => event.atMs) : []).toEqual(wanted);
+        expect(doseLineCount(some, zone)).toBe(wanted.length);
+      }),
+      { ...settings, numRuns: 60 },
+    );
+  }, 30_000);
 
   it("every dose of a clock repeat shows one of its times on the wall, in order, each day at most once each", () => {
     const times = fc.uniqueArray(fc.integer({ min: 240, max: 1439 }), { minLength: 1, maxLength: 4 });

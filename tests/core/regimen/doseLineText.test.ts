@@ -40,6 +40,14 @@ describe("doseLineText", () => {
       { ...base, repeat: { clock: ["06:00", "14:00", "22:00"] } },
     ],
     [
+      "300 mg at 08:00 on Mon, Wed and Fri from Wed 4 March 2026 20:00",
+      { ...base, repeat: { clock: ["08:00"], weekdays: [1, 3, 5] } },
+    ],
+    [
+      "300 mg at 08:00 and 20:00 every Sun from Wed 4 March 2026 20:00 for 28 days",
+      { ...base, repeat: { clock: ["08:00", "20:00"], days: 28, weekdays: [7] } },
+    ],
+    [
       "300 mg every 12 h from Wed 4 March 2026 20:00, 3 doses, dose 1 missed, dose 2 late at Thu 5 March 2026 10:15, dose 3 moved to Thu 5 March 2026 18:00 200 mg",
       {
         ...base,
@@ -87,7 +95,10 @@ function lines(zone: string): fc.Arbitrary<DoseLine> {
     },
     { requiredKeys: ["every"] },
   );
-  const daily = fc.record({ clock, days: fc.integer({ min: 1, max: 60 }) }, { requiredKeys: ["clock"] });
+  const daily = fc.record(
+    { clock, days: fc.integer({ min: 1, max: 60 }), weekdays: fc.subarray([1, 2, 3, 4, 5, 6, 7], { minLength: 1 }) },
+    { requiredKeys: ["clock"] },
+  );
   const exception = fc.record(
     {
       index: fc.integer({ min: 0, max: 5 }),

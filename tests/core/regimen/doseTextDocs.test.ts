@@ -12,8 +12,8 @@ function examples(heading: string): readonly (readonly [string, string])[] {
 }
 
 describe.each([
-  ["In an option", "option", 11],
-  ["Among the doses given", "given", 4],
+  ["In an option", "option", 14],
+  ["Among the doses given", "given", 5],
 ] as const)("docs/dose-text.md, %s", (heading, lane, count) => {
   it("holds its examples", () => {
     expect(examples(heading)).toHaveLength(count);

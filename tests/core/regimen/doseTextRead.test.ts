@@ -142,6 +142,70 @@ describe("an option, now Wednesday 4 March 2026 09:00", () => {
   });
 });
 
+describe("weekdays, now Wednesday 4 March 2026 09:00", () => {
+  it.each<[string, string, { clock: string[]; days?: number; weekdays: number[] }]>([
+    ["300 mg at 08:00 on Mon, Wed and Fri", "2026-03-06T08:00:00+00:00", { clock: ["08:00"], weekdays: [1, 3, 5] }],
+    ["300 mg on Fri, Wed, and Mon at 08:00", "2026-03-06T08:00:00+00:00", { clock: ["08:00"], weekdays: [1, 3, 5] }],
+    ["300 mg at 10:00 on Mon, Wed and Fri", "2026-03-04T10:00:00+00:00", { clock: ["10:00"], weekdays: [1, 3, 5] }],
+    ["300 mg on Mon and Thu from 20:00", "2026-03-05T20:00:00+00:00", { clock: ["20:00"], weekdays: [1, 4] }],
+    [
+      "200 mg at 08:00 on Tuesday and Saturday for 28 days",
+      "2026-03-07T08:00:00+00:00",
+      { clock: ["08:00"], days: 28, weekdays: [2, 6] },
+    ],
+    [
+      "300 mg at 08:00 and 20:00 on weekdays",
+      "2026-03-04T20:00:00+00:00",
+      { clock: ["08:00", "20:00"], weekdays: [1, 2, 3, 4, 5] },
+    ],
+    ["300 mg at 08:00 every weekday", "2026-03-05T08:00:00+00:00", { clock: ["08:00"], weekdays: [1, 2, 3, 4, 5] }],
+    ["300 mg at weekends at 08:00", "2026-03-07T08:00:00+00:00", { clock: ["08:00"], weekdays: [6, 7] }],
+    ["300 mg at 08:00 every Wednesday", "2026-03-11T08:00:00+00:00", { clock: ["08:00"], weekdays: [3] }],
+    ["300 mg on Thurs at 08:00 until further notice", "2026-03-05T08:00:00+00:00", { clock: ["08:00"], weekdays: [4] }],
+    ["300 mg at 08:00 on Mondays", "2026-03-09T08:00:00+00:00", { clock: ["08:00"], weekdays: [1] }],
+    // The length counts from the day that was said, a Thursday.
+    [
+      "300 mg at 08:00 on Mon from 5 March for 7 days",
+      "2026-03-05T08:00:00+00:00",
+      { clock: ["08:00"], days: 7, weekdays: [1] },
+    ],
+    // Fri, Mon, Wed, Fri.
+    [
+      "300 mg at 08:00 on Mon, Wed and Fri, 4 doses",
+      "2026-03-06T08:00:00+00:00",
+      { clock: ["08:00"], days: 8, weekdays: [1, 3, 5] },
+    ],
+  ])("%s", (text, start, repeat) => {
+    expect(one(text)).toEqual({ product: "mr", amount: MG(300 - (text.startsWith("2") ? 100 : 0)), start, repeat });
+  });
+
+  it("among doses given, whole weeks and a number of doses end with the latest at or before now", () => {
+    expect(one("300 mg at 08:00 on Mon, Wed and Fri for 14 days", { lane: "given" })).toMatchObject({
+      start: "2026-02-20T08:00:00+00:00",
+      repeat: { days: 14, weekdays: [1, 3, 5] },
+    });
+    // Sun 22 February and Sun 1 March.
+    expect(one("300 mg at 08:00 every Sunday, 2 doses", { lane: "given" })).toMatchObject({
+      start: "2026-02-22T08:00:00+00:00",
+      repeat: { days: 8, weekdays: [7] },
+    });
+  });
+
+  it("each of two amounts has its own", () => {
+    const result = doseTextRead("200 mg at 08:00 on weekdays and 300 mg at 10:00 at weekends", doseTextContext());
+    expect(result.ok && result.value.map(({ repeat }) => repeat)).toEqual([
+      { clock: ["08:00"], weekdays: [1, 2, 3, 4, 5] },
+      { clock: ["10:00"], weekdays: [6, 7] },
+    ]);
+  });
+
+  it("late on the evening before a day of 23 hours, that day is the next", () => {
+    const evening = { nowIso: "2026-03-28T23:30:00+00:00" };
+    expect(one("300 mg at 08:00 every Sunday", evening).start).toBe("2026-03-29T08:00:00+01:00");
+    expect(one("300 mg daily at 08:00", evening).start).toBe("2026-03-29T08:00:00+01:00");
+  });
+});
+
 describe("two amounts make two lines", () => {
   const lines = (text: string, rest = {}) => {
     const result = doseTextRead(text, doseTextContext(rest));

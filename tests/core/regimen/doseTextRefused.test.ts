@@ -159,6 +159,63 @@ const REFUSED_TIMES: readonly RefusedCase[] = [
     "dose-text-conflict",
     '"at 22:00" comes on top of something already said: say it once, or join two amounts with "and", each before its times.',
   ],
+  // Weekdays.
+  [
+    "300 mg at 08:00 on Monday",
+    "dose-text-one-weekday",
+    '"on Monday" may be one Monday or each: write "every Monday", or the date, such as "once on 4 March at 08:00".',
+  ],
+  [
+    "300 mg once on Monday at 08:00",
+    "dose-text-weekday-once",
+    '"on Monday" for a single dose can mean several days: write the date, such as "once on 4 March at 08:00".',
+  ],
+  [
+    "300 mg daily at 08:00 on Mon",
+    "dose-text-weekdays-and",
+    '"300 mg" is said to be taken daily and also "on Mon": leave one of them out.',
+  ],
+  [
+    "300 mg every 12 h from 08:00 on Mon, Wed and Fri",
+    "dose-text-weekdays-and",
+    '"300 mg" is said to be taken every 12 h and also "on Mon, Wed and Fri": leave one of them out.',
+  ],
+  ["300 mg on Mon and Wed", "dose-text-needs-time", '"on Mon and Wed" has no clock time: add it, such as "at 08:00".'],
+  [
+    "300 mg at 08:00 on Mon, Wed and Mon",
+    "dose-text-weekday-twice",
+    '"on Mon, Wed and Mon" names a weekday twice: name it once.',
+  ],
+  [
+    "300 mg at 08:00 on Mondays tomorrow",
+    "dose-text-weekdays-day",
+    '"on Mondays" stands beside a single day: if that is the first day, write it with "from", as in "from 4 March".',
+  ],
+  [
+    "300 mg at 08:00 on Mon and Wed at 20:00 on Fri",
+    "dose-text-conflict",
+    '"at 20:00" comes on top of something already said: say it once, or join two amounts with "and", each before its times.',
+  ],
+  [
+    "300 mg at 08:00 and 20:00 on Mon and Wed, 4 doses",
+    "dose-text-uneven-doses",
+    "4 doses at 08:00 and 20:00 would end in the middle of a day: write the days, or start with another of these times.",
+  ],
+  [
+    "300 mg at 08:00 on Mon and Wed, 20000 doses",
+    "dose-too-many",
+    "A line can't have more than 10000 doses: write fewer, or a shorter time.",
+  ],
+  [
+    "300 mg at 08:00 every Monday from 4 March for 2 days",
+    "dose-none",
+    "No dose falls between the start of this line and its last day: check the start, the clock times and the days.",
+  ],
+  [
+    "200 mg at 08:00 and 300 mg at 22:00 on Mon and Thu",
+    "dose-text-ambiguous",
+    'It is not clear on which weekdays "200 mg" is meant: say it for each amount.',
+  ],
   // Exceptions.
   [
     "300 mg every 12 h from 08:00, 10 doses, dose 12 missed",
@@ -204,6 +261,16 @@ const GIVEN: readonly RefusedCase[] = [
     "dose-text-needs-day",
     'It is not clear on which day this began: add it, such as "from 4 March 08:00", or the number of doses given.',
   ],
+  [
+    "300 mg at 08:00 on Mon, Wed and Fri for 10 days",
+    "dose-text-needs-day",
+    'It is not clear on which day this began: add it, such as "from 4 March 08:00", or the number of doses given.',
+  ],
+  [
+    "300 mg at 08:00 every Monday",
+    "dose-text-needs-day",
+    'It is not clear on which day this began: add it, such as "from 4 March 08:00", or the number of doses given.',
+  ],
   ["450 mg once", "dose-text-needs-time", '"450 mg" has no clock time: add it, such as "at 08:00".'],
 ];
 
@@ -242,7 +309,7 @@ it("a default product that is not among the products is a programmer's mistake",
 
 it("any jumble of the grammar's own words is read or refused with a sentence, never thrown at", () => {
   const word = fc.constantFrom(
-    ..."300 mg 5 mL every 12 h from at on for and then , 08:00 20:00 01:30 first once twice daily 10 doses days week 2 tablets of 200 tablet tomorrow today Wed 4 March 2026 dose 3 missed late moved to half a until further notice 1,5 0 -1 oral solution".split(
+    ..."300 mg 5 mL every 12 h from at on for and then , 08:00 20:00 01:30 first once twice daily 10 doses days week 2 tablets of 200 tablet tomorrow today Wed 4 March 2026 dose 3 missed late moved to half a until further notice 1,5 0 -1 oral solution Mon Fridays weekdays weekends each".split(
       " ",
     ),
   );

@@ -170,6 +170,34 @@ describe("editing a line", () => {
     expect(line()).not.toHaveProperty("repeat");
   });
 
+  test("on weekdays alone, marked one by one; none marked is every day", async () => {
+    const { user, form, line } = await edit();
+    await user.click(within(form).getByRole("radio", { name: doseWords.clock }));
+    const days = within(form).getByRole("group", { name: doseWords.weekdays });
+    expect(within(days).getAllByRole("checkbox")).toHaveLength(7);
+    expect(days).toHaveAccessibleDescription(doseWords.weekdaysHelp);
+    await user.click(within(days).getByRole("checkbox", { name: "Friday" }));
+    await user.click(within(days).getByRole("checkbox", { name: "Monday" }));
+    expect(line().repeat).toEqual({ clock: ["08:00"], weekdays: [1, 5] });
+    expect(within(days).getByRole("checkbox", { name: "Monday" })).toBeChecked();
+    expect(within(days).getByRole("checkbox", { name: "Tuesday" })).not.toBeChecked();
+    expect(screen.getByText(/at 08:00 on Monday and Friday, first dose/)).toBeVisible();
+    expect(await axeFaults(form)).toEqual([]);
+    await user.click(within(days).getByRole("checkbox", { name: "Monday" }));
+    await user.click(within(days).getByRole("checkbox", { name: "Friday" }));
+    expect(line().repeat).toEqual({ clock: ["08:00"] });
+  });
+
+  test("weekdays of a line with marked doses are refused: the marks would come to stand at other doses", async () => {
+    const repeat = { clock: ["08:00"], days: 3 };
+    const given = [{ ...caseFixture().given[0]!, repeat, except: [{ index: 1, status: "missed" as const }] }];
+    const { user, form, line } = await edit({ given });
+    await user.click(within(form).getByRole("checkbox", { name: "Monday" }));
+    expect(within(form).getByText(issueMessage(issue("dose-line-has-exceptions")))).toBeVisible();
+    expect(line().repeat).toEqual(repeat);
+    expect(within(form).getByRole("checkbox", { name: "Monday" })).not.toBeChecked();
+  });
+
   test("typed anew, it takes the place of the old line and keeps its id", async () => {
     const { user, form, line } = await edit();
     const retype = within(form).getByRole("textbox", { name: doseWords.retype });

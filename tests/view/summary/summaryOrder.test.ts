@@ -162,6 +162,33 @@ describe("the chosen option in plain sentences", () => {
     expect(orderText(value)).toEqual(expected);
   });
 
+  it("names the weekdays, and calls the daily amount an average", () => {
+    const on = (clock: string[], weekdays: number[]) =>
+      orderText(caseOrdering([orderedLine({ repeat: { clock, weekdays } })]));
+    const text = on(["08:00"], [1, 3, 5]);
+    expect(text).toContain("1 tablet by mouth on Monday, Wednesday and Friday at 08:00");
+    expect(text).toContain("First dose Friday 6 March 2026 at 08:00.");
+    // 3 of 300 mg in seven days: 128.57 mg per day, for 58 kg 2.2167.
+    expect(text.at(-1)).toBe("300 mg per dose, on average 128.6 mg per day, 2.22 mg per kg per day.");
+    expect(on(["08:00", "20:00"], [2])).toContain("1 tablet by mouth on Tuesday, at each of 08:00 and 20:00");
+  });
+
+  it("a regimen on other weekdays is not the same, and runs on over the gap between two of them", () => {
+    // Now is Wednesday 4 March 12:00; the last dose was on Monday.
+    const given = [
+      {
+        ...orderedLine({}),
+        id: "g",
+        start: "2026-02-23T08:00:00+00:00",
+        repeat: { clock: ["08:00"], days: 8, weekdays: [1, 5] },
+      },
+    ];
+    const to = (weekdays: number[]) =>
+      orderText(caseOrdering([orderedLine({ repeat: { clock: ["08:00"], weekdays } })], { given }));
+    expect(to([1, 5])).toContain("Continues 300 mg on Monday and Friday at 08:00, unchanged.");
+    expect(to([1, 4])).toContain("Replaces 300 mg on Monday and Friday at 08:00.");
+  });
+
   it("writes halves in words", () => {
     const instruction = (mg: number) =>
       orderText(

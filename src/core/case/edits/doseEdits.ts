@@ -64,7 +64,8 @@ function stretched(line: DoseLine, count: number | undefined, days: number | und
     return { every: line.repeat.every, ...(count !== undefined && { count }) };
   }
   if (count !== undefined) throw new RangeError(`count: dose line "${line.id}" repeats by clock times; give days`);
-  return { clock: line.repeat.clock, ...(days !== undefined && { days }) };
+  const { clock, weekdays } = line.repeat;
+  return { clock, ...(days !== undefined && { days }), ...(weekdays && { weekdays }) };
 }
 
 /** Edits of single doses of a line, and of how far a line reaches. */

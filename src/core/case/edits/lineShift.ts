@@ -8,6 +8,8 @@ import { lineDueIndex } from "./lineDueIndex.ts";
  * A single dose or an hourly repeat: all of it moves by the same shift.
  * A clock repeat: the clock time of that dose becomes the new one on every day, and the start follows so that no dose falls before it; a move
  * onto another clock time of the line, which would merge two doses into one, leaves the line as it is.
+ * On weekdays, a move into another day takes the weekdays along; with several clock times they would have to move for one time alone,
+ * which a line can't say, and the line stays as it is.
  */
 export function lineShifted(line: DoseLine, index: number, atMs: number, zone: string): DoseLine {
   const dueMs = doseLineScheduledMs(line, index, zone);
@@ -31,8 +33,11 @@ function clockMoved(line: DoseLine, repeat: ClockRepeat, dueMs: number, atMs: nu
   const at = wallClock(atMs, zone);
   const slot = slotOf(times, due.time);
   if (slot !== at.time && times.includes(at.time)) return line;
+  const byDays = daysBetween(due.date, at.date);
+  const { weekdays } = repeat;
+  if (weekdays && byDays !== 0 && times.length > 1) return line;
   const moved = ({ date, time }: DayTime): DayTime =>
-    time === slot ? { date: dateAfter(date, daysBetween(due.date, at.date)), time: at.time } : { date, time };
+    time === slot ? { date: dateAfter(date, byDays), time: at.time } : { date, time };
 
   const start = wallClock(instantMs(line.start), zone);
   const isBeforeStart = (time: string) => time < start.time || (time === start.time && start.second > 0);
@@ -46,6 +51,7 @@ function clockMoved(line: DoseLine, repeat: ClockRepeat, dueMs: number, atMs: nu
     repeat: {
       clock: times.map((time) => (time === slot ? at.time : time)).sort(),
       ...(repeat.days !== undefined && { days: Math.max(1, repeat.days - emptyDays) }),
+      ...(weekdays && { weekdays: weekdaysAfter(weekdays, byDays) }),
     },
   };
   return exceptionsFollow(line, after, (dose) => moved({ ...dose, time: slotOf(times, dose.time) }), zone);
@@ -78,6 +84,10 @@ function startMs({ date, time }: DayTime, zone: string): number {
   const found = clockOnDay(date, time, zone);
   if (found.kind === "once") return found.ms;
   return found.kind === "twice" ? found.firstMs : found.beforeMs;
+}
+
+function weekdaysAfter(weekdays: readonly number[], days: number): number[] {
+  return weekdays.map((day) => ((((day - 1 + days) % 7) + 7) % 7) + 1).sort((a, b) => a - b);
 }
 
 /** Calendar arithmetic on dates alone, in UTC, where every day has 24 hours. */

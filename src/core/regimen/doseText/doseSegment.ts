@@ -41,6 +41,11 @@ export interface DoseSegment {
   everyH?: number;
   timesPerDay?: number;
   isDaily?: true;
+  /** 1 for Monday to 7 for Sunday, ascending; `weekdaysPart` is how they were written. */
+  weekdays?: readonly number[];
+  weekdaysPart?: string;
+  /** Several weekdays, "every Monday" or "Mondays": not a single one that needs its date. */
+  isWeekly?: true;
   endless?: true;
   days?: number;
   doses?: number;

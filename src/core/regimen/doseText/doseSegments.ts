@@ -7,6 +7,7 @@ import { exceptionClause } from "./exceptionClause.ts";
 import { instantClause } from "./instantClause.ts";
 import { refusedWord } from "./refusedWord.ts";
 import { repeatClause } from "./repeatClause.ts";
+import { weekdayClause } from "./weekdayClause.ts";
 
 const FILLERS: ReadonlySet<string> = new Set(["take", "give", "of"]);
 const newSegment = (): DoseSegment => ({ clocks: [], exceptions: [] });
@@ -53,6 +54,9 @@ function clauseRead(
     segment.exceptions.push(exception.value.value);
     return succeed(exception.value.next);
   }
+  const weekdays = weekdayClause(words, at);
+  if (!weekdays.ok) return weekdays;
+  if (weekdays.value) return merge(segment, weekdays.value.value, words, at, weekdays.value.next);
   const repeat = repeatClause(words, at);
   if (!repeat.ok) return repeat;
   if (repeat.value) return merge(segment, repeat.value.value, words, at, repeat.value.next);

@@ -12,6 +12,8 @@ export interface FloatingLine {
   readonly endFrom: (start: string) => number | null;
   /** Rough length of the line, ms: where the search begins. */
   readonly lengthMs: number;
+  /** Weekdays (1 to 7) on which it may start; null: any. */
+  readonly weekdays: readonly number[] | null;
 }
 
 /**
@@ -23,15 +25,20 @@ export function floatingStart(
   context: Pick<DoseTextContext, "zone" | "nowIso" | "lane">,
 ): Result<string> {
   const nowMs = instantMs(context.nowIso);
-  const dateAt = (ms: number) => wallClock(ms, context.zone).date;
   const needsDay = (): Result<string> => fail(issue("dose-text-needs-day", { expected: "from 4 March 08:00" }));
   let refused: Result<string> | null = null;
 
   const isOption = context.lane === "option";
-  const fromMs = isOption ? nowMs : nowMs - line.lengthMs + 2 * MS_PER_DAY;
-  const SEARCHED_DAYS = 8;
-  for (let step = 0; step < SEARCHED_DAYS; step += 1) {
-    const start = line.startOn(dateAt(fromMs + (isOption ? step : -step) * MS_PER_DAY));
+  // A line on weekdays may end up to a week before its days do.
+  const slackDays = line.weekdays ? 8 : 2;
+  const fromMs = isOption ? nowMs : nowMs - line.lengthMs + slackDays * MS_PER_DAY;
+  const searchedDays = 6 + slackDays;
+  // Noon of a calendar day in UTC, where every day has 24 hours: steps from a late evening would leave out a day of 23.
+  const firstDay = instantMs(`${wallClock(fromMs, context.zone).date}T12:00:00Z`);
+  for (let step = 0; step < searchedDays; step += 1) {
+    const day = wallClock(firstDay + (isOption ? step : -step) * MS_PER_DAY, "UTC");
+    if (line.weekdays && !line.weekdays.includes(day.weekday)) continue;
+    const start = line.startOn(day.date);
     if (!start.ok) {
       refused ??= start;
       const candidates = start.issues.flatMap(({ data }) =>

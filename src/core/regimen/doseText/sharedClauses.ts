@@ -3,7 +3,7 @@ import type { DoseSegment } from "./doseSegment.ts";
 
 type Group = readonly (keyof DoseSegment)[];
 
-const REPEAT: Group = ["once", "everyH", "isDaily", "timesPerDay"];
+const REPEAT: Group = ["once", "everyH", "isDaily", "timesPerDay", "weekdays"];
 const LENGTH: Group = ["days", "doses", "endless"];
 const DATE: Group = ["date"];
 const PRODUCT: Group = ["product"];
@@ -38,11 +38,13 @@ function share(
   if (!first || silent.length === 0) return succeed(segments);
   const isOneThing = saying.every((segment) => JSON.stringify(pick(segment)) === JSON.stringify(pick(first)));
   // "10 doses" after two amounts may mean ten of each or ten in all.
-  if (!isOneThing || (first.doses !== undefined && group === LENGTH)) {
+  // Weekdays after one of two amounts may be meant for that one alone, the other being daily.
+  const isOnWeekdays = group === REPEAT && saying.some(({ weekdays }) => weekdays !== undefined);
+  if (!isOneThing || isOnWeekdays || (first.doses !== undefined && group === LENGTH)) {
     return fail(
       issue("dose-text-ambiguous", {
         part: silent.map((segment) => segment.amount?.part ?? "").join(", "),
-        about: group[0],
+        about: isOnWeekdays ? "weekdays" : group[0],
       }),
     );
   }
