@@ -36,7 +36,7 @@ function recomputeOutput(value: Case, analysis: Analysis) {
       ),
       changes: analysis.typical.dispositions.slice(1).map((each) => at(each.from)),
     },
-    span: { from: at(analysis.clock.nowH), to: at(analysis.clock.toH) },
+    span: { from: at(analysis.clock.nowH), to: at(analysis.clock.readingsToH) },
     patient: Object.fromEntries(
       (["weight", "creatinine", "idealWeight", "adjustedWeight", "bodyMassIndex", "creatinineClearance"] as const).map(
         (name) => {

@@ -1,5 +1,5 @@
 import type { Case } from "../case/index.ts";
-import { doseLineEndMs, doseLinePeriodHours } from "../regimen/index.ts";
+import { type DoseLine, doseLineEndMs, doseLinePeriodHours } from "../regimen/index.ts";
 import { instantMs, localMidnight, midnightsBetween } from "../time/index.ts";
 
 const HOUR_MS = 3_600_000;
@@ -19,6 +19,8 @@ export interface AnalysisClock {
   readonly nowH: number;
   readonly fromH: number;
   readonly toH: number;
+  /** Where the span of the readings ends: with the first course that does, so that no option's washout is counted; else with the span shown. */
+  readonly readingsToH: number;
   readonly midnightsH: readonly number[];
 }
 
@@ -47,6 +49,11 @@ export function analysisClock(value: Case, halfLifeH: number | null, isSaturable
   const latest = Math.min(wanted, nowMs + LONGEST_FUTURE_MS);
   const untilMs = nextMidnight(latest, zone);
 
+  const courseEnds = value.options
+    .map((option) => courseEndMs(option.lines, zone))
+    .filter((end): end is number => end !== null && end > nowMs);
+  const readingsToMs = Math.min(untilMs, ...courseEnds);
+
   const hours = (ms: number) => (ms - originMs) / HOUR_MS;
   return {
     originMs,
@@ -55,6 +62,7 @@ export function analysisClock(value: Case, halfLifeH: number | null, isSaturable
     nowH: hours(nowMs),
     fromH: 0,
     toH: hours(untilMs),
+    readingsToH: hours(readingsToMs),
     midnightsH: [...new Set([originMs, ...midnightsBetween(originMs, untilMs, zone), untilMs])]
       .sort((a, b) => a - b)
       .map(hours),
@@ -66,4 +74,16 @@ function nextMidnight(ms: number, zone: string): number {
   if (midnight === ms) return ms;
   // 36 h on is inside the next day whatever the length of this one (23, 24 or 25 h).
   return localMidnight(midnight + 36 * HOUR_MS, zone);
+}
+
+/** When a course of repeating lines is over: one interval after its last dose; null when it goes on, or is no course. */
+function courseEndMs(lines: readonly DoseLine[], zone: string): number | null {
+  const repeating = lines.filter((line) => line.repeat !== undefined);
+  if (repeating.length === 0) return null;
+  const ends = repeating.map((line) => {
+    const end = doseLineEndMs(line, zone);
+    return end === null ? Number.POSITIVE_INFINITY : end + (doseLinePeriodHours(line) ?? 0) * HOUR_MS;
+  });
+  const last = Math.max(...ends);
+  return Number.isFinite(last) ? last : null;
 }

@@ -75,7 +75,7 @@ export interface NamedFigure {
 /** The kinetics of one patient reading of the model (typical now; individual once levels adjust it). */
 export interface Model {
   readonly kind: DispositionSpan["disposition"]["kind"];
-  /** The record's parameters with this patient's numbers put in, at the now line and before any effect of an event. */
+  /** The record's parameters with this patient's numbers put in, in the final state: effects of events included. */
   readonly parameters: readonly NamedFigure[];
   readonly clearance: Traced | null; // L/h; null where it depends on the level
   readonly volume: Traced; // L
@@ -132,7 +132,9 @@ export interface OptionReadings {
   /** null with a reason code (messages) when the option has no repeating pattern. */
   readonly steadyState: SteadyStateReadings | null;
   readonly noSteadyState: "no-repeat" | "no-common-period" | "dose-rate-at-or-above-vmax" | null;
+  /** mg as labelled, and mg of the active moiety; the same but for a salt. */
   readonly dailyDoseMg: number | null;
+  readonly activeDailyDoseMg: number | null;
   /** null where it depends on the level. */
   readonly halfLifeH: number | null;
   /** Whether the kinetics change after the now line: steady-state figures then refer to the final state. */
@@ -195,6 +197,8 @@ export interface Analysis {
     /** Span shown and swept. */
     readonly fromH: number;
     readonly toH: number;
+    /** End of the span of the readings (it begins at the now line). */
+    readonly readingsToH: number;
     /** Local midnights inside the span, for day lines (daylight-saving safe). */
     readonly midnightsH: readonly number[];
   };

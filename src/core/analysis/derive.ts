@@ -6,6 +6,7 @@ import { caseConcerns } from "./caseConcerns.ts";
 import { countedByProduct, laneDoses } from "./caseDoses.ts";
 import { crossCheckFigures } from "./crossCheckFigures.ts";
 import { curveTimes } from "./curveTimes.ts";
+import { finalModel } from "./finalModel.ts";
 import { kineticsChanges } from "./kineticsChanges.ts";
 import { levelResults } from "./levelResults.ts";
 import { modelHistory } from "./modelInputs.ts";
@@ -33,8 +34,8 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
   const { model: atNow, issues: modelIssues } = typicalModel(value, patient);
 
   // 3. Clock: the span shown, from the first thing that happened to where the options have settled; and on it, what changes the kinetics.
-  const clock = analysisClock(value, atNow?.halfLife?.value ?? null, atNow?.kind === "saturable");
-  const typical = atNow && { ...atNow, dispositions: kineticsChanges(value, patient, clock.originMs) };
+  const clock = analysisClock(value, atNow?.halfLifeH ?? null, atNow?.kind === "saturable");
+  const typical = atNow && finalModel(atNow, kineticsChanges(value, patient, clock.originMs));
 
   // 4. Doses: every line unfolded on the clock.
   const given = laneDoses(value, value.given, "given", clock);
@@ -60,7 +61,7 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
         ? optionReadings(value, option.lines, countedByProduct([...given.marks, ...marks]), typical, {
             originMs: clock.originMs,
             fromH: clock.nowH,
-            toH: clock.toH,
+            toH: clock.readingsToH,
           })
         : null,
     individual: null,
@@ -89,9 +90,9 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
   // 10. Fingerprint: the inputs that matter and the engine that turned them into figures.
   const fingerprint = caseFingerprint(value, ENGINE);
 
-  const { originMs, nowH, fromH, toH, midnightsH } = clock;
+  const { originMs, nowH, fromH, toH, readingsToH, midnightsH } = clock;
   return {
-    clock: { originMs, timeZone: value.timeZone, nowH, fromH, toH, midnightsH },
+    clock: { originMs, timeZone: value.timeZone, nowH, fromH, toH, readingsToH, midnightsH },
     patient,
     typical,
     individual: null,

@@ -21,7 +21,7 @@ export function kineticsChanges(value: Case, patient: PatientFigures, originMs: 
   const usesKidney = covariatesOf(value.medicine).includes("creatinineClearance");
   const creatinines = usesKidney
     ? value.patient.observations
-        .filter((each) => each.kind === "serumCreatinine")
+        .filter((each) => each.kind === "serumCreatinine" && instantMs(each.at) <= instantMs(value.now))
         .sort((a, b) => instantMs(a.at) - instantMs(b.at))
     : [];
   const effects = value.patient.factors.filter((factor) => factor.effect !== undefined);

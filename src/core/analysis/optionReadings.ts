@@ -30,6 +30,7 @@ export function optionReadings(
     steadyState: hasSteadyState ? settled : null,
     noSteadyState: pattern.ok ? (hasSteadyState ? null : "dose-rate-at-or-above-vmax") : pattern.reason,
     dailyDoseMg: pattern.ok ? (pattern.pattern.dosePerPeriodMg * 24) / pattern.pattern.periodH : null,
+    activeDailyDoseMg: pattern.ok ? (activeMg(pattern.pattern) * 24) / pattern.pattern.periodH : null,
     halfLifeH: model.halfLife?.value ?? null,
     refersToFinalState: model.dispositions.some((each) => each.from > clock.fromH),
   };
@@ -107,4 +108,8 @@ function sinceDose(time: number, doseTimes: readonly number[], period: number): 
       return gap < SAME_INSTANT_H ? period : gap;
     }),
   );
+}
+
+function activeMg(pattern: RegimenPattern): number {
+  return [...pattern.courses.values()].flat().reduce((sum, dose) => sum + dose.amount, 0);
 }

@@ -30,12 +30,10 @@ function tracedFigure(record: MedicineRecord, figure: Figure): Traced {
   };
 }
 
-function derived(value: number, unit: Traced["unit"], formula: string, inputs: Traced["inputs"]): Traced {
-  return { value, unit, formula, inputs, source: "definition", basis: "derived" };
+/** The model before any event's effect; what changes on the case clock is laid out once the clock is known. */
+export interface ModelAtNow extends Pick<Model, "kind" | "parameters" | "products" | "distributionEndH"> {
+  readonly halfLifeH: number | null;
 }
-
-/** The model but for the changes on the case clock, which are laid out once the clock is known. */
-export type ModelAtNow = Omit<Model, "dispositions">;
 
 /**
  * The typical patient's kinetics at the now line: the record's formulas with this patient's figures put in.
@@ -70,31 +68,13 @@ export function typicalModel(
   if (issues.length > 0) return { model: null, issues: withoutRepeats(issues) };
 
   const disposition = kineticsDisposition(record, values as KineticsValues);
-  const figureOf = (symbol: string) => parameters.find((parameter) => parameter.symbol === symbol)?.figure ?? null;
-  const clearance = figureOf("CL");
-  const volume = figureOf("V") ?? figureOf("V1")!;
-  const halfLifeH = modelHalfLife(disposition);
-  const isOneCompartment = disposition.kind === "one-compartment";
-  const eliminationRate =
-    clearance === null
-      ? null
-      : derived(clearance.value / volume.value, "/h", "CL / V", [
-          { name: "CL", value: clearance.value, unit: "L/h" },
-          { name: "V", value: volume.value, unit: "L" },
-        ]);
-  const halfLife =
-    halfLifeH === null
-      ? null
-      : isOneCompartment
-        ? derived(halfLifeH, "h", "ln 2 / ke", [{ name: "ke", value: clearance!.value / volume.value, unit: "/h" }])
-        : derived(halfLifeH, "h", "ln 2 / the slower of the two exponential rates", []);
   const products: ProductModel[] = record.products.map((product) => {
     const absorption = productAbsorption(product);
     return {
       product: product.id,
       absorption,
       absorptionRate: product.absorptionRate ? tracedFigure(record, product.absorptionRate) : null,
-      inputFigures: Object.entries(product.input ?? {}).flatMap(([name, figure]) =>
+      inputFigures: Object.entries({ ...product.input, saltFactor: product.saltFactor }).flatMap(([name, figure]) =>
         typeof figure === "object" && figure !== undefined
           ? [{ symbol: name, words: INPUT_WORDS[name] ?? name, figure: tracedFigure(record, figure) }]
           : [],
@@ -113,16 +93,7 @@ export function typicalModel(
     ]),
   );
   return {
-    model: {
-      kind: disposition.kind,
-      parameters,
-      clearance,
-      volume,
-      eliminationRate,
-      halfLife,
-      products,
-      distributionEndH,
-    },
+    model: { kind: disposition.kind, parameters, halfLifeH: modelHalfLife(disposition), products, distributionEndH },
     issues: [],
   };
 }
@@ -133,6 +104,7 @@ const INPUT_WORDS: Readonly<Record<string, string>> = {
   slowRate: "Absorption rate of the slow part",
   slowDuration: "Slow part absorbed evenly over",
   slowLag: "Lag of the slow part",
+  saltFactor: "Active part of the labelled amount",
 };
 
 /** The same missing covariate is told once, however many formulas need it. */

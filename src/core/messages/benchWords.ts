@@ -23,6 +23,7 @@ export const benchWords = {
   wider: "Wider",
   linear: "linear scale",
   log: "log scale",
+  noneChosen: "No option chosen yet: press an option's letter at its lane, then Choose.",
   concerns: "Concerns",
   noConcerns: "Nothing to point out. That is no proof that all is well.",
   steps: {

@@ -109,6 +109,10 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
     title: `Option ${text(data, "option")} starts soon after the last dose given`,
     text: `Last dose given ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}; the option's first follows ${hours(number(data, "gapH"))} later, its own interval is ${hours(number(data, "intervalH"))}.`,
   }),
+  "first-dose-late": (data) => ({
+    title: `Option ${text(data, "option")} starts late after the last dose given`,
+    text: `Last dose given ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}; the option's first follows ${hours(number(data, "gapH"))} later, its own interval is ${hours(number(data, "intervalH"))}. The level falls meanwhile.`,
+  }),
   "dose-not-makeable": (data) => ({
     title: `${quantityPrint({ value: number(data, "amountMg"), unit: "mg" }, { style: "print", microgram: "microgram" })} can't be made from the strengths in the record`,
     text: `Option ${text(data, "option")}, ${text(data, "product")}: ${(data.strengths as number[]).map(figure).join(", ")} mg${text(data, "divisible") === "half" ? ", halves allowed" : ", whole only"}.`,

@@ -22,3 +22,8 @@ export function windowRangeWords({ low, high }: TargetWindow, shown: "mg/L" | "u
   const figure = (end: typeof low) => numberPrint(quantityConvert(end, shown), {});
   return `${figure(low)} to ${figure(high)} ${unitSpoken(shown, "screen")}`;
 }
+
+/** Beside hours below, within and above a window that is meant for one point of the curve. */
+export function windowRemarkWords(quantity: TargetWindow["quantity"]): string {
+  return `The window is meant for the ${windowQuantityWord(quantity)}; the hours are those of the whole curve`;
+}

@@ -79,6 +79,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const close = useCallback(() => setPanel(null), []);
   if (!open || !value) return null;
   const isReader = open.role === "reader";
+  const hasLines = value.options.some((option) => option.lines.length > 0);
   const units = shownUnits(value);
   const unit = isMolar ? units.molar : units.mass;
   const lineTexts = (lines: readonly DoseLine[]) =>
@@ -290,6 +291,9 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
             </p>
           )}
           {!isReader && <FirstSteps value={value} analysis={analysis} onPanel={setPanel} onAddOption={addOption} />}
+          {!isReader && hasLines && !value.options.some((option) => option.chosen) && (
+            <p className="bench-hint">{benchWords.noneChosen}</p>
+          )}
           {analysis &&
             value.options.some((option) => option.lines.length > 0) &&
             value.options.length === analysis.options.length && (

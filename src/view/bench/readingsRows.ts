@@ -1,6 +1,6 @@
 import type { Analysis, OptionResult } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { benchWords } from "../../core/messages/index.ts";
+import { benchWords, windowRemarkWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, quantityPrint, unitSpoken } from "../../core/units/index.ts";
 import { exposureSpoken, type ShownUnit, unitFactor } from "./shownUnit.ts";
@@ -88,7 +88,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
     },
     {
       id: "span",
-      head: `${clock(analysis.clock.nowH)} to ${clock(analysis.clock.toH)}, ${numberPrint(analysis.clock.toH - analysis.clock.nowH, { decimals: 0 })} h`,
+      head: `${clock(analysis.clock.nowH)} to ${clock(analysis.clock.readingsToH)}, ${numberPrint(analysis.clock.readingsToH - analysis.clock.nowH, { decimals: 0 })} h${windowRemark(value)}`,
       rows: [
         span("Highest", "spanPeak", (s) => ({ text: concentration(s.peak), sub: clock(s.timeOfPeakH) })),
         span("Lowest", "spanLowest", (s) => ({ text: concentration(s.lowest), sub: clock(s.timeOfLowestH) })),
@@ -99,4 +99,12 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
       ],
     },
   ];
+}
+
+/** Hours are always of the whole curve; a window meant for one point of it is easily misread. */
+function windowRemark(value: Case): string {
+  const quantity = value.window?.quantity;
+  return quantity === undefined || quantity === "lowest-and-highest" || quantity === "auc24"
+    ? ""
+    : `. ${windowRemarkWords(quantity)}`;
 }

@@ -45,7 +45,7 @@ export function levelDraftRead(draft: LevelDraft, value: Case): Result<Omit<Leve
 }
 
 function placeFaults(at: string, value: Case): readonly Issue[] {
-  const words = (ms: number) => instantText(ms, value.timeZone, "dayClock");
+  const words = (ms: number) => instantText(ms, value.timeZone, "full");
   const atMs = instantMs(at);
   const nowMs = instantMs(value.now);
   if (atMs > nowMs) return [issue("level-after-now", { at: words(atMs), now: words(nowMs) }, ["at"])];

@@ -22,6 +22,16 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
       <SummaryPaper model={model} heading={model.heading}>
         <Banners banners={model.banners} />
         {model.order && <Order order={model.order} />}
+        <div className="summary-signatures">
+          <p>
+            <span className="summary-signed">{model.preparedBy}</span>
+            {summaryHeadWords.preparedBy}
+          </p>
+          <p>
+            <span className="summary-signed" />
+            {summaryHeadWords.checkedBy}
+          </p>
+        </div>
         <figure className="summary-chart">{chart}</figure>
         <div className="summary-columns">
           <div>
@@ -72,16 +82,6 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
             ))}
           </ul>
         </SummaryBlock>
-        <div className="summary-signatures">
-          <p>
-            <span className="summary-signed">{model.preparedBy}</span>
-            {summaryHeadWords.preparedBy}
-          </p>
-          <p>
-            <span className="summary-signed" />
-            {summaryHeadWords.checkedBy}
-          </p>
-        </div>
         <div className="summary-foot">
           <p>{model.statement}</p>
           <p>{model.footer}</p>

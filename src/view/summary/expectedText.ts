@@ -1,5 +1,9 @@
 import type { DoseMark, OptionReadings } from "../../core/analysis/index.ts";
-import { SUMMARY_TITLES as titles, summaryReadingWords as words } from "../../core/messages/index.ts";
+import {
+  SUMMARY_TITLES as titles,
+  windowRemarkWords,
+  summaryReadingWords as words,
+} from "../../core/messages/index.ts";
 import { shownReadings } from "./shownReadings.ts";
 import { steadyFromMs } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
@@ -80,7 +84,7 @@ export function hoursText(input: SummaryInput, print: SummaryPrint): SummaryMode
       print.figure(window.low.value * (window.low.unit === "mg/L" ? print.shownFactor : 1), 15),
       print.exact(window.high),
     ),
-    span: fromTo,
+    span: window.quantity === "lowest-and-highest" ? fromTo : `${fromTo}. ${windowRemarkWords(window.quantity)}.`,
     rows: [
       { label: words.below, value: print.hours(span.hoursBelow) },
       { label: words.within, value: print.hours(span.hoursWithin) },

@@ -46,7 +46,20 @@ function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] 
     const last = doses.at(-1);
     return last === undefined ? [words.noModel] : [words.endsBefore(steady, print.at(last, "full")), words.byQuestion];
   }
-  return [drawSentence(doseMs, print.at(steadyMs, "dayClock"), print), ...distribution(input, print), words.writeTimes];
+  return [
+    drawSentence(doseMs, print.at(steadyMs, "dayClock"), print),
+    ...farOff(doseMs - nowMs),
+    ...distribution(input, print),
+    words.writeTimes,
+  ];
+}
+
+/** Longer than this until steady state, and an earlier level is worth a thought. */
+const FAR_DAYS = 7;
+
+function farOff(waitMs: number): readonly string[] {
+  const days = waitMs / (24 * MS_PER_HOUR);
+  return days > FAR_DAYS ? [words.farOff(String(Math.round(days)))] : [];
 }
 
 /** With two compartments a sample drawn too early says little: how long to wait after a dose at the least. */

@@ -1,3 +1,4 @@
+import type { OptionReadings } from "../../core/analysis/index.ts";
 import type { Case, Option } from "../../core/case/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { listWords, summaryOrderWords as words } from "../../core/messages/index.ts";
@@ -93,8 +94,10 @@ function totalSentences(
   const perDose = masses.length === 1 && masses[0] ? masses[0] : null;
   if (perDayMg === null) return perDose ? [words.perDose(perDose)] : [];
   const weight = input.analysis.patient.weight;
-  const perDay = print.quantity(perDayMg, "mg", { significant: 4 });
-  const perKg = weight ? print.quantity(perDayMg / weight.value, "mg") : null;
+  // Labelled amounts of a salt and of the free substance don't add up: then the active part is given, and said to be so.
+  const activeMg = activePerDayMg(input, option, readings);
+  const perDay = `${print.quantity(activeMg ?? perDayMg, "mg", { significant: 4 })}${activeMg === null ? "" : ` ${words.active(input.case.medicine.name)}`}`;
+  const perKg = weight ? print.quantity((activeMg ?? perDayMg) / weight.value, "mg") : null;
   const isAverage = option.lines.some(
     ({ repeat }) => repeat && ("every" in repeat ? 24 % repeat.every.value !== 0 : (repeat.weekdays?.length ?? 7) < 7),
   );
@@ -104,4 +107,11 @@ function totalSentences(
   const unknown = perKg ? [] : [words.perKgUnknown];
   if (perDose && lines.length === 1) return [words.total(perDose, perDay, perKg, isAverage), ...unknown];
   return [(isOneStep ? words.together24 : words.settlesAt)(perDay, perKg, isAverage), ...unknown];
+}
+
+/** mg of the active moiety a day where a product of the option is labelled as a salt; null where labels are active already. */
+function activePerDayMg(input: SummaryInput, option: Option, readings: OptionReadings | null): number | null {
+  const { medicine } = input.case;
+  if (option.lines.every((line) => productOf(medicine, line.product).saltFactor === undefined)) return null;
+  return readings?.activeDailyDoseMg ?? null;
 }

@@ -25,7 +25,8 @@ export function summaryDays(
   const longest = Math.max(0, ...placed.map(({ text }) => text.length));
   const dayWidth = (placed[1]?.x ?? scene.plot.right) - (placed[0]?.x ?? scene.plot.left);
   const step = Math.max(1, Math.ceil((longest * DAY_CHARACTER_WIDTH + DAY_GAP) / dayWidth));
-  return placed.filter((_, index) => index % step === 0);
+  const room = (x: number) => x + longest * DAY_CHARACTER_WIDTH <= scene.width;
+  return placed.filter(({ x }, index) => index % step === 0 && room(x));
 }
 
 /** Left of a now line this near to the axis there is no room for a word beside the unit. */

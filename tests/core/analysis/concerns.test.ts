@@ -164,6 +164,11 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     },
     base,
   ],
+  [
+    "first-dose-late",
+    { ...base, options: [option([line({ start: "2026-03-05T08:00:00+00:00" })])] },
+    { ...base, options: [option([line({ start: "2026-03-04T20:00:00+00:00" })])] },
+  ],
   ["never-steady", phenytoin(500), phenytoin(150)],
   ["level-while-distributing", digoxin("2026-03-04T10:00:00+00:00"), digoxin("2026-03-04T07:30:00+00:00")],
   ["value-confirmed", { ...base, levels: [level({ confirmed: true })] }, { ...base, levels: [level()] }],

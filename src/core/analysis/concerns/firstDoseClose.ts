@@ -1,6 +1,6 @@
 import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 
-/** The option's first dose falls much sooner after the last dose given than the option's own doses follow each other. */
+/** The option's first dose falls much sooner, or much later, after the last dose given than the option's own doses follow each other. */
 export const firstDoseClose: ConcernRule = (context) => {
   const last = context.given.filter((mark) => mark.countedMg > 0).at(-1);
   if (!last) return [];
@@ -9,11 +9,12 @@ export const firstDoseClose: ConcernRule = (context) => {
     const [first, second] = counted;
     if (!first || !second) return [];
     const gapH = first.atH - last.atH;
-    // Less than half the interval: our own rule, to be looked at, not a limit.
-    return gapH < (second.atH - first.atH) / 2
+    // Less than half the interval, or more than one and a half: our own rule, to be looked at, not a limit.
+    const share = gapH / (second.atH - first.atH);
+    return share < 0.5 || share > 1.5
       ? [
           concern(
-            "first-dose-close",
+            share < 0.5 ? "first-dose-close" : "first-dose-late",
             "check",
             { kind: "option", id: option.id },
             {
