@@ -151,40 +151,54 @@ describe("a quick part on top of a long constant input: a peak, then a plateau o
 });
 
 test("two compartments: a peak, a dip and a second rise in one stretch, long after which the fast decay has gone without trace", () => {
+  // Met in random trials; all its digits are needed for the sign that was lost.
+  const first = {
+    kind: "two-compartment",
+    volume: 109.535795,
+    clearance: 57.422495800176975,
+    exchange: 1.565636958191801,
+    peripheralVolume: 25.588295926949222,
+  } as const;
+  const second = {
+    kind: "two-compartment",
+    volume: 138.16706,
+    clearance: 1.73436506294021,
+    exchange: 274.1034592774387,
+    peripheralVolume: 177.99393999586215,
+  } as const;
   const history: ModelHistory = {
     dispositions: [
-      {
-        from: Number.NEGATIVE_INFINITY,
-        disposition: { kind: "two-compartment", clearance: 14.3, volume: 107, exchange: 305, peripheralVolume: 1870 },
-      },
+      { from: Number.NEGATIVE_INFINITY, disposition: first },
+      { from: 29, disposition: second },
     ],
     inputs: [
       {
         absorption: {
           kind: "mixed",
-          fastFraction: 0.17,
-          fastKa: 2.07,
-          slow: { kind: "zero-order", duration: 29 },
+          fastFraction: 0.68938,
+          fastKa: 2.4360258919503397,
+          slow: { kind: "zero-order", duration: 37.5 },
           slowLag: 0,
         },
-        bioavailability: 0.48,
+        bioavailability: 0.8696233,
         lag: 0,
-        doses: [{ time: 0, amount: 500 }],
+        doses: [
+          { time: 36.25, amount: 285 },
+          { time: 39.25, amount: 312 },
+          { time: 101.75, amount: 95 },
+          { time: 102.25, amount: 775 },
+        ],
       },
     ],
   };
-  const early = modelExposure(history, 0, 5);
-  const whole = modelExposure(history, 0, 28);
-  const dip = modelExposure(history, early.timeOfPeak, 28);
-  expect(early.timeOfPeak).toBeLessThan(1);
-  expect(dip.timeOfLowest).toBeGreaterThan(early.timeOfPeak + 0.5);
-  expect(dip.timeOfLowest).toBeLessThan(10);
+  const { peak, timeOfPeak } = modelExposure(history, 3, 150);
   const highest = Math.max(
     ...modelProfile(
       history,
-      Array.from({ length: 28_000 }, (_, i) => i * 0.001),
+      Array.from({ length: 8000 }, (_, i) => 102 + i * 0.001),
     ),
   );
-  expect(whole.peak).toBeGreaterThanOrEqual(highest);
-  expect(whole.peak).toBeLessThanOrEqual(highest * (1 + 1e-6));
+  expect(peak).toBeGreaterThanOrEqual(highest);
+  expect(peak).toBeLessThanOrEqual(highest * (1 + 1e-6));
+  expect(Math.abs(timeOfPeak - 102.9695)).toBeLessThanOrEqual(1e-4);
 });
