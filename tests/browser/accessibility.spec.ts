@@ -27,10 +27,11 @@ for (const colorScheme of ["light", "dark"] as const) {
     await openDemo(page, "Harbour ward 3, bed 12");
     await expectAccessible(page, "bench");
     const panels = [
-      ["patient", page.getByRole("button", { name: /^weight/ })],
-      ["medicine", page.getByRole("button", { name: /^medicine/ })],
+      ["patient", page.getByRole("banner").getByRole("button", { name: /^weight/ })],
+      ["medicine", page.getByRole("banner").getByRole("button", { name: /^medicine/ })],
       ["window", page.getByRole("button", { name: /^target window/ })],
       ["case", page.getByRole("button", { name: /^case/ })],
+      ["events", page.getByRole("button", { name: "Add an event" })],
       ["levels", page.getByRole("button", { name: "Levels", exact: true })],
       ["doses given", page.getByRole("button", { name: "Given", exact: true })],
       ["option", page.getByRole("button", { name: "Option A, chosen: open" })],

@@ -73,7 +73,10 @@ test.describe("numbers and levels", () => {
 
   test("a weight that looks like pounds is asked about, and the answer is recorded", async ({ page }) => {
     await openDemo(page, DEMO);
-    await page.getByRole("button", { name: /^weight/ }).click();
+    await page
+      .getByRole("banner")
+      .getByRole("button", { name: /^weight/ })
+      .click();
     const panel = page.getByRole("dialog");
     await panel.getByRole("textbox", { name: "Weight" }).fill("180");
     await panel.getByRole("textbox", { name: "Weight" }).press("Enter");
@@ -120,6 +123,7 @@ test.describe("dose text", () => {
     await page.getByRole("button", { name: "Given", exact: true }).click();
     const panel = page.getByRole("dialog");
     const field = panel.getByRole("textbox", { name: "Type a dose" });
+    await panel.getByRole("combobox", { name: "Product" }).selectOption({ index: 1 });
     await field.fill("300 mg once at 25 October 01:30");
     await field.press("Enter");
     await expect(panel.getByText(/twice/i).first()).toBeVisible();

@@ -12,5 +12,5 @@ export { richWords } from "./richWords.ts";
 export * from "./screenWords.ts";
 export * from "./summaryWords.ts";
 export { weekdayList, weekdayName } from "./weekdayWords.ts";
-export { windowQuantityWord, windowRangeWords } from "./windowWords.ts";
+export { windowQuantityWord, windowRangeWords, windowRemarkWords } from "./windowWords.ts";
 export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";

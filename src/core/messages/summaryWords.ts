@@ -137,6 +137,7 @@ export const summaryOrderWords = {
   clockChange: (when: string, clock: readonly string[]) =>
     `The clocks change: the interval stays as written in elapsed hours, so from ${when} the dose falls at ${listWords(clock)}.`,
   perDose: (amount: string) => `${amount} per dose.`,
+  active: (name: string) => `of active ${name}`,
   total: (perDose: string, perDay: string, perKg: string | null, isAverage: boolean) =>
     `${perDose} per dose, ${isAverage ? "on average " : ""}${perDay} per day${perKgWords(perKg)}.`,
   settlesAt: (perDay: string, perKg: string | null, isAverage: boolean) =>
@@ -214,6 +215,8 @@ export const summaryLevelWords = {
 } as const;
 
 export const summaryNextLevelWords = {
+  farOff: (days: string) =>
+    `That is ${days} days on: an earlier level for safety may be wanted, by local policy (common practice).`,
   notBefore: (hours: string) => `Never earlier than ${hours} after a dose: distribution is not over.`,
   draw: (day: string, from: string, to: string, steady: string) =>
     `${day}, between ${from} and ${to}, before the ${to} dose: the first dose at or after 90 % of steady state (${steady}).`,
