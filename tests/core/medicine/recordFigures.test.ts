@@ -56,7 +56,7 @@ describe("unverifiedFigures", () => {
   });
 
   it("counts by hand: digoxin", () => {
-    // Molar mass, CL, V1, Q, V2, 2 variabilities, four windows, toxic limit, earliest sample limit: 12. Two tablets with content, ka, lag, F: 8.
+    // Molar mass, CL, V1, Q, V2, 2 variabilities, four windows, toxic limit, earliest sample: 13. Two tablets with content, ka, lag, F: 8.
     // From memory: molar mass, both variabilities; lag and F of both; the low strength.
     expect(unverifiedFigures(recordById("digoxin")!)).toEqual({ memory: 8, commonPractice: 0, invented: 0, total: 21 });
   });
