@@ -46,7 +46,7 @@ function hoursBeyond(step: CrossCheckStep, a: Point, b: Point, edge: number, sig
  * @param window mg/L, 0 <= low <= high; optional
  * @returns see Exposure
  * Outside: as crossCheck.
- * Accuracy: levels and average 1e-8 of the largest, hours 1e-6 as far as the slope of the level at the edge allows
+ * Accuracy: levels and average 1e-8 of the largest, hours 1e-5 as far as the slope of the level at the edge allows
  * (tests/core/kinetics/model/crossCheck.test.ts).
  * Source: see DormandPrince.
  * @example crossCheckExposure({ dispositions: [{ from: -Infinity, disposition: { kind: "one-compartment", clearance: 3, volume: 30 } }],

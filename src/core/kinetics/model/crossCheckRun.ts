@@ -17,7 +17,12 @@ const MOST_STEPS = 1_000_000;
 /** Step control, as usual for a method of this order. */
 const SAFETY = 0.9;
 const LEAST_CHANGE = 0.2;
-const MOST_CHANGE = 5;
+const MOST_CHANGE = 2;
+/**
+ * The first step after an event moves the amounts by about this part of everything given. The error estimate of a step that is far
+ * too long can be small by accident, so steps grow from below.
+ */
+const FIRST_MOVE = 1e-3;
 
 /** A step on its way past: times h, from `at` over `h`; levels mg/L, slopes mg/L per h. */
 export interface CrossCheckStep {
@@ -42,6 +47,7 @@ export class CrossCheckRun {
   readonly #solver: DormandPrince;
   readonly #trial: DormandPrince;
   readonly #ka: Float64Array;
+  readonly #change: Float64Array;
   /** mg by depot, mg by compartment, mg·h/L. */
   readonly #y: Float64Array;
   /** Index of the first compartment, and of the area. */
@@ -62,6 +68,7 @@ export class CrossCheckRun {
     this.#area = this.#body + this.#kind.compartments;
     const size = this.#area + 1;
     this.#y = new Float64Array(size);
+    this.#change = new Float64Array(size);
     this.#ka = Float64Array.from(this.#script.depots, ({ ka }) => ka);
     const derivative = (y: Float64Array, change: Float64Array) => this.#derivative(y, change);
     this.#solver = new DormandPrince(size, derivative);
@@ -113,7 +120,14 @@ export class CrossCheckRun {
       if (from === time) this.#given += mgPerH * (to - from);
     }
     this.#disposition = this.#script.dispositionAt(time);
-    this.#h = Number.POSITIVE_INFINITY;
+    this.#h = this.#firstStep();
+  }
+
+  #firstStep(): number {
+    this.#derivative(this.#y, this.#change);
+    let speed = 0;
+    for (let i = 0; i < this.#area; i++) speed = Math.max(speed, Math.abs(this.#change[i]!));
+    return speed > 0 ? (FIRST_MOVE * this.#given) / speed : Number.POSITIVE_INFINITY;
   }
 
   #derivative(y: Float64Array, change: Float64Array): void {
