@@ -171,7 +171,7 @@ const growth = [ONE, TWO, SATURABLE].map((disposition) => {
           sink += modelProfile(history, at)[7]!;
         },
       },
-      Math.max(5, 2000 / count),
+      Math.max(20, 2000 / count),
     );
     return (best.run * 1000) / (2 * count);
   });
