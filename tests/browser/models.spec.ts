@@ -14,7 +14,9 @@ test("saturable elimination: no half-life is shown, and an option above Vmax is 
   await page.getByRole("button", { name: "Print summary" }).click();
   const text = flat((await printPage(page, info.outputPath("summary.pdf"))).texts.join(" "));
   expect(text).toContain("saturable elimination (Michaelis–Menten)");
-  expect(text).toContain("Phenytoin 100 mg extended-release capsule (sodium salt) 3 capsules by mouth");
+  expect(text).toContain("Phenytoin 100 mg extended-release capsule (sodium salt)");
+  expect(text).toContain("3 capsules by mouth every day at 21:00");
+  expect(text).toContain("Together 326 mg of active phenytoin per day");
   expect(text).not.toMatch(/half-life/i);
 });
 
@@ -27,8 +29,11 @@ test("changing kidney function: events on the clock, the final state named, micr
   await expect(page.getByRole("banner")).toContainText("0.5 to 0.8 microgram/L");
   await page.getByRole("button", { name: "Print summary" }).click();
   const text = flat((await printPage(page, info.outputPath("summary.pdf"))).texts.join(" "));
-  expect(text).toContain("Digoxin 125 microgram tablet half a tablet by mouth every day at 20:00");
-  expect(text).toContain("Never earlier than 6 hours after a dose");
+  expect(text).toContain("Digoxin 125 microgram tablet");
+  expect(text).toContain("half a tablet by mouth every day at 20:00");
+  // The columns of the sheet come side by side out of the PDF.
+  expect(text).toMatch(/Never earlier than 6.*hours after a dose/);
+  expect(text).toContain("Hours in the window of 0.5 to 0.8 microgram per L");
   expect(text).not.toContain("0.0625 mg");
 });
 
@@ -61,5 +66,5 @@ test("where the dose is can be shown, and the two roads to the figures agree on 
   await page.waitForTimeout(2_500);
   await page.getByRole("button", { name: "Print summary" }).click();
   const text = flat((await printPage(page, info.outputPath("summary.pdf"))).texts.join(" "));
-  expect(text).toContain("worked out again by plain numerical integration, and agree");
+  expect(text).toContain("numerical integration, and agree");
 });

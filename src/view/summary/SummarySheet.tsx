@@ -32,6 +32,10 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
             {summaryHeadWords.checkedBy}
           </p>
         </div>
+        <div className="summary-foot">
+          <p>{model.statement}</p>
+          <p>{model.footer}</p>
+        </div>
         <figure className="summary-chart">{chart}</figure>
         <div className="summary-columns">
           <div>
@@ -82,10 +86,6 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
             ))}
           </ul>
         </SummaryBlock>
-        <div className="summary-foot">
-          <p>{model.statement}</p>
-          <p>{model.footer}</p>
-        </div>
       </SummaryPaper>
       <SummaryDetailsSheet model={model} />
     </div>

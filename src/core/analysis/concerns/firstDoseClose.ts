@@ -6,7 +6,8 @@ export const firstDoseClose: ConcernRule = (context) => {
   if (!last) return [];
   return context.options.flatMap((option) => {
     const counted = option.doses.filter((mark) => mark.countedMg > 0);
-    const [first, second] = counted;
+    const [first] = counted;
+    const second = counted.find((mark) => first !== undefined && mark.atH > first.atH);
     if (!first || !second) return [];
     const gapH = first.atH - last.atH;
     // Less than half the interval, or more than one and a half: our own rule, to be looked at, not a limit.
