@@ -13,7 +13,7 @@ const HEIGHT = { A4: 188, Letter: 146 };
 const MARGIN = { top: 26, right: 58, bottom: 24, left: 34 };
 
 /** A day's name takes about this much of the axis, in units of the drawing. */
-const DAY_CHARACTER_WIDTH = 8.4;
+const DAY_CHARACTER_WIDTH = 7.6;
 const DAY_GAP = 8;
 
 /** Names of the days where there is room for them: every day, or every second, third one. */
