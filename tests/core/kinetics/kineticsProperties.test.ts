@@ -13,23 +13,24 @@ import {
   profile,
   steadyStateConcentration,
 } from "../../../src/core/kinetics/index.ts";
+import { even } from "./model/modelArbitraries.ts";
 import { relativeError } from "./worstError.ts";
 
 const RUNS = { seed: 20261, numRuns: 300 };
 
 /** Log-uniform over the rates of real medicines and well beyond, half of the pairs near or exactly equal or flip-flop. */
-const rate = fc.double({ min: -3, max: 1.5, noNaN: true }).map((x) => 10 ** x);
+const rate = even(-3, 1.5).map((x) => 10 ** x);
 const kinetics: fc.Arbitrary<OralKinetics> = fc
   .record({
     ka: rate,
     ratio: fc.oneof(
-      fc.double({ min: -2, max: 2, noNaN: true }).map((x) => 10 ** x),
-      fc.double({ min: -1e-6, max: 1e-6, noNaN: true }).map((x) => 1 + x),
+      even(-2, 2).map((x) => 10 ** x),
+      even(-1e-6, 1e-6).map((x) => 1 + x),
       fc.constant(1),
     ),
-    volume: fc.double({ min: 1, max: 500, noNaN: true }),
-    bioavailability: fc.double({ min: 0.05, max: 1, noNaN: true }),
-    lag: fc.oneof(fc.constant(0), fc.double({ min: 0, max: 3, noNaN: true })),
+    volume: even(1, 500),
+    bioavailability: even(0.05, 1),
+    lag: fc.oneof(fc.constant(0), even(0, 3)),
   })
   .map(({ ratio, ...rest }) => ({ ...rest, ke: rest.ka * ratio }));
 
@@ -62,8 +63,12 @@ describe("properties of the oral model", () => {
     fc.assert(
       fc.property(kinetics, doses, times, (k, list, at) => {
         const twice = list.map((d) => ({ ...d, amount: 2 * d.amount }));
-        // Doubling is exact in binary.
-        expect([...profile(k, twice, at)]).toEqual([...profile(k, list, at)].map((level) => 2 * level));
+        const once = profile(k, list, at);
+        profile(k, twice, at).forEach((level, i) => {
+          // Doubling is exact in binary, but not among the subnormal numbers a sweep passes through on its way to a level below this.
+          if (once[i]! > 1e-290) expect(level).toBe(2 * once[i]!);
+          else expect(Math.abs(level - 2 * once[i]!)).toBeLessThan(1e-300);
+        });
       }),
       RUNS,
     );
@@ -88,7 +93,7 @@ describe("properties of the oral model", () => {
 
   it("mass balance: gut + body + eliminated is the absorbed dose to 2e-15, and none is negative", () => {
     fc.assert(
-      fc.property(kinetics, amount, fc.double({ min: 0, max: 1000, noNaN: true }), (k, mg, u) => {
+      fc.property(kinetics, amount, even(0, 1000), (k, mg, u) => {
         const { gut, body, eliminated } = amountsAfterDose(k, mg, k.lag + u);
         expect(relativeError(gut + body + eliminated, k.bioavailability * mg)).toBeLessThanOrEqual(2e-15);
         expect(Math.min(gut, body, eliminated)).toBeGreaterThanOrEqual(0);
@@ -139,7 +144,7 @@ describe("properties of the oral model", () => {
       .uniqueArray(quarter(-60, 300), { minLength: 3, maxLength: 3 })
       .map((list) => list.sort((a, b) => a - b));
     fc.assert(
-      fc.property(kinetics, doses, cuts, fc.double({ min: 0.01, max: 1, noNaN: true }), (k, list, [a, b, c], part) => {
+      fc.property(kinetics, doses, cuts, even(0.01, 1), (k, list, [a, b, c], part) => {
         const high = part * largest(k, list);
         const window = { low: high / 3, high };
         const whole = exposure(k, list, a!, c!, window);
@@ -207,22 +212,16 @@ describe("properties of the oral model", () => {
 
   it("many equal doses come to steady state, to 5e-15 of its level at most", () => {
     fc.assert(
-      fc.property(
-        kinetics,
-        amount,
-        quarter(4, 48),
-        fc.double({ min: 0, max: 1, noNaN: true }),
-        (k, mg, interval, part) => {
-          const slow = Math.min(k.ka, k.ke);
-          const n = Math.ceil((45 / slow + k.lag) / interval) + 1;
-          fc.pre(n < 20_000);
-          const list = Array.from({ length: n }, (_, i) => ({ time: (i + 1 - n) * interval, amount: mg }));
-          const s = part * interval;
-          const wanted = steadyStateConcentration(k, mg, interval, s);
-          const peak = peakAfterDose(k, mg);
-          expect(Math.abs(profile(k, list, [s])[0]! - wanted) / Math.max(peak, wanted)).toBeLessThanOrEqual(5e-15);
-        },
-      ),
+      fc.property(kinetics, amount, quarter(4, 48), even(0, 1), (k, mg, interval, part) => {
+        const slow = Math.min(k.ka, k.ke);
+        const n = Math.ceil((45 / slow + k.lag) / interval) + 1;
+        fc.pre(n < 20_000);
+        const list = Array.from({ length: n }, (_, i) => ({ time: (i + 1 - n) * interval, amount: mg }));
+        const s = part * interval;
+        const wanted = steadyStateConcentration(k, mg, interval, s);
+        const peak = peakAfterDose(k, mg);
+        expect(Math.abs(profile(k, list, [s])[0]! - wanted) / Math.max(peak, wanted)).toBeLessThanOrEqual(5e-15);
+      }),
       RUNS,
     );
   });
