@@ -82,7 +82,9 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
         row("dailyDose", "Dose in 24 h", (option) =>
           option.typical?.dailyDoseMg === null || option.typical === null
             ? null
-            : quantityPrint({ value: option.typical.dailyDoseMg, unit: "mg" }, { style: "screen", significant: 3 }),
+            : breaking(
+                quantityPrint({ value: option.typical.dailyDoseMg, unit: "mg" }, { style: "screen", significant: 3 }),
+              ),
         ),
       ],
     },
@@ -107,4 +109,9 @@ function windowRemark(value: Case): string {
   return quantity === undefined || quantity === "lowest-and-highest" || quantity === "auc24"
     ? ""
     : `. ${windowRemarkWords(quantity)}`;
+}
+
+/** In a narrow cell a unit may stand under its number. */
+function breaking(text: string): string {
+  return text.replaceAll("\u00a0", " ");
 }
