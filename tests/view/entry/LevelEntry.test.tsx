@@ -50,7 +50,7 @@ describe("LevelEntry", () => {
     await shown.user.type(value(), "5.2");
     await shown.user.type(drawn(), "1 March 07:30{Enter}");
     const sentence = issueMessage(
-      issue("level-before-dose", { at: "Sun 1 March, 07:30", first: "Sun 1 March, 08:00" }),
+      issue("level-before-dose", { at: "Sunday 1 March 2026, 07:30", first: "Sunday 1 March 2026, 08:00" }),
     );
     expect(drawn()).toHaveAccessibleDescription(expect.stringContaining(sentence));
     expect(value()).toHaveValue("5.2");
@@ -71,7 +71,7 @@ describe("LevelEntry", () => {
     const shown = await show({ given });
     await shown.user.type(value(), "5.2");
     await shown.user.type(drawn(), "1 March 12:00{Enter}");
-    const data = { at: "Sun 1 March, 12:00", first: "Sun 1 March, 20:00" };
+    const data = { at: "Sunday 1 March 2026, 12:00", first: "Sunday 1 March 2026, 20:00" };
     expect(drawn()).toHaveAccessibleDescription(
       expect.stringContaining(issueMessage(issue("level-before-dose", data))),
     );
@@ -81,7 +81,7 @@ describe("LevelEntry", () => {
     const shown = await show();
     await shown.user.type(value(), "5.2");
     await shown.user.type(drawn(), "tomorrow 07:30{Enter}");
-    const data = { at: "Thu 5 March, 07:30", now: "Wed 4 March, 12:00" };
+    const data = { at: "Thursday 5 March 2026, 07:30", now: "Wednesday 4 March 2026, 12:00" };
     expect(drawn()).toHaveAccessibleDescription(expect.stringContaining(issueMessage(issue("level-after-now", data))));
     expect(value()).toHaveValue("5.2");
     expect(shown.value().levels).toEqual([]);
