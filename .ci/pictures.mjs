@@ -53,6 +53,8 @@ const context = await browser.newContext({ locale: "en-GB", timezoneId: "Europe/
 const page = await context.newPage();
 await page.goto(server.url);
 await openDemo(page);
+// The cross-check follows a settled edit; its outcome belongs on the sheet.
+await page.waitForTimeout(2500);
 await page.getByRole("button", { name: "Print summary" }).click();
 await page.getByText("Oral regimen summary").first().waitFor();
 const temporary = mkdtempSync(join(tmpdir(), "ebbline-pictures-"));

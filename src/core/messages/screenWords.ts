@@ -107,7 +107,8 @@ export const medicinesWords = {
   measuredIn: "measured in",
   appliesTo: "Applies to",
   kinetics: "Kinetics",
-  apparent: "Clearance (or Vmax) and volume are per bioavailability (CL/F or Vmax/F, V/F): products state a bioavailability of 1.",
+  apparent:
+    "Clearance (or Vmax) and volume are per bioavailability (CL/F or Vmax/F, V/F): products state a bioavailability of 1.",
   figure: "figure",
   value: "value",
   source: "source",
