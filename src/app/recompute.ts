@@ -51,7 +51,7 @@ function recomputeOutput(value: Case, analysis: Analysis) {
         {
           chosen: value.options.find((candidate) => candidate.id === option.id)?.chosen ?? false,
           typical: figures(option.typical, analysis.typical, at),
-          individual: figures(option.individual, analysis.individual, at),
+          individual: null,
         },
       ]),
     ),

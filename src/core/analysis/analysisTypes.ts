@@ -1,6 +1,7 @@
 import type { Absorption, BothReadings, DispositionSpan } from "../kinetics/index.ts";
 import type { DoseAmount } from "../regimen/index.ts";
 import type { UnitCode } from "../units/index.ts";
+import type { Band, FitState, IndividualReadings, LevelFit } from "./fitTypes.ts";
 
 /**
  * What `derive(case)` returns: everything the screens, the summary and `recompute` show.
@@ -72,7 +73,7 @@ export interface NamedFigure {
   readonly figure: Traced;
 }
 
-/** The kinetics of one patient reading of the model (typical now; individual once levels adjust it). */
+/** The kinetics of the typical patient: the record's formulas with this patient's figures put in. */
 export interface Model {
   readonly kind: DispositionSpan["disposition"]["kind"];
   /** The record's parameters with this patient's numbers put in, in the final state: effects of events included. */
@@ -146,7 +147,9 @@ export interface OptionResult {
   readonly doses: readonly DoseMark[];
   readonly curve: Curve | null;
   readonly typical: OptionReadings | null;
-  readonly individual: OptionReadings | null;
+  /** null until the levels have been fitted, or where they cannot be. */
+  readonly individual: IndividualReadings | null;
+  readonly band: Band | null;
 }
 
 /** The second road: the same figures by plain numerical integration. */
@@ -172,6 +175,8 @@ export interface LevelResult {
   readonly afterDoseH: number | null;
   readonly excluded: string | null;
   readonly belowLimit: boolean;
+  /** null until the levels have been fitted. */
+  readonly fit: LevelFit | null;
 }
 
 export type Gravity = "stop" | "check" | "note";
@@ -205,9 +210,11 @@ export interface Analysis {
   readonly patient: PatientFigures;
   /** null when something needed is missing; the concerns say what. */
   readonly typical: Model | null;
-  readonly individual: Model | null;
+  /** What the levels make of this patient. */
+  readonly fit: FitState;
   readonly given: readonly DoseMark[];
   readonly givenCurve: Curve | null;
+  readonly givenBand: Band | null;
   readonly levels: readonly LevelResult[];
   readonly options: readonly OptionResult[];
   readonly concerns: readonly Concern[];

@@ -65,6 +65,7 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
           })
         : null,
     individual: null,
+    band: null,
   }));
 
   // 8. Cross-check: the displayed profile and exposure by another road.
@@ -95,9 +96,10 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
     clock: { originMs, timeZone: value.timeZone, nowH, fromH, toH, readingsToH, midnightsH },
     patient,
     typical,
-    individual: null,
+    fit: { kind: "none", reason: "no-levels" },
     given: given.marks,
     givenCurve,
+    givenBand: null,
     levels,
     options,
     concerns,

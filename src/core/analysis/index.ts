@@ -3,3 +3,4 @@ export type * from "./analysisTypes.ts";
 export { laneDoses } from "./caseDoses.ts";
 export { concentrationAt, hoursSinceDose } from "./concentrationAt.ts";
 export { type DeriveOptions, derive, ENGINE } from "./derive.ts";
+export type * from "./fitTypes.ts";

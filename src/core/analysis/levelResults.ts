@@ -51,6 +51,7 @@ export function levelResults(
       afterDoseH: before ? atH(level) - before.atH : null,
       excluded: level.excluded ?? null,
       belowLimit: level.kind === "below-limit",
+      fit: null,
     };
   });
 }

@@ -18,6 +18,7 @@ export type { Absorption, ModelInput } from "./model/absorption.ts";
 export { crossCheck } from "./model/crossCheck.ts";
 export { crossCheckExposure } from "./model/crossCheckExposure.ts";
 export { distributionEnd } from "./model/distributionEnd.ts";
+export type { KineticsParameter } from "./model/kineticsParameter.ts";
 export { type ModelAmounts, modelAmounts } from "./model/modelAmounts.ts";
 export { modelBothReadings } from "./model/modelBothReadings.ts";
 export { modelExposure } from "./model/modelExposure.ts";

@@ -18,12 +18,11 @@ const NAMED_DOSES = 4;
 export function assumptionsText(input: SummaryInput, print: SummaryPrint): readonly string[] {
   const { medicine } = input.case;
   const model = shownModel(input)?.model;
-  const isIndividual = input.analysis.individual !== null && model === input.analysis.individual;
   const kind = words.kinds[model?.kind ?? "one-compartment"];
   const changes = model?.dispositions.slice(1) ?? [];
   const { crossCheck } = input.analysis;
   return [
-    isIndividual ? words.individual(kind) : words.typical(kind),
+    words.typical(kind),
     ...(changes.length > 0
       ? [words.changes(changes.length, print.at(print.ms(changes.at(-1)!.from), "dayClock"))]
       : []),

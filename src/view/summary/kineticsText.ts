@@ -8,8 +8,7 @@ import type { SummaryPrint } from "./summaryPrint.ts";
 
 /** The model the sheet is worked out with, and what its readings are called. */
 export function shownModel(input: SummaryInput): { readonly model: Model; readonly patient: string } | null {
-  const { individual, typical } = input.analysis;
-  if (input.case.fit.use === "individual" && individual) return { model: individual, patient: words.individual };
+  const { typical } = input.analysis;
   return typical ? { model: typical, patient: words.typical } : null;
 }
 

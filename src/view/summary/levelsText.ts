@@ -2,7 +2,6 @@ import type { LevelResult } from "../../core/analysis/index.ts";
 import { SUMMARY_TITLES as titles, summaryLevelWords as words } from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
-import { shownModel } from "./kineticsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryLevel, SummaryModel } from "./summaryModel.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
@@ -12,8 +11,7 @@ export function levelsText(input: SummaryInput, print: SummaryPrint): SummaryMod
   const rows = [...input.case.levels]
     .sort((a, b) => instantMs(a.at) - instantMs(b.at))
     .map((level) => levelRow(input, level, print));
-  const isUsed = shownModel(input)?.model === input.analysis.individual && input.analysis.individual !== null;
-  return { title: titles.levels, rows, remark: rows.length === 0 ? words.none : isUsed ? words.used : words.compared };
+  return { title: titles.levels, rows, remark: rows.length === 0 ? words.none : words.compared };
 }
 
 function levelRow(

@@ -9,13 +9,10 @@ interface ShownReadings {
   readonly patient: string;
 }
 
-/** Readings of the chosen option: of this patient where the case asks for it and there are any, else of the typical patient. */
+/** The typical patient's readings of the chosen option. */
 export function shownReadings(input: SummaryInput): ShownReadings | null {
   const chosen = chosenOption(input.case);
   const option = input.analysis.options.find(({ id }) => id === chosen?.id);
   if (!option) return null;
-  if (input.case.fit.use === "individual" && option.individual) {
-    return { option, readings: option.individual, patient: words.individual };
-  }
   return option.typical ? { option, readings: option.typical, patient: words.typical } : null;
 }
