@@ -15,6 +15,9 @@ export const UNIT_CODES = [
   "m",
   "cm",
   "[in_i]",
+  // area, and weight for it
+  "m2",
+  "kg/m2",
   // volume
   "L",
   "mL",
@@ -37,10 +40,14 @@ export const UNIT_CODES = [
   "mmol/L",
   "umol/L",
   "nmol/L",
+  // amount of substance
+  "mmol",
   // flow
   "L/h",
   "mg/h",
   "mL/min",
+  // flow for a standard body surface: no flow until it is de-indexed (core/patient)
+  "mL/min/{1.73_m2}",
   "L/h/kg",
   "L/kg",
   // rate

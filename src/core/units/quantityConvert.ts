@@ -1,16 +1,17 @@
 import { decimalOf, decimalScaled } from "./decimal.ts";
 import type { Quantity, UnitCode } from "./quantity.ts";
-import { UNIT_TABLE } from "./unitTable.ts";
+import { UNIT_TABLE, type UnitDimension } from "./unitTable.ts";
 
 /**
  * The number of `to` units in a quantity.
  *
  * same dimension: value · factor(from) / factor(to)
  * mass → molar concentration: nmol/L = ug/L · 1000 / M; molar → mass: ug/L = nmol/L · M / 1000
+ * mass → amount of substance: mmol = ug / (1000 · M); amount → mass: ug = mmol · 1000 · M
  *
  * @param quantity any finite value in any unit of the table
  * @param to unit wanted
- * @param molarMassGPerMol M, g/mol, greater than 0; needed only between mass and molar concentration
+ * @param molarMassGPerMol M, g/mol, greater than 0; needed only between mass and mole
  * @returns the value in `to`
  *
  * Outside: throws RangeError when the dimensions differ, when a mass ↔ molar conversion lacks the molar mass, and for a value that is not finite.
@@ -25,9 +26,8 @@ export function quantityConvert(quantity: Quantity, to: UnitCode, molarMassGPerM
   const target = UNIT_TABLE[to];
   if (source.dimension === target.dimension) return decimalScaled(value, source.factor, target.factor);
 
-  const isToMolar = source.dimension === "mass concentration" && target.dimension === "molar concentration";
-  const isToMass = source.dimension === "molar concentration" && target.dimension === "mass concentration";
-  if (!isToMolar && !isToMass) {
+  const steps = stepsPerMole(source.dimension, target.dimension);
+  if (!steps) {
     throw new RangeError(
       `to: ${quantity.unit} (${source.dimension}) cannot be converted to ${to} (${target.dimension})`,
     );
@@ -41,7 +41,20 @@ export function quantityConvert(quantity: Quantity, to: UnitCode, molarMassGPerM
   const up = molarMass.exponent >= 0 ? 10n ** BigInt(molarMass.exponent) : 1n;
   const down = molarMass.exponent < 0 ? 10n ** BigInt(-molarMass.exponent) : 1n;
   const molarTop = molarMass.digits * up;
-  return isToMolar
-    ? decimalScaled(value, source.factor * 1000n * down, target.factor * molarTop)
-    : decimalScaled(value, source.factor * molarTop, target.factor * 1000n * down);
+  return steps.isToMolar
+    ? decimalScaled(value, source.factor * steps.molar * down, target.factor * steps.mass * molarTop)
+    : decimalScaled(value, source.factor * steps.mass * molarTop, target.factor * steps.molar * down);
+}
+
+/** M gram make 1 mole: molar = mass · steps.molar / (M · steps.mass), in the table's smallest steps. null for any other pair. */
+function stepsPerMole(
+  from: UnitDimension,
+  to: UnitDimension,
+): { readonly isToMolar: boolean; readonly molar: bigint; readonly mass: bigint } | null {
+  const isFromMass = from === "mass" || from === "mass concentration";
+  const pair = isFromMass ? `${from}|${to}` : `${to}|${from}`;
+  // ug/L and nmol/L; ug and mmol.
+  if (pair === "mass concentration|molar concentration") return { isToMolar: isFromMass, molar: 1000n, mass: 1n };
+  if (pair === "mass|amount of substance") return { isToMolar: isFromMass, molar: 1n, mass: 1000n };
+  return null;
 }

@@ -12,6 +12,8 @@ const PIECES: Readonly<Record<string, string>> = {
   mo: "months",
   d: "days",
   umol: "micromol",
+  m2: "m\u00b2",
+  "{1.73_m2}": "1.73\u00a0m\u00b2",
   "1": "",
 };
 
@@ -19,12 +21,10 @@ const PIECES: Readonly<Record<string, string>> = {
 export function unitSpoken(unit: UnitCode, style: UnitStyle, microgram: MicrogramWord = "microgram"): string {
   if (unit === "/h") return "per h";
   const piece = (code: string): string => (code === "ug" ? microgram : (PIECES[code] ?? code));
-  const parts = unit.split("/").map((part) =>
-    part
-      .split(".")
-      .map(piece)
-      .join(style === "screen" ? "·" : " "),
-  );
+  // What stands in braces is a remark with a point in it, not a product.
+  const parts = unit
+    .split("/")
+    .map((part) => (part.startsWith("{") ? [part] : part.split(".")).map(piece).join(style === "screen" ? "·" : " "));
   return parts.join(style === "screen" ? "/" : " per ");
 }
 

@@ -3,11 +3,15 @@ import type { UnitCode } from "./quantity.ts";
 export type UnitDimension =
   | "mass"
   | "length"
+  | "area"
+  | "mass per area"
   | "volume"
   | "time"
   | "mass concentration"
   | "molar concentration"
+  | "amount of substance"
   | "flow"
+  | "flow per standard surface"
   | "mass rate"
   | "flow per mass"
   | "volume per mass"
@@ -27,6 +31,8 @@ interface UnitEntry {
  * molar concentration 1 nmol/L, flow 1 mL/h, number 0.01. So every factor is a whole number and no conversion starts from a rounded one.
  * Pound and inch: international avoirdupois pound 0.45359237 kg and inch 2.54 cm, exact by definition.
  * Year and month: UCUM's `a` (365.25 d) and `mo` (a twelfth of it).
+ * `mL/min/{1.73_m2}`: UCUM's braces hold a remark, so that by UCUM it is a mL/min. Here it is a dimension of its own:
+ * a clearance per 1.73 m2 read as a clearance is wrong by the patient's body surface.
  */
 export const UNIT_TABLE: Readonly<Record<UnitCode, UnitEntry>> = {
   kg: { dimension: "mass", factor: 1_000_000_000n },
@@ -37,6 +43,8 @@ export const UNIT_TABLE: Readonly<Record<UnitCode, UnitEntry>> = {
   m: { dimension: "length", factor: 10_000n },
   cm: { dimension: "length", factor: 100n },
   "[in_i]": { dimension: "length", factor: 254n },
+  m2: { dimension: "area", factor: 1n },
+  "kg/m2": { dimension: "mass per area", factor: 1n },
   L: { dimension: "volume", factor: 1_000n },
   mL: { dimension: "volume", factor: 1n },
   a: { dimension: "time", factor: 525_960n },
@@ -55,8 +63,10 @@ export const UNIT_TABLE: Readonly<Record<UnitCode, UnitEntry>> = {
   "mmol/L": { dimension: "molar concentration", factor: 1_000_000n },
   "umol/L": { dimension: "molar concentration", factor: 1_000n },
   "nmol/L": { dimension: "molar concentration", factor: 1n },
+  mmol: { dimension: "amount of substance", factor: 1n },
   "L/h": { dimension: "flow", factor: 1_000n },
   "mL/min": { dimension: "flow", factor: 60n },
+  "mL/min/{1.73_m2}": { dimension: "flow per standard surface", factor: 1n },
   "mg/h": { dimension: "mass rate", factor: 1n },
   "L/h/kg": { dimension: "flow per mass", factor: 1n },
   "L/kg": { dimension: "volume per mass", factor: 1n },

@@ -1,5 +1,7 @@
 import { UNIT_CODES, type UnitCode } from "./quantity.ts";
 
+const STANDARD_SURFACE = "{1.73_m2}";
+
 /** Spoken and written forms of the pieces a unit is made of, lower case; μ and µ have become u before the look-up. */
 const SPELLINGS: Readonly<Record<string, readonly string[]>> = {
   kg: ["kg", "kgs", "kilogram", "kilograms", "kilo", "kilos"],
@@ -11,6 +13,8 @@ const SPELLINGS: Readonly<Record<string, readonly string[]>> = {
   m: ["m", "metre", "metres", "meter", "meters"],
   cm: ["cm", "centimetre", "centimetres", "centimeter", "centimeters"],
   "[in_i]": ["[in_i]", "in", "inch", "inches"],
+  m2: ["m2", "m\u00b2"],
+  [STANDARD_SURFACE]: [STANDARD_SURFACE],
   L: ["l", "litre", "litres", "liter", "liters"],
   dL: ["dl", "decilitre", "decilitres", "deciliter", "deciliters"],
   mL: ["ml", "millilitre", "millilitres", "milliliter", "milliliters"],
@@ -43,14 +47,16 @@ export function unitWordRead(word: string): UnitCode | null {
     .replace(/[\u00b5\u03bc]/g, "u")
     .toLowerCase()
     .replace(/\s*\bper\b\s*/g, "/")
+    .replace(/(?<![\d{])1\.73\s*m[2\u00b2]/g, STANDARD_SURFACE)
     .replace(/\s*([/·*.])\s*/g, "$1")
     .replace(/[·*]|\s+/g, ".");
-  const parts = lower.split("/").map((part) =>
-    part
-      .split(".")
-      .map((piece) => (piece === "" ? "" : (CODE_OF.get(piece) ?? "?")))
-      .join("."),
-  );
+  const parts = lower
+    .split("/")
+    .map((part) =>
+      (part.startsWith("{") ? [part] : part.split("."))
+        .map((piece) => (piece === "" ? "" : (CODE_OF.get(piece) ?? "?")))
+        .join("."),
+    );
   const code = parts.join("/");
   return isUnitCode(code) ? code : null;
 }

@@ -38,6 +38,10 @@ describe("quantityRead takes", () => {
     ["300 mg·h/L", 300, "mg.h/L"],
     ["12 hours", 12, "h"],
     ["5 ml", 5, "mL"],
+    ["1.9 m\u00b2", 1.9, "m2"],
+    ["95 mL/min/1.73 m\u00b2", 95, "mL/min/{1.73_m2}"],
+    ["95 mL/min per 1.73m2", 95, "mL/min/{1.73_m2}"],
+    ["16.2 mmol", 16.2, "mmol"],
     ["50 %", 50, "%"],
     ["-3 mg", -3, "mg"],
   ] as const)("%j", (text, value, unit) => {
