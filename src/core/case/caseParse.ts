@@ -1,9 +1,8 @@
 import { recordIssues, schemaIssues } from "../medicine/index.ts";
-import { fail, type Result, succeed } from "../result/index.ts";
+import { fail, jsonRead, type Result, succeed } from "../result/index.ts";
 import { caseChecks } from "./caseChecks.ts";
 import { caseMigrate } from "./caseMigrate.ts";
 import { type Case, caseSchema } from "./caseSchema.ts";
-import { jsonRead } from "./jsonRead.ts";
 
 /** Reads a case file: the case, or every fault with its path. Nothing is guessed, mended or dropped. */
 export function caseParse(text: string): Result<Case> {

@@ -10,14 +10,14 @@ const dose = (index: unknown): string => `dose ${Number(index) + 1}`;
 /** Faults of a case file as a file, and of a case across its fields. */
 export const caseMessages: Readonly<Record<string, MessageFunction>> = {
   "file-empty": () => "The file is empty.",
-  "file-too-large": ({ mostMiB }) => `The file is larger than ${String(mostMiB)} MiB, which no case file is.`,
+  "file-too-large": ({ mostMiB }) => `The file is larger than ${String(mostMiB)} MiB, which no file of Ebbline is.`,
   "file-truncated": (data) =>
     `The file is cut off: it ends in the middle, at ${place(data)}. Look for a complete copy.`,
   "file-corrupt": (data) => `The file is damaged or not JSON: ${said(data.found)} does not belong at ${place(data)}.`,
   "file-lost-character": (data) =>
     `The file is damaged or not UTF-8: a character was lost at ${place(data)}. Look for an undamaged copy.`,
   "file-too-deep": (data) =>
-    `The file is nested more than ${String(data.most)} levels deep at ${place(data)}, which no case file is.`,
+    `The file is nested more than ${String(data.most)} levels deep at ${place(data)}, which no file of Ebbline is.`,
   "file-field-twice": (data) =>
     `The file states the field ${said(data.key)} twice, at ${place(data)}: which one counts can't be known.`,
   "file-field-refused": (data) =>

@@ -1,4 +1,4 @@
-import { fail, issue, type Result, succeed } from "../result/index.ts";
+import { fail, issue, type Result, succeed } from "./result.ts";
 
 /** Ours: a case with years of doses stays below a tenth of it. */
 export const FILE_BYTES_MOST = 5 * 1024 * 1024;

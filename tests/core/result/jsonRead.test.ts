@@ -1,7 +1,7 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
-import { FILE_BYTES_MOST, FILE_DEPTH_MOST, jsonRead } from "../../../src/core/case/jsonRead.ts";
 import { issueMessage } from "../../../src/core/messages/index.ts";
+import { FILE_BYTES_MOST, FILE_DEPTH_MOST, jsonRead } from "../../../src/core/result/index.ts";
 
 function fault(text: string): { code: string; sentence: string } {
   const read = jsonRead(text);
