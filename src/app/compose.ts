@@ -3,7 +3,7 @@ import kidney from "../../demo-data/kidney.ebbline.json";
 import modifiedRelease from "../../demo-data/modified-release.ebbline.json";
 import saturable from "../../demo-data/saturable.ebbline.json";
 import start from "../../demo-data/start.ebbline.json";
-import { derive } from "../core/analysis/index.ts";
+import { deriveSteps } from "../core/analysis/index.ts";
 import { BUILT_IN_RECORDS } from "../core/medicine/index.ts";
 import { createCaseRepository } from "../shell/storage/createCaseRepository.ts";
 import { DATABASE_NAME } from "../shell/storage/storageSchema.ts";
@@ -27,12 +27,15 @@ export function compose(): Workbench {
     newId,
     clock,
   });
-  const runner: AnalysisRunner = createAnalysisClient({
-    startWorker: () => new Worker(new URL("../shell/workers/analysis.worker.ts", import.meta.url), { type: "module" }),
-    loadDerive: async () => derive,
-  });
+  const makeRunner = (): AnalysisRunner =>
+    createAnalysisClient({
+      startWorker: () =>
+        new Worker(new URL("../shell/workers/analysis.worker.ts", import.meta.url), { type: "module" }),
+      loadDeriveSteps: async () => deriveSteps,
+    });
+  const [runner, fitter] = [makeRunner(), makeRunner()];
   const demos = { start, adjustment, modifiedRelease, saturable, kidney };
-  return createWorkbench({ repository, runner, clock, newId, demos, builtInRecords: BUILT_IN_RECORDS });
+  return createWorkbench({ repository, runner, fitter, clock, newId, demos, builtInRecords: BUILT_IN_RECORDS });
 }
 
 /** Reading the property alone can throw where the browser forbids storage. */

@@ -7,6 +7,7 @@ import { countedByProduct, laneDoses } from "./caseDoses.ts";
 import { crossCheckFigures } from "./crossCheckFigures.ts";
 import { curveTimes } from "./curveTimes.ts";
 import { finalModel } from "./finalModel.ts";
+import { individualSteps } from "./individualSteps.ts";
 import { kineticsChanges } from "./kineticsChanges.ts";
 import { levelResults } from "./levelResults.ts";
 import { modelHistory } from "./modelInputs.ts";
@@ -18,6 +19,8 @@ import { typicalModel } from "./typicalModel.ts";
 export const ENGINE = "ebbline-core 1";
 
 export interface DeriveOptions {
+  /** Fits the levels too; without it a case that has levels to fit says "pending". It takes longer than the rest together. */
+  readonly isFitted?: boolean;
   /** Makes the cross-check too: the second road to every figure. It takes many times as long, so a drag goes without. */
   readonly isCrossChecked?: boolean;
 }
@@ -26,7 +29,19 @@ export interface DeriveOptions {
  * The whole pipeline: a case in, everything the screens, the summary and `recompute` show out.
  * Pure and deterministic; the case's own now line is the only clock.
  */
-export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = {}): Analysis {
+export function derive(value: Case, options: DeriveOptions = {}): Analysis {
+  const steps = deriveSteps(value, options);
+  for (;;) {
+    const step = steps.next();
+    if (step.done) return step.value;
+  }
+}
+
+/** The same in steps, for a caller that has to listen in between: yields the part of the fit done, 0 to 1. */
+export function* deriveSteps(
+  value: Case,
+  { isFitted = false, isCrossChecked = false }: DeriveOptions = {},
+): Generator<number, Analysis> {
   // 1. Patient: size and kidney function at the now line.
   const patient = patientFigures(value);
 
@@ -49,10 +64,10 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
   );
 
   // 6. Levels: measured beside predicted.
-  const levels = levelResults(value, given.marks, typical, clock.originMs);
+  const typicalLevels = levelResults(value, given.marks, typical, clock.originMs);
 
   // 7. Readings: found on the segments of the curve, never on the plotting grid.
-  const options = lanes.map(({ option, marks }, i) => ({
+  const typicalOptions = lanes.map(({ option, marks }, i) => ({
     id: option.id,
     doses: marks,
     curve: optionCurves[i] ?? null,
@@ -68,10 +83,22 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
     band: null,
   }));
 
-  // 8. Cross-check: the displayed profile and exposure by another road.
+  // 8. This patient: what the levels make of it, with bands and intervals from the draws.
+  const individual = yield* individualSteps(value, {
+    typical,
+    given: given.marks,
+    levels: typicalLevels,
+    options: typicalOptions,
+    givenUntilH: until,
+    clock,
+    isFitted,
+  });
+  const { levels, options } = individual;
+
+  // 9. Cross-check: the displayed profile and exposure by another road.
   const crossCheck = isCrossChecked && typical ? crossCheckFigures(value, typical, given.marks, options, clock) : null;
 
-  // 9. Concerns: what a human has to look at, gravest first.
+  // 10. Concerns: what a human has to look at, gravest first.
   const concerns = caseConcerns({
     case: value,
     clock,
@@ -84,11 +111,12 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
       ...lanes.flatMap(({ option, issues }) => issues.map((entry) => ({ ...entry, lane: option.id }))),
     ],
     levels,
+    fit: { kind: "none", reason: "no-levels" },
     options,
     crossCheck,
   });
 
-  // 10. Fingerprint: the inputs that matter and the engine that turned them into figures.
+  // 11. Fingerprint: the inputs that matter and the engine that turned them into figures.
   const fingerprint = caseFingerprint(value, ENGINE);
 
   const { originMs, nowH, fromH, toH, readingsToH, midnightsH } = clock;
@@ -96,10 +124,10 @@ export function derive(value: Case, { isCrossChecked = false }: DeriveOptions = 
     clock: { originMs, timeZone: value.timeZone, nowH, fromH, toH, readingsToH, midnightsH },
     patient,
     typical,
-    fit: { kind: "none", reason: "no-levels" },
+    fit: individual.fit,
     given: given.marks,
     givenCurve,
-    givenBand: null,
+    givenBand: individual.givenBand,
     levels,
     options,
     concerns,

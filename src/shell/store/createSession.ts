@@ -73,7 +73,7 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
   }
 
   let autosave = makeAutosave(start.savedAt);
-  const feed = createAnalysisFeed(context.runner, (analysis) => put({ analysis }));
+  const feed = createAnalysisFeed(context, (analysis) => put({ analysis }));
 
   function makeAutosave(savedAt: number | null) {
     return createAutosave({

@@ -32,6 +32,10 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
         notices += 1;
         set({ notices: [...get().notices, { id: notices, gravity, issues }] });
       },
+      offer(gravity, issues, undo) {
+        notices += 1;
+        set({ notices: [...get().notices, { id: notices, gravity, issues, undo }] });
+      },
       inTurn(work) {
         const result = turn.then(work);
         turn = result.catch(() => {});
@@ -54,6 +58,7 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
       entries: [],
       medicines: setting.builtInRecords,
       ownMedicines: [],
+      recordEdits: {},
       wardWindows: [],
       demos: demos.good,
       settings: settingsRead(undefined),
@@ -73,6 +78,10 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
       exportFile: cases.exportFile,
       exportStored: cases.exportStored,
       importMedicine: ward.importMedicine,
+      exportMedicine: ward.exportMedicine,
+      copyMedicine: ward.copyMedicine,
+      keepRecordEdit: ward.keepRecordEdit,
+      saveRecordEdit: ward.saveRecordEdit,
       removeMedicine: ward.removeMedicine,
       saveWindow: ward.saveWindow,
       removeWindow: ward.removeWindow,
@@ -86,6 +95,12 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
 
       notify: (gravity, issues) => context.say(gravity, ...issues),
       dismiss: (id) => set({ notices: get().notices.filter((each) => each.id !== id) }),
+      async undoNotice(id) {
+        const undo = get().notices.find((each) => each.id === id)?.undo;
+        // Taken off first: pressed twice, it is done once.
+        set({ notices: get().notices.filter((each) => each.id !== id) });
+        await undo?.();
+      },
       offerUpdate(apply) {
         takeUpdate = apply;
         set({ update: "waiting" });

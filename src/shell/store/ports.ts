@@ -83,9 +83,17 @@ export type AnalysisAnswer =
   /** "deadline": stopped because it took too long. */
   | { readonly ok: false; readonly reason: "deadline" | "failed"; readonly detail: string };
 
+/** How far to go: the typical patient at once, the levels fitted, the second road. */
+export interface AnalysisDepth {
+  readonly isFitted?: boolean;
+  readonly isCrossChecked?: boolean;
+  /** Part done, 0 to 1, of work that takes its time. */
+  readonly onProgress?: (part: number) => void;
+}
+
 export interface AnalysisRunner {
-  /** Latest wins: a call made while one runs replaces what waits. `null`: overtaken by a later call before it began. */
-  run(value: Case, options?: { readonly isCrossChecked?: boolean }): Promise<AnalysisAnswer | null>;
+  /** Latest wins: a later call takes the place of what waits or runs. `null`: overtaken by a later call. */
+  run(value: Case, options?: AnalysisDepth): Promise<AnalysisAnswer | null>;
   /** "page": the worker could not start, and the page itself does the work. */
   readonly where: "worker" | "page";
 }

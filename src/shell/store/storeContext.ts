@@ -8,6 +8,8 @@ import type { Notice, WorkbenchState } from "./workbenchState.ts";
 export interface WorkbenchSetting {
   readonly repository: CaseRepository;
   readonly runner: AnalysisRunner;
+  /** For the fits, which take longer: one of its own, so that the curve under a drag never waits for one. */
+  readonly fitter: AnalysisRunner;
   /** Epoch milliseconds. */
   readonly clock: () => number;
   readonly newId: () => string;
@@ -21,6 +23,8 @@ export interface StoreContext extends WorkbenchSetting {
   get(): WorkbenchState;
   set(change: Partial<WorkbenchState>): void;
   say(gravity: Notice["gravity"], ...issues: readonly Issue[]): void;
+  /** Says what was done, with the way back. */
+  offer(gravity: Notice["gravity"], issues: readonly Issue[], undo: () => Promise<void>): void;
   /** The open case's own machinery; null when none is open. */
   session: Session | null;
   /** Why this tab's storage is at an end, once it is: only a reload helps. */

@@ -2,6 +2,7 @@ import type { Analysis } from "../../core/analysis/index.ts";
 import type { Case, EditArguments, EditName, TargetWindow } from "../../core/case/index.ts";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
 import type { Issue, Result } from "../../core/result/index.ts";
+import type { MedicineState } from "./medicineState.ts";
 import type { CaseEntry, StorageState } from "./ports.ts";
 
 /** The state of the open workbench and what can be done to it. Screens read this through view/useWorkbench.ts. */
@@ -30,6 +31,10 @@ export interface AnalysisState {
   readonly revision: number;
   /** True while `result` is that of a preview: shown, not to be printed. */
   readonly ofPreview: boolean;
+  /** What the levels make of this patient is still that of an earlier state of the case: shown, marked, not to be printed. */
+  readonly isFitStale: boolean;
+  /** Part done of a fit that takes its time, 0 to 1; null when none runs. */
+  readonly fitProgress: number | null;
   readonly status: "running" | "fresh" | "failed";
   /** A sentence, ready to show. */
   readonly failure: string | null;
@@ -52,6 +57,8 @@ export interface Notice {
   readonly id: number;
   readonly gravity: "stop" | "check" | "note";
   readonly issues: readonly Issue[];
+  /** The way back, offered with what was done. */
+  readonly undo?: () => Promise<void>;
 }
 
 /** A bundled demonstration, as offered on the cases screen. */
@@ -71,7 +78,7 @@ export interface WardWindow {
   readonly window: TargetWindow;
 }
 
-export interface WorkbenchState {
+export interface WorkbenchState extends MedicineState {
   readonly boot: { readonly kind: "opening" } | StorageState;
   readonly screen: Screen;
   readonly entries: readonly CaseEntry[];
@@ -102,9 +109,6 @@ export interface WorkbenchState {
   /** A stored case as a file, without opening it. */
   exportStored(id: string): Promise<Result<{ readonly name: string; readonly text: string }>>;
 
-  /** A ward's own record from the text of a JSON file; stored only if the whole file is good. A built-in id is refused. */
-  importMedicine(name: string, text: string): Promise<Result<MedicineRecord>>;
-  removeMedicine(id: string): Promise<Result<null>>;
   saveWindow(medicine: string, id: string, window: TargetWindow): Promise<Result<null>>;
   removeWindow(medicine: string, id: string): Promise<Result<null>>;
 
@@ -118,6 +122,8 @@ export interface WorkbenchState {
   changeSettings(change: Partial<Settings>): Promise<void>;
   notify(gravity: Notice["gravity"], issues: readonly Issue[]): void;
   dismiss(id: number): void;
+  /** Takes the way back that a notice offers. */
+  undoNotice(id: number): Promise<void>;
   /** A new version of the program waits; `applyUpdate` saves first, then takes it. */
   offerUpdate(apply: () => void): void;
   applyUpdate(): Promise<void>;

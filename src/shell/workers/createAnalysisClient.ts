@@ -1,10 +1,14 @@
-import type { Analysis } from "../../core/analysis/index.ts";
+import type { Analysis, DeriveOptions } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { analysisAnswer, type Derive, failureText } from "./analysisAnswer.ts";
-import type { AnalysisQuestion, AnalysisReply } from "./analysisMessages.ts";
+import { analysisAnswer, type DeriveSteps, failureText } from "./analysisAnswer.ts";
+import type { AnalysisAbandon, AnalysisQuestion, AnalysisReply } from "./analysisMessages.ts";
+import { pauseForMessages } from "./pauseForMessages.ts";
 
-/** As long as one analysis may take before the worker is stopped and started again, ms. A full case takes well below a second. */
+/** As long as an analysis may take without a sign of progress before the worker is stopped and started again, ms. */
 export const ANALYSIS_DEADLINE = 10_000;
+
+/** So long an overtaken analysis may go on: most are done by then, and something follows a drag. ms */
+export const ABANDON_AFTER = 600;
 
 /** What is used of a Worker. */
 export interface WorkerPort {
@@ -22,21 +26,31 @@ type Answer =
 interface Job {
   readonly question: AnalysisQuestion;
   readonly answer: (answer: Answer | null) => void;
+  readonly onProgress: (part: number) => void;
+  /** When its work began, ms. */
+  since: number;
+  /** It has been said that its answer is no longer wanted. */
+  isAbandoned: boolean;
+}
+
+export interface RunOptions extends DeriveOptions {
+  /** Part done, 0 to 1, of work that takes its time. */
+  readonly onProgress?: (part: number) => void;
 }
 
 export interface AnalysisClient {
-  run(value: Case, options?: { readonly isCrossChecked?: boolean }): Promise<Answer | null>;
+  run(value: Case, options?: RunOptions): Promise<Answer | null>;
   readonly where: "worker" | "page";
   stop(): void;
 }
 
 /**
- * Runs analyses in a worker: one at a time, the latest waiting, those overtaken while they waited answered `null`. One that passes the deadline
- * is stopped with its worker. A worker that cannot start at all is given up, and the page does the same work with the same code.
+ * Runs analyses in a worker: one at a time, the latest waiting, those overtaken answered `null`: at once while they waited, and
+ * while they run once they have run for ABANDON_AFTER. One that passes the deadline is stopped with its worker. A worker that cannot start at all is given up, and the page does the same work with the same code.
  */
 export function createAnalysisClient(setting: {
   readonly startWorker: () => WorkerPort;
-  readonly loadDerive: () => Promise<Derive>;
+  readonly loadDeriveSteps: () => Promise<DeriveSteps>;
   readonly deadline?: number;
 }): AnalysisClient {
   const deadline = setting.deadline ?? ANALYSIS_DEADLINE;
@@ -53,11 +67,12 @@ export function createAnalysisClient(setting: {
     running = waiting;
     waiting = null;
     if (!running) return;
+    running.since = performance.now();
     if (isOnPage) void runOnPage(running);
     else runInWorker(running);
   }
 
-  function finish(answer: Answer): void {
+  function finish(answer: Answer | null): void {
     clearTimeout(timer);
     const job = running;
     running = null;
@@ -76,6 +91,11 @@ export function createAnalysisClient(setting: {
       else goToPage(job);
       return;
     }
+    startTimer(job);
+  }
+
+  function startTimer(job: Job): void {
+    clearTimeout(timer);
     timer = setTimeout(() => {
       dropWorker();
       if (hasStarted) finish({ ok: false, reason: "deadline", detail: `${deadline} ms` });
@@ -83,16 +103,30 @@ export function createAnalysisClient(setting: {
     }, deadline);
   }
 
+  function hear(reply: AnalysisReply): void {
+    if ("started" in reply || !running || reply.sequence !== running.question.sequence) return;
+    if ("progress" in reply) {
+      if (!isOnPage) startTimer(running);
+      running.onProgress(reply.progress);
+      abandonIfOvertaken(running);
+    } else if ("abandoned" in reply) finish(null);
+    else if ("analysis" in reply) finish({ ok: true, analysis: reply.analysis });
+    else finish({ ok: false, reason: "failed", detail: reply.failure });
+  }
+
+  /** Overtaken and long at work: it stops at the end of its slice. */
+  function abandonIfOvertaken(job: Job): void {
+    if (!waiting || job.isAbandoned || performance.now() - job.since < ABANDON_AFTER) return;
+    job.isAbandoned = true;
+    const message: AnalysisAbandon = { abandon: job.question.sequence };
+    if (!isOnPage) worker?.postMessage(message);
+  }
+
   function listen(port: WorkerPort): WorkerPort {
     port.onmessage = ({ data }: MessageEvent<AnalysisReply>) => {
       if (port !== worker) return;
       hasStarted = true;
-      if ("started" in data || data.sequence !== running?.question.sequence) return;
-      finish(
-        "analysis" in data
-          ? { ok: true, analysis: data.analysis }
-          : { ok: false, reason: "failed", detail: data.failure },
-      );
+      hear(data);
     };
     const broken = (detail: string): void => {
       if (port !== worker) return;
@@ -122,25 +156,35 @@ export function createAnalysisClient(setting: {
 
   async function runOnPage(job: Job): Promise<void> {
     try {
-      const derive = await setting.loadDerive();
-      const { reply } = analysisAnswer(job.question, derive);
-      finish(
-        "analysis" in reply
-          ? { ok: true, analysis: reply.analysis }
-          : { ok: false, reason: "failed", detail: "failure" in reply ? reply.failure : "" },
-      );
+      const deriveSteps = await setting.loadDeriveSteps();
+      await analysisAnswer(job.question, {
+        deriveSteps,
+        say: (reply) => {
+          if (job === running) hear(reply);
+        },
+        isAbandoned: () => job.isAbandoned,
+        pause: pauseForMessages,
+        clock: () => performance.now(),
+      });
     } catch (error) {
       finish({ ok: false, reason: "failed", detail: failureText(error) });
     }
   }
 
   return {
-    run(value, { isCrossChecked = false } = {}) {
+    run(value, { onProgress = () => {}, ...options } = {}) {
       return new Promise((resolve) => {
         waiting?.answer(null);
         sequence += 1;
-        waiting = { question: { sequence, case: value, isCrossChecked }, answer: resolve };
-        if (!running) next();
+        waiting = {
+          question: { sequence, case: value, options },
+          answer: resolve,
+          onProgress,
+          since: 0,
+          isAbandoned: false,
+        };
+        if (running) abandonIfOvertaken(running);
+        else next();
       });
     },
     get where() {

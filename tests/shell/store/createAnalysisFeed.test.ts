@@ -1,4 +1,5 @@
 import { describe, expect, test } from "vitest";
+import type { Analysis, FitState } from "../../../src/core/analysis/index.ts";
 import { startOpen, turns } from "./workbenchSupport.ts";
 
 async function started() {
@@ -202,5 +203,98 @@ describe("a drag", () => {
     state().edit("caseRename", { label: "x".repeat(500) });
     expect(open()).toMatchObject({ value: { label: "zero" }, preview: null, undo: [] });
     expect(state().notices).toMatchObject([{ gravity: "check", issues: [{ path: ["label"] }] }]);
+  });
+});
+
+describe("this patient", () => {
+  const CLOCK = { originMs: 0 } as Analysis["clock"];
+  const PENDING: Partial<Analysis> = { fit: { kind: "pending" }, clock: CLOCK, levels: [], options: [] };
+  const fitOf = (seed: number): Partial<Analysis> => ({
+    ...PENDING,
+    fit: { kind: "fitted", fit: { seed } } as unknown as FitState,
+  });
+  async function fitting() {
+    const made = await started();
+    const { runner, fitter, open } = made;
+    runner.answer(0, "typical 0", PENDING);
+    await turns();
+    const fitShown = () => {
+      const { result, isFitStale, fitProgress } = open().analysis;
+      const state = result?.fit;
+      return [state?.kind === "fitted" ? state.fit.seed : (state?.kind ?? null), isFitStale, fitProgress];
+    };
+    return { ...made, fitShown, fitter };
+  }
+
+  test("follows the typical patient, with progress, and is then fresh", async () => {
+    const { fitter, shown, fitShown } = await fitting();
+    expect([...shown(), ...fitShown()]).toEqual(["typical 0", 1, "fresh", false, "pending", false, null]);
+    expect(fitter.asked.map(({ options }) => options.isFitted)).toEqual([true]);
+    fitter.asked[0]!.options.onProgress?.(0.4);
+    expect(fitShown()).toEqual(["pending", false, 0.4]);
+    fitter.answer(0, "fitted 0", fitOf(1));
+    await turns();
+    expect([...shown(), ...fitShown()]).toEqual(["fitted 0", 1, "fresh", false, 1, false, null]);
+  });
+
+  test("of the state before stays in sight, marked stale, until its own is there", async () => {
+    const { runner, fitter, rename, shown, fitShown } = await fitting();
+    fitter.answer(0, "fitted 0", fitOf(1));
+    await turns();
+    rename("one");
+    runner.answer(1, "typical 1", PENDING);
+    await turns();
+    expect([...shown(), ...fitShown()]).toEqual(["typical 1", 2, "fresh", false, 1, true, null]);
+    fitter.answer(1, "fitted 1", fitOf(2));
+    await turns();
+    expect([...shown(), ...fitShown()]).toEqual(["fitted 1", 2, "fresh", false, 2, false, null]);
+  });
+
+  test("come late renews what stands in its place, and never an older one a newer", async () => {
+    const { runner, fitter, rename, shown, fitShown } = await fitting();
+    rename("one");
+    runner.answer(1, "typical 1", PENDING);
+    await turns();
+    rename("two");
+    runner.answer(2, "typical 2", PENDING);
+    await turns();
+    fitter.answer(1, "fitted 1", fitOf(2));
+    await turns();
+    expect([...shown(), ...fitShown()]).toEqual(["typical 2", 3, "fresh", false, 2, true, null]);
+    fitter.answer(0, "fitted 0", fitOf(1));
+    await turns();
+    expect(fitShown()).toEqual([2, true, null]);
+  });
+
+  test("is not carried over to another clock", async () => {
+    const { runner, fitter, rename, fitShown } = await fitting();
+    fitter.answer(0, "fitted 0", fitOf(1));
+    await turns();
+    rename("one");
+    runner.answer(1, "typical 1", { ...PENDING, clock: { originMs: 5 } as Analysis["clock"] });
+    await turns();
+    expect(fitShown()).toEqual(["pending", false, null]);
+  });
+
+  test("that fails leaves the typical patient, and says why", async () => {
+    const { fitter, shown, open } = await fitting();
+    fitter.asked[0]!.answer.resolve({ ok: false, reason: "failed", detail: "RangeError: omega" });
+    await turns();
+    expect(shown()).toEqual(["typical 0", 1, "failed", false]);
+    expect(open().analysis.failure).toContain("RangeError: omega");
+  });
+
+  test("of a cancelled drag is dropped, and that of the case is asked for if it was not there yet", async () => {
+    const { runner, fitter, state, shown, fitShown } = await fitting();
+    state().previewEdit("caseRename", { label: "p1" });
+    runner.answer(1, "typical p1", PENDING);
+    await turns();
+    state().cancelPreview();
+    fitter.answer(1, "fitted p1", fitOf(9));
+    await turns();
+    expect([...shown(), ...fitShown()]).toEqual(["typical 0", 1, "fresh", false, "pending", false, null]);
+    fitter.answer(2, "fitted 0", fitOf(1));
+    await turns();
+    expect([...shown(), ...fitShown()]).toEqual(["fitted 0", 1, "fresh", false, 1, false, null]);
   });
 });

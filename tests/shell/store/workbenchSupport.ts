@@ -7,10 +7,12 @@ import { MemoryRepository } from "./memoryRepository.ts";
 
 export async function startWorkbench(change: Partial<WorkbenchSetting> = {}, repository = new MemoryRepository()) {
   const runner = new HandRunner();
+  const fitter = new HandRunner();
   let ids = 0;
   const workbench = createWorkbench({
     repository,
     runner,
+    fitter,
     clock: () => 5_000,
     newId: () => `new-${++ids}`,
     demos: {},
@@ -18,7 +20,7 @@ export async function startWorkbench(change: Partial<WorkbenchSetting> = {}, rep
     ...change,
   });
   await workbench.getState().start();
-  return { workbench, repository, runner, state: workbench.getState, open: () => workbench.getState().open! };
+  return { workbench, repository, runner, fitter, state: workbench.getState, open: () => workbench.getState().open! };
 }
 
 /** Started, with a stored case "a" open. */

@@ -1,8 +1,13 @@
 import { readFileSync } from "node:fs";
 import { afterEach, beforeEach, describe, expect, test, vi } from "vitest";
-import { type Analysis, derive } from "../../../src/core/analysis/index.ts";
+import { type Analysis, derive, deriveSteps } from "../../../src/core/analysis/index.ts";
 import { type Case, caseParse } from "../../../src/core/case/index.ts";
-import { ANALYSIS_DEADLINE, createAnalysisClient } from "../../../src/shell/workers/createAnalysisClient.ts";
+import type { DeriveSteps } from "../../../src/shell/workers/analysisAnswer.ts";
+import {
+  ABANDON_AFTER,
+  ANALYSIS_DEADLINE,
+  createAnalysisClient,
+} from "../../../src/shell/workers/createAnalysisClient.ts";
 import { caseOf } from "../storage/fakeBrowser.ts";
 import { FakeWorker } from "./fakeWorker.ts";
 
@@ -15,13 +20,17 @@ afterEach(() => vi.useRealTimers());
 
 const last = () => workers.at(-1)!;
 const marked = (value: Case) => ({ fingerprint: value.id }) as unknown as Analysis;
-function client(loadDerive = async (): Promise<(value: Case) => Analysis> => marked) {
+// biome-ignore lint/correctness/useYield: done in one step
+function* markedSteps(value: Case): Generator<number, Analysis> {
+  return marked(value);
+}
+function client(loadDeriveSteps = async (): Promise<DeriveSteps> => markedSteps) {
   return createAnalysisClient({
     startWorker: () => {
       workers.push(new FakeWorker());
       return last();
     },
-    loadDerive,
+    loadDeriveSteps,
   });
 }
 
@@ -45,6 +54,48 @@ describe("latest wins", () => {
     last().say({ sequence: 99, analysis: marked(caseOf("x")) });
     last().answer(marked);
     expect(await answer).toMatchObject({ analysis: { fingerprint: "a" } });
+  });
+});
+
+describe("long work", () => {
+  test("tells how far it is, and is given as long as it does", async () => {
+    const parts: number[] = [];
+    const made = client();
+    const answer = made.run(caseOf("a"), { isFitted: true, onProgress: (part) => parts.push(part) });
+    expect(last().asked[0]!.options).toEqual({ isFitted: true });
+    last().say({ sequence: 1, progress: 0.2 });
+    await vi.advanceTimersByTimeAsync(ANALYSIS_DEADLINE - 1);
+    last().say({ sequence: 1, progress: 0.6 });
+    await vi.advanceTimersByTimeAsync(ANALYSIS_DEADLINE - 1);
+    last().answer(marked);
+    expect(await answer).toMatchObject({ ok: true });
+    expect(parts).toEqual([0.2, 0.6]);
+  });
+
+  test("overtaken, it may end in good time; after that it is told to stop, once", async () => {
+    const made = client();
+    const first = made.run(caseOf("a"));
+    const second = made.run(caseOf("b"));
+    last().say({ sequence: 1, progress: 0.1 });
+    expect(last().abandoned).toEqual([]);
+    await vi.advanceTimersByTimeAsync(ABANDON_AFTER);
+    last().say({ sequence: 1, progress: 0.2 });
+    last().say({ sequence: 1, progress: 0.3 });
+    expect(last().abandoned).toEqual([1]);
+    last().say({ sequence: 1, abandoned: true });
+    expect(await first).toBeNull();
+    last().answer(marked);
+    expect(await second).toMatchObject({ ok: true, analysis: { fingerprint: "b" } });
+    expect(workers).toHaveLength(1);
+  });
+
+  test("long at work already, it is told to stop by the question that overtakes it", async () => {
+    const made = client();
+    void made.run(caseOf("a"));
+    await vi.advanceTimersByTimeAsync(ABANDON_AFTER);
+    expect(last().abandoned).toEqual([]);
+    void made.run(caseOf("b"));
+    expect(last().abandoned).toEqual([1]);
   });
 });
 
@@ -114,7 +165,7 @@ describe("a worker that can't start", () => {
       startWorker: () => {
         throw new DOMException("no workers", "SecurityError");
       },
-      loadDerive: async () => marked,
+      loadDeriveSteps: async () => markedSteps,
     });
     expect(await made.run(caseOf("a"))).toMatchObject({ ok: true, analysis: { fingerprint: "a" } });
     expect(made.where).toBe("page");
@@ -142,7 +193,7 @@ test.each(["start", "adjustment"])("worker, page and direct call give the same a
   const inWorker = client();
   const answered = inWorker.run(parsed.value);
   last().answer(derive);
-  const onPage = client(async () => derive);
+  const onPage = client(async () => deriveSteps);
   const fallback = onPage.run(parsed.value);
   last().break();
   const direct = { ok: true, analysis: derive(parsed.value) };

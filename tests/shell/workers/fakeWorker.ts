@@ -1,7 +1,7 @@
 import type { Analysis } from "../../../src/core/analysis/index.ts";
 import type { Case } from "../../../src/core/case/index.ts";
-import { analysisAnswer } from "../../../src/shell/workers/analysisAnswer.ts";
-import type { AnalysisQuestion, AnalysisReply } from "../../../src/shell/workers/analysisMessages.ts";
+import { arrayBuffers, failureText } from "../../../src/shell/workers/analysisAnswer.ts";
+import type { AnalysisAbandon, AnalysisQuestion, AnalysisReply } from "../../../src/shell/workers/analysisMessages.ts";
 import type { WorkerPort } from "../../../src/shell/workers/createAnalysisClient.ts";
 
 /** The page's end of a worker in this process: messages are copied and buffers handed over as a real port does; what it answers, and when, is the test's. */
@@ -10,10 +10,13 @@ export class FakeWorker implements WorkerPort {
   onerror: ((event: ErrorEvent) => void) | null = null;
   onmessageerror: ((event: MessageEvent) => void) | null = null;
   readonly asked: AnalysisQuestion[] = [];
+  readonly abandoned: number[] = [];
   isTerminated = false;
 
   postMessage(message: unknown): void {
-    this.asked.push(structuredClone(message) as AnalysisQuestion);
+    const copy = structuredClone(message) as AnalysisQuestion | AnalysisAbandon;
+    if ("abandon" in copy) this.abandoned.push(copy.abandon);
+    else this.asked.push(copy);
   }
 
   terminate(): void {
@@ -29,10 +32,15 @@ export class FakeWorker implements WorkerPort {
     this.say({ started: true });
   }
 
-  /** Answers the last question as analysis.worker.ts does. */
+  /** Answers the last question, in one go. */
   answer(derive: (value: Case) => Analysis): void {
-    const { reply, transfer } = analysisAnswer(this.asked.at(-1)!, derive);
-    this.say(reply, transfer);
+    const { sequence, case: value } = this.asked.at(-1)!;
+    try {
+      const analysis = derive(value);
+      this.say({ sequence, analysis }, arrayBuffers(analysis));
+    } catch (error) {
+      this.say({ sequence, failure: failureText(error) });
+    }
   }
 
   break(message = "boom"): void {

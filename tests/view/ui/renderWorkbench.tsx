@@ -15,7 +15,7 @@ configure({ asyncUtilTimeout: 10_000 });
 /** The real analysis, at once and in the page. */
 const runner: AnalysisRunner = {
   where: "page",
-  run: async (value) => ({ ok: true, analysis: derive(value) }),
+  run: async (value, options) => ({ ok: true, analysis: derive(value, options) }),
 };
 
 interface Setting {
@@ -32,6 +32,7 @@ export async function renderWorkbench(screen: ReactNode, setting: Setting = {}) 
   const workbench = createWorkbench({
     repository,
     runner,
+    fitter: runner,
     clock: () => Date.parse("2026-03-04T12:00:00Z"),
     newId: () => `new-${++ids}`,
     demos: setting.demos ?? {},
