@@ -76,7 +76,8 @@ const SMALLEST_RADIUS = 1e-14;
  * returned Hessian is null
  * Outside: "not-converged" with the best point met and the reason in `end`. Throws RangeError for an empty start, a start or scale
  * of another size, or a tolerance or scale that is not above 0.
- * Accuracy: quadratic convergence, x to about stepTolerance²; limited by the rounding of the gradient over the curvature
+ * Accuracy: x to stepTolerance, mostly to its square (convergence is quadratic); no better than the rounding of the gradient over
+ * the curvature
  * (tests/core/numerics/minimise.test.ts, tests/outside/theophLeastSquares.test.ts: 1e-9 in the parameters).
  * Source: trust-region Newton method: Moré & Sorensen 1983 (see trustRegionStep); scaling by the largest diagonal: Moré, The
  * Levenberg–Marquardt algorithm, in Numerical Analysis, ed. Watson, 1978, 105–116 (both from memory, unverified); written here.

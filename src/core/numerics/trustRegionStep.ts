@@ -22,7 +22,7 @@ export interface TrustRegionStep {
  * @param gradient g
  * @param radius above 0
  * @returns the step, the fall the model promises, and whether it was cut
- * Outside: not checked. A step of 0 only where g is 0 and H has no negative eigenvalue.
+ * Outside: not checked; eigenvalues and slopes whose squares are below the smallest double are not meant. A step of 0 only where g is 0 and H has no negative eigenvalue.
  * Accuracy: ‖p‖ = radius to 1e-12 where cut (tests/core/numerics/trustRegionStep.test.ts).
  * Source: Moré & Sorensen, Computing a trust region step, SIAM J. Sci. Stat. Comput. 4 (1983) 553–572 (from memory, unverified).
  * @example trustRegionStep(symmetricEigen([[2, 0], [0, 4]]), [-2, -4], 10).step // [1, 1]
