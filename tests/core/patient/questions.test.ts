@@ -166,7 +166,7 @@ describe("ageQuestion", () => {
       12,
       "improbable",
       "age-under-adult",
-      "An age of 12 years is below 18 years: the formulas here are for adults. Is it meant?",
+      "An age of 12 years is below 18 years: the clearance and ideal weight here are for adults. Is it meant?",
     ],
     [1962, "impossible", "age-birth-year", "1962 looks like a year of birth: write the age in years."],
     [131, "impossible", "age-impossible", "131 years is no age: write one above 0, up to 130 years."],
