@@ -1,5 +1,6 @@
-import { issueMessage } from "../core/messages/index.ts";
+import { issueMessage, recordWords } from "../core/messages/index.ts";
 import "./NoticeStack.css";
+import { Button } from "./ui/Button.tsx";
 import { Notice } from "./ui/Notice.tsx";
 import { useWorkbench } from "./useWorkbench.ts";
 
@@ -7,6 +8,7 @@ import { useWorkbench } from "./useWorkbench.ts";
 export function NoticeStack() {
   const notices = useWorkbench((state) => state.notices);
   const dismiss = useWorkbench((state) => state.dismiss);
+  const undoNotice = useWorkbench((state) => state.undoNotice);
   return (
     <section className="notice-stack" aria-label="Notices" aria-live="polite">
       {notices.map((notice) => (
@@ -14,6 +16,11 @@ export function NoticeStack() {
           {notice.issues.map((issue, i) => (
             <p key={i}>{issueMessage(issue)}</p>
           ))}
+          {notice.undo ? (
+            <div>
+              <Button onPress={() => void undoNotice(notice.id)}>{recordWords.undo}</Button>
+            </div>
+          ) : null}
         </Notice>
       ))}
     </section>

@@ -14,7 +14,9 @@ export {
   kineticsFormulas,
   kineticsSchema,
 } from "./kineticsKinds.ts";
+export * from "./edits/recordEdits.ts";
 export { medicineParse, recordIssues } from "./medicineParse.ts";
+export { medicineRead } from "./medicineRead.ts";
 export {
   type MedicineRecord,
   type Product,

@@ -1,12 +1,16 @@
 export { benchWords } from "./benchWords.ts";
-export { CONCERN_CODES, type ConcernWords, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
+export type { ConcernWords } from "./concernFigures.ts";
+export { CONCERN_CODES, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
 export { editLabel } from "./editWords.ts";
 export * from "./entryWords.ts";
 export { amountsWords, eventEffectWords, eventLine, eventName, eventWords, isEventMoment } from "./eventWords.ts";
 export * from "./fieldWords.ts";
+export { FIT_CONCERN_CODES, fitFailureSentence, fitLine, noFitSentence } from "./fitMessages.ts";
+export { chanceWords, fitWords, influenceWords, symbolWords, taughtSentence, taughtWord } from "./fitWords.ts";
 export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
 export { laneLineWords } from "./laneWords.ts";
 export type { MessageFunction } from "./messageFunction.ts";
+export { recordWords } from "./recordWords.ts";
 export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./regimenWords.ts";
 export { richWords } from "./richWords.ts";
 export * from "./screenWords.ts";

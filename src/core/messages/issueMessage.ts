@@ -7,6 +7,7 @@ import type { MessageFunction } from "./messageFunction.ts";
 import { noncompartmentalMessages } from "./noncompartmentalMessages.ts";
 import { numberMessages } from "./numberMessages.ts";
 import { patientMessages } from "./patientMessages.ts";
+import { recordMessages } from "./recordMessages.ts";
 import { regimenMessages } from "./regimenMessages.ts";
 import { storageMessages } from "./storageMessages.ts";
 import { summaryMessages } from "./summaryMessages.ts";
@@ -21,6 +22,7 @@ const catalogue: Readonly<Record<string, MessageFunction>> = {
   ...noncompartmentalMessages,
   ...numberMessages,
   ...patientMessages,
+  ...recordMessages,
   ...regimenMessages,
   ...storageMessages,
   ...summaryMessages,

@@ -68,7 +68,6 @@ export const storageMessages: Readonly<Record<string, MessageFunction>> = {
     `A case with the same identity is already stored; ${named(data)} was imported beside it as a case of its own.`,
   "demo-unreadable": ({ name }) =>
     `The demonstration “${name}” of this version of Ebbline is faulty and can't be offered.`,
-  "medicine-file-unreadable": ({ name }) => `“${name}” is not a JSON file that can be read; nothing was stored.`,
   "medicine-built-in": ({ id }) =>
     `“${id}” is the identity of a record that comes with Ebbline; give your own record another one.`,
   "medicine-hidden": ({ id }) =>

@@ -45,29 +45,29 @@ export function medicineActions(context: StoreContext): MedicineActions {
     return succeed(record);
   }
 
-  let writing: Promise<void> | null = null;
+  let isWriting = false;
   let isWritten = true;
   /** One write at a time, always of the latest: typing is faster than a disk. */
-  function writeEdits(): void {
+  async function writeEdits(): Promise<void> {
     isWritten = false;
-    writing ??= (async () => {
-      while (!isWritten) {
-        isWritten = true;
-        const drafts = Object.entries(get().recordEdits).map(([id, { recordVersion, history }]) => [
-          id,
-          { recordVersion, draft: history.draft },
-        ]);
-        const outcome = await repository.writeSetting(DRAFTS_KEY, Object.fromEntries(drafts));
-        if (!outcome.ok) say("check", issue("record-draft-not-kept"), failureIssue(outcome));
-      }
-      writing = null;
-    })();
+    if (isWriting) return;
+    isWriting = true;
+    while (!isWritten) {
+      isWritten = true;
+      const drafts = Object.entries(get().recordEdits).map(([id, { recordVersion, history }]) => [
+        id,
+        { recordVersion, draft: history.draft },
+      ]);
+      const outcome = await repository.writeSetting(DRAFTS_KEY, Object.fromEntries(drafts));
+      if (!outcome.ok) say("check", issue("record-draft-not-kept"), failureIssue(outcome));
+    }
+    isWriting = false;
   }
 
   function keepRecordEdit(id: string, edit: RecordEdit | null): void {
     const { [id]: _, ...others } = get().recordEdits;
     set({ recordEdits: edit ? { ...others, [id]: edit } : others });
-    writeEdits();
+    void writeEdits();
   }
 
   /** The way back after a removal or a replacement. */

@@ -1,0 +1,4 @@
+/** Fixed words of the medicines screen. */
+export const recordWords = {
+  undo: "Undo",
+} as const;
