@@ -5,20 +5,39 @@ import { doseNotMakeable } from "./concerns/doseNotMakeable.ts";
 import { dosesAfterNow } from "./concerns/dosesAfterNow.ts";
 import { factorsUnused } from "./concerns/factorsUnused.ts";
 import { firstDoseClose } from "./concerns/firstDoseClose.ts";
+import { fitSetAside } from "./concerns/fitSetAside.ts";
+import { fitWithheld } from "./concerns/fitWithheld.ts";
 import { flipFlop } from "./concerns/flipFlop.ts";
+import { flipFlopAmbiguous } from "./concerns/flipFlopAmbiguous.ts";
 import { historyAssumed } from "./concerns/historyAssumed.ts";
 import { inventedMedicine } from "./concerns/inventedMedicine.ts";
 import { kidneyUnknown } from "./concerns/kidneyUnknown.ts";
 import { kineticsChange } from "./concerns/kineticsChange.ts";
 import { levelFarOff } from "./concerns/levelFarOff.ts";
 import { levelLeftOut } from "./concerns/levelLeftOut.ts";
+import { levelOutlier } from "./concerns/levelOutlier.ts";
+import { levelOutOfRange } from "./concerns/levelOutOfRange.ts";
+import { levelOutsidePrior } from "./concerns/levelOutsidePrior.ts";
+import { levelResidual } from "./concerns/levelResidual.ts";
+import { levelsAbsorptionOnly } from "./concerns/levelsAbsorptionOnly.ts";
+import { levelsAllLeftOut } from "./concerns/levelsAllLeftOut.ts";
+import { levelsBeforeChange } from "./concerns/levelsBeforeChange.ts";
+import { levelsBeforeSteady } from "./concerns/levelsBeforeSteady.ts";
+import { levelsBelowLimit } from "./concerns/levelsBelowLimit.ts";
+import { levelsSameTime } from "./concerns/levelsSameTime.ts";
+import { levelsTaughtLittle } from "./concerns/levelsTaughtLittle.ts";
+import { levelsWithinError } from "./concerns/levelsWithinError.ts";
 import { levelTiming } from "./concerns/levelTiming.ts";
 import { linesUnreadable } from "./concerns/linesUnreadable.ts";
 import { modelIncomplete } from "./concerns/modelIncomplete.ts";
 import { neverSteady } from "./concerns/neverSteady.ts";
 import { noSteadyState } from "./concerns/noSteadyState.ts";
+import { oneLevel } from "./concerns/oneLevel.ts";
+import { optionChanceAbove } from "./concerns/optionChanceAbove.ts";
+import { optionChanceToxic } from "./concerns/optionChanceToxic.ts";
 import { optionOutsideWindow } from "./concerns/optionOutsideWindow.ts";
 import { optionToxic } from "./concerns/optionToxic.ts";
+import { parameterUnusual } from "./concerns/parameterUnusual.ts";
 import { recordUnreviewed } from "./concerns/recordUnreviewed.ts";
 import { roadsDiffer } from "./concerns/roadsDiffer.ts";
 import { typicalOnly } from "./concerns/typicalOnly.ts";
@@ -32,11 +51,26 @@ const RULES: readonly ConcernRule[] = [
   linesUnreadable,
   inventedMedicine,
   optionToxic,
+  optionChanceToxic,
+  levelOutOfRange,
+  fitWithheld,
   neverSteady,
   ageOutside,
   levelTiming,
   levelFarOff,
+  levelOutlier,
+  levelResidual,
+  levelOutsidePrior,
+  parameterUnusual,
+  levelsSameTime,
   typicalOnly,
+  levelsAllLeftOut,
+  fitSetAside,
+  flipFlopAmbiguous,
+  levelsAbsorptionOnly,
+  levelsBeforeChange,
+  levelsTaughtLittle,
+  optionChanceAbove,
   kineticsChange,
   optionOutsideWindow,
   firstDoseClose,
@@ -47,6 +81,10 @@ const RULES: readonly ConcernRule[] = [
   valuesConfirmed,
   flipFlop,
   levelLeftOut,
+  oneLevel,
+  levelsBeforeSteady,
+  levelsWithinError,
+  levelsBelowLimit,
   noSteadyState,
   historyAssumed,
   kidneyUnknown,

@@ -11,6 +11,7 @@ import type {
   OptionResult,
   PatientFigures,
 } from "./analysisTypes.ts";
+import type { FitState } from "./fitTypes.ts";
 
 /** All a rule may look at. */
 export interface ConcernContext {
@@ -22,6 +23,7 @@ export interface ConcernContext {
   readonly given: readonly DoseMark[];
   readonly lineIssues: readonly { readonly lane: string; readonly lineId: string; readonly issue: Issue }[];
   readonly levels: readonly LevelResult[];
+  readonly fit: FitState;
   readonly options: readonly OptionResult[];
   readonly crossCheck: CrossCheck | null;
 }

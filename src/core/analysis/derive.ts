@@ -111,7 +111,7 @@ export function* deriveSteps(
       ...lanes.flatMap(({ option, issues }) => issues.map((entry) => ({ ...entry, lane: option.id }))),
     ],
     levels,
-    fit: { kind: "none", reason: "no-levels" },
+    fit: individual.fit,
     options,
     crossCheck,
   });

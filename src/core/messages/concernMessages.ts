@@ -2,26 +2,20 @@ import type { TargetWindow } from "../case/index.ts";
 import type { Issue } from "../result/index.ts";
 import { instantText } from "../time/index.ts";
 import { numberPrint, type Quantity, quantityPrint } from "../units/index.ts";
+import {
+  type ConcernData,
+  type ConcernWords,
+  concentration,
+  countWords,
+  figure,
+  hours,
+  dataNumber as number,
+  dataText as text,
+  when,
+} from "./concernFigures.ts";
+import { fitConcernMessages } from "./fitMessages.ts";
 import { issueMessage } from "./issueMessage.ts";
 import { windowQuantityWord } from "./windowWords.ts";
-
-/** A concern as a human reads it: a title that says it all, and what to do about it. */
-export interface ConcernWords {
-  readonly title: string;
-  readonly text: string;
-}
-
-type Data = Readonly<Record<string, unknown>>;
-
-const number = (data: Data, key: string): number => data[key] as number;
-const text = (data: Data, key: string): string => data[key] as string;
-const figure = (value: number): string => numberPrint(value, { significant: 3 });
-/** Low ones in micrograms: fewer decimals. */
-const concentration = (value: number): string =>
-  Math.abs(value) < 0.1 && value !== 0 ? `${figure(value * 1000)} microgram per L` : `${figure(value)} mg per L`;
-const hours = (value: number): string => `${figure(value)} hours`;
-const when = (data: Data): string => instantText(number(data, "atMs"), text(data, "zone"), "dayClock");
-const plural = (count: number, one: string, many: string): string => `${count} ${count === 1 ? one : many}`;
 
 const FACTOR_WORDS: Readonly<Record<string, string>> = {
   smoking: "Smoking",
@@ -38,7 +32,7 @@ const OBSERVATION_WORDS: Readonly<Record<string, string>> = {
   level: "Level",
 };
 
-function outsideWindow(data: Data, side: "above" | "below"): ConcernWords {
+function outsideWindow(data: ConcernData, side: "above" | "below"): ConcernWords {
   const isArea = text(data, "unit") === "mg.h/L";
   const print = (value: number) => (isArea ? `${figure(value)} mg hours per L` : concentration(value));
   const found = side === "above" ? number(data, "most") : number(data, "least");
@@ -51,7 +45,7 @@ function outsideWindow(data: Data, side: "above" | "below"): ConcernWords {
   };
 }
 
-function unverifiedWords(data: Data): string {
+function unverifiedWords(data: ConcernData): string {
   const parts = [
     [number(data, "memory"), "recalled from memory"],
     [number(data, "commonPractice"), "from common practice"],
@@ -62,7 +56,7 @@ function unverifiedWords(data: Data): string {
 }
 
 /** One function a concern code. */
-const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = {
+const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWords>> = {
   "model-incomplete": (data) => ({
     title: "No prediction yet",
     text: (data.issues as readonly Issue[]).map(issueMessage).join(" "),
@@ -99,10 +93,6 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
     title: `The level of ${when(data)} is far from the prediction`,
     text: `Measured ${concentration(number(data, "measured"))}, predicted ${concentration(number(data, "predicted"))}: ${figure(number(data, "ratio"))} times. Wrong time, missed dose, interaction, assay, or a patient unlike the typical one?`,
   }),
-  "levels-not-used": (data) => ({
-    title: "Predictions are for the typical patient",
-    text: `${plural(number(data, "levels"), "level is", "levels are")} shown beside the prediction but not used to adjust it. If the difference matters, do not rely on the options without judging it.`,
-  }),
   "option-above-window": (data) => outsideWindow(data, "above"),
   "option-below-window": (data) => outsideWindow(data, "below"),
   "first-dose-close": (data) => ({
@@ -118,11 +108,11 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
     text: `Option ${text(data, "option")}, ${text(data, "product")}: ${(data.strengths as number[]).map(figure).join(", ")} mg${text(data, "divisible") === "half" ? ", halves allowed" : ", whole only"}.`,
   }),
   "given-after-now": (data) => ({
-    title: `${plural(number(data, "count"), "dose", "doses")} on the given lane after the now line`,
+    title: `${countWords(number(data, "count"), "dose", "doses")} on the given lane after the now line`,
     text: "Shown, not counted. Doses still to come belong in an option.",
   }),
   "option-before-now": (data) => ({
-    title: `${plural(number(data, "count"), "dose", "doses")} of an option before the now line`,
+    title: `${countWords(number(data, "count"), "dose", "doses")} of an option before the now line`,
     text: "Shown, not counted. Doses already taken belong in the given lane.",
   }),
   "window-missing": (data) => ({
@@ -139,7 +129,7 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
   }),
   "kinetics-change": (data) => ({
     title: "The kinetics change during the course",
-    text: `${plural(number(data, "count"), "change", "changes")}, the last ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}. Steady-state figures refer to the final state.${number(data, "levelsBefore") > 0 ? ` ${plural(number(data, "levelsBefore"), "level was", "levels were")} drawn before it.` : ""}`,
+    text: `${countWords(number(data, "count"), "change", "changes")}, the last ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}. Steady-state figures refer to the final state.${number(data, "levelsBefore") > 0 ? ` ${countWords(number(data, "levelsBefore"), "level was", "levels were")} drawn before it.` : ""}`,
   }),
   "never-steady": (data) => ({
     title: `Option ${text(data, "option")} never reaches a steady state`,
@@ -186,12 +176,13 @@ const concernMessages: Readonly<Record<string, (data: Data) => ConcernWords>> = 
     title: "Medicine record not independently reviewed",
     text: `${text(data, "name")}, record version ${number(data, "recordVersion")}: of ${number(data, "total")} figures, ${unverifiedWords(data)}. Check against current product information.`,
   }),
+  ...fitConcernMessages,
 };
 
 export const CONCERN_CODES: readonly string[] = Object.keys(concernMessages);
 
 /** The words of a concern. An unknown code is a programmer's mistake and throws. */
-export function concernMessage(concern: { readonly code: string; readonly data: Data }): ConcernWords {
+export function concernMessage(concern: { readonly code: string; readonly data: ConcernData }): ConcernWords {
   const words = concernMessages[concern.code];
   if (!words) throw new RangeError(`no message for the concern "${concern.code}"`);
   return words(concern.data);

@@ -5,6 +5,8 @@ export const FAR_RATIO = 1.5;
 
 export const levelFarOff: ConcernRule = (context) =>
   context.levels.flatMap((level) => {
+    // With a fit the prior predictive check says it better: it knows how much patients differ.
+    if (level.fit !== null) return [];
     if (level.predicted === null || level.excluded !== null || level.belowLimit || level.predicted <= 0) return [];
     const ratio = level.measured / level.predicted;
     return ratio > FAR_RATIO || ratio < 1 / FAR_RATIO

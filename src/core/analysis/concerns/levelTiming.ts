@@ -1,4 +1,4 @@
-import type { Absorption } from "../../kinetics/index.ts";
+import { absorbedAfter } from "../absorbedAfter.ts";
 import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 
 /** A level before any dose, later than the now line, or drawn while the last dose was still being absorbed. */
@@ -25,18 +25,3 @@ export const levelTiming: ConcernRule = (context) => {
       : [];
   });
 };
-
-/** h until about nine tenths are absorbed: three half-lives of a rate leave 12 % in the gut (definition); an even input ends. */
-function absorbedAfter(absorption: Absorption): number {
-  const halfLives = (ka: number) => (3 * Math.LN2) / ka;
-  switch (absorption.kind) {
-    case "first-order":
-      return halfLives(absorption.ka);
-    case "zero-order":
-      return absorption.duration;
-    case "mixed": {
-      const slow = absorption.slow.kind === "first-order" ? halfLives(absorption.slow.ka) : absorption.slow.duration;
-      return Math.max(halfLives(absorption.fastKa), absorption.slowLag + slow);
-    }
-  }
-}

@@ -1,0 +1,102 @@
+import { type FittedParameter, type LevelFit, TAUGHT_LITTLE, TAUGHT_MUCH } from "../analysis/index.ts";
+import { numberPrint } from "../units/index.ts";
+import { wordList } from "./concernFigures.ts";
+
+/** Fixed words about this patient's figures. */
+export const fitWords = {
+  typical: "typical",
+  individual: "this patient",
+  typicalPatient: "typical patient",
+  interval: "90 % interval",
+  taughtTitle: "What the levels taught",
+  openTaught: "What the levels taught",
+  chanceSteady: (quantity: string) => `Chance at steady state, of the ${quantity}`,
+  chanceSpan: (quantity: string, span: string) => `Chance ${span}, of the ${quantity}`,
+  within: "within",
+  below: "below",
+  above: "above",
+  pending: "this patient: being worked out; the typical patient is shown meanwhile",
+  only: "typical patient only",
+  none: "typical patient only: no level",
+  withheld: "this patient is withheld; the typical patient stays",
+  prior: "before the levels (patients like this one)",
+  posterior: "with the levels (this patient)",
+  mostLikely: "most likely",
+  median: "median",
+  halfLife: "Half-life",
+  residualModel: "Residuals",
+  residualModels: {
+    normal: { label: "normal", detail: "every level counts by its error" },
+    robust: { label: "robust", detail: "a level far off counts less (Student t, 4 degrees of freedom)" },
+  },
+  use: "The order rests on",
+  uses: { individual: "this patient", typical: "the typical patient" },
+  working: "How it was worked out",
+  levelsUsed: "Levels used",
+  levelsLeftOut: "Levels left out",
+  noLevelsLeftOut: "none",
+  seeWorking: "working",
+} as const;
+
+/** A chance in words: never "0 %" or "100 %". */
+export function chanceWords(share: number): string {
+  if (share < 0.01) return "under 1 %";
+  if (share > 0.99) return "over 99 %";
+  return `${numberPrint(share * 100, { decimals: 0 })} %`;
+}
+
+export function taughtWord(taught: number): "much" | "something" | "little" {
+  return taught >= TAUGHT_MUCH ? "much" : taught >= TAUGHT_LITTLE ? "something" : "little";
+}
+
+const lowered = (words: string): string => words.charAt(0).toLowerCase() + words.slice(1);
+
+/** "The levels taught much about clearance, little about absorption." */
+export function taughtSentence(
+  parameters: readonly Pick<FittedParameter, "words" | "taught">[],
+  levels: number,
+): string {
+  const clauses = (["much", "something", "little"] as const).flatMap((word) => {
+    const names = parameters.filter(({ taught }) => taughtWord(taught) === word).map(({ words }) => lowered(words));
+    return names.length === 0 ? [] : [`${word} about ${wordList(names)}`];
+  });
+  return clauses.length === 0 ? "" : `The ${levels === 1 ? "level" : "levels"} taught ${clauses.join(", ")}.`;
+}
+
+/** Below this share a change is called none. */
+const NO_CHANGE = 0.005;
+
+/** "Without it clearance would be 12 % higher": from ratios with it / without it. Empty where nothing is known. */
+export function influenceWords(
+  influence: LevelFit["influence"],
+  nameOf: (symbol: string) => string = (symbol) => SYMBOL_WORDS[symbol] ?? symbol,
+  isLeftOut = false,
+): string {
+  if (influence === null || influence.length === 0) return "";
+  const lead = isLeftOut ? "With it" : "Without it";
+  const clauses = influence.flatMap(({ symbol, ratio }) => {
+    const change = isLeftOut ? ratio - 1 : 1 / ratio - 1;
+    const size = numberPrint(Math.abs(change) * 100, { decimals: 0 });
+    return Math.abs(change) < NO_CHANGE
+      ? []
+      : [`${nameOf(symbol)} would be ${size} % ${change > 0 ? "higher" : "lower"}`];
+  });
+  return clauses.length === 0 ? `${lead} nothing would change` : `${lead} ${wordList(clauses)}`;
+}
+
+const SYMBOL_WORDS: Readonly<Record<string, string>> = {
+  CL: "clearance",
+  V: "volume",
+  V1: "volume",
+  ka: "absorption rate",
+  Vmax: "highest elimination rate",
+  Km: "half-saturation concentration",
+  Q: "exchange",
+  V2: "second volume",
+  F: "bioavailability",
+};
+
+/** What a symbol of the working stands for in a sentence. */
+export function symbolWords(symbol: string): string {
+  return SYMBOL_WORDS[symbol] ?? symbol;
+}

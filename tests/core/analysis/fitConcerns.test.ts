@@ -1,0 +1,192 @@
+import { describe, expect, it } from "vitest";
+import type { AnalysisClock } from "../../../src/core/analysis/analysisClock.ts";
+import { caseConcerns } from "../../../src/core/analysis/caseConcerns.ts";
+import type { ConcernContext } from "../../../src/core/analysis/concernRule.ts";
+import { derive } from "../../../src/core/analysis/index.ts";
+import type { Case } from "../../../src/core/case/index.ts";
+import { concernMessage, FIT_CONCERN_CODES } from "../../../src/core/messages/index.ts";
+import { caseFixture } from "./caseFixture.ts";
+import { fittedAnalysis, individualFit, levelFit, parameter, spread } from "./fitFixture.ts";
+
+const level = (id: string, at: string, mgPerL: number, change: Partial<Case["levels"][number]> = {}) => ({
+  id,
+  at,
+  quantity: { value: mgPerL, unit: "mg/L" as const },
+  kind: "measured" as const,
+  ...change,
+});
+const value = caseFixture({
+  fit: { use: "individual", residualModel: "normal" },
+  levels: [level("l", "2026-03-03T07:30:00+00:00", 6), level("m", "2026-03-04T07:30:00+00:00", 7)],
+});
+const analysis = fittedAnalysis(derive(value));
+/** A context of a quiet fit: nothing to point out but what every case has. */
+const quiet: ConcernContext = {
+  case: value,
+  clock: analysis.clock as unknown as AnalysisClock,
+  patient: analysis.patient,
+  model: analysis.typical,
+  modelIssues: [],
+  given: analysis.given,
+  lineIssues: [],
+  levels: analysis.levels,
+  fit: {
+    kind: "fitted",
+    fit: individualFit({
+      parameters: [parameter({ symbol: "CL", words: "Clearance" }), parameter({ symbol: "V", words: "Volume" })],
+      // Short enough that the levels come after steady state.
+      halfLife: { typical: 4, posterior: spread(4) },
+    }),
+  },
+  options: analysis.options,
+  crossCheck: null,
+};
+const fitted = quiet.fit as Extract<ConcernContext["fit"], { kind: "fitted" }>;
+const withFit = (change: Parameters<typeof individualFit>[0]): ConcernContext => ({
+  ...quiet,
+  fit: { kind: "fitted", fit: { ...fitted.fit, ...change } },
+});
+/** Levels by hand, all used. */
+const withLevels = (...levels: readonly Partial<ConcernContext["levels"][number]>[]): ConcernContext => {
+  const made = levels.map((change, i) => ({
+    ...quiet.levels[1]!,
+    atH: quiet.levels[1]!.atH - 2 + i / 10,
+    ...change,
+    id: `x${i}`,
+  }));
+  return { ...withFit({ levelsUsed: made.map(({ id }) => id) }), levels: made };
+};
+const off = (standardised: number) => ({ fit: levelFit(6, { standardised }) });
+const withOption = (change: (option: NonNullable<ConcernContext["options"][number]["individual"]>) => object) => ({
+  ...quiet,
+  options: quiet.options.map((option) => ({
+    ...option,
+    individual: { ...option.individual!, ...change(option.individual!) },
+  })),
+});
+const chance = (above: number) =>
+  withOption((found) => ({ steadyState: { ...found.steadyState!, chance: { below: 0, within: 1 - above, above } } }));
+const peak = (median: number) =>
+  withOption((found) => ({ span: { ...found.span, peak: spread(median) }, steadyState: null }));
+const ambiguous = (isAmbiguous: boolean) =>
+  withFit({
+    flipFlop: {
+      shareSlowAbsorption: 0.37,
+      isAmbiguous,
+      fastAbsorption: { ka: 0.6, ke: 0.1, volume: 30 },
+      slowAbsorption: { ka: 0.1, ke: 0.6, volume: 5 },
+    },
+  });
+const changed = (from: number): ConcernContext => {
+  const model = quiet.model!;
+  const last = { ...model.dispositions[0]!, from };
+  return { ...quiet, model: { ...model, dispositions: [...model.dispositions, last] } };
+};
+const lastGiven = quiet.given.filter((mark) => mark.countedMg > 0).at(-1)!;
+const early = (afterDoseH: number) => ({ atH: lastGiven.atH + afterDoseH, afterDoseH });
+
+/** For every concern about a fit: a context that raises it, and one as like it as can be that does not. */
+const TABLE: readonly (readonly [code: string, raises: ConcernContext, doesNot: ConcernContext])[] = [
+  ["levels-not-used", { ...quiet, fit: { kind: "none", reason: "no-variability" } }, quiet],
+  [
+    "levels-all-left-out",
+    { ...quiet, fit: { kind: "none", reason: "all-left-out" } },
+    { ...quiet, fit: { kind: "none", reason: "no-residual" } },
+  ],
+  ["fit-withheld", { ...quiet, fit: { kind: "withheld", reason: "draws-unreliable", data: { paretoK: 0.91 } } }, quiet],
+  ["fit-set-aside", { ...quiet, case: { ...value, fit: { ...value.fit, use: "typical" } } }, quiet],
+  ["level-out-of-range", withLevels({ measured: 401 }), withLevels({ measured: 399 })],
+  ["level-residual", withLevels(off(2.01), off(0)), withLevels(off(1.99), off(0))],
+  ["level-outlier", withLevels(off(2.01), off(0), off(-1)), withLevels(off(2.01), off(0))],
+  [
+    "level-outside-prior",
+    withLevels({ fit: levelFit(6, { isOutsidePrior: true }) }),
+    withLevels({ fit: levelFit(6, { isOutsidePrior: false }) }),
+  ],
+  [
+    "parameter-unusual",
+    withFit({ parameters: [parameter({ symbol: "CL", words: "Clearance", omega: 0.3, eta: -0.601 })] }),
+    withFit({ parameters: [parameter({ symbol: "CL", words: "Clearance", omega: 0.3, eta: -0.599 })] }),
+  ],
+  [
+    "levels-taught-little",
+    withFit({ parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.19 })] }),
+    withFit({ parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.21 })] }),
+  ],
+  [
+    "one-level",
+    withFit({ levelsUsed: ["m"], parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.3 })] }),
+    withFit({ parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.3 })] }),
+  ],
+  ["levels-absorption-only", withLevels(early(2), early(3)), withLevels(early(2), early(11.9))],
+  [
+    "levels-before-steady",
+    withFit({ halfLife: { typical: 22, posterior: spread(22) } }),
+    withFit({ halfLife: { typical: 6, posterior: spread(6) } }),
+  ],
+  ["flip-flop-ambiguous", ambiguous(true), ambiguous(false)],
+  ["levels-below-limit", withLevels({ belowLimit: true }), withLevels({ belowLimit: false })],
+  [
+    "levels-within-error",
+    withLevels({ measured: 6, assaySd: 0.6 }, { measured: 6.8, assaySd: 0.6 }),
+    withLevels({ measured: 6, assaySd: 0.6 }, { measured: 6.9, assaySd: 0.6 }),
+  ],
+  ["levels-same-time", withLevels({ atH: 60 }, { atH: 60 }), withLevels({ atH: 60 }, { atH: 60.1 })],
+  ["levels-before-change", changed(quiet.levels[0]!.atH + 1), changed(quiet.levels[0]!.atH)],
+  ["option-chance-above", chance(0.25), chance(0.24)],
+  ["option-chance-toxic", peak(20), peak(10)],
+];
+
+const found = (context: ConcernContext, code: string) =>
+  caseConcerns(context).filter((concern) => concern.code === code);
+
+describe("concerns about the fit", () => {
+  it.each(TABLE)("%s is raised where it should be and not where it should not", (code, raises, doesNot) => {
+    expect(found(raises, code)).not.toEqual([]);
+    expect(found(doesNot, code)).toEqual([]);
+  });
+
+  it("the table has every concern about a fit there is a sentence for", () => {
+    expect(TABLE.map(([code]) => code).sort()).toEqual([...FIT_CONCERN_CODES].sort());
+  });
+
+  it.each(TABLE)("%s reads as whole sentences with nothing left open", (code, raises) => {
+    for (const concern of found(raises, code)) {
+      const { title, text } = concernMessage(concern);
+      expect(`${title} ${text}`).not.toMatch(/undefined|NaN|null|\[object|Infinity/);
+      expect(text).toMatch(/[.?]$/);
+    }
+  });
+
+  it("a residual beyond 3 is grave where the errors are normal, and to be checked where they are robust", () => {
+    const gravity = (z: number, residualModel: "normal" | "robust") => {
+      const context = withLevels(off(z), off(0));
+      const { fit } = context.fit as typeof fitted;
+      return found({ ...context, fit: { kind: "fitted", fit: { ...fit, residualModel } } }, "level-residual")[0]!
+        .gravity;
+    };
+    expect(gravity(-3.01, "normal")).toBe("stop");
+    expect(gravity(-2.99, "normal")).toBe("check");
+    expect(gravity(-3.01, "robust")).toBe("check");
+  });
+
+  it("a lone outlier is said once, not twice", () => {
+    const codes = caseConcerns(withLevels(off(4), off(0), off(0.5))).map((concern) => concern.code);
+    expect(codes.filter((code) => code === "level-outlier" || code === "level-residual")).toEqual(["level-outlier"]);
+  });
+
+  it("nothing about a fit is said while it is being worked out", () => {
+    const codes = caseConcerns({
+      ...quiet,
+      fit: { kind: "pending" },
+      options: quiet.options.map((option) => ({ ...option, individual: null, band: null })),
+    }).map((concern) => concern.code);
+    expect(codes.filter((code) => FIT_CONCERN_CODES.includes(code))).toEqual([]);
+  });
+
+  it("with a fit the typical patient's misses are left to the prior predictive check", () => {
+    const far = { ...quiet.levels[1]!, measured: 12, predicted: 6 };
+    expect(found({ ...quiet, levels: [far] }, "level-far-off")).toEqual([]);
+    expect(found({ ...quiet, levels: [{ ...far, fit: null }] }, "level-far-off")).toHaveLength(1);
+  });
+});
