@@ -3,6 +3,7 @@ import { type Case, caseParse } from "../core/case/index.ts";
 import { issueMessage } from "../core/messages/index.ts";
 import { instantIso } from "../core/time/index.ts";
 import type { UnitCode } from "../core/units/index.ts";
+import { recomputeFit, recomputeIndividual, recomputeLevelFit } from "./recomputeFit.ts";
 
 /** What `npm run -s recompute -- FILE` prints: the same figures as the screens and the sheet, from the same pipeline. */
 export function recompute(text: string): { ok: true; output: unknown } | { ok: false; lines: readonly string[] } {
@@ -13,7 +14,10 @@ export function recompute(text: string): { ok: true; output: unknown } | { ok: f
       lines: parsed.issues.map((issue) => `${issue.path.join(".") || "file"}: ${issueMessage(issue)}`),
     };
   }
-  return { ok: true, output: recomputeOutput(parsed.value, derive(parsed.value, { isCrossChecked: true })) };
+  return {
+    ok: true,
+    output: recomputeOutput(parsed.value, derive(parsed.value, { isFitted: true, isCrossChecked: true })),
+  };
 }
 
 const HOUR_MS = 3_600_000;
@@ -36,6 +40,7 @@ function recomputeOutput(value: Case, analysis: Analysis) {
       ),
       changes: analysis.typical.dispositions.slice(1).map((each) => at(each.from)),
     },
+    thisPatient: recomputeFit(analysis.fit),
     span: { from: at(analysis.clock.nowH), to: at(analysis.clock.readingsToH) },
     patient: Object.fromEntries(
       (["weight", "creatinine", "idealWeight", "adjustedWeight", "bodyMassIndex", "creatinineClearance"] as const).map(
@@ -51,7 +56,7 @@ function recomputeOutput(value: Case, analysis: Analysis) {
         {
           chosen: value.options.find((candidate) => candidate.id === option.id)?.chosen ?? false,
           typical: figures(option.typical, analysis.typical, at),
-          individual: null,
+          individual: recomputeIndividual(option.individual, analysis.fit),
         },
       ]),
     ),
@@ -62,6 +67,7 @@ function recomputeOutput(value: Case, analysis: Analysis) {
       predicted: quantity(level.predicted, "mg/L"),
       difference: quantity(level.difference, "mg/L"),
       excluded: level.excluded,
+      individual: recomputeLevelFit(level.fit),
     })),
     crossCheck: analysis.crossCheck && {
       isAgreed: analysis.crossCheck.isAgreed,

@@ -1,19 +1,24 @@
 import type { ModelHistory } from "../kinetics/index.ts";
 
 /** Evenly spaced points of a drawn curve; more would not show on any screen. */
-const POINTS = 1_200;
+export const CURVE_POINTS = 1_200;
 
 /**
  * Times at which a curve is drawn over [fromH, toH]: an even grid plus the instants at which a dose begins or ends to be absorbed
  * and the kinetics change, so that every corner of the curve is on it. Ascending, without repeats. Drawing only: no reading is taken from it.
  */
-export function curveTimes(history: ModelHistory, fromH: number, toH: number): Float64Array {
+export function curveTimes(
+  history: ModelHistory,
+  fromH: number,
+  toH: number,
+  points: number = CURVE_POINTS,
+): Float64Array {
   const times = new Set<number>([fromH, toH]);
   const add = (hours: number) => {
     if (hours > fromH && hours < toH) times.add(hours);
   };
-  const step = (toH - fromH) / POINTS;
-  for (let i = 1; i < POINTS; i++) add(fromH + i * step);
+  const step = (toH - fromH) / points;
+  for (let i = 1; i < points; i++) add(fromH + i * step);
   for (const { absorption, lag, doses } of history.inputs) {
     for (const dose of doses) {
       const begins = dose.time + lag;

@@ -75,7 +75,7 @@ export interface FittedParameter {
   readonly posteriorSd: number;
   /** 1 − posterior sd / prior sd, both on the ln scale: 0 taught nothing, near 1 taught all. Can be a little below 0. */
   readonly taught: number;
-  /** Densities on the ln scale over one common grid of the parameter's own values, each scaled to a highest value of 1. */
+  /** Densities on the ln scale over one common grid of the parameter's own values, scaled together so that the highest value is 1. */
   readonly density: { readonly values: Float64Array; readonly prior: Float64Array; readonly posterior: Float64Array };
 }
 

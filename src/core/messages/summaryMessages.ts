@@ -3,6 +3,7 @@ import type { MessageFunction } from "./messageFunction.ts";
 /** Why the summary is not printed now. */
 export const summaryMessages: Readonly<Record<string, MessageFunction>> = {
   "print-running": () => "The figures of the latest change are still being worked out. Print when they are there.",
+  "print-fitting": () => "What the levels make of this patient is still being worked out. Print when it is there.",
   "print-stale": () => "The figures belong to an earlier state of the case. Print when they are worked out again.",
   "print-failed": (data) => `${data.detail} What is shown is from an earlier state of the case.`,
   "print-unsaved": () => "The latest change is not on disk yet. Print when the strip says saved.",

@@ -19,8 +19,9 @@ function changeRefusal({ isDragging }: Asked): Issue | null {
   return isDragging ? issue("print-dragging") : null;
 }
 
-function analysisRefusal({ analysisStatus, revision }: Asked): Issue | null {
+function analysisRefusal({ analysis, analysisStatus, revision }: Asked): Issue | null {
   if (analysisStatus.status === "running") return issue("print-running");
+  if (analysisStatus.isFitStale || analysis.fit.kind === "pending") return issue("print-fitting");
   if (analysisStatus.status === "failed") return issue("print-failed", { detail: analysisStatus.failure ?? "" });
   return analysisStatus.revision === revision ? null : issue("print-stale");
 }

@@ -9,7 +9,7 @@ export interface SummaryInput {
   readonly settings: Settings;
   readonly revision: number;
   readonly saving: Pick<Saving, "status" | "detail">;
-  readonly analysisStatus: Pick<AnalysisState, "status" | "revision" | "failure">;
+  readonly analysisStatus: Pick<AnalysisState, "status" | "revision" | "failure" | "isFitStale">;
   /** Something was changed since the case was opened, undone or not. */
   readonly hasChanges: boolean;
   /** A drag is under way: what is shown is not yet an edit. */

@@ -13,18 +13,28 @@ const TABLE: readonly (readonly [name: string, input: SummaryInput, code: string
   ["all is saved and fresh", good, null],
   [
     "the analysis runs",
-    { ...good, analysisStatus: { status: "running", revision: 14, failure: null } },
+    { ...good, analysisStatus: { status: "running", revision: 14, failure: null, isFitStale: false } },
     "print-running",
   ],
   [
     "the analysis is of an earlier revision",
-    { ...good, analysisStatus: { status: "fresh", revision: 13, failure: null } },
+    { ...good, analysisStatus: { status: "fresh", revision: 13, failure: null, isFitStale: false } },
     "print-stale",
+  ],
+  [
+    "the fit is of an earlier state",
+    { ...good, analysisStatus: { status: "fresh", revision: 14, failure: null, isFitStale: true } },
+    "print-fitting",
+  ],
+  [
+    "the levels are being fitted",
+    { ...good, analysis: { ...good.analysis, fit: { kind: "pending" } } },
+    "print-fitting",
   ],
   ["the case has gone back by undo", { ...good, revision: 15 }, "print-stale"],
   [
     "the analysis failed",
-    { ...good, analysisStatus: { status: "failed", revision: 14, failure: "Broken." } },
+    { ...good, analysisStatus: { status: "failed", revision: 14, failure: "Broken.", isFitStale: false } },
     "print-failed",
   ],
   ["a change is not saved", { ...good, saving: { status: "unsaved", detail: "" } }, "print-unsaved"],

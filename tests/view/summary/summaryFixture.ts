@@ -77,7 +77,7 @@ export function summaryInputOf(value: Case, change: Partial<SummaryInput> = {}):
     settings: { pageSize: "A4", microgram: "microgram", preparedBy: "" },
     revision: 14,
     saving: { status: "saved", detail: "" },
-    analysisStatus: { status: "fresh", revision: 14, failure: null },
+    analysisStatus: { status: "fresh", revision: 14, failure: null, isFitStale: false },
     hasChanges: true,
     isDragging: false,
     printedAtMs: Date.UTC(2026, 2, 4, 12, 5),
