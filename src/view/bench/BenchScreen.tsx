@@ -12,6 +12,7 @@ import { useWorkbench } from "../useWorkbench.ts";
 import { AmountsRow } from "./AmountsRow.tsx";
 import { BenchPanel, type OpenPanel } from "./BenchPanel.tsx";
 import "./BenchScreen.css";
+import { useElementWidth } from "../ui/useElementWidth.ts";
 import { type BenchSpan, spanMoved, spanStart, spanWithin, spanZoomed } from "./benchSpan.ts";
 import { CaseStrip } from "./CaseStrip.tsx";
 import { ClockHead } from "./ClockHead.tsx";
@@ -25,7 +26,6 @@ import { ReadingsTable } from "./ReadingsTable.tsx";
 import { SavingBar } from "./SavingBar.tsx";
 import { shownUnits } from "./shownUnit.ts";
 import { useBenchKeys } from "./useBenchKeys.ts";
-import { useElementWidth } from "./useElementWidth.ts";
 
 /** Room at the right of the clock for the curves' names and the window's edges, px. */
 const RIGHT = 76;
