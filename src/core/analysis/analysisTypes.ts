@@ -1,5 +1,6 @@
 import type { Absorption, BothReadings, DispositionSpan } from "../kinetics/index.ts";
 import type { DoseAmount } from "../regimen/index.ts";
+import type { Issue } from "../result/index.ts";
 import type { UnitCode } from "../units/index.ts";
 import type { Band, FitState, IndividualReadings, LevelFit } from "./fitTypes.ts";
 
@@ -18,6 +19,8 @@ export interface Traced {
   readonly inputs: readonly { readonly name: string; readonly value: number; readonly unit: UnitCode }[];
   readonly source: string;
   readonly basis: string;
+  /** What to know before reading it: used outside the people it was made in, a known bias. */
+  readonly remarks?: readonly Issue[];
 }
 
 export type DoseStatus = "taken" | "missed" | "late" | "moved" | "after-now" | "before-now";
@@ -48,9 +51,39 @@ export interface PatientFigures {
   readonly idealWeight: Traced | null;
   readonly adjustedWeight: Traced | null;
   readonly bodyMassIndex: Traced | null;
+  /** Janmahasatian, kg. */
+  readonly leanWeight: Traced | null;
+  /** By Mosteller, m²: what formulas and de-indexing use. */
+  readonly bodySurface: Traced | null;
+  /** By Du Bois, m²: for comparison. */
+  readonly bodySurfaceDuBois: Traced | null;
+  /** g/L */
+  readonly albumin: Traced | null;
   readonly creatinineClearance: Traced | null;
   /** Which weight went into creatinineClearance. */
   readonly clearanceWeight: "actual" | "ideal" | "adjusted" | null;
+  /** For comparison: no record's formula uses it. */
+  readonly filtrationRate: FiltrationRate | null;
+  /** The latest level of phenytoin as it would be with a normal albumin; null for any other medicine. Never in a fit. */
+  readonly phenytoinForAlbumin: PhenytoinForAlbumin | null;
+}
+
+export interface FiltrationRate {
+  /** Adults by CKD-EPI 2021, from 1 to below 18 years by bedside Schwartz. */
+  readonly equation: "ckd-epi-2021" | "bedside-schwartz";
+  /** mL/min per 1.73 m² */
+  readonly perSurface: Traced;
+  /** mL/min of this patient; null without a body surface. */
+  readonly deindexed: Traced | null;
+}
+
+export interface PhenytoinForAlbumin {
+  readonly levelId: string;
+  /** Epoch milliseconds. */
+  readonly levelAtMs: number;
+  readonly form: "usual" | "kidney-failure";
+  /** mg/L */
+  readonly figure: Traced;
 }
 
 export interface ProductModel {

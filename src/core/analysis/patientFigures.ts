@@ -4,127 +4,134 @@ import {
   adjustedWeightSource,
   bodyMassIndex,
   bodyMassIndexSource,
+  bodySurfaceDuBois,
+  bodySurfaceDuBoisSource,
+  bodySurfaceMosteller,
+  bodySurfaceMostellerSource,
   clearanceWeight,
   clearanceWeightSource,
   cockcroftGault,
   cockcroftGaultSource,
-  creatinineMgPerDl,
-  type FormulaSource,
   IDEAL_WEIGHT_LOWEST_CM,
   idealWeightDevine,
   idealWeightDevineSource,
+  LEAN_WEIGHT_LOWEST_INDEX,
+  leanWeightJanmahasatian,
+  leanWeightJanmahasatianSource,
+  leanWeightQuestion,
 } from "../patient/index.ts";
-import { instantMs } from "../time/index.ts";
+import { issue } from "../result/index.ts";
 import { quantityConvert } from "../units/index.ts";
 import type { PatientFigures, Traced } from "./analysisTypes.ts";
+import { filtrationRate } from "./filtrationRate.ts";
+import { latestObservation, observationTraced, patientTraced } from "./patientTraced.ts";
+import { phenytoinFigure } from "./phenytoinFigure.ts";
 
 /** Age from which the adult equations hold, years (they were made in adults; see core/patient). */
 const ADULT_YEARS = 18;
 
-/** The latest observation of a kind at or before the now line; null when there is none. */
-export function latestObservation(value: Case, kind: Observation["kind"]): Observation | null {
-  const nowMs = instantMs(value.now);
-  return value.patient.observations
-    .filter((observation) => observation.kind === kind && instantMs(observation.at) <= nowMs)
-    .reduce<Observation | null>(
-      (latest, observation) =>
-        latest === null || instantMs(observation.at) >= instantMs(latest.at) ? observation : latest,
-      null,
-    );
-}
-
 /** Size and kidney function of the patient at the now line; null for what can't be worked out from what is entered. */
 export function patientFigures(value: Case): PatientFigures {
-  const { sex, age, height } = value.patient;
+  const { height } = value.patient;
   const heightCm = height ? quantityConvert(height, "cm") : null;
-  const weight = entered(latestObservation(value, "weight"), "kg");
-  const weightKg = weight?.value ?? null;
+  const weight = observationTraced(latestObservation(value, "weight"));
   const creatinine = latestObservation(value, "serumCreatinine");
-
-  const idealKg =
-    sex !== undefined && heightCm !== null && heightCm >= IDEAL_WEIGHT_LOWEST_CM
-      ? idealWeightDevine({ heightCm, sex }).weightKg
-      : null;
-  const forClearance = weightKg === null ? null : clearanceWeight({ actualKg: weightKg, idealKg });
+  const albumin = observationTraced(latestObservation(value, "albumin"));
+  const sizes = sizeFigures(value, weight?.value ?? null, heightCm);
+  const clearance =
+    creatinine && clearanceFigure(value, weight?.value ?? null, sizes.idealWeight?.value ?? null, creatinine);
+  const known = { heightCm, weight, creatinine: observationTraced(creatinine), albumin, ...sizes };
   return {
-    heightCm,
-    weight,
-    creatinine: creatinine && {
-      ...entered(creatinine, "mg/dL")!,
-      inputs: [{ name: "as reported", value: creatinine.quantity.value, unit: creatinine.quantity.unit }],
-    },
-    idealWeight:
-      idealKg === null
+    ...known,
+    creatinineClearance: clearance,
+    clearanceWeight:
+      weight === null
         ? null
-        : traced(idealKg, "kg", idealWeightDevineSource, [{ name: "height", value: heightCm!, unit: "cm" }]),
-    adjustedWeight:
-      idealKg === null || weightKg === null || weightKg <= idealKg
-        ? null
-        : traced(adjustedWeight({ actualKg: weightKg, idealKg }), "kg", adjustedWeightSource, [
-            { name: "actual", value: weightKg, unit: "kg" },
-            { name: "ideal", value: idealKg, unit: "kg" },
-          ]),
-    bodyMassIndex:
-      heightCm === null || weightKg === null
-        ? null
-        : traced(bodyMassIndex({ weightKg, heightCm }), "1", bodyMassIndexSource, [
-            { name: "weight", value: weightKg, unit: "kg" },
-            { name: "height", value: heightCm, unit: "cm" },
-          ]),
-    creatinineClearance:
-      sex === undefined || age === undefined || age.value < ADULT_YEARS || forClearance === null || creatinine === null
-        ? null
-        : clearance(sex, age.value, forClearance, creatinine),
-    clearanceWeight: forClearance?.kind ?? null,
+        : clearanceWeight({ actualKg: weight.value, idealKg: sizes.idealWeight?.value ?? null }).kind,
+    filtrationRate: filtrationRate(value, known),
+    phenytoinForAlbumin: phenytoinFigure(value, albumin?.value ?? null, clearance?.value ?? null),
   };
 }
 
 /** Creatinine clearance with a given creatinine, mL/min, everything else as at the now line; null when it can't be worked out. */
 export function creatinineClearanceAt(value: Case, patient: PatientFigures, creatinine: Observation): number | null {
-  const { sex, age } = value.patient;
-  if (sex === undefined || age === undefined || age.value < ADULT_YEARS || patient.weight === null) return null;
-  const forClearance = clearanceWeight({ actualKg: patient.weight.value, idealKg: patient.idealWeight?.value ?? null });
-  return clearance(sex, age.value, forClearance, creatinine).value;
+  const found = clearanceFigure(value, patient.weight?.value ?? null, patient.idealWeight?.value ?? null, creatinine);
+  return found?.value ?? null;
 }
 
-function clearance(
-  sex: "female" | "male",
-  ageYears: number,
-  weight: { readonly weightKg: number; readonly kind: "actual" | "ideal" },
+type Sizes = Pick<
+  PatientFigures,
+  "idealWeight" | "adjustedWeight" | "bodyMassIndex" | "leanWeight" | "bodySurface" | "bodySurfaceDuBois"
+>;
+
+function sizeFigures(value: Case, weightKg: number | null, heightCm: number | null): Sizes {
+  const { sex, age } = value.patient;
+  const weightIn = { name: "weight", value: weightKg ?? 0, unit: "kg" } as const;
+  const heightIn = { name: "height", value: heightCm ?? 0, unit: "cm" } as const;
+  const ideal =
+    sex !== undefined && heightCm !== null && heightCm >= IDEAL_WEIGHT_LOWEST_CM
+      ? idealWeightDevine({ heightCm, sex })
+      : null;
+  const idealWeight =
+    ideal &&
+    patientTraced(
+      ideal.weightKg,
+      "kg",
+      idealWeightDevineSource,
+      [heightIn],
+      ideal.belowFormulaRange ? issue("ideal-weight-short", { heightCm }) : null,
+    );
+  const size = weightKg === null || heightCm === null ? null : { weightKg, heightCm };
+  const index = size && bodyMassIndex(size);
+  return {
+    idealWeight,
+    adjustedWeight:
+      ideal === null || weightKg === null || weightKg <= ideal.weightKg
+        ? null
+        : patientTraced(adjustedWeight({ actualKg: weightKg, idealKg: ideal.weightKg }), "kg", adjustedWeightSource, [
+            { name: "actual", value: weightKg, unit: "kg" },
+            { name: "ideal", value: ideal.weightKg, unit: "kg" },
+          ]),
+    bodyMassIndex: index === null ? null : patientTraced(index, "kg/m2", bodyMassIndexSource, [weightIn, heightIn]),
+    leanWeight:
+      size === null || index === null || index < LEAN_WEIGHT_LOWEST_INDEX || sex === undefined
+        ? null
+        : patientTraced(
+            leanWeightJanmahasatian({ ...size, sex }),
+            "kg",
+            leanWeightJanmahasatianSource,
+            [weightIn, { name: "BMI", value: index, unit: "kg/m2" }],
+            leanWeightQuestion({ ...size, ...(age === undefined ? {} : { ageYears: age.value }) }),
+          ),
+    bodySurface:
+      size && patientTraced(bodySurfaceMosteller(size), "m2", bodySurfaceMostellerSource, [heightIn, weightIn]),
+    bodySurfaceDuBois:
+      size && patientTraced(bodySurfaceDuBois(size), "m2", bodySurfaceDuBoisSource, [weightIn, heightIn]),
+  };
+}
+
+function clearanceFigure(
+  value: Case,
+  weightKg: number | null,
+  idealKg: number | null,
   creatinine: Observation,
-): Traced {
-  const mgPerDl = quantityAsMgPerDl(creatinine);
-  const figure = traced(
-    cockcroftGault({ ageYears, weightKg: weight.weightKg, creatinineMgPerDl: mgPerDl, sex }),
+): Traced | null {
+  const { sex, age } = value.patient;
+  const mgPerDl = observationTraced(creatinine)!;
+  if (sex === undefined || age === undefined || age.value < ADULT_YEARS || weightKg === null) return null;
+  const weight = clearanceWeight({ actualKg: weightKg, idealKg });
+  const figure = patientTraced(
+    cockcroftGault({ ageYears: age.value, weightKg: weight.weightKg, creatinineMgPerDl: mgPerDl.value, sex }),
     "mL/min",
     cockcroftGaultSource,
     [
-      { name: "age", value: ageYears, unit: "a" },
+      { name: "age", value: age.value, unit: "a" },
       { name: `weight (${weight.kind})`, value: weight.weightKg, unit: "kg" },
-      { name: "creatinine", value: mgPerDl, unit: "mg/dL" },
+      { name: "creatinine", value: mgPerDl.value, unit: "mg/dL" },
     ],
   );
   return {
     ...figure,
     source: `${figure.source}. Weight: ${clearanceWeightSource.formula} (${clearanceWeightSource.citation})`,
   };
-}
-
-function quantityAsMgPerDl(observation: Observation): number {
-  if (observation.kind !== "serumCreatinine")
-    throw new RangeError(`observation: "${observation.kind}"; allowed serumCreatinine`);
-  return creatinineMgPerDl(observation.quantity);
-}
-
-function entered(observation: Observation | null, unit: "kg" | "mg/dL"): Traced | null {
-  if (!observation) return null;
-  const value =
-    observation.kind === "serumCreatinine"
-      ? quantityAsMgPerDl(observation)
-      : quantityConvert(observation.quantity, unit);
-  return { value, unit, formula: "", inputs: [], source: "entered", basis: "entered" };
-}
-
-function traced(value: number, unit: Traced["unit"], source: FormulaSource, inputs: Traced["inputs"]): Traced {
-  return { value, unit, formula: source.formula, inputs, source: source.citation, basis: source.basis };
 }

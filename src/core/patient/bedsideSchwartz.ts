@@ -21,7 +21,7 @@ export const bedsideSchwartzSource: FormulaSource = {
  *
  * @param patient.ageYears a, from 1 to below 18
  * @param patient.heightCm cm, 30 to 275
- * @param patient.creatinineMgPerDl serum creatinine, mg/dL, 0.01 to 200
+ * @param patient.creatinineMgPerDl serum creatinine, mg/dL, 0.005 to 200
  * @returns mL/min per 1.73 m²: not a clearance of this patient until `clearanceDeindexed`
  *
  * Outside: throws RangeError. Accuracy: rounding only (relative error ≤ 1e-15); the estimate itself is far coarser.
@@ -40,6 +40,6 @@ export function bedsideSchwartz(patient: {
     );
   }
   requireWithin("heightCm", heightCm, "cm", 30, 275);
-  requireWithin("creatinineMgPerDl", creatinineMgPerDl, "mg/dL", 0.01, 200);
+  requireWithin("creatinineMgPerDl", creatinineMgPerDl, "mg/dL", 0.005, 200);
   return (FACTOR * heightCm) / creatinineMgPerDl;
 }

@@ -22,7 +22,7 @@ export const ckdEpi2021Source: FormulaSource = {
  * κ = 0.7 mg/dL for a woman, 0.9 for a man; α = −0.241 for a woman, −0.302 for a man
  *
  * @param patient.ageYears a, 18 to 130
- * @param patient.creatinineMgPerDl serum creatinine, mg/dL, 0.01 to 200
+ * @param patient.creatinineMgPerDl serum creatinine, mg/dL, 0.005 to 200
  * @returns mL/min per 1.73 m²: not a clearance of this patient until `clearanceDeindexed`
  *
  * Outside: throws RangeError. Accuracy: rounding only (relative error ≤ 1e-14); the estimate itself is far coarser.
@@ -36,7 +36,7 @@ export function ckdEpi2021(patient: {
 }): number {
   const { ageYears, creatinineMgPerDl, sex } = patient;
   requireWithin("ageYears", ageYears, "a", CKD_EPI_FROM_YEARS, 130);
-  requireWithin("creatinineMgPerDl", creatinineMgPerDl, "mg/dL", 0.01, 200);
+  requireWithin("creatinineMgPerDl", creatinineMgPerDl, "mg/dL", 0.005, 200);
   const ratio = creatinineMgPerDl / KAPPA[sex];
   const rate = 142 * Math.min(ratio, 1) ** ALPHA[sex] * Math.max(ratio, 1) ** -1.2 * 0.9938 ** ageYears;
   return sex === "female" ? rate * FEMALE_FACTOR : rate;

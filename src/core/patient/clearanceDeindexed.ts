@@ -15,7 +15,7 @@ export const clearanceDeindexedSource: FormulaSource = {
  *
  * rate = indexed · surface / 1.73
  *
- * @param estimate.perSurface mL/min per 1.73 m², 0 to 1,000
+ * @param estimate.perSurface mL/min per 1.73 m², 0 to 30,000 (what the equations give at the lowest creatinine taken)
  * @param estimate.bodySurfaceM2 m², 0.05 to 6
  * @returns mL/min, comparable with a Cockcroft–Gault clearance
  *
@@ -23,7 +23,7 @@ export const clearanceDeindexedSource: FormulaSource = {
  * Example: 95.21 per 1.73 m² at 2.0 m²: 110.07 mL/min.
  */
 export function clearanceDeindexed(estimate: { readonly perSurface: number; readonly bodySurfaceM2: number }): number {
-  requireWithin("perSurface", estimate.perSurface, "mL/min/{1.73_m2}", 0, 1_000);
+  requireWithin("perSurface", estimate.perSurface, "mL/min/{1.73_m2}", 0, 30_000);
   requireWithin("bodySurfaceM2", estimate.bodySurfaceM2, "m2", 0.05, 6);
   return (estimate.perSurface * estimate.bodySurfaceM2) / STANDARD_SURFACE_M2;
 }

@@ -20,7 +20,7 @@ export const cockcroftGaultSource: FormulaSource = {
  *
  * @param patient.ageYears a, above 0 and below 140; made for 18 and over: below, the number is returned and `clearanceQuestion` says so
  * @param patient.weightKg kg, 0.5 to 700; which weight is `clearanceWeight`'s to say
- * @param patient.creatinineMgPerDl serum creatinine, mg/dL, 0.01 to 200
+ * @param patient.creatinineMgPerDl serum creatinine, mg/dL, 0.005 to 200
  * @returns mL/min, not scaled to body surface
  *
  * Outside: throws RangeError. Accuracy: rounding only (relative error ≤ 1e-15); the estimate itself is far coarser.
@@ -37,7 +37,7 @@ export function cockcroftGault(patient: {
   if (!(ageYears > 0 && ageYears < 140))
     throw new RangeError(`ageYears: ${ageYears} a; allowed above 0 and below 140 a`);
   requireWithin("weightKg", weightKg, "kg", 0.5, 700);
-  requireWithin("creatinineMgPerDl", creatinineMgPerDl, "mg/dL", 0.01, 200);
+  requireWithin("creatinineMgPerDl", creatinineMgPerDl, "mg/dL", 0.005, 200);
   const male = ((140 - ageYears) * weightKg) / (72 * creatinineMgPerDl);
   return sex === "female" ? male * FEMALE_FACTOR : male;
 }

@@ -32,6 +32,7 @@ export {
 } from "./leanWeightJanmahasatian.ts";
 export {
   PHENYTOIN_ALBUMIN_NORMAL_G_PER_DL,
+  PHENYTOIN_FOR_ALBUMIN_RANGE,
   PHENYTOIN_KIDNEY_FAILURE_BELOW,
   type PhenytoinForm,
   phenytoinForAlbumin,

@@ -10,6 +10,8 @@ const PER_ALBUMIN: Readonly<Record<PhenytoinForm, number>> = { usual: 0.2, "kidn
 const FREE = 0.1;
 /** g/dL: the normal albumin of the formula. From here on there is no low albumin to correct for. */
 export const PHENYTOIN_ALBUMIN_NORMAL_G_PER_DL = 4.4;
+/** What the formula takes: mg/L and g/dL. */
+export const PHENYTOIN_FOR_ALBUMIN_RANGE = { measuredMgPerL: [0, 500], albuminGPerDl: [0.5, 7] } as const;
 /** mL/min: below, the form for kidney failure. */
 export const PHENYTOIN_KIDNEY_FAILURE_BELOW = 20;
 
@@ -50,8 +52,8 @@ export function phenytoinForAlbumin(level: {
   readonly form: PhenytoinForm;
 }): number {
   const { measuredMgPerL, albuminGPerDl, form } = level;
-  requireWithin("measuredMgPerL", measuredMgPerL, "mg/L", 0, 500);
-  requireWithin("albuminGPerDl", albuminGPerDl, "g/dL", 0.5, 7);
+  requireWithin("measuredMgPerL", measuredMgPerL, "mg/L", ...PHENYTOIN_FOR_ALBUMIN_RANGE.measuredMgPerL);
+  requireWithin("albuminGPerDl", albuminGPerDl, "g/dL", ...PHENYTOIN_FOR_ALBUMIN_RANGE.albuminGPerDl);
   return measuredMgPerL / (PER_ALBUMIN[form] * albuminGPerDl + FREE);
 }
 

@@ -88,7 +88,7 @@ describe("clearanceDeindexed", () => {
 
   it.each([
     ["perSurface", -1],
-    ["perSurface", 1001],
+    ["perSurface", 30_001],
     ["bodySurfaceM2", 0],
     ["bodySurfaceM2", Number.NaN],
   ])("%s of %d throws, naming it", (argument, value) => {
