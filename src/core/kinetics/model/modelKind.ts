@@ -1,6 +1,8 @@
 import type { BothReadings } from "../bothReadings.ts";
 import type { Absorption } from "./absorption.ts";
+import type { KineticsParameter } from "./kineticsParameter.ts";
 import type { Inflow, Stretch } from "./stretch.ts";
+import type { SweepBody, SweepState } from "./sweepBody.ts";
 
 /** One period of a repeating pattern, run from given amounts in the body. */
 export type PeriodRun = (body: Float64Array) => readonly { readonly stretch: Stretch; readonly length: number }[];
@@ -11,6 +13,8 @@ export interface ModelKind<D extends { readonly kind: string }> {
   /** Doses add up: the level from two doses is the sum of the levels from each. */
   readonly superposes: boolean;
   readonly compartments: 1 | 2;
+  /** What of a disposition differs between patients, named as in the disposition. */
+  readonly figures: readonly KineticsParameter[];
   /** Throws a RangeError naming the figure out of range. */
   check(name: string, disposition: D): void;
   /** From given amounts, over at most `length` h. */
@@ -20,6 +24,8 @@ export interface ModelKind<D extends { readonly kind: string }> {
    * `at` on and what flows into the first of them. Written from the definition, not from the closed forms.
    */
   equations(disposition: D, input: number, x: Float64Array, change: Float64Array, at: number): void;
+  /** The body of a sweep over many patients: fast, with the derivatives by each parameter, as accurate as a fit needs. */
+  sweepBody(state: SweepState): SweepBody<D>;
   /** The most that can be eliminated, mg/h: at this dose rate or above there is no steady state. Infinity where there is no limit. */
   capacity(disposition: D): number;
   /** mg in each compartment at the start of a period at steady state. `doseRate` mg/h, below the capacity. */

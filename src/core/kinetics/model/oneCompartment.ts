@@ -2,8 +2,10 @@ import { signChanges } from "../../numerics/index.ts";
 import { type BothReadings, bothReadings } from "../bothReadings.ts";
 import type { Absorption } from "./absorption.ts";
 import { inflowDerivative, linearResponseArea, linearResponseAt, linearResponseCarried } from "./linearResponse.ts";
+import { LinearSweepBody } from "./linearSweepBody.ts";
 import { modelPositive } from "./modelArgument.ts";
 import type { ModelKind, PeriodRun } from "./modelKind.ts";
+import { OneCompartmentSweep } from "./oneCompartmentSweep.ts";
 import { type Inflow, inflowAt, type Stretch, stretchReach } from "./stretch.ts";
 
 /** One compartment, elimination in proportion to the level. */
@@ -89,6 +91,8 @@ export const oneCompartment = {
   kind: "one-compartment",
   superposes: true,
   compartments: 1,
+  figures: ["clearance", "volume"],
+  sweepBody: (state) => new LinearSweepBody(state, 1, new OneCompartmentSweep(state)),
   check: (name, disposition) => {
     modelPositive(`${name}.clearance`, disposition.clearance, "L/h");
     modelPositive(`${name}.volume`, disposition.volume, "L");

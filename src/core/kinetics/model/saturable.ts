@@ -3,6 +3,7 @@ import { modelPositive } from "./modelArgument.ts";
 import type { ModelKind, PeriodRun } from "./modelKind.ts";
 import type { Saturation } from "./saturableSeries.ts";
 import { SaturableStretch } from "./saturableStretch.ts";
+import { SaturableSweepBody } from "./saturableSweepBody.ts";
 
 /** One compartment whose elimination saturates: rate = vmax·C/(km + C). */
 export interface SaturableDisposition {
@@ -70,6 +71,8 @@ export const saturable = {
   kind: "saturable",
   superposes: false,
   compartments: 1,
+  figures: ["vmax", "km", "volume"],
+  sweepBody: (state) => new SaturableSweepBody(state),
   check: (name, { vmax, km, volume }) => {
     modelPositive(`${name}.vmax`, vmax, "mg/h");
     modelPositive(`${name}.km`, km, "mg/L");

@@ -1,3 +1,4 @@
+import { LinearSweepBody } from "./linearSweepBody.ts";
 import type { ModelKind, PeriodRun } from "./modelKind.ts";
 import { type Inflow, inflowSlopeAt, type Stretch } from "./stretch.ts";
 import {
@@ -8,6 +9,7 @@ import {
 } from "./twoCompartmentConstants.ts";
 import { twoCompartmentDistributionEnd } from "./twoCompartmentDistributionEnd.ts";
 import { TwoCompartmentResponse } from "./twoCompartmentResponse.ts";
+import { TwoCompartmentSweep } from "./twoCompartmentSweep.ts";
 import { twoCompartmentTurns } from "./twoCompartmentTurns.ts";
 
 class TwoCompartmentStretch implements Stretch {
@@ -86,6 +88,8 @@ export const twoCompartment = {
   kind: "two-compartment",
   superposes: true,
   compartments: 2,
+  figures: ["clearance", "volume", "exchange", "peripheralVolume"],
+  sweepBody: (state) => new LinearSweepBody(state, 2, new TwoCompartmentSweep(state)),
   check: twoCompartmentCheck,
   stretch: (disposition, body, inflow) =>
     new TwoCompartmentStretch(twoCompartmentConstants(disposition), disposition.volume, body, inflow),

@@ -92,7 +92,7 @@ export class TwoCompartmentResponse {
 const DIFFERENCE_FROM = 2;
 
 /** decayChain of alpha > beta and k, their decays and the difference of the first two given: one level after another needs it quick. */
-function chainOfThree(
+export function chainOfThree(
   alpha: number,
   beta: number,
   k: number,
