@@ -1,3 +1,11 @@
+export {
+  adaptiveChain,
+  type ChainProblem,
+  type ChainSample,
+  LARGEST_R_HAT,
+  SMALLEST_EFFECTIVE_SIZE,
+} from "./adaptiveChain.ts";
+export { type ChainDiagnostics, chainDiagnostics } from "./chainDiagnostics.ts";
 export { chiSquareQuantile } from "./chiSquareQuantile.ts";
 export { choleskyFactor, type Matrix } from "./choleskyFactor.ts";
 export { choleskySolve } from "./choleskySolve.ts";
@@ -26,6 +34,7 @@ export { normalQuantile } from "./normalQuantile.ts";
 export { paretoSmoothed, type SmoothedWeights } from "./paretoSmoothed.ts";
 export { passedTwoSteps } from "./passedTwoSteps.ts";
 export { productError } from "./productError.ts";
+export { rankNormalised } from "./rankNormalised.ts";
 export { type Root, rootBracketed } from "./rootBracketed.ts";
 export { type SeededRandom, seededRandom } from "./seededRandom.ts";
 export { signChanges } from "./signChanges.ts";
