@@ -1,6 +1,7 @@
-// Writes what is made from the code and committed: the JSON Schemas in docs, and the medicine records inside the demo cases.
+// Writes what is made from the code and committed: the JSON Schemas and the pages of the medicine records in docs, and the records
+// inside the demo cases.
 // Run it after a change of a schema or a record: node .ci/schema.mjs
-import { readdirSync, readFileSync, writeFileSync } from "node:fs";
+import { mkdirSync, readdirSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { fileURLToPath } from "node:url";
 import { runnerImport } from "vite";
 
@@ -13,6 +14,18 @@ const { FILE_SCHEMAS, fileSchemaPrint } = await load("src/core/case/fileSchemas.
 for (const { file, make } of FILE_SCHEMAS) {
   writeFileSync(`${root}${file}`, fileSchemaPrint(make()));
   console.log(`wrote ${file}`);
+}
+
+const { medicinePages } = await load(".ci/medicinePages.ts");
+/** @type {ReadonlyMap<string, string>} */
+const pages = medicinePages();
+mkdirSync(`${root}docs/medicines`, { recursive: true });
+for (const [file, text] of pages) {
+  writeFileSync(`${root}${file}`, text);
+  console.log(`wrote ${file}`);
+}
+for (const name of readdirSync(`${root}docs/medicines`)) {
+  if (!pages.has(`docs/medicines/${name}`)) rmSync(`${root}docs/medicines/${name}`);
 }
 
 const { caseValidate, casePrint } = await load("src/core/case/index.ts");
