@@ -1,0 +1,148 @@
+import { ModelSweep } from "../kinetics/index.ts";
+import { estimationCheck } from "./estimationCheck.ts";
+import type { EstimationLevel, EstimationProblem } from "./estimationTypes.ts";
+import { type Prior, priorOf } from "./prior.ts";
+import { type ResidualTerm, residualTerm } from "./residualTerm.ts";
+
+/** Beyond this no η has a patient: e^30 is 1e13. */
+const MOST_ETA = 30;
+
+/**
+ * The objective of an estimation problem, with its gradient.
+ *
+ * Formula: O(η) = Σ residualTerm(levelⱼ, f(tⱼ; η)) + ½·ηᵀ·Ω⁻¹·η; ∂O/∂η = Σ termⱼ′·∂fⱼ/∂η + Ω⁻¹·η, the derivatives of the
+ * predictions from ModelSweep. The density of η given the levels is in proportion to e^(−O).
+ * Outside: a bad problem throws RangeError; O is Infinity, never NaN, where no patient has such figures (|η| above 30, a figure out of
+ * the kinetics' range) or a level is impossible.
+ * Accuracy: gradient against central differences 1e-6 relative (tests/core/estimation/estimationObjective.test.ts).
+ * Source: docs/methods/levels-to-this-patient.md.
+ */
+export class EstimationObjective {
+  readonly problem: EstimationProblem;
+  readonly prior: Prior;
+  /** In order of time; `order[i]` is the place of the i-th among the problem's levels. */
+  readonly order: readonly number[];
+  readonly #levels: readonly EstimationLevel[];
+  readonly #size: number;
+  readonly #values: ModelSweep;
+  readonly #gradients: ModelSweep;
+  readonly #term: ResidualTerm = { value: 0, slope: 0, curvature: 0 };
+  /** Of the last point a gradient was made at. */
+  #at: number[] | undefined;
+  #value = 0;
+  #gradient: number[] = [];
+  #curvature: number[] = [];
+
+  constructor(problem: EstimationProblem) {
+    estimationCheck(problem);
+    this.problem = problem;
+    this.prior = priorOf(problem);
+    this.#size = problem.random.length;
+    this.order = problem.levels.map((_, i) => i).sort((a, b) => problem.levels[a]!.time - problem.levels[b]!.time);
+    this.#levels = this.order.map((i) => problem.levels[i]!);
+    const names = problem.random.map(({ name }) => name);
+    const times = this.#levels.map(({ time }) => time);
+    this.#values = new ModelSweep(problem.history, names, times, false);
+    this.#gradients = new ModelSweep(problem.history, names, times, true);
+  }
+
+  /** O(η). */
+  value(eta: ArrayLike<number>): number {
+    if (!this.#run(this.#values, eta)) return Number.POSITIVE_INFINITY;
+    const { residual, residualModel } = this.problem;
+    const { levels } = this.#values;
+    let sum = this.#priorTerm(eta);
+    for (let j = 0; j < levels.length; j++) {
+      residualTerm(this.#levels[j]!, levels[j]!, residual, residualModel, this.#term);
+      sum += this.#term.value;
+    }
+    return sum < Infinity ? sum : Number.POSITIVE_INFINITY;
+  }
+
+  /** O(η), its gradient kept for the next call at the same point. */
+  valueWithGradient(eta: readonly number[]): number {
+    this.#evaluate(eta);
+    return this.#value;
+  }
+
+  /** Not finite where O is not. */
+  gradient(eta: readonly number[]): readonly number[] {
+    this.#evaluate(eta);
+    return this.#gradient;
+  }
+
+  /** Second derivatives without those of the predictions, the rest as expected (see residualTerm): positive definite. */
+  expectedHessian(eta: readonly number[]): number[][] {
+    this.#evaluate(eta);
+    const { precision } = this.prior;
+    const { derivatives } = this.#gradients;
+    return precision.map((row, a) =>
+      row.map((each, b) => {
+        let sum = each;
+        for (let j = 0; j < this.#curvature.length; j++) {
+          sum += this.#curvature[j]! * derivatives[a]![j]! * derivatives[b]![j]!;
+        }
+        return sum;
+      }),
+    );
+  }
+
+  /** mg/L at each level, in the order of the problem. */
+  predictions(eta: ArrayLike<number>): number[] {
+    const predictions = new Array<number>(this.order.length).fill(0);
+    this.#values.run(eta);
+    for (const [j, i] of this.order.entries()) predictions[i] = this.#values.levels[j]!;
+    return predictions;
+  }
+
+  #evaluate(eta: readonly number[]): void {
+    const before = this.#at;
+    if (before?.every((each, i) => each === eta[i])) return;
+    this.#at = [...eta];
+    const { precision } = this.prior;
+    const { residual, residualModel, levels } = this.problem;
+    this.#curvature = [];
+    if (!this.#run(this.#gradients, eta)) {
+      this.#value = Number.POSITIVE_INFINITY;
+      this.#gradient = eta.map(() => Number.POSITIVE_INFINITY);
+      return;
+    }
+    const gradient = precision.map((row) => row.reduce((sum, each, b) => sum + each * eta[b]!, 0));
+    let sum = this.#priorTerm(eta);
+    for (let j = 0; j < levels.length; j++) {
+      residualTerm(this.#levels[j]!, this.#gradients.levels[j]!, residual, residualModel, this.#term);
+      const { value, slope, curvature } = this.#term;
+      sum += value;
+      this.#curvature.push(curvature);
+      for (let a = 0; a < gradient.length; a++) {
+        gradient[a] = gradient[a]! + slope * this.#gradients.derivatives[a]![j]!;
+      }
+    }
+    const isFinite = sum < Infinity && gradient.every(Number.isFinite);
+    this.#value = isFinite ? sum : Number.POSITIVE_INFINITY;
+    this.#gradient = isFinite ? gradient : gradient.map(() => Number.POSITIVE_INFINITY);
+  }
+
+  /** False where no patient has such figures. */
+  #run(sweep: ModelSweep, eta: ArrayLike<number>): boolean {
+    for (let i = 0; i < this.#size; i++) if (!(Math.abs(eta[i]!) <= MOST_ETA)) return false;
+    try {
+      sweep.run(eta);
+      return true;
+    } catch (fault) {
+      // The arguments were checked when the sweep was made: what is left is a figure scaled out of its range.
+      if (fault instanceof RangeError) return false;
+      throw fault;
+    }
+  }
+
+  #priorTerm(eta: ArrayLike<number>): number {
+    const { precision } = this.prior;
+    let sum = 0;
+    for (let a = 0; a < precision.length; a++) {
+      const row = precision[a]!;
+      for (let b = 0; b < row.length; b++) sum += row[b]! * eta[a]! * eta[b]!;
+    }
+    return sum / 2;
+  }
+}
