@@ -4,4 +4,5 @@ export { laneDoses } from "./caseDoses.ts";
 export { concentrationAt, hoursSinceDose } from "./concentrationAt.ts";
 export { type DeriveOptions, derive, deriveSteps, ENGINE } from "./derive.ts";
 export type * from "./fitTypes.ts";
+export { concentrationWindow } from "./optionReadings.ts";
 export { TAUGHT_LITTLE, TAUGHT_MUCH } from "./taughtThresholds.ts";

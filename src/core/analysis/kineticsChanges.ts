@@ -50,7 +50,7 @@ function dispositionAt(
   const covariates = patientCovariates(value, patient, clearance ?? patient.creatinineClearance?.value);
   const values: Record<string, number> = {};
   for (const { name, formula } of kineticsFormulas(value.medicine)) {
-    const result = formulaEvaluate(formula.formula, covariates);
+    const result = formulaEvaluate(formula, covariates);
     if (!result.ok)
       throw new RangeError(`formula: "${formula.formula}" has no value although it had one at the now line`);
     values[name] = result.value.value;

@@ -1,6 +1,7 @@
 import type { Case } from "../case/index.ts";
 import { modelExposure, modelSteadyState, modelTimeToSteadyState } from "../kinetics/index.ts";
 import type { DoseLine } from "../regimen/index.ts";
+import { quantityConvert } from "../units/index.ts";
 import type { Model, OptionReadings, SpanReadings, SteadyStateReadings } from "./analysisTypes.ts";
 import { finalDisposition, modelHistory, modelInputs } from "./modelInputs.ts";
 import { type RegimenPattern, regimenPattern } from "./regimenPattern.ts";
@@ -36,11 +37,12 @@ export function optionReadings(
   };
 }
 
-/** The case's window in mg/L, or null when it has none or it is about the AUC. */
+/** The case's window in mg/L, by the record's molar mass where it is in a molar unit, or null when it has none or it is about the AUC. */
 export function concentrationWindow(value: Case): { readonly low: number; readonly high: number } | null {
   const { window } = value;
-  if (window?.low.unit !== "mg/L" || window.high.unit !== "mg/L") return null;
-  return { low: window.low.value, high: window.high.value };
+  if (window === undefined || window.quantity === "auc24") return null;
+  const mgPerL = (end: typeof window.low) => quantityConvert(end, "mg/L", value.medicine.molarMass.value);
+  return { low: mgPerL(window.low), high: mgPerL(window.high) };
 }
 
 function spanReadings(

@@ -49,7 +49,7 @@ export function typicalModel(
   const values: Partial<Record<string, number>> = {};
   const issues: Issue[] = [];
   for (const { name, symbol, words, formula } of kineticsFormulas(record)) {
-    const result = formulaEvaluate(formula.formula, covariates);
+    const result = formulaEvaluate(formula, covariates);
     if (!result.ok) {
       issues.push(...result.issues);
       continue;

@@ -1,12 +1,13 @@
 import { fail, issue, type Result, succeed } from "../result/index.ts";
 import { CASE_FORMAT } from "./caseSchema.ts";
+import { case0001 } from "./migrations/0001.ts";
 
 type Fields = Readonly<Record<string, unknown>>;
 /** Step n (counted from 0) takes a case of version n + 1 to version n + 2. Pure, and frozen once released. */
 export type MigrationStep = (value: Fields) => Fields;
 
 /** A new version is one file in ./migrations and one line here; then CASE_VERSION counts up. */
-export const CASE_MIGRATIONS: readonly MigrationStep[] = [];
+export const CASE_MIGRATIONS: readonly MigrationStep[] = [case0001];
 
 /**
  * Brings a case of any released version to the newest, after looking at what it says it is.

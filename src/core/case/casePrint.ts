@@ -7,13 +7,14 @@ import type { Case } from "./caseSchema.ts";
 export const FIELD_ORDER: readonly string[] = (
   "format version id index recordVersion name invented label demo timeZone now at kind " +
   "patient sex age height observations factors from to detail effect onset " +
-  "medicine review status by on matrix molarMass sources title authors year place " +
+  "medicine review status by on copyOf matrix molarMass displayUnit sources title authors year place estimates " +
   "kinetics variability clearance maximumRate halfMaximum volume exchange peripheralVolume apparent " +
-  "absorptionRate input duration fastFraction slowRate slowDuration slowLag saltFactor residualProportional residualAdditive " +
-  "population products product form release strengths concentration divisible swallowWhole lag bioavailability " +
-  "windows toxicFrom earliestSample doseLimits sampling cautions formula text category " +
-  "window quantity low high value unit given levels options lines amount start repeat every count clock days weekdays except " +
-  "chosen confirmed excluded ageMin ageMax source basis note fit use residualModel notes"
+  "absorptionRate input duration fastFraction slowRate slowDuration slowLag saltFactor salt residualProportional residualAdditive " +
+  "correlations between population products product form release strengths concentration divisible swallowWhole lag bioavailability " +
+  "windows toxicFrom limits maximumSingleDose maximumDailyDose earliestSample steadyStateAfter doseLimits sampling interactions " +
+  "autoinduction settledAfter cautions parameter factor formula text category setting number ranges covariate use " +
+  "window quantity low high drawFrom drawTo value unit given levels options lines amount start repeat every count clock days weekdays except " +
+  "chosen confirmed excluded source basis note fit residualModel notes"
 ).split(" ");
 
 const RANK: ReadonlyMap<string, number> = new Map(FIELD_ORDER.map((name, i) => [name, i]));

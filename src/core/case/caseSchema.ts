@@ -1,12 +1,12 @@
 import { z } from "zod";
-import { medicineRecordSchema } from "../medicine/index.ts";
+import { medicineRecordSchema, WINDOW_UNITS } from "../medicine/index.ts";
 import { doseLineSchema } from "../regimen/index.ts";
 import { instantSchema, timeZoneSchema } from "../time/index.ts";
 import { quantityIn } from "../units/index.ts";
 
-/** The saved case, version 1: docs/case-file.md. Unknown fields are refused with their path. */
+/** The saved case, version 2: docs/case-file.md. Unknown fields are refused with their path. */
 export const CASE_FORMAT = "ebbline-case";
-export const CASE_VERSION = 1;
+export const CASE_VERSION = 2;
 
 const id = z.string().min(1).max(64);
 
@@ -42,13 +42,15 @@ export const factorSchema = z.strictObject({
   detail: z.string().max(200),
   /**
    * What it does to this patient's kinetics while it lasts, as a factor on clearance (saturable: on Vmax) and on volume.
-   * With an onset the clearance gets there in daily steps; the user's own figure, printed as such.
+   * With an onset the clearance gets there in daily steps.
    */
   effect: z
     .strictObject({
       clearance: z.number().min(0.05).max(20),
       volume: z.number().min(0.2).max(5).optional(),
       onset: quantityIn("d").optional(),
+      /** Where the factors came from, such as an interaction of the record; left out: the user's own figures. */
+      source: z.string().min(1).max(300).optional(),
     })
     .optional(),
 });
@@ -61,11 +63,11 @@ export const patientSchema = z.strictObject({
   factors: z.array(factorSchema).max(500),
 });
 
-/** What a window is about. "lowest-and-highest": the whole curve is to stay inside. */
+/** What a window is about, by mass or by amount of substance. "lowest-and-highest": the whole curve is to stay inside. */
 export const windowSchema = z.strictObject({
   quantity: z.enum(["trough", "peak", "average", "auc24", "lowest-and-highest"]),
-  low: quantityIn("mg/L", "mg.h/L"),
-  high: quantityIn("mg/L", "mg.h/L"),
+  low: quantityIn(...WINDOW_UNITS),
+  high: quantityIn(...WINDOW_UNITS),
   basis: z.string().max(400),
 });
 

@@ -1,8 +1,10 @@
-import type { FunctionNode, MathNode, OperatorNode, ParenthesisNode } from "mathjs/number";
 import { fail, type Issue, issue, type Result, succeed } from "../result/index.ts";
-import type { UnitCode } from "../units/index.ts";
+import { decimalOf, decimalScaled, type UnitCode } from "../units/index.ts";
 import { COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
-import { FUNCTIONS, formulaRead, isFunctionName, nameOf, OPERATORS, type Operation } from "./formulaRead.ts";
+import type { Formula } from "./figureSchema.ts";
+import type { FormulaNode } from "./formulaNode.ts";
+import { COMPARISONS, FUNCTIONS, OPERATORS, type Operation } from "./formulaOperations.ts";
+import { formulaDimension, formulaRead } from "./formulaRead.ts";
 
 export interface FormulaInput {
   readonly name: CovariateName;
@@ -10,21 +12,24 @@ export interface FormulaInput {
   readonly unit: UnitCode;
 }
 
+type WrittenFormula = Pick<Formula, "formula" | "unit">;
+
 /**
- * The value of a record's formula for one patient, with the numbers that went in (each once, in order of appearance).
- * Only numbers, the names of COVARIATES, + - * / ^ and exp, log, sqrt, min, max are understood; nothing is ever executed.
- * A covariate the formula needs and the patient lacks gives "formula-needs"; a result that is not finite and above 0, "formula-result".
- * Example: formulaEvaluate("0.053 * min(weight, idealWeight)", { weight: 58, idealWeight: 54.2 }) → 2.8726.
+ * The value of a record's formula for one patient, in the formula's unit, with the numbers that went in (each once, in order of appearance).
+ * Only what docs/medicine-record.md lists is understood; nothing is ever executed. Of a condition only the branch that holds is worked out.
+ * A covariate the formula names and the patient lacks gives "formula-needs"; a result that is not finite and above 0, "formula-result".
+ * Accuracy: one rounding an operation; a change of unit is exact but for one rounding, and none is done where the units are the same.
+ * Example: { formula: "0.053 L/h/kg * min(weight, idealWeight)", unit: "L/h" } at weight 58 kg, ideal weight 54.2 kg → 2.8726 L/h.
  */
 export function formulaEvaluate(
-  formula: string,
+  formula: WrittenFormula,
   covariates: Covariates,
 ): Result<{ readonly value: number; readonly inputs: readonly FormulaInput[] }> {
   const read = formulaRead(formula);
   if (!read.ok) return read;
   const inputs: FormulaInput[] = [];
   const faults: Issue[] = [];
-  for (const name of namesIn(read.value)) {
+  for (const name of read.value.covariates) {
     const value = covariates[name];
     if (value === undefined) faults.push(issue("formula-needs", { name }));
     else if (!isAllowed(name, value))
@@ -32,46 +37,59 @@ export function formulaEvaluate(
     else inputs.push({ name, value, unit: COVARIATES[name] });
   }
   if (faults.length > 0) return fail(...faults);
-  const value = nodeValue(read.value, covariates);
-  if (!Number.isFinite(value) || value <= 0) return fail(issue("formula-result", { formula, found: String(value) }));
+  const value = nodeValue(read.value.root, covariates);
+  if (!Number.isFinite(value) || value <= 0) {
+    return fail(issue("formula-result", { formula: formula.formula, found: String(value) }));
+  }
   return succeed({ value, inputs });
 }
 
-/** The covariates a formula uses, each once, in order of appearance; none for a formula that can't be read. */
-export function formulaCovariates(formula: string): readonly CovariateName[] {
-  const read = formulaRead(formula);
-  return read.ok ? namesIn(read.value) : [];
+/** What an editor shows beside a formula: its value for a patient, the numbers that went in, and the dimension it has. */
+export interface FormulaTrace {
+  /** As words or units: "L/h", "mass", "L/h/kg"; null where the formula can't be read. */
+  readonly dimension: string | null;
+  /** In the formula's unit; null with the issues saying why. */
+  readonly value: number | null;
+  readonly unit: Formula["unit"];
+  readonly inputs: readonly FormulaInput[];
+  readonly issues: readonly Issue[];
 }
 
-function namesIn(node: MathNode): CovariateName[] {
-  const names = new Set<CovariateName>();
-  node.traverse((each, _path, parent) => {
-    if (each.type === "SymbolNode" && !isFunctionName(each, parent)) names.add(nameOf(each) as CovariateName);
-  });
-  return [...names];
+export function formulaTrace(formula: WrittenFormula, covariates: Covariates): FormulaTrace {
+  const found = formulaEvaluate(formula, covariates);
+  return {
+    dimension: formulaDimension(formula.formula),
+    value: found.ok ? found.value.value : null,
+    unit: formula.unit,
+    inputs: found.ok ? found.value.inputs : [],
+    issues: found.ok ? [] : found.issues,
+  };
 }
 
-/** Walks a tree that formulaRead has let pass: no other node can occur. */
-function nodeValue(node: MathNode, covariates: Covariates): number {
-  switch (node.type) {
-    case "ConstantNode":
-      return (node as unknown as { value: number }).value;
-    case "SymbolNode":
-      return covariates[nameOf(node) as CovariateName] as number;
-    case "ParenthesisNode":
-      return nodeValue((node as ParenthesisNode).content, covariates);
-    case "OperatorNode": {
-      const { fn, args } = node as OperatorNode;
-      return (OPERATORS[fn] as Operation)(...args.map((each) => nodeValue(each, covariates)));
+function nodeValue(node: FormulaNode, covariates: Covariates): number {
+  switch (node.kind) {
+    case "number":
+      return node.value;
+    case "covariate":
+      return covariates[node.name] as number;
+    case "convert": {
+      const value = nodeValue(node.of, covariates);
+      return Number.isFinite(value) ? decimalScaled(decimalOf(value), node.by.top, node.by.bottom) : value;
     }
-    case "FunctionNode": {
-      const { fn, args } = node as FunctionNode;
-      const known = FUNCTIONS[nameOf(fn as MathNode)] as { call: Operation };
-      return known.call(...args.map((each) => nodeValue(each, covariates)));
-    }
-    default:
-      throw new RangeError(`formula: a part of kind "${node.type}" passed the check`);
+    case "operator":
+      return (OPERATORS[node.name] as Operation)(...node.of.map((each) => nodeValue(each, covariates)));
+    case "function":
+      return (FUNCTIONS[node.name].call as Operation)(...node.of.map((each) => nodeValue(each, covariates)));
+    case "condition":
+      return nodeValue(holds(node.test, covariates) ? node.whenTrue : node.whenFalse, covariates);
+    case "comparison":
+      throw new RangeError("formula: a comparison stands where a number is wanted although it was checked");
   }
+}
+
+function holds(node: FormulaNode, covariates: Covariates): boolean {
+  if (node.kind !== "comparison") throw new RangeError("formula: a condition without a comparison passed the check");
+  return COMPARISONS[node.name](nodeValue(node.left, covariates), nodeValue(node.right, covariates));
 }
 
 /** A newborn is 0 years old; every other covariate but isFemale is above 0. A value that is no number is the caller's mistake. */

@@ -1,5 +1,5 @@
-import { formulaCovariates } from "./covariateFormula.ts";
 import type { CovariateName } from "./covariates.ts";
+import { formulaCovariates } from "./formulaRead.ts";
 import { kineticsFormulas } from "./kineticsKinds.ts";
 import type { MedicineRecord } from "./medicineRecord.ts";
 

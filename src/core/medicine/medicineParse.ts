@@ -1,12 +1,16 @@
 import { fail, type Issue, issue, type Result, succeed } from "../result/index.ts";
 import type { MedicineRecord } from "./medicineRecord.ts";
 import { medicineRecordSchema } from "./medicineRecordSchema.ts";
+import { recordMigrate } from "./recordMigrate.ts";
 import { pathText, schemaIssues } from "./schemaIssues.ts";
 
-/** Reads a medicine record: the record, or every fault of it with its path. */
+/** Reads a medicine record of any released version: the record as it is now, or every fault of it with its path. */
 export function medicineParse(json: unknown): Result<MedicineRecord> {
-  const parsed = medicineRecordSchema.safeParse(json);
-  return parsed.success ? succeed(parsed.data) : fail(...recordIssues(schemaIssues(parsed.error, json), json, []));
+  const migrated = recordMigrate(json);
+  if (!migrated.ok) return migrated;
+  const { value } = migrated;
+  const parsed = medicineRecordSchema.safeParse(value);
+  return parsed.success ? succeed(parsed.data) : fail(...recordIssues(schemaIssues(parsed.error, value), value, []));
 }
 
 /**

@@ -1,12 +1,21 @@
 import { z } from "zod";
-import { quantityIn } from "../units/index.ts";
-import { figureSchema, provenance } from "./figureSchema.ts";
+import { quantityIn, UNIT_CODES } from "../units/index.ts";
+import { COVARIATE_NAMES } from "./covariates.ts";
+import { figureSchema, provenance, statementSchema } from "./figureSchema.ts";
 import { kineticsSchema } from "./kineticsKinds.ts";
 
 /**
  * A medicine record: kinetics, products, windows and cautions of one medicine, each figure with its source and basis.
- * The schema refuses a figure without one.
+ * The schema refuses a figure without one. Version 2: docs/medicine-record.md.
  */
+export const RECORD_FORMAT = "ebbline-medicine";
+export const RECORD_VERSION = 2;
+
+/** Units in which the concentrations of a medicine may be shown first. */
+export const DISPLAY_UNITS = ["mg/L", "ug/L", "umol/L", "nmol/L", "mmol/L"] as const;
+export type DisplayUnit = (typeof DISPLAY_UNITS)[number];
+/** Units a target window may be in: a concentration by mass or by amount, or an exposure. */
+export const WINDOW_UNITS = [...DISPLAY_UNITS, "mg.h/L"] as const;
 
 export const sourceSchema = z.strictObject({
   title: z.string().min(1),
@@ -15,10 +24,8 @@ export const sourceSchema = z.strictObject({
   place: z.string().optional(),
 });
 
-const statementSchema = z.strictObject({ text: z.string().min(1), ...provenance });
 const cautionSchema = z.strictObject({ text: z.string().min(1), category: z.string().min(1), ...provenance });
 
-/** One member a model kind; a new kind adds one member here. */
 /** How a product is taken up where a single first-order rate does not say it. */
 const productInputSchema = z.discriminatedUnion("kind", [
   z.strictObject({ kind: z.literal("zero-order"), duration: figureSchema }),
@@ -49,6 +56,8 @@ export const productSchema = z.strictObject({
   input: productInputSchema.optional(),
   /** mg of the active moiety in 1 mg as the product is labelled; 1 when absent. */
   saltFactor: figureSchema.optional(),
+  /** What the label's mass is of: "sodium", "carbonate"; absent where it is the active moiety itself. */
+  salt: z.string().min(1).max(64).optional(),
   lag: figureSchema, // h
   bioavailability: figureSchema, // 1
 });
@@ -56,16 +65,74 @@ export const productSchema = z.strictObject({
 export const recordWindowSchema = z.strictObject({
   id: z.string().min(1).max(64),
   label: z.string().min(1),
+  /** "epilepsy", "heart failure in sinus rhythm" */
+  use: z.string().min(1),
+  /** "just before a dose", "8 to 12 h after a dose" */
+  sampling: z.string().min(1),
   quantity: z.enum(["trough", "peak", "average", "auc24", "lowest-and-highest"]),
-  low: quantityIn("mg/L", "mg.h/L"),
-  high: quantityIn("mg/L", "mg.h/L"),
+  low: quantityIn(...WINDOW_UNITS),
+  high: quantityIn(...WINDOW_UNITS),
+  /** Hours after the dose between which the level is drawn; a trough needs none. */
+  drawFrom: figureSchema.optional(),
+  drawTo: figureSchema.optional(),
   ...provenance,
+});
+
+/** Between-patient variability as coefficients of variation, %; the parameters they may stand for. */
+export const VARIED = [
+  "clearance",
+  "maximumRate",
+  "halfMaximum",
+  "volume",
+  "exchange",
+  "peripheralVolume",
+  "absorptionRate",
+  "bioavailability",
+] as const;
+export type VariedName = (typeof VARIED)[number];
+
+const variabilitySchema = z.strictObject({
+  clearance: figureSchema.optional(),
+  maximumRate: figureSchema.optional(),
+  halfMaximum: figureSchema.optional(),
+  volume: figureSchema.optional(),
+  exchange: figureSchema.optional(),
+  peripheralVolume: figureSchema.optional(),
+  absorptionRate: figureSchema.optional(),
+  bioavailability: figureSchema.optional(),
+  residualProportional: figureSchema.optional(),
+  residualAdditive: figureSchema.optional(), // mg/L
+  /** Of the logs of two parameters. */
+  correlations: z
+    .array(z.strictObject({ between: z.tuple([z.enum(VARIED), z.enum(VARIED)]), ...figureSchema.shape }))
+    .optional(),
+});
+
+/** Where a covariate of the patients lay; at least one end, in the covariate's own unit. */
+const populationRangeSchema = z.strictObject({
+  covariate: z.enum(COVARIATE_NAMES),
+  low: z.number().optional(),
+  high: z.number().optional(),
+  unit: z.enum(UNIT_CODES),
+  ...provenance,
+});
+
+const interactionSchema = z.strictObject({
+  id: z.string().min(1).max(64),
+  /** The other medicine: "phenytoin", "valproate". */
+  medicine: z.string().min(1).max(80),
+  /** On the clearance of a saturable record it acts on Vmax. */
+  parameter: z.enum(["clearance", "volume"]),
+  /** Its source and basis are those of the interaction. */
+  factor: figureSchema, // 1
+  onset: figureSchema.optional(), // d
+  text: z.string().min(1),
 });
 
 /** The shape alone; medicineRecordSchema adds the checks across fields. */
 export const recordShapeSchema = z.strictObject({
-  format: z.literal("ebbline-medicine"),
-  version: z.literal(1),
+  format: z.literal(RECORD_FORMAT),
+  version: z.literal(RECORD_VERSION),
   id: z.string().min(1).max(64),
   /** Counts up with every change of the record's content; printed on the summary. */
   recordVersion: z.int().min(1),
@@ -76,33 +143,40 @@ export const recordShapeSchema = z.strictObject({
     by: z.string().optional(),
     on: z.string().optional(),
   }),
+  /** A user's copy names the record it was made from. */
+  copyOf: z.strictObject({ id: z.string().min(1).max(64), recordVersion: z.int().min(1) }).optional(),
   matrix: z.string().min(1),
+  /** Of what the laboratory reports. */
   molarMass: figureSchema,
+  /** The unit concentrations are shown in first. */
+  displayUnit: z.enum(DISPLAY_UNITS),
   sources: z.record(z.string(), sourceSchema),
+  /** Whether the kinetics and their variability were estimated together, or taken from several studies. */
+  estimates: z.strictObject({ from: z.enum(["one-model", "pieced-together"]), ...statementSchema.shape }),
   kinetics: kineticsSchema,
   /** Between-patient and residual variability, as published; shown, and used once levels adjust the prediction. */
-  variability: z.strictObject({
-    clearance: figureSchema.optional(),
-    maximumRate: figureSchema.optional(),
-    halfMaximum: figureSchema.optional(),
-    volume: figureSchema.optional(),
-    absorptionRate: figureSchema.optional(),
-    residualProportional: figureSchema.optional(),
-    residualAdditive: figureSchema.optional(),
-  }),
+  variability: variabilitySchema,
   population: z.strictObject({
-    text: z.string().min(1),
-    ageMin: z.number().optional(),
-    ageMax: z.number().optional(),
-    ...provenance,
+    ...statementSchema.shape,
+    setting: z.string().min(1).optional(),
+    /** How many patients. */
+    number: figureSchema.optional(),
+    ranges: z.array(populationRangeSchema),
   }),
   products: z.array(productSchema).min(1),
   windows: z.array(recordWindowSchema),
   toxicFrom: figureSchema.optional(),
+  /** mg as labelled. */
+  limits: z.strictObject({ maximumSingleDose: figureSchema.optional(), maximumDailyDose: figureSchema.optional() }),
   /** Hours after a dose before which a level is not to be drawn, where a source says so. */
   earliestSample: figureSchema.optional(),
+  /** h or d after the start of a regimen or a change of it. */
+  steadyStateAfter: figureSchema.optional(),
   doseLimits: z.array(statementSchema),
   sampling: z.array(statementSchema),
+  interactions: z.array(interactionSchema),
+  /** The medicine speeds up its own elimination; settled after so many days. */
+  autoinduction: z.strictObject({ ...statementSchema.shape, settledAfter: figureSchema.optional() }).optional(),
   cautions: z.array(cautionSchema),
 });
 
@@ -110,3 +184,5 @@ export type MedicineRecord = z.infer<typeof recordShapeSchema>;
 export type Product = z.infer<typeof productSchema>;
 export type Source = z.infer<typeof sourceSchema>;
 export type RecordWindow = z.infer<typeof recordWindowSchema>;
+export type PopulationRange = z.infer<typeof populationRangeSchema>;
+export type Interaction = z.infer<typeof interactionSchema>;

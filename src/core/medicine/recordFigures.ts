@@ -1,5 +1,4 @@
-import type { Basis, Figure } from "./figureSchema.ts";
-import { kineticsFormulas } from "./kineticsKinds.ts";
+import { BASES, type Basis } from "./figureSchema.ts";
 import type { MedicineRecord } from "./medicineRecord.ts";
 
 /** One figure of a record, wherever it stands: what the reader may ask the source of. */
@@ -10,48 +9,55 @@ export interface RecordFigure {
   readonly note?: string | undefined;
 }
 
-/** From best known to least: of several strengths of a product the least known speaks for all. */
-const TRUST: readonly Basis[] = ["seen", "common practice", "memory", "invented"];
+/** The parts of a record that hold figures, in the order in which they are read. */
+const PARTS = [
+  "molarMass",
+  "kinetics",
+  "variability",
+  "population",
+  "products",
+  "windows",
+  "toxicFrom",
+  "limits",
+  "earliestSample",
+  "steadyStateAfter",
+  "interactions",
+  "autoinduction",
+] as const satisfies readonly (keyof MedicineRecord)[];
 
 /**
- * The figures of a record, in its own order: molar mass, the formulas of its kinetics, variability, each product's content
- * (its strengths together count as one), absorption rate, input, salt factor, lag and bioavailability, windows and the toxic limit.
- * Statements (dose limits, sampling, cautions, population) are not figures.
+ * The figures of a record, in reading order: everything with a source but the statements (estimates, population, dose limits, sampling,
+ * cautions, autoinduction), whose own figures count. The strengths of a product together are one, known as well as the least known of them.
  */
 export function recordFigures(record: MedicineRecord): RecordFigure[] {
-  const figures: RecordFigure[] = [{ path: ["molarMass"], ...provenance(record.molarMass) }];
-  const add = (path: RecordFigure["path"], figure: Omit<Figure, "value" | "unit"> | undefined): void => {
-    if (figure) figures.push({ path, ...provenance(figure) });
-  };
-  for (const { name, formula } of kineticsFormulas(record)) add(["kinetics", name], formula);
-  for (const [name, figure] of Object.entries(record.variability)) add(["variability", name], figure);
-  record.products.forEach((product, i) => {
-    const at = (...rest: (string | number)[]) => ["products", i, ...rest];
-    const leastKnown = [...product.strengths].sort((a, b) => TRUST.indexOf(b.basis) - TRUST.indexOf(a.basis))[0];
-    add(at("strengths"), leastKnown);
-    add(at("concentration"), product.concentration);
-    add(at("absorptionRate"), product.absorptionRate);
-    for (const [name, figure] of Object.entries(product.input ?? {})) {
-      if (typeof figure === "object") add(at("input", name), figure);
-    }
-    add(at("saltFactor"), product.saltFactor);
-    add(at("lag"), product.lag);
-    add(at("bioavailability"), product.bioavailability);
-  });
-  record.windows.forEach((window, i) => {
-    add(["windows", i], window);
-  });
-  add(["toxicFrom"], record.toxicFrom);
-  add(["earliestSample"], record.earliestSample);
-  return figures;
+  return PARTS.flatMap((part) => figuresIn(record[part], [part]));
 }
 
-function provenance({ basis, source, note }: { basis: Basis; source: string; note?: string | undefined }) {
+function figuresIn(value: unknown, path: RecordFigure["path"]): RecordFigure[] {
+  if (typeof value !== "object" || value === null) return [];
+  if (path.at(-1) === "strengths") return leastKnown(value as RecordFigure[], path);
+  const own = isFigure(value) ? [{ path, ...provenance(value) }] : [];
+  const parts = Array.isArray(value) ? value.map((each, i) => [i, each] as const) : Object.entries(value);
+  return [...own, ...parts.flatMap(([key, each]) => figuresIn(each, [...path, key]))];
+}
+
+function leastKnown(strengths: readonly RecordFigure[], path: RecordFigure["path"]): RecordFigure[] {
+  const least = [...strengths].sort((a, b) => BASES.indexOf(b.basis) - BASES.indexOf(a.basis))[0];
+  return least ? [{ path, ...provenance(least) }] : [];
+}
+
+function isFigure(value: object): value is Omit<RecordFigure, "path"> {
+  return "basis" in value && "source" in value && !("text" in value);
+}
+
+function provenance({ basis, source, note }: Omit<RecordFigure, "path">) {
   return { basis, source, ...(note !== undefined && { note }) };
 }
 
-/** How many figures of a record nobody has read in their source: for "2 of 9 figures unverified". */
+/** How many figures of a record are known in which way: for "2 of 9 figures unverified", and for the share of each. */
 export function unverifiedFigures(record: MedicineRecord): {
+  readonly seen: number;
+  readonly derived: number;
   readonly memory: number;
   readonly commonPractice: number;
   readonly invented: number;
@@ -60,6 +66,8 @@ export function unverifiedFigures(record: MedicineRecord): {
   const figures = recordFigures(record);
   const count = (basis: Basis) => figures.filter((each) => each.basis === basis).length;
   return {
+    seen: count("seen"),
+    derived: count("derived"),
     memory: count("memory"),
     commonPractice: count("common practice"),
     invented: count("invented"),

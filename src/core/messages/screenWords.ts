@@ -170,6 +170,7 @@ export const medicinesWords = {
   keep: "Keep it",
   bases: {
     seen: "seen in the source",
+    derived: "derived from figures seen",
     memory: "from memory, unverified",
     "common practice": "common practice",
     invented: "invented",

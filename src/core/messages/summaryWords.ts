@@ -280,6 +280,7 @@ export const summaryDetailWords = {
   sourceAndBasis: (source: string, basis: string) => `${source} ${basis}`,
   bases: {
     seen: "read",
+    derived: "derived",
     memory: "from memory, unverified",
     "common practice": "common practice",
     invented: "invented",

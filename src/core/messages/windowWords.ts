@@ -1,5 +1,6 @@
 import type { TargetWindow } from "../case/index.ts";
-import { numberPrint, quantityConvert, unitSpoken } from "../units/index.ts";
+import type { DisplayUnit } from "../medicine/index.ts";
+import { numberPrint, quantityConvert, unitDimension, unitSpoken } from "../units/index.ts";
 
 /** What a target window is about, in words. */
 const WORDS: Readonly<Record<TargetWindow["quantity"], string>> = {
@@ -14,11 +15,12 @@ export function windowQuantityWord(quantity: TargetWindow["quantity"]): string {
   return WORDS[quantity];
 }
 
-/** "5 to 15 mg/L"; a concentration in the unit the medicine is read in. */
-export function windowRangeWords({ low, high }: TargetWindow, shown: "mg/L" | "ug/L"): string {
+/** "5 to 15 mg/L"; a concentration in the unit the medicine is read in, but one that was stated in a molar unit as it was stated. */
+export function windowRangeWords({ low, high }: TargetWindow, medicineUnit: DisplayUnit): string {
   if (low.unit === "mg.h/L" || high.unit === "mg.h/L") {
     return `${numberPrint(low.value, {})} to ${numberPrint(high.value, {})} mg·h/L`;
   }
+  const shown = unitDimension(low.unit) === unitDimension(medicineUnit) ? medicineUnit : low.unit;
   const figure = (end: typeof low) => numberPrint(quantityConvert(end, shown), {});
   return `${figure(low)} to ${figure(high)} ${unitSpoken(shown, "screen")}`;
 }

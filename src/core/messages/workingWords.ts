@@ -1,7 +1,7 @@
 import type { Analysis, Model, OptionResult, Traced } from "../analysis/index.ts";
 import type { Case } from "../case/index.ts";
 import { instantText } from "../time/index.ts";
-import { numberPrint, unitSpoken } from "../units/index.ts";
+import { numberPrint, quantityConvert, unitSpoken } from "../units/index.ts";
 
 /** The arithmetic of one figure: formula, numbers put in, result, and where the parts come from. */
 export interface WorkingWords {
@@ -222,11 +222,19 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
             "Hours below, within and above the window",
             [
               ...spanSteps(),
-              `window ${six(value.window.low.value)} to ${six(value.window.high.value)} mg/L; the crossings are solved for on each stretch between doses`,
+              `window ${windowEnds(value.window, value.medicine.molarMass.value)}; the crossings are solved for on each stretch between doses`,
             ],
             `below ${six(span.hoursBelow ?? 0)} h, within ${six(span.hoursWithin)} h, above ${six(span.hoursAbove ?? 0)} h`,
           );
     default:
       return null;
   }
+}
+
+/** In mg/L, as the curve is; a window stated in another unit says so too. */
+function windowEnds({ low, high }: NonNullable<Case["window"]>, molarMass: number): string {
+  const mgPerL = (end: typeof low) => six(quantityConvert(end, "mg/L", molarMass));
+  const stated =
+    low.unit === "mg/L" ? "" : ` (${six(low.value)} to ${six(high.value)} ${unitSpoken(low.unit, "screen")})`;
+  return `${mgPerL(low)} to ${mgPerL(high)} mg/L${stated}`;
 }

@@ -1,3 +1,4 @@
+export { type Decimal, decimalOf, decimalScaled } from "./decimal.ts";
 export { type ForbiddenForm, forbiddenForms } from "./forbiddenForms.ts";
 export { type NumberPrintOptions, numberPlain, numberPrint } from "./numberPrint.ts";
 export { numberRead } from "./numberRead.ts";

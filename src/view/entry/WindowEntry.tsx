@@ -35,7 +35,7 @@ export function WindowEntry({ onDone }: WindowEntryProps) {
   const send = (event: FormEvent) => {
     event.preventDefault();
     setSent(true);
-    const read = windowDraftRead(draft, molarMass);
+    const read = windowDraftRead(draft);
     if (read.ok) edit("windowSet", { window: read.value });
   };
   return (

@@ -72,11 +72,11 @@ const OFFERED = ["mg/L", "ug/L", "umol/L", "nmol/L"] as const;
 
 /** Asks about a level far from what the medicine is used at, and offers the units in which the same number would be near. */
 export function levelLook(typed: Quantity<LevelUnit>, record: MedicineRecord): QuantityLook<LevelUnit> {
-  const wanted = record.windows.filter((window) => window.high.unit === "mg/L");
+  const wanted = record.windows.filter((window) => window.quantity !== "auc24");
   if (wanted.length === 0) return { kind: "fine" };
-  const high = Math.max(...wanted.map((window) => window.high.value));
-  const low = Math.min(...wanted.map((window) => window.low.value || window.high.value));
-  const inMgPerL = (value: Quantity<LevelUnit>) => quantityConvert(value, "mg/L", record.molarMass.value);
+  const inMgPerL = (value: Quantity) => quantityConvert(value, "mg/L", record.molarMass.value);
+  const high = Math.max(...wanted.map((window) => inMgPerL(window.high)));
+  const low = Math.min(...wanted.map((window) => inMgPerL(window.low) || inMgPerL(window.high)));
   const isNear = (mgPerL: number) => mgPerL <= high * FAR && mgPerL >= low / FAR;
   if (isNear(inMgPerL(typed))) return { kind: "fine" };
   const shown = (value: Quantity) => quantityPrint(value, { style: "screen", significant: 4 });

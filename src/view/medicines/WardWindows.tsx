@@ -29,7 +29,7 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
     event.preventDefault();
     setSent(true);
     if (!draft) return;
-    const read = windowDraftRead(draft, record.molarMass.value);
+    const read = windowDraftRead(draft);
     if (!read.ok) return;
     const outcome = await onSave(record.id, partId(), read.value);
     setFaults(outcome.ok ? [] : outcome.issues);

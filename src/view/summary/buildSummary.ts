@@ -1,4 +1,4 @@
-import { concentrationUnit } from "../../core/medicine/index.ts";
+import { concentrationFactor, concentrationUnit } from "../../core/medicine/index.ts";
 import {
   capitalised,
   summaryDetailWords as detailWords,
@@ -118,7 +118,7 @@ function chartWords(input: SummaryInput, print: SummaryPrint): SummaryChart {
     ...(value.levels.length > 0 ? [summaryChartWords.levels(value.levels.length)] : []),
   ];
   const shownUnit = concentrationUnit(value.medicine);
-  const shownFactor = shownUnit === "ug/L" ? 1000 : 1;
+  const shownFactor = concentrationFactor(value.medicine);
   return {
     title: said.join("; "),
     unit: unitSpoken(shownUnit, "print", input.settings.microgram),

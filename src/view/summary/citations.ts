@@ -20,9 +20,12 @@ export function citations({ sources }: MedicineRecord): Citations {
     if (!cited.includes(text)) cited.push(text);
     return cited.indexOf(text) + 1;
   };
+  const isCitable = (text: string) => Object.keys(sources).some((id) => sourceText(sources, id) === text);
   return {
     ofFigure: ({ source, basis }) =>
-      OWN_BASES.includes(basis) ? source : words.sourceAndBasis(words.numbered(number(source)), BASES[basis] ?? basis),
+      OWN_BASES.includes(basis) && !isCitable(source)
+        ? source
+        : words.sourceAndBasis(words.numbered(number(source)), BASES[basis] ?? basis),
     ofStatement: (statement) => words.cited(marked(statement), number(sourceText(sources, statement.source))),
     list: () => cited,
   };
@@ -37,7 +40,7 @@ function marked(statement: Statement): string {
 }
 
 export function isUnverified({ basis }: Statement): boolean {
-  return basis !== "seen";
+  return basis !== "seen" && basis !== "derived";
 }
 
 const BASES: Readonly<Record<string, string>> = words.bases;

@@ -79,11 +79,7 @@ export function hoursText(input: SummaryInput, print: SummaryPrint): SummaryMode
     return null;
   const fromTo = words.span(print.at(print.ms(span.fromH), "dayClock"), print.at(print.ms(span.toH), "dayClock"));
   return {
-    title: words.hoursOf(
-      titles.hours,
-      print.figure(window.low.value * (window.low.unit === "mg/L" ? print.shownFactor : 1), 15),
-      print.exact(window.high),
-    ),
+    title: words.hoursOf(titles.hours, print.number(window.low), print.exact(window.high)),
     span: window.quantity === "lowest-and-highest" ? fromTo : `${fromTo}. ${windowRemarkWords(window.quantity)}.`,
     rows: [
       { label: words.below, value: print.hours(span.hoursBelow) },

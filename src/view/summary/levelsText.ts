@@ -1,4 +1,5 @@
 import type { LevelResult } from "../../core/analysis/index.ts";
+import { concentrationUnit } from "../../core/medicine/index.ts";
 import { SUMMARY_TITLES as titles, summaryLevelWords as words } from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
@@ -21,7 +22,8 @@ function levelRow(
 ): SummaryLevel {
   const result = input.analysis.levels.find(({ id }) => id === level.id);
   const typed = print.exact(level.quantity);
-  const isInShownUnit = result !== undefined && print.shownFactor === shownFactorOf(level.quantity.unit);
+  const shown = concentrationUnit(input.case.medicine);
+  const isInShownUnit = result !== undefined && shown === (SAME_UNIT[level.quantity.unit] ?? level.quantity.unit);
   const measured = isInShownUnit || !result ? typed : words.asTyped(typed, print.concentration(result.measured));
   const isBelow = level.kind === "below-limit";
   return {
@@ -35,10 +37,7 @@ function levelRow(
 }
 
 /** Units that are the printed one by another name: nothing is added in brackets for them. */
-function shownFactorOf(unit: string): number | null {
-  if (unit === "mg/L" || unit === "ug/mL") return 1;
-  return unit === "ug/L" || unit === "ng/mL" ? 1000 : null;
-}
+const SAME_UNIT: Readonly<Record<string, string>> = { "ug/mL": "mg/L", "ng/mL": "ug/L" };
 
 /** Rounded to the place the prediction is printed to, so that the row adds up for the eye. */
 function differenceText(level: LevelResult, print: SummaryPrint): string {

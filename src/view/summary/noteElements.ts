@@ -82,7 +82,7 @@ function latest(value: Case, kind: "albumin", print: SummaryPrint): string {
 export function targetWords(window: NonNullable<Case["window"]>, print: SummaryPrint): string {
   return summaryDetailWords.window(
     windowQuantityWord(window.quantity),
-    print.figure(window.low.value * (window.low.unit === "mg/L" ? print.shownFactor : 1), 15),
+    print.number(window.low),
     print.exact(window.high),
     window.basis === "" ? NOT_RECORDED : window.basis,
   );

@@ -1,4 +1,5 @@
-import { concentrationUnit } from "../../core/medicine/index.ts";
+import { concentrationWindow } from "../../core/analysis/index.ts";
+import { concentrationFactor } from "../../core/medicine/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
 import { type ProfileScene, profileScene } from "../chart/profileScene.ts";
 import type { SummaryInput } from "./summaryInput.ts";
@@ -44,8 +45,7 @@ export function summaryNowLabels(
 export function summaryScene({ case: value, analysis, settings }: SummaryInput, words: SummaryChart): ProfileScene {
   const { clock, givenCurve } = analysis;
   const chosen = analysis.options.find(({ id }) => id === chosenOption(value)?.id);
-  const { window } = value;
-  const factor = concentrationUnit(value.medicine) === "ug/L" ? 1000 : 1;
+  const factor = concentrationFactor(value.medicine);
   const scene = profileScene({
     width: WIDTH,
     height: HEIGHT[settings.pageSize],
@@ -56,7 +56,7 @@ export function summaryScene({ case: value, analysis, settings }: SummaryInput, 
     midnightsH: clock.midnightsH,
     scale: "linear",
     factor,
-    window: window?.low.unit === "mg/L" ? { low: window.low.value, high: window.high.value } : null,
+    window: concentrationWindow(value),
     curves: [
       ...(givenCurve ? [{ id: "given", name: "", ...givenCurve }] : []),
       ...(chosen?.curve ? [{ id: chosen.id, name: "", ...chosen.curve }] : []),

@@ -1,6 +1,6 @@
 import type { TargetWindow } from "../../core/case/index.ts";
 import { issueMessage, windowQuantityWord, windowWords } from "../../core/messages/index.ts";
-import { quantityPrint, unitSpoken } from "../../core/units/index.ts";
+import { quantityConvert, quantityPrint, unitDimension, unitSpoken } from "../../core/units/index.ts";
 import { ChoiceField } from "./ChoiceField.tsx";
 import { TextField } from "./TextField.tsx";
 import { type WindowDraft, windowDraftRead, windowUnits } from "./windowDraft.ts";
@@ -18,14 +18,15 @@ export interface WindowFieldsProps {
 }
 
 export function WindowFields({ draft, onChange, molarMass, isTold }: WindowFieldsProps) {
-  const read = windowDraftRead(draft, molarMass);
+  const read = windowDraftRead(draft);
   const faultOf = (path: string, text?: string) => {
     const found = read.ok ? undefined : read.issues.find((one) => one.path[0] === path);
     return found && (isTold || (text !== undefined && text.trim() !== "")) ? issueMessage(found) : undefined;
   };
   const units = windowUnits(draft.about);
   const shown = (end: TargetWindow["low"]) => quantityPrint(end, { style: "screen", significant: 4 });
-  const isConverted = read.ok && read.value.low.unit !== draft.unit;
+  const isMolar = unitDimension(draft.unit) === "molar concentration";
+  const inMass = (end: TargetWindow["low"]) => shown({ value: quantityConvert(end, "mg/L", molarMass), unit: "mg/L" });
   return (
     <div className="window-fields">
       <ChoiceField
@@ -51,7 +52,7 @@ export function WindowFields({ draft, onChange, molarMass, isTold }: WindowField
           value={draft.high}
           onChange={(high) => onChange({ ...draft, high })}
           fault={faultOf("high", draft.high)}
-          reading={isConverted ? windowWords.asStored(shown(read.value.low), shown(read.value.high)) : undefined}
+          reading={read.ok && isMolar ? `= ${inMass(read.value.low)} to ${inMass(read.value.high)}` : undefined}
         />
         <ChoiceField
           label={windowWords.unit}

@@ -2,10 +2,13 @@ import type { TargetWindow } from "../../core/case/index.ts";
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
 import { numberPlain, numberRead, quantityConvert, unitSpoken } from "../../core/units/index.ts";
 
-export const WINDOW_UNITS = ["mg/L", "ug/mL", "ug/L", "ng/mL", "umol/L", "nmol/L", "mg.h/L"] as const;
+export const WINDOW_UNITS = ["mg/L", "ug/mL", "ug/L", "ng/mL", "umol/L", "nmol/L", "mmol/L", "mg.h/L"] as const;
 export type WindowUnit = (typeof WINDOW_UNITS)[number];
 
-/** A window being typed. It may be typed in a molar unit; a case stores mg/L (or mg·h/L for an AUC). */
+/** Units typed that a case doesn't hold, with the one it is stored in: the same amount by another name. */
+const STORED: Partial<Record<WindowUnit, "mg/L" | "ug/L">> = { "ug/mL": "mg/L", "ng/mL": "ug/L" };
+
+/** A window being typed. A case stores it in the unit it was typed in. */
 export interface WindowDraft {
   readonly about: TargetWindow["quantity"] | null;
   readonly low: string;
@@ -31,7 +34,7 @@ export function windowUnits(about: WindowDraft["about"]): readonly WindowUnit[] 
 }
 
 /** The window as stored, or an issue a field: path "about", "low", "high" or "basis". */
-export function windowDraftRead(draft: WindowDraft, molarMassGPerMol: number): Result<TargetWindow> {
+export function windowDraftRead(draft: WindowDraft): Result<TargetWindow> {
   const { about, unit } = draft;
   const low = numberRead(draft.low);
   const high = numberRead(draft.high);
@@ -47,8 +50,7 @@ export function windowDraftRead(draft: WindowDraft, molarMassGPerMol: number): R
     faults.push(issue("window-ends", data, ["high"]));
   }
   if (faults.length > 0 || about === null || !low.ok || !high.ok) return fail(...faults);
-  const stored = unit === "mg.h/L" ? "mg.h/L" : "mg/L";
-  const end = (value: number) =>
-    ({ value: quantityConvert({ value, unit }, stored, molarMassGPerMol), unit: stored }) as const;
+  const stored = STORED[unit] ?? (unit as TargetWindow["low"]["unit"]);
+  const end = (value: number) => ({ value: quantityConvert({ value, unit }, stored), unit: stored });
   return succeed({ quantity: about, low: end(low.value), high: end(high.value), basis });
 }

@@ -4,7 +4,8 @@ import { type ConcernRule, concern } from "../concernRule.ts";
 export const ageOutside: ConcernRule = ({ case: { patient, medicine } }) => {
   const age = patient.age?.value;
   if (age === undefined) return [];
-  const { ageMin, ageMax } = medicine.population;
+  const range = medicine.population.ranges.find((each) => each.covariate === "age");
+  const [ageMin, ageMax] = [range?.low, range?.high];
   const outside = (ageMin !== undefined && age < ageMin) || (ageMax !== undefined && age > ageMax);
   return outside
     ? [

@@ -1,13 +1,17 @@
 import { type ConcernRule, concern } from "../concernRule.ts";
+import { concentrationWindow } from "../optionReadings.ts";
 
 /** An option whose steady state leaves the target window, judged by what the window is for. */
-export const optionOutsideWindow: ConcernRule = ({ case: { window }, options }) => {
+export const optionOutsideWindow: ConcernRule = ({ case: value, options }) => {
+  const { window } = value;
   if (!window) return [];
+  const isArea = window.quantity === "auc24";
+  const limits = isArea ? { low: window.low.value, high: window.high.value } : concentrationWindow(value);
+  if (!limits) return [];
+  const { low, high } = limits;
   return options.flatMap((option) => {
     const settled = option.typical?.steadyState;
     if (!settled) return [];
-    const low = window.low.value;
-    const high = window.high.value;
     const [least, most] = {
       trough: [settled.lowest, settled.lowest],
       peak: [settled.peak, settled.peak],
@@ -16,7 +20,15 @@ export const optionOutsideWindow: ConcernRule = ({ case: { window }, options }) 
       "lowest-and-highest": [settled.lowest, settled.peak],
     }[window.quantity] as [number, number];
     const about = { kind: "option", id: option.id } as const;
-    const data = { option: option.id, quantity: window.quantity, low, high, unit: window.low.unit, least, most };
+    const data = {
+      option: option.id,
+      quantity: window.quantity,
+      low,
+      high,
+      unit: isArea ? "mg.h/L" : "mg/L",
+      least,
+      most,
+    };
     return [
       ...(most > high ? [concern("option-above-window", "check", about, data)] : []),
       ...(least < low ? [concern("option-below-window", "check", about, data)] : []),

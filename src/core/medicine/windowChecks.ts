@@ -1,0 +1,41 @@
+import { DISPLAY_UNITS, type RecordWindow } from "./medicineRecord.ts";
+import { boundsFaults, type FaultPath, type RecordFault } from "./recordFault.ts";
+
+/** Shared with the target window of a case: one unit for both ends, which fits what the window is about, and low below high. */
+export function windowChecks(
+  { quantity, low, high }: Pick<RecordWindow, "quantity" | "low" | "high">,
+  path: FaultPath,
+): RecordFault[] {
+  const allowed: readonly string[] = quantity === "auc24" ? ["mg.h/L"] : DISPLAY_UNITS;
+  const faults: RecordFault[] = [];
+  for (const [end, { unit }] of [["low", low] as const, ["high", high] as const]) {
+    if (!allowed.includes(unit))
+      faults.push({ code: "window-unit", path: [...path, end, "unit"], data: { found: unit, allowed, quantity } });
+  }
+  if (faults.length === 0 && low.unit !== high.unit) {
+    const data = { low: low.unit, high: high.unit };
+    faults.push({ code: "window-units-differ", path: [...path, "high", "unit"], data });
+  }
+  if (low.value < 0 || low.value >= high.value) {
+    faults.push({ code: "window-order", path, data: { low: low.value, high: high.value, unit: low.unit } });
+  }
+  return faults;
+}
+
+/** A day and more: some levels are drawn before the next dose of a long interval. h */
+const LATEST_DRAW_H = 168;
+
+/** The window of a record, and the hours between which its level is drawn. */
+export function recordWindowChecks(window: RecordWindow, path: FaultPath): RecordFault[] {
+  const { drawFrom, drawTo } = window;
+  const hours = { unit: "h", least: 0, most: LATEST_DRAW_H } as const;
+  const faults = [
+    ...windowChecks(window, path),
+    ...boundsFaults(drawFrom, hours, [...path, "drawFrom"]),
+    ...boundsFaults(drawTo, hours, [...path, "drawTo"]),
+  ];
+  if (drawFrom && drawTo && drawFrom.value >= drawTo.value) {
+    faults.push({ code: "window-draw-order", path, data: { from: drawFrom.value, to: drawTo.value } });
+  }
+  return faults;
+}
