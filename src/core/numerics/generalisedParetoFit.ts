@@ -19,17 +19,18 @@ const PRIOR_SHAPE = 0.5;
  * ℓ(b) = n·(ln(−b/k) − k − 1). Over the grid b_j = 1/x_max + (1 − √(m/(j − ½)))/(3·x_q), j = 1…m, m = 30 + ⌊√n⌋, x_q the
  * ⌊n/4 + ½⌋-th smallest: b = Σ b_j·w_j, w_j in proportion to e^ℓ(b_j). Then k = k(b), σ = −k/b, and at last k ← (n·k + 10·½)/(n + 10).
  * @param ascending the excesses, 0 or more, ascending, at least 5, the largest above 0
- * @returns shape and scale; the scale is the one before the prior on the shape
- * Outside: not checked. Excesses that round to 0 count as they are; the quartile is taken among those above 0 if it is 0.
+ * @returns shape and scale, the scale before the prior on the shape; null where the quartile x_q is 0: most of the tail at its foot
+ * Outside: not checked.
  * Accuracy: of its own formula 1e-12 (tests/core/numerics/paretoSmoothed.test.ts).
  * Source: Zhang & Stephens, A new and efficient estimation method for the generalized Pareto distribution, Technometrics 51 (2009)
  * 316–325; the prior on the shape: Vehtari et al. 2024 (see paretoSmoothed), appendix (both from memory, unverified).
- * @example generalisedParetoFit(Float64Array.of(1, 2, 3, 4, 10)).shape // 0.49…
+ * @example generalisedParetoFit(Float64Array.of(1, 2, 3, 4, 10))?.shape // 0.36663807449547137
  */
-export function generalisedParetoFit(ascending: Float64Array): GeneralisedPareto {
+export function generalisedParetoFit(ascending: Float64Array): GeneralisedPareto | null {
   const n = ascending.length;
   const largest = ascending[n - 1]!;
-  const quartile = ascending[Math.floor(n / 4 + 0.5) - 1]! || ascending.find((each) => each > 0)!;
+  const quartile = ascending[Math.floor(n / 4 + 0.5) - 1]!;
+  if (!(quartile > 0)) return null;
   const grid = FEWEST_GRID + Math.floor(Math.sqrt(n));
   const candidates: number[] = [];
   const logs: number[] = [];

@@ -12,7 +12,7 @@ const HALF_LOG_2_PI = 0.9189385332046728;
  * @param x above 0
  * @returns ln Γ(x)
  * Outside: RangeError.
- * Accuracy: 3e-15·max(1, |ln Γ|) for x up to 1e6 (tests/core/numerics/studentT.test.ts).
+ * Accuracy: 5e-15·max(1, |ln Γ|) for x up to 1e6 (tests/core/numerics/studentT.test.ts).
  * Source: Stirling's series, standard.
  * @example logGamma(5) // 3.178053830347946 = ln 24
  */

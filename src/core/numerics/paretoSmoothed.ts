@@ -3,7 +3,7 @@ import { generalisedParetoFit } from "./generalisedParetoFit.ts";
 export interface SmoothedWeights {
   /** Add up to 1. */
   readonly weights: Float64Array;
-  /** Shape of the tail of the raw weights; above 0.7 the weights can't be trusted. Infinity where the tail is too short to tell. */
+  /** Shape of the tail of the raw weights; above 0.7 the weights can't be trusted. Infinity where the tail is too short or too bare to tell. */
   readonly paretoK: number;
   /** 1/Σw² of the smoothed weights: how many even draws would say as much. */
   readonly effectiveSize: number;
@@ -22,8 +22,8 @@ const EVEN = 1e-12;
  * largest raw weight. Then all are divided by their sum.
  * @param logWeights natural logarithms, up to a common constant; −Infinity is weight 0
  * @returns see SmoothedWeights. With a tail of next to even weights nothing is smoothed and paretoK is 0: no tail at all
- * Outside: RangeError for an empty list, NaN or Infinity. Fewer than 25 weights, or all of weight 0: paretoK Infinity (all of weight
- * 0: weights 0, effectiveSize 0).
+ * Outside: RangeError for an empty list, NaN or Infinity. Fewer than 21 weights, a quarter of the tail no heavier than u, or all of
+ * weight 0: paretoK Infinity and nothing smoothed (all of weight 0: weights 0, effectiveSize 0).
  * Accuracy: of its own formula 1e-12 (tests/core/numerics/paretoSmoothed.test.ts); as an estimate of the shape, see there.
  * Source: Vehtari, Simpson, Gelman, Yao & Gabry, Pareto smoothed importance sampling, J. Mach. Learn. Res. 25 (2024) 72 (from memory,
  * unverified): tail length, order-statistic quantiles, threshold 0.7.
@@ -64,7 +64,9 @@ function smoothTail(weights: Float64Array): number {
   const threshold = weights[order[count - size - 1]!]!;
   if (1 - threshold <= EVEN) return 0;
   const excesses = Float64Array.from(tail, (place) => weights[place]! - threshold);
-  const { shape, scale } = generalisedParetoFit(excesses);
+  const fit = generalisedParetoFit(excesses);
+  if (fit === null) return Infinity;
+  const { shape, scale } = fit;
   for (const [z, place] of tail.entries()) {
     // ln(1 − p), p = (z + 1/2)/M.
     const logRest = Math.log1p(-(z + 0.5) / size);

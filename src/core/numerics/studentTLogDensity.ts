@@ -10,7 +10,7 @@ import { logGamma } from "./logGamma.ts";
  * @param dimension d, 1 or more
  * @returns the logarithm of the density per unit of z to the power d
  * Outside: RangeError for a negative q or ν not above 0.
- * Accuracy: 4e-15·max(1, |result|) for ν up to 1e3 (tests/core/numerics/studentT.test.ts).
+ * Accuracy: 1e-14·max(1, |result|) for ν up to 30, 1e-12 up to 1e3 (tests/core/numerics/studentT.test.ts).
  * Source: standard.
  * @example studentTLogDensity(0, 4, 1) // -0.9808292530117262 = ln(3/8)
  */

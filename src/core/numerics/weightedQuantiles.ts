@@ -20,7 +20,7 @@ export function quantileRoom(count: number): QuantileRoom {
  *
  * Formula: with the values ascending, value i stands at the part pᵢ = (w₁ + … + wᵢ − wᵢ/2)/Σw: the middle of its own weight.
  * Between those parts straight lines; before the first and after the last the first and the last value. Values of weight 0 don't
- * count. With even weights pᵢ = (i − 1/2)/n, Hazen's rule.
+ * count; equal values stand in the order given. With even weights pᵢ = (i − 1/2)/n, Hazen's rule.
  * @param values finite, at least one, in any order
  * @param weights 0 or more, as many; their sum is above 0, it need not be 1
  * @param probabilities 0 to 1 each, in any order
@@ -80,14 +80,17 @@ function sortInto({ keys, halves, order }: QuantileRoom, values: ArrayLike<numbe
     // + 0 turns −0 into 0.
     keys[i] = values[i]! + 0;
     const low = 2 * i + LOW_HALF;
-    halves[low] = (halves[low]! & ~places) | i;
+    // Of two negative numbers the one with the larger last bits comes first: equal ones keep their order all the same.
+    const place = keys[i]! < 0 ? places ^ i : i;
+    halves[low] = (halves[low]! & ~places) | place;
   }
   keys.sort();
   for (let i = 0; i < n; i++) {
-    const place = halves[2 * i + LOW_HALF]! & places;
+    const tagged = halves[2 * i + LOW_HALF]! & places;
+    const place = keys[i]! < 0 ? places ^ tagged : tagged;
     const value = values[place]!;
     let j = i - 1;
-    while (j >= 0 && values[order[j]!]! > value) {
+    while (j >= 0 && (values[order[j]!]! > value || (values[order[j]!]! === value && order[j]! > place))) {
       order[j + 1] = order[j]!;
       j--;
     }
