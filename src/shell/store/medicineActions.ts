@@ -4,7 +4,6 @@ import {
   medicineRead,
   recordCopy,
   recordCopyName,
-  recordDraft,
   recordDraftHistory,
   recordDraftRead,
   recordNextVersion,
@@ -149,9 +148,4 @@ function editsRead(stored: unknown): Readonly<Record<string, RecordEdit>> {
     return [[id, { recordVersion, history: recordDraftHistory(draft) }] as const];
   });
   return Object.fromEntries(edits);
-}
-
-/** The editing of a record from its beginning. */
-export function recordEditOf(record: MedicineRecord): RecordEdit {
-  return { recordVersion: record.recordVersion, history: recordDraftHistory(recordDraft(record)) };
 }

@@ -1,23 +1,38 @@
 import type { ReactNode } from "react";
-import { type MedicineRecord, type Product, unverifiedFigures } from "../../core/medicine/index.ts";
-import { medicinesWords } from "../../core/messages/index.ts";
-import { Notice } from "../ui/Notice.tsx";
+import type { MedicineRecord, Product } from "../../core/medicine/index.ts";
+import { medicinesWords, recordWords } from "../../core/messages/index.ts";
+import { unitSpoken } from "../../core/units/index.ts";
+import { RecordBefore } from "./RecordBefore.tsx";
+import { RecordShares } from "./RecordShares.tsx";
 import { RecordStatements } from "./RecordStatements.tsx";
 import { RecordTable } from "./RecordTable.tsx";
-import { kineticsRows, productRows, variabilityRows, windowRows } from "./recordRows.ts";
+import { type RecordSection, recordSections } from "./recordSections.ts";
 import "./RecordPage.css";
 
 export interface RecordPageProps {
   readonly record: MedicineRecord;
   readonly isOwn: boolean;
+  /** The record it was copied from, where it is still here. */
+  readonly original: MedicineRecord | undefined;
+  /** Under the name: what can be done with it. */
+  readonly actions: ReactNode;
   /** Under the record's own windows: the ward's. */
   readonly wardWindows: ReactNode;
 }
 
 /** One record, every figure with its unit, source and basis. */
-export function RecordPage({ record, isOwn, wardWindows }: RecordPageProps) {
-  const unverified = unverifiedFigures(record);
-  const { review, population } = record;
+export function RecordPage({ record, isOwn, original, actions, wardWindows }: RecordPageProps) {
+  const { review, population, autoinduction, copyOf } = record;
+  const sections = recordSections(record);
+  const section = (id: string): RecordSection => sections.find((each) => each.id === id) as RecordSection;
+  const table = (id: string, empty?: string) => (
+    <RecordTable
+      caption={section(id).heading}
+      record={record}
+      rows={section(id).rows}
+      {...(empty === undefined ? {} : { empty })}
+    />
+  );
   return (
     <article className="record-page" aria-labelledby="record-page-name">
       <header>
@@ -28,37 +43,62 @@ export function RecordPage({ record, isOwn, wardWindows }: RecordPageProps) {
             medicinesWords.recordVersion(record.recordVersion),
             review.status === "reviewed" ? medicinesWords.reviewed(review.by, review.on) : medicinesWords.notReviewed,
             `${medicinesWords.measuredIn} ${record.matrix}`,
+            `${recordWords.shownIn} ${unitSpoken(record.displayUnit, "screen")}`,
           ].join(" · ")}
         </p>
+        {copyOf ? (
+          <p className="record-page-state">
+            {original
+              ? recordWords.copyOf(original.name, copyOf.recordVersion)
+              : recordWords.copyOfGone(copyOf.id, copyOf.recordVersion)}
+          </p>
+        ) : null}
+        {actions}
       </header>
-      {record.invented ? (
-        <Notice gravity="check" title={medicinesWords.inventedTitle}>
-          <p>{medicinesWords.invented}</p>
-        </Notice>
-      ) : null}
-      {unverified.memory > 0 ? (
-        <Notice gravity="check" title={medicinesWords.unverifiedTitle}>
-          <p>{medicinesWords.unverified(unverified.memory, unverified.total)}</p>
-        </Notice>
-      ) : null}
+      <RecordBefore record={record} />
+      <RecordShares record={record} />
       <RecordStatements heading={medicinesWords.appliesTo} record={record} statements={[population]} />
+      {population.setting ? (
+        <p className="record-page-note">
+          {recordWords.setting}: {population.setting}
+        </p>
+      ) : null}
+      {section("population").rows.length > 0 ? table("population") : null}
       <section>
         <h3>{medicinesWords.windows}</h3>
-        <RecordTable
-          caption={medicinesWords.windows}
-          record={record}
-          rows={windowRows(record)}
-          empty={medicinesWords.windowsNone}
-        />
+        {table("windows", medicinesWords.windowsNone)}
         {wardWindows}
       </section>
       <RecordStatements heading={medicinesWords.cautions} record={record} statements={record.cautions} />
-      <RecordStatements heading={medicinesWords.doseLimits} record={record} statements={record.doseLimits} />
-      <RecordStatements heading={medicinesWords.sampling} record={record} statements={record.sampling} />
+      <section>
+        <h3>{recordWords.limits}</h3>
+        {table("limits", record.doseLimits.length > 0 ? undefined : recordWords.limitsNone)}
+        <RecordStatements heading="" record={record} statements={record.doseLimits} />
+      </section>
+      {section("sampling").rows.length + record.sampling.length > 0 ? (
+        <section>
+          <h3>{medicinesWords.sampling}</h3>
+          {section("sampling").rows.length > 0 ? table("sampling") : null}
+          <RecordStatements heading="" record={record} statements={record.sampling} />
+        </section>
+      ) : null}
+      <section>
+        <h3>{recordWords.interactions}</h3>
+        {table("interactions", recordWords.interactionsNone)}
+      </section>
+      {autoinduction ? (
+        <RecordStatements heading={recordWords.autoinduction} record={record} statements={[autoinduction]} />
+      ) : null}
+      {section("autoinduction").rows.length > 0 ? table("autoinduction") : null}
       <section>
         <h3>{medicinesWords.kinetics}</h3>
         {record.kinetics.apparent ? <p className="record-page-note">{medicinesWords.apparent}</p> : null}
-        <RecordTable caption={medicinesWords.kinetics} record={record} rows={kineticsRows(record)} />
+        {table("kinetics")}
+        <RecordStatements
+          heading={record.estimates.from === "one-model" ? recordWords.oneModel : recordWords.estimates}
+          record={record}
+          statements={[record.estimates]}
+        />
       </section>
       {record.products.map((product) => (
         <section key={product.id}>
@@ -66,13 +106,15 @@ export function RecordPage({ record, isOwn, wardWindows }: RecordPageProps) {
             {record.name} {product.name}
           </h3>
           <p className="record-page-note">{productSentence(product)}</p>
-          <RecordTable caption={product.name} record={record} rows={productRows(product)} />
+          {table(`product ${product.id}`)}
         </section>
       ))}
-      <section>
-        <h3>{medicinesWords.variability}</h3>
-        <RecordTable caption={medicinesWords.variability} record={record} rows={variabilityRows(record)} />
-      </section>
+      {section("variability").rows.length > 0 ? (
+        <section>
+          <h3>{medicinesWords.variability}</h3>
+          {table("variability")}
+        </section>
+      ) : null}
       <section>
         <h3>{medicinesWords.sources}</h3>
         <ol className="record-page-sources">
@@ -93,6 +135,7 @@ function productSentence(product: Product): string {
   return [
     product.form,
     medicinesWords.release[product.release],
+    ...(product.salt ? [recordWords.saltOf(product.salt)] : []),
     ...(product.form === "liquid" ? [] : [medicinesWords.divisible[product.divisible]]),
     ...(product.swallowWhole ? [medicinesWords.swallowWhole] : []),
   ].join(", ");

@@ -1,10 +1,10 @@
 import type { Basis, MedicineRecord } from "../../core/medicine/index.ts";
-import { medicinesWords } from "../../core/messages/index.ts";
+import { recordWords } from "../../core/messages/index.ts";
 import { GravityMark } from "../ui/GravityMark.tsx";
 import { sourceNumber, sourceShort } from "./recordRows.ts";
 
 export interface RecordProvenanceProps {
-  readonly record: MedicineRecord;
+  readonly record: Pick<MedicineRecord, "sources">;
   readonly source: string;
   readonly basis: Basis;
 }
@@ -15,7 +15,7 @@ export function RecordProvenance({ record, source, basis }: RecordProvenanceProp
     <span className="record-page-provenance">
       {sourceShort(record, source)} [{sourceNumber(record, source)}]
       <span className={basis === "memory" ? "record-page-basis record-page-basis-memory" : "record-page-basis"}>
-        {basis === "memory" ? <GravityMark gravity="check" /> : null} {medicinesWords.bases[basis]}
+        {basis === "memory" ? <GravityMark gravity="check" /> : null} {recordWords.bases[basis]}
       </span>
     </span>
   );

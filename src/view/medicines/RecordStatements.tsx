@@ -12,12 +12,12 @@ export interface RecordStatementsProps {
   }[];
 }
 
-/** Sentences of the record (cautions, dose limits, sampling), each with its source; left out when there is none. */
+/** Sentences of the record (cautions, dose limits, sampling), each with its source; left out when there is none. Without a heading they go on under the one before. */
 export function RecordStatements({ heading, record, statements }: RecordStatementsProps) {
   if (statements.length === 0) return null;
   return (
     <section>
-      <h3>{heading}</h3>
+      {heading === "" ? null : <h3>{heading}</h3>}
       <ul className="record-page-statements">
         {statements.map((statement) => (
           <li key={statement.text}>

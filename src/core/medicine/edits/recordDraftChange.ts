@@ -12,7 +12,7 @@ import type { RecordDraft } from "./recordDraft.ts";
 
 /** How a figure is known, and what it is called: changing these does not make it another figure. */
 const PROVENANCE = new Set(["source", "basis", "note", "was"]);
-const NAMES = new Set(["id", "label", "use"]);
+const NAMES = new Set(["id", "label", "use", "category"]);
 
 /**
  * The draft with another node at a path; `undefined` takes it away.
@@ -21,11 +21,12 @@ const NAMES = new Set(["id", "label", "use"]);
  */
 export function recordDraftChange(draft: RecordDraft, path: DraftPath, value: DraftNode | undefined): RecordDraft {
   const next = draftPut(draft, path, value) as RecordDraft;
-  for (let depth = path.length - 1; depth >= 0; depth -= 1) {
+  for (let depth = path.length; depth >= 0; depth -= 1) {
     const at = path.slice(0, depth);
     const after = draftAt(next, at);
     if (!isDraftGroup(after) || !isDraftGroup(after.was)) continue;
-    const key = String(path[depth]);
+    // "" where the node itself was put in place.
+    const key = String(path[depth] ?? "");
     if (PROVENANCE.has(key) || NAMES.has(key)) return next;
     const before = draftAt(draft, at);
     return draftPut(next, at, provenanceFollows(isDraftGroup(before) ? before : {}, after)) as RecordDraft;
