@@ -1,8 +1,10 @@
 import type { Concern, Gravity } from "./analysisTypes.ts";
 import type { ConcernContext, ConcernRule } from "./concernRule.ts";
-import { ageOutside } from "./concerns/ageOutside.ts";
+import { autoinduction } from "./concerns/autoinduction.ts";
+import { doseAboveLimit } from "./concerns/doseAboveLimit.ts";
 import { doseNotMakeable } from "./concerns/doseNotMakeable.ts";
 import { dosesAfterNow } from "./concerns/dosesAfterNow.ts";
+import { estimatesPieced } from "./concerns/estimatesPieced.ts";
 import { factorsUnused } from "./concerns/factorsUnused.ts";
 import { firstDoseClose } from "./concerns/firstDoseClose.ts";
 import { fitSetAside } from "./concerns/fitSetAside.ts";
@@ -10,11 +12,13 @@ import { fitWithheld } from "./concerns/fitWithheld.ts";
 import { flipFlop } from "./concerns/flipFlop.ts";
 import { flipFlopAmbiguous } from "./concerns/flipFlopAmbiguous.ts";
 import { historyAssumed } from "./concerns/historyAssumed.ts";
+import { interactionKnown } from "./concerns/interactionKnown.ts";
 import { inventedMedicine } from "./concerns/inventedMedicine.ts";
 import { kidneyUnknown } from "./concerns/kidneyUnknown.ts";
 import { kineticsChange } from "./concerns/kineticsChange.ts";
 import { levelFarOff } from "./concerns/levelFarOff.ts";
 import { levelLeftOut } from "./concerns/levelLeftOut.ts";
+import { levelNotSteady } from "./concerns/levelNotSteady.ts";
 import { levelOutlier } from "./concerns/levelOutlier.ts";
 import { levelOutOfRange } from "./concerns/levelOutOfRange.ts";
 import { levelOutsidePrior } from "./concerns/levelOutsidePrior.ts";
@@ -28,7 +32,10 @@ import { levelsSameTime } from "./concerns/levelsSameTime.ts";
 import { levelsTaughtLittle } from "./concerns/levelsTaughtLittle.ts";
 import { levelsWithinError } from "./concerns/levelsWithinError.ts";
 import { levelTiming } from "./concerns/levelTiming.ts";
+import { levelTooEarly } from "./concerns/levelTooEarly.ts";
+import { linearApproximation } from "./concerns/linearApproximation.ts";
 import { linesUnreadable } from "./concerns/linesUnreadable.ts";
+import { memoryFigures } from "./concerns/memoryFigures.ts";
 import { modelIncomplete } from "./concerns/modelIncomplete.ts";
 import { neverSteady } from "./concerns/neverSteady.ts";
 import { noSteadyState } from "./concerns/noSteadyState.ts";
@@ -38,11 +45,14 @@ import { optionChanceToxic } from "./concerns/optionChanceToxic.ts";
 import { optionOutsideWindow } from "./concerns/optionOutsideWindow.ts";
 import { optionToxic } from "./concerns/optionToxic.ts";
 import { parameterUnusual } from "./concerns/parameterUnusual.ts";
+import { populationOutside } from "./concerns/populationOutside.ts";
+import { productSwitch } from "./concerns/productSwitch.ts";
 import { recordUnreviewed } from "./concerns/recordUnreviewed.ts";
 import { roadsDiffer } from "./concerns/roadsDiffer.ts";
 import { typicalOnly } from "./concerns/typicalOnly.ts";
 import { valuesConfirmed } from "./concerns/valuesConfirmed.ts";
 import { windowMissing } from "./concerns/windowMissing.ts";
+import { windowSampling } from "./concerns/windowSampling.ts";
 
 /** Every rule, in the order in which concerns of the same gravity are shown. */
 const RULES: readonly ConcernRule[] = [
@@ -55,8 +65,9 @@ const RULES: readonly ConcernRule[] = [
   levelOutOfRange,
   fitWithheld,
   neverSteady,
-  ageOutside,
+  populationOutside,
   levelTiming,
+  levelTooEarly,
   levelFarOff,
   levelOutlier,
   levelResidual,
@@ -72,11 +83,18 @@ const RULES: readonly ConcernRule[] = [
   levelsTaughtLittle,
   optionChanceAbove,
   kineticsChange,
+  autoinduction,
+  linearApproximation,
+  doseAboveLimit,
+  productSwitch,
   optionOutsideWindow,
+  windowSampling,
+  levelNotSteady,
   firstDoseClose,
   doseNotMakeable,
   dosesAfterNow,
   windowMissing,
+  interactionKnown,
   factorsUnused,
   valuesConfirmed,
   flipFlop,
@@ -88,6 +106,8 @@ const RULES: readonly ConcernRule[] = [
   noSteadyState,
   historyAssumed,
   kidneyUnknown,
+  estimatesPieced,
+  memoryFigures,
   recordUnreviewed,
 ];
 

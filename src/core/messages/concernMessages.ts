@@ -15,6 +15,7 @@ import {
 } from "./concernFigures.ts";
 import { fitConcernMessages } from "./fitMessages.ts";
 import { issueMessage } from "./issueMessage.ts";
+import { recordConcernMessages } from "./recordConcernMessages.ts";
 import { windowQuantityWord } from "./windowWords.ts";
 
 const FACTOR_WORDS: Readonly<Record<string, string>> = {
@@ -73,10 +74,6 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     title: `Option ${text(data, "option")} reaches the toxic limit`,
     text: `Highest predicted ${concentration(number(data, "peak"))}; the record's toxic limit is ${concentration(number(data, "from"))} (${text(data, "source")}).`,
   }),
-  "age-outside-population": (data) => ({
-    title: "Age outside the population the figures come from",
-    text: `${figure(number(data, "age"))} years; the record's figures come from: ${text(data, "population")}. The prediction should not be relied on.`,
-  }),
   "level-after-now": (data) => ({
     title: `The level of ${when(data)} lies after the now line`,
     text: "A level can't come from the future: correct its time, or move the now line.",
@@ -125,7 +122,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "factor-by-hand": (data) => ({
     title: `${FACTOR_WORDS[text(data, "kind")] ?? "Event"}: clearance changed by hand`,
-    text: `${text(data, "detail")}. Clearance ${figure(number(data, "clearance") * 100)} % of usual${number(data, "volume") === 1 ? "" : `, volume ${figure(number(data, "volume") * 100)} %`}${number(data, "onsetDays") > 0 ? `, reached in daily steps over ${figure(number(data, "onsetDays"))} days` : ", at once"}. That is the user's own figure, not the record's.`,
+    text: `${text(data, "detail")}. Clearance ${figure(number(data, "clearance") * 100)} % of usual${number(data, "volume") === 1 ? "" : `, volume ${figure(number(data, "volume") * 100)} %`}${number(data, "onsetDays") > 0 ? `, reached in daily steps over ${figure(number(data, "onsetDays"))} days` : ", at once"}. ${data.source === null ? "That is the user's own figure, not the record's." : `Its source, as entered: ${text(data, "source")}.`}`,
   }),
   "kinetics-change": (data) => ({
     title: "The kinetics change during the course",
@@ -177,6 +174,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     text: `${text(data, "name")}, record version ${number(data, "recordVersion")}: of ${number(data, "total")} figures, ${unverifiedWords(data)}. Check against current product information.`,
   }),
   ...fitConcernMessages,
+  ...recordConcernMessages,
 };
 
 export const CONCERN_CODES: readonly string[] = Object.keys(concernMessages);

@@ -13,6 +13,9 @@ export const levelTiming: ConcernRule = (context) => {
     const last = given.filter((mark) => mark.countedMg > 0 && mark.atH < level.atH).at(-1);
     const reading = model?.products.find((product) => product.product === last?.product);
     if (!reading || !model) return [];
+    // Sooner than the record's source allows is levelTooEarly's to say.
+    const earliestH = context.case.medicine.earliestSample?.value ?? 0;
+    if (level.afterDoseH < earliestH) return [];
     const distributedH = model.distributionEndH[reading.product] ?? 0;
     if (distributedH > reading.lag.value && level.afterDoseH < distributedH) {
       return [

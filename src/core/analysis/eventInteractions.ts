@@ -1,0 +1,50 @@
+import type { Case, Factor } from "../case/index.ts";
+import type { Interaction } from "../medicine/index.ts";
+
+type Sex = Case["patient"]["sex"];
+
+/**
+ * The record's interactions with what an event names: whole words, whatever the case ("Sodium valproate 500 mg" names valproate).
+ * "A, B or C" is named by any of them; "A with B" and "two or more of A, B and C" only by two. "…, woman" is for a woman.
+ */
+export function eventInteractions(value: Case, factor: Factor): readonly Interaction[] {
+  const said = saidOf(factor);
+  if (said === null) return [];
+  return interactionsFor(value).filter(({ medicine }) => isNamed(medicine, ` ${wordsOf(said)} `));
+}
+
+/** The record's interactions that can be this patient's: those for the other sex are left out. */
+export function interactionsFor({ medicine, patient: { sex } }: Case): readonly Interaction[] {
+  return medicine.interactions.filter((each) => sex === undefined || (sexOf(each.medicine) ?? sex) === sex);
+}
+
+function saidOf({ kind, detail }: Factor): string | null {
+  if (kind === "interacting-medicine" || kind === "other") return detail;
+  return kind === "smoking" ? `${detail} tobacco smoke` : null;
+}
+
+function isNamed(medicine: string, said: string): boolean {
+  const names = medicine
+    .replace(FOR_ONE_SEX, "")
+    .replace(/^two or more of\b/i, "")
+    .split(/,|\bor\b|\band\b|\bwith\b/i)
+    .map(wordsOf)
+    .filter((name) => name !== "");
+  const found = names.filter((name) => said.includes(` ${name} `)).length;
+  return found >= (/\bwith\b|^two or more of\b/i.test(medicine) ? 2 : 1);
+}
+
+const FOR_ONE_SEX = /,\s*(woman|man)$/i;
+
+function sexOf(medicine: string): Sex {
+  const word = FOR_ONE_SEX.exec(medicine)?.[1]?.toLowerCase();
+  return word === undefined ? undefined : word === "woman" ? "female" : "male";
+}
+
+function wordsOf(text: string): string {
+  return text
+    .toLowerCase()
+    .split(/[^\p{L}\p{N}*]+/u)
+    .filter((word) => word !== "")
+    .join(" ");
+}
