@@ -36,8 +36,8 @@ export const benchWords = {
     done: "entered",
   },
   noPrediction: "No prediction: the concerns say what is missing.",
-  steadyHead: "Readings at steady state, typical patient",
-  steadyHeadFinal: "Readings at steady state of the final kinetics, typical patient",
+  steadyHead: "Readings at steady state",
+  steadyHeadFinal: "Readings at steady state of the final kinetics",
   demoShort: "demo, invented",
   intended:
     "Supports, and does not replace, the judgement of a licensed professional and local policy. Check against current product information.",

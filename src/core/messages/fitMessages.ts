@@ -13,8 +13,7 @@ import {
   when,
   wordList,
 } from "./concernFigures.ts";
-import { chanceWords, fitWords, influenceWords } from "./fitWords.ts";
-import { windowQuantityWord } from "./windowWords.ts";
+import { chanceWords, fitWords, influenceWords, windowChanceWords } from "./fitWords.ts";
 
 /** Why the levels say nothing of this patient. */
 const NO_FIT: Readonly<Record<NoFitReason, string>> = {
@@ -161,7 +160,7 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
   }),
   "option-chance-above": (data) => ({
     title: `Option ${text(data, "option")}: chance of lying above the window ${chanceWords(number(data, "chance"))}`,
-    text: `Of the ${windowQuantityWord(data.quantity as TargetWindow["quantity"])} ${data.isSteady ? "at steady state" : "over the span shown"}, for this patient. Below the window ${chanceWords(number(data, "below"))}.`,
+    text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"])} ${data.isSteady ? "at steady state" : "over the span shown"}, for this patient. Below the window ${chanceWords(number(data, "below"))}.`,
   }),
   "option-chance-toxic": (data) => ({
     title: `Option ${text(data, "option")} may reach the toxic limit in this patient`,

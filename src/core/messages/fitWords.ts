@@ -1,6 +1,14 @@
-import { type FittedParameter, type LevelFit, TAUGHT_LITTLE, TAUGHT_MUCH } from "../analysis/index.ts";
+import {
+  type FittedFigure,
+  type FittedParameter,
+  type LevelFit,
+  TAUGHT_LITTLE,
+  TAUGHT_MUCH,
+} from "../analysis/index.ts";
+import type { TargetWindow } from "../case/index.ts";
 import { numberPrint } from "../units/index.ts";
-import { wordList } from "./concernFigures.ts";
+import { figure, hours, wordList } from "./concernFigures.ts";
+import { windowQuantityWord } from "./windowWords.ts";
 
 /** Fixed words about this patient's figures. */
 export const fitWords = {
@@ -8,13 +16,33 @@ export const fitWords = {
   individual: "this patient",
   typicalPatient: "typical patient",
   interval: "90 % interval",
+  level: "level",
+  predicted: "predicted for this patient",
+  leftOut: (reason: string) => `left out: ${reason}`,
+  forecast: (levelsKnown: number) =>
+    `forecast before it (${levelsKnown === 0 ? "no level known" : levelsKnown === 1 ? "1 level known" : `${levelsKnown} levels known`}), 90 %:`,
+  held: (held: boolean) => (held ? "held" : "did not hold"),
+  keyHead: "How to read it",
+  keyIndividual: "this patient, median",
+  keyTypical: "typical patient",
+  keyBand: "50 % and 90 % intervals",
+  keyForecast: "forecast before a level was known, 90 %; dashed: did not hold",
+  profileHint:
+    "Arrow keys move by an hour, with Shift by a quarter. L goes to the next level, Shift and L to the one before.",
   taughtTitle: "What the levels taught",
   openTaught: "What the levels taught",
-  chanceSteady: (quantity: string) => `Chance at steady state, of the ${quantity}`,
-  chanceSpan: (quantity: string, span: string) => `Chance ${span}, of the ${quantity}`,
+  chanceHead: (quantity: string) => `Chance of ${quantity} lying within the window`,
+  chanceSteady: "at steady state",
+  chanceBeside: (below: string, above: string) => `below ${below}, above ${above}`,
+  chanceOption: (option: string) => `Option ${option}`,
+  chanceTaken: "Of this patient, from what the levels leave possible.",
+  neverSteady: (option: string, share: string) =>
+    `Option ${option}: with a chance of ${share} a steady state is never reached; those draws are left out of its steady-state figures.`,
   within: "within",
   below: "below",
   above: "above",
+  progress: "part of the fit worked out",
+  stale: "being worked out again; what is shown is from before the last change",
   pending: "this patient: being worked out; the typical patient is shown meanwhile",
   only: "typical patient only",
   none: "typical patient only: no level",
@@ -24,6 +52,9 @@ export const fitWords = {
   mostLikely: "most likely",
   median: "median",
   halfLife: "Half-life",
+  taught: "taught",
+  halfLifeIs: ({ typical, posterior }: FittedFigure): string =>
+    `${hours(posterior.q50)}, ${fitWords.interval} ${figure(posterior.q05)} to ${hours(posterior.q95)}; ${fitWords.typical} ${hours(typical)}`,
   residualModel: "Residuals",
   residualModels: {
     normal: { label: "normal", detail: "every level counts by its error" },
@@ -37,6 +68,11 @@ export const fitWords = {
   noLevelsLeftOut: "none",
   seeWorking: "working",
 } as const;
+
+/** What a chance of a window is about, with its article: "the lowest", "the whole curve". */
+export function windowChanceWords(quantity: TargetWindow["quantity"]): string {
+  return quantity === "lowest-and-highest" ? "the whole curve" : `the ${windowQuantityWord(quantity)}`;
+}
 
 /** A chance in words: never "0 %" or "100 %". */
 export function chanceWords(share: number): string {

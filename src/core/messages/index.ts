@@ -6,7 +6,23 @@ export * from "./entryWords.ts";
 export { amountsWords, eventEffectWords, eventLine, eventName, eventWords, isEventMoment } from "./eventWords.ts";
 export * from "./fieldWords.ts";
 export { FIT_CONCERN_CODES, fitFailureSentence, fitLine, noFitSentence } from "./fitMessages.ts";
-export { chanceWords, fitWords, influenceWords, symbolWords, taughtSentence, taughtWord } from "./fitWords.ts";
+export {
+  chanceWords,
+  fitWords,
+  influenceWords,
+  symbolWords,
+  taughtSentence,
+  taughtWord,
+  windowChanceWords,
+} from "./fitWords.ts";
+export {
+  fitWorkingWords,
+  flipFlopWords,
+  individualWorking,
+  learntDescription,
+  levelTimes,
+  parameterFigures,
+} from "./fitWorkingWords.ts";
 export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
 export { laneLineWords } from "./laneWords.ts";
 export type { MessageFunction } from "./messageFunction.ts";

@@ -1,3 +1,4 @@
+import { fitWords } from "../../core/messages/index.ts";
 import { CaseEntry } from "../entry/CaseEntry.tsx";
 import { DoseEntry } from "../entry/DoseEntry.tsx";
 import { EventEntry } from "../entry/EventEntry.tsx";
@@ -6,12 +7,14 @@ import { PatientPanel } from "../entry/PatientPanel.tsx";
 import { WindowEntry } from "../entry/WindowEntry.tsx";
 import { RichLevelsPanel } from "../rich/RichLevelsPanel.tsx";
 import { Dialog } from "../ui/Dialog.tsx";
+import { LearntPanel } from "./LearntPanel.tsx";
 import { MedicinePanel } from "./MedicinePanel.tsx";
 import { OptionPanel } from "./OptionPanel.tsx";
+import type { ReadingOf } from "./ReadingsTable.tsx";
 import type { ShownUnit } from "./shownUnit.ts";
 import { WorkingPanel } from "./WorkingPanel.tsx";
 
-export type BenchPanelKind = "case" | "patient" | "medicine" | "window" | "levels" | "rich";
+export type BenchPanelKind = "case" | "patient" | "medicine" | "window" | "levels" | "rich" | "learnt";
 
 /** Which drawer is open: one of the simple ones, the doses of a lane, an option, or the working of a reading. */
 export type OpenPanel =
@@ -19,7 +22,7 @@ export type OpenPanel =
   | { readonly kind: "doses"; readonly lineId?: string }
   | { readonly kind: "events"; readonly index?: number }
   | { readonly kind: "option"; readonly option: string; readonly lineId?: string }
-  | { readonly kind: "working"; readonly row: string; readonly option: string };
+  | { readonly kind: "working"; readonly row: string; readonly option: string; readonly of: ReadingOf };
 
 const TITLES: Readonly<Record<BenchPanelKind | "doses" | "events", string>> = {
   case: "Case",
@@ -28,6 +31,7 @@ const TITLES: Readonly<Record<BenchPanelKind | "doses" | "events", string>> = {
   window: "Target window",
   levels: "Measured levels",
   rich: "Levels without a model",
+  learnt: fitWords.taughtTitle,
   doses: "Doses given",
   events: "Events",
 };
@@ -48,6 +52,7 @@ export function BenchPanel({ panel, unit, onClose }: BenchPanelProps) {
       {panel.kind === "medicine" && <MedicinePanel />}
       {panel.kind === "window" && <WindowEntry onDone={onClose} />}
       {panel.kind === "levels" && <LevelEntry onDone={onClose} />}
+      {panel.kind === "learnt" && <LearntPanel />}
       {panel.kind === "rich" && <RichLevelsPanel unit={unit} />}
       {panel.kind === "doses" && (
         <DoseEntry lane="given" onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
@@ -58,7 +63,7 @@ export function BenchPanel({ panel, unit, onClose }: BenchPanelProps) {
       {panel.kind === "option" && (
         <OptionPanel option={panel.option} onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
       )}
-      {panel.kind === "working" && <WorkingPanel row={panel.row} option={panel.option} />}
+      {panel.kind === "working" && <WorkingPanel row={panel.row} option={panel.option} of={panel.of} />}
     </Dialog>
   );
 }

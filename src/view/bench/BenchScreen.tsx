@@ -10,19 +10,18 @@ import { optionStyle } from "../chart/ProfileChart.tsx";
 import { Button } from "../ui/Button.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
 import { AmountsRow } from "./AmountsRow.tsx";
+import { BenchColumn } from "./BenchColumn.tsx";
 import { BenchPanel, type OpenPanel } from "./BenchPanel.tsx";
 import "./BenchScreen.css";
 import { useElementWidth } from "../ui/useElementWidth.ts";
 import { type BenchSpan, spanMoved, spanStart, spanWithin, spanZoomed } from "./benchSpan.ts";
 import { CaseStrip } from "./CaseStrip.tsx";
 import { ClockHead } from "./ClockHead.tsx";
-import { ConcernList } from "./ConcernList.tsx";
 import { DoseLane } from "./DoseLane.tsx";
 import { EventsLane } from "./EventsLane.tsx";
-import { FirstSteps } from "./FirstSteps.tsx";
 import { LaneLines, OptionHead } from "./OptionHead.tsx";
+import { ProfileKey } from "./ProfileKey.tsx";
 import { ProfileRow } from "./ProfileRow.tsx";
-import { ReadingsTable } from "./ReadingsTable.tsx";
 import { SavingBar } from "./SavingBar.tsx";
 import { shownUnits } from "./shownUnit.ts";
 import { useBenchKeys } from "./useBenchKeys.ts";
@@ -45,6 +44,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const [scale, setScale] = useState<"linear" | "log">("linear");
   const [isMolar, setMolar] = useState(false);
   const [chosenSpan, setChosenSpan] = useState<BenchSpan | null>(null);
+  const [lit, setLit] = useState<string | null>(null);
   const [isWhereShown, setWhereShown] = useState(false);
   const clockColumn = useRef<HTMLDivElement>(null);
   const width = useElementWidth(clockColumn, 900);
@@ -79,7 +79,6 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const close = useCallback(() => setPanel(null), []);
   if (!open || !value) return null;
   const isReader = open.role === "reader";
-  const hasLines = value.options.some((option) => option.lines.length > 0);
   const units = shownUnits(value);
   const unit = isMolar ? units.molar : units.mass;
   const lineTexts = (lines: readonly DoseLine[]) =>
@@ -174,10 +173,12 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
                 right={RIGHT}
                 scale={scale}
                 unit={unit}
+                lit={lit}
               />
             ) : (
               <p className="bench-waiting">{benchWords.analysisStates.running}</p>
             )}
+            {analysis?.fit.kind === "fitted" && <ProfileKey />}
             {value.demo ? (
               <p className="bench-demo" aria-hidden="true">
                 demo
@@ -241,6 +242,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
                   largest={lanes.largest}
                   style={optionStyle(i)}
                   isReadOnly={isReader}
+                  onLit={(isLit) => setLit(isLit ? option.id : null)}
                   onOpenLine={(lineId) => setPanel({ kind: "option", option: option.id, lineId })}
                   head={
                     <OptionHead
@@ -284,29 +286,15 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
             </>
           )}
         </div>
-        <aside className="bench-column" aria-label="Readings and concerns">
-          {open.analysis.status === "failed" && (
-            <p className="bench-stale" role="alert">
-              {benchWords.analysisStates.failed}: {open.analysis.failure}
-            </p>
-          )}
-          {!isReader && <FirstSteps value={value} analysis={analysis} onPanel={setPanel} onAddOption={addOption} />}
-          {!isReader && hasLines && !value.options.some((option) => option.chosen) && (
-            <p className="bench-hint">{benchWords.noneChosen}</p>
-          )}
-          {analysis &&
-            value.options.some((option) => option.lines.length > 0) &&
-            value.options.length === analysis.options.length && (
-              <ReadingsTable
-                value={value}
-                analysis={analysis}
-                unit={unit}
-                onWorking={(row, option) => setPanel({ kind: "working", row, option })}
-              />
-            )}
-          {analysis && <ConcernList concerns={analysis.concerns} />}
-          <p className="bench-intended">{benchWords.intended}</p>
-        </aside>
+        <BenchColumn
+          open={open}
+          value={value}
+          analysis={analysis}
+          unit={unit}
+          onPanel={setPanel}
+          onAddOption={addOption}
+          onLit={setLit}
+        />
       </main>
       {panel && <BenchPanel panel={panel} unit={unit} onClose={close} />}
     </div>

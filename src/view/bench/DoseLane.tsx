@@ -27,6 +27,8 @@ interface DoseLaneProps {
   readonly isReadOnly: boolean;
   readonly onOpenLine: (lineId: string) => void;
   readonly head: ReactNode;
+  /** Pointed at, or holding the focus. */
+  readonly onLit?: (isLit: boolean) => void;
 }
 
 const BASELINE = 52;
@@ -43,7 +45,14 @@ export function DoseLane(props: DoseLaneProps) {
   });
   const chosen = tokens.find((token) => token.key === selected) ?? null;
   return (
-    <section className="lane" aria-label={props.name}>
+    <section
+      className="lane"
+      aria-label={props.name}
+      onPointerEnter={() => props.onLit?.(true)}
+      onPointerLeave={() => props.onLit?.(false)}
+      onFocus={() => props.onLit?.(true)}
+      onBlur={() => props.onLit?.(false)}
+    >
       <div className="lane-head">{props.head}</div>
       <div className="lane-body">
         <svg className="lane-row" width={width} role="group" aria-label={`${props.name}: doses`}>

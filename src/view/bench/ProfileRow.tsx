@@ -1,13 +1,15 @@
-import { type KeyboardEvent, type PointerEvent, useMemo, useState } from "react";
-import type { Analysis } from "../../core/analysis/index.ts";
+import { type KeyboardEvent, type PointerEvent, useId, useMemo, useState } from "react";
+import type { Analysis, LevelResult } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
+import { fitWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
 import { optionStyle, ProfileChart } from "../chart/ProfileChart.tsx";
-import { profileScene } from "../chart/profileScene.ts";
+import { type ProfileScene, profileScene } from "../chart/profileScene.ts";
 import type { BenchSpan } from "./benchSpan.ts";
 import { ProfileReadout } from "./ProfileReadout.tsx";
-import { readoutLines } from "./readoutLines.ts";
+import { profileParts } from "./profileInput.ts";
+import { curveAt, levelLines, levelNear, readoutLines } from "./readoutLines.ts";
 import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 import "./ProfileRow.css";
 
@@ -19,53 +21,59 @@ interface ProfileRowProps {
   readonly right: number;
   readonly scale: "linear" | "log";
   readonly unit: ShownUnit;
+  /** The option pointed at elsewhere on the bench: its band is filled. */
+  readonly lit: string | null;
 }
 
 export const PROFILE_HEIGHT = 430;
 const MARGIN = { top: 14, bottom: 28, left: 0 };
 
 /** The concentration-time curve on the shared clock, with a readout that follows the pointer or the arrow keys. */
-export function ProfileRow({ value, analysis, span, width, right, scale, unit }: ProfileRowProps) {
+export function ProfileRow({ value, analysis, span, width, right, scale, unit, lit }: ProfileRowProps) {
   const [readoutH, setReadoutH] = useState<number | null>(null);
+  const [nearest, setNearest] = useState<string | null>(null);
   const factor = unitFactor(value, unit);
-  const scene = useMemo(() => {
-    const { window } = value;
-    const isConcentration = window?.low.unit === "mg/L";
-    return profileScene({
-      width,
-      height: PROFILE_HEIGHT,
-      margin: { ...MARGIN, right },
-      fromH: span.fromH,
-      toH: span.toH,
-      nowH: analysis.clock.nowH,
-      midnightsH: analysis.clock.midnightsH,
-      scale,
-      factor,
-      window: window && isConcentration ? { low: window.low.value, high: window.high.value } : null,
-      curves: [
-        ...(analysis.givenCurve ? [{ id: "given", name: "", ...analysis.givenCurve }] : []),
-        ...analysis.options.flatMap((option) =>
-          option.curve ? [{ id: option.id, name: option.id, ...option.curve }] : [],
-        ),
-      ],
-      levels: analysis.levels.map((level) => ({
-        id: level.id,
-        atH: level.atH,
-        value: level.measured,
-        sd: level.assaySd,
-        excluded: level.excluded !== null,
-        belowLimit: level.belowLimit,
-        label: `${level.belowLimit ? "below " : ""}${numberPrint(level.measured * factor, { significant: 3 })}`,
-      })),
-    });
-  }, [value, analysis, span, width, right, scale, factor]);
+  const chosen = value.options.find((option) => option.chosen)?.id ?? null;
+  const litOption = lit ?? nearest ?? chosen ?? value.options[0]?.id ?? null;
+  const scene = useMemo(
+    () =>
+      profileScene({
+        width,
+        height: PROFILE_HEIGHT,
+        margin: { ...MARGIN, right },
+        fromH: span.fromH,
+        toH: span.toH,
+        nowH: analysis.clock.nowH,
+        midnightsH: analysis.clock.midnightsH,
+        scale,
+        factor,
+        ...profileParts(value, analysis, factor, litOption),
+      }),
+    [value, analysis, span, width, right, scale, factor, litOption],
+  );
 
+  const pxPerHour = (scene.plot.right - scene.plot.left) / (span.toH - span.fromH);
+  const hintId = useId();
   const clamp = (hours: number) => Math.min(Math.max(hours, span.fromH), span.toH);
   const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
     const box = event.currentTarget.getBoundingClientRect();
-    setReadoutH(clamp(scene.clock.hours(event.clientX - box.left)));
+    const hours = clamp(scene.clock.hours(event.clientX - box.left));
+    const level = levelNear(analysis, hours, pxPerHour);
+    setReadoutH(level ? level.atH : hours);
+    setNearest(optionNear(analysis, hours, scene, event.clientY - box.top));
+  };
+  const goToLevel = (step: 1 | -1) => {
+    const from = readoutH ?? clamp(analysis.clock.nowH);
+    const shown = analysis.levels.map((level) => level.atH).filter((atH) => atH >= span.fromH && atH <= span.toH);
+    const ahead = shown.filter((atH) => (step > 0 ? atH > from : atH < from));
+    const next = step > 0 ? (ahead[0] ?? shown[0]) : (ahead.at(-1) ?? shown.at(-1));
+    if (next !== undefined) setReadoutH(next);
   };
   const onKeyDown = (event: KeyboardEvent) => {
+    if (event.key.toLowerCase() === "l" && !event.ctrlKey && !event.metaKey && !event.altKey) {
+      goToLevel(event.shiftKey ? -1 : 1);
+      return;
+    }
     const current = readoutH ?? clamp(analysis.clock.nowH);
     const step = event.shiftKey ? 0.25 : 1;
     const next = {
@@ -83,10 +91,10 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
     event.preventDefault();
     setReadoutH(clamp(next));
   };
-  const chosen = value.options.find((option) => option.chosen)?.id ?? null;
   const style = (id: string) =>
     id === "given" ? ("given" as const) : optionStyle(value.options.findIndex((option) => option.id === id));
   const shownH = readoutH ?? clamp(analysis.clock.nowH);
+  const level = readoutH === null ? null : levelNear(analysis, readoutH, pxPerHour);
   return (
     <div
       className="profile-row"
@@ -96,10 +104,14 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
       aria-valuemin={span.fromH}
       aria-valuemax={span.toH}
       aria-valuenow={shownH}
-      aria-valuetext={readoutWords(value, analysis, shownH, unit)}
+      aria-valuetext={readoutWords(value, analysis, shownH, unit, level)}
+      aria-describedby={hintId}
       onPointerMove={onPointerMove}
       onPointerDown={onPointerMove}
-      onPointerLeave={() => setReadoutH(null)}
+      onPointerLeave={() => {
+        setReadoutH(null);
+        setNearest(null);
+      }}
       onFocus={(event) => {
         if (event.currentTarget.matches(":focus-visible"))
           setReadoutH((current) => current ?? clamp(analysis.clock.nowH));
@@ -111,6 +123,7 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
         scene={scene}
         styleOf={style}
         chosen={chosen}
+        litLevel={level?.id ?? null}
         mode="screen"
         title={profileTitle(value, analysis, unit)}
       >
@@ -120,11 +133,15 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit }:
             analysis={analysis}
             scene={scene}
             hours={readoutH}
+            level={level}
             unit={unit}
             styleOf={style}
           />
         )}
       </ProfileChart>
+      <span id={hintId} className="visually-hidden">
+        {fitWords.profileHint}
+      </span>
     </div>
   );
 }
@@ -140,6 +157,12 @@ function profileTitle(value: Case, analysis: Analysis, unit: ShownUnit): string 
   const options = analysis.options
     .flatMap((option) => {
       const settled = option.typical?.steadyState;
+      const own = option.individual?.steadyState;
+      if (own) {
+        return [
+          `option ${option.id} settles in this patient between ${three(own.lowest.q50)} (${three(own.lowest.q05)} to ${three(own.lowest.q95)}) and ${three(own.peak.q50)} (${three(own.peak.q05)} to ${three(own.peak.q95)}) ${shown}`,
+        ];
+      }
       return settled
         ? [`option ${option.id} settles between ${three(settled.lowest)} and ${three(settled.peak)} ${shown}`]
         : [];
@@ -148,7 +171,28 @@ function profileTitle(value: Case, analysis: Analysis, unit: ShownUnit): string 
   return `Predicted ${value.medicine.name} concentration in ${shown} over time: ${window}${options || "no option with a steady state"}`;
 }
 
-function readoutWords(value: Case, analysis: Analysis, hours: number, unit: ShownUnit): string {
-  const lines = readoutLines(value, analysis, hours, unit);
+function readoutWords(
+  value: Case,
+  analysis: Analysis,
+  hours: number,
+  unit: ShownUnit,
+  level: LevelResult | null,
+): string {
+  const lines = [...readoutLines(value, analysis, hours, unit), ...(level ? levelLines(value, level, unit) : [])];
   return [instantText(analysis.clock.originMs + hours * 3_600_000, value.timeZone, "dayClock"), ...lines].join("; ");
+}
+
+/** How near the pointer counts as on a curve, px. */
+const NEAR_CURVE = 28;
+
+/** The option whose curve lies under the pointer. */
+function optionNear(analysis: Analysis, hours: number, scene: ProfileScene, y: number): string | null {
+  if (hours < analysis.clock.nowH) return null;
+  const near = analysis.options.flatMap(({ id }) => {
+    const found = curveAt(analysis, id, hours);
+    if (!found) return [];
+    const at = scene.concentration.y((found.individual?.q50 ?? found.typical) * scene.factor);
+    return Math.abs(at - y) <= NEAR_CURVE ? [{ id, distance: Math.abs(at - y) }] : [];
+  });
+  return near.sort((a, b) => a.distance - b.distance)[0]?.id ?? null;
 }

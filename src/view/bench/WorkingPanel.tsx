@@ -1,17 +1,29 @@
-import { readingWorking } from "../../core/messages/index.ts";
+import { fitWords, individualWorking, readingWorking } from "../../core/messages/index.ts";
 import { useWorkbench } from "../useWorkbench.ts";
+import type { ReadingOf } from "./ReadingsTable.tsx";
 import "./OptionPanel.css";
 
 /** The arithmetic of one reading, so that a second person can check it by hand. */
-export function WorkingPanel({ row, option }: { readonly row: string; readonly option: string }) {
+export function WorkingPanel({
+  row,
+  option,
+  of,
+}: {
+  readonly row: string;
+  readonly option: string;
+  readonly of: ReadingOf;
+}) {
   const open = useWorkbench((state) => state.open);
   const analysis = open?.analysis.result;
-  const working = open && analysis ? readingWorking(open.value, analysis, option, row) : null;
+  const working =
+    open && analysis
+      ? (of === "typical" ? readingWorking : individualWorking)(open.value, analysis, option, row)
+      : null;
   if (!working) return <p>There is nothing to show for this reading now.</p>;
   return (
     <div className="working">
       <h3>
-        {working.title}, option {option}, typical patient
+        {working.title}, option {option}, {of === "typical" ? fitWords.typicalPatient : fitWords.individual}
       </h3>
       {working.steps.map((step) => (
         <p key={step} className="working-line">

@@ -1,20 +1,28 @@
-import type { Analysis, OptionResult } from "../../core/analysis/index.ts";
+import type { Analysis, IndividualReadings, OptionResult, Spread } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { benchWords, windowRemarkWords } from "../../core/messages/index.ts";
+import { benchWords, fitWords, windowRemarkWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, quantityPrint, unitSpoken } from "../../core/units/index.ts";
 import { exposureSpoken, type ShownUnit, unitFactor } from "./shownUnit.ts";
 
-/** One row of the readings column: a name and one printed value an option; null where the option has none. */
+/** One row of the readings column: a name and, an option, what the typical patient and this patient have. */
 export interface ReadingsRow {
   readonly id: string;
   readonly name: string;
-  readonly cells: readonly (ReadingCell | null)[];
+  readonly cells: readonly ReadingPair[];
+}
+
+/** null where there is none. */
+export interface ReadingPair {
+  readonly typical: ReadingCell | null;
+  readonly individual: ReadingCell | null;
+  /** The same for whichever patient: stands across both columns. */
+  readonly isShared?: boolean;
 }
 
 export interface ReadingCell {
   readonly text: string;
-  /** Said under it, smaller: when. */
+  /** Said under it, smaller: when, or the 90 % interval. */
   readonly sub?: string;
 }
 
@@ -29,78 +37,213 @@ const three = (value: number) => numberPrint(value, { significant: 3 });
 /** A unit of more characters than this would break the cells. */
 const LONGEST_UNIT = 5;
 
-/** The readings of every option, side by side, in the unit shown. */
+/** Whether any option has figures of this patient: then there are two columns an option. */
+export function hasIndividual(analysis: Analysis): boolean {
+  return analysis.options.some((option) => option.individual !== null);
+}
+
+type Own = IndividualReadings;
+type OwnSteady = NonNullable<Own["steadyState"]>;
+type Steady = NonNullable<NonNullable<OptionResult["typical"]>["steadyState"]>;
+type Span = NonNullable<OptionResult["typical"]>["span"];
+
+/** The readings of every option, side by side, in the unit shown; this patient's with the 90 % interval under the median. */
 export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit): readonly ReadingsGroup[] {
   const factor = unitFactor(value, unit);
-  // A long unit stands once in the head instead of in every cell.
   const spoken = unitSpoken(unit, "screen");
   const hasChanges = (analysis.typical?.dispositions.length ?? 1) > 1;
-  const isLong = spoken.length > LONGEST_UNIT;
-  const concentration = (mgPerL: number) => `${three(mgPerL * factor)}${isLong ? "" : ` ${spoken}`}`;
-  const exposure = (mgH: number) => `${three(mgH * factor)}${isLong ? "" : ` ${exposureSpoken(unit)}`}`;
-  const hours = (h: number) => `${numberPrint(h, { decimals: 1 })} h`;
+  const hasOwn = hasIndividual(analysis);
+  // A long unit, or one beside many figures, stands once in the head instead of in every cell.
+  const isInHead = hasOwn || spoken.length > LONGEST_UNIT;
+  const concentration: Print = {
+    figure: (mgPerL) => three(mgPerL * factor),
+    unit: isInHead ? "" : ` ${spoken}`,
+  };
+  const exposure: Print = { figure: concentration.figure, unit: isInHead ? "" : ` ${exposureSpoken(unit)}` };
+  const hours: Print = {
+    figure: (h) => numberPrint(h, { decimals: 1 }),
+    ...(hasOwn ? { unit: "", named: ", h" } : { unit: " h" }),
+  };
+  const times: Print = { figure: three, ...(hasOwn ? { unit: "", named: ", times" } : { unit: " times" }) };
+  /** When, under the figure: where there are two columns an option it has no room, and stands in the working. */
+  const at = (text: string) => (hasOwn ? {} : { sub: text });
   const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
   const row = (
     id: string,
     name: string,
-    of: (option: OptionResult) => string | ReadingCell | null | undefined,
+    print: Print,
+    typical: (option: OptionResult) => number | ReadingCell | null | undefined,
+    own: (individual: Own) => Spread | null | undefined = () => null,
   ): ReadingsRow => ({
     id,
-    name,
+    name: name + (print.named ?? ""),
     cells: analysis.options.map((option) => {
-      const found = of(option) ?? null;
-      return typeof found === "string" ? { text: found } : found;
+      const found = typical(option) ?? null;
+      const spread = option.individual ? (own(option.individual) ?? null) : null;
+      return {
+        typical: typeof found === "number" ? { text: print.figure(found) + print.unit } : found,
+        individual: spread && {
+          text: print.figure(spread.q50) + print.unit,
+          sub: `${print.figure(spread.q05)} to ${print.figure(spread.q95)}`,
+        },
+      };
     }),
   });
   const settled = (
-    name: string,
     id: string,
-    of: (s: NonNullable<NonNullable<OptionResult["typical"]>["steadyState"]>) => string | ReadingCell,
-  ) => row(id, name, (option) => option.typical?.steadyState && of(option.typical.steadyState));
+    name: string,
+    print: Print,
+    of: (s: Steady) => number | ReadingCell,
+    own?: (s: OwnSteady) => Spread,
+  ) =>
+    row(
+      id,
+      name,
+      print,
+      (option) => option.typical?.steadyState && of(option.typical.steadyState),
+      own && (({ steadyState }) => steadyState && own(steadyState)),
+    );
   const span = (
-    name: string,
     id: string,
-    of: (s: NonNullable<OptionResult["typical"]>["span"]) => string | ReadingCell | null,
-  ) => row(id, name, (option) => option.typical && of(option.typical.span));
-  const inHours = (h: number | null) => (h === null ? null : hours(h));
+    name: string,
+    print: Print,
+    of: (s: Span) => number | ReadingCell | null,
+    own: (s: Own["span"]) => Spread | null,
+  ) =>
+    row(
+      id,
+      name,
+      print,
+      (option) => option.typical && of(option.typical.span),
+      (individual) => own(individual.span),
+    );
+  const units = isInHead ? `; ${spoken}, AUC ${exposureSpoken(unit)}` : "";
+  const patient = hasOwn ? "" : `, ${fitWords.typicalPatient}`;
   return [
     {
       id: "steady",
-      head: `${hasChanges ? benchWords.steadyHeadFinal : benchWords.steadyHead}${isLong ? `; ${spoken}, AUC ${exposureSpoken(unit)}` : ""}`,
+      head: `${hasChanges ? benchWords.steadyHeadFinal : benchWords.steadyHead}${patient}${units}`,
       rows: [
-        settled("Highest (Cmax)", "peak", (s) => concentration(s.peak)),
-        settled("after the dose (Tmax)", "peakAfterDose", (s) => hours(s.peakAfterDoseH)),
-        settled("Lowest", "lowest", (s) => concentration(s.lowest)),
-        settled("Average", "average", (s) => concentration(s.average)),
-        settled("AUC in 24 h", "auc24", (s) => exposure(s.auc24)),
-        row("halfLife", "Half-life", (option) => inHours(option.typical?.halfLifeH ?? null)),
-        settled("Accumulation", "accumulation", (s) => `${three(s.accumulation)} times`),
-        settled("90 % steady after", "timeTo90", (s) => ({
-          text: hours(s.timeTo90H),
-          sub: `from ${clock(s.steady90AtH)}`,
-        })),
-        row("dailyDose", "Dose in 24 h", (option) =>
-          option.typical?.dailyDoseMg === null || option.typical === null
-            ? null
-            : breaking(
-                quantityPrint({ value: option.typical.dailyDoseMg, unit: "mg" }, { style: "screen", significant: 3 }),
-              ),
+        settled(
+          "peak",
+          "Highest (Cmax)",
+          concentration,
+          (s) => s.peak,
+          (s) => s.peak,
         ),
+        settled("peakAfterDose", "after the dose (Tmax)", hours, (s) => s.peakAfterDoseH),
+        settled(
+          "lowest",
+          "Lowest",
+          concentration,
+          (s) => s.lowest,
+          (s) => s.lowest,
+        ),
+        settled(
+          "average",
+          "Average",
+          concentration,
+          (s) => s.average,
+          (s) => s.average,
+        ),
+        settled(
+          "auc24",
+          "AUC in 24 h",
+          exposure,
+          (s) => s.auc24,
+          (s) => s.auc24,
+        ),
+        row(
+          "halfLife",
+          "Half-life",
+          hours,
+          (option) => option.typical?.halfLifeH,
+          (own) => own.halfLifeH,
+        ),
+        settled(
+          "accumulation",
+          "Accumulation",
+          times,
+          (s) => s.accumulation,
+          (s) => s.accumulation,
+        ),
+        settled(
+          "timeTo90",
+          "90 % steady after",
+          hours,
+          (s) => ({ text: hours.figure(s.timeTo90H) + hours.unit, ...at(`from ${clock(s.steady90AtH)}`) }),
+          (s) => s.timeTo90H,
+        ),
+        {
+          id: "dailyDose",
+          name: "Dose in 24 h",
+          cells: analysis.options.map((option) => ({ typical: dailyDose(option), individual: null, isShared: true })),
+        },
       ],
     },
     {
       id: "span",
-      head: `${clock(analysis.clock.nowH)} to ${clock(analysis.clock.readingsToH)}, ${numberPrint(analysis.clock.readingsToH - analysis.clock.nowH, { decimals: 0 })} h${windowRemark(value)}`,
+      head: `${clock(analysis.clock.nowH)} to ${clock(analysis.clock.readingsToH)}, ${numberPrint(analysis.clock.readingsToH - analysis.clock.nowH, { decimals: 0 })} h${patient}${hasOwn ? `; ${spoken}` : ""}${windowRemark(value)}`,
       rows: [
-        span("Highest", "spanPeak", (s) => ({ text: concentration(s.peak), sub: clock(s.timeOfPeakH) })),
-        span("Lowest", "spanLowest", (s) => ({ text: concentration(s.lowest), sub: clock(s.timeOfLowestH) })),
-        span("Average", "spanAverage", (s) => concentration(s.average)),
-        span("Below the window", "hoursBelow", (s) => inHours(s.hoursBelow)),
-        span("Within the window", "hoursWithin", (s) => inHours(s.hoursWithin)),
-        span("Above the window", "hoursAbove", (s) => inHours(s.hoursAbove)),
+        span(
+          "spanPeak",
+          "Highest",
+          concentration,
+          (s) => ({ text: concentration.figure(s.peak) + concentration.unit, ...at(clock(s.timeOfPeakH)) }),
+          (s) => s.peak,
+        ),
+        span(
+          "spanLowest",
+          "Lowest",
+          concentration,
+          (s) => ({ text: concentration.figure(s.lowest) + concentration.unit, ...at(clock(s.timeOfLowestH)) }),
+          (s) => s.lowest,
+        ),
+        span(
+          "spanAverage",
+          "Average",
+          concentration,
+          (s) => s.average,
+          (s) => s.average,
+        ),
+        span(
+          "hoursBelow",
+          "Below the window",
+          hours,
+          (s) => s.hoursBelow,
+          (s) => s.hoursBelow,
+        ),
+        span(
+          "hoursWithin",
+          "Within the window",
+          hours,
+          (s) => s.hoursWithin,
+          (s) => s.hoursWithin,
+        ),
+        span(
+          "hoursAbove",
+          "Above the window",
+          hours,
+          (s) => s.hoursAbove,
+          (s) => s.hoursAbove,
+        ),
       ],
     },
   ];
+}
+
+interface Print {
+  readonly figure: (value: number) => string;
+  readonly unit: string;
+  /** The unit behind the row's name, where it does not stand behind each figure. */
+  readonly named?: string;
+}
+
+function dailyDose(option: OptionResult): ReadingCell | null {
+  const mg = option.typical?.dailyDoseMg ?? null;
+  return mg === null
+    ? null
+    : { text: breaking(quantityPrint({ value: mg, unit: "mg" }, { style: "screen", significant: 3 })) };
 }
 
 /** Hours are always of the whole curve; a window meant for one point of it is easily misread. */

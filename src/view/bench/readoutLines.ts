@@ -1,6 +1,14 @@
-import { type Analysis, concentrationAt, hoursSinceDose } from "../../core/analysis/index.ts";
+import {
+  type Analysis,
+  concentrationAt,
+  hoursSinceDose,
+  type LevelResult,
+  type Spread,
+} from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
+import { fitWords } from "../../core/messages/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
+import { bandAt, bandOf } from "./bandAt.ts";
 import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 
 /** Which curves exist at an instant: the doses given up to the now line, the options from it on. */
@@ -9,15 +17,70 @@ export function curvesAt(analysis: Analysis, hours: number): readonly (string | 
   return hours < analysis.clock.nowH || options.length === 0 ? [null] : options;
 }
 
-/** What the readout says under its clock time: each curve's exact value and the hours since its last dose. */
+/** What stands at an instant on one curve, mg/L: this patient's limits where there is a fit, and the typical patient's value. */
+export function curveAt(
+  analysis: Analysis,
+  option: string | null,
+  hours: number,
+): { readonly typical: number; readonly individual: Spread | null } | null {
+  const found = concentrationAt(analysis, option, [hours]);
+  if (!found) return null;
+  const band = bandOf(analysis, option);
+  return { typical: found[0]!, individual: band && bandAt(band, hours) };
+}
+
+/** What the readout says under its clock time: each curve's value, for this patient with its 90 % interval, and the hours since its last dose. */
 export function readoutLines(value: Case, analysis: Analysis, hours: number, unit: ShownUnit): string[] {
-  const factor = unitFactor(value, unit);
+  const { three, shown } = printing(value, unit);
   return curvesAt(analysis, hours).flatMap((option) => {
-    const found = concentrationAt(analysis, option, [hours]);
+    const found = curveAt(analysis, option, hours);
     if (!found) return [];
     const since = hoursSinceDose(analysis, option, hours);
     const after = since === null ? "no dose before" : `${numberPrint(since, { decimals: 1 })} h after the dose`;
     const name = option === null ? "" : `${option}  `;
-    return [`${name}${numberPrint(found[0]! * factor, { significant: 3 })} ${unitSpoken(unit, "screen")}, ${after}`];
+    const { individual, typical } = found;
+    const figures = individual
+      ? `${three(individual.q50)} ${shown}, ${fitWords.interval} ${range(individual, three)}; ${fitWords.typical} ${three(typical)}`
+      : `${three(typical)} ${shown}`;
+    return [`${name}${figures}, ${after}`];
   });
+}
+
+/** How near the pointer counts as on a level, px. */
+const NEAR = 10;
+
+/** The level at an instant, within a few pixels; the nearest where there are several. */
+export function levelNear(analysis: Analysis, hours: number, pxPerHour: number): LevelResult | null {
+  const near = analysis.levels.filter((level) => Math.abs(level.atH - hours) * pxPerHour <= NEAR);
+  return near.sort((a, b) => Math.abs(a.atH - hours) - Math.abs(b.atH - hours))[0] ?? null;
+}
+
+/** What the readout says of a level: measured, what this patient's curve gives there, and whether the forecast before it held. */
+export function levelLines(value: Case, level: LevelResult, unit: ShownUnit): string[] {
+  const { three, shown } = printing(value, unit);
+  const { fit } = level;
+  const out = level.excluded === null ? "" : `, ${fitWords.leftOut(level.excluded)}`;
+  return [
+    `${fitWords.level} ${level.belowLimit ? "below " : ""}${three(level.measured)} ${shown}${out}`,
+    ...(fit
+      ? [`${fitWords.predicted} ${three(fit.predicted.q50)}, ${fitWords.interval} ${range(fit.predicted, three)}`]
+      : []),
+    ...(fit?.forecast
+      ? [
+          `${fitWords.forecast(fit.forecast.levelsKnown)} ${range(fit.forecast.predictive, three)}: ${fitWords.held(fit.forecast.held)}`,
+        ]
+      : []),
+  ];
+}
+
+function range(spread: Spread, print: (mgPerL: number) => string): string {
+  return `${print(spread.q05)} to ${print(spread.q95)}`;
+}
+
+function printing(value: Case, unit: ShownUnit) {
+  const factor = unitFactor(value, unit);
+  return {
+    three: (mgPerL: number) => numberPrint(mgPerL * factor, { significant: 3 }),
+    shown: unitSpoken(unit, "screen"),
+  };
 }

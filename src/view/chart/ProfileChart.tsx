@@ -1,5 +1,6 @@
 import type { ReactNode } from "react";
 import { numberPrint } from "../../core/units/index.ts";
+import { LevelMark } from "./LevelMark.tsx";
 import "./profileChart.css";
 import type { ProfileScene } from "./profileScene.ts";
 
@@ -15,6 +16,8 @@ interface ProfileChartProps {
   readonly styleOf: (curveId: string) => CurveStyle;
   /** Curve to stand out: drawn heavier. */
   readonly chosen?: string | null;
+  /** A level pointed at: what was predicted there is drawn beside it. */
+  readonly litLevel?: string | null;
   readonly mode: "screen" | "print";
   /** Words for assistive technology: what the picture says. */
   readonly title: string;
@@ -66,10 +69,13 @@ export function ProfileChart(props: ProfileChartProps) {
         </text>
       ))}
       {scene.nowX !== null && <NowLine scene={scene} x={scene.nowX} labels={props.nowLabels} />}
+      {scene.bands.map((band) => (
+        <BandPaths key={band.id} band={band} style={props.styleOf(band.id)} />
+      ))}
       {scene.curves.map((curve) => (
         <path
           key={curve.id}
-          className={`profile-curve profile-${props.styleOf(curve.id)}${curve.id === props.chosen ? " profile-chosen" : ""}`}
+          className={`profile-curve profile-${props.styleOf(curve.of)}${curve.isThin ? " profile-thin" : curve.of === props.chosen ? " profile-chosen" : ""}`}
           d={curve.path}
         />
       ))}
@@ -78,7 +84,7 @@ export function ProfileChart(props: ProfileChartProps) {
           curve.name !== "" && (
             <text
               key={curve.id}
-              className={`profile-name profile-${props.styleOf(curve.id)}`}
+              className={`profile-name profile-${props.styleOf(curve.of)}`}
               x={curve.endX + 8}
               y={curve.labelY + 5}
             >
@@ -87,10 +93,24 @@ export function ProfileChart(props: ProfileChartProps) {
           ),
       )}
       {scene.levels.map((level) => (
-        <LevelMark key={level.id} level={level} right={plot.right} />
+        <LevelMark key={level.id} level={level} right={plot.right} isLit={level.id === props.litLevel} />
       ))}
       {props.children}
     </svg>
+  );
+}
+
+/** 50 % inside 90 %, or only the 90 % edges. */
+function BandPaths({ band, style }: { band: ProfileScene["bands"][number]; style: CurveStyle }) {
+  return (
+    <g className={`profile-band profile-band-${style}`} data-band={band.id}>
+      {band.isFilled && <path className="profile-band-wide" d={band.wide} />}
+      {band.isFilled && <path className="profile-band-narrow" d={band.narrow} />}
+      <path
+        className={band.isFilled ? "profile-band-edge" : "profile-band-edge profile-band-edge-alone"}
+        d={band.edges}
+      />
+    </g>
   );
 }
 
@@ -168,41 +188,6 @@ function NowLine({
           </text>
         </>
       )}
-    </g>
-  );
-}
-
-/** Half the width of the plus mark and of the bar's ends, px. */
-const ARM = 6;
-
-function LevelMark({ level, right }: { level: ProfileScene["levels"][number]; right: number }) {
-  const atRight = level.x > right - 48;
-  const kind = level.excluded ? "profile-level profile-level-left-out" : "profile-level";
-  return (
-    <g className={kind}>
-      {level.top !== null && level.bottom !== null && !level.belowLimit && (
-        <line className="profile-bar" x1={level.x} x2={level.x} y1={level.top} y2={level.bottom} />
-      )}
-      {level.excluded ? (
-        <circle className="profile-hollow" cx={level.x} cy={level.y} r={ARM} />
-      ) : level.belowLimit ? (
-        <path
-          className="profile-plus"
-          d={`M${level.x - ARM} ${level.y}h${2 * ARM}m${-ARM} 0v${2 * ARM}l-4 -5m4 5l4 -5`}
-        />
-      ) : (
-        <path
-          className="profile-plus"
-          d={`M${level.x - ARM} ${level.y}h${2 * ARM}M${level.x} ${level.y - ARM}v${2 * ARM}`}
-        />
-      )}
-      <text
-        className={atRight ? "profile-level-value profile-level-value-left" : "profile-level-value"}
-        x={atRight ? level.x - 11 : level.x + 11}
-        y={level.y - 6}
-      >
-        {level.label}
-      </text>
     </g>
   );
 }

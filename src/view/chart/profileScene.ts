@@ -1,7 +1,9 @@
 import { line } from "d3-shape";
 import { type ClockScale, type ClockTick, clockScale, hourTicks } from "./clockScale.ts";
 import { type ConcentrationScale, concentrationScale } from "./concentrationScale.ts";
+import { curvePoints } from "./curvePoints.ts";
 import { labelSpread } from "./labelSpread.ts";
+import { type ProfileBand, type ProfileBandInput, profileBand } from "./profileBand.ts";
 
 /**
  * The profile as geometry: pure data that the bench and the summary paint each in their own way.
@@ -20,11 +22,16 @@ export interface ProfileInput {
   /** mg/L; null when the window is not a concentration or there is none. */
   readonly window: { readonly low: number; readonly high: number } | null;
   readonly curves: readonly ProfileCurveInput[];
+  readonly bands?: readonly ProfileBandInput[];
   readonly levels: readonly ProfileLevelInput[];
 }
 
 export interface ProfileCurveInput {
   readonly id: string;
+  /** Whose style it is drawn in, where that is not its own id: the typical patient beside this one. */
+  readonly of?: string;
+  /** The typical patient's where this patient's is drawn too: thin. */
+  readonly isThin?: boolean;
   /** Written at the curve's right end; empty for none. */
   readonly name: string;
   readonly timesH: ArrayLike<number>;
@@ -39,6 +46,10 @@ export interface ProfileLevelInput {
   readonly excluded: boolean;
   readonly belowLimit: boolean;
   readonly label: string;
+  /** This patient's curve there: median and 90 % limits. */
+  readonly predicted?: { readonly low: number; readonly median: number; readonly high: number } | null;
+  /** 90 % limits said before the level was known. */
+  readonly forecast?: { readonly low: number; readonly high: number; readonly held: boolean } | null;
 }
 
 export interface ProfileScene {
@@ -57,8 +68,11 @@ export interface ProfileScene {
     readonly low: number;
     readonly high: number;
   } | null;
+  readonly bands: readonly ProfileBand[];
   readonly curves: readonly {
     readonly id: string;
+    readonly of: string;
+    readonly isThin: boolean;
     readonly name: string;
     readonly path: string;
     readonly endX: number;
@@ -74,6 +88,8 @@ export interface ProfileScene {
     readonly excluded: boolean;
     readonly belowLimit: boolean;
     readonly label: string;
+    readonly predicted: { readonly top: number; readonly y: number; readonly bottom: number } | null;
+    readonly forecast: { readonly top: number; readonly bottom: number; readonly held: boolean } | null;
   }[];
 }
 
@@ -81,38 +97,18 @@ const LABEL_DISTANCE = 17;
 
 function highestShown(input: ProfileInput): number {
   let highest = input.window ? input.window.high : 0;
-  for (const curve of input.curves) {
+  const upper = (input.bands ?? []).map((band) => ({ timesH: band.timesH, values: band.q95 }));
+  for (const curve of [...input.curves, ...upper]) {
     for (let i = 0; i < curve.timesH.length; i++) {
       if (curve.timesH[i]! >= input.fromH && curve.timesH[i]! <= input.toH)
         highest = Math.max(highest, curve.values[i]!);
     }
   }
   for (const level of input.levels) {
-    if (level.atH >= input.fromH && level.atH <= input.toH) highest = Math.max(highest, level.value + (level.sd ?? 0));
+    if (level.atH >= input.fromH && level.atH <= input.toH)
+      highest = Math.max(highest, level.value + (level.sd ?? 0), level.forecast?.high ?? 0);
   }
   return highest * input.factor;
-}
-
-/** Points of a curve inside the span, with its ends interpolated on the span's edges. */
-export function curvePoints(curve: ProfileCurveInput, fromH: number, toH: number): [number, number][] {
-  const points: [number, number][] = [];
-  const between = (i: number, hours: number): [number, number] => {
-    const t0 = curve.timesH[i - 1]!;
-    const t1 = curve.timesH[i]!;
-    const share = t1 > t0 ? (hours - t0) / (t1 - t0) : 0;
-    return [hours, curve.values[i - 1]! + share * (curve.values[i]! - curve.values[i - 1]!)];
-  };
-  for (let i = 0; i < curve.timesH.length; i++) {
-    const hours = curve.timesH[i]!;
-    if (hours < fromH) continue;
-    if (points.length === 0 && i > 0 && hours > fromH) points.push(between(i, fromH));
-    if (hours > toH) {
-      if (i > 0) points.push(between(i, toH));
-      break;
-    }
-    points.push([hours, curve.values[i]!]);
-  }
-  return points;
 }
 
 export function profileScene(input: ProfileInput): ProfileScene {
@@ -161,8 +157,13 @@ export function profileScene(input: ProfileInput): ProfileScene {
       top: concentration.y(input.window.high * input.factor),
       bottom: concentration.y(input.window.low * input.factor),
     },
+    bands: (input.bands ?? []).map((band) =>
+      profileBand(band, input.fromH, input.toH, clock.x, (value) => concentration.y(value * input.factor)),
+    ),
     curves: drawn.map(({ curve, points }, index) => ({
       id: curve.id,
+      of: curve.of ?? curve.id,
+      isThin: curve.isThin ?? false,
       name: curve.name,
       path: path(points) ?? "",
       endX: ends[index]!.x,
@@ -180,6 +181,20 @@ export function profileScene(input: ProfileInput): ProfileScene {
         excluded: level.excluded,
         belowLimit: level.belowLimit,
         label: level.label,
+        predicted: level.predicted
+          ? {
+              top: concentration.y(level.predicted.high * input.factor),
+              y: concentration.y(level.predicted.median * input.factor),
+              bottom: concentration.y(level.predicted.low * input.factor),
+            }
+          : null,
+        forecast: level.forecast
+          ? {
+              top: concentration.y(level.forecast.high * input.factor),
+              bottom: concentration.y(level.forecast.low * input.factor),
+              held: level.forecast.held,
+            }
+          : null,
       })),
   };
 }

@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { curvePoints, type ProfileInput, profileScene } from "../../../src/view/chart/profileScene.ts";
+import { curvePoints } from "../../../src/view/chart/curvePoints.ts";
+import { type ProfileInput, profileScene } from "../../../src/view/chart/profileScene.ts";
 
 const input: ProfileInput = {
   width: 800,
@@ -52,7 +53,7 @@ describe("profileScene", () => {
 
 describe("curvePoints", () => {
   it("interpolates on the edges of the span", () => {
-    const curve = { id: "x", name: "", timesH: [0, 10, 20], values: [0, 10, 0] };
+    const curve = { timesH: [0, 10, 20], values: [0, 10, 0] };
     expect(curvePoints(curve, 5, 15)).toEqual([
       [5, 5],
       [10, 10],
@@ -61,6 +62,6 @@ describe("curvePoints", () => {
   });
 
   it("is empty outside", () => {
-    expect(curvePoints({ id: "x", name: "", timesH: [0, 1], values: [1, 1] }, 5, 6)).toEqual([]);
+    expect(curvePoints({ timesH: [0, 1], values: [1, 1] }, 5, 6)).toEqual([]);
   });
 });

@@ -1,0 +1,81 @@
+import type { Analysis, WindowChance } from "../../core/analysis/index.ts";
+import type { Case } from "../../core/case/index.ts";
+import { chanceWords, fitWords, windowChanceWords } from "../../core/messages/index.ts";
+import { instantText } from "../../core/time/index.ts";
+import { optionStyle } from "../chart/ProfileChart.tsx";
+import { OptionBadge } from "./OptionBadge.tsx";
+import "./ChanceList.css";
+
+interface ChanceListProps {
+  readonly value: Case;
+  readonly analysis: Analysis;
+  readonly onLit: (option: string | null) => void;
+}
+
+/** For each option the chance of lying below, within and above the window: at steady state, and over the span of the readings. */
+export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
+  const { window } = value;
+  if (!window || analysis.options.every((option) => option.individual === null)) return null;
+  const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
+  const never = analysis.options.filter(({ individual }) => (individual?.shareNeverSteady ?? 0) > 0);
+  return (
+    <section className="chances" aria-labelledby="chances-head">
+      <h2 className="readings-head" id="chances-head">
+        {fitWords.chanceHead(windowChanceWords(window.quantity))}
+      </h2>
+      <ul className="chances-list">
+        {analysis.options.map(({ id, individual }, i) => {
+          if (!individual) return null;
+          const { steadyState, span } = individual;
+          const about = [
+            ...(steadyState?.chance ? [{ when: fitWords.chanceSteady, chance: steadyState.chance }] : []),
+            ...(span.chance ? [{ when: `${clock(span.fromH)} to ${clock(span.toH)}`, chance: span.chance }] : []),
+          ];
+          return (
+            <li
+              key={id}
+              className="chance"
+              onPointerEnter={() => onLit(id)}
+              onPointerLeave={() => onLit(null)}
+              data-chance={id}
+            >
+              <OptionBadge id={id} index={i} isChosen={value.options[i]?.chosen ?? false} />
+              <span className="visually-hidden">{fitWords.chanceOption(id)}: </span>
+              <div className="chance-rows">
+                {about.map(({ when, chance }) => (
+                  <div key={when}>
+                    <p className="chance-words">
+                      <strong>{chanceWords(chance.within)}</strong> {when}
+                      <span className="chance-beside">
+                        {" "}
+                        {fitWords.chanceBeside(chanceWords(chance.below), chanceWords(chance.above))}
+                      </span>
+                    </p>
+                    <ChanceBar chance={chance} style={optionStyle(i)} />
+                  </div>
+                ))}
+              </div>
+            </li>
+          );
+        })}
+      </ul>
+      {never.map(({ id, individual }) => (
+        <p key={id} className="chance-beside">
+          {fitWords.neverSteady(id, chanceWords(individual?.shareNeverSteady ?? 0))}
+        </p>
+      ))}
+      <p className="chance-beside">{fitWords.chanceTaken}</p>
+    </section>
+  );
+}
+
+/** Hatched below, full within, open above; the words stand beside it. */
+function ChanceBar({ chance, style }: { chance: WindowChance; style: string }) {
+  return (
+    <div className={`chance-bar chance-bar-${style}`} aria-hidden="true">
+      <span className="chance-bar-below" style={{ flexGrow: chance.below }} />
+      <span className="chance-bar-within" style={{ flexGrow: chance.within }} />
+      <span className="chance-bar-above" style={{ flexGrow: chance.above }} />
+    </div>
+  );
+}
