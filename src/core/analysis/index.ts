@@ -5,4 +5,14 @@ export { concentrationAt, hoursSinceDose } from "./concentrationAt.ts";
 export { type DeriveOptions, derive, deriveSteps, ENGINE } from "./derive.ts";
 export type * from "./fitTypes.ts";
 export { concentrationWindow } from "./optionReadings.ts";
+export {
+  RECORD_DOSE_MOST_MG,
+  RECORD_INTERVAL_LEAST_H,
+  RECORD_INTERVAL_MOST_H,
+  type RecordCourse,
+  type RecordProfile,
+  type RecordReadings,
+  recordProfile,
+} from "./recordProfile.ts";
+export { type ReferencePatient, referenceCovariates } from "./referenceCovariates.ts";
 export { TAUGHT_LITTLE, TAUGHT_MUCH } from "./taughtThresholds.ts";
