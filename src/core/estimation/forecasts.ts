@@ -29,20 +29,30 @@ export function forecasts(
   options: DrawOptions,
   probabilities: readonly number[],
 ): Forecast[] {
-  const { levels, residual, residualModel } = problem;
-  const made = new Map<number, { known: number; draws: Draws | null }>();
-  return levels.map(({ time }) => {
-    const known = levels.filter((level) => level.time < time);
-    const before = made.get(time) ?? { known: known.length, draws: drawsFrom({ ...problem, levels: known }, options) };
-    made.set(time, before);
-    if (before.draws === null) return { levelsKnown: before.known, quantiles: null };
-    const [at] = drawLevels(problem, before.draws, [time]);
-    const { weights } = before.draws;
-    return {
-      levelsKnown: before.known,
-      quantiles: predictiveQuantiles(at!, weights, residual, residualModel, probabilities),
-    };
+  const made = new Map<number, Forecast>();
+  return problem.levels.map(({ time }) => {
+    const forecast = made.get(time) ?? forecastAt(problem, time, options, probabilities);
+    made.set(time, forecast);
+    return forecast;
   });
+}
+
+/** The same for one time, h: from the levels drawn strictly before it. */
+export function forecastAt(
+  problem: EstimationProblem,
+  time: number,
+  options: DrawOptions,
+  probabilities: readonly number[],
+): Forecast {
+  const { levels, residual, residualModel } = problem;
+  const known = levels.filter((level) => level.time < time);
+  const draws = drawsFrom({ ...problem, levels: known }, options);
+  if (draws === null) return { levelsKnown: known.length, quantiles: null };
+  const [at] = drawLevels(problem, draws, [time]);
+  return {
+    levelsKnown: known.length,
+    quantiles: predictiveQuantiles(at!, draws.weights, residual, residualModel, probabilities),
+  };
 }
 
 function drawsFrom(problem: EstimationProblem, options: DrawOptions): Draws | null {

@@ -13,8 +13,8 @@ export type {
   Residual,
   ResidualModel,
 } from "./estimationTypes.ts";
-export { type Forecast, forecasts } from "./forecasts.ts";
-export { leaveOneOut } from "./leaveOneOut.ts";
+export { type Forecast, forecastAt, forecasts } from "./forecasts.ts";
+export { leaveOneOut, leaveOut } from "./leaveOneOut.ts";
 export { mapEstimate, type OralMapEstimate } from "./mapEstimate.ts";
 export type { OralParameter, OralProblem } from "./oralProblem.ts";
 export { type OralPosterior, posterior } from "./posterior.ts";

@@ -13,10 +13,13 @@ import type { EstimationProblem, MapEstimate } from "./estimationTypes.ts";
  * Source: influence by deletion, standard.
  */
 export function leaveOneOut(problem: EstimationProblem, map: MapEstimate): (MapEstimate | null)[] {
+  return problem.levels.map((_, left) => leaveOut(problem, map, left));
+}
+
+/** The same for one level, by its place in the problem. */
+export function leaveOut(problem: EstimationProblem, map: MapEstimate, left: number): MapEstimate | null {
   const { levels } = problem;
-  if (levels.length === 1) return [null];
+  if (levels.length === 1) return null;
   const from = map.status === "converged" ? map.eta : undefined;
-  return levels.map((_, left) =>
-    estimateMostLikely({ ...problem, levels: levels.filter((__, i) => i !== left) }, from),
-  );
+  return estimateMostLikely({ ...problem, levels: levels.filter((_, i) => i !== left) }, from);
 }
