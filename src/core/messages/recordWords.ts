@@ -64,6 +64,13 @@ export const recordWords = {
     `${parameter} × ${factor}${onset ? `, reached within ${onset}` : ""}`,
   autoinduction: "Autoinduction",
   settledAfter: "settled after",
+  /** Names of figures that the screens of cases do not have. */
+  figures: {
+    maximumSingleDose: "highest single dose, as labelled",
+    maximumDailyDose: "highest daily dose, as labelled",
+    steadyStateAfter: "steady state after",
+    earliestSample: "no level before, after a dose",
+  } as Readonly<Record<string, string>>,
   covariates: {
     weight: "weight",
     idealWeight: "ideal weight",
@@ -128,6 +135,7 @@ export const recordWords = {
   compareHelp: "The same reference patient, dose and interval for both.",
   compareFirst: "First record",
   compareSecond: "Second record",
+  compareUnsaved: (name: string) => `“${name}” has unsaved changes; they are not part of this comparison.`,
   compareSame: "Choose two different records.",
   differences: "What differs",
   differencesNone: "All figures of the two are the same, sources included.",

@@ -1,5 +1,6 @@
 import {
   isDraftGroup,
+  isRecordSame,
   type MedicineRecord,
   medicineRead,
   recordCopy,
@@ -94,7 +95,7 @@ export function medicineActions(context: StoreContext): MedicineActions {
       if (isBuiltIn(id)) return fail(issue("medicine-built-in", { id }, ["id"]));
       const before = own().find((record) => record.id === id);
       const stored = await store(read.value);
-      const isOther = before && JSON.stringify(before) !== JSON.stringify(read.value);
+      const isOther = before && !isRecordSame(before, read.value);
       if (stored.ok && isOther)
         context.offer("check", [issue("medicine-replaced", { name, recordVersion: before.recordVersion })], () =>
           putBack(before, undefined),

@@ -136,6 +136,7 @@ export function MedicinesScreen() {
             records={medicines}
             first={original ?? record}
             second={original ? record : second}
+            edited={Object.keys(recordEdits)}
             onLeave={() => setMode("read")}
             reference={reference}
             onReference={setReference}

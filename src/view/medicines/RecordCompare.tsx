@@ -22,6 +22,8 @@ export interface RecordCompareProps {
   readonly first: MedicineRecord;
   /** What to begin with beside it. */
   readonly second: MedicineRecord;
+  /** Ids of records with unsaved edits. */
+  readonly edited: readonly string[];
   readonly onLeave: () => void;
   readonly reference: ReferenceDraft;
   readonly onReference: (draft: ReferenceDraft) => void;
@@ -89,6 +91,13 @@ export function RecordCompare(props: RecordCompareProps) {
           fault={isSame ? recordWords.compareSame : undefined}
         />
       </div>
+      {pair.map(({ id, name }) =>
+        props.edited.includes(id) ? (
+          <p key={id} className="record-page-note">
+            {recordWords.compareUnsaved(name)}
+          </p>
+        ) : null,
+      )}
       {isSame ? null : (
         <>
           <section>

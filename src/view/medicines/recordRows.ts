@@ -36,7 +36,7 @@ export function figureRow(id: string, name: string, figure: Figure): RecordRow {
 const hasSource = (value: unknown): value is { readonly source: string } =>
   typeof value === "object" && value !== null && "source" in value;
 const isFigure = (value: unknown): value is Figure => hasSource(value) && "value" in value;
-export const figureName = (key: string): string => medicinesWords.figures[key] ?? key;
+export const figureName = (key: string): string => recordWords.figures[key] ?? medicinesWords.figures[key] ?? key;
 
 /** Every figure among the fields of a part of the record, in the record's own order. */
 export function figureRows(part: object, name: (key: string) => string = figureName): readonly RecordRow[] {

@@ -1,4 +1,5 @@
 import type { MedicineRecord } from "../medicineRecord.ts";
+import { isRecordSame } from "./isRecordSame.ts";
 
 /** The longest name a record may have. */
 const NAME_MOST = 80;
@@ -35,7 +36,7 @@ export function recordCopyName(record: MedicineRecord, taken: readonly string[])
  * gone with the first change.
  */
 export function recordNextVersion(edited: MedicineRecord, before: MedicineRecord): MedicineRecord {
-  const isReviewNew = JSON.stringify(edited.review) !== JSON.stringify(before.review);
+  const isReviewNew = !isRecordSame(edited.review, before.review);
   return {
     ...edited,
     recordVersion: before.recordVersion + 1,

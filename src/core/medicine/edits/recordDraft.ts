@@ -69,9 +69,30 @@ export function recordDraftRead(draft: RecordDraft): Result<MedicineRecord> {
   const { json, faults } = draftJson(draft);
   const parsed = medicineParse(json);
   if (parsed.ok && faults.length === 0) return succeed(parsed.value);
-  const isNumberFault = (path: DraftPath) => faults.some((each) => isSamePath(each.path, path));
-  const others = parsed.ok ? [] : parsed.issues.filter((each) => !isNumberFault(each.path));
-  return fail(...faults, ...others);
+  const told = [...faults];
+  const isTold = (each: Issue) => told.some(({ path }) => isSamePath(path, each.path));
+  if (!parsed.ok) told.push(...parsed.issues.filter((each) => !isTold(each)));
+  // What must hold across fields is looked at only in a whole record: a source still to be named hides no other fault.
+  const whole = medicineParse(draftJson(withSources(draft)).json);
+  if (!whole.ok) told.push(...whole.issues.filter((each) => !isTold(each)));
+  return fail(...told);
+}
+
+/** Wherever source or basis is still to be named, one that passes. */
+function withSources(draft: RecordDraft): RecordDraft {
+  const source = isDraftGroup(draft.sources) ? (Object.keys(draft.sources)[0] ?? "") : "";
+  const filled = (node: DraftNode): DraftNode => {
+    if (isDraftList(node)) return node.map(filled);
+    if (!isDraftGroup(node)) return node;
+    return Object.fromEntries(
+      Object.entries(node).flatMap(([key, each]) => {
+        if (each === "" && key === "source") return [[key, source]];
+        if (each === "" && key === "basis") return [[key, "memory"]];
+        return each === undefined || key === "was" ? [] : [[key, filled(each)]];
+      }),
+    );
+  };
+  return filled(draft) as RecordDraft;
 }
 
 export function isSamePath(a: DraftPath, b: DraftPath): boolean {

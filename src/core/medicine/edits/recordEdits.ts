@@ -8,6 +8,7 @@ export {
   isDraftGroup,
   isDraftList,
 } from "./draftNode.ts";
+export { isRecordSame } from "./isRecordSame.ts";
 export { recordCopy, recordCopyName, recordNextVersion } from "./recordCopy.ts";
 export { isSamePath, type RecordDraft, recordDraft, recordDraftRead } from "./recordDraft.ts";
 export { isDraftChanged, recordDraftChange } from "./recordDraftChange.ts";

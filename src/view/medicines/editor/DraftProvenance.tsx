@@ -7,7 +7,7 @@ import {
   isDraftGroup,
 } from "../../../core/medicine/index.ts";
 import { recordWords } from "../../../core/messages/index.ts";
-import { sourceShort } from "../recordRows.ts";
+import { sourceNumber, sourceShort } from "../recordRows.ts";
 import { DraftChoice } from "./DraftChoice.tsx";
 import { DraftText } from "./DraftText.tsx";
 import { useDraft } from "./draftContext.ts";
@@ -36,7 +36,10 @@ export function DraftProvenance({ path, before }: DraftProvenanceProps) {
         path={[...path, "source"]}
         label={recordWords.sourceField}
         prompt={recordWords.sourcePrompt}
-        choices={Object.keys(named).map((value) => ({ value, label: sourceShort({ sources: named }, value) || value }))}
+        choices={Object.keys(named).map((value) => ({
+          value,
+          label: `${sourceShort({ sources: named }, value) || value} [${sourceNumber({ sources: named }, value)}]`,
+        }))}
       />
       <DraftChoice
         path={[...path, "basis"]}

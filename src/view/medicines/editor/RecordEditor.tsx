@@ -6,6 +6,7 @@ import {
   historyChange,
   historyRedo,
   historyUndo,
+  isRecordSame,
   type MedicineRecord,
   type RecordDraftHistory,
   recordDraftRead,
@@ -53,7 +54,7 @@ export function RecordEditor(props: RecordEditorProps) {
   const { draft } = history;
   const read = useMemo(() => recordDraftRead(draft), [draft]);
   const issues = read.ok ? [] : read.issues;
-  const isClean = history.undo.length === 0 && read.ok && isSame(read.value, record);
+  const isClean = history.undo.length === 0 && read.ok && isRecordSame(read.value, record);
   const [faults, setFaults] = useState<readonly Issue[]>([]);
   const [isGivingUp, setGivingUp] = useState(false);
   const step = (next: RecordDraftHistory) => onKeep({ ...edit, history: next });
@@ -63,7 +64,7 @@ export function RecordEditor(props: RecordEditorProps) {
     setFaults(outcome.ok ? [] : outcome.issues);
   };
   const isReviewLost =
-    !isClean && record.review.status === "reviewed" && read.ok && isSame(read.value.review, record.review);
+    !isClean && record.review.status === "reviewed" && read.ok && isRecordSame(read.value.review, record.review);
   return (
     <DraftContext value={{ draft, change, issues }}>
       <div className="editor">
@@ -140,8 +141,4 @@ export function RecordEditor(props: RecordEditorProps) {
       </Dialog>
     </DraftContext>
   );
-}
-
-function isSame(a: unknown, b: unknown): boolean {
-  return JSON.stringify(a) === JSON.stringify(b);
 }

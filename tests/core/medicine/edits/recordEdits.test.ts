@@ -5,6 +5,7 @@ import {
   historyRedo,
   historyUndo,
   isDraftChanged,
+  isRecordSame,
   type MedicineRecord,
   medicineParse,
   medicineRead,
@@ -77,6 +78,22 @@ describe("a draft", () => {
     expect(read.issues.filter((each) => each.path.at(-1) === "value")).toMatchObject([{ code: "number-comma", path }]);
   });
 
+  test("a source still to be named hides no other fault", () => {
+    const draft = recordDraftChange(recordDraft(record), ["kinetics", "clearance", "formula"], "0.05 L/h * weight");
+    expect(codes(recordDraftRead(draft)).sort()).toEqual([
+      "formula-dimension",
+      "record-figure-without-source",
+      "record-figure-without-source",
+    ]);
+  });
+
+  test("both ends of a window put in another unit at once ask for their source", () => {
+    const [window] = recordDraft(record).windows as readonly RecordDraft[];
+    const end = { value: "1", unit: "umol/L" };
+    const draft = recordDraftChange(recordDraft(record), ["windows", 0], { ...window, low: end, high: end });
+    expect((draft.windows as readonly RecordDraft[])[0]).toMatchObject({ source: "", basis: "" });
+  });
+
   test("an entry taken away leaves the marks of its neighbours with them", () => {
     const draft = recordDraftChange(recordDraft(record), ["products", 0, "strengths", 0], undefined);
     const [product] = draft.products as readonly RecordDraft[];
@@ -147,6 +164,13 @@ describe("a preview", () => {
     expect(preview).toMatchObject({ ok: false, issues: [{ path: ["products", 1, "bioavailability", "value"] }] });
     expect(recordPreview(draft, record, 0).ok).toBe(true);
   });
+});
+
+test("two records are the same whatever the order of their fields, and not when a figure differs", () => {
+  const turned = Object.fromEntries(Object.entries(record).reverse());
+  expect(isRecordSame(record, { ...turned, copyOf: undefined })).toBe(true);
+  expect(isRecordSame(record, { ...record, molarMass: { ...record.molarMass, value: 1 } })).toBe(false);
+  expect(isRecordSame([1, 2], [2, 1])).toBe(false);
 });
 
 describe("the file of a record", () => {
