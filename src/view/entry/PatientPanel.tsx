@@ -8,7 +8,7 @@ import { useWorkbench } from "../useWorkbench.ts";
 import { ObservationEntry } from "./ObservationEntry.tsx";
 import { PanelDone } from "./PanelDone.tsx";
 import { PatientFigures } from "./PatientFigures.tsx";
-import { ageLook, creatinineLook, heightLook, type KnownTraits, weightLook } from "./quantityLooks.ts";
+import { ageLook, albuminLook, creatinineLook, heightLook, type KnownTraits, weightLook } from "./quantityLooks.ts";
 import "./entryPanel.css";
 
 export interface PatientPanelProps {
@@ -29,6 +29,7 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
   };
   const weights = observations.filter((one) => one.kind === "weight");
   const creatinines = observations.filter((one) => one.kind === "serumCreatinine");
+  const albumins = observations.filter((one) => one.kind === "albumin");
   const add = (observation: Observation) => edit("observationAdd", { observation });
   const shared = { value, isReadOnly, onRemove: (id: string) => edit("observationRemove", { id }) };
   return (
@@ -99,6 +100,22 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
             quantity,
             ...(isConfirmed ? { confirmed: true } : {}),
           })
+        }
+      />
+      <ObservationEntry
+        {...shared}
+        words={{
+          label: patientWords.albumin,
+          list: patientWords.albumins,
+          none: patientWords.noAlbumin,
+          at: patientWords.drawnAt,
+        }}
+        observations={albumins}
+        units={["g/L", "g/dL"]}
+        unit={albumins.at(-1)?.quantity.unit ?? "g/L"}
+        look={albuminLook}
+        onAdd={(at, quantity, isConfirmed) =>
+          add({ id: partId(), at, kind: "albumin", quantity, ...(isConfirmed ? { confirmed: true } : {}) })
         }
       />
       <p className="entry-panel-soft">{patientWords.latest}</p>

@@ -1,6 +1,7 @@
 import { askWords, issueMessage } from "../../core/messages/index.ts";
 import {
   ageQuestion,
+  albuminQuestion,
   creatinineQuestion,
   type Doubt,
   heightQuestion,
@@ -13,6 +14,7 @@ import type { QuantityAsk, QuantityLook } from "../ui/QuantityField.tsx";
 
 export type WeightUnit = "kg" | "[lb_av]";
 export type CreatinineUnit = "mg/dL" | "umol/L";
+export type AlbuminUnit = "g/L" | "g/dL";
 export type HeightUnit = "cm" | "[in_i]" | "m";
 
 /** What is already known and makes a value odd or not. */
@@ -63,6 +65,13 @@ export function creatinineLook(typed: Quantity<CreatinineUnit>): QuantityLook<Cr
   const doubt = creatinineQuestion(typed);
   if (doubt?.issue.code !== "creatinine-other-unit") return lookOf(doubt, typed);
   const other = { value: typed.value, unit: typed.unit === "mg/dL" ? "umol/L" : "mg/dL" } as const;
+  return lookOf(doubt, typed, [{ label: askWords.itIs(shown(other)), value: other, isConfirmed: false }]);
+}
+
+export function albuminLook(typed: Quantity<AlbuminUnit>): QuantityLook<AlbuminUnit> {
+  const doubt = albuminQuestion(typed);
+  if (doubt?.issue.code !== "albumin-other-unit") return lookOf(doubt, typed);
+  const other = { value: typed.value, unit: typed.unit === "g/L" ? "g/dL" : "g/L" } as const;
   return lookOf(doubt, typed, [{ label: askWords.itIs(shown(other)), value: other, isConfirmed: false }]);
 }
 

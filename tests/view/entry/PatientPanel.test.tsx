@@ -1,5 +1,6 @@
 import { screen, within } from "@testing-library/react";
 import { describe, expect, test, vi } from "vitest";
+import { recordById } from "../../../src/core/medicine/index.ts";
 import { askWords, issueMessage, patientWords } from "../../../src/core/messages/index.ts";
 import { weightQuestion } from "../../../src/core/patient/index.ts";
 import { issue } from "../../../src/core/result/index.ts";
@@ -100,7 +101,61 @@ describe("PatientPanel", () => {
     const figures = screen.getByRole("region", { name: patientWords.figures });
     // (140 - 64) * 54.1929 / (72 * 0.94) * 0.85 = 51.73 mL/min, by hand with the ideal weight 45.5 + 2.3 * (162 / 2.54 - 60).
     expect(within(figures).getByText("51.7 mL/min")).toBeVisible();
-    expect(within(figures).getByText(/age = 64 years/)).toBeVisible();
+    expect(within(figures).getByText(/^CrCl = .*age = 64 years, weight \(ideal\) = 54.1929 kg/)).toBeVisible();
     expect(within(figures).getByText(/Cockcroft DW, Gault MH/)).toBeVisible();
+  });
+
+  test("shows the other kidney estimate per 1.73 m², de-indexed, and that no formula uses it", async () => {
+    await show();
+    const figures = screen.getByRole("region", { name: patientWords.figures });
+    // 142 * (0.94 / 0.7)^-1.2 * 0.9938^64 * 1.012 = 67.77, times 1.6155 m² / 1.73 = 63.29, by hand.
+    expect(within(figures).getByText(asText("67.8 mL/min/1.73 m²"))).toBeVisible();
+    expect(within(figures).getByText("63.3 mL/min")).toBeVisible();
+    expect(within(figures).getByText(asText(issueMessage(issue("kidney-per-surface"))))).toBeVisible();
+    expect(within(figures).getByText(issueMessage(issue("kidney-for-comparison")))).toBeVisible();
+  });
+
+  test("shows size: lean weight, both surfaces, with the basis of each", async () => {
+    await show();
+    const figures = screen.getByRole("region", { name: patientWords.figures });
+    for (const name of [patientWords.leanWeight, patientWords.bodySurface, patientWords.bodySurfaceDuBois])
+      expect(within(figures).getByText(name)).toBeVisible();
+    expect(within(figures).getByText(/Du Bois D, Du Bois EF.*\(memory\)/)).toBeVisible();
+  });
+
+  test("an albumin in the wrong unit by the look of it is asked about; the answer is kept", async () => {
+    const { user, value } = await show();
+    await user.type(box(patientWords.albumin), "3.1{Enter}");
+    await user.click(screen.getByRole("button", { name: askWords.itIs("3.1\u00a0g/dL") }));
+    expect(value().patient.observations.at(-1)).toMatchObject({
+      kind: "albumin",
+      quantity: { value: 3.1, unit: "g/dL" },
+    });
+    expect(value().patient.observations.at(-1)).not.toHaveProperty("confirmed");
+  });
+
+  test("phenytoin with a level and an albumin shows the corrected level with its warning", async () => {
+    const base = caseFixture();
+    const open = {
+      ...base,
+      medicine: recordById("phenytoin")!,
+      given: [],
+      options: [],
+      levels: [
+        {
+          id: "l",
+          at: "2026-03-04T07:30:00+00:00",
+          quantity: { value: 8, unit: "mg/L" as const },
+          kind: "measured" as const,
+        },
+      ],
+    };
+    const { user } = await renderWorkbench(<PatientPanel onDone={vi.fn()} />, { open });
+    expect(screen.queryByText(/Sheiner–Tozer/)).toBeNull();
+    await user.type(box(patientWords.albumin), "25{Enter}");
+    const figures = screen.getByRole("region", { name: patientWords.figures });
+    // R08: 8 / (0.2 · 2.5 + 0.1) = 13.33 mg/L.
+    expect(await within(figures).findByText("13.3 mg/L")).toBeVisible();
+    expect(within(figures).getByText(asText(issueMessage(issue("phenytoin-albumin-warning"))))).toBeVisible();
   });
 });
