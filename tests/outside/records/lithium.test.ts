@@ -72,6 +72,11 @@ describe("lithium, the typical patient", () => {
     expect(recordHalfLife(record, { creatinineClearance: 60 })).toBeGreaterThan(hours);
   });
 
+  it("with one dose a day the lowest is about 40 % below the level at 12 h, as the windows' notes say", () => {
+    expectRoundsTo(1 - 0.5 ** (12 / recordHalfLife(record, healthy)), 0.4, 0.05);
+    for (const { note } of record.windows) expect(note).toContain("about 40 % below the level at 12 hours");
+  });
+
   it("volume is the printed 32.8 L", () => {
     expect(recordValue(record, "volume", healthy)).toBe(32.8);
   });
