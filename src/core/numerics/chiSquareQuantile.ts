@@ -1,3 +1,4 @@
+import { normalQuantile } from "./normalQuantile.ts";
 import { rootBracketed } from "./rootBracketed.ts";
 
 /** Terms of the lower tail's series: enough for 40 degrees where it is used. */
@@ -34,7 +35,10 @@ export function chiSquareQuantile(probability: number, degrees: number): number 
   };
   // P <= y^n/n! gives the low end; an upper tail of 1e-16 with 40 degrees begins below 2·e⁵ = 297.
   const low = Math.min((Math.log(probability) + logFactorial(n)) / n, 0) - 1;
-  const found = rootBracketed((u) => logTail(n, u) - wanted, slope, low, 5, Math.log(n), 0);
+  // Wilson and Hilferty: the cube root of x is nearly normal.
+  const cubeRoot = 1 - 1 / (9 * n) + normalQuantile(probability) / (3 * Math.sqrt(n));
+  const start = cubeRoot > 0.1 ? Math.max(Math.log(n * cubeRoot ** 3), low) : low + 1;
+  const found = rootBracketed((u) => logTail(n, u) - wanted, slope, low, 5, start, 0);
   if (!found.converged) throw new Error("chiSquareQuantile: the root search did not converge");
   return 2 * Math.exp(found.root);
 }

@@ -17,7 +17,17 @@ import { logGamma } from "./logGamma.ts";
 export function studentTLogDensity(squaredLength: number, degrees: number, dimension = 1): number {
   if (!(squaredLength >= 0)) throw new RangeError(`squaredLength: ${squaredLength}; must be 0 or more`);
   if (!(degrees > 0)) throw new RangeError(`degrees: ${degrees}; must be above 0`);
-  const half = (degrees + dimension) / 2;
-  const constant = logGamma(half) - logGamma(degrees / 2) - (dimension / 2) * Math.log(degrees * Math.PI);
-  return constant - half * Math.log1p(squaredLength / degrees);
+  return constantOf(degrees, dimension) - ((degrees + dimension) / 2) * Math.log1p(squaredLength / degrees);
+}
+
+/** The constant of the last call: a sample asks for the same one thousands of times. */
+let last = { degrees: Number.NaN, dimension: Number.NaN, constant: Number.NaN };
+
+function constantOf(degrees: number, dimension: number): number {
+  if (degrees !== last.degrees || dimension !== last.dimension) {
+    const constant =
+      logGamma((degrees + dimension) / 2) - logGamma(degrees / 2) - (dimension / 2) * Math.log(degrees * Math.PI);
+    last = { degrees, dimension, constant };
+  }
+  return last.constant;
 }

@@ -113,6 +113,16 @@ describe("edges", () => {
     expect(draw(1)).not.toEqual(draw(2));
   });
 
+  it("sets of points asked for again are those made anew, however many others came between", () => {
+    const draw = (draws: number) =>
+      importanceSample({ logDensity: normal, mode: MODE, hessian: PRECISION, draws, seed: 5 });
+    const first = draw(300);
+    const again = draw(300);
+    for (let more = 301; more < 310; more++) draw(more);
+    expect(again).toEqual(first);
+    expect(draw(300)).toEqual(first);
+  });
+
   it("no scale from a curvature that is not positive definite", () => {
     expect(
       importanceSample({
