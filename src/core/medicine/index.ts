@@ -1,6 +1,7 @@
 /** The medicine record: its schema, its formulas over the patient, the built-in records, and amounts of its products in mg. */
 
 export { concentrationFactor } from "./concentrationFactor.ts";
+export { type ConcentrationSense, type ConcentrationUnit, concentrationSense } from "./concentrationSense.ts";
 export { concentrationUnit } from "./concentrationUnit.ts";
 export { type FormulaInput, type FormulaTrace, formulaEvaluate, formulaTrace } from "./covariateFormula.ts";
 export { COVARIATE_NAMES, COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
