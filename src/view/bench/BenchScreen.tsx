@@ -42,7 +42,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const edit = useWorkbench((state) => state.edit);
   const [panel, setPanel] = useState<OpenPanel | null>(null);
   const [scale, setScale] = useState<"linear" | "log">("linear");
-  const [isMolar, setMolar] = useState(false);
+  const [isOtherUnit, setOtherUnit] = useState(false);
   const [chosenSpan, setChosenSpan] = useState<BenchSpan | null>(null);
   const [lit, setLit] = useState<string | null>(null);
   const [isWhereShown, setWhereShown] = useState(false);
@@ -80,7 +80,7 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   if (!open || !value) return null;
   const isReader = open.role === "reader";
   const units = shownUnits(value);
-  const unit = isMolar ? units.molar : units.mass;
+  const unit = isOtherUnit ? units.other : units.first;
   const lineTexts = (lines: readonly DoseLine[]) =>
     lines.map((line) => ({ id: line.id, text: laneLineWords(line, value.timeZone) }));
   const clock = span ? clockScale(span.fromH, span.toH, 0, width - RIGHT) : null;
@@ -130,8 +130,8 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
           </div>
           <div className="bench-side">
             <div className="bench-switches">
-              <Button kind="quiet" onPress={() => setMolar(!isMolar)}>
-                {unitSpoken(isMolar ? units.mass : units.molar, "screen")}
+              <Button kind="quiet" onPress={() => setOtherUnit(!isOtherUnit)}>
+                {unitSpoken(isOtherUnit ? units.first : units.other, "screen")}
               </Button>
               <Button kind="quiet" onPress={() => setScale(scale === "linear" ? "log" : "linear")}>
                 {scale === "linear" ? benchWords.log : benchWords.linear}

@@ -1,15 +1,24 @@
 import type { Case } from "../../core/case/index.ts";
-import { concentrationUnit } from "../../core/medicine/index.ts";
+import { concentrationUnit, type DisplayUnit } from "../../core/medicine/index.ts";
 import { quantityConvert, unitSpoken } from "../../core/units/index.ts";
 
 /** The unit concentrations are shown in on the bench; inside the core they are always mg/L. */
-export type ShownUnit = "mg/L" | "ug/L" | "umol/L" | "nmol/L";
+export type ShownUnit = DisplayUnit;
 
-/** By mass and by mole: milligrams and micromoles, or a thousandth of each where the medicine's windows lie that low. */
-export function shownUnits(value: Case): { readonly mass: ShownUnit; readonly molar: ShownUnit } {
-  return concentrationUnit(value.medicine) === "ug/L"
-    ? { mass: "ug/L", molar: "nmol/L" }
-    : { mass: "mg/L", molar: "umol/L" };
+/** The same size of number by mass and by mole: milligrams beside micromoles, micrograms beside nanomoles. */
+const OTHER: Readonly<Record<DisplayUnit, DisplayUnit>> = {
+  "mg/L": "umol/L",
+  "ug/L": "nmol/L",
+  "umol/L": "mg/L",
+  "nmol/L": "ug/L",
+  // Lithium: 1 mmol is 6.94 mg.
+  "mmol/L": "mg/L",
+};
+
+/** The unit the record is read in, and the one by mole or by mass it can be changed to. */
+export function shownUnits(value: Case): { readonly first: ShownUnit; readonly other: ShownUnit } {
+  const first = concentrationUnit(value.medicine);
+  return { first, other: OTHER[first] };
 }
 
 /** The factor from mg/L to the unit shown, by the record's molar mass. */

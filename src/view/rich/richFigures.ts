@@ -1,10 +1,11 @@
+import type { DisplayUnit } from "../../core/medicine/index.ts";
 import { richWords } from "../../core/messages/index.ts";
 import type { AfterOneDose, WithinInterval } from "../../core/noncompartmental/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
 import type { RichReading } from "./richReading.ts";
 
 /** The unit concentrations are shown in. */
-export type RichUnit = "mg/L" | "ug/L" | "umol/L" | "nmol/L";
+export type RichUnit = DisplayUnit;
 
 export interface RichFigure {
   readonly id: string;
