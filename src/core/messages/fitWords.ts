@@ -19,8 +19,15 @@ export const fitWords = {
   level: "level",
   predicted: "predicted for this patient",
   leftOut: (reason: string) => `left out: ${reason}`,
-  forecast: (levelsKnown: number) =>
-    `forecast before it (${levelsKnown === 0 ? "no level known" : levelsKnown === 1 ? "1 level known" : `${levelsKnown} levels known`}), 90 %:`,
+  forecast: (levelsKnown: number): string => `forecast before it (${knownWords(levelsKnown)}), 90 %:`,
+  forecastHead: (levelsKnown: number): string => `Forecast before it was known (${knownWords(levelsKnown)})`,
+  noForecast: "No forecast before it: the levels before it alone gave none",
+  onlyLevel: "The only level used: without it there is the typical patient",
+  priorRange: "Of patients like this one 95 % would have",
+  outsidePrior: "it lies outside",
+  findingsHead: "What each level says",
+  predictedBy:
+    "Typical: from the medicine record and the patient's values alone. This patient: with the levels used; 90 % interval of the curve, without the assay's error.",
   held: (held: boolean) => (held ? "held" : "did not hold"),
   keyHead: "How to read it",
   keyIndividual: "this patient, median",
@@ -68,6 +75,10 @@ export const fitWords = {
   noLevelsLeftOut: "none",
   seeWorking: "working",
 } as const;
+
+function knownWords(levels: number): string {
+  return levels === 0 ? "no level known" : levels === 1 ? "1 level known" : `${levels} levels known`;
+}
 
 /** What a chance of a window is about, with its article: "the lowest", "the whole curve". */
 export function windowChanceWords(quantity: TargetWindow["quantity"]): string {

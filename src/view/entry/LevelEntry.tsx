@@ -1,4 +1,4 @@
-import { levelWords } from "../../core/messages/index.ts";
+import { fitWords, levelWords } from "../../core/messages/index.ts";
 import { partId } from "../ui/partId.ts";
 import { useWorkbench } from "../useWorkbench.ts";
 import { LevelForm } from "./LevelForm.tsx";
@@ -16,8 +16,9 @@ export function LevelEntry({ onDone }: LevelEntryProps) {
   const edit = useWorkbench((state) => state.edit);
   if (!open) return null;
   const isReadOnly = open.role === "reader";
-  const { result, revision } = open.analysis;
-  const isStale = result !== null && revision !== open.revision;
+  const { result, revision, isFitStale } = open.analysis;
+  const isStale = result !== null && (revision !== open.revision || isFitStale);
+  const hasFit = result?.fit.kind === "fitted";
   return (
     <div className="entry-panel">
       <div className="level-entry-table">
@@ -29,7 +30,9 @@ export function LevelEntry({ onDone }: LevelEntryProps) {
           onChange={(level) => edit("levelChange", { level })}
           onRemove={(id) => edit("levelRemove", { id })}
         />
-        {open.value.levels.length > 0 ? <p className="entry-panel-soft">{levelWords.predictedBy}</p> : null}
+        {open.value.levels.length > 0 ? (
+          <p className="entry-panel-soft">{hasFit ? fitWords.predictedBy : levelWords.predictedBy}</p>
+        ) : null}
         {isStale ? <p className="entry-panel-soft">{levelWords.stale}</p> : null}
       </div>
       {isReadOnly ? null : (

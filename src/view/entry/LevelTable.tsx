@@ -1,13 +1,14 @@
 import { type FormEvent, useState } from "react";
 import type { LevelResult } from "../../core/analysis/index.ts";
 import type { Case, Level } from "../../core/case/index.ts";
-import { issueMessage, levelWords } from "../../core/messages/index.ts";
+import { fitWords, issueMessage, levelWords } from "../../core/messages/index.ts";
 import { issue } from "../../core/result/index.ts";
 import { instantMs, instantText } from "../../core/time/index.ts";
 import { numberPrint, quantityConvert, quantityPrint } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { DataTable } from "../ui/DataTable.tsx";
 import { TextField } from "../ui/TextField.tsx";
+import { LevelFindings } from "./LevelFindings.tsx";
 import { LevelForm } from "./LevelForm.tsx";
 
 export interface LevelTableProps {
@@ -24,14 +25,17 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
   const [opened, setOpened] = useState<{ readonly id: string; readonly form: "change" | "reason" } | null>(null);
   const openedLevel = value.levels.find((level) => level.id === opened?.id);
   const resultOf = (level: Level) => results.find((one) => one.id === level.id);
+  const hasFit = results.some((result) => result.fit !== null);
+  const convert = (level: Level, amount: number) =>
+    quantityConvert({ value: amount, unit: "mg/L" }, level.quantity.unit, value.medicine.molarMass.value);
   /** A concentration in mg/L as the level's own unit has it, to as many decimals as `beside` needs for three digits. */
   const inUnitOf = (level: Level, mgPerL: number, beside: number) => {
-    const { unit } = level.quantity;
-    const convert = (amount: number) =>
-      quantityConvert({ value: amount, unit: "mg/L" }, unit, value.medicine.molarMass.value);
-    const decimals = Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(Math.abs(convert(beside)) || 1))));
-    return quantityPrint({ value: convert(mgPerL), unit }, { style: "screen", decimals });
+    const decimals = Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(Math.abs(convert(level, beside)) || 1))));
+    return quantityPrint({ value: convert(level, mgPerL), unit: level.quantity.unit }, { style: "screen", decimals });
   };
+  const figureOf = (level: Level, mgPerL: number) => numberPrint(convert(level, mgPerL), { significant: 3 });
+  const printOf = (level: Level, mgPerL: number) =>
+    quantityPrint({ value: convert(level, mgPerL), unit: level.quantity.unit }, { style: "screen", significant: 3 });
   const nameOf = (level: Level) =>
     `${measuredWords(level)} ${instantText(instantMs(level.at), value.timeZone, "dayClock")}`;
   return (
@@ -68,7 +72,7 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
           { id: "measured", head: levelWords.measuredHead, align: "end", cell: measuredWords },
           {
             id: "predicted",
-            head: levelWords.predicted,
+            head: hasFit ? fitWords.typical : levelWords.predicted,
             align: "end",
             cell: (level) => {
               const predicted = resultOf(level)?.predicted ?? null;
@@ -85,6 +89,27 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
               return `${difference > 0 ? "+" : ""}${inUnitOf(level, difference, predicted ?? difference)}`;
             },
           },
+          ...(hasFit
+            ? [
+                {
+                  id: "individual",
+                  head: fitWords.individual,
+                  align: "end" as const,
+                  cell: (level: Level) => {
+                    const fit = resultOf(level)?.fit;
+                    if (!fit) return "";
+                    return (
+                      <span>
+                        <strong>{printOf(level, fit.predicted.q50)}</strong>
+                        <span className="level-entry-interval">
+                          {figureOf(level, fit.predicted.q05)} to {figureOf(level, fit.predicted.q95)}
+                        </span>
+                      </span>
+                    );
+                  },
+                },
+              ]
+            : []),
           {
             id: "actions",
             head: levelWords.actions,
@@ -155,6 +180,7 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
           }}
         />
       ) : null}
+      <LevelFindings value={value} results={results} nameOf={nameOf} print={printOf} figure={figureOf} />
     </>
   );
 }

@@ -65,3 +65,50 @@ describe("curvePoints", () => {
     expect(curvePoints({ timesH: [0, 1], values: [1, 1] }, 5, 6)).toEqual([]);
   });
 });
+
+describe("bands", () => {
+  const band = {
+    id: "A",
+    isFilled: true,
+    timesH: [24, 36, 60],
+    q05: [3, 8, 6],
+    q25: [3.5, 10, 8],
+    q75: [4.5, 14, 12],
+    q95: [5, 18, 14],
+  };
+  const heights = (path: string) => [...path.matchAll(/,(-?[\d.]+)/g)].map(([, y]) => Number(y));
+
+  it("the 90 % area holds the 50 % one, and its top is the upper limit", () => {
+    const scene = profileScene({ ...input, bands: [band] });
+    const [drawn] = scene.bands;
+    // Paths are rounded to hundredths of a pixel.
+    expect(Math.min(...heights(drawn!.wide))).toBeCloseTo(scene.concentration.y(18), 1);
+    expect(Math.min(...heights(drawn!.narrow))).toBeCloseTo(scene.concentration.y(14), 1);
+    expect(Math.max(...heights(drawn!.narrow))).toBeLessThan(Math.max(...heights(drawn!.wide)));
+  });
+
+  it("are cut at the span's end, and the axis makes room for them", () => {
+    const scene = profileScene({ ...input, bands: [band] });
+    const xs = [...scene.bands[0]!.wide.matchAll(/[ML](-?[\d.]+),/g)].map(([, x]) => Number(x));
+    expect(Math.max(...xs)).toBeLessThanOrEqual(scene.plot.right);
+    expect(scene.concentration.high).toBeGreaterThanOrEqual(18);
+  });
+
+  it("a thin curve takes another's style and no name", () => {
+    const curves = [...input.curves, { ...input.curves[1]!, id: "A-typical", of: "A", isThin: true, name: "" }];
+    expect(profileScene({ ...input, curves }).curves[2]).toMatchObject({ of: "A", isThin: true, name: "" });
+  });
+
+  it("a level carries its forecast and prediction, upper limits higher on the page", () => {
+    const level = {
+      ...input.levels[0]!,
+      predicted: { low: 4, median: 4.5, high: 5 },
+      forecast: { low: 2, high: 9, held: true },
+    };
+    const [drawn] = profileScene({ ...input, levels: [level] }).levels;
+    expect(drawn!.forecast!.top).toBeLessThan(drawn!.predicted!.top);
+    expect(drawn!.predicted!.top).toBeLessThan(drawn!.predicted!.bottom);
+    expect(drawn!.forecast!.bottom).toBeGreaterThan(drawn!.predicted!.bottom);
+    expect(profileScene(input).levels[0]).toMatchObject({ forecast: null, predicted: null });
+  });
+});

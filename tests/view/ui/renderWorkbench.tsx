@@ -23,6 +23,8 @@ interface Setting {
   /** Stored and opened before the screen is drawn. */
   readonly open?: Case;
   readonly demos?: Readonly<Record<string, unknown>>;
+  /** In place of the real analysis. */
+  readonly runner?: AnalysisRunner;
 }
 
 /** A screen over the real store, with a repository in memory. */
@@ -31,8 +33,8 @@ export async function renderWorkbench(screen: ReactNode, setting: Setting = {}) 
   let ids = 0;
   const workbench = createWorkbench({
     repository,
-    runner,
-    fitter: runner,
+    runner: setting.runner ?? runner,
+    fitter: setting.runner ?? runner,
     clock: () => Date.parse("2026-03-04T12:00:00Z"),
     newId: () => `new-${++ids}`,
     demos: setting.demos ?? {},
