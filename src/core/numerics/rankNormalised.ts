@@ -10,7 +10,7 @@ import { normalQuantile } from "./normalQuantile.ts";
  * Accuracy: that of normalQuantile.
  * Source: Vehtari, Gelman, Simpson, Carpenter & Bürkner, Rank-normalization, folding, and localization, Bayesian Anal. 16 (2021)
  * 667–718, equation 14 (from memory, unverified); the offsets are Blom's.
- * @example rankNormalised([Float64Array.of(1, 3), Float64Array.of(2, 9)])[0] // [-1.0494…, 0.2993…]
+ * @example rankNormalised([Float64Array.of(1, 3), Float64Array.of(2, 9)])[0] // [-1.0491…, 0.2993…]
  */
 export function rankNormalised(chains: readonly Float64Array[]): Float64Array[] {
   const length = chains.reduce((sum, chain) => sum + chain.length, 0);

@@ -90,7 +90,7 @@ function sortInto({ keys, halves, order }: QuantileRoom, values: ArrayLike<numbe
     const place = keys[i]! < 0 ? places ^ tagged : tagged;
     const value = values[place]!;
     let j = i - 1;
-    while (j >= 0 && (values[order[j]!]! > value || (values[order[j]!]! === value && order[j]! > place))) {
+    while (j >= 0 && values[order[j]!]! > value) {
       order[j + 1] = order[j]!;
       j--;
     }

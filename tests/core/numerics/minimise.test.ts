@@ -63,6 +63,26 @@ describe("where there is no easy way down", () => {
     expect(Math.abs(found.x[0]! - 3)).toBeLessThanOrEqual(1e-7);
   });
 
+  it("−Infinity is no fall to be taken", () => {
+    const value = ([x]: readonly number[]) => (x! < 5 ? (x! - 3) ** 2 : -Infinity);
+    const found = minimise({
+      value,
+      gradient: bowl.gradient,
+      start: [-100],
+      options: { firstRadius: 10 },
+      hessian: () => [[0.01]],
+    });
+    expect(found.status).toBe("converged");
+    expect(Math.abs(found.x[0]! - 3)).toBeLessThanOrEqual(1e-7);
+  });
+
+  it("a large constant hides the last falls in rounding; the gradient still leads to the minimum", () => {
+    const { value, gradient, start } = STANDARD_PROBLEMS[0]!;
+    const found = minimise({ value: (x) => value(x) + 1e8, gradient, start, options: { gradientTolerance: 1e-15 } });
+    expect(found.status).toBe("converged");
+    expect(Math.max(...found.x.map((each) => Math.abs(each - 1)))).toBeLessThanOrEqual(1e-7);
+  });
+
   it("leaves a saddle at which it is started exactly", () => {
     // x² + y⁴/4 − y²/2: saddle at 0, minima at (0, ±1).
     const found = minimise({
