@@ -119,7 +119,7 @@ class TreeWalk {
   }
 
   typed(node: MathNode, depth: number): Typed | null {
-    if (depth > DEEPEST_TREE) return this.#fault("formula-too-deep", null, { maximum: DEEPEST_TREE });
+    if (depth > DEEPEST_TREE) return this.#tooDeep();
     switch (node.type) {
       case "SymbolNode":
         return this.#leaf(this.#tokenOf(node));
@@ -141,6 +141,12 @@ class TreeWalk {
       default:
         return this.#fault("formula-unreadable", null, {});
     }
+  }
+
+  /** Once, however many branches go that deep. */
+  #tooDeep(): null {
+    if (this.#faults.some((each) => each.code === "formula-too-deep")) return null;
+    return this.#fault("formula-too-deep", null, { maximum: DEEPEST_TREE });
   }
 
   #leaf(token: FormulaToken | null): Typed | null {

@@ -65,7 +65,7 @@ function figureFaults(record: MedicineRecord): RecordFault[] {
     ...boundsFaults(record.steadyStateAfter, { unit: ["h", "d"], above: 0 }, ["steadyStateAfter"]),
     ...boundsFaults(autoinduction?.settledAfter, settled, ["autoinduction", "settledAfter"]),
   ];
-  if (single && daily && single.value > daily.value) {
+  if (single && daily && single.unit === daily.unit && single.value > daily.value) {
     faults.push({ code: "record-limits", path: ["limits"], data: { single: single.value, daily: daily.value } });
   }
   return faults;
@@ -132,7 +132,8 @@ function formulaChecks(record: MedicineRecord): RecordFault[] {
               data: { found: formula.unit, allowed: [allowed] },
             },
           ];
-    return [...unitFaults, ...formulaFaults(formula).map(({ code, data }) => ({ code, path, data }))];
+    const faults = formulaFaults({ formula: formula.formula, unit: allowed });
+    return [...unitFaults, ...faults.map(({ code, data }) => ({ code, path, data }))];
   });
 }
 

@@ -112,6 +112,12 @@ const ROWS: readonly (readonly [string, Change, string, string])[] = [
     "window-unit",
     "window.high.unit",
   ],
+  [
+    "a window in two units",
+    (c) => (c.window = { quantity: "trough", low: mgL(1), high: { value: 80, unit: "umol/L" }, basis: "" }),
+    "window-units-differ",
+    "window.high.unit",
+  ],
   ["an impossible age", (c) => (c.patient.age!.value = 200), "age-impossible", "patient.age.value"],
   ["a year of birth as age", (c) => (c.patient.age!.value = 1961), "age-birth-year", "patient.age.value"],
   [

@@ -73,9 +73,9 @@ describe("caseFingerprint", () => {
     ["a factor's end", (c) => delete c.patient.factors[0]!.to],
     ["a factor's effect", (c) => (c.patient.factors[0]!.effect = { clearance: 0.5 })],
     ["a factor's onset", (c) => (c.patient.factors[0]!.effect = { clearance: 1, onset: { value: 3, unit: "d" } })],
-    ["the record's version", (c) => (c.medicine.recordVersion = 2)],
+    ["the record's version", (c) => (c.medicine.recordVersion += 1)],
     ["a figure of the record", (c) => (c.medicine.products[0]!.lag.value = 0.25)],
-    ["a formula of the record", (c) => (c.medicine.kinetics.volume.formula = "0.5 * weight")],
+    ["a formula of the record", (c) => (c.medicine.kinetics.volume.formula = "0.5 L/kg * weight")],
     ["the window", (c) => (c.window!.low.value = 7)],
     ["what the window is about", (c) => (c.window!.quantity = "trough")],
     ["no window", (c) => delete c.window],
@@ -143,7 +143,7 @@ it("is the digest another implementation makes of the documented inputs", () => 
   const value = caseNew({ id: "x", label: "y", timeZone: "Europe/Lisbon", now: "2026-03-04T12:00:00+00:00", medicine });
   const inputs = {
     format: "ebbline-case",
-    version: 1,
+    version: 2,
     timeZone: "Europe/Lisbon",
     now: Date.UTC(2026, 2, 4, 12),
     patient: { observations: [], factors: [] },

@@ -1,6 +1,8 @@
+import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { CASE_MIGRATIONS, caseMigrate, type MigrationStep } from "../../../src/core/case/caseMigrate.ts";
 import { CASE_VERSION } from "../../../src/core/case/index.ts";
+import { record0001 } from "../../../src/core/medicine/index.ts";
 
 describe("caseMigrate", () => {
   it("has one step for every version but the first", () => {
@@ -38,4 +40,29 @@ describe("caseMigrate", () => {
     caseMigrate(value, steps);
     expect(value).toEqual({ format: "ebbline-case", version: 1, name: "x" });
   });
+});
+
+describe("step 1, version 1 to 2", () => {
+  const stored = (): Record<string, unknown> =>
+    JSON.parse(readFileSync(new URL("../../stored/case-version-1.ebbline.json", import.meta.url), "utf8"));
+
+  it("takes the medicine record along and leaves the rest as it was", () => {
+    const before = stored();
+    const migrated = caseMigrate(before);
+    if (!migrated.ok) throw new Error("refused");
+    const { version, medicine, ...rest } = migrated.value;
+    const { version: _, medicine: record, ...same } = stored();
+    expect(version).toBe(2);
+    expect(rest).toEqual(same);
+    expect(medicine).toEqual(record0001(record as Record<string, unknown>));
+    expect(before).toEqual(stored());
+  });
+
+  it.each([undefined, null, 1, [], { version: 3 }, { version: 2 }])(
+    "hands %j on for the schema to refuse",
+    (medicine) => {
+      const migrated = caseMigrate({ format: "ebbline-case", version: 1, medicine });
+      expect(migrated.ok && migrated.value.medicine).toBe(medicine);
+    },
+  );
 });

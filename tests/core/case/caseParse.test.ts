@@ -97,8 +97,8 @@ describe("what the file says it is", () => {
 
   it.each([
     [
-      changed({ version: 2 }),
-      "made by a newer version of Ebbline: its file version is 2, and this program reads up to 1",
+      changed({ version: 3 }),
+      "made by a newer version of Ebbline: its file version is 3, and this program reads up to 2",
     ],
     [changed({ version: 99, anything: [] }), "made by a newer version"],
     [changed({ version: 0 }), 'version "0" can\'t be'],
@@ -116,7 +116,7 @@ describe("what the file says it is", () => {
   });
 
   it("a newer version is nothing else besides: no list of fields it does not know", () => {
-    expect(refusal(changed({ version: 2, novelty: 1 })).map((each) => [each.code, each.path])).toEqual([
+    expect(refusal(changed({ version: 3, novelty: 1 })).map((each) => [each.code, each.path])).toEqual([
       ["case-newer", ["version"]],
     ]);
   });

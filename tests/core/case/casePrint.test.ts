@@ -29,7 +29,7 @@ describe("casePrint", () => {
     expect(text.split("\n").slice(0, 4)).toEqual([
       "{",
       '  "format": "ebbline-case",',
-      '  "version": 1,',
+      '  "version": 2,',
       '  "id": "sample-1",',
     ]);
   });

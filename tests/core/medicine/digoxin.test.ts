@@ -8,12 +8,12 @@ import {
   productOf,
   recordById,
 } from "../../../src/core/medicine/index.ts";
-import { quantityConvert } from "../../../src/core/units/index.ts";
+import { quantityConvert, type UnitCode } from "../../../src/core/units/index.ts";
 
 const record = recordById("digoxin")!;
 const covariates = { weight: 60, creatinineClearance: 70 };
 const [clearance, volume, exchange, peripheralVolume] = kineticsFormulas(record).map(({ formula }) => {
-  const value = formulaEvaluate(formula.formula, covariates);
+  const value = formulaEvaluate(formula, covariates);
   if (!value.ok) throw new Error("formula");
   return value.value.value;
 }) as [number, number, number, number];
@@ -51,14 +51,14 @@ describe("what the digoxin record claims", () => {
   });
 
   it("windows and limits are the published nanograms per mL", () => {
-    const ng = (mgPerL: number) => quantityConvert({ value: mgPerL, unit: "mg/L" }, "ng/mL");
-    expect(record.windows.map(({ low, high }) => [ng(low.value), ng(high.value)])).toEqual([
+    const ng = ({ value, unit }: { value: number; unit: UnitCode }) => quantityConvert({ value, unit }, "ng/mL");
+    expect(record.windows.map(({ low, high }) => [ng(low), ng(high)])).toEqual([
       [0.5, 0.8],
       [0.5, 1],
       [0.6, 1.2],
       [0.8, 2],
     ]);
-    expect(ng(record.toxicFrom!.value)).toBe(2.4);
+    expect(ng(record.toxicFrom!)).toBe(2.4);
   });
 
   it("the molar mass agrees with the printed factor of 1.281 from nanogram per mL to nmol per L", () => {

@@ -58,7 +58,7 @@ describe("covariatesOf", () => {
   it("names what is asked for when nothing is known, no more and no less", () => {
     for (const record of BUILT_IN_RECORDS) {
       const asked = kineticsFormulas(record).flatMap(({ formula }) => {
-        const value = formulaEvaluate(formula.formula, {});
+        const value = formulaEvaluate(formula, {});
         return value.ok ? [] : value.issues.map((each) => each.data.name);
       });
       expect([...new Set(asked)]).toEqual(covariatesOf(record));

@@ -14,7 +14,7 @@ const capsule = productOf(record, "capsule-er");
 
 function typical(weight: number) {
   const [vmax, km, volume] = kineticsFormulas(record).map(({ formula }) => {
-    const value = formulaEvaluate(formula.formula, { weight });
+    const value = formulaEvaluate(formula, { weight });
     if (!value.ok) throw new Error("formula");
     return value.value.value;
   });

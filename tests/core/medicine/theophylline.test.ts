@@ -7,7 +7,7 @@ const record = recordById("theophylline")!;
 /** The typical patient whose actual weight is the ideal weight. */
 function typical(productId: string) {
   const covariates = { weight: 70, idealWeight: 70 };
-  const [cl, v] = kineticsFormulas(record).map(({ formula }) => formulaEvaluate(formula.formula, covariates));
+  const [cl, v] = kineticsFormulas(record).map(({ formula }) => formulaEvaluate(formula, covariates));
   if (!cl?.ok || !v?.ok) throw new Error("formulas");
   const { absorptionRate, lag, bioavailability } = productOf(record, productId);
   return {
