@@ -4,23 +4,23 @@ import {
   kineticsFormulas,
   type MedicineRecord,
   type Product,
-  type RecordWindow,
 } from "../src/core/medicine/index.ts";
-import {
-  numberPrint,
-  type Quantity,
-  quantityConvert,
-  quantityPrint,
-  type UnitCode,
-  unitDimension,
-  unitSpoken,
-} from "../src/core/units/index.ts";
+import { numberPrint, type UnitCode, unitSpoken } from "../src/core/units/index.ts";
 import { markdownPage, markdownSection, markdownTable, markdownText } from "./markdown.ts";
+import {
+  figureRows,
+  figuresTable,
+  PROVENANCE,
+  provenanceCells,
+  quantityText,
+  sourcedText,
+  spaced,
+  statement,
+  statements,
+} from "./medicinePageFigures.ts";
+import { concentrationsText, windowsTable } from "./medicinePageWindows.ts";
 import { basisShare } from "./medicineShare.ts";
 import { medicineTypical, PAGE_PATIENT_TEXT } from "./medicineTypical.ts";
-
-type Provenance = { readonly source: string; readonly basis: string; readonly note?: string | undefined };
-const PROVENANCE = ["source", "basis", "note"] as const;
 
 /** The page of one record: every figure with value, unit, source, basis and note, and every statement. */
 export function medicinePage(record: MedicineRecord): string {
@@ -155,63 +155,6 @@ function productFigures(product: Product): (readonly [string, Figure | undefined
   ];
 }
 
-function windowsTable(record: MedicineRecord): string {
-  return markdownTable(
-    ["use", "sampling", "quantity", "mass", "molar", "draw", ...PROVENANCE],
-    record.windows.map((window) => [
-      markdownText(window.use),
-      markdownText(window.sampling),
-      window.quantity,
-      windowEnds(window, record, "mass"),
-      windowEnds(window, record, "molar"),
-      drawText(window),
-      ...provenanceCells(window),
-    ]),
-  );
-}
-
-/** Both ends in mass and in molar units; the one it is printed in as it is, the other by the molar mass. An AUC has only its own. */
-function windowEnds({ low, high }: RecordWindow, record: MedicineRecord, wanted: "mass" | "molar"): string {
-  if (low.unit === "mg.h/L") return wanted === "mass" ? `${numberPrint(low.value)} to ${quantityText(high)}` : "";
-  return concentrationsText([low, high], record, wanted);
-}
-
-function concentrationsText(ends: readonly Quantity[], record: MedicineRecord, wanted: "mass" | "molar"): string {
-  const first = ends[0] as Quantity;
-  const isMolar = unitDimension(first.unit) === "molar concentration";
-  const isAsPrinted = isMolar === (wanted === "molar");
-  const unit = isAsPrinted ? first.unit : counterpart(first.unit);
-  const numbers = ends.map((end) =>
-    isAsPrinted && end.unit === unit
-      ? numberPrint(end.value)
-      : numberPrint(quantityConvert(end, unit, record.molarMass.value), { significant: 3 }),
-  );
-  return `${numbers.join(" to ")} ${unitSpoken(unit, "screen")}`;
-}
-
-/** The unit of the other kind that keeps the numbers readable. */
-function counterpart(unit: UnitCode): UnitCode {
-  const pairs: Partial<Record<UnitCode, UnitCode>> = {
-    "mg/L": "umol/L",
-    "ug/L": "nmol/L",
-    "umol/L": "mg/L",
-    "nmol/L": "ug/L",
-    "mmol/L": "mg/L",
-  };
-  const other = pairs[unit];
-  if (!other) throw new RangeError(`unit: "${unit}" is no unit of a window`);
-  return other;
-}
-
-function drawText({ drawFrom, drawTo }: RecordWindow): string {
-  if (!drawFrom && !drawTo) return "";
-  const ends = [
-    drawFrom && `from ${quantityText(drawFrom)} (${provenanceText(drawFrom)})`,
-    drawTo && `to ${quantityText(drawTo)} (${provenanceText(drawTo)})`,
-  ];
-  return `${ends.filter(Boolean).join(" ")} after the dose`;
-}
-
 function otherTable(record: MedicineRecord): string {
   const { toxicFrom, limits } = record;
   const toxic = toxicFrom && {
@@ -239,7 +182,7 @@ function interactionsTable(record: MedicineRecord): string {
       markdownText(each.medicine),
       each.parameter,
       quantityText(each.factor),
-      each.onset ? `${quantityText(each.onset)} (${provenanceText(each.onset)})` : "",
+      each.onset ? sourcedText(each.onset) : "",
       markdownText(each.text),
       ...provenanceCells(each.factor),
     ]),
@@ -253,39 +196,4 @@ function sourcesList(record: MedicineRecord): string {
       return `- \`${id}\`: ${words.join(". ")}`;
     })
     .join("\n");
-}
-
-function figuresTable(figures: readonly (readonly [string, Figure | undefined])[]): string {
-  return markdownTable(["", "value", ...PROVENANCE], figureRows(figures));
-}
-
-function figureRows(figures: readonly (readonly [string, Figure | undefined])[]): string[][] {
-  return figures.flatMap(([words, figure]) =>
-    figure ? [[words, quantityText(figure), ...provenanceCells(figure)]] : [],
-  );
-}
-
-function statements(list: readonly (Provenance & { readonly text: string })[]): string {
-  return list.map((each) => `- ${statement(each)}`).join("\n");
-}
-
-function statement(each: Provenance & { readonly text: string }): string {
-  return `${markdownText(each.text)} (${provenanceText(each)})${each.note ? ` Note: ${markdownText(each.note)}` : ""}`;
-}
-
-function provenanceText({ source, basis }: Provenance): string {
-  return `\`${source}\`, ${basis}`;
-}
-
-function provenanceCells({ source, basis, note }: Provenance): string[] {
-  return [`\`${source}\``, basis, markdownText(note ?? "")];
-}
-
-function quantityText(quantity: Quantity, significant?: number): string {
-  return quantityPrint(quantity, { style: "screen", ...(significant !== undefined && { significant }) });
-}
-
-/** "peripheralVolume" as words. */
-function spaced(name: string): string {
-  return name.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`);
 }
