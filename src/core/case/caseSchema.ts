@@ -68,7 +68,11 @@ export const windowSchema = z.strictObject({
   quantity: z.enum(["trough", "peak", "average", "auc24", "lowest-and-highest"]),
   low: quantityIn(...WINDOW_UNITS),
   high: quantityIn(...WINDOW_UNITS),
+  /** Hours after a dose between which the level the window is about is drawn (lithium: 12 hours); absent: just before the next. */
+  drawFrom: quantityIn("h").optional(),
+  drawTo: quantityIn("h").optional(),
   basis: z.string().max(400),
+  confirmed: z.literal(true).optional(),
 });
 
 /** The level's own unit is kept as typed; conversion to mg/L uses the record's molar mass. */

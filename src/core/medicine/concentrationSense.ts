@@ -16,7 +16,7 @@ export interface ConcentrationSense {
   readonly verdict: "usual" | "other-unit" | "far";
   /** Units in which the same number would be everyday; the record's own first. Empty where it is usual. */
   readonly units: readonly (typeof UNITS)[number][];
-  /** What the record's windows and its toxic limit span, mg/L. */
+  /** What the record's windows span, mg/L; without one, up to the toxic limit. */
   readonly lowMgPerL: number;
   readonly highMgPerL: number;
 }
@@ -43,8 +43,8 @@ export function concentrationSense(
   const low = lows.length === 0 ? 0 : Math.min(...lows);
   const isEveryday = (value: number) =>
     value >= low / EVERYDAY_BELOW && value <= Math.max(high * EVERYDAY_ABOVE, toxic);
-  const span = { lowMgPerL: low, highMgPerL: Math.max(high, toxic) };
-  const isNear = (value: number) => value >= low / FAR && value <= span.highMgPerL * FAR;
+  const isNear = (value: number) => value >= low / FAR && value <= Math.max(high, toxic) * FAR;
+  const span = { lowMgPerL: low, highMgPerL: high || toxic };
 
   const value = mgPerL(typed);
   if (isEveryday(value)) return { verdict: "usual", units: [], ...span };

@@ -3,6 +3,7 @@
 export { concentrationFactor } from "./concentrationFactor.ts";
 export { type ConcentrationSense, type ConcentrationUnit, concentrationSense } from "./concentrationSense.ts";
 export { concentrationUnit } from "./concentrationUnit.ts";
+export { concentrationUnits } from "./concentrationUnits.ts";
 export { type FormulaInput, type FormulaTrace, formulaEvaluate, formulaTrace } from "./covariateFormula.ts";
 export { COVARIATE_NAMES, COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
 export { covariatesOf } from "./covariatesOf.ts";

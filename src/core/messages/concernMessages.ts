@@ -31,6 +31,7 @@ const OBSERVATION_WORDS: Readonly<Record<string, string>> = {
   serumCreatinine: "Creatinine",
   albumin: "Albumin",
   level: "Level",
+  window: "Target window up to",
 };
 
 function outsideWindow(data: ConcernData, side: "above" | "below"): ConcernWords {

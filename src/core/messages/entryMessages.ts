@@ -16,8 +16,10 @@ export const entryMessages: Readonly<Record<string, MessageFunction>> = {
     `${String(at)} lies before the first dose given, ${String(first)}: check the time, or enter the earlier doses first.`,
   "level-after-now": ({ at, now }: Data) =>
     `${String(at)} lies after the now line, ${String(now)}: a level has been drawn. Check the time, or move the now line.`,
-  "level-other-unit": ({ value, high }: Data) =>
-    `${String(value)} is far from the ${String(high)} this medicine is used at. Is the unit right?`,
+  "concentration-other-unit": ({ typed, low, high }: Data) =>
+    `${String(typed)} is not near the ${String(low)} to ${String(high)} this medicine is used at; the same number in another unit is. Is the unit right?`,
+  "concentration-far": ({ typed, low, high }: Data) =>
+    `${String(typed)} is far from the ${String(low)} to ${String(high)} this medicine is used at. Is it meant?`,
   "level-reason-missing": () => "Say why it is left out; the reason stands beside it on the summary.",
   "dose-product-missing": () => "Choose the product first: there is more than one.",
   "dose-line-has-exceptions": () =>

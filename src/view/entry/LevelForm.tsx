@@ -7,14 +7,7 @@ import { InstantInput } from "../ui/InstantInput.tsx";
 import type { QuantityAsk } from "../ui/QuantityField.tsx";
 import { QuantityInput } from "../ui/QuantityInput.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
-import {
-  LEVEL_UNIT_CHOICES,
-  type LevelDraft,
-  type LevelUnit,
-  levelDraft,
-  levelDraftRead,
-  levelLook,
-} from "./levelDraft.ts";
+import { type LevelDraft, type LevelUnit, levelDraft, levelDraftRead, levelLook, levelUnits } from "./levelDraft.ts";
 
 export interface LevelFormProps {
   readonly value: Case;
@@ -28,7 +21,7 @@ export interface LevelFormProps {
 /** A level is typed with the clock time it was drawn: no time is filled in beforehand. */
 export function LevelForm({ value, level, word, onLevel, onCancel }: LevelFormProps) {
   const empty: LevelDraft = {
-    quantity: { text: "", unit: value.levels.at(-1)?.quantity.unit ?? "mg/L" },
+    quantity: { text: "", unit: value.levels.at(-1)?.quantity.unit ?? value.medicine.displayUnit },
     at: "",
     kind: "measured",
   };
@@ -69,7 +62,7 @@ export function LevelForm({ value, level, word, onLevel, onCancel }: LevelFormPr
         <QuantityInput
           label={levelWords.value}
           draft={draft.quantity}
-          units={LEVEL_UNIT_CHOICES}
+          units={levelUnits(value, draft.quantity.unit)}
           hasInitialFocus
           isTold={isSent}
           fault={faultOf("quantity")}

@@ -5,7 +5,16 @@ import { numberPrint, quantityPrint } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
 import { WindowFields } from "../ui/WindowFields.tsx";
-import { EMPTY_WINDOW, windowDraft, windowDraftRead } from "../ui/windowDraft.ts";
+import {
+  EMPTY_WINDOW,
+  type WindowAsk,
+  type WindowDraft,
+  windowAsk,
+  windowDraft,
+  windowDraftEmpty,
+  windowDraftRead,
+  windowUnitsFor,
+} from "../ui/windowDraft.ts";
 import { useWorkbench } from "../useWorkbench.ts";
 import { PanelDone } from "./PanelDone.tsx";
 import { type OfferedWindow, windowOfferOf, windowOffers } from "./windowOffers.ts";
@@ -26,17 +35,34 @@ export function WindowEntry({ onDone }: WindowEntryProps) {
   const offers = open ? windowOffers(open.value.medicine, wardWindows) : [];
   const offered = current ? windowOfferOf(current, offers) : null;
   const [isOwn, setOwn] = useState(() => current !== undefined && offered === null);
-  const [draft, setDraft] = useState(() => (current ? windowDraft(current) : EMPTY_WINDOW));
+  const [draft, setDraft] = useState(() =>
+    current ? windowDraft(current) : open ? windowDraftEmpty(open.value.medicine) : EMPTY_WINDOW,
+  );
   const [isSent, setSent] = useState(false);
+  const [asked, setAsked] = useState<WindowAsk | null>(null);
   if (!open) return null;
   const isReadOnly = open.role === "reader";
-  const molarMass = open.value.medicine.molarMass.value;
+  const { medicine } = open.value;
 
+  const change = (next: WindowDraft) => {
+    setDraft(next);
+    setAsked(null);
+  };
+  const set = (taken: WindowDraft, isConfirmed: boolean) => {
+    const read = windowDraftRead(taken);
+    if (!read.ok) return;
+    change(taken);
+    edit("windowSet", { window: { ...read.value, ...(isConfirmed ? { confirmed: true as const } : {}) } });
+  };
   const send = (event: FormEvent) => {
     event.preventDefault();
     setSent(true);
     const read = windowDraftRead(draft);
-    if (read.ok) edit("windowSet", { window: read.value });
+    if (!read.ok) return;
+    if (current?.confirmed === true && isSameRange(current, read.value)) return set(draft, true);
+    const ask = windowAsk(draft, medicine);
+    if (ask) setAsked(ask);
+    else set(draft, false);
   };
   return (
     <div className="entry-panel">
@@ -60,7 +86,24 @@ export function WindowEntry({ onDone }: WindowEntryProps) {
       />
       {isOwn && !isReadOnly ? (
         <form className="entry-panel-form entry-panel-inset" onSubmit={send} noValidate>
-          <WindowFields draft={draft} onChange={setDraft} molarMass={molarMass} isTold={isSent} />
+          <WindowFields
+            draft={draft}
+            onChange={change}
+            molarMass={medicine.molarMass.value}
+            isTold={isSent}
+            units={windowUnitsFor(draft, medicine)}
+            question={
+              asked
+                ? {
+                    text: asked.text,
+                    answers: asked.answers.map((answer) => ({
+                      label: answer.label,
+                      onAnswer: () => set(answer.draft, answer.isConfirmed),
+                    })),
+                  }
+                : undefined
+            }
+          />
           <div>
             <Button kind="main" type="submit">
               {windowWords.set}
@@ -84,6 +127,11 @@ export function WindowEntry({ onDone }: WindowEntryProps) {
       <PanelDone onDone={onDone} />
     </div>
   );
+}
+
+/** The answer given for these ends holds while only the words about them change. */
+function isSameRange(a: TargetWindow, b: TargetWindow): boolean {
+  return JSON.stringify([a.low, a.high]) === JSON.stringify([b.low, b.high]);
 }
 
 function windowSentence({ low, high, quantity, basis }: TargetWindow): string {

@@ -1,12 +1,12 @@
 import type { Case, Level } from "../../core/case/index.ts";
-import type { MedicineRecord } from "../../core/medicine/index.ts";
-import { askWords, issueMessage } from "../../core/messages/index.ts";
+import { concentrationUnits, type MedicineRecord } from "../../core/medicine/index.ts";
 import { doseLineExpand } from "../../core/regimen/index.ts";
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
 import { instantMs, instantRead, instantText } from "../../core/time/index.ts";
-import { type Quantity, quantityConvert, quantityPrint } from "../../core/units/index.ts";
+import type { Quantity } from "../../core/units/index.ts";
+import { concentrationAsk } from "../ui/concentrationAsk.ts";
 import { instantTyped } from "../ui/InstantInput.tsx";
-import type { QuantityAsk, QuantityLook } from "../ui/QuantityField.tsx";
+import type { QuantityLook } from "../ui/QuantityField.tsx";
 import { type QuantityDraft, quantityDraft, quantityDraftRead } from "../ui/quantityDraft.ts";
 
 export const LEVEL_UNIT_CHOICES = ["mg/L", "ug/mL", "ug/L", "ng/mL", "umol/L", "nmol/L", "mmol/L"] as const;
@@ -65,30 +65,15 @@ export function firstDoseMs(value: Case): number | null {
   return firsts.length === 0 ? null : firsts.reduce((a, b) => Math.min(a, b));
 }
 
-/** A level this many times above the highest wanted, or below the lowest, is asked about: units slip by 1000, seldom by less. Basis: our choice, common practice. */
-const FAR = 20;
-/** Units in which a slip is offered to be put right, the commonest first. */
-const OFFERED = ["mg/L", "ug/L", "umol/L", "nmol/L"] as const;
-
-/** Asks about a level far from what the medicine is used at, and offers the units in which the same number would be near. */
+/** Asks about a level that is everyday for the medicine only in another unit, or far from all it is used at. */
 export function levelLook(typed: Quantity<LevelUnit>, record: MedicineRecord): QuantityLook<LevelUnit> {
-  const wanted = record.windows.filter((window) => window.quantity !== "auc24");
-  if (wanted.length === 0) return { kind: "fine" };
-  const inMgPerL = (value: Quantity) => quantityConvert(value, "mg/L", record.molarMass.value);
-  const high = Math.max(...wanted.map((window) => inMgPerL(window.high)));
-  const low = Math.min(...wanted.map((window) => inMgPerL(window.low) || inMgPerL(window.high)));
-  const isNear = (mgPerL: number) => mgPerL <= high * FAR && mgPerL >= low / FAR;
-  if (isNear(inMgPerL(typed))) return { kind: "fine" };
-  const shown = (value: Quantity) => quantityPrint(value, { style: "screen", significant: 4 });
-  const others: QuantityAsk<LevelUnit>["answers"] = OFFERED.map((unit) => ({ value: typed.value, unit }))
-    .filter((other) => other.unit !== typed.unit && isNear(inMgPerL(other)))
-    .slice(0, 2)
-    .map((other) => ({ label: askWords.itIs(shown(other)), value: other, isConfirmed: false }));
-  const text = issueMessage(
-    issue("level-other-unit", { value: shown(typed), high: shown({ value: high, unit: "mg/L" }) }),
-  );
-  return {
-    kind: "asked",
-    ask: { text, answers: [{ label: askWords.itIs(shown(typed)), value: typed, isConfirmed: true }, ...others] },
-  };
+  const ask = concentrationAsk(typed, record);
+  return ask ? { kind: "asked", ask } : { kind: "fine" };
+}
+
+/** The units offered beside the number: the record's, and any the case already has. */
+export function levelUnits(value: Case, also?: LevelUnit): readonly LevelUnit[] {
+  const offered = concentrationUnits(value.medicine);
+  const others = [...value.levels.map((level) => level.quantity.unit), ...(also ? [also] : [])];
+  return [...offered, ...LEVEL_UNIT_CHOICES.filter((unit) => !offered.includes(unit) && others.includes(unit))];
 }

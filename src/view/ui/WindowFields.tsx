@@ -2,8 +2,9 @@ import type { TargetWindow } from "../../core/case/index.ts";
 import { issueMessage, windowQuantityWord, windowWords } from "../../core/messages/index.ts";
 import { quantityConvert, quantityPrint, unitDimension, unitSpoken } from "../../core/units/index.ts";
 import { ChoiceField } from "./ChoiceField.tsx";
+import type { FieldQuestion } from "./FieldFrame.tsx";
 import { TextField } from "./TextField.tsx";
-import { type WindowDraft, windowDraftRead, windowUnits } from "./windowDraft.ts";
+import { type WindowDraft, type WindowUnit, windowDraftRead, windowUnits } from "./windowDraft.ts";
 import "./WindowFields.css";
 
 const ABOUT: readonly TargetWindow["quantity"][] = ["lowest-and-highest", "trough", "peak", "average", "auc24"];
@@ -15,15 +16,25 @@ export interface WindowFieldsProps {
   readonly molarMass: number;
   /** The form was sent: say what is missing. */
   readonly isTold: boolean;
+  /** Offered; all of them where it is left out. */
+  readonly units?: readonly WindowUnit[];
+  /** An odd window, asked about beside its unit. */
+  readonly question?: FieldQuestion | undefined;
 }
 
-export function WindowFields({ draft, onChange, molarMass, isTold }: WindowFieldsProps) {
+export function WindowFields({
+  draft,
+  onChange,
+  molarMass,
+  isTold,
+  units = windowUnits(draft.about),
+  question,
+}: WindowFieldsProps) {
   const read = windowDraftRead(draft);
   const faultOf = (path: string, text?: string) => {
     const found = read.ok ? undefined : read.issues.find((one) => one.path[0] === path);
     return found && (isTold || (text !== undefined && text.trim() !== "")) ? issueMessage(found) : undefined;
   };
-  const units = windowUnits(draft.about);
   const shown = (end: TargetWindow["low"]) => quantityPrint(end, { style: "screen", significant: 4 });
   const isMolar = unitDimension(draft.unit) === "molar concentration";
   const inMass = (end: TargetWindow["low"]) => shown({ value: quantityConvert(end, "mg/L", molarMass), unit: "mg/L" });
@@ -36,7 +47,8 @@ export function WindowFields({ draft, onChange, molarMass, isTold }: WindowField
         choices={ABOUT.map((value) => ({ value, label: windowQuantityWord(value) }))}
         onChoose={(about) => {
           const allowed = windowUnits(about);
-          onChange({ ...draft, about, unit: allowed.includes(draft.unit) ? draft.unit : (allowed[0] ?? "mg/L") });
+          const first = units.find((unit) => allowed.includes(unit)) ?? allowed[0] ?? "mg/L";
+          onChange({ ...draft, about, unit: allowed.includes(draft.unit) ? draft.unit : first });
         }}
         fault={faultOf("about")}
       />
@@ -59,6 +71,7 @@ export function WindowFields({ draft, onChange, molarMass, isTold }: WindowField
           value={draft.unit}
           choices={units.map((unit) => ({ value: unit, label: unitSpoken(unit, "screen") }))}
           onChoose={(unit) => onChange({ ...draft, unit })}
+          question={question}
         />
       </div>
       <TextField

@@ -1,6 +1,8 @@
 import type { TargetWindow } from "../../core/case/index.ts";
+import { concentrationUnits, type MedicineRecord } from "../../core/medicine/index.ts";
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
-import { numberPlain, numberRead, quantityConvert, unitSpoken } from "../../core/units/index.ts";
+import { numberPlain, numberRead, type Quantity, quantityConvert, unitSpoken } from "../../core/units/index.ts";
+import { concentrationAsk } from "./concentrationAsk.ts";
 
 export const WINDOW_UNITS = ["mg/L", "ug/mL", "ug/L", "ng/mL", "umol/L", "nmol/L", "mmol/L", "mg.h/L"] as const;
 export type WindowUnit = (typeof WINDOW_UNITS)[number];
@@ -31,6 +33,46 @@ export function windowDraft(window: TargetWindow): WindowDraft {
 
 export function windowUnits(about: WindowDraft["about"]): readonly WindowUnit[] {
   return WINDOW_UNITS.filter((unit) => (unit === "mg.h/L") === (about === "auc24"));
+}
+
+/** The units offered: those a concentration of this medicine may be typed in, and the one the draft has. */
+export function windowUnitsFor(draft: WindowDraft, record: MedicineRecord): readonly WindowUnit[] {
+  if (draft.about === "auc24") return windowUnits(draft.about);
+  const offered: readonly WindowUnit[] = concentrationUnits(record);
+  return offered.includes(draft.unit) || draft.unit === "mg.h/L" ? offered : [...offered, draft.unit];
+}
+
+/** An empty draft in the unit the medicine is read in. */
+export function windowDraftEmpty(record: MedicineRecord): WindowDraft {
+  return { ...EMPTY_WINDOW, unit: record.displayUnit };
+}
+
+/**
+ * Asks about a window whose middle is everyday for the medicine only in another unit, or far from all it is used at.
+ * Every answer is a draft to take; `isConfirmed` when it is the one that was typed.
+ */
+export function windowAsk(draft: WindowDraft, record: MedicineRecord): WindowAsk | null {
+  const { unit, about } = draft;
+  const [low, high] = [numberRead(draft.low), numberRead(draft.high)];
+  if (about === "auc24" || unit === "mg.h/L" || !low.ok || !high.ok) return null;
+  const print = (value: Quantity) =>
+    `${numberPlain(low.value)} to ${numberPlain(high.value)}\u00a0${unitSpoken(value.unit, "screen")}`;
+  const ask = concentrationAsk({ value: (low.value + high.value) / 2, unit }, record, print);
+  return (
+    ask && {
+      text: ask.text,
+      answers: ask.answers.map(({ label, value, isConfirmed }) => ({
+        label,
+        draft: { ...draft, unit: value.unit },
+        isConfirmed,
+      })),
+    }
+  );
+}
+
+export interface WindowAsk {
+  readonly text: string;
+  readonly answers: readonly { readonly label: string; readonly draft: WindowDraft; readonly isConfirmed: boolean }[];
 }
 
 /** The window as stored, or an issue a field: path "about", "low", "high" or "basis". */

@@ -262,6 +262,24 @@ describe("concerns from the record", () => {
     expect(codes).not.toContain("level-while-absorbing");
   });
 
+  it("the times a case's own window is for go before the record's", () => {
+    const timed = {
+      ...troughWindow!,
+      drawFrom: { value: 12, unit: "h" as const },
+      drawTo: { value: 13, unit: "h" as const },
+    };
+    const windows = [{ ...trough, drawFrom: figure(10, "h"), drawTo: figure(12, "h") }];
+    expect(found(withLevel({ windows }, TROUGH, { window: timed }), "level-off-window-time")).toMatchObject([
+      { data: { fromH: 12, toH: 13, afterDoseH: 11.5 } },
+    ]);
+  });
+
+  it("a window that was asked about and confirmed stays visible", () => {
+    const window = { ...troughWindow!, confirmed: true as const };
+    expect(found(value({}, { window }), "value-confirmed")).toMatchObject([{ id: "value-confirmed:window" }]);
+    expect(found(value({}, { window: troughWindow! }), "value-confirmed")).toEqual([]);
+  });
+
   it("an event the record knows of is spoken of once", () => {
     const codes = derive(value({ interactions }, event("valproate"))).concerns.map((each) => each.code);
     expect(codes).toContain("interaction-not-applied");

@@ -1,5 +1,6 @@
 import { screen, waitFor, within } from "@testing-library/react";
 import { describe, expect, test, vi } from "vitest";
+import { recordById } from "../../../src/core/medicine/index.ts";
 import { askWords, issueMessage, levelWords } from "../../../src/core/messages/index.ts";
 import { issue } from "../../../src/core/result/index.ts";
 import { LevelEntry } from "../../../src/view/entry/LevelEntry.tsx";
@@ -115,6 +116,39 @@ describe("LevelEntry", () => {
     expect(shown.value().levels).toEqual([]);
     await shown.user.click(screen.getByRole("button", { name: askWords.itIs("5,200\u00a0microgram/L") }));
     expect(shown.value().levels[0]).toMatchObject({ quantity: { value: 5200, unit: "ug/L" } });
+    expect(shown.value().levels[0]).not.toHaveProperty("confirmed");
+  });
+
+  test("theophylline 55 typed as mg/L, when umol/L was meant, is asked about", async () => {
+    const shown = await show();
+    await shown.user.type(value(), "55");
+    await shown.user.type(drawn(), "3 March 14:00{Enter}");
+    expect(shown.value().levels).toEqual([]);
+    await shown.user.click(screen.getByRole("button", { name: askWords.itIs("55\u00a0micromol/L") }));
+    expect(shown.value().levels[0]).toMatchObject({ quantity: { value: 55, unit: "umol/L" } });
+    expect(shown.value().levels[0]).not.toHaveProperty("confirmed");
+  });
+
+  test("the answer that it is meant is recorded", async () => {
+    const shown = await show();
+    await shown.user.type(value(), "55");
+    await shown.user.type(drawn(), "3 March 14:00{Enter}");
+    await shown.user.click(screen.getByRole("button", { name: askWords.itIs("55\u00a0mg/L") }));
+    expect(shown.value().levels[0]).toMatchObject({ quantity: { value: 55, unit: "mg/L" }, confirmed: true });
+  });
+
+  test.each([
+    ["lithium", ["mmol/L", "mg/L", "ug/mL", "umol/L"], "0.8", { value: 0.8, unit: "mmol/L" }],
+    ["digoxin", ["ug/L", "ng/mL", "nmol/L"], "1.1 nmol/L", { value: 1.1, unit: "nmol/L" }],
+  ])("%s offers its own unit first and takes it without a word", async (id, units, typed, quantity) => {
+    const medicine = recordById(id)!;
+    const given = caseFixture().given.map((line) => ({ ...line, product: medicine.products[0]!.id }));
+    const shown = await show({ medicine, given, options: [] });
+    const unit = screen.getByRole<HTMLSelectElement>("combobox", { name: `${levelWords.value}: unit` });
+    expect([...unit.options].map((option) => option.value)).toEqual(units);
+    await shown.user.type(value(), typed);
+    await shown.user.type(drawn(), "3 March 14:00{Enter}");
+    expect(shown.value().levels[0]).toMatchObject({ quantity });
     expect(shown.value().levels[0]).not.toHaveProperty("confirmed");
   });
 

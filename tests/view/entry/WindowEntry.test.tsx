@@ -1,7 +1,7 @@
 import { screen } from "@testing-library/react";
 import { describe, expect, test, vi } from "vitest";
 import { recordById } from "../../../src/core/medicine/index.ts";
-import { issueMessage, windowQuantityWord, windowWords } from "../../../src/core/messages/index.ts";
+import { askWords, issueMessage, windowQuantityWord, windowWords } from "../../../src/core/messages/index.ts";
 import { issue } from "../../../src/core/result/index.ts";
 import { WindowEntry } from "../../../src/view/entry/WindowEntry.tsx";
 import { caseFixture } from "../../core/analysis/caseFixture.ts";
@@ -33,7 +33,7 @@ describe("WindowEntry", () => {
     expect(screen.getByRole("radio", { name: new RegExp(`^${first!.label}`) })).toBeChecked();
   });
 
-  test("one of your own is typed, in a molar unit if need be, and stored in mg/L", async () => {
+  test("one of your own is typed, in a molar unit if need be, and kept in it", async () => {
     const { user, value } = await renderWorkbench(<WindowEntry onDone={vi.fn()} />, { open: withoutWindow() });
     await user.click(screen.getByRole("radio", { name: new RegExp(`^${windowWords.own}`) }));
     await user.click(screen.getByRole("button", { name: windowWords.set }));
@@ -45,12 +45,56 @@ describe("WindowEntry", () => {
     await user.type(screen.getByRole("textbox", { name: windowWords.low }), "55");
     await user.type(screen.getByRole("textbox", { name: windowWords.high }), "110");
     await user.type(screen.getByRole("textbox", { name: windowWords.basis }), "ward policy (invented){Enter}");
-    const { window } = value();
-    expect(window).toMatchObject({ quantity: "trough", basis: "ward policy (invented)" });
-    // 55 umol/L of 180.17 g/mol is 9.90935 mg/L, 110 twice that: relative error at most 1e-12.
-    expect(Math.abs(window!.low.value / 9.90935 - 1)).toBeLessThan(1e-12);
-    expect(Math.abs(window!.high.value / 19.8187 - 1)).toBeLessThan(1e-12);
-    expect(window!.low.unit).toBe("mg/L");
+    expect(value().window).toEqual({
+      quantity: "trough",
+      low: { value: 55, unit: "umol/L" },
+      high: { value: 110, unit: "umol/L" },
+      basis: "ward policy (invented)",
+    });
+  });
+
+  const lithium = () => {
+    const medicine = recordById("lithium")!;
+    return { ...withoutWindow(), medicine, given: [], options: [] };
+  };
+  const fill = async (user: Awaited<ReturnType<typeof renderWorkbench>>["user"], low: string, high: string) => {
+    await user.click(screen.getByRole("radio", { name: new RegExp(`^${windowWords.own}`) }));
+    await user.selectOptions(screen.getByRole("combobox", { name: windowWords.about }), windowQuantityWord("trough"));
+    await user.type(screen.getByRole("textbox", { name: windowWords.low }), low);
+    await user.type(screen.getByRole("textbox", { name: windowWords.high }), high);
+    await user.type(screen.getByRole("textbox", { name: windowWords.basis }), "ward policy (invented)");
+  };
+
+  test("lithium is asked for in mmol/L, and 0.6 stays 0.6", async () => {
+    const { user, value } = await renderWorkbench(<WindowEntry onDone={vi.fn()} />, { open: lithium() });
+    await fill(user, "0.6", "0.9");
+    expect(screen.getByRole("combobox", { name: windowWords.unit })).toHaveValue("mmol/L");
+    await user.click(screen.getByRole("button", { name: windowWords.set }));
+    expect(value().window).toMatchObject({ low: { value: 0.6, unit: "mmol/L" }, high: { value: 0.9, unit: "mmol/L" } });
+    expect(value().window).not.toHaveProperty("confirmed");
+  });
+
+  test("a window everyday only in another unit is asked about; that unit can be taken", async () => {
+    const { user, value } = await renderWorkbench(<WindowEntry onDone={vi.fn()} />, { open: lithium() });
+    await fill(user, "0.6", "0.9");
+    await user.selectOptions(screen.getByRole("combobox", { name: windowWords.unit }), "mg/L");
+    await user.click(screen.getByRole("button", { name: windowWords.set }));
+    expect(value()).not.toHaveProperty("window");
+    await user.click(screen.getByRole("button", { name: askWords.itIs("0.6 to 0.9\u00a0mmol/L") }));
+    expect(value().window).toMatchObject({ low: { value: 0.6, unit: "mmol/L" } });
+    expect(value().window).not.toHaveProperty("confirmed");
+    expect(screen.getByRole("combobox", { name: windowWords.unit })).toHaveValue("mmol/L");
+  });
+
+  test("the answer that it is meant is recorded, and not asked for again when only the basis changes", async () => {
+    const { user, value } = await renderWorkbench(<WindowEntry onDone={vi.fn()} />, { open: lithium() });
+    await fill(user, "0.6", "0.9");
+    await user.selectOptions(screen.getByRole("combobox", { name: windowWords.unit }), "mg/L");
+    await user.click(screen.getByRole("button", { name: windowWords.set }));
+    await user.click(screen.getByRole("button", { name: askWords.itIs("0.6 to 0.9\u00a0mg/L") }));
+    expect(value().window).toMatchObject({ low: { value: 0.6, unit: "mg/L" }, confirmed: true });
+    await user.type(screen.getByRole("textbox", { name: windowWords.basis }), ", renewed{Enter}");
+    expect(value().window).toMatchObject({ basis: "ward policy (invented), renewed", confirmed: true });
   });
 
   test("a low end above the high end, and a comma, are refused and stay", async () => {

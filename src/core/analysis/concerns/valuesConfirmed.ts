@@ -20,4 +20,14 @@ export const valuesConfirmed: ConcernRule = ({ case: value }) => [
     .map((level) =>
       concern("value-confirmed", "check", { kind: "level", id: level.id }, { kind: "level", quantity: level.quantity }),
     ),
+  ...(value.window?.confirmed
+    ? [
+        concern(
+          "value-confirmed",
+          "check",
+          { kind: "case", id: "window" },
+          { kind: "window", quantity: value.window.high },
+        ),
+      ]
+    : []),
 ];

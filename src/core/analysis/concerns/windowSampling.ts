@@ -1,6 +1,6 @@
 import type { Case } from "../../case/index.ts";
 import type { RecordWindow } from "../../medicine/index.ts";
-import { quantityConvert } from "../../units/index.ts";
+import { type Quantity, quantityConvert } from "../../units/index.ts";
 import { type ConcernContext, type ConcernRule, clockMs, concern } from "../concernRule.ts";
 import { sourceText } from "../typicalModel.ts";
 
@@ -13,7 +13,7 @@ export const windowSampling: ConcernRule = (context) => {
   const { window } = context.case;
   if (!window) return [];
   const ofRecord = recordWindow(context.case);
-  const drawn = ofRecord && drawnBetween(ofRecord);
+  const drawn = drawnBetween(window) ?? (ofRecord && drawnBetween(ofRecord));
   if (!drawn && window.quantity !== "trough") return [];
   return context.levels.flatMap((level) => {
     if (level.excluded !== null || level.afterDoseH === null || level.atH > context.clock.nowH) return [];
@@ -27,7 +27,7 @@ export const windowSampling: ConcernRule = (context) => {
     if (drawn) {
       const { fromH, toH } = drawn;
       const isOff = (fromH !== null && level.afterDoseH < fromH) || (toH !== null && level.afterDoseH > toH);
-      const source = sourceText(context.case.medicine, ofRecord.source);
+      const source = ofRecord ? sourceText(context.case.medicine, ofRecord.source) : window.basis;
       return isOff ? [concern("level-off-window-time", "check", about, { ...data, fromH, toH, source })] : [];
     }
     const leftH = untilNextDose(context, level.atH, level.afterDoseH);
@@ -36,6 +36,8 @@ export const windowSampling: ConcernRule = (context) => {
   });
 };
 
+type Drawn = { readonly [E in "drawFrom" | "drawTo"]?: Quantity | undefined };
+
 /** The record's window that the case's is: the same quantity and ends. */
 function recordWindow({ window, medicine }: Case): RecordWindow | null {
   const key = (one: Pick<RecordWindow, "quantity" | "low" | "high">) =>
@@ -43,7 +45,8 @@ function recordWindow({ window, medicine }: Case): RecordWindow | null {
   return window ? (medicine.windows.find((each) => key(each) === key(window)) ?? null) : null;
 }
 
-function drawnBetween({ drawFrom, drawTo }: RecordWindow): { fromH: number | null; toH: number | null } | null {
+/** The case's own times go before those of the record's window. */
+function drawnBetween({ drawFrom, drawTo }: Drawn): { fromH: number | null; toH: number | null } | null {
   if (!drawFrom && !drawTo) return null;
   return { fromH: drawFrom ? quantityConvert(drawFrom, "h") : null, toH: drawTo ? quantityConvert(drawTo, "h") : null };
 }
