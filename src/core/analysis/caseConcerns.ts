@@ -1,3 +1,4 @@
+import { concentrationFactor, concentrationUnit } from "../medicine/index.ts";
 import type { Concern, Gravity } from "./analysisTypes.ts";
 import type { ConcernContext, ConcernRule } from "./concernRule.ts";
 import { autoinduction } from "./concerns/autoinduction.ts";
@@ -40,7 +41,7 @@ import { modelIncomplete } from "./concerns/modelIncomplete.ts";
 import { neverSteady } from "./concerns/neverSteady.ts";
 import { noSteadyState } from "./concerns/noSteadyState.ts";
 import { oneLevel } from "./concerns/oneLevel.ts";
-import { optionChanceAbove } from "./concerns/optionChanceAbove.ts";
+import { optionChanceOutside } from "./concerns/optionChanceOutside.ts";
 import { optionChanceToxic } from "./concerns/optionChanceToxic.ts";
 import { optionOutsideWindow } from "./concerns/optionOutsideWindow.ts";
 import { optionToxic } from "./concerns/optionToxic.ts";
@@ -81,7 +82,7 @@ const RULES: readonly ConcernRule[] = [
   levelsAbsorptionOnly,
   levelsBeforeChange,
   levelsTaughtLittle,
-  optionChanceAbove,
+  optionChanceOutside,
   kineticsChange,
   autoinduction,
   linearApproximation,
@@ -113,7 +114,11 @@ const RULES: readonly ConcernRule[] = [
 
 const ORDER: Readonly<Record<Gravity, number>> = { stop: 0, check: 1, note: 2 };
 
-/** What a human has to look at, gravest first. */
+/** What a human has to look at, gravest first; with the unit its sentences name concentrations in. */
 export function caseConcerns(context: ConcernContext): Concern[] {
-  return RULES.flatMap((rule) => rule(context)).sort((a, b) => ORDER[a.gravity] - ORDER[b.gravity]);
+  const { medicine } = context.case;
+  const shownIn = { unit: concentrationUnit(medicine), factor: concentrationFactor(medicine) };
+  return RULES.flatMap((rule) => rule(context))
+    .map((each) => ({ ...each, data: { ...each.data, shownIn } }))
+    .sort((a, b) => ORDER[a.gravity] - ORDER[b.gravity]);
 }

@@ -14,6 +14,8 @@ const UNITS = ["mg/L", "ug/L", "umol/L", "nmol/L", "mmol/L"] as const;
 export interface ConcentrationSense {
   /** "other-unit": everyday only in one of `units`; "far": beyond twenty times what the record knows. */
   readonly verdict: "usual" | "other-unit" | "far";
+  /** Beyond twenty times what the record knows, whether or not another unit helps. */
+  readonly isFar: boolean;
   /** Units in which the same number would be everyday; the record's own first. Empty where it is usual. */
   readonly units: readonly (typeof UNITS)[number][];
   /** What the record's windows span, mg/L; without one, up to the toxic limit. */
@@ -24,7 +26,7 @@ export interface ConcentrationSense {
 /**
  * Whether a concentration as typed makes sense for a medicine: judged by the record's concentration windows and toxic limit.
  * low = lowest lower end (its upper end where that is 0); high = highest upper end.
- * Usual: low / 1.5 to the higher of high · 2 and the toxic limit; or, where no unit makes better sense, low / 20 to 20 times the higher of high and toxic limit.
+ * Usual: low / 1.5 to the higher of high · 2 and the toxic limit; or, where no unit makes better sense, low / 20 to high · 20. Without a window the toxic limit stands for high.
  * A number that is usual as it is typed is never questioned, even where it would be usual in another unit too.
  * null without any concentration window or limit: there is nothing to judge by.
  * Example: lithium (0.6 to 1.2 mmol/L), 0.8 mg/L is 0.115 mmol/L: "other-unit", mmol/L.
@@ -43,8 +45,8 @@ export function concentrationSense(
   const low = lows.length === 0 ? 0 : Math.min(...lows);
   const isEveryday = (value: number) =>
     value >= low / EVERYDAY_BELOW && value <= Math.max(high * EVERYDAY_ABOVE, toxic);
-  const isNear = (value: number) => value >= low / FAR && value <= Math.max(high, toxic) * FAR;
-  const span = { lowMgPerL: low, highMgPerL: high || toxic };
+  const isNear = (value: number) => value >= low / FAR && value <= (high || toxic) * FAR;
+  const span = { isFar: !isNear(mgPerL(typed)), lowMgPerL: low, highMgPerL: high || toxic };
 
   const value = mgPerL(typed);
   if (isEveryday(value)) return { verdict: "usual", units: [], ...span };
@@ -54,5 +56,5 @@ export function concentrationSense(
     return other !== value && isEveryday(other);
   });
   if (units.length > 0) return { verdict: "other-unit", units, ...span };
-  return { verdict: isNear(value) ? "usual" : "far", units: [], ...span };
+  return { verdict: span.isFar ? "far" : "usual", units: [], ...span };
 }

@@ -1,5 +1,5 @@
 import { instantText } from "../time/index.ts";
-import { numberPrint } from "../units/index.ts";
+import { numberPrint, type UnitCode, unitSpoken } from "../units/index.ts";
 
 /** A concern as a human reads it: a title that says it all, and what to do about it. */
 export interface ConcernWords {
@@ -12,9 +12,26 @@ export type ConcernData = Readonly<Record<string, unknown>>;
 export const dataNumber = (data: ConcernData, key: string): number => data[key] as number;
 export const dataText = (data: ConcernData, key: string): string => data[key] as string;
 export const figure = (value: number): string => numberPrint(value, { significant: 3 });
-/** Low ones in micrograms: fewer decimals. */
-export const concentration = (value: number): string =>
-  Math.abs(value) < 0.1 && value !== 0 ? `${figure(value * 1000)} microgram per L` : `${figure(value)} mg per L`;
+/**
+ * A concentration in mg/L in the unit the medicine is read in, which caseConcerns puts beside the data of every concern.
+ * Low ones by mass in micrograms: fewer decimals.
+ */
+export function concentrationWords(data: ConcernData, mgPerL: number): string {
+  const { shownIn } = data as { readonly shownIn?: ShownIn };
+  const isLow = Math.abs(mgPerL) < 0.1 && mgPerL !== 0;
+  const { unit, factor } =
+    shownIn !== undefined && !(shownIn.unit === "mg/L" && isLow)
+      ? shownIn
+      : ({ unit: isLow ? "ug/L" : "mg/L", factor: isLow ? 1000 : 1 } as const);
+  return `${figure(mgPerL * factor)} ${unitSpoken(unit, "print")}`;
+}
+export const concentration = (data: ConcernData, key: string): string =>
+  concentrationWords(data, dataNumber(data, key));
+/** How many of `unit` make 1 mg/L. */
+interface ShownIn {
+  readonly unit: UnitCode;
+  readonly factor: number;
+}
 export const hours = (value: number): string => `${figure(value)} hours`;
 export const when = (data: ConcernData): string =>
   instantText(dataNumber(data, "atMs"), dataText(data, "zone"), "dayClock");

@@ -6,6 +6,7 @@ import {
   type ConcernData,
   type ConcernWords,
   concentration,
+  concentrationWords,
   countWords,
   figure,
   hours,
@@ -36,7 +37,7 @@ const OBSERVATION_WORDS: Readonly<Record<string, string>> = {
 
 function outsideWindow(data: ConcernData, side: "above" | "below"): ConcernWords {
   const isArea = text(data, "unit") === "mg.h/L";
-  const print = (value: number) => (isArea ? `${figure(value)} mg hours per L` : concentration(value));
+  const print = (value: number) => (isArea ? `${figure(value)} mg hours per L` : concentrationWords(data, value));
   const found = side === "above" ? number(data, "most") : number(data, "least");
   const edge = side === "above" ? number(data, "high") : number(data, "low");
   const name = text(data, "quantity") as TargetWindow["quantity"];
@@ -73,7 +74,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "option-toxic": (data) => ({
     title: `Option ${text(data, "option")} reaches the toxic limit`,
-    text: `Highest predicted ${concentration(number(data, "peak"))}; the record's toxic limit is ${concentration(number(data, "from"))} (${text(data, "source")}).`,
+    text: `Highest predicted ${concentration(data, "peak")}; the record's toxic limit is ${concentration(data, "from")} (${text(data, "source")}).`,
   }),
   "level-after-now": (data) => ({
     title: `The level of ${when(data)} lies after the now line`,
@@ -89,7 +90,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "level-far-off": (data) => ({
     title: `The level of ${when(data)} is far from the prediction`,
-    text: `Measured ${concentration(number(data, "measured"))}, predicted ${concentration(number(data, "predicted"))}: ${figure(number(data, "ratio"))} times. Wrong time, missed dose, interaction, assay, or a patient unlike the typical one?`,
+    text: `Measured ${concentration(data, "measured")}, predicted ${concentration(data, "predicted")}: ${figure(number(data, "ratio"))} times. Wrong time, missed dose, interaction, assay, or a patient unlike the typical one?`,
   }),
   "option-above-window": (data) => outsideWindow(data, "above"),
   "option-below-window": (data) => outsideWindow(data, "below"),

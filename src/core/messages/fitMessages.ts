@@ -72,7 +72,7 @@ const parts = (data: ConcernData): readonly string[] => data.parameters as reado
 const times = (data: ConcernData): string => wordList(data.times as readonly string[]);
 
 const misfit = (data: ConcernData): string =>
-  `Measured ${concentration(number(data, "measured"))}, ${beyond(number(data, "standardised"))} what this patient's curve gives there.`;
+  `Measured ${concentration(data, "measured")}, ${beyond(number(data, "standardised"))} what this patient's curve gives there.`;
 const outcome = (data: ConcernData): string => {
   const influence = influenceWords(data.influence as Parameters<typeof influenceWords>[0]);
   const robust =
@@ -81,6 +81,13 @@ const outcome = (data: ConcernData): string => {
       : " Robust residuals would weigh it less.";
   return `${influence === "" ? "" : ` ${influence}.`}${robust}`;
 };
+
+function outsideChance(data: ConcernData, side: "above" | "below", other: "above" | "below"): ConcernWords {
+  return {
+    title: `Option ${text(data, "option")}: chance of lying ${side} the window ${chanceWords(number(data, side))}`,
+    text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"])} ${data.isSteady ? "at steady state" : "over the span shown"}, in this patient. Chance of lying ${other} the window ${chanceWords(number(data, other))}.`,
+  };
+}
 
 /** Concerns about what the levels made of this patient, one function a code. */
 export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWords>> = {
@@ -102,7 +109,7 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
   }),
   "level-out-of-range": (data) => ({
     title: `The level of ${when(data)} is out of any usual range`,
-    text: `${concentration(number(data, "measured"))}; the record's windows lie between ${concentration(number(data, "low"))} and ${concentration(number(data, "high"))}. Check the unit and the value; a slip here pulls every figure with it.`,
+    text: `${concentration(data, "measured")}; the record's windows lie between ${concentration(data, "low")} and ${concentration(data, "high")}. Check the unit and the value; a slip here pulls every figure with it.`,
   }),
   "level-residual": (data) => ({
     title: `The level of ${when(data)} does not fit the others and the doses`,
@@ -114,7 +121,7 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
   }),
   "level-outside-prior": (data) => ({
     title: `The level of ${when(data)} is unusual for this medicine`,
-    text: `Measured ${concentration(number(data, "measured"))}; of patients like this one on these doses 95 % would have between ${concentration(number(data, "low"))} and ${concentration(number(data, "high"))}. An error, a wrong time, doses not taken, or an unusual patient?`,
+    text: `Measured ${concentration(data, "measured")}; of patients like this one on these doses 95 % would have between ${concentration(data, "low")} and ${concentration(data, "high")}. An error, a wrong time, doses not taken, or an unusual patient?`,
   }),
   "parameter-unusual": (data) => ({
     title: `${text(data, "words")} lies far from the typical patient's`,
@@ -148,7 +155,7 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
   }),
   "levels-within-error": (data) => ({
     title: `Two levels differ by less than the assay's error`,
-    text: `${times(data)}: ${concentration(number(data, "difference"))} apart, the error of their difference is ${concentration(number(data, "error"))}. Together they say how high the curve lies, hardly how it falls.`,
+    text: `${times(data)}: ${concentration(data, "difference")} apart, the error of their difference is ${concentration(data, "error")}. Together they say how high the curve lies, hardly how it falls.`,
   }),
   "levels-same-time": (data) => ({
     title: `${countWords(number(data, "count"), "level has", "levels have")} the same time: ${text(data, "time")}`,
@@ -158,13 +165,11 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
     title: `${data.isAll ? "Every level was" : countWords(number(data, "count"), "level was", "levels were")} drawn before the kinetics changed`,
     text: `Last change ${text(data, "time")}. What ${number(data, "count") === 1 ? "it says" : "they say"} is carried across the change in proportion; ${data.isAll ? "no level shows what the change did to this patient." : "levels after it count for more."}`,
   }),
-  "option-chance-above": (data) => ({
-    title: `Option ${text(data, "option")}: chance of lying above the window ${chanceWords(number(data, "chance"))}`,
-    text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"])} ${data.isSteady ? "at steady state" : "over the span shown"}, for this patient. Below the window ${chanceWords(number(data, "below"))}.`,
-  }),
+  "option-chance-above": (data) => outsideChance(data, "above", "below"),
+  "option-chance-below": (data) => outsideChance(data, "below", "above"),
   "option-chance-toxic": (data) => ({
     title: `Option ${text(data, "option")} may reach the toxic limit in this patient`,
-    text: `With a chance of at least ${percent(number(data, "chance"))} % the highest reaches the record's toxic limit, ${concentration(number(data, "from"))} (${text(data, "source")}); median highest ${concentration(number(data, "median"))}, 90 % between ${concentration(number(data, "low"))} and ${concentration(number(data, "high"))}.`,
+    text: `With a chance of at least ${percent(number(data, "chance"))} % the highest reaches the record's toxic limit, ${concentration(data, "from")} (${text(data, "source")}); median highest ${concentration(data, "median")}, 90 % between ${concentration(data, "low")} and ${concentration(data, "high")}.`,
   }),
 };
 

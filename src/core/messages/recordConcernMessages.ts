@@ -1,8 +1,9 @@
 import type { CovariateName } from "../medicine/index.ts";
-import { numberPrint, quantityPrint, type UnitCode } from "../units/index.ts";
+import { numberPrint, type Quantity, quantityPrint, type UnitCode, unitSpoken } from "../units/index.ts";
 import {
   type ConcernData,
   type ConcernWords,
+  concentration,
   figure,
   hours,
   dataNumber as number,
@@ -29,6 +30,10 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
   "product-switch": (data) => ({
     title: `Option ${text(data, "option")} changes the product mg for mg`,
     text: `From ${text(data, "from")} to ${text(data, "to")}, ${mg(data, "mg")} a day in both: ${wordList(differenceWords(data))}. What reaches the circulation is ${figure(number(data, "ratio") * 100)} % of before for the same mg.`,
+  }),
+  "level-unit-doubtful": (data) => ({
+    title: `The level of ${when(data)} would be usual only in another unit`,
+    text: `${printed(data.quantity as Quantity)}, where this medicine is used at ${concentration(data, "low")} to ${concentration(data, "high")}; in ${orList((data.units as readonly UnitCode[]).map((unit) => unitSpoken(unit, "print")))} the same number would be. Check the unit, or confirm the value.`,
   }),
   "level-too-early": (data) => ({
     title: `The level of ${when(data)} was drawn too soon after the dose`,
@@ -95,6 +100,8 @@ const PRINT = { style: "print", microgram: "microgram" } as const;
 const amount = (value: number, unit: UnitCode): string => quantityPrint({ value, unit }, { ...PRINT, significant: 3 });
 const mg = (data: ConcernData, key: string): string =>
   quantityPrint({ value: number(data, key), unit: "mg" }, { ...PRINT, significant: 6 });
+const printed = (quantity: Quantity): string => quantityPrint(quantity, { ...PRINT, significant: 4 });
+const orList = (words: readonly string[]): string => wordList(words).replace(/ and ([^,]*)$/, " or $1");
 const percent = (share: number): string => `${figure(share * 100)} %`;
 const sentence = (words: string): string => words.replace(/\.$/, "");
 const isSex = (data: ConcernData): boolean => text(data, "covariate") === "isFemale";

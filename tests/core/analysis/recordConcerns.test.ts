@@ -2,7 +2,7 @@ import { describe, expect, it } from "vitest";
 import { eventInteractions } from "../../../src/core/analysis/eventInteractions.ts";
 import { derive } from "../../../src/core/analysis/index.ts";
 import type { Case, Factor } from "../../../src/core/case/index.ts";
-import type { Figure, MedicineRecord, RecordWindow } from "../../../src/core/medicine/index.ts";
+import { type Figure, type MedicineRecord, type RecordWindow, recordById } from "../../../src/core/medicine/index.ts";
 import { concernMessage } from "../../../src/core/messages/index.ts";
 import { RECORD_CONCERN_CODES } from "../../../src/core/messages/recordConcernMessages.ts";
 import { forbiddenForms } from "../../../src/core/units/index.ts";
@@ -110,6 +110,11 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     "product-switch",
     value(otherProduct({ saltFactor: figure(0.8, "1"), salt: "aminophylline" }), { options: optionOf("other", 200) }),
     value(otherProduct({ saltFactor: figure(0.8, "1"), salt: "aminophylline" }), { options: optionOf("other", 300) }),
+  ],
+  [
+    "level-unit-doubtful",
+    value({}, { levels: [level(TROUGH, { quantity: { value: 55, unit: "mg/L" } })] }),
+    value({}, { levels: [level(TROUGH, { quantity: { value: 55, unit: "mg/L" }, confirmed: true })] }),
   ],
   ["level-too-early", withLevel({ earliestSample: figure(12, "h") }), withLevel({ earliestSample: figure(11, "h") })],
   [
@@ -260,6 +265,22 @@ describe("concerns from the record", () => {
     expect(codes).toContain("level-too-early");
     expect(codes).not.toContain("level-while-distributing");
     expect(codes).not.toContain("level-while-absorbing");
+  });
+
+  it("lithium is spoken of in mmol/L", () => {
+    const medicine = recordById("lithium")!;
+    const given = plain.given.map((line) => ({ ...line, product: medicine.products[0]!.id }));
+    const lithium = (mmolPerL: number) =>
+      value(
+        {},
+        { medicine, given, options: [], levels: [level(TROUGH, { quantity: { value: mmolPerL, unit: "mmol/L" } })] },
+      );
+    const [one] = derive(lithium(40)).concerns.filter((each) => each.code === "level-out-of-range");
+    expect(concernMessage(one!).text).toContain(
+      "40 mmol per L; the record's windows lie between 0.4 mmol per L and 1.2 mmol per L",
+    );
+    expect(derive(lithium(0.8)).concerns.map((each) => each.code)).not.toContain("level-out-of-range");
+    expect(derive(lithium(0.8)).concerns.map((each) => each.code)).not.toContain("level-unit-doubtful");
   });
 
   it("the times a case's own window is for go before the record's", () => {

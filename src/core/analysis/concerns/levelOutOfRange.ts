@@ -1,28 +1,31 @@
-import { quantityConvert } from "../../units/index.ts";
+import { concentrationSense } from "../../medicine/index.ts";
 import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 
-/** Beyond the record's windows by this factor, either way, a slip of the unit is likelier than the value (units slip by 1000). Our own rule, common practice; the same is asked when a level is typed. */
-export const RANGE_FACTOR = 20;
-
-/** A level out of any sane range that counts: files and other tools can bring what the form would have asked about. */
+/**
+ * A level that counts and makes no sense as it stands: beyond twenty times what the record knows, or everyday only in another unit and not confirmed.
+ * Files and other tools can bring what the form would have asked about.
+ */
 export const levelOutOfRange: ConcernRule = (context) => {
-  const { medicine } = context.case;
-  const windows = medicine.windows.filter((window) => window.high.unit === "mg/L");
-  if (windows.length === 0) return [];
-  const inMgPerL = (edge: (typeof windows)[number]["high"]) =>
-    quantityConvert({ value: edge.value, unit: edge.unit }, "mg/L", medicine.molarMass.value);
-  const high = Math.max(...windows.map((window) => inMgPerL(window.high)));
-  const low = Math.min(...windows.map((window) => inMgPerL(window.low) || inMgPerL(window.high)));
+  const { medicine, levels: entered } = context.case;
   return context.levels.flatMap((level) => {
-    if (level.excluded !== null || level.belowLimit) return [];
-    if (level.measured <= high * RANGE_FACTOR && level.measured >= low / RANGE_FACTOR) return [];
-    return [
-      concern(
-        "level-out-of-range",
-        "stop",
-        { kind: "level", id: level.id },
-        { atMs: clockMs(context, level.atH), zone: context.case.timeZone, measured: level.measured, low, high },
-      ),
-    ];
+    const sense = concentrationSense({ value: level.measured, unit: "mg/L" }, medicine);
+    if (!sense || level.excluded !== null) return [];
+    const { lowMgPerL: low, highMgPerL: high } = sense;
+    const about = { kind: "level", id: level.id } as const;
+    const at = { atMs: clockMs(context, level.atH), zone: context.case.timeZone };
+    const data = { ...at, measured: level.measured, low, high };
+    if (sense.isFar && !level.belowLimit) return [concern("level-out-of-range", "stop", about, data)];
+    // As it was typed: the number is what may be meant in another unit.
+    const typed = entered.find((each) => each.id === level.id);
+    const typedSense = typed && concentrationSense(typed.quantity, medicine);
+    return typedSense?.verdict === "other-unit" && !typed?.confirmed
+      ? [
+          concern("level-unit-doubtful", "check", about, {
+            ...data,
+            quantity: typed?.quantity,
+            units: typedSense.units,
+          }),
+        ]
+      : [];
   });
 };
