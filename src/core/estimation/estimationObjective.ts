@@ -118,9 +118,9 @@ export class EstimationObjective {
         gradient[a] = gradient[a]! + slope * this.#gradients.derivatives[a]![j]!;
       }
     }
-    const isFinite = sum < Infinity && gradient.every(Number.isFinite);
-    this.#value = isFinite ? sum : Number.POSITIVE_INFINITY;
-    this.#gradient = isFinite ? gradient : gradient.map(() => Number.POSITIVE_INFINITY);
+    const isNumber = sum < Infinity && gradient.every(Number.isFinite);
+    this.#value = isNumber ? sum : Number.POSITIVE_INFINITY;
+    this.#gradient = isNumber ? gradient : gradient.map(() => Number.POSITIVE_INFINITY);
   }
 
   /** False where no patient has such figures. */

@@ -3,47 +3,42 @@ import {
   choleskyFactor,
   type ImportanceSample,
   importanceSample,
-  logDeterminant,
   type Matrix,
   PROPOSAL_DEGREES,
   paretoSmoothed,
   studentTLogDensity,
 } from "../numerics/index.ts";
 
-/** A place where a density is greatest among its neighbours. */
-export interface Mode {
+/** A t distribution with 4 degrees that a part of the draws comes from. */
+export interface Component {
   readonly at: readonly number[];
-  /** Minus the logarithm of the density there. */
-  readonly objective: number;
-  /** Its second derivatives there, positive definite. */
+  /** Inverse of its scale matrix, positive definite. */
   readonly hessian: Matrix;
+  /** Its part of the draws; they add up to 1. */
+  readonly share: number;
 }
 
-/** Each mode gets at least this part of the draws: its share is only guessed from its curvature. */
-const LEAST_SHARE = 0.15;
-
 /**
- * Weighted draws from a density with several modes.
+ * Weighted draws from a density, proposed by several t distributions together.
  *
- * Formula: from each mode the points of importanceSample, in number by its mass as its height and curvature tell it (e^(−O)/√det H, at
- * least 15 %); every point is weighted by the density over the mixture of all the t distributions, then smoothed by paretoSmoothed.
+ * Formula: from each component the points of importanceSample; every point is weighted by the density over the mixture of all
+ * components, then smoothed by paretoSmoothed.
  * @returns as importanceSample
  * Source: deterministic mixture weights (Owen & Zhou, Safe and effective importance sampling, J Am Stat Assoc 2000;95:135–143, from
  * memory, unverified).
  */
 export function mixtureSample(
   logDensity: BatchLogDensity,
-  modes: readonly Mode[],
+  components: readonly Component[],
   draws: number,
   seed: number,
 ): ImportanceSample {
-  const factors = modes.map(({ hessian }) => choleskyFactor(hessian));
-  if (factors.some((factor) => factor === null)) return { status: "no-scale" };
-  const counts = countsOf(modes, draws);
-  const d = modes[0]!.at.length;
-  const points = modes[0]!.at.map(() => new Float64Array(draws));
+  const factors = components.map(({ hessian }) => choleskyFactor(hessian));
+  const counts = countsOf(components, draws);
+  const d = components[0]!.at.length;
+  const points = components[0]!.at.map(() => new Float64Array(draws));
   let filled = 0;
-  for (const [m, { at, hessian }] of modes.entries()) {
+  for (const [m, { at, hessian }] of components.entries()) {
     const part = importanceSample({
       logDensity: (each) => new Float64Array(each[0]!.length),
       mode: at,
@@ -56,10 +51,11 @@ export function mixtureSample(
     filled += counts[m]!;
   }
   const logProposal = new Float64Array(draws);
-  const terms = modes.map(() => 0);
+  const terms = components.map(() => 0);
   for (let n = 0; n < draws; n++) {
-    for (const [m, { at }] of modes.entries()) {
-      const factor = factors[m]!;
+    for (const [m, { at }] of components.entries()) {
+      const factor = factors[m];
+      if (!factor) return { status: "no-scale" };
       // |Lᵀ·(x − mode)|² with H = L·Lᵀ.
       let squared = 0;
       for (let j = 0; j < d; j++) {
@@ -80,19 +76,9 @@ export function mixtureSample(
   return { status: "drawn", points, weights, paretoK, effectiveSize };
 }
 
-function countsOf(modes: readonly Mode[], draws: number): number[] {
-  const least = modes[0]!.objective;
-  const masses = modes.map(({ objective, hessian }) => {
-    const half = (logDeterminant(hessian) ?? 0) / 2;
-    return { log: least - objective - half };
-  });
-  const most = Math.max(...masses.map(({ log }) => log));
-  const raw = masses.map(({ log }) => Math.exp(log - most));
-  const total = raw.reduce((sum, each) => sum + each, 0);
-  const share = Math.min(LEAST_SHARE, 1 / modes.length);
-  const floored = raw.map((each) => Math.max(share, each / total));
-  const sum = floored.reduce((all, each) => all + each, 0);
-  const counts = floored.map((each) => Math.floor((draws * each) / sum));
-  counts[0] = counts[0]! + draws - counts.reduce((all, each) => all + each, 0);
+/** Whole numbers that add up to the draws. */
+function countsOf(components: readonly Component[], draws: number): number[] {
+  const counts = components.map(({ share }) => Math.floor(share * draws));
+  counts[0] = counts[0]! + draws - counts.reduce((sum, count) => sum + count, 0);
   return counts;
 }
