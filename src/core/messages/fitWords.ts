@@ -17,7 +17,6 @@ export const fitWords = {
   typicalPatient: "typical patient",
   interval: "90 % interval",
   level: "level",
-  predicted: "predicted for this patient",
   leftOut: (reason: string) => `left out: ${reason}`,
   forecast: (levelsKnown: number): string => `forecast before it (${knownWords(levelsKnown)}), 90 %:`,
   forecastHead: (levelsKnown: number): string => `Forecast before it was known (${knownWords(levelsKnown)})`,
@@ -87,9 +86,9 @@ export function windowChanceWords(quantity: TargetWindow["quantity"]): string {
 
 /** A chance in words: never "0 %" or "100 %". */
 export function chanceWords(share: number): string {
-  if (share < 0.01) return "under 1 %";
-  if (share > 0.99) return "over 99 %";
-  return `${numberPrint(share * 100, { decimals: 0 })} %`;
+  if (share < 0.01) return "under 1\u00a0%";
+  if (share > 0.99) return "over 99\u00a0%";
+  return `${numberPrint(share * 100, { decimals: 0 })}\u00a0%`;
 }
 
 export function taughtWord(taught: number): "much" | "something" | "little" {

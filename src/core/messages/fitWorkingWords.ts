@@ -11,7 +11,7 @@ import { instantText } from "../time/index.ts";
 import { numberPrint, quantityPrint, unitSpoken } from "../units/index.ts";
 import { figure, hours } from "./concernFigures.ts";
 import { chanceWords, fitWords, taughtWord } from "./fitWords.ts";
-import type { WorkingWords } from "./workingWords.ts";
+import { readingWorking, type WorkingWords } from "./workingWords.ts";
 
 /** Six digits: enough to check by hand. */
 const six = (value: number): string => numberPrint(value, { significant: 6 });
@@ -123,7 +123,7 @@ export function individualWorking(value: Case, analysis: Analysis, optionId: str
         : []),
     ],
     result: `median ${six(spread.q50)} ${unit}; 50 % between ${six(spread.q25)} and ${six(spread.q75)}, 90 % between ${six(spread.q05)} and ${six(spread.q95)} ${unit}`,
-    sources: [],
+    sources: readingWorking(value, analysis, optionId, row)?.sources ?? [],
   };
 }
 

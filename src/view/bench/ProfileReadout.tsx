@@ -18,7 +18,7 @@ interface ProfileReadoutProps {
 }
 
 const LINE = 18;
-const CHAR = 6.9;
+const CHAR = 6.4;
 const GAP = 14;
 
 /** Dotted line, a dot on each curve and a box with what they say. */
@@ -37,7 +37,8 @@ export function ProfileReadout({ value, analysis, scene, hours, level, unit, sty
       <line className="readout-line" x1={x} x2={x} y1={scene.plot.top} y2={scene.plot.bottom} />
       {curvesAt(analysis, hours).map((option) => {
         const found = curveAt(analysis, option, hours);
-        return found ? (
+        // A level's own mark is not to be hidden.
+        return found && !(level && option === null) ? (
           <circle
             key={option ?? "given"}
             className={`readout-dot readout-${styleOf(option ?? "given")}`}

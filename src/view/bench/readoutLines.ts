@@ -17,7 +17,10 @@ export function curvesAt(analysis: Analysis, hours: number): readonly (string | 
   return hours < analysis.clock.nowH || options.length === 0 ? [null] : options;
 }
 
-/** What stands at an instant on one curve, mg/L: this patient's limits where there is a fit, and the typical patient's value. */
+/**
+ * What stands at an instant on one curve, mg/L: this patient's limits where there is a fit, and the typical patient's value.
+ * At a level of the doses given they are the level's own, found there and not read off the drawing.
+ */
 export function curveAt(
   analysis: Analysis,
   option: string | null,
@@ -26,7 +29,8 @@ export function curveAt(
   const found = concentrationAt(analysis, option, [hours]);
   if (!found) return null;
   const band = bandOf(analysis, option);
-  return { typical: found[0]!, individual: band && bandAt(band, hours) };
+  const level = option === null ? analysis.levels.find(({ atH, fit }) => atH === hours && fit !== null) : undefined;
+  return { typical: found[0]!, individual: level?.fit?.predicted ?? (band && bandAt(band, hours)) };
 }
 
 /** What the readout says under its clock time: each curve's value, for this patient with its 90 % interval, and the hours since its last dose. */
@@ -55,16 +59,13 @@ export function levelNear(analysis: Analysis, hours: number, pxPerHour: number):
   return near.sort((a, b) => Math.abs(a.atH - hours) - Math.abs(b.atH - hours))[0] ?? null;
 }
 
-/** What the readout says of a level: measured, what this patient's curve gives there, and whether the forecast before it held. */
+/** What the readout adds at a level: what was measured, and whether the forecast before it held. */
 export function levelLines(value: Case, level: LevelResult, unit: ShownUnit): string[] {
   const { three, shown } = printing(value, unit);
   const { fit } = level;
   const out = level.excluded === null ? "" : `, ${fitWords.leftOut(level.excluded)}`;
   return [
     `${fitWords.level} ${level.belowLimit ? "below " : ""}${three(level.measured)} ${shown}${out}`,
-    ...(fit
-      ? [`${fitWords.predicted} ${three(fit.predicted.q50)}, ${fitWords.interval} ${range(fit.predicted, three)}`]
-      : []),
     ...(fit?.forecast
       ? [
           `${fitWords.forecast(fit.forecast.levelsKnown)} ${range(fit.forecast.predictive, three)}: ${fitWords.held(fit.forecast.held)}`,

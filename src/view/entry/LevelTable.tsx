@@ -33,6 +33,11 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
     const decimals = Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(Math.abs(convert(level, beside)) || 1))));
     return quantityPrint({ value: convert(level, mgPerL), unit: level.quantity.unit }, { style: "screen", decimals });
   };
+  const differenceOf = (level: Level) => {
+    const { difference = null, predicted = null } = resultOf(level) ?? {};
+    if (difference === null) return "";
+    return `${difference > 0 ? "+" : ""}${inUnitOf(level, difference, predicted ?? difference)}`;
+  };
   const figureOf = (level: Level, mgPerL: number) => numberPrint(convert(level, mgPerL), { significant: 3 });
   const printOf = (level: Level, mgPerL: number) =>
     quantityPrint({ value: convert(level, mgPerL), unit: level.quantity.unit }, { style: "screen", significant: 3 });
@@ -66,7 +71,7 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
             align: "end",
             cell: (level) => {
               const hours = resultOf(level)?.afterDoseH ?? null;
-              return hours === null ? "" : `${numberPrint(hours, { decimals: 1 })} h`;
+              return hours === null ? "" : `${numberPrint(hours, { decimals: 1 })}\u00a0h`;
             },
           },
           { id: "measured", head: levelWords.measuredHead, align: "end", cell: measuredWords },
@@ -76,19 +81,14 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
             align: "end",
             cell: (level) => {
               const predicted = resultOf(level)?.predicted ?? null;
-              return predicted === null ? "" : inUnitOf(level, predicted, predicted);
+              if (predicted === null) return "";
+              const shown = inUnitOf(level, predicted, predicted);
+              return hasFit ? <Figure text={shown} under={differenceOf(level)} /> : shown;
             },
           },
-          {
-            id: "difference",
-            head: levelWords.difference,
-            align: "end",
-            cell: (level) => {
-              const { difference = null, predicted = null } = resultOf(level) ?? {};
-              if (difference === null) return "";
-              return `${difference > 0 ? "+" : ""}${inUnitOf(level, difference, predicted ?? difference)}`;
-            },
-          },
+          ...(hasFit
+            ? []
+            : [{ id: "difference", head: levelWords.difference, align: "end" as const, cell: differenceOf }]),
           ...(hasFit
             ? [
                 {
@@ -98,13 +98,13 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
                   cell: (level: Level) => {
                     const fit = resultOf(level)?.fit;
                     if (!fit) return "";
+                    const { q05, q50, q95 } = fit.predicted;
                     return (
-                      <span>
-                        <strong>{printOf(level, fit.predicted.q50)}</strong>
-                        <span className="level-entry-interval">
-                          {figureOf(level, fit.predicted.q05)} to {figureOf(level, fit.predicted.q95)}
-                        </span>
-                      </span>
+                      <Figure
+                        text={printOf(level, q50)}
+                        under={`${figureOf(level, q05)} to ${figureOf(level, q95)}`}
+                        isMain
+                      />
                     );
                   },
                 },
@@ -182,6 +182,16 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
       ) : null}
       <LevelFindings value={value} results={results} nameOf={nameOf} print={printOf} figure={figureOf} />
     </>
+  );
+}
+
+/** A figure with what goes with it under it, smaller. */
+function Figure({ text, under, isMain = false }: { text: string; under: string; isMain?: boolean }) {
+  return (
+    <span className="level-entry-figure">
+      {isMain ? <strong>{text}</strong> : <span>{text}</span>}
+      <span className="level-entry-interval">{under}</span>
+    </span>
   );
 }
 

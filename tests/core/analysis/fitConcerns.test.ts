@@ -64,8 +64,10 @@ const withOption = (change: (option: NonNullable<ConcernContext["options"][numbe
     individual: { ...option.individual!, ...change(option.individual!) },
   })),
 });
-const chance = (above: number) =>
-  withOption((found) => ({ steadyState: { ...found.steadyState!, chance: { below: 0, within: 1 - above, above } } }));
+const chance = (above: number, below = 0) =>
+  withOption((found) => ({
+    steadyState: { ...found.steadyState!, chance: { below, within: 1 - above - below, above } },
+  }));
 const peak = (median: number) =>
   withOption((found) => ({ span: { ...found.span, peak: spread(median) }, steadyState: null }));
 const ambiguous = (isAmbiguous: boolean) =>
@@ -134,6 +136,7 @@ const TABLE: readonly (readonly [code: string, raises: ConcernContext, doesNot: 
   ["levels-same-time", withLevels({ atH: 60 }, { atH: 60 }), withLevels({ atH: 60 }, { atH: 60.1 })],
   ["levels-before-change", changed(quiet.levels[0]!.atH + 1), changed(quiet.levels[0]!.atH)],
   ["option-chance-above", chance(0.25), chance(0.24)],
+  ["option-chance-below", chance(0.1, 0.25), chance(0.1, 0.24)],
   ["option-chance-toxic", peak(20), peak(10)],
 ];
 
@@ -168,6 +171,37 @@ describe("concerns about the fit", () => {
     expect(gravity(-3.01, "normal")).toBe("stop");
     expect(gravity(-2.99, "normal")).toBe("check");
     expect(gravity(-3.01, "robust")).toBe("check");
+  });
+
+  it("where the order rests on this patient, the typical patient's place in the window is not held against an option", () => {
+    const high = { ...quiet.options[0]!.typical!.steadyState!, peak: 40 };
+    const options = quiet.options.map((option) => ({
+      ...option,
+      typical: { ...option.typical!, span: { ...option.typical!.span, peak: 40 }, steadyState: high },
+    }));
+    const codes = (use: "individual" | "typical", individual: (typeof options)[0]["individual"]) =>
+      caseConcerns({
+        ...quiet,
+        case: { ...value, fit: { ...value.fit, use } },
+        options: options.map((option) => ({ ...option, individual })),
+      }).map((concern) => concern.code);
+    const both = ["option-above-window", "option-toxic"];
+    const own = options[0]!.individual;
+    expect(codes("individual", own).filter((code) => both.includes(code))).toEqual([]);
+    expect(codes("typical", own)).toEqual(expect.arrayContaining(both));
+    expect(codes("individual", null)).toEqual(expect.arrayContaining(both));
+  });
+
+  it("another option than the chosen one is pointed out only where it is likelier than not, and never as grave", () => {
+    const other = (above: number) => {
+      const context = chance(above);
+      const options = value.options.map((option) => ({ ...option, chosen: false }));
+      const chosen = { ...options[0]!, id: "B", chosen: true };
+      return found({ ...context, case: { ...value, options: [...options, chosen] } }, "option-chance-above");
+    };
+    expect(other(0.49)).toEqual([]);
+    expect(other(0.51).map(({ gravity }) => gravity)).toEqual(["check"]);
+    expect(found(chance(0.51), "option-chance-above").map(({ gravity }) => gravity)).toEqual(["stop"]);
   });
 
   it("a lone outlier is said once, not twice", () => {

@@ -11,13 +11,13 @@ import {
 import { individualFit } from "../analysis/fitFixture.ts";
 
 test.each([
-  [0, "under 1 %"],
-  [0.0099, "under 1 %"],
-  [0.01, "1 %"],
-  [0.374, "37 %"],
-  [0.99, "99 %"],
-  [0.9901, "over 99 %"],
-  [1, "over 99 %"],
+  [0, "under 1\u00a0%"],
+  [0.0099, "under 1\u00a0%"],
+  [0.01, "1\u00a0%"],
+  [0.374, "37\u00a0%"],
+  [0.99, "99\u00a0%"],
+  [0.9901, "over 99\u00a0%"],
+  [1, "over 99\u00a0%"],
 ])("a chance of %d is said as %s: never nothing, never certain", (share, words) => {
   expect(chanceWords(share)).toBe(words);
 });

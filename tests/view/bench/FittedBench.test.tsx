@@ -82,7 +82,9 @@ describe("this patient on the bench", () => {
     const slider = screen.getByRole("slider", { name: "Time on the profile" });
     slider.focus();
     await user.keyboard("L");
-    expect(slider.getAttribute("aria-valuetext")).toMatch(/Tue 3 March, 14:00.*predicted for this patient.*: held$/);
+    expect(slider.getAttribute("aria-valuetext")).toMatch(
+      /Tue 3 March, 14:00.*90 % interval.*; level 5\.3 mg\/L; forecast before it.*: held$/,
+    );
     await user.keyboard("L");
     expect(slider.getAttribute("aria-valuetext")).toMatch(/Wed 4 March, 07:30.*left out: line contaminated/);
   });

@@ -78,8 +78,14 @@ describe("readout", () => {
       fit: { ...fitted.levels[0]!.fit!, forecast: { predictive: spread(9), levelsKnown: 2, held: false } },
     };
     const lines = levelLines(value, missed, "mg/L");
-    expect(lines).toHaveLength(3);
-    expect(lines[2]).toBe("forecast before it (2 levels known), 90 %: 6.25 to 13: did not hold");
+    expect(lines).toHaveLength(2);
+    expect(lines[1]).toBe("forecast before it (2 levels known), 90 %: 6.25 to 13: did not hold");
+  });
+
+  it("at a level the curve's limits are the level's own, not read off the drawing", () => {
+    const { atH, fit } = fitted.levels[0]!;
+    const given = { ...fitted, levels: [{ ...fitted.levels[0]!, fit: { ...fit!, predicted: spread(7.77) } }] };
+    expect(readoutLines(value, given, atH, "mg/L")[0]).toMatch(/^7\.77 mg\/L, 90 % interval 5\.4 to 11\.2; typical/);
   });
 
   it("a band is read off between its times, and nowhere else", () => {

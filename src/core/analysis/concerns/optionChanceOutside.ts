@@ -1,0 +1,36 @@
+import { type ConcernContext, type ConcernRule, concern } from "../concernRule.ts";
+import type { WindowChance } from "../fitTypes.ts";
+
+/** Chance of this patient lying outside the window from which it is pointed out: of the chosen option; and of any other, where it is likelier than not. Our own rule, no published limit. */
+export const CHANCE_CHOSEN = 0.25;
+export const CHANCE_OTHER = 0.5;
+
+/**
+ * An option may lie outside the window in this patient: at steady state where there is one, else over the span. Above it, likelier
+ * than not, in the chosen option is grave: too much is harder to take back than too little.
+ */
+export const optionChanceOutside: ConcernRule = ({ case: value, options }) => {
+  const { window } = value;
+  const chosen = value.options.find((option) => option.chosen)?.id;
+  if (!window) return [];
+  return options.flatMap((option) => {
+    const found = chanceOf(option);
+    if (!found) return [];
+    const { chance, isSteady } = found;
+    const isChosen = option.id === chosen;
+    const from = isChosen || chosen === undefined ? CHANCE_CHOSEN : CHANCE_OTHER;
+    const about = { kind: "option", id: option.id } as const;
+    const data = { option: option.id, quantity: window.quantity, isSteady, above: chance.above, below: chance.below };
+    const gravity = isChosen && chance.above > CHANCE_OTHER ? "stop" : "check";
+    return [
+      ...(chance.above >= from ? [concern("option-chance-above", gravity, about, data)] : []),
+      ...(chance.below >= from ? [concern("option-chance-below", "check", about, data)] : []),
+    ];
+  });
+};
+
+function chanceOf(option: ConcernContext["options"][number]): { chance: WindowChance; isSteady: boolean } | null {
+  const { steadyState, span } = option.individual ?? {};
+  const chance = steadyState ? steadyState.chance : span?.chance;
+  return chance ? { chance, isSteady: !!steadyState } : null;
+}
