@@ -11,7 +11,8 @@ export const optionOutsideWindow: ConcernRule = ({ case: value, options }) => {
   const { low, high } = limits;
   return options.flatMap((option) => {
     const settled = option.typical?.steadyState;
-    if (!settled) return [];
+    // Where the order rests on this patient, the chance of lying outside is said instead (optionChanceOutside).
+    if (!settled || (option.individual && value.fit.use === "individual")) return [];
     const [least, most] = {
       trough: [settled.lowest, settled.lowest],
       peak: [settled.peak, settled.peak],
