@@ -3,6 +3,7 @@ import type { DoseAmount } from "../regimen/index.ts";
 import type { Issue } from "../result/index.ts";
 import type { UnitCode } from "../units/index.ts";
 import type { Band, FitState, IndividualReadings, LevelFit } from "./fitTypes.ts";
+import type { TimedLevels } from "./windowTiming.ts";
 
 /**
  * What `derive(case)` returns: everything the screens, the summary and `recompute` show.
@@ -159,6 +160,8 @@ export interface SteadyStateReadings {
   /** The same as an instant on the case clock. */
   readonly steady90AtH: number;
   readonly slower: "absorption" | "elimination";
+  /** Levels at the time after a dose the window asks for; null where it asks for none. */
+  readonly timed: TimedLevels | null;
 }
 
 export interface OptionReadings {

@@ -1,8 +1,6 @@
 import type { Case } from "../case/index.ts";
 import {
-  type KineticsParameter,
   type ModelHistory,
-  modelExposure,
   modelHalfLife,
   modelScaled,
   modelSteadyState,
@@ -10,130 +8,162 @@ import {
 } from "../kinetics/index.ts";
 import type { DoseLine } from "../regimen/index.ts";
 import type { Model } from "./analysisTypes.ts";
-import type { IndividualReadings, Spread } from "./fitTypes.ts";
+import type { DrawnFigures } from "./drawnCurve.ts";
+import type { DrawnPatients } from "./drawnPatients.ts";
+import type { IndividualReadings, Spread, WindowChance } from "./fitTypes.ts";
 import { finalDisposition, modelInputs } from "./modelInputs.ts";
-import { concentrationWindow } from "./optionReadings.ts";
 import { regimenPattern } from "./regimenPattern.ts";
 import { spreadOfEqual } from "./spreadOf.ts";
-import { windowChance } from "./windowChance.ts";
+import { type WindowFigures, windowChance } from "./windowChance.ts";
 import { windowLimits } from "./windowLimits.ts";
+import { timedLevels, windowDrawH } from "./windowTiming.ts";
 
-/** Equally weighted draws of what differs from the typical patient. */
-export interface DrawnPatients {
-  readonly names: readonly KineticsParameter[];
-  readonly count: number;
-  /** η of the nth draw, in the order of `names`. */
-  readonly eta: (nth: number) => readonly number[];
-}
-
-const SPAN_NAMES = ["peak", "lowest", "average", "auc", "hoursBelow", "hoursWithin", "hoursAbove"] as const;
 const STEADY_NAMES = ["peak", "lowest", "average", "accumulation", "swing", "fluctuation"] as const;
 
+/** Of draws that never settle so many, and the interval of the others would hide them: no steady-state figure is given. */
+export const MOST_NEVER_STEADY = 0.05;
+
+type SteadyColumns = Record<(typeof STEADY_NAMES)[number] | "timeTo90H" | "timedLowest" | "timedHighest", Float64Array>;
+
 /**
- * The readings of an option for every draw of this patient, as intervals; found as the typical patient's are (optionReadings), draw by draw.
- * Yields after each draw.
+ * The readings of an option for every draw of this patient, as intervals: over the span from the drawn curves, of the steady state as the
+ * typical patient's are found, draw by draw. Yields between the draws how many are done.
  */
 export function* individualReadings(
   value: Case,
   lines: readonly DoseLine[],
-  history: ModelHistory,
   typical: Model,
   patients: DrawnPatients,
+  figures: DrawnFigures,
   { fromH, toH }: { readonly fromH: number; readonly toH: number },
-): Generator<void, IndividualReadings> {
-  const { names, count } = patients;
-  const window = concentrationWindow(value) ?? undefined;
-  const found = regimenPattern(value, lines);
-  const pattern = found.ok ? found.pattern : null;
-  const settledHistory: ModelHistory | null = pattern && {
-    dispositions: [{ from: Number.NEGATIVE_INFINITY, disposition: finalDisposition(typical) }],
-    inputs: modelInputs(typical, pattern.courses),
+): Generator<number, IndividualReadings> {
+  const settled = yield* steadyDraws(value, lines, typical, patients);
+  const chance = (own: Omit<WindowFigures, "auc24" | "average"> & { readonly average: Float64Array }) => {
+    const limits = windowLimits(value);
+    if (!limits || !value.window) return null;
+    return windowChance(value.window.quantity, limits, { ...own, auc24: own.average.map((level) => level * 24) });
   };
-
-  const span = columns(SPAN_NAMES, count);
-  const steady = columns([...STEADY_NAMES, "timeTo90H"] as const, count);
-  const halfLives = new Float64Array(count);
-  let hasHalfLife = true;
-  let settledCount = 0;
-  for (let i = 0; i < count; i++) {
-    const eta = patients.eta(i);
-    const own = modelScaled(history, names, eta);
-    const exposure = modelExposure(own, fromH, toH, window);
-    for (const name of SPAN_NAMES) span[name][i] = exposure[name];
-    const halfLife = modelHalfLife(own.dispositions.at(-1)!.disposition);
-    if (halfLife === null) hasHalfLife = false;
-    else halfLives[i] = halfLife;
-    if (settledHistory && pattern) {
-      const settled = modelScaled(settledHistory, names, eta);
-      const { disposition } = settled.dispositions[0]!;
-      const state = modelSteadyState(disposition, settled.inputs, pattern.periodH);
-      if (state.status === "settled") {
-        for (const name of STEADY_NAMES) steady[name][settledCount] = state[name];
-        steady.timeTo90H[settledCount] = modelTimeToSteadyState(
-          disposition,
-          settled.inputs,
-          pattern.periodH,
-          0.9,
-        ).hours;
-        settledCount++;
-      }
-    }
-    yield;
-  }
-
-  // Chances first: spreadOfEqual puts a column in order.
-  const limits = windowLimits(value);
-  const chanceOf = (figures: { peak: Float64Array; lowest: Float64Array; average: Float64Array }) =>
-    limits && value.window
-      ? windowChance(value.window.quantity, limits, { ...figures, auc24: figures.average.map((level) => level * 24) })
-      : null;
-  const spanChance = chanceOf(span);
-  const settled = firstRows(steady, settledCount);
-  const steadyChance = settledCount > 0 ? chanceOf(settled) : null;
-  const hours = (name: "hoursBelow" | "hoursWithin" | "hoursAbove") => (window ? spreadOfEqual(span[name]) : null);
+  // A window for a level at a time after the dose is not about the lowest level of a span. Chances first: spreads put a column in order.
+  const spanChance = settled.drawH === null ? chance(figures) : null;
+  const steadyState = steadyReadings(settled, patients.count, chance);
+  const hasWindow = value.window !== undefined && value.window.quantity !== "auc24";
+  const hours = (column: Float64Array) => (hasWindow ? spreadOfEqual(column) : null);
+  const average = spreadOfEqual(figures.average);
   return {
     span: {
       fromH,
       toH,
-      peak: spreadOfEqual(span.peak),
-      lowest: spreadOfEqual(span.lowest),
-      auc24: daily(spreadOfEqual(span.average)),
-      average: spreadOfEqual(span.average),
-      auc: spreadOfEqual(span.auc),
-      hoursBelow: hours("hoursBelow"),
-      hoursWithin: hours("hoursWithin"),
-      hoursAbove: hours("hoursAbove"),
+      peak: spreadOfEqual(figures.peak),
+      lowest: spreadOfEqual(figures.lowest),
+      average,
+      auc: times(average, toH - fromH),
+      auc24: times(average, 24),
+      hoursBelow: hours(figures.hoursBelow),
+      hoursWithin: hours(figures.hoursWithin),
+      hoursAbove: hours(figures.hoursAbove),
       chance: spanChance,
     },
-    steadyState:
-      settledCount === 0
-        ? null
-        : {
-            peak: spreadOfEqual(settled.peak),
-            lowest: spreadOfEqual(settled.lowest),
-            average: spreadOfEqual(settled.average),
-            auc24: daily(spreadOfEqual(settled.average)),
-            accumulation: spreadOfEqual(settled.accumulation),
-            swing: spreadOfEqual(settled.swing),
-            fluctuation: spreadOfEqual(settled.fluctuation),
-            timeTo90H: spreadOfEqual(settled.timeTo90H),
-            chance: steadyChance,
-          },
-    shareNeverSteady: pattern ? (count - settledCount) / count : 0,
-    halfLifeH: hasHalfLife ? spreadOfEqual(halfLives) : null,
+    steadyState,
+    shareNeverSteady: settled.isRepeating ? (patients.count - settled.count) / patients.count : 0,
+    halfLifeH: settled.halfLives && spreadOfEqual(settled.halfLives),
   };
 }
 
-function columns<N extends string>(names: readonly N[], count: number): Record<N, Float64Array> {
-  return Object.fromEntries(names.map((name) => [name, new Float64Array(count)])) as Record<N, Float64Array>;
+interface SteadyDraws {
+  readonly isRepeating: boolean;
+  /** Hours after a dose the window asks for. */
+  readonly drawH: number | null;
+  /** How many settle at all; the columns have so many rows. */
+  readonly count: number;
+  readonly columns: SteadyColumns;
+  readonly halfLives: Float64Array | null;
 }
 
-function firstRows<N extends string>(table: Record<N, Float64Array>, count: number): Record<N, Float64Array> {
-  const cut = Object.entries<Float64Array>(table).map(([name, column]) => [name, column.subarray(0, count)]);
-  return Object.fromEntries(cut) as Record<N, Float64Array>;
+function* steadyDraws(
+  value: Case,
+  lines: readonly DoseLine[],
+  typical: Model,
+  { names, count, eta }: DrawnPatients,
+): Generator<number, SteadyDraws> {
+  const found = regimenPattern(value, lines);
+  const drawH = windowDrawH(value);
+  const history: ModelHistory = {
+    dispositions: [{ from: Number.NEGATIVE_INFINITY, disposition: finalDisposition(typical) }],
+    inputs: found.ok ? modelInputs(typical, found.pattern.courses) : [],
+  };
+  const columns = Object.fromEntries(
+    [...STEADY_NAMES, "timeTo90H", "timedLowest", "timedHighest"].map((name) => [name, new Float64Array(count)]),
+  ) as SteadyColumns;
+  const halfLives = new Float64Array(count);
+  let hasHalfLife = true;
+  let settled = 0;
+  for (let n = 0; n < count; n++) {
+    const own = modelScaled(
+      history,
+      names,
+      eta.map((column) => column[n]!),
+    );
+    const { disposition } = own.dispositions[0]!;
+    const halfLife = modelHalfLife(disposition);
+    if (halfLife === null) hasHalfLife = false;
+    else halfLives[n] = halfLife;
+    if (found.ok) {
+      const { periodH } = found.pattern;
+      const state = modelSteadyState(disposition, own.inputs, periodH);
+      if (state.status === "settled") {
+        for (const name of STEADY_NAMES) columns[name][settled] = state[name];
+        columns.timeTo90H[settled] = modelTimeToSteadyState(disposition, own.inputs, periodH, 0.9).hours;
+        if (drawH !== null) {
+          const timed = timedLevels(disposition, own.inputs, periodH, drawH);
+          columns.timedLowest[settled] = timed.lowest;
+          columns.timedHighest[settled] = timed.highest;
+        }
+        settled++;
+      }
+    }
+    yield n + 1;
+  }
+  for (const name of Object.keys(columns) as (keyof SteadyColumns)[])
+    columns[name] = columns[name].subarray(0, settled);
+  return { isRepeating: found.ok, drawH, count: settled, columns, halfLives: hasHalfLife ? halfLives : null };
 }
 
-/** AUC in 24 h of an average. */
-function daily({ q05, q25, q50, q75, q95 }: Spread): Spread {
-  return { q05: q05 * 24, q25: q25 * 24, q50: q50 * 24, q75: q75 * 24, q95: q95 * 24 };
+function steadyReadings(
+  { columns, drawH, count, isRepeating }: SteadyDraws,
+  draws: number,
+  chanceOf: (own: Omit<WindowFigures, "auc24" | "average"> & { readonly average: Float64Array }) => WindowChance | null,
+): IndividualReadings["steadyState"] {
+  if (!isRepeating || draws - count > MOST_NEVER_STEADY * draws) return null;
+  const { peak, lowest, average, timedLowest, timedHighest } = columns;
+  const chance = withNeverSteady(
+    chanceOf(drawH === null ? { peak, lowest, average } : { peak, lowest: timedLowest, timedHighest, average }),
+    (draws - count) / draws,
+  );
+  const mean = spreadOfEqual(average);
+  return {
+    peak: spreadOfEqual(peak),
+    lowest: spreadOfEqual(lowest),
+    average: mean,
+    auc24: times(mean, 24),
+    accumulation: spreadOfEqual(columns.accumulation),
+    swing: spreadOfEqual(columns.swing),
+    fluctuation: spreadOfEqual(columns.fluctuation),
+    timeTo90H: spreadOfEqual(columns.timeTo90H),
+    timed:
+      drawH === null
+        ? null
+        : { afterDoseH: drawH, lowest: spreadOfEqual(timedLowest), highest: spreadOfEqual(timedHighest) },
+    chance,
+  };
+}
+
+/** A draw that never settles rises above every window. */
+function withNeverSteady(chance: WindowChance | null, share: number): WindowChance | null {
+  if (!chance) return null;
+  const rest = 1 - share;
+  return { below: chance.below * rest, within: chance.within * rest, above: chance.above * rest + share };
+}
+
+function times({ q05, q25, q50, q75, q95 }: Spread, factor: number): Spread {
+  return { q05: q05 * factor, q25: q25 * factor, q50: q50 * factor, q75: q75 * factor, q95: q95 * factor };
 }

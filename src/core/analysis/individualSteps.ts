@@ -4,26 +4,30 @@ import { type ModelHistory, modelHalfLife, modelScaled } from "../kinetics/index
 import type { AnalysisClock } from "./analysisClock.ts";
 import type { DoseMark, LevelResult, Model, OptionResult } from "./analysisTypes.ts";
 import { countedByProduct } from "./caseDoses.ts";
+import { drawnCurve } from "./drawnCurve.ts";
+import type { DrawnPatients } from "./drawnPatients.ts";
 import { type FitProblem, fitProblem } from "./fitProblem.ts";
 import type { Band, FitState, FittedFigure, IndividualFit } from "./fitTypes.ts";
 import { fittedParameters } from "./fittedParameters.ts";
 import { flipFlopFinding } from "./flipFlopFinding.ts";
-import { individualBand } from "./individualBand.ts";
-import { type DrawnPatients, individualReadings } from "./individualReadings.ts";
+import { individualReadings } from "./individualReadings.ts";
 import { levelFits } from "./levelFits.ts";
 import { modelHistory } from "./modelInputs.ts";
+import { concentrationWindow } from "./optionReadings.ts";
 import { spreadOf } from "./spreadOf.ts";
 import { systematicDraws } from "./systematicDraws.ts";
 
-/** Draws from the posterior, and the seed they come from: part of the engine, so that the same case always gives the same figures. */
-export const POSTERIOR_DRAWS = 2_048;
+/** Part of the engine, so that the same case always gives the same figures. */
 export const POSTERIOR_SEED = 1;
 
-/** Of them so many, taken by weight, carry the bands and readings: as many as the kind's cost allows while a key is held down. */
-const DRAWN_PATIENTS: Readonly<Record<Model["kind"], number>> = {
-  "one-compartment": 1_024,
-  "two-compartment": 512,
-  saturable: 512,
+/**
+ * How many draws, as the kind's cost allows: from the posterior; for each level's forecast and the typical patient's range; and, of the
+ * posterior by weight, those that carry the bands and readings.
+ */
+const DRAWS: Readonly<Record<Model["kind"], { posterior: number; aside: number; carried: number }>> = {
+  "one-compartment": { posterior: 2_048, aside: 1_024, carried: 1_024 },
+  "two-compartment": { posterior: 2_048, aside: 512, carried: 512 },
+  saturable: { posterior: 1_024, aside: 256, carried: 256 },
 };
 
 /** Share of the work that is done when the draws are there, and when the levels have been looked at one by one. */
@@ -61,7 +65,8 @@ export function* individualSteps(value: Case, input: IndividualInput): Generator
   const posed = fitProblem(value, typical, given, levels);
   if (!posed.ok) return without({ kind: "none", reason: posed.reason });
   if (!input.isFitted) return without({ kind: "pending" });
-  const { problem, used } = posed.value;
+  const { problem } = posed.value;
+  const draws = DRAWS[typical!.kind];
 
   yield 0;
   const map = estimateMostLikely(problem);
@@ -70,7 +75,7 @@ export function* individualSteps(value: Case, input: IndividualInput): Generator
     return without({ kind: "withheld", reason: "not-converged", data: { iterations, gradientNorm } });
   }
   yield PART_DRAWN / 4;
-  const posterior = estimatePosterior(problem, map, { draws: POSTERIOR_DRAWS, seed: POSTERIOR_SEED });
+  const posterior = estimatePosterior(problem, map, { draws: draws.posterior, seed: POSTERIOR_SEED });
   if (posterior.status === "withheld") {
     const { paretoK, rHat, effectiveSize } = posterior;
     return without({ kind: "withheld", reason: "draws-unreliable", data: { paretoK, rHat, effectiveSize } });
@@ -81,15 +86,13 @@ export function* individualSteps(value: Case, input: IndividualInput): Generator
     fit: posed.value,
     map,
     posterior,
-    draws: POSTERIOR_DRAWS,
+    draws: draws.aside,
     seed: POSTERIOR_SEED,
   });
-  const fittedLevels = yield* parts(levelSteps, PART_DRAWN, PART_LEVELS, 4 + 2 * used.length);
+  const fittedLevels = yield* parts(levelSteps, PART_DRAWN, PART_LEVELS, levels.length + 1);
 
-  const patients = drawnPatients(posed.value, posterior, DRAWN_PATIENTS[typical!.kind]);
-  const shown = shownSteps(value, input, posed.value, typical!, patients);
-  const steps = patients.count * (1 + 2 * options.length);
-  const { givenBand, fittedOptions } = yield* parts(shown, PART_LEVELS, 1, steps);
+  const patients = drawnPatients(posed.value, posterior, draws.carried);
+  const { givenBand, fittedOptions } = yield* shownSteps(value, input, posed.value, typical!, patients);
   return {
     fit: { kind: "fitted", fit: individualFit(value, typical!, posed.value, map, posterior, levels) },
     givenBand,
@@ -98,31 +101,35 @@ export function* individualSteps(value: Case, input: IndividualInput): Generator
   };
 }
 
-/** Bands and readings from the drawn patients. Yields after each. */
+/** Bands and readings from the drawn patients. Yields the part done. */
 function* shownSteps(
   value: Case,
   { given, options, clock, givenUntilH }: IndividualInput,
   { history }: FitProblem,
   typical: Model,
   patients: DrawnPatients,
-): Generator<void, { givenBand: Band; fittedOptions: readonly OptionResult[] }> {
-  const givenBand = yield* individualBand(history, patients, clock.fromH, givenUntilH);
-  const fittedOptions: OptionResult[] = [];
-  for (const option of options) {
-    if (option.typical === null) {
-      fittedOptions.push(option);
-      continue;
-    }
-    const whole: ModelHistory = modelHistory(typical, countedByProduct([...given, ...option.doses]));
-    const lines = value.options.find(({ id }) => id === option.id)!.lines;
+): Generator<number, { givenBand: Band; fittedOptions: readonly OptionResult[] }> {
+  const drawn = options.filter((option) => option.typical !== null);
+  const piece = (1 - PART_LEVELS) / (1 + 2 * drawn.length);
+  let done = PART_LEVELS;
+  const next = <R>(steps: Generator<number, R>) => {
+    const from = done;
+    done += piece;
+    return parts(steps, from, from + piece, patients.count);
+  };
+  const past = drawnCurve(history, patients, clock.fromH, givenUntilH, { toH: givenUntilH, window: null });
+  const { band: givenBand } = yield* next(past);
+  const fitted = new Map<string, Pick<OptionResult, "individual" | "band">>();
+  for (const { id, doses } of drawn) {
+    const whole: ModelHistory = modelHistory(typical, countedByProduct([...given, ...doses]));
+    const lines = value.options.find((option) => option.id === id)!.lines;
+    const looked = { toH: clock.readingsToH, window: concentrationWindow(value) };
+    const { band, figures } = yield* next(drawnCurve(whole, patients, clock.nowH, clock.toH, looked));
     const span = { fromH: clock.nowH, toH: clock.readingsToH };
-    fittedOptions.push({
-      ...option,
-      individual: yield* individualReadings(value, lines, whole, typical, patients, span),
-      band: yield* individualBand(whole, patients, clock.nowH, clock.toH),
-    });
+    const individual = yield* next(individualReadings(value, lines, typical, patients, figures, span));
+    fitted.set(id, { individual, band });
   }
-  return { givenBand, fittedOptions };
+  return { givenBand, fittedOptions: options.map((option) => ({ ...option, ...fitted.get(option.id) })) };
 }
 
 function individualFit(
@@ -179,15 +186,15 @@ function drawnPatients({ parameters }: FitProblem, posterior: Drawn, count: numb
   return {
     names: parameters.map(({ name }) => name),
     count,
-    eta: (nth) => posterior.eta.map((column) => column[chosen[nth]!]!),
+    eta: posterior.eta.map((column) => Float64Array.from(chosen, (nth) => column[nth]!)),
   };
 }
 
-/** Steps of equal size as parts of the whole, from one part to another. */
-function* parts<R>(steps: Generator<void, R>, from: number, to: number, count: number): Generator<number, R> {
-  for (let done = 1; ; done++) {
+/** Steps that say how many of `count` are done, as parts of the whole from one part to another. */
+function* parts<R>(steps: Generator<number, R>, from: number, to: number, count: number): Generator<number, R> {
+  for (;;) {
     const step = steps.next();
     if (step.done) return step.value;
-    yield from + (to - from) * Math.min(1, done / count);
+    yield from + ((to - from) * step.value) / count;
   }
 }

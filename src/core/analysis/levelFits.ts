@@ -31,21 +31,20 @@ export const LATEST_LOOKED_AT = 12;
 
 /**
  * What the fit says of every level drawn after the first dose, those left out too: prediction, residual, whether the typical patient could
- * have had it, what it does to the estimate, and whether the forecast made before it held. Yields between the refits.
+ * have had it, what it does to the estimate, and whether the forecast made before it held. Yields between the refits how far it is, in levels.
  */
 export function* levelFits(
   levels: readonly LevelResult[],
   { fit, map, posterior, draws, seed }: LevelFitInput,
-): Generator<void, readonly LevelResult[]> {
+): Generator<number, readonly LevelResult[]> {
   const { problem, parameters, used } = fit;
   const shown = levels.filter((level) => level.afterDoseH !== null);
   const times = shown.map((level) => level.atH);
   const prior = priorDraws(problem, { draws, seed });
-  yield;
   const own = drawLevels(problem, posterior, times);
-  yield;
+  yield 0.5;
   const typical = drawLevels(problem, prior, times);
-  yield;
+  yield 1;
   const measurement = (values: Float64Array, weights: Float64Array, probabilities: readonly number[]) =>
     predictiveQuantiles(values, weights, problem.residual, problem.residualModel, probabilities);
 
@@ -55,13 +54,13 @@ export function* levelFits(
     const predicted = spreadOf(own[i]!, posterior.weights);
     const [low, median, high] = measurement(typical[i]!, prior.weights, PRIOR_PROBABILITIES);
     const predictive = spread(measurement(own[i]!, posterior.weights, SPREAD_PROBABILITIES));
-    yield;
+    yield i + 1;
     const isLookedAt = at >= used.length - LATEST_LOOKED_AT;
     const left = at >= 0 && isLookedAt ? leaveOut(problem, map, at) : null;
-    yield;
+    yield i + 1.3;
     const forecast =
       at >= 0 && isLookedAt ? forecastAt(problem, level.atH, { draws, seed }, SPREAD_PROBABILITIES) : null;
-    yield;
+    yield i + 1.9;
     found.set(level.id, {
       predicted,
       predictive,

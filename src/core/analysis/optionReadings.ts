@@ -5,6 +5,7 @@ import { quantityConvert } from "../units/index.ts";
 import type { Model, OptionReadings, SpanReadings, SteadyStateReadings } from "./analysisTypes.ts";
 import { finalDisposition, modelHistory, modelInputs } from "./modelInputs.ts";
 import { type RegimenPattern, regimenPattern } from "./regimenPattern.ts";
+import { timedLevels, windowDrawH } from "./windowTiming.ts";
 
 const HOUR_MS = 3_600_000;
 
@@ -24,7 +25,7 @@ export function optionReadings(
 ): OptionReadings {
   const span = spanReadings(model, doses, clock, concentrationWindow(value));
   const pattern = regimenPattern(value, lines);
-  const settled = pattern.ok ? steadyStateReadings(model, pattern.pattern, clock.originMs) : null;
+  const settled = pattern.ok ? steadyStateReadings(model, pattern.pattern, clock.originMs, windowDrawH(value)) : null;
   const hasSteadyState = settled !== null && settled !== "dose-rate-at-or-above-vmax";
   return {
     span,
@@ -72,6 +73,7 @@ function steadyStateReadings(
   model: Model,
   pattern: RegimenPattern,
   originMs: number,
+  drawH: number | null,
 ): SteadyStateReadings | "dose-rate-at-or-above-vmax" {
   const disposition = finalDisposition(model);
   const inputs = modelInputs(model, pattern.courses);
@@ -96,6 +98,7 @@ function steadyStateReadings(
     timeTo90H: slowest.hours,
     steady90AtH: (waitFromMs - originMs) / HOUR_MS + slowest.hours,
     slower: slowest.slower,
+    timed: drawH === null ? null : timedLevels(disposition, inputs, pattern.periodH, drawH),
   };
 }
 

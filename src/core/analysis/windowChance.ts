@@ -7,6 +7,8 @@ export interface WindowFigures {
   readonly lowest: ArrayLike<number>;
   readonly average: ArrayLike<number>;
   readonly auc24: ArrayLike<number>;
+  /** Of levels at a stated time after each dose, the highest; `lowest` is then the lowest of them. */
+  readonly timedHighest?: ArrayLike<number>;
 }
 
 /**
@@ -23,7 +25,7 @@ export function windowChance(
     quantity === "lowest-and-highest"
       ? [figures.lowest, figures.peak]
       : quantity === "trough"
-        ? [figures.lowest, figures.lowest]
+        ? [figures.lowest, figures.timedHighest ?? figures.lowest]
         : [figures[quantity], figures[quantity]];
   const count = lower.length;
   if (count === 0) return null;

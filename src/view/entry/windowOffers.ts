@@ -1,7 +1,7 @@
 import type { TargetWindow } from "../../core/case/index.ts";
 import type { MedicineRecord, RecordWindow } from "../../core/medicine/index.ts";
 import { medicinesWords } from "../../core/messages/index.ts";
-import { numberPrint, quantityPrint } from "../../core/units/index.ts";
+import { numberPrint, quantityConvert, quantityPrint, type UnitCode } from "../../core/units/index.ts";
 import type { WardWindow } from "../../shell/store/workbenchState.ts";
 
 /** Characters a case's basis may hold. */
@@ -28,6 +28,8 @@ export function windowOffers(record: MedicineRecord, ward: readonly WardWindow[]
         quantity: window.quantity,
         low: window.low,
         high: window.high,
+        ...(window.drawFrom && { drawFrom: hours(window.drawFrom) }),
+        ...(window.drawTo && { drawTo: hours(window.drawTo) }),
         basis: `${window.label}: ${recordOrigin(record, window)}`.slice(0, BASIS_LONGEST),
       },
     })),
@@ -43,9 +45,14 @@ export function windowOffers(record: MedicineRecord, ward: readonly WardWindow[]
   ];
 }
 
+function hours(figure: { readonly value: number; readonly unit: UnitCode }) {
+  return { value: quantityConvert(figure, "h"), unit: "h" as const };
+}
+
 /** Which of the offers a case's window is, word for word; null when it was typed. */
 export function windowOfferOf(window: TargetWindow, offers: readonly OfferedWindow[]): OfferedWindow | null {
-  const key = (one: TargetWindow) => JSON.stringify([one.quantity, one.low, one.high, one.basis]);
+  const key = (one: TargetWindow) =>
+    JSON.stringify([one.quantity, one.low, one.high, one.drawFrom, one.drawTo, one.basis]);
   return offers.find((offer) => key(offer.window) === key(window)) ?? null;
 }
 

@@ -151,6 +151,7 @@ export function fittedAnalysis(typical: Analysis, change: Partial<IndividualFit>
             timeTo90H: spread(steadyState.timeTo90H * 1.2, 1.1),
             swing: spread(steadyState.swing, 1.1),
             fluctuation: spread(steadyState.fluctuation, 1.1),
+            timed: null,
             chance: { below: 0.16, within: 0.74, above: 0.1 },
           },
           shareNeverSteady: 0,

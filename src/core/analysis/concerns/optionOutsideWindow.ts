@@ -14,7 +14,7 @@ export const optionOutsideWindow: ConcernRule = ({ case: value, options }) => {
     // Where the order rests on this patient, the chance of lying outside is said instead (optionChanceOutside).
     if (!settled || (option.individual && value.fit.use === "individual")) return [];
     const [least, most] = {
-      trough: [settled.lowest, settled.lowest],
+      trough: settled.timed ? [settled.timed.lowest, settled.timed.highest] : [settled.lowest, settled.lowest],
       peak: [settled.peak, settled.peak],
       average: [settled.average, settled.average],
       auc24: [settled.auc24, settled.auc24],
@@ -29,6 +29,7 @@ export const optionOutsideWindow: ConcernRule = ({ case: value, options }) => {
       unit: isArea ? "mg.h/L" : "mg/L",
       least,
       most,
+      afterDoseH: settled.timed?.afterDoseH ?? null,
     };
     return [
       ...(most > high ? [concern("option-above-window", "check", about, data)] : []),
