@@ -56,7 +56,7 @@ function afterEvents({ symbol, figure }: NamedFigure, final: number): Traced {
     value: final,
     formula: `(${figure.formula}) * events`,
     inputs: [...figure.inputs, { name: "events", value: final / figure.value, unit: "1" }],
-    source: `${figure.source}; effect of the events on ${symbol}: the user's own figure`,
+    source: `${figure.source}; effect of the events on ${symbol}: as entered with them`,
   };
 }
 

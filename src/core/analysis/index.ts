@@ -3,6 +3,7 @@ export type * from "./analysisTypes.ts";
 export { laneDoses } from "./caseDoses.ts";
 export { concentrationAt, hoursSinceDose } from "./concentrationAt.ts";
 export { type DeriveOptions, derive, deriveSteps, ENGINE } from "./derive.ts";
+export { eventInteractions, interactionsFor } from "./eventInteractions.ts";
 export type * from "./fitTypes.ts";
 export { concentrationWindow } from "./optionReadings.ts";
 export {

@@ -30,7 +30,15 @@ export const eventWords = {
   toHelp: "Left empty: it goes on.",
   effect: "What it does to the kinetics, if anything",
   effectHelp:
-    "The figures are your own: the program knows no interaction. They are used as they stand and printed as yours. Left empty, the event is shown and changes nothing.",
+    "The figures are your own unless you take one from the record. They are used as they stand and printed with where they come from. Left empty, the event is shown and changes nothing.",
+  interaction: "From the medicine record",
+  interactionPrompt: "None taken: your own figures",
+  interactionHelp: "Fills in the fields below. Change one of them and it is your own figure again.",
+  interactionChoice: (medicine: string, parameter: "clearance" | "volume", percent: string) =>
+    `${medicine}: ${parameter} ${percent} % of usual`,
+  sourceRecord: (medicine: string, source: string, basis: string) =>
+    `from the record, ${medicine}: ${source} (${basis})`,
+  sourceIs: (source: string) => `Taken ${source}.`,
   clearance: "Clearance, of usual",
   volume: "Volume, of usual",
   onset: "Onset",

@@ -1,4 +1,5 @@
 import { type FormEvent, useState } from "react";
+import { interactionsFor } from "../../core/analysis/index.ts";
 import type { Case, Factor } from "../../core/case/index.ts";
 import { eventWords, issueMessage } from "../../core/messages/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
@@ -8,7 +9,15 @@ import { InstantInput } from "../ui/InstantInput.tsx";
 import { QuantityInput } from "../ui/QuantityInput.tsx";
 import { isDraftEmpty, quantityDraftRead } from "../ui/quantityDraft.ts";
 import { TextField } from "../ui/TextField.tsx";
-import { EMPTY_EVENT, type EventDraft, type EventField, eventDraft, eventDraftRead } from "./eventDraft.ts";
+import {
+  EMPTY_EVENT,
+  type EventDraft,
+  type EventField,
+  eventDraft,
+  eventDraftChange,
+  eventDraftRead,
+  eventDraftWith,
+} from "./eventDraft.ts";
 
 export interface EventFormProps {
   readonly value: Case;
@@ -19,6 +28,8 @@ export interface EventFormProps {
   readonly onEvent: (event: Factor) => void;
 }
 
+/** What an interaction of a record can be about: another medicine, smoking, a genotype. */
+const OFFERED_FOR: ReadonlySet<Factor["kind"]> = new Set(["interacting-medicine", "smoking", "other"]);
 const KINDS = Object.entries(eventWords.kinds).map(([value, label]) => ({ value: value as Factor["kind"], label }));
 
 /** What happened, when, and what it does to the kinetics if the user has a figure for it. */
@@ -31,7 +42,7 @@ export function EventForm({ value, event, word, onEvent, onCancel }: EventFormPr
     return found && isSent ? issueMessage(found) : undefined;
   };
   const change = (next: Partial<EventDraft>) => {
-    setDraft({ ...draft, ...next });
+    setDraft(eventDraftChange(draft, next));
     setSent(false);
   };
   const send = (submitted: FormEvent) => {
@@ -42,6 +53,8 @@ export function EventForm({ value, event, word, onEvent, onCancel }: EventFormPr
     setDraft(EMPTY_EVENT);
     setSent(false);
   };
+  const offered = draft.kind !== null && OFFERED_FOR.has(draft.kind) ? interactionsFor(value) : [];
+  const taken = offered.find((one) => eventDraftWith(draft, one, value.medicine).source === draft.source)?.id ?? null;
   const clearance = quantityDraftRead(draft.clearance, ["%"]);
   const instants = { zone: value.timeZone, now: value.now };
   return (
@@ -86,6 +99,29 @@ export function EventForm({ value, event, word, onEvent, onCancel }: EventFormPr
       <fieldset className="event-entry-effect">
         <legend>{eventWords.effect}</legend>
         <p className="entry-panel-soft">{eventWords.effectHelp}</p>
+        {offered.length > 0 ? (
+          <ChoiceField
+            label={eventWords.interaction}
+            value={taken}
+            prompt={eventWords.interactionPrompt}
+            description={eventWords.interactionHelp}
+            choices={offered.map(({ id, medicine, parameter, factor }) => ({
+              value: id,
+              label: eventWords.interactionChoice(
+                medicine,
+                parameter,
+                numberPrint(factor.value * 100, { significant: 4 }),
+              ),
+            }))}
+            onChoose={(id) => {
+              const chosen = offered.find((one) => one.id === id);
+              if (!chosen) return;
+              setDraft(eventDraftWith(draft, chosen, value.medicine));
+              setSent(false);
+            }}
+          />
+        ) : null}
+        {draft.source === null ? null : <p>{eventWords.sourceIs(draft.source)}</p>}
         <div className="event-entry-three">
           <QuantityInput
             label={eventWords.clearance}

@@ -1,6 +1,9 @@
 import type { Case, Factor } from "../../core/case/index.ts";
+import type { Interaction, MedicineRecord } from "../../core/medicine/index.ts";
+import { eventWords, medicinesWords } from "../../core/messages/index.ts";
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
 import { instantMs, instantRead, instantText } from "../../core/time/index.ts";
+import { quantityConvert } from "../../core/units/index.ts";
 import { instantTyped } from "../ui/InstantInput.tsx";
 import { isDraftEmpty, type QuantityDraft, quantityDraft, quantityDraftRead } from "../ui/quantityDraft.ts";
 import { firstDoseMs } from "./levelDraft.ts";
@@ -14,6 +17,8 @@ export interface EventDraft {
   readonly clearance: QuantityDraft<"%">;
   readonly volume: QuantityDraft<"%">;
   readonly onset: QuantityDraft<"d">;
+  /** Where the figures were taken from; null: the user's own. */
+  readonly source: string | null;
 }
 
 export type EventField = keyof EventDraft;
@@ -32,22 +37,68 @@ export const EMPTY_EVENT: EventDraft = {
   clearance: { text: "", unit: "%" },
   volume: { text: "", unit: "%" },
   onset: { text: "", unit: "d" },
+  source: null,
 };
 
 /** An event as text that reads back to it. */
 export function eventDraft({ kind, detail, from, to, effect }: Factor, zone: string): EventDraft {
-  const percent = (factor: number | undefined) =>
-    quantityDraft<"%">(factor === undefined ? null : { value: Number((factor * 100).toPrecision(12)), unit: "%" }, "%");
   const isClearanceUsual = effect?.clearance === 1 && effect.volume !== undefined;
   return {
     kind,
     name: detail,
     from: instantTyped(from, zone),
     to: to === undefined ? "" : instantTyped(to, zone),
-    clearance: percent(isClearanceUsual ? undefined : effect?.clearance),
-    volume: percent(effect?.volume),
+    clearance: percentDraft(isClearanceUsual ? undefined : effect?.clearance),
+    volume: percentDraft(effect?.volume),
     onset: quantityDraft<"d">(effect?.onset ?? null, "d"),
+    source: effect?.source ?? null,
   };
+}
+
+/** Characters a source may hold in a saved case. */
+const SOURCE_LONGEST = 300;
+
+/** The draft with an interaction of the record put in: its factor, onset and source, and its medicine where none is named yet. */
+export function eventDraftWith(draft: EventDraft, interaction: Interaction, record: MedicineRecord): EventDraft {
+  const { medicine, parameter, factor, onset } = interaction;
+  const source = eventWords.sourceRecord(
+    medicine,
+    sourceTitle(record, factor.source),
+    medicinesWords.bases[factor.basis],
+  );
+  const empty = EMPTY_EVENT.clearance;
+  return {
+    ...draft,
+    name: draft.name.trim() === "" ? medicine : draft.name,
+    clearance: parameter === "clearance" ? percentDraft(factor.value) : empty,
+    volume: parameter === "volume" ? percentDraft(factor.value) : empty,
+    // Part-days would be refused: the effect gets there in daily steps.
+    onset: quantityDraft<"d">(
+      onset && parameter === "clearance"
+        ? { value: Math.max(1, Math.ceil(quantityConvert(onset, "d"))), unit: "d" }
+        : null,
+      "d",
+    ),
+    source: source.slice(0, SOURCE_LONGEST),
+  };
+}
+
+function sourceTitle(record: MedicineRecord, id: string): string {
+  const source = record.sources[id];
+  return source ? [source.authors, source.title, source.year].filter((part) => part !== undefined).join(", ") : id;
+}
+
+function percentDraft(factor: number | undefined): QuantityDraft<"%"> {
+  return quantityDraft<"%">(
+    factor === undefined ? null : { value: Number((factor * 100).toPrecision(12)), unit: "%" },
+    "%",
+  );
+}
+
+/** A figure changed by hand is the user's own again. */
+export function eventDraftChange(draft: EventDraft, change: Partial<EventDraft>): EventDraft {
+  const isFigure = "clearance" in change || "volume" in change || "onset" in change;
+  return { ...draft, ...change, ...(isFigure ? { source: null } : {}) };
 }
 
 /** The event, or its faults, each with the field as its path. */
@@ -79,6 +130,7 @@ export function eventDraftRead(draft: EventDraft, value: Case): Result<Factor> {
     clearance: clearance.value ?? 1,
     ...(volume.value === undefined ? {} : { volume: volume.value }),
     ...(onset.days === undefined ? {} : { onset: { value: onset.days, unit: "d" as const } }),
+    ...(draft.source === null ? {} : { source: draft.source }),
   };
   return succeed({
     kind: draft.kind,

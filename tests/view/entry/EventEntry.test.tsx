@@ -1,7 +1,8 @@
 import { screen, within } from "@testing-library/react";
 import { describe, expect, test, vi } from "vitest";
 import type { Factor } from "../../../src/core/case/index.ts";
-import { eventWords, issueMessage } from "../../../src/core/messages/index.ts";
+import { recordById } from "../../../src/core/medicine/index.ts";
+import { eventWords, issueMessage, medicinesWords } from "../../../src/core/messages/index.ts";
 import { issue } from "../../../src/core/result/index.ts";
 import { EventEntry } from "../../../src/view/entry/EventEntry.tsx";
 import { caseFixture } from "../../core/analysis/caseFixture.ts";
@@ -169,5 +170,76 @@ describe("EventEntry", () => {
     const shown = await show([clarithromycin], {}, 0);
     await shown.user.click(screen.getByRole("button", { name: eventWords.save }));
     expect(factorsOf(shown)).toEqual([clarithromycin]);
+  });
+
+  describe("an interaction of the record", () => {
+    const medicine = recordById("lamotrigine")!;
+    const [valproate] = medicine.interactions;
+    const product = medicine.products[0]!.id;
+    const lamotrigine = () =>
+      show([], { medicine, given: base.given.map((line) => ({ ...line, product })), options: [] });
+    const choose = async ({ user }: Shown) => {
+      await user.selectOptions(screen.getByRole("combobox", { name: eventWords.kind }), "interacting-medicine");
+      await user.selectOptions(screen.getByRole("combobox", { name: eventWords.interaction }), valproate!.id);
+      await user.type(field(eventWords.from), "3 March 08:00");
+    };
+    const source = () => {
+      const { title, authors, year } = medicine.sources[valproate!.factor.source]!;
+      const named = [authors, title, year].filter((part) => part !== undefined).join(", ");
+      return eventWords.sourceRecord("valproate", named, medicinesWords.bases[valproate!.factor.basis]).slice(0, 300);
+    };
+
+    test("fills in its factor and says where it comes from; it is kept with the event", async () => {
+      const shown = await lamotrigine();
+      await choose(shown);
+      expect(field(eventWords.clearance)).toHaveValue("49");
+      expect(screen.getByText(eventWords.sourceIs(source()))).toBeVisible();
+      expect(await axeFaults(shown.container)).toEqual([]);
+      await shown.user.click(screen.getByRole("button", { name: eventWords.add }));
+      expect(factorsOf(shown)).toEqual([
+        {
+          kind: "interacting-medicine",
+          from: "2026-03-03T08:00:00+00:00",
+          detail: "valproate",
+          effect: { clearance: 0.49, source: source() },
+        },
+      ]);
+    });
+
+    test("changed by hand it is the user's own figure again", async () => {
+      const shown = await lamotrigine();
+      await choose(shown);
+      await shown.user.clear(field(eventWords.clearance));
+      await shown.user.type(field(eventWords.clearance), "60");
+      expect(screen.queryByText(eventWords.sourceIs(source()))).toBeNull();
+      await shown.user.click(screen.getByRole("button", { name: eventWords.add }));
+      expect(factorsOf(shown)[0]!.effect).toEqual({ clearance: 0.6 });
+    });
+
+    test("its source stays when only the time is changed", async () => {
+      const shown = await lamotrigine();
+      await choose(shown);
+      await shown.user.click(screen.getByRole("button", { name: eventWords.add }));
+      await shown.user.click(screen.getByRole("button", { name: `${eventWords.change} valproate` }));
+      const form = within(screen.getByRole("form", { name: eventWords.save }));
+      const from = form.getByRole("textbox", { name: eventWords.from });
+      await shown.user.clear(from);
+      await shown.user.type(from, "2 March 08:00");
+      await shown.user.click(form.getByRole("button", { name: eventWords.save }));
+      expect(factorsOf(shown)[0]).toMatchObject({
+        from: "2026-03-02T08:00:00+00:00",
+        effect: { clearance: 0.49, source: source() },
+      });
+    });
+
+    test("is not offered for a meal, nor where the record has none", async () => {
+      const shown = await lamotrigine();
+      await shown.user.selectOptions(screen.getByRole("combobox", { name: eventWords.kind }), "meal");
+      expect(screen.queryByRole("combobox", { name: eventWords.interaction })).toBeNull();
+      shown.unmount();
+      const { user } = await show();
+      await user.selectOptions(screen.getByRole("combobox", { name: eventWords.kind }), "interacting-medicine");
+      expect(screen.queryByRole("combobox", { name: eventWords.interaction })).toBeNull();
+    });
   });
 });
