@@ -6,7 +6,6 @@ import {
   type Matrix,
   PROPOSAL_DEGREES,
   paretoSmoothed,
-  studentTLogDensity,
 } from "../numerics/index.ts";
 
 /** A t distribution with 4 degrees that a part of the draws comes from. */
@@ -33,9 +32,7 @@ export function mixtureSample(
   draws: number,
   seed: number,
 ): ImportanceSample {
-  const factors = components.map(({ hessian }) => choleskyFactor(hessian));
   const counts = countsOf(components, draws);
-  const d = components[0]!.at.length;
   const points = components[0]!.at.map(() => new Float64Array(draws));
   let filled = 0;
   for (const [m, { at, hessian }] of components.entries()) {
@@ -50,27 +47,8 @@ export function mixtureSample(
     for (const [i, column] of part.points.entries()) points[i]!.set(column, filled);
     filled += counts[m]!;
   }
-  const logProposal = new Float64Array(draws);
-  const terms = components.map(() => 0);
-  for (let n = 0; n < draws; n++) {
-    for (const [m, { at }] of components.entries()) {
-      const factor = factors[m];
-      if (!factor) return { status: "no-scale" };
-      // |Lᵀ·(x − mode)|² with H = L·Lᵀ.
-      let squared = 0;
-      for (let j = 0; j < d; j++) {
-        let sum = 0;
-        for (let i = j; i < d; i++) sum += factor[i]![j]! * (points[i]![n]! - at[i]!);
-        squared += sum * sum;
-      }
-      terms[m] =
-        Math.log(counts[m]! / draws) +
-        factor.reduce((sum, row, i) => sum + Math.log(row[i]!), 0) +
-        studentTLogDensity(squared, PROPOSAL_DEGREES, d);
-    }
-    const most = Math.max(...terms);
-    logProposal[n] = most + Math.log(terms.reduce((sum, term) => sum + Math.exp(term - most), 0));
-  }
+  const logProposal = logMixture(components, counts, points);
+  if (logProposal === null) return { status: "no-scale" };
   const density = logDensity(points);
   const { weights, paretoK, effectiveSize } = paretoSmoothed(density.map((each, n) => each - logProposal[n]!));
   return { status: "drawn", points, weights, paretoK, effectiveSize };
@@ -81,4 +59,35 @@ function countsOf(components: readonly Component[], draws: number): number[] {
   const counts = components.map(({ share }) => Math.floor(share * draws));
   counts[0] = counts[0]! + draws - counts.reduce((sum, count) => sum + count, 0);
   return counts;
+}
+
+/** ln of the mixture of the components at each point, up to a constant. */
+function logMixture(
+  components: readonly Component[],
+  counts: readonly number[],
+  points: readonly Float64Array[],
+): Float64Array | null {
+  const d = points.length;
+  const draws = points[0]!.length;
+  const mixture = new Float64Array(draws).fill(Number.NEGATIVE_INFINITY);
+  const power = (PROPOSAL_DEGREES + d) / 2;
+  for (const [m, { at, hessian }] of components.entries()) {
+    const factor = choleskyFactor(hessian);
+    if (factor === null) return null;
+    if (counts[m] === 0) continue;
+    // H = L·Lᵀ: the density carries det L, and the distance is |Lᵀ·(x − at)|.
+    const height = Math.log(counts[m]! / draws) + factor.reduce((sum, row, i) => sum + Math.log(row[i]!), 0);
+    for (let n = 0; n < draws; n++) {
+      let squared = 0;
+      for (let j = 0; j < d; j++) {
+        let sum = 0;
+        for (let i = j; i < d; i++) sum += factor[i]![j]! * (points[i]![n]! - at[i]!);
+        squared += sum * sum;
+      }
+      const term = height - power * Math.log1p(squared / PROPOSAL_DEGREES);
+      const before = mixture[n]!;
+      mixture[n] = Math.max(before, term) + Math.log1p(Math.exp(-Math.abs(before - term)));
+    }
+  }
+  return mixture;
 }

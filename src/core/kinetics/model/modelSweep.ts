@@ -66,7 +66,8 @@ export class ModelSweep {
     kineticsEtaCheck(this.#names, eta);
     let faster = 1;
     let more = 1;
-    for (const [i, name] of this.#names.entries()) {
+    for (let i = 0; i < this.#names.length; i++) {
+      const name = this.#names[i]!;
       const factor = Math.exp(eta[i]!);
       if (name === "ka") faster = factor;
       else if (name === "bioavailability") more = factor;
@@ -82,7 +83,8 @@ export class ModelSweep {
     const times = this.#times;
     state.empty();
     body.empty();
-    for (const [i, { release }] of this.#parts.entries()) {
+    for (let i = 0; i < this.#parts.length; i++) {
+      const { release } = this.#parts[i]!;
       if (release.kind !== "first-order") modelPositive("duration", release.duration / faster, "h");
       else {
         modelPositive("ka", release.ka * faster, "/h");
