@@ -1,5 +1,6 @@
 /** Fixed words of the medicines screen: list, editor, comparison. */
 
+const lower = (name: string): string => name.charAt(0).toLowerCase() + name.slice(1);
 const figures = (count: number): string => (count === 1 ? "1 figure" : `${count} figures`);
 
 export const recordWords = {
@@ -173,13 +174,16 @@ export const recordWords = {
   reviewGone: "A change takes the review off the record: it spoke for the figures as they were.",
   wasBefore: (value: string, source: string) => `Was ${value} (${source}).`,
   newSourceAsked: "Changed: name the source of the new figure and how it is known.",
+  sourceMissing: "Name the source.",
+  basisMissing: "Say how it is known.",
+  curveOld: "The curve and readings are those before the last change:",
   sourceField: "Source",
   sourcePrompt: "Choose the source …",
   basisField: "How it is known",
   basisPrompt: "Choose …",
   noteField: "Note",
   unitField: "Unit",
-  add: (name: string) => `Add ${name}`,
+  add: (name: string) => `Add ${lower(name)}`,
   takeAway: "Take away",
   takeAwayName: (name: string) => `Take away: ${name}`,
   section: {

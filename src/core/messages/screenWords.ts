@@ -93,7 +93,7 @@ export const medicinesWords = {
   about:
     "A record holds a medicine's kinetics, products, windows and cautions. Every figure names its source and how it is known.",
   list: "Records",
-  own: "the ward's own",
+  own: "your own",
   builtIn: "built in",
   recordVersion: (version: number) => `record version ${version}`,
   notReviewed: "not independently reviewed",
@@ -156,7 +156,7 @@ export const medicinesWords = {
   sampling: "Sampling",
   cautions: "Cautions",
   sources: "Sources",
-  importRecord: "Import a ward's record",
+  importRecord: "Import a record",
   importHelp: "A JSON file in Ebbline's own record format. A figure without a source is refused.",
   importedTitle: "Record stored",
   imported: (name: string, version: number) =>

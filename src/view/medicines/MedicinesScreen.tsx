@@ -143,14 +143,13 @@ export function MedicinesScreen() {
           />
         ) : (
           <div className="medicines-screen-columns">
-            <div className="medicines-screen-list">
-              <RecordList
-                records={medicines}
-                own={ownMedicines}
-                edited={Object.keys(recordEdits)}
-                chosen={record?.id}
-                onChoose={choose}
-              />
+            <RecordList
+              records={medicines}
+              own={ownMedicines}
+              edited={Object.keys(recordEdits)}
+              chosen={record?.id}
+              onChoose={choose}
+            >
               <div className="medicines-screen-import">
                 <FilePicker
                   word={medicinesWords.importRecord}
@@ -159,7 +158,7 @@ export function MedicinesScreen() {
                 />
                 <p className="medicines-screen-soft">{medicinesWords.importHelp}</p>
               </div>
-            </div>
+            </RecordList>
             {record ? (
               <RecordPage
                 record={record}

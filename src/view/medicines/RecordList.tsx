@@ -1,4 +1,4 @@
-import { useState } from "react";
+import { type ReactNode, useState } from "react";
 import { type MedicineRecord, unverifiedFigures } from "../../core/medicine/index.ts";
 import { medicinesWords, recordWords } from "../../core/messages/index.ts";
 import { unitSpoken } from "../../core/units/index.ts";
@@ -12,12 +12,14 @@ export interface RecordListProps {
   readonly edited: readonly string[];
   readonly chosen: string | undefined;
   readonly onChoose: (id: string) => void;
+  /** Under the user's own records: how to get more. */
+  readonly children: ReactNode;
 }
 
 /** All records, the user's own apart from those that come with the program; each says how far it can be trusted. */
-export function RecordList({ records, own, edited, chosen, onChoose }: RecordListProps) {
+export function RecordList({ records, own, edited, chosen, onChoose, children }: RecordListProps) {
   const [search, setSearch] = useState("");
-  const found = records.filter((record) => isFound(record, search));
+  const found = records.filter((record) => isFound(record, search)).sort(byName);
   const groups = [
     {
       heading: recordWords.listOwn,
@@ -38,7 +40,7 @@ export function RecordList({ records, own, edited, chosen, onChoose }: RecordLis
           : ""}
       </p>
       {groups.map((group) =>
-        group.records.length === 0 && (isSearched || group.empty === "") ? null : (
+        group.records.length === 0 && isSearched ? null : (
           <section key={group.heading}>
             <h2>{group.heading}</h2>
             {group.records.length === 0 ? <p className="record-list-found">{group.empty}</p> : null}
@@ -57,11 +59,18 @@ export function RecordList({ records, own, edited, chosen, onChoose }: RecordLis
                 </li>
               ))}
             </ul>
+            {group.heading === recordWords.listOwn && !isSearched ? children : null}
           </section>
         ),
       )}
     </nav>
   );
+}
+
+/** By name; what is invented comes last. */
+function byName(a: MedicineRecord, b: MedicineRecord): number {
+  if (a.invented !== b.invented) return a.invented ? 1 : -1;
+  return a.name < b.name ? -1 : 1;
 }
 
 function remarks(record: MedicineRecord, isEdited: boolean): string {

@@ -6,7 +6,7 @@ import { DraftText } from "./DraftText.tsx";
 
 export function CautionsSection() {
   return (
-    <DraftSection id="cautions" heading={recordWords.section.cautions}>
+    <DraftSection id="cautions" heading={recordWords.section.cautions} roots={["cautions"]}>
       <DraftList path={["cautions"]} entry={recordWords.caution} entryNew={() => ({ ...statementNew(), category: "" })}>
         {(path) => (
           <>

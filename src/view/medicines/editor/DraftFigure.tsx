@@ -2,6 +2,7 @@ import { type DraftGroup, type DraftPath, draftTyped } from "../../../core/medic
 import { recordWords } from "../../../core/messages/index.ts";
 import { UNIT_CODES, type UnitCode, unitSpoken } from "../../../core/units/index.ts";
 import { Button } from "../../ui/Button.tsx";
+import { capitalised } from "../capitalised.ts";
 import { DraftChoice } from "./DraftChoice.tsx";
 import { DraftProvenance } from "./DraftProvenance.tsx";
 import { DraftText } from "./DraftText.tsx";
@@ -41,6 +42,7 @@ export function DraftFigure({
     );
   }
   const [unit] = units;
+  const name = capitalised(label);
   return (
     <fieldset className="draft-figure" data-place={placeOf(path)}>
       <legend className="visually-hidden">{label}</legend>
@@ -48,7 +50,7 @@ export function DraftFigure({
         <DraftText
           path={[...path, "value"]}
           label={
-            units.length === 1 && unit !== undefined && unit !== "1" ? `${label}, ${unitSpoken(unit, "screen")}` : label
+            units.length === 1 && unit !== undefined && unit !== "1" ? `${name}, ${unitSpoken(unit, "screen")}` : name
           }
           {...(description === undefined ? {} : { description })}
         />

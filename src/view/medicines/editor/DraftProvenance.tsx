@@ -5,6 +5,7 @@ import {
   draftTyped,
   isDraftChanged,
   isDraftGroup,
+  isSamePath,
 } from "../../../core/medicine/index.ts";
 import { recordWords } from "../../../core/messages/index.ts";
 import { sourceNumber, sourceShort } from "../recordRows.ts";
@@ -21,7 +22,7 @@ export interface DraftProvenanceProps {
 
 /** Where a figure or statement comes from and how it is known; asked for anew once it says something else. */
 export function DraftProvenance({ path, before }: DraftProvenanceProps) {
-  const { draft, groupAt } = useDraft();
+  const { draft, groupAt, issues } = useDraft();
   const node = groupAt(path);
   const sources = isDraftGroup(draft.sources) ? draft.sources : {};
   const named = Object.fromEntries(
@@ -30,12 +31,15 @@ export function DraftProvenance({ path, before }: DraftProvenanceProps) {
   const isInvented = draft.invented === true;
   const was = node && isDraftChanged(node) && isDraftGroup(node.was) ? node.was : null;
   const isAsked = was !== null && (node?.source === "" || node?.basis === "");
+  const isMissing = (field: string) =>
+    issues.some(({ code, path: at }) => code === "record-figure-without-source" && isSamePath(at, [...path, field]));
   return (
     <div className="draft-provenance">
       <DraftChoice
         path={[...path, "source"]}
         label={recordWords.sourceField}
         prompt={recordWords.sourcePrompt}
+        fault={isMissing("source") ? recordWords.sourceMissing : undefined}
         choices={Object.keys(named).map((value) => ({
           value,
           label: `${sourceShort({ sources: named }, value) || value} [${sourceNumber({ sources: named }, value)}]`,
@@ -45,6 +49,7 @@ export function DraftProvenance({ path, before }: DraftProvenanceProps) {
         path={[...path, "basis"]}
         label={recordWords.basisField}
         prompt={recordWords.basisPrompt}
+        fault={isMissing("basis") ? recordWords.basisMissing : undefined}
         choices={BASES.filter((each) => isInvented || each !== "invented").map((value) => ({
           value,
           label: recordWords.bases[value],

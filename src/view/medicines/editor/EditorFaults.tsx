@@ -6,18 +6,11 @@ import { placeOf } from "./draftContext.ts";
 
 export interface EditorFaultsProps {
   readonly issues: readonly Issue[];
-  readonly isClean: boolean;
 }
 
 /** Everything in the way of saving, each with the way to its field. */
-export function EditorFaults({ issues, isClean }: EditorFaultsProps) {
-  if (issues.length === 0) {
-    return (
-      <p className="editor-state" role="status">
-        {isClean ? recordWords.clean : recordWords.ready}
-      </p>
-    );
-  }
+export function EditorFaults({ issues }: EditorFaultsProps) {
+  if (issues.length === 0) return null;
   return (
     <Notice gravity="check" title={recordWords.inTheWay(issues.length)}>
       <ul className="editor-faults">
@@ -34,15 +27,25 @@ export function EditorFaults({ issues, isClean }: EditorFaultsProps) {
   );
 }
 
-/** Opens what is folded over the field, or the nearest that stands for it, and puts the focus into it. */
+/** Opens the fold the field lies under and puts the focus into it, or into the nearest that stands for it. */
 function goTo(path: Issue["path"]): void {
+  const fold = [...document.querySelectorAll<HTMLDetailsElement>("details[data-roots]")].find((each) =>
+    each.dataset.roots?.split(" ").includes(String(path[0])),
+  );
+  if (fold) fold.open = true;
+  // The fields of a fold are made once it says that it is open, which is after this turn.
+  setTimeout(() => focusOn(path, fold), FOLD_OPENS_MS);
+}
+
+const FOLD_OPENS_MS = 60;
+
+function focusOn(path: Issue["path"], fold: HTMLElement | undefined): void {
   for (let length = path.length; length > 0; length -= 1) {
     const place = document.querySelector<HTMLElement>(`[data-place="${CSS.escape(placeOf(path.slice(0, length)))}"]`);
     if (!place) continue;
-    for (let fold = place.closest("details"); fold; fold = fold.parentElement?.closest("details") ?? null)
-      fold.open = true;
     place.scrollIntoView({ block: "center" });
     place.querySelector<HTMLElement>("input, select, textarea, button")?.focus();
     return;
   }
+  fold?.querySelector("summary")?.focus();
 }

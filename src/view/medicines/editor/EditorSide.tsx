@@ -1,5 +1,5 @@
-import { useState } from "react";
-import { recordProfile } from "../../../core/analysis/index.ts";
+import { type ReactNode, useRef, useState } from "react";
+import { type RecordProfile, recordProfile } from "../../../core/analysis/index.ts";
 import {
   DISPLAY_UNITS,
   draftAt,
@@ -17,17 +17,26 @@ import { ReferenceFields } from "../trial/ReferenceFields.tsx";
 import { type ReferenceDraft, referenceDraftRead } from "../trial/referenceDraft.ts";
 import { TrialCurve } from "../trial/TrialCurve.tsx";
 import { TrialReadings } from "../trial/TrialReadings.tsx";
-import { trialUnit } from "../trial/trialUnit.ts";
+import { type TrialUnit, trialUnit } from "../trial/trialUnit.ts";
 
 export interface EditorSideProps {
   readonly draft: RecordDraft;
   readonly base: MedicineRecord;
   readonly reference: ReferenceDraft;
   readonly onReference: (draft: ReferenceDraft) => void;
+  /** Under the curve: what stands in the way of saving. */
+  readonly children: ReactNode;
+}
+
+interface Shown {
+  readonly profile: RecordProfile;
+  readonly unit: TrialUnit;
+  readonly doseMg: number;
+  readonly intervalH: number;
 }
 
 /** The typical curve and readings of the draft as it stands, for a patient, a dose and an interval of the editor's choice. */
-export function EditorSide({ draft, base, reference, onReference }: EditorSideProps) {
+export function EditorSide({ draft, base, reference, onReference, children }: EditorSideProps) {
   const patient = referenceDraftRead(reference);
   const products = productsOf(draft);
   const [chosen, setChosen] = useState<string | null>(null);
@@ -45,6 +54,19 @@ export function EditorSide({ draft, base, reference, onReference }: EditorSidePr
     preview.ok && product && doseMg !== null && intervalH !== null
       ? recordProfile(preview.value, patient, { product: product.id, doseMg, intervalH })
       : null;
+  const made: Shown | null =
+    profile?.ok && preview.ok && doseMg !== null && intervalH !== null
+      ? {
+          profile: profile.value,
+          unit: trialUnit({ ...preview.value, displayUnit: displayUnitOf(draft, base) }),
+          doseMg,
+          intervalH,
+        }
+      : null;
+  // What can't be worked out now leaves the last that could in sight, marked.
+  const last = useRef<Shown | null>(null);
+  if (made) last.current = made;
+  const shown = made ?? last.current;
   const told = preview.ok ? (profile && !profile.ok ? profile.issues : []) : preview.issues;
   const name = draftTyped(draft.name) || base.name;
   return (
@@ -52,27 +74,29 @@ export function EditorSide({ draft, base, reference, onReference }: EditorSidePr
       <section>
         <h3>{recordWords.typicalCurve}</h3>
         <p className="trial-help">{recordWords.typicalNote}</p>
-        {profile?.ok && preview.ok ? (
-          <>
-            <TrialCurve
-              profiles={[{ id: "draft", name: "", profile: profile.value }]}
-              unit={trialUnit({ ...preview.value, displayUnit: displayUnitOf(draft, base) })}
-              title={recordWords.chartTitle(name, `${doseMg} mg`, `${intervalH} h`)}
-            />
-            <TrialReadings
-              profiles={[{ id: "draft", name: recordWords.valueColumn, profile: profile.value }]}
-              unit={trialUnit({ ...preview.value, displayUnit: displayUnitOf(draft, base) })}
-            />
-          </>
-        ) : (
+        {told.length > 0 ? (
           <div className="trial-none" role="status">
-            <p>{recordWords.noCurve}</p>
+            <p>{shown ? recordWords.curveOld : recordWords.noCurve}</p>
             {[...new Set(told.map(issueMessage))].map((sentence) => (
               <p key={sentence}>{sentence}</p>
             ))}
           </div>
-        )}
+        ) : null}
+        {shown ? (
+          <div className={made ? undefined : "editor-side-old"}>
+            <TrialCurve
+              profiles={[{ id: "draft", name: "", profile: shown.profile }]}
+              unit={shown.unit}
+              title={recordWords.chartTitle(name, `${shown.doseMg} mg`, `${shown.intervalH} h`)}
+            />
+            <TrialReadings
+              profiles={[{ id: "draft", name: recordWords.valueColumn, profile: shown.profile }]}
+              unit={shown.unit}
+            />
+          </div>
+        ) : null}
       </section>
+      {children}
       <CourseFields
         draft={course}
         onChange={setCourse}

@@ -8,7 +8,12 @@ import { DraftText } from "./DraftText.tsx";
 
 export function IdentitySection() {
   return (
-    <DraftSection id="identity" heading={recordWords.section.identity} isOpen>
+    <DraftSection
+      id="identity"
+      heading={recordWords.section.identity}
+      roots={["name", "matrix", "displayUnit", "molarMass"]}
+      isOpen
+    >
       <DraftText path={["name"]} label={recordWords.name} description={recordWords.nameHelp} maxLength={80} />
       <div className="draft-pair">
         <DraftText path={["matrix"]} label={recordWords.matrix} />

@@ -16,7 +16,11 @@ export function InteractionsSection() {
   const { groupAt, change } = useDraft();
   const autoinduction = groupAt(["autoinduction"]);
   return (
-    <DraftSection id="interactions" heading={recordWords.section.interactions}>
+    <DraftSection
+      id="interactions"
+      heading={recordWords.section.interactions}
+      roots={["interactions", "autoinduction"]}
+    >
       <DraftList path={["interactions"]} entry={recordWords.interaction} entryNew={interactionNew}>
         {(path) => (
           <>

@@ -30,7 +30,7 @@ export function KineticsSection({ covariates }: { readonly covariates: Covariate
   const kinetics = groupAt(["kinetics"]) ?? {};
   const kind = KINDS.find((each) => each === kinetics.kind) ?? null;
   return (
-    <DraftSection id="kinetics" heading={recordWords.section.kinetics} isOpen>
+    <DraftSection id="kinetics" heading={recordWords.section.kinetics} roots={["kinetics", "estimates"]} isOpen>
       <div className="draft-pair">
         <ChoiceField
           label={recordWords.kind}

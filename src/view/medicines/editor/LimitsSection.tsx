@@ -6,7 +6,7 @@ import { DraftStatement, statementNew } from "./DraftStatement.tsx";
 
 export function LimitsSection() {
   return (
-    <DraftSection id="limits" heading={recordWords.section.limits}>
+    <DraftSection id="limits" heading={recordWords.section.limits} roots={["limits", "doseLimits"]}>
       <DraftFigure
         path={["limits", "maximumSingleDose"]}
         label={recordWords.maximumSingleDose}

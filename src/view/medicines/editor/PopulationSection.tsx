@@ -14,7 +14,7 @@ import { placeOf, useDraft } from "./draftContext.ts";
 export function PopulationSection() {
   const { groupAt, change } = useDraft();
   return (
-    <DraftSection id="population" heading={recordWords.section.population}>
+    <DraftSection id="population" heading={recordWords.section.population} roots={["population"]}>
       <DraftStatement path={["population"]} label={recordWords.populationText} />
       <DraftText path={["population", "setting"]} label={recordWords.setting} />
       <DraftFigure path={["population", "number"]} label={recordWords.patients} units={["1"]} isOptional />

@@ -10,7 +10,7 @@ import { ProductFields } from "./ProductFields.tsx";
 export function ProductsSection() {
   const { groupAt } = useDraft();
   return (
-    <DraftSection id="products" heading={recordWords.section.products} isOpen>
+    <DraftSection id="products" heading={recordWords.section.products} roots={["products"]}>
       <DraftList path={["products"]} entry={recordWords.product1} entryNew={productNew}>
         {(path, index) => (
           <>

@@ -73,6 +73,21 @@ export function RecordEditor(props: RecordEditorProps) {
           <p className="record-page-state">
             {recordWords.editorAbout(record.recordVersion + 1)} {recordWords.frozen}
           </p>
+          {edit.recordVersion === record.recordVersion ? null : (
+            <Notice gravity="check">
+              <p>{recordWords.overtaken(record.recordVersion, edit.recordVersion)}</p>
+            </Notice>
+          )}
+          {isReviewLost ? <p className="editor-state">{recordWords.reviewGone}</p> : null}
+          {faults.length > 0 ? (
+            <Notice gravity="stop" title={recordWords.notSavedTitle} onDismiss={() => setFaults([])} isAnnounced>
+              {faults.map((each, index) => (
+                <p key={index}>{issueMessage(each)}</p>
+              ))}
+            </Notice>
+          ) : null}
+        </header>
+        <div className="editor-bar">
           <div className="editor-actions">
             <Button kind="main" isDisabled={!read.ok || isClean} onPress={() => void save()}>
               {recordWords.save(record.recordVersion + 1)}
@@ -90,21 +105,10 @@ export function RecordEditor(props: RecordEditorProps) {
               </Button>
             )}
           </div>
-          {edit.recordVersion === record.recordVersion ? null : (
-            <Notice gravity="check">
-              <p>{recordWords.overtaken(record.recordVersion, edit.recordVersion)}</p>
-            </Notice>
-          )}
-          {isReviewLost ? <p className="editor-state">{recordWords.reviewGone}</p> : null}
-          {faults.length > 0 ? (
-            <Notice gravity="stop" title={recordWords.notSavedTitle} onDismiss={() => setFaults([])} isAnnounced>
-              {faults.map((each, index) => (
-                <p key={index}>{issueMessage(each)}</p>
-              ))}
-            </Notice>
-          ) : null}
-          <EditorFaults issues={issues} isClean={isClean} />
-        </header>
+          <p className="editor-state" role="status">
+            {issues.length > 0 ? recordWords.inTheWay(issues.length) : isClean ? recordWords.clean : recordWords.ready}
+          </p>
+        </div>
         <div className="editor-form">
           <IdentitySection />
           <KineticsSection covariates={referenceCovariates(referenceDraftRead(reference))} />
@@ -119,7 +123,9 @@ export function RecordEditor(props: RecordEditorProps) {
           <SourcesSection />
           <ReviewSection />
         </div>
-        <EditorSide draft={draft} base={record} reference={reference} onReference={onReference} />
+        <EditorSide draft={draft} base={record} reference={reference} onReference={onReference}>
+          <EditorFaults issues={issues} />
+        </EditorSide>
       </div>
       <Dialog title={recordWords.giveUpTitle} isOpen={isGivingUp} onClose={() => setGivingUp(false)} isAlert>
         <p>{recordWords.giveUpText(record.name, record.recordVersion)}</p>

@@ -10,7 +10,7 @@ export function ReviewSection() {
   const { nodeAt } = useDraft();
   const isReviewed = nodeAt(["review", "status"]) === "reviewed";
   return (
-    <DraftSection id="review" heading={recordWords.section.review}>
+    <DraftSection id="review" heading={recordWords.section.review} roots={["review"]}>
       <DraftChoice
         path={["review", "status"]}
         label={recordWords.reviewStatus}

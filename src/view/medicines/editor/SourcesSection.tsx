@@ -12,7 +12,7 @@ export function SourcesSection() {
   const { sources: _, ...rest } = draft;
   const used = sourcesUsed(rest);
   return (
-    <DraftSection id="sources" heading={recordWords.section.sources} isOpen>
+    <DraftSection id="sources" heading={recordWords.section.sources} roots={["sources"]}>
       {ids.map((id, index) => (
         <div key={id} className="draft-entry" data-place={placeOf(["sources", id])}>
           <h4>{recordWords.partOf(recordWords.source1, index + 1)}</h4>

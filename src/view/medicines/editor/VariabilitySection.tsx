@@ -18,7 +18,7 @@ export function VariabilitySection() {
   const choices = VARIED.map((value) => ({ value, label: figureName(value) }));
   const correlations = nodeAt(["variability", "correlations"]);
   return (
-    <DraftSection id="variability" heading={recordWords.section.variability}>
+    <DraftSection id="variability" heading={recordWords.section.variability} roots={["variability"]}>
       {names.map((name) => (
         <DraftFigure
           key={name}

@@ -23,7 +23,7 @@ const ABOUT = ["lowest-and-highest", "trough", "peak", "average", "auc24"] as co
 
 export function WindowsSection() {
   return (
-    <DraftSection id="windows" heading={recordWords.section.windows}>
+    <DraftSection id="windows" heading={recordWords.section.windows} roots={["windows", "toxicFrom"]}>
       <DraftList path={["windows"]} entry={recordWords.window1} entryNew={windowNew}>
         {(path) => <WindowFields path={path} />}
       </DraftList>
