@@ -1,14 +1,14 @@
 import { type KeyboardEvent, type PointerEvent, useId, useMemo, useState } from "react";
-import type { Analysis, LevelResult } from "../../core/analysis/index.ts";
+import { type Analysis, concentrationWindow, type LevelResult } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { fitWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
 import { optionStyle, ProfileChart } from "../chart/ProfileChart.tsx";
+import { profileParts } from "../chart/profileParts.ts";
 import { type ProfileScene, profileScene } from "../chart/profileScene.ts";
 import type { BenchSpan } from "./benchSpan.ts";
 import { ProfileReadout } from "./ProfileReadout.tsx";
-import { profileParts } from "./profileInput.ts";
 import { curveAt, levelLines, levelNear, readoutLines } from "./readoutLines.ts";
 import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 import "./ProfileRow.css";
@@ -150,10 +150,8 @@ function profileTitle(value: Case, analysis: Analysis, unit: ShownUnit): string 
   const factor = unitFactor(value, unit);
   const three = (mgPerL: number) => numberPrint(mgPerL * factor, { significant: 3 });
   const shown = unitSpoken(unit, "screen");
-  const window =
-    value.window?.low.unit === "mg/L"
-      ? `target window ${three(value.window.low.value)} to ${three(value.window.high.value)} ${shown}, `
-      : "";
+  const limits = concentrationWindow(value);
+  const window = limits ? `target window ${three(limits.low)} to ${three(limits.high)} ${shown}, ` : "";
   const options = analysis.options
     .flatMap((option) => {
       const settled = option.typical?.steadyState;

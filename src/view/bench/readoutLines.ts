@@ -8,7 +8,7 @@ import {
 import type { Case } from "../../core/case/index.ts";
 import { fitWords } from "../../core/messages/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
-import { bandAt, bandOf } from "./bandAt.ts";
+import { bandAt, bandOf } from "../chart/bandAt.ts";
 import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 
 /** Which curves exist at an instant: the doses given up to the now line, the options from it on. */

@@ -1,9 +1,9 @@
 import { describe, expect, it } from "vitest";
 import { derive } from "../../../src/core/analysis/index.ts";
-import { bandAt } from "../../../src/view/bench/bandAt.ts";
-import { profileParts } from "../../../src/view/bench/profileInput.ts";
 import { readingsGroups } from "../../../src/view/bench/readingsRows.ts";
 import { levelLines, levelNear, readoutLines } from "../../../src/view/bench/readoutLines.ts";
+import { bandAt } from "../../../src/view/chart/bandAt.ts";
+import { profileParts } from "../../../src/view/chart/profileParts.ts";
 import { caseFixture } from "../../core/analysis/caseFixture.ts";
 import { fittedAnalysis, spread } from "../../core/analysis/fitFixture.ts";
 

@@ -1,24 +1,23 @@
-import type { Analysis, Band } from "../../core/analysis/index.ts";
+import { type Analysis, type Band, concentrationWindow } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
-import type { ProfileBandInput } from "../chart/profileBand.ts";
-import type { ProfileCurveInput, ProfileInput, ProfileLevelInput } from "../chart/profileScene.ts";
 import { bandOf } from "./bandAt.ts";
+import type { ProfileBandInput } from "./profileBand.ts";
+import type { ProfileCurveInput, ProfileInput, ProfileLevelInput } from "./profileScene.ts";
 
-/** The curves, bands and levels of the bench's profile. `lit`: the option whose band is filled; the others are lines. */
+/** The curves, bands and levels of a profile. `lit`: the option whose band is filled; the others are lines. */
 export function profileParts(
   value: Case,
   analysis: Analysis,
   factor: number,
   lit: string | null,
 ): Pick<ProfileInput, "curves" | "bands" | "levels" | "window"> {
-  const { window } = value;
   const ways = [
     { id: "given", name: "", curve: analysis.givenCurve, band: bandOf(analysis, null) },
     ...analysis.options.map(({ id, curve, band }) => ({ id, name: id, curve, band })),
   ];
   return {
-    window: window?.low.unit === "mg/L" ? { low: window.low.value, high: window.high.value } : null,
+    window: concentrationWindow(value),
     curves: ways.flatMap(({ id, name, curve, band }) => curvesOf(id, name, curve, band, id === "given" || id === lit)),
     bands: ways.flatMap(({ id, band }) => bandsOf(id, band, id === "given" || id === lit)),
     levels: analysis.levels.map((level): ProfileLevelInput => {
