@@ -40,7 +40,7 @@ function recomputeOutput(value: Case, analysis: Analysis) {
       ),
       changes: analysis.typical.dispositions.slice(1).map((each) => at(each.from)),
     },
-    thisPatient: recomputeFit(analysis.fit),
+    thisPatient: recomputeFit(analysis.fit, value.fit.use),
     span: { from: at(analysis.clock.nowH), to: at(analysis.clock.readingsToH) },
     patient: Object.fromEntries(
       (["weight", "creatinine", "idealWeight", "adjustedWeight", "bodyMassIndex", "creatinineClearance"] as const).map(
@@ -110,6 +110,11 @@ function figures(readings: OptionReadings | null, model: Model | null, at: (hour
           timeTo90: quantity(steadyState.timeTo90H, "h"),
           steady90From: at(steadyState.steady90AtH),
           slower: steadyState.slower,
+          timed: steadyState.timed && {
+            afterDose: quantity(steadyState.timed.afterDoseH, "h"),
+            lowest: quantity(steadyState.timed.lowest, "mg/L"),
+            highest: quantity(steadyState.timed.highest, "mg/L"),
+          },
         }
       : { none: readings.noSteadyState },
   };

@@ -1,4 +1,5 @@
 import type { Analysis, FitState, IndividualReadings, LevelFit, Spread } from "../core/analysis/index.ts";
+import type { Case } from "../core/case/index.ts";
 import type { UnitCode } from "../core/units/index.ts";
 
 /** What the levels make of this patient, as `recompute` prints it: every figure as median with its 50 % and 90 % interval. */
@@ -11,12 +12,14 @@ function maybe(spread: Spread | null, unit: UnitCode) {
   return spread && interval(spread, unit);
 }
 
-export function recomputeFit(state: FitState): unknown {
-  if (state.kind === "none") return { none: state.reason };
-  if (state.kind === "withheld") return { withheld: state.reason, ...state.data };
-  if (state.kind === "pending") return { none: "pending" };
+/** `use`: what the case orders by, whether or not there is a fit. */
+export function recomputeFit(state: FitState, use: Case["fit"]["use"]): unknown {
+  if (state.kind === "none") return { use, none: state.reason };
+  if (state.kind === "withheld") return { use, withheld: state.reason, ...state.data };
+  if (state.kind === "pending") throw new RangeError("state: pending; recompute asks for the fit");
   const { fit } = state;
   return {
+    use,
     method: fit.method,
     residualModel: fit.residualModel,
     seed: fit.seed,
@@ -33,6 +36,7 @@ export function recomputeFit(state: FitState): unknown {
         parameter.symbol,
         {
           typical: parameter.typical,
+          omega: parameter.omega,
           mostLikely: parameter.mostLikely,
           eta: parameter.eta,
           mean: parameter.posteriorMean,
@@ -42,10 +46,12 @@ export function recomputeFit(state: FitState): unknown {
         },
       ]),
     ),
-    halfLife: fit.halfLife && interval(fit.halfLife.posterior, "h"),
+    halfLife: fit.halfLife && { typical: fit.halfLife.typical, ...interval(fit.halfLife.posterior, "h") },
     flipFlop: fit.flipFlop && {
       shareSlowAbsorption: fit.flipFlop.shareSlowAbsorption,
       isAmbiguous: fit.flipFlop.isAmbiguous,
+      fastAbsorption: fit.flipFlop.fastAbsorption,
+      slowAbsorption: fit.flipFlop.slowAbsorption,
     },
   };
 }
@@ -56,6 +62,7 @@ export function recomputeIndividual(readings: IndividualReadings | null, fit: An
   const figure = (symbol: string) => fit.fit.parameters.find((parameter) => parameter.symbol === symbol);
   const clearance = figure("CL");
   const volume = figure("V") ?? figure("V1");
+  const timed = steadyState?.timed ?? null;
   return {
     peak: interval(span.peak, "mg/L"),
     trough: interval(span.lowest, "mg/L"),
@@ -78,6 +85,11 @@ export function recomputeIndividual(readings: IndividualReadings | null, fit: An
       swing: interval(steadyState.swing, "1"),
       fluctuation: interval(steadyState.fluctuation, "1"),
       timeTo90: interval(steadyState.timeTo90H, "h"),
+      timed: timed && {
+        afterDose: { value: timed.afterDoseH, unit: "h" },
+        lowest: interval(timed.lowest, "mg/L"),
+        highest: interval(timed.highest, "mg/L"),
+      },
       chance: steadyState.chance,
     },
     shareNeverSteady: readings.shareNeverSteady,
@@ -90,6 +102,11 @@ export function recomputeLevelFit(fit: LevelFit | null): unknown {
       predicted: interval(fit.predicted, "mg/L"),
       predictive: interval(fit.predictive, "mg/L"),
       standardised: fit.standardised,
+      priorPredictive: {
+        median: fit.priorPredictive.median,
+        interval95: [fit.priorPredictive.low, fit.priorPredictive.high],
+        unit: "mg/L",
+      },
       isOutsidePrior: fit.isOutsidePrior,
       influence: fit.influence && Object.fromEntries(fit.influence.map(({ symbol, ratio }) => [symbol, ratio])),
       forecast: fit.forecast && {

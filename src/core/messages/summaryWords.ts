@@ -7,12 +7,15 @@ export const SUMMARY_TITLES = {
   expectedSteady: "Expected at steady state",
   expectedSpan: "Expected over the days shown",
   hours: "Hours in the window",
+  chance: "Chance in the window",
   kinetics: "Kinetic basis",
   levels: "Levels",
   nextLevel: "Next level",
   cautions: "Cautions",
   assumes: "This prediction assumes",
   window: "Target window",
+  individual: "This patient, from the levels",
+  levelsSay: "What each level says",
   figures: "Figures, with formula and source",
   doses: "Doses counted",
   concerns: "Concerns in full",
@@ -27,6 +30,9 @@ export const SUMMARY_COLUMNS = {
   measured: "measured",
   predicted: "predicted",
   difference: "difference",
+  predictedOwn: "predicted (90 %)",
+  residual: "residual",
+  forecast: "forecast before it (90 %)",
   figure: "figure",
   value: "value",
   formula: "formula, and what went in",
@@ -85,7 +91,13 @@ export const summaryHeadWords = {
 export const summaryChartWords = {
   title: (medicine: string) => `${medicine} concentration over time`,
   between: (low: string, high: string) => `predicted between ${low} and ${high} from the now line on`,
+  ownBetween: (low: string, high: string) =>
+    `this patient's median lowest ${low} and highest ${high} from the now line on, with 50 and 90 % bands`,
   levels: (count: number) => `${count} ${plural(count, "level")} measured`,
+  individual: "Thick: this patient, median; greys: 50 and 90 % intervals; dotted: typical patient.",
+  forecast: "Bar left of a level: its 90 % forecast before it was known.",
+  missed: "Dashed bar: did not hold.",
+  leftOut: "Hollow: left out.",
   unit: "mg per L",
   given: "given",
   proposed: "proposed",
@@ -177,6 +189,9 @@ export const summaryReadingWords = {
   lowestAfter: (hours: string) => `Lowest, ${hours} after a dose`,
   highestAt: (when: string) => `Highest, ${when}`,
   lowestAt: (when: string) => `Lowest, ${when}`,
+  timed: (hours: string) => `${capitalised(hours)} after a dose`,
+  timedLowest: (hours: string) => `${capitalised(hours)} after a dose, the lowest`,
+  timedHighest: (hours: string) => `${capitalised(hours)} after a dose, the highest`,
   average: "Average",
   auc24: "AUC in 24 hours",
   accumulation: "Accumulation",
@@ -185,7 +200,6 @@ export const summaryReadingWords = {
   noRepeat: "The option does not repeat, so it has no steady state.",
   neverSteady: "No steady state: more is taken than can be eliminated, and the level rises without end.",
   noCommonPeriod: "The lines have no common period within two weeks, so no steady state is given.",
-  chanceLeftOut: "One prediction: no range and no chance of staying in the window is given.",
   hoursOf: (title: string, low: string, high: string) => `${title} of ${low} to ${high}`,
   below: "below",
   within: "within",
@@ -204,7 +218,6 @@ export const summaryReadingWords = {
 export const summaryLevelWords = {
   none: "No level is recorded.",
   compared: "Compared with the prediction, not used to adjust it.",
-  used: "Used to adjust the prediction.",
   leftOut: (reason: string) => `left out: ${reason}`,
   belowLimit: (limit: string) => `below the limit of ${limit}`,
   asTyped: (typed: string, converted: string) => `${typed} (${converted})`,
@@ -222,6 +235,15 @@ export const summaryNextLevelWords = {
     `${day}, between ${from} and ${to}, before the ${to} dose: the first dose at or after 90 % of steady state (${steady}).`,
   drawAcross: (from: string, to: string, dose: string, steady: string) =>
     `Between ${from} and ${to}, before the ${dose} dose: the first dose at or after 90 % of steady state (${steady}).`,
+  drawTimed: (day: string, from: string, to: string, dose: string, steady: string) =>
+    `${day}, between ${from} and ${to}, after the dose of ${dose}: the first dose at or after 90 % of steady state (${steady}).`,
+  drawTimedAcross: (from: string, to: string, dose: string, steady: string) =>
+    `Between ${from} and ${to}, after the dose of ${dose}: the first dose at or after 90 % of steady state (${steady}).`,
+  longerWait: (own: string, typical: string) =>
+    `This patient may take longer than the typical one (${own} to 90 % of steady state, typical ${typical}): the longer wait is used.`,
+  maybeNever: (share: string) => `With a chance of ${share} a steady state is never reached: do not wait for it alone.`,
+  tooLong: (own: string, typical: string | null) =>
+    `90 % of steady state may take ${own}${typical === null ? "" : ` in this patient, ${typical} in the typical one`}: too long to wait for it.`,
   writeTimes: "Write the time of the last dose and of the sample on the request.",
   noOption: "No option is chosen, so no time can be given.",
   noModel: "There is no prediction, so no time can be given.",
@@ -232,7 +254,32 @@ export const summaryNextLevelWords = {
 
 export const summaryAssumptionWords = {
   typical: (kind: string) => `${kind}, typical patient: levels are compared and not used to adjust`,
-  individual: (kind: string) => `${kind}, adjusted by the levels that were not left out`,
+  individual: (kind: string) => `${kind}, this patient: adjusted by the levels`,
+  levels: (used: string, leftOut: string) =>
+    `levels used: ${used}${leftOut === "" ? "; none left out" : `; left out: ${leftOut}`}`,
+  residuals: { normal: "normal residuals", robust: "robust residuals (Student t, 4 degrees of freedom)" },
+  methods: { importance: "importance sampling", chain: "Markov chain" },
+  method: (found: {
+    readonly residuals: string;
+    readonly method: string;
+    readonly seed: string;
+    readonly draws: string;
+    readonly effective: string;
+    readonly paretoK: string | null;
+    readonly rHat: string | null;
+  }) =>
+    [
+      `${found.residuals}; ${found.method}, seed ${found.seed}, ${found.draws} draws, effective size ${found.effective}`,
+      ...(found.paretoK === null ? [] : [`Pareto k ${found.paretoK} (trusted to 0.7)`]),
+      ...(found.rHat === null ? [] : [`R-hat ${found.rHat}`]),
+    ].join(", "),
+  estimates: {
+    "one-model": "the record's figures were estimated together in one model, where its text does not say otherwise",
+    "pieced-together": "the record's figures were pieced together from different studies, never estimated together",
+  },
+  effect: (detail: string, from: string, clearance: string, volume: string | null, source: string) =>
+    `${detail} from ${from}: clearance ${clearance} % of usual${volume === null ? "" : `, volume ${volume} %`} is in the figures (${source})`,
+  ownFigure: "the user's own figure",
   kinds: {
     "one-compartment": "one-compartment model",
     "two-compartment": "two-compartment model",

@@ -1,8 +1,14 @@
-import { SUMMARY_COLUMNS as columns, summaryHeadWords, SUMMARY_TITLES as titles } from "../../core/messages/index.ts";
+import {
+  SUMMARY_COLUMNS as columns,
+  summaryHeadWords,
+  summaryPatientWords,
+  SUMMARY_TITLES as titles,
+} from "../../core/messages/index.ts";
 import { GravityMark } from "../ui/GravityMark.tsx";
 import { SummaryBlock } from "./SummaryBlock.tsx";
 import { SummaryPaper } from "./SummaryPaper.tsx";
 import { SummaryRows } from "./SummaryRows.tsx";
+import { SummaryTable } from "./SummaryTable.tsx";
 import type { SummaryDetails, SummaryModel } from "./summaryModel.ts";
 
 /** What the first sheet rests on: concerns in full, figures with formula and source, doses, elements, sources. */
@@ -11,7 +17,8 @@ export function SummaryDetailsSheet({ model }: { readonly model: SummaryModel })
   return (
     <SummaryPaper model={model} heading={summaryHeadWords.details(model.heading)} isDetails>
       <Concerns concerns={details.concerns} />
-      <Figures figures={details.figures} />
+      <Individual individual={details.individual} />
+      <Figures figures={details.figures} remark={details.figuresRemark} />
       <Doses doses={details.doses} />
       <SummaryBlock title={titles.elements}>
         <div className="summary-elements">
@@ -55,9 +62,28 @@ function Concerns({ concerns }: Pick<SummaryDetails, "concerns">) {
   );
 }
 
-function Figures({ figures }: Pick<SummaryDetails, "figures">) {
+function Individual({ individual }: Pick<SummaryDetails, "individual">) {
+  if (individual === null) return null;
   return (
-    <SummaryBlock title={titles.figures}>
+    <>
+      <SummaryBlock title={individual.title}>
+        <SummaryTable grid={individual.parameters} first={summaryPatientWords.parameter} />
+        <p className="summary-remark">{[...individual.sentences, individual.method].join(" ")}</p>
+      </SummaryBlock>
+      {individual.levels.length > 0 && (
+        <SummaryBlock title={titles.levelsSay}>
+          <div className="summary-says">
+            <SummaryRows rows={individual.levels} />
+          </div>
+        </SummaryBlock>
+      )}
+    </>
+  );
+}
+
+function Figures({ figures, remark }: { readonly figures: SummaryDetails["figures"]; readonly remark: string }) {
+  return (
+    <SummaryBlock title={titles.figures} {...(remark === "" ? {} : { beside: remark })}>
       <table className="summary-table summary-figures">
         <thead>
           <tr>

@@ -5,6 +5,7 @@ import { SummaryBlock } from "./SummaryBlock.tsx";
 import { SummaryDetailsSheet } from "./SummaryDetailsSheet.tsx";
 import { SummaryPaper } from "./SummaryPaper.tsx";
 import { SummaryRows } from "./SummaryRows.tsx";
+import { SummaryTable } from "./SummaryTable.tsx";
 import type { SummaryModel } from "./summaryModel.ts";
 import "./paper.css";
 import "./print.css";
@@ -36,7 +37,10 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
           <p>{model.statement}</p>
           <p>{model.footer}</p>
         </div>
-        <figure className="summary-chart">{chart}</figure>
+        <figure className="summary-chart">
+          {chart}
+          {model.chart.key !== "" && <figcaption className="summary-remark">{model.chart.key}</figcaption>}
+        </figure>
         <div className="summary-columns">
           <div>
             {model.expected && (
@@ -45,20 +49,27 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
                 <p className="summary-remark">{model.expected.remark}</p>
               </SummaryBlock>
             )}
-            <Levels levels={model.levels} />
+            {model.levels.isIndividual ? <NextLevel nextLevel={model.nextLevel} /> : <Levels levels={model.levels} />}
           </div>
           <div>
-            <SummaryBlock title={model.nextLevel.title}>
-              <p>{model.nextLevel.sentences.join(" ")}</p>
-            </SummaryBlock>
+            {!model.levels.isIndividual && <NextLevel nextLevel={model.nextLevel} />}
             {model.hours && (
               <SummaryBlock title={model.hours.title}>
-                <SummaryRows rows={model.hours.rows} isBeside />
+                {model.hours.columns.length === 0 ? (
+                  <SummaryRows
+                    rows={model.hours.rows.map(({ label, cells }) => ({ label, value: cells.join(", ") }))}
+                    isBeside
+                  />
+                ) : (
+                  <SummaryTable grid={model.hours} first="" />
+                )}
                 <p className="summary-remark">{model.hours.span}</p>
               </SummaryBlock>
             )}
             <SummaryBlock title={model.kinetics.title}>
-              {model.kinetics.rows.length > 0 && <SummaryRows rows={model.kinetics.rows} isBeside />}
+              {model.kinetics.rows.length > 0 && (
+                <SummaryRows rows={model.kinetics.rows} isBeside={!model.levels.isIndividual} />
+              )}
               {model.kinetics.sentences.map((sentence) => (
                 <p key={sentence} className="summary-remark">
                   {sentence}
@@ -67,11 +78,12 @@ export function SummarySheet({ model, chart }: SummarySheetProps) {
             </SummaryBlock>
           </div>
         </div>
+        {model.levels.isIndividual && <Levels levels={model.levels} />}
         <SummaryBlock title={titles.cautions} beside={model.cautionsRemark}>
           <ul className="summary-two summary-fine">
             {model.concerns.map((concern) => (
               <li key={`${concern.title} ${concern.text}`}>
-                <strong>{concern.title}.</strong> {concern.text}
+                <strong>{concern.title}.</strong>
               </li>
             ))}
             {model.cautions.map((text) => (
@@ -128,24 +140,37 @@ function Order({ order }: { readonly order: NonNullable<SummaryModel["order"]> }
   );
 }
 
-function Levels({ levels }: { readonly levels: SummaryModel["levels"] }) {
+function NextLevel({ nextLevel }: Pick<SummaryModel, "nextLevel">) {
+  return (
+    <SummaryBlock title={nextLevel.title}>
+      <p>{nextLevel.sentences.join(" ")}</p>
+    </SummaryBlock>
+  );
+}
+
+function Levels({ levels }: Pick<SummaryModel, "levels">) {
+  const { isIndividual } = levels;
+  const heads = isIndividual
+    ? ["drawn", "afterDose", "measured", "predictedOwn", "difference", "residual", "forecast"]
+    : ["drawn", "afterDose", "measured", "predicted", "difference"];
   return (
     <SummaryBlock title={levels.title} beside={levels.remark}>
       {levels.rows.length > 0 && (
-        <table className="summary-table summary-levels">
+        <table className={`summary-table summary-levels${isIndividual ? " summary-levels-wide" : ""}`}>
           <thead>
             <tr>
-              <th scope="col">{columns.drawn}</th>
-              <th scope="col">{columns.afterDose}</th>
-              <th scope="col">{columns.measured}</th>
-              <th scope="col">{columns.predicted}</th>
-              <th scope="col">{columns.difference}</th>
+              {heads.map((head) => (
+                <th key={head} scope="col">
+                  {columns[head as keyof typeof columns]}
+                </th>
+              ))}
             </tr>
           </thead>
           <tbody>
             {levels.rows.map((row, index) => (
               <tr key={index}>
                 <th scope="row">
+                  {isIndividual && <LevelSign isLeftOut={row.isLeftOut} />}
                   {row.drawn}
                   {row.remark !== "" && <span className="summary-left-out">{row.remark}</span>}
                 </th>
@@ -153,11 +178,22 @@ function Levels({ levels }: { readonly levels: SummaryModel["levels"] }) {
                 <td>{row.measured}</td>
                 <td>{row.predicted}</td>
                 <td>{row.difference}</td>
+                {isIndividual && <td>{row.residual}</td>}
+                {isIndividual && <td>{row.forecast}</td>}
               </tr>
             ))}
           </tbody>
         </table>
       )}
     </SummaryBlock>
+  );
+}
+
+/** The mark the level has on the profile. */
+function LevelSign({ isLeftOut }: { readonly isLeftOut: boolean }) {
+  return (
+    <svg className="summary-level-sign" viewBox="-7 -7 14 14" aria-hidden="true" focusable="false">
+      {isLeftOut ? <circle r="5.5" /> : <path d="M-6 0h12M0 -6v12" />}
+    </svg>
   );
 }

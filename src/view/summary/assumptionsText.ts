@@ -1,4 +1,4 @@
-import type { DoseMark } from "../../core/analysis/index.ts";
+import type { DoseMark, IndividualFit } from "../../core/analysis/index.ts";
 import { type MedicineRecord, unverifiedFigures } from "../../core/medicine/index.ts";
 import {
   listWords,
@@ -8,7 +8,8 @@ import {
   summaryAssumptionWords as words,
 } from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
-import { shownModel } from "./kineticsText.ts";
+import { numberPrint } from "../../core/units/index.ts";
+import { shownPatient } from "./shownPatient.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
@@ -17,12 +18,12 @@ const NAMED_DOSES = 4;
 
 export function assumptionsText(input: SummaryInput, print: SummaryPrint): readonly string[] {
   const { medicine } = input.case;
-  const model = shownModel(input)?.model;
+  const model = input.analysis.typical;
   const kind = words.kinds[model?.kind ?? "one-compartment"];
   const changes = model?.dispositions.slice(1) ?? [];
   const { crossCheck } = input.analysis;
   return [
-    words.typical(kind),
+    ...patientAssumptions(input, kind, print),
     ...(changes.length > 0
       ? [words.changes(changes.length, print.at(print.ms(changes.at(-1)!.from), "dayClock"))]
       : []),
@@ -32,10 +33,57 @@ export function assumptionsText(input: SummaryInput, print: SummaryPrint): reado
         ? words.crossCheck.agreed
         : words.crossCheck.differs,
     words.record(medicine.name, medicine.recordVersion, reviewWords(medicine), unverifiedWords(medicine)),
+    words.estimates[medicine.estimates.from],
+    ...effectAssumptions(input, print),
     doseAssumption(input.analysis.given, print),
     words.kidney(kidneyWords(input, print)),
     words.now(print.at(instantMs(input.case.now), "full"), input.case.timeZone),
   ];
+}
+
+/** Whom the figures are of; for this patient how they were found and from which levels. */
+function patientAssumptions(input: SummaryInput, kind: string, print: SummaryPrint): readonly string[] {
+  const patient = shownPatient(input);
+  if (patient.kind === "typical") return [words.typical(kind)];
+  const { fit } = patient;
+  const times = (ids: readonly string[]) =>
+    listWords(
+      input.analysis.levels.filter(({ id }) => ids.includes(id)).map(({ atH }) => print.at(print.ms(atH), "dayClock")),
+    );
+  return [words.individual(kind), words.levels(times(fit.levelsUsed), times(fit.levelsLeftOut)), fitMethodWords(fit)];
+}
+
+/** "normal residuals; importance sampling, seed 1, 2,048 draws, effective size 1,728, Pareto k 0.12 (trusted to 0.7)" */
+export function fitMethodWords(fit: IndividualFit): string {
+  const { residualModel, method, seed, draws, effectiveSize, paretoK, rHat } = fit;
+  const two = (value: number) => numberPrint(value, { decimals: 2 });
+  return words.method({
+    residuals: words.residuals[residualModel],
+    method: words.methods[method],
+    seed: String(seed),
+    draws: numberPrint(draws),
+    effective: numberPrint(effectiveSize, { decimals: 0 }),
+    paretoK: paretoK === null ? null : two(paretoK),
+    rHat: rHat === null ? null : two(rHat),
+  });
+}
+
+/** What events do to the kinetics, with where each factor came from: it is in every figure. */
+function effectAssumptions({ case: { patient } }: SummaryInput, print: SummaryPrint): readonly string[] {
+  const percent = (share: number) => numberPrint(share * 100, { significant: 3 });
+  return patient.factors.flatMap(({ effect, detail, from }) =>
+    effect === undefined
+      ? []
+      : [
+          words.effect(
+            detail,
+            print.at(instantMs(from), "dayClock"),
+            percent(effect.clearance),
+            effect.volume === undefined ? null : percent(effect.volume),
+            effect.source ?? words.ownFigure,
+          ),
+        ],
+  );
 }
 
 function reviewWords({ review }: MedicineRecord): string {

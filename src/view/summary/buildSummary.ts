@@ -5,6 +5,7 @@ import {
   SUMMARY_STATEMENT,
   SUMMARY_TITLES,
   summaryChartWords,
+  summaryPatientWords,
   WATERMARK,
   summaryHeadWords as words,
 } from "../../core/messages/index.ts";
@@ -12,27 +13,36 @@ import { unitSpoken } from "../../core/units/index.ts";
 import { assumptionsText } from "./assumptionsText.ts";
 import { type Citations, citations, isUnverified } from "./citations.ts";
 import { dosesText } from "./dosesText.ts";
-import { expectedText, hoursText } from "./expectedText.ts";
+import { expectedText } from "./expectedText.ts";
 import { figuresText } from "./figuresText.ts";
+import { individualText } from "./individualText.ts";
 import { kineticsText } from "./kineticsText.ts";
 import { levelsText } from "./levelsText.ts";
 import { nextLevelText } from "./nextLevelText.ts";
 import { noteElements } from "./noteElements.ts";
 import { printRefusal } from "./printRefusal.ts";
+import { shownPatient } from "./shownPatient.ts";
 import { shownReadings } from "./shownReadings.ts";
 import { concernsOfOption, concernText, summaryBanners } from "./summaryBanners.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryChart, SummaryDetails, SummaryModel } from "./summaryModel.ts";
 import { summaryOrder } from "./summaryOrder.ts";
 import { type SummaryPrint, summaryPrint } from "./summaryPrint.ts";
+import { windowText } from "./windowText.ts";
 
 /** How the figures of a case file are worked out again without a browser. */
 const RECOMPUTE_COMMAND = "npm run -s recompute -- FILE";
 /** Digits of the fingerprint on the first sheet; the details have all 64. */
 const FINGERPRINT_SHORT = 12;
 
-/** Concerns whose sentence the first sheet has already: in a banner, under the levels and among the assumptions. */
-const SAID_ELSEWHERE: readonly string[] = ["dose-not-makeable", "levels-not-used"];
+/** Concerns whose sentence the first sheet has already: in a banner, under the readings and levels, and among the assumptions. */
+const SAID_ELSEWHERE: readonly string[] = [
+  "dose-not-makeable",
+  "levels-not-used",
+  "levels-all-left-out",
+  "fit-set-aside",
+  "figures-pieced-together",
+];
 
 /** The printed summary as strings: pure, so that what is printed can be read and searched without a page. */
 export function buildSummary(input: SummaryInput): SummaryModel {
@@ -65,7 +75,7 @@ export function buildSummary(input: SummaryInput): SummaryModel {
     order: order?.order ?? null,
     chart: chartWords(input, print),
     expected: expectedText(input, print),
-    hours: hoursText(input, print),
+    hours: windowText(input, print),
     kinetics: kineticsText(input, print),
     levels: levelsText(input, print),
     nextLevel: nextLevelText(input, print),
@@ -86,7 +96,9 @@ function details(input: SummaryInput, cite: Citations, print: SummaryPrint): Sum
   const { notes } = input.case;
   return {
     concerns: input.analysis.concerns.map(concernText),
+    individual: individualText(input, print),
     figures: figuresText(input, cite, print),
+    figuresRemark: shownPatient(input).kind === "individual" ? summaryPatientWords.figuresRemark : "",
     doses: dosesText(input, print),
     elements: noteElements(input, print),
     notes: notes.trim(),
@@ -109,12 +121,16 @@ function personWords({ case: { patient }, analysis }: SummaryInput, print: Summa
 
 function chartWords(input: SummaryInput, print: SummaryPrint): SummaryChart {
   const { case: value, analysis } = input;
-  const readings = shownReadings(input)?.readings;
+  const patient = shownPatient(input);
+  const span = shownReadings(input)?.readings.span;
+  const own = patient.kind === "individual" ? patient.readings?.span : undefined;
   const said = [
     summaryChartWords.title(capitalised(value.medicine.name)),
-    ...(readings
-      ? [summaryChartWords.between(print.concentration(readings.span.lowest), print.concentration(readings.span.peak))]
-      : []),
+    ...(own
+      ? [summaryChartWords.ownBetween(print.concentration(own.lowest.q50), print.concentration(own.peak.q50))]
+      : span
+        ? [summaryChartWords.between(print.concentration(span.lowest), print.concentration(span.peak))]
+        : []),
     ...(value.levels.length > 0 ? [summaryChartWords.levels(value.levels.length)] : []),
   ];
   const shownUnit = concentrationUnit(value.medicine);
@@ -122,6 +138,7 @@ function chartWords(input: SummaryInput, print: SummaryPrint): SummaryChart {
   return {
     title: said.join("; "),
     unit: unitSpoken(shownUnit, "print", input.settings.microgram),
+    key: keyWords(input, patient.kind === "individual"),
     before: summaryChartWords.given,
     after: summaryChartWords.proposed,
     days: analysis.clock.midnightsH
@@ -129,6 +146,19 @@ function chartWords(input: SummaryInput, print: SummaryPrint): SummaryChart {
       .map((atH) => ({ atH, text: print.at(print.ms(atH), "day") })),
     levels: analysis.levels.map((level) => ({ id: level.id, text: print.figure(level.measured * shownFactor) })),
   };
+}
+
+/** What the lines of the profile are, where there is more than one. */
+function keyWords({ analysis }: SummaryInput, isIndividual: boolean): string {
+  if (!isIndividual) return "";
+  const { forecast, missed, leftOut } = summaryChartWords;
+  const forecasts = analysis.levels.flatMap(({ fit }) => (fit?.forecast ? [fit.forecast] : []));
+  return [
+    summaryChartWords.individual,
+    ...(forecasts.length > 0 ? [forecast] : []),
+    ...(forecasts.some(({ held }) => !held) ? [missed] : []),
+    ...(analysis.levels.some(({ excluded }) => excluded !== null) ? [leftOut] : []),
+  ].join(" ");
 }
 
 /** "7f3a 91c2 4e0d": in groups of four, to be read aloud and compared. */

@@ -1,51 +1,134 @@
-import type { DoseMark, OptionReadings } from "../../core/analysis/index.ts";
+import type { DoseMark, IndividualReadings, OptionReadings } from "../../core/analysis/index.ts";
 import {
+  chanceWords,
+  fitWords,
+  summaryPatientWords as patientWords,
   SUMMARY_TITLES as titles,
-  windowRemarkWords,
   summaryReadingWords as words,
 } from "../../core/messages/index.ts";
-import { shownReadings } from "./shownReadings.ts";
-import { steadyFromMs } from "./steadyFrom.ts";
+import { shownPatient } from "./shownPatient.ts";
+import { noSteadySentence, shownReadings } from "./shownReadings.ts";
+import { steadyFrom } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryModel, SummaryRow } from "./summaryModel.ts";
+import { chosenOption } from "./summaryOrder.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
+type Steady = NonNullable<OptionReadings["steadyState"]>;
+type OwnSteady = NonNullable<IndividualReadings["steadyState"]>;
+
+/** What the chosen option comes to: at steady state, or over the days shown where there is none; for this patient where the levels say one. */
 export function expectedText(input: SummaryInput, print: SummaryPrint): SummaryModel["expected"] {
+  const patient = shownPatient(input);
+  if (patient.kind === "individual") {
+    return patient.readings && individualText(input, patient.readings, print);
+  }
   const shown = shownReadings(input);
   if (!shown) return null;
-  const { readings, patient } = shown;
-  return readings.steadyState
+  const { steadyState, noSteadyState } = shown.readings;
+  const why = patientWords.whyTypical(patient.reason);
+  return steadyState
     ? {
-        title: words.titled(titles.expectedSteady, patient),
-        rows: steadyRows(readings.steadyState, shown.option.doses, steadyFromMs(input, print), print),
-        remark: words.chanceLeftOut,
+        title: words.titled(titles.expectedSteady, words.typical),
+        rows: steadyRows(steadyState, shown.option.doses, steadyFrom(input, print)?.ms ?? null, print),
+        remark: why,
       }
     : {
-        title: words.titled(titles.expectedSpan, patient),
-        rows: spanRows(readings, print),
-        remark: `${readings.noSteadyState === "no-common-period" ? words.noCommonPeriod : words.noRepeat} ${words.chanceLeftOut}`,
+        title: words.titled(titles.expectedSpan, words.typical),
+        rows: spanRows(shown.readings, print),
+        remark: `${noSteadySentence(noSteadyState)} ${why}`,
       };
 }
 
+function individualText(input: SummaryInput, own: IndividualReadings, print: SummaryPrint): SummaryModel["expected"] {
+  const typical = shownReadings(input);
+  const { steadyState, shareNeverSteady } = own;
+  const never =
+    shareNeverSteady > 0 && shareNeverSteady < 1
+      ? [fitWords.neverSteady(chosenOption(input.case)?.id ?? "", chanceWords(shareNeverSteady))]
+      : [];
+  if (steadyState) {
+    const settled = typical?.readings.steadyState;
+    const when = settled && typical ? [typicalWhen(settled, typical.option.doses, print)] : [];
+    return {
+      title: words.titled(titles.expectedSteady, words.individual),
+      rows: ownSteadyRows(steadyState, print),
+      remark: [patientWords.spreadRemark, ...when, ...never].join(" "),
+    };
+  }
+  const reason = shareNeverSteady === 1 ? words.neverSteady : noSteadySentence(typical?.readings.noSteadyState ?? null);
+  return {
+    title: words.titled(titles.expectedSpan, words.individual),
+    rows: ownSpanRows(own, print),
+    remark: `${reason} ${patientWords.spreadRemark}`,
+  };
+}
+
+function ownSteadyRows(steady: OwnSteady, print: SummaryPrint): readonly SummaryRow[] {
+  const { timed } = steady;
+  return [
+    { label: patientWords.highest, value: print.spread(steady.peak, "mg/L") },
+    { label: patientWords.lowest, value: print.spread(steady.lowest, "mg/L") },
+    ...(timed ? timedRows(timed.afterDoseH, print, (end) => print.spread(timed[end], "mg/L")) : []),
+    { label: words.average, value: print.spread(steady.average, "mg/L") },
+    { label: words.auc24, value: print.spread(steady.auc24, "mg.h/L") },
+    { label: words.accumulation, value: print.spread(steady.accumulation, "1", words.times) },
+    { label: patientWords.steady90After, value: print.waitSpread(steady.timeTo90H) },
+  ];
+}
+
+function ownSpanRows({ span }: IndividualReadings, print: SummaryPrint): readonly SummaryRow[] {
+  return [
+    { label: patientWords.highest, value: print.spread(span.peak, "mg/L") },
+    { label: patientWords.lowest, value: print.spread(span.lowest, "mg/L") },
+    { label: words.average, value: print.spread(span.average, "mg/L") },
+    { label: words.auc24, value: print.spread(span.auc24, "mg.h/L") },
+  ];
+}
+
+/** The levels at the time after a dose that the window is about: one row where they are the same after every dose. */
+function timedRows(
+  afterDoseH: number,
+  print: SummaryPrint,
+  value: (end: "lowest" | "highest") => string,
+): readonly SummaryRow[] {
+  const [lowest, highest] = [value("lowest"), value("highest")];
+  const hours = print.hours(afterDoseH);
+  return lowest === highest
+    ? [{ label: words.timed(hours), value: lowest }]
+    : [
+        { label: words.timedLowest(hours), value: lowest },
+        { label: words.timedHighest(hours), value: highest },
+      ];
+}
+
 function steadyRows(
-  steady: NonNullable<OptionReadings["steadyState"]>,
+  steady: Steady,
   doses: readonly DoseMark[],
   steadyMs: number | null,
   print: SummaryPrint,
 ): readonly SummaryRow[] {
+  const { timed } = steady;
   return [
     { label: words.highest(print.hours(steady.peakAfterDoseH)), value: print.concentration(steady.peak) },
-    {
-      label: isBeforeDose(steady.lowestAfterDoseH, doses)
-        ? words.lowestBefore
-        : words.lowestAfter(print.hours(steady.lowestAfterDoseH)),
-      value: print.concentration(steady.lowest),
-    },
+    { label: lowestWhen(steady, doses, print), value: print.concentration(steady.lowest) },
+    ...(timed ? timedRows(timed.afterDoseH, print, (end) => print.concentration(timed[end])) : []),
     { label: words.average, value: print.concentration(steady.average) },
     { label: words.auc24, value: print.quantity(steady.auc24, "mg.h/L") },
     { label: words.accumulation, value: words.times(print.figure(steady.accumulation, 2)) },
     { label: words.steady90, value: print.at(steadyMs ?? print.ms(steady.steady90AtH), "dayClock") },
   ];
+}
+
+function lowestWhen(steady: Steady, doses: readonly DoseMark[], print: SummaryPrint): string {
+  return isBeforeDose(steady.lowestAfterDoseH, doses)
+    ? words.lowestBefore
+    : words.lowestAfter(print.hours(steady.lowestAfterDoseH));
+}
+
+/** When the typical patient's highest and lowest come: the draws have no common hour. */
+function typicalWhen(steady: Steady, doses: readonly DoseMark[], print: SummaryPrint): string {
+  return patientWords.typicalWhen(words.highest(print.hours(steady.peakAfterDoseH)), lowestWhen(steady, doses, print));
 }
 
 /** Half a minute: dose times are whole minutes. */
@@ -69,22 +152,4 @@ function spanRows({ span }: OptionReadings, print: SummaryPrint): readonly Summa
     { label: words.average, value: print.concentration(span.average) },
     { label: words.auc24, value: print.quantity(span.auc24, "mg.h/L") },
   ];
-}
-
-/** Hours below, within and above the window over the stated span; null without a concentration window. */
-export function hoursText(input: SummaryInput, print: SummaryPrint): SummaryModel["hours"] {
-  const span = shownReadings(input)?.readings.span;
-  const window = input.case.window;
-  if (!span || !window || span.hoursBelow === null || span.hoursWithin === null || span.hoursAbove === null)
-    return null;
-  const fromTo = words.span(print.at(print.ms(span.fromH), "dayClock"), print.at(print.ms(span.toH), "dayClock"));
-  return {
-    title: words.hoursOf(titles.hours, print.number(window.low), print.exact(window.high)),
-    span: window.quantity === "lowest-and-highest" ? fromTo : `${fromTo}. ${windowRemarkWords(window.quantity)}.`,
-    rows: [
-      { label: words.below, value: print.hours(span.hoursBelow) },
-      { label: words.within, value: print.hours(span.hoursWithin) },
-      { label: words.above, value: print.hours(span.hoursAbove) },
-    ],
-  };
 }

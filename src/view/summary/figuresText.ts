@@ -1,8 +1,9 @@
-import type { NamedFigure, Traced } from "../../core/analysis/index.ts";
+import type { Traced } from "../../core/analysis/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { summaryReadingWords as readingWords, summaryDetailWords as words } from "../../core/messages/index.ts";
+import { numberPrint } from "../../core/units/index.ts";
 import type { Citations } from "./citations.ts";
-import { shownModel } from "./kineticsText.ts";
+import { parameterName } from "./kineticsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryFigure } from "./summaryModel.ts";
 import { chosenOption } from "./summaryOrder.ts";
@@ -13,13 +14,10 @@ const INPUT_SIGNIFICANT = 5;
 
 /** Every figure the prediction stands on, with its formula, what went in and its source. */
 export function figuresText(input: SummaryInput, cite: Citations, print: SummaryPrint): readonly SummaryFigure[] {
-  const { patient } = input.analysis;
+  const { patient, typical: model } = input.analysis;
   const { medicine } = input.case;
-  const model = shownModel(input)?.model;
   const used = new Set([...(chosenOption(input.case)?.lines ?? []), ...input.case.given].map(({ product }) => product));
   const isApparent = medicine.kinetics.apparent;
-  const parameterName = ({ symbol, words: name }: NamedFigure) =>
-    symbol === "CL" ? readingWords.clearance(isApparent) : symbol === "V" ? readingWords.volume(isApparent) : name;
   const figure = (name: string, traced: Traced | null | undefined) =>
     traced ? [figureText(name, traced, cite, print)] : [];
   return [
@@ -28,7 +26,7 @@ export function figuresText(input: SummaryInput, cite: Citations, print: Summary
     ...figure(words.idealWeight, patient.idealWeight),
     ...figure(words.adjustedWeight, patient.clearanceWeight === "adjusted" ? patient.adjustedWeight : null),
     ...figure(words.creatinineClearance, patient.creatinineClearance),
-    ...(model?.parameters ?? []).flatMap((each) => figure(parameterName(each), each.figure)),
+    ...(model?.parameters ?? []).flatMap((each) => figure(parameterName(each, isApparent), each.figure)),
     ...figure(words.eliminationRate, model?.kind === "one-compartment" ? model.eliminationRate : null),
     ...figure(readingWords.halfLife, model?.halfLife),
     ...(model?.products ?? [])
@@ -57,7 +55,17 @@ function figureText(name: string, figure: Traced, cite: Citations, print: Summar
   };
 }
 
-/** A formula as it is read on paper: × for *, ÷ for /, which could be taken for a 1. */
+/** A formula as it is read on paper: × for *, ÷ for /, which could be taken for a 1; comparisons and conditions in words, thousands apart. */
 export function formulaPrint(formula: string): string {
-  return formula.replace(/\s*\*\s*/g, " × ").replace(/\s*\/\s*/g, " ÷ ");
+  return formula
+    .replace(/\s*\*\s*/g, " × ")
+    .replace(/\s*\/\s*/g, " ÷ ")
+    .replace(/\s*>=\s*/g, " at least ")
+    .replace(/\s*<=\s*/g, " at most ")
+    .replace(/\s*>\s*/g, " above ")
+    .replace(/\s*<\s*/g, " below ")
+    .replace(/\s*==\s*/g, " equal to ")
+    .replace(/\s*\?\s*/g, ", then ")
+    .replace(/\s+:\s*/g, ", else ")
+    .replace(/(?<![\d.\w])\d{4,}(?![\w])/g, (whole) => numberPrint(Number(whole)));
 }

@@ -1,13 +1,10 @@
-import {
-  summaryReadingWords,
-  SUMMARY_TITLES as titles,
-  summaryNextLevelWords as words,
-} from "../../core/messages/index.ts";
+import type { Case } from "../../core/case/index.ts";
+import { chanceWords, SUMMARY_TITLES as titles, summaryNextLevelWords as words } from "../../core/messages/index.ts";
 import { type DoseLine, doseLineExpand } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR } from "../../core/time/index.ts";
-import { shownModel } from "./kineticsText.ts";
-import { shownReadings } from "./shownReadings.ts";
-import { steadyFromMs } from "./steadyFrom.ts";
+import { shownPatient } from "./shownPatient.ts";
+import { noSteadySentence, shownReadings } from "./shownReadings.ts";
+import { type SteadyFrom, steadyFrom } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryModel } from "./summaryModel.ts";
 import { chosenOption } from "./summaryOrder.ts";
@@ -15,74 +12,116 @@ import type { SummaryPrint } from "./summaryPrint.ts";
 
 /** A before-dose sample is drawn within this long before the dose (common practice). */
 const BEFORE_DOSE_MS = 0.5 * MS_PER_HOUR;
+const DAY_MS = 24 * MS_PER_HOUR;
+/** Longer than this until steady state, and an earlier level is worth a thought. */
+const FAR_DAYS = 7;
+/** Longer than this, and no appointment is made: nobody stays on the same doses so long without a level. Our choice, common practice. */
+const LONGEST_DAYS = 60;
 
 export function nextLevelText(input: SummaryInput, print: SummaryPrint): SummaryModel["nextLevel"] {
   return { title: titles.nextLevel, sentences: sentences(input, print) };
 }
 
-/** Before the first dose of the chosen option at or after 90 % of steady state. */
+/** At the first dose of the chosen option at or after 90 % of steady state: before it, or as long after it as the window says. */
 function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] {
   const option = chosenOption(input.case);
   if (!option) return [words.noOption];
   const shown = shownReadings(input);
   if (!shown) return [words.noModel];
+  const from = steadyFrom(input, print);
   const { steadyState, noSteadyState } = shown.readings;
-  if (!steadyState) {
-    const reason =
-      noSteadyState === "dose-rate-at-or-above-vmax"
-        ? summaryReadingWords.neverSteady
-        : noSteadyState === "no-common-period"
-          ? summaryReadingWords.noCommonPeriod
-          : summaryReadingWords.noRepeat;
-    return [reason, words.byQuestion, words.writeTimes];
-  }
+  if (!steadyState || !from) return [noSteadySentence(noSteadyState), words.byQuestion, words.writeTimes];
   const nowMs = instantMs(input.case.now);
-  const steadyMs = steadyFromMs(input, print) ?? print.ms(steadyState.steady90AtH);
-  const untilMs = Math.max(steadyMs, nowMs) + (steadyState.periodH + 24) * MS_PER_HOUR;
+  if (from.ms - nowMs > LONGEST_DAYS * DAY_MS) {
+    const { longerH, typicalH } = from;
+    const wait = print.wait(longerH ?? typicalH);
+    return [words.tooLong(wait, longerH === null ? null : print.wait(typicalH)), words.byQuestion, words.writeTimes];
+  }
+  const untilMs = Math.max(from.ms, nowMs) + (steadyState.periodH + 24) * MS_PER_HOUR;
   const doses = doseInstants(option.lines, input.case.timeZone, untilMs);
-  const doseMs = doses.find((ms) => ms >= steadyMs && ms >= nowMs);
-  const steady = print.at(steadyMs, "full");
+  const at = doses.findIndex((ms) => ms >= from.ms && ms >= nowMs);
+  const doseMs = doses[at];
   if (doseMs === undefined) {
     const last = doses.at(-1);
-    return last === undefined ? [words.noModel] : [words.endsBefore(steady, print.at(last, "full")), words.byQuestion];
+    return last === undefined
+      ? [words.noModel]
+      : [words.endsBefore(print.at(from.ms, "full"), print.at(last, "full")), words.byQuestion];
   }
   return [
-    drawSentence(doseMs, print.at(steadyMs, "dayClock"), print),
+    drawSentence(input.case.window, doseMs, doses[at + 1], print.at(from.ms, "dayClock"), print),
+    ...longer(from, print),
+    ...neverSteady(input),
     ...farOff(doseMs - nowMs),
     ...distribution(input, print),
     words.writeTimes,
   ];
 }
 
-/** Longer than this until steady state, and an earlier level is worth a thought. */
-const FAR_DAYS = 7;
+/** This patient may be slower than the typical one: then the longer wait holds, and is said. */
+function longer({ longerH, typicalH }: SteadyFrom, print: SummaryPrint): readonly string[] {
+  return longerH === null ? [] : [words.longerWait(print.wait(longerH), print.wait(typicalH))];
+}
+
+function neverSteady(input: SummaryInput): readonly string[] {
+  const patient = shownPatient(input);
+  const share = patient.kind === "individual" ? (patient.readings?.shareNeverSteady ?? 0) : 0;
+  return share > 0 ? [words.maybeNever(chanceWords(share))] : [];
+}
 
 function farOff(waitMs: number): readonly string[] {
-  const days = waitMs / (24 * MS_PER_HOUR);
+  const days = waitMs / DAY_MS;
   return days > FAR_DAYS ? [words.farOff(String(Math.round(days)))] : [];
 }
 
 /** With two compartments a sample drawn too early says little: how long to wait after a dose at the least. */
 function distribution(input: SummaryInput, print: SummaryPrint): readonly string[] {
-  const model = shownModel(input)?.model;
+  const model = input.analysis.typical;
   const lines = chosenOption(input.case)?.lines ?? [];
   if (model?.kind !== "two-compartment") return [];
   return [words.notBefore(print.hours(Math.max(...lines.map(({ product }) => model.distributionEndH[product] ?? 0))))];
 }
 
-function drawSentence(doseMs: number, steady: string, print: SummaryPrint): string {
-  const fromMs = doseMs - BEFORE_DOSE_MS;
-  const day = print.at(doseMs, "dateYear");
-  return print.at(fromMs, "dateYear") === day
-    ? words.draw(day, print.at(fromMs, "clock"), print.at(doseMs, "clock"), steady)
-    : words.drawAcross(print.at(fromMs, "full"), print.at(doseMs, "full"), print.at(doseMs, "clock"), steady);
+function drawSentence(
+  window: Case["window"],
+  doseMs: number,
+  nextDoseMs: number | undefined,
+  steady: string,
+  print: SummaryPrint,
+): string {
+  const timed = window && timedDraw(window, doseMs, nextDoseMs ?? Number.POSITIVE_INFINITY);
+  const [fromMs, toMs] = timed ?? [doseMs - BEFORE_DOSE_MS, doseMs];
+  const dose = print.at(doseMs, "clock");
+  const day = print.at(toMs, "dateYear");
+  const isOneDay = print.at(fromMs, "dateYear") === day;
+  if (timed) {
+    const whichDose = print.at(doseMs, "dayClock");
+    return isOneDay
+      ? words.drawTimed(day, print.at(fromMs, "clock"), print.at(toMs, "clock"), whichDose, steady)
+      : words.drawTimedAcross(print.at(fromMs, "full"), print.at(toMs, "full"), whichDose, steady);
+  }
+  return isOneDay
+    ? words.draw(day, print.at(fromMs, "clock"), print.at(toMs, "clock"), steady)
+    : words.drawAcross(print.at(fromMs, "full"), print.at(toMs, "full"), dose, steady);
+}
+
+/** From and to of a window whose level is drawn so long after a dose; null where it is not, or the next dose comes first. */
+function timedDraw(
+  { drawFrom, drawTo }: NonNullable<Case["window"]>,
+  doseMs: number,
+  nextDoseMs: number,
+): readonly [number, number] | null {
+  if (!drawFrom || !drawTo) return null;
+  const fromMs = doseMs + drawFrom.value * MS_PER_HOUR;
+  return fromMs >= nextDoseMs ? null : [fromMs, Math.min(doseMs + drawTo.value * MS_PER_HOUR, nextDoseMs)];
 }
 
 function doseInstants(lines: readonly DoseLine[], zone: string, untilMs: number): readonly number[] {
-  return lines
-    .flatMap((line) => {
-      const events = doseLineExpand(line, { zone, untilMs });
-      return events.ok ? events.value.filter(({ status }) => status !== "missed").map(({ atMs }) => atMs) : [];
-    })
-    .sort((a, b) => a - b);
+  return [
+    ...new Set(
+      lines.flatMap((line) => {
+        const events = doseLineExpand(line, { zone, untilMs });
+        return events.ok ? events.value.filter(({ status }) => status !== "missed").map(({ atMs }) => atMs) : [];
+      }),
+    ),
+  ].sort((a, b) => a - b);
 }

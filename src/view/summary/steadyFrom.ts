@@ -1,9 +1,27 @@
+import { MS_PER_HOUR } from "../../core/time/index.ts";
+import { shownPatient } from "./shownPatient.ts";
 import { shownReadings } from "./shownReadings.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
-/** Epoch ms from which the chosen option is within 90 % of its steady state; null when it has none. */
-export function steadyFromMs(input: SummaryInput, print: SummaryPrint): number | null {
+/** From when the chosen option counts as steady, and whose figure that is. */
+export interface SteadyFrom {
+  readonly ms: number;
+  /** This patient may take longer than the typical one: upper end of the 90 % interval, h; null where the typical patient's time holds. */
+  readonly longerH: number | null;
+  readonly typicalH: number;
+}
+
+/** The typical patient's 90 % of steady state, or this patient's where it may come later; null when the option has none. */
+export function steadyFrom(input: SummaryInput, print: SummaryPrint): SteadyFrom | null {
   const steady = shownReadings(input)?.readings.steadyState;
-  return steady ? print.ms(steady.steady90AtH) : null;
+  if (!steady) return null;
+  const patient = shownPatient(input);
+  const own = patient.kind === "individual" ? (patient.readings?.steadyState?.timeTo90H.q95 ?? null) : null;
+  const longerH = own !== null && own > steady.timeTo90H ? own : null;
+  return {
+    ms: print.ms(steady.steady90AtH) + ((longerH ?? steady.timeTo90H) - steady.timeTo90H) * MS_PER_HOUR,
+    longerH,
+    typicalH: steady.timeTo90H,
+  };
 }

@@ -18,7 +18,7 @@ export function summaryBanners(
     ...(order?.empty ?? []).map((text) => stop(words.nothingLeft(text))),
     ...concernsOfOption(input)
       .filter(({ gravity }) => gravity === "stop")
-      .map((concern) => stop(concernMessage(concern))),
+      .map((concern) => stop(concernWords(concern))),
     ...(medicine.review.status === "reviewed" ? [] : [{ gravity: "check" as const, ...words.unchecked }]),
   ];
 }
@@ -36,5 +36,17 @@ export function concernsOfOption(input: SummaryInput): readonly Concern[] {
 }
 
 export function concernText(concern: Concern): SummaryConcern {
-  return { gravity: concern.gravity, word: GRAVITY_WORDS[concern.gravity], ...concernMessage(concern) };
+  return { gravity: concern.gravity, word: GRAVITY_WORDS[concern.gravity], ...concernWords(concern) };
 }
+
+function concernWords(concern: Concern): { readonly title: string; readonly text: string } {
+  const { title, text } = concernMessage(concern);
+  return { title, text: withoutUnitStops(text) };
+}
+
+/** A full stop after the symbol of a unit can be read as a digit: the sentences are joined by a semicolon. */
+function withoutUnitStops(text: string): string {
+  return text.replace(/(\d\s?(?:kg|mg|mcg|g|ng|mL|dL|mmol|h|min|cm))\.(?=\s)/g, "$1;").replace(UNIT_STOP_AT_END, "$1");
+}
+
+const UNIT_STOP_AT_END = /(\d\s?(?:kg|mg|mcg|g|ng|mL|dL|mmol|h|min|cm))\.$/;

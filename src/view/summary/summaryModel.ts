@@ -34,10 +34,23 @@ export interface SummaryLevel {
   readonly drawn: string;
   readonly afterDose: string;
   readonly measured: string;
+  /** Of this patient with the 90 % interval. */
   readonly predicted: string;
   readonly difference: string;
-  /** "" or why it was left out, or that it was reported below the limit. */
+  /** Measured − predicted in residual standard deviations; "" beside the typical patient. */
+  readonly residual: string;
+  /** Made before the level was known, and whether it held; "" beside the typical patient. */
+  readonly forecast: string;
+  /** "" or why it was left out. */
   readonly remark: string;
+  /** Drawn hollow, as on the profile. */
+  readonly isLeftOut: boolean;
+}
+
+/** A small table: what a row is about, then its cells. */
+export interface SummaryGrid {
+  readonly columns: readonly string[];
+  readonly rows: readonly { readonly label: string; readonly cells: readonly string[] }[];
 }
 
 export interface SummaryConcern {
@@ -63,8 +76,21 @@ export interface SummaryDoses {
   readonly remark: string;
 }
 
+/** Every parameter before and with the levels, and what each level says. */
+export interface SummaryIndividual {
+  readonly title: string;
+  readonly parameters: SummaryGrid;
+  readonly sentences: readonly string[];
+  readonly levels: readonly SummaryRow[];
+  /** Where the method is written down. */
+  readonly method: string;
+}
+
 export interface SummaryDetails {
+  /** How this patient was found; null beside the typical patient. */
+  readonly individual: SummaryIndividual | null;
   readonly figures: readonly SummaryFigure[];
+  readonly figuresRemark: string;
   readonly doses: SummaryDoses;
   readonly concerns: readonly SummaryConcern[];
   /** What a pharmacokinetic note contains; "not recorded" where the case does not say. */
@@ -96,13 +122,20 @@ export interface SummaryModel {
   readonly order: SummaryOrder | null;
   readonly chart: SummaryChart;
   readonly expected: { readonly title: string; readonly rows: readonly SummaryRow[]; readonly remark: string } | null;
-  readonly hours: { readonly title: string; readonly span: string; readonly rows: readonly SummaryRow[] } | null;
+  /** Without columns: hours alone, side by side. */
+  readonly hours: (SummaryGrid & { readonly title: string; readonly span: string }) | null;
   readonly kinetics: {
     readonly title: string;
     readonly rows: readonly SummaryRow[];
     readonly sentences: readonly string[];
   };
-  readonly levels: { readonly title: string; readonly rows: readonly SummaryLevel[]; readonly remark: string };
+  readonly levels: {
+    readonly title: string;
+    readonly rows: readonly SummaryLevel[];
+    readonly remark: string;
+    /** Also the residual and the forecast before it: takes the whole width. */
+    readonly isIndividual: boolean;
+  };
   readonly nextLevel: { readonly title: string; readonly sentences: readonly string[] };
   /** Concerns of gravity "check"; those of gravity "stop" are banners. */
   readonly concerns: readonly SummaryConcern[];
@@ -120,6 +153,8 @@ export interface SummaryChart {
   /** What the picture says, for those who can't see it. */
   readonly title: string;
   readonly unit: string;
+  /** What the lines and bands are; "" where there is only one curve. */
+  readonly key: string;
   readonly before: string;
   readonly after: string;
   /** Names of the days, at their midnights. */

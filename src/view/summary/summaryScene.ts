@@ -1,15 +1,16 @@
-import { concentrationWindow } from "../../core/analysis/index.ts";
+import { type Analysis, concentrationWindow } from "../../core/analysis/index.ts";
 import { concentrationFactor } from "../../core/medicine/index.ts";
-import { numberPrint } from "../../core/units/index.ts";
+import { profileParts } from "../chart/profileParts.ts";
 import { type ProfileScene, profileScene } from "../chart/profileScene.ts";
+import { shownPatient } from "./shownPatient.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryChart } from "./summaryModel.ts";
 import { chosenOption } from "./summaryOrder.ts";
 
 /** One unit of the drawing is about a CSS pixel on the sheet: 184 mm wide. */
 const WIDTH = 696;
-/** Letter is 18 mm shorter than A4; the profile gives way, not the words. */
-const HEIGHT = { A4: 188, Letter: 146 };
+/** Letter is 18 mm shorter than A4; the profile gives way, not the words. This patient's sheet has more words. */
+const HEIGHT = { A4: { typical: 188, individual: 168 }, Letter: { typical: 146, individual: 136 } };
 /** Room at the right for the window's edges, which stand 34 units beyond the plot. */
 const MARGIN = { top: 26, right: 58, bottom: 24, left: 34 };
 
@@ -41,14 +42,16 @@ export function summaryNowLabels(
   return { before: scene.nowX !== null && scene.nowX < UNIT_WIDTH ? "" : words.before, after: words.after };
 }
 
-/** The profile of the doses given and the chosen option, in the unit its concentrations are printed in, for print.css to set in millimetres. */
-export function summaryScene({ case: value, analysis, settings }: SummaryInput, words: SummaryChart): ProfileScene {
-  const { clock, givenCurve } = analysis;
-  const chosen = analysis.options.find(({ id }) => id === chosenOption(value)?.id);
+/** The profile of the doses given and the chosen option, of this patient with bands where the sheet is, for print.css to set in millimetres. */
+export function summaryScene(input: SummaryInput, words: SummaryChart): ProfileScene {
+  const { case: value, settings } = input;
+  const analysis = shownAnalysis(input);
+  const { clock } = analysis;
   const factor = concentrationFactor(value.medicine);
+  const parts = profileParts(value, analysis, factor, analysis.options[0]?.id ?? null);
   const scene = profileScene({
     width: WIDTH,
-    height: HEIGHT[settings.pageSize],
+    height: HEIGHT[settings.pageSize][shownPatient(input).kind],
     margin: MARGIN,
     fromH: clock.fromH,
     toH: clock.toH,
@@ -57,22 +60,27 @@ export function summaryScene({ case: value, analysis, settings }: SummaryInput, 
     scale: "linear",
     factor,
     window: concentrationWindow(value),
-    curves: [
-      ...(givenCurve ? [{ id: "given", name: "", ...givenCurve }] : []),
-      ...(chosen?.curve ? [{ id: chosen.id, name: "", ...chosen.curve }] : []),
-    ],
-    levels: analysis.levels.map((level) => ({
-      id: level.id,
-      atH: level.atH,
-      value: level.measured,
-      sd: level.assaySd,
-      excluded: level.excluded !== null,
-      belowLimit: level.belowLimit,
-      label:
-        words.levels.find(({ id }) => id === level.id)?.text ??
-        numberPrint(level.measured * factor, { significant: 3 }),
+    curves: parts.curves.map((curve) => ({ ...curve, name: "" })),
+    bands: parts.bands ?? [],
+    levels: parts.levels.map((level) => ({
+      ...level,
+      label: words.levels.find(({ id }) => id === level.id)?.text ?? level.label,
     })),
   });
   // On paper the days are named at their midnights; hour figures would run into them.
   return { ...scene, hourTicks: [] };
+}
+
+/** The chosen option alone; without anything of this patient where the sheet is of the typical one. */
+function shownAnalysis(input: SummaryInput): Analysis {
+  const { analysis } = input;
+  const chosen = analysis.options.filter(({ id }) => id === chosenOption(input.case)?.id);
+  return shownPatient(input).kind === "individual"
+    ? { ...analysis, options: chosen }
+    : {
+        ...analysis,
+        givenBand: null,
+        options: chosen.map((option) => ({ ...option, band: null })),
+        levels: analysis.levels.map((level) => ({ ...level, fit: null })),
+      };
 }

@@ -2,12 +2,11 @@ import { act, render, screen } from "@testing-library/react";
 import userEvent from "@testing-library/user-event";
 import { afterEach, beforeEach, describe, expect, it, vi } from "vitest";
 import { createStore } from "zustand/vanilla";
-import { derive } from "../../../src/core/analysis/index.ts";
 import type { Workbench } from "../../../src/shell/store/createWorkbench.ts";
 import type { OpenCase, WorkbenchState } from "../../../src/shell/store/workbenchState.ts";
 import { SummaryScreen } from "../../../src/view/summary/SummaryScreen.tsx";
 import { WorkbenchProvider } from "../../../src/view/useWorkbench.ts";
-import { summaryCase } from "./summaryFixture.ts";
+import { summaryCase, typicalAnalysis } from "./summaryFixture.ts";
 
 function openCase(change: Partial<OpenCase> = {}): OpenCase {
   const value = summaryCase({ demo: true });
@@ -18,7 +17,15 @@ function openCase(change: Partial<OpenCase> = {}): OpenCase {
     undo: [],
     redo: [],
     saving: { status: "saved", savedAt: 0, reason: null, detail: "" },
-    analysis: { result: derive(value), revision: 3, ofPreview: false, status: "fresh", failure: null },
+    analysis: {
+      result: typicalAnalysis(value),
+      revision: 3,
+      ofPreview: false,
+      status: "fresh",
+      failure: null,
+      isFitStale: false,
+      fitProgress: null,
+    },
     preview: null,
     ...change,
   };
@@ -111,7 +118,8 @@ describe("SummaryScreen", () => {
   });
 
   it("says that figures are awaited while there are none", () => {
-    show(openCase({ analysis: { result: null, revision: 3, ofPreview: false, status: "running", failure: null } }));
+    const { analysis } = openCase();
+    show(openCase({ analysis: { ...analysis, result: null, status: "running" } }));
     expect(screen.getByText("The figures are being worked out …")).toBeInTheDocument();
     expect(printButton()).toBeDisabled();
   });

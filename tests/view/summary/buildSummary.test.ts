@@ -165,7 +165,7 @@ describe("readings", () => {
     const model = plain(buildSummary(input));
     expect(model.hours?.title).toBe("Hours in the window of 8 to 15 mg per L");
     const { fromH, toH } = input.analysis.options[0]!.typical!.span;
-    const sum = model.hours!.rows.reduce((total, { value }) => total + Number.parseFloat(value), 0);
+    const sum = model.hours!.rows.reduce((total, { cells }) => total + Number.parseFloat(cells[0]!), 0);
     // Each is rounded to 0.1 h.
     expect(Math.abs(sum - (toH - fromH))).toBeLessThanOrEqual(0.15);
     expect(summary({ window: undefined } as unknown as Partial<Case>).hours).toBeNull();
@@ -233,6 +233,7 @@ describe("assumptions", () => {
       expect.stringMatching(
         /^record “theophylline” version \d+, not independently reviewed; \d+ of \d+ figures unverified$/,
       ),
+      "the record's figures were pieced together from different studies, never estimated together",
       "6 doses taken as listed; missed: Mon 2 March, 20:00; late or moved: Tue 3 March, 08:00 taken Tue 3 March, 10:00",
       "kidney function 51.8 mL per min (Cockcroft–Gault, ideal weight)",
       "doses up to the now line (Wednesday 4 March 2026, 12:00) as given, from it on as proposed; clock times of Europe/Lisbon",

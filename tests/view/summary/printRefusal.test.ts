@@ -78,8 +78,9 @@ describe("printRefusal", () => {
       expect(sentence).toMatch(/^[A-Z].*\.$/s);
       expect(sentence).not.toContain("undefined");
     }
-    expect(issueMessage(printRefusal(TABLE[4]![1])!)).toContain("Broken.");
-    expect(issueMessage(printRefusal(TABLE[7]![1])!)).toContain("The disk is full.");
+    const refusalOf = (name: string) => issueMessage(printRefusal(TABLE.find(([each]) => each === name)![1])!);
+    expect(refusalOf("the analysis failed")).toContain("Broken.");
+    expect(refusalOf("saving failed")).toContain("The disk is full.");
   });
 
   it("a pick of the gravest: stale before unsaved before the order", () => {

@@ -1,4 +1,4 @@
-import { derive } from "../../../src/core/analysis/index.ts";
+import { type Analysis, derive } from "../../../src/core/analysis/index.ts";
 import { type Case, caseNew } from "../../../src/core/case/index.ts";
 import { recordById } from "../../../src/core/medicine/index.ts";
 import type { DoseLine } from "../../../src/core/regimen/index.ts";
@@ -70,10 +70,21 @@ export function caseOrdering(lines: readonly DoseLine[], change: Partial<Case> =
   return summaryCase({ options: [{ id: "A", label: "", chosen: true, lines: [...lines] }], ...change }, medicine);
 }
 
+/** Of the typical patient: as with a medicine record that does not say how much patients differ. */
+export function typicalAnalysis(value: Case): Analysis {
+  const analysis = derive(value);
+  return analysis.fit.kind === "pending" ? { ...analysis, fit: { kind: "none", reason: "no-variability" } } : analysis;
+}
+
+/** With the levels fitted: takes seconds, so once a file. */
+export function fittedInputOf(value: Case, change: Partial<SummaryInput> = {}): SummaryInput {
+  return summaryInputOf(value, { analysis: derive(value, { isFitted: true, isCrossChecked: true }), ...change });
+}
+
 export function summaryInputOf(value: Case, change: Partial<SummaryInput> = {}): SummaryInput {
   return {
     case: value,
-    analysis: derive(value),
+    analysis: change.analysis ?? typicalAnalysis(value),
     settings: { pageSize: "A4", microgram: "microgram", preparedBy: "" },
     revision: 14,
     saving: { status: "saved", detail: "" },
