@@ -44,7 +44,7 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
     text: `${span(number(data, "sinceH"))} after the regimen began or changed. ${waits(data)}${data.hasWindow === true ? " The target window is for a level at steady state." : ""}`,
   }),
   autoinduction: (data) => ({
-    title: `${text(data, "name")} speeds up its own elimination: clearance will still rise`,
+    title: `${capital(text(data, "name"))} speeds up its own elimination: clearance will still rise`,
     text: `${sentence(text(data, "text"))}. ${course(data)} The prediction does not follow it (${text(data, "source")}; ${text(data, "basis")}).`,
   }),
   "interaction-applied": (data) => ({
@@ -69,14 +69,14 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
   }),
   "figures-from-memory": (data) => ({
     title: "Figures from memory are in use",
-    text: `${text(data, "name")}: ${wordList(figureNames(data))}. They were recalled and not found in their source: unverified.`,
+    text: `${capital(text(data, "name"))}: ${wordList(figureNames(data))}. They were recalled and not found in their source: unverified.`,
   }),
   "figures-pieced-together": (data) => ({
     title: "The record's figures were pieced together from different studies",
     text: `${sentence(text(data, "text"))} (${text(data, "source")}). They were never estimated together${data.isFitted === true ? ", so that what levels make of one of them leans on the others" : ""}.`,
   }),
   "linear-approximation": (data) => ({
-    title: `${text(data, "name")}: linear kinetics stand for saturable ones`,
+    title: `${capital(text(data, "name"))}: linear kinetics stand for saturable ones`,
     text: `${sentence(text(data, "text"))} (${text(data, "source")}).`,
   }),
 };
@@ -103,6 +103,7 @@ const mg = (data: ConcernData, key: string): string =>
 const printed = (quantity: Quantity): string => quantityPrint(quantity, { ...PRINT, significant: 4 });
 const orList = (words: readonly string[]): string => wordList(words).replace(/ and ([^,]*)$/, " or $1");
 const percent = (share: number): string => `${figure(share * 100)} %`;
+const capital = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);
 const sentence = (words: string): string => words.replace(/\.$/, "");
 const isSex = (data: ConcernData): boolean => text(data, "covariate") === "isFemale";
 const lane = (data: ConcernData): string => (data.option === null ? "Doses given" : `Option ${text(data, "option")}`);

@@ -9,7 +9,7 @@ const FEMALE_FACTOR = 1.012;
 
 export const ckdEpi2021Source: FormulaSource = {
   formula:
-    "eGFR = 142 × min(creatinine ÷ κ, 1)^α × max(creatinine ÷ κ, 1)^−1.200 × 0.9938^age, × 1.012 if female; κ 0.7 (woman) or 0.9 (man), α −0.241 or −0.302",
+    "eGFR = 142 × min(creatinine ÷ κ, 1)^α × max(creatinine ÷ κ, 1)^−1.2 × 0.9938^age, × 1.012 if female; κ 0.7 (woman) or 0.9 (man), α −0.241 or −0.302",
   citation:
     "Inker LA et al. New creatinine- and cystatin C-based equations to estimate GFR without race. N Engl J Med 2021;385:1737-1749 (title from memory; formula read on the National Kidney Foundation's page)",
   basis: "seen",
@@ -18,7 +18,7 @@ export const ckdEpi2021Source: FormulaSource = {
 /**
  * Glomerular filtration rate by CKD-EPI 2021 from creatinine, for a body surface of 1.73 m².
  *
- * eGFR = 142 · min(creatinine / κ, 1)^α · max(creatinine / κ, 1)^−1.200 · 0.9938^age, · 1.012 for a woman;
+ * eGFR = 142 · min(creatinine / κ, 1)^α · max(creatinine / κ, 1)^−1.2 · 0.9938^age, · 1.012 for a woman;
  * κ = 0.7 mg/dL for a woman, 0.9 for a man; α = −0.241 for a woman, −0.302 for a man
  *
  * @param patient.ageYears a, 18 to 130

@@ -1,4 +1,4 @@
-import { FieldFrame, type FieldQuestion } from "./FieldFrame.tsx";
+import { FieldFrame } from "./FieldFrame.tsx";
 
 export interface Choice<Value extends string> {
   readonly value: Value;
@@ -14,7 +14,6 @@ export interface ChoiceFieldProps<Value extends string> {
   readonly prompt?: string;
   readonly description?: string | undefined;
   readonly fault?: string | undefined;
-  readonly question?: FieldQuestion | undefined;
   readonly isLabelHidden?: boolean;
   readonly isDisabled?: boolean;
 }
@@ -22,13 +21,7 @@ export interface ChoiceFieldProps<Value extends string> {
 export function ChoiceField<Value extends string>(props: ChoiceFieldProps<Value>) {
   const { label, value, choices, onChoose, prompt = "Choose …", description, fault, isLabelHidden, isDisabled } = props;
   return (
-    <FieldFrame
-      label={label}
-      isLabelHidden={isLabelHidden ?? false}
-      description={description}
-      fault={fault}
-      question={props.question}
-    >
+    <FieldFrame label={label} isLabelHidden={isLabelHidden ?? false} description={description} fault={fault}>
       {(wiring) => (
         <select
           {...wiring}

@@ -1,8 +1,11 @@
+import { useId } from "react";
 import type { TargetWindow } from "../../core/case/index.ts";
 import { issueMessage, windowQuantityWord, windowWords } from "../../core/messages/index.ts";
 import { quantityConvert, quantityPrint, unitDimension, unitSpoken } from "../../core/units/index.ts";
+import { Button } from "./Button.tsx";
 import { ChoiceField } from "./ChoiceField.tsx";
 import type { FieldQuestion } from "./FieldFrame.tsx";
+import { GravityMark } from "./GravityMark.tsx";
 import { TextField } from "./TextField.tsx";
 import { type WindowDraft, type WindowUnit, windowDraftRead, windowUnits } from "./windowDraft.ts";
 import "./WindowFields.css";
@@ -18,7 +21,7 @@ export interface WindowFieldsProps {
   readonly isTold: boolean;
   /** Offered; all of them where it is left out. */
   readonly units?: readonly WindowUnit[];
-  /** An odd window, asked about beside its unit. */
+  /** An odd window, asked about under its ends and unit. */
   readonly question?: FieldQuestion | undefined;
 }
 
@@ -30,6 +33,7 @@ export function WindowFields({
   units = windowUnits(draft.about),
   question,
 }: WindowFieldsProps) {
+  const askedId = useId();
   const read = windowDraftRead(draft);
   const faultOf = (path: string, text?: string) => {
     const found = read.ok ? undefined : read.issues.find((one) => one.path[0] === path);
@@ -71,9 +75,25 @@ export function WindowFields({
           value={draft.unit}
           choices={units.map((unit) => ({ value: unit, label: unitSpoken(unit, "screen") }))}
           onChoose={(unit) => onChange({ ...draft, unit })}
-          question={question}
         />
       </div>
+      <div role="status" className="field-frame-said" id={askedId}>
+        {question ? (
+          <p className="field-frame-asked">
+            <GravityMark gravity="check" /> {question.text}
+          </p>
+        ) : null}
+      </div>
+      {question ? (
+        // biome-ignore lint/a11y/useSemanticElements: a fieldset would need its own visible legend; the question is the legend
+        <div className="field-frame-answers" role="group" aria-labelledby={askedId}>
+          {question.answers.map((answer) => (
+            <Button key={answer.label} onPress={answer.onAnswer}>
+              {answer.label}
+            </Button>
+          ))}
+        </div>
+      ) : null}
       <TextField
         label={windowWords.basis}
         value={draft.basis}

@@ -12,11 +12,14 @@ const TROUGH_LEAST_H = 2;
 export const windowSampling: ConcernRule = (context) => {
   const { window } = context.case;
   if (!window) return [];
+  const earliest = context.case.medicine.earliestSample;
   const ofRecord = recordWindow(context.case);
   const drawn = drawnBetween(window) ?? (ofRecord && drawnBetween(ofRecord));
   if (!drawn && window.quantity !== "trough") return [];
   return context.levels.flatMap((level) => {
     if (level.excluded !== null || level.afterDoseH === null || level.atH > context.clock.nowH) return [];
+    // Sooner than the record allows at all is levelTooEarly's to say.
+    if (earliest && level.afterDoseH < quantityConvert(earliest, "h")) return [];
     const about = { kind: "level", id: level.id } as const;
     const data = {
       atMs: clockMs(context, level.atH),
