@@ -1,20 +1,26 @@
-import { type MinimiseOptions, type Minimum, minimise } from "../numerics/index.ts";
+import {
+  choleskyFactor,
+  hessianByDifferences,
+  type MinimiseOptions,
+  type Minimum,
+  minimise,
+} from "../numerics/index.ts";
 import { EstimationObjective } from "./estimationObjective.ts";
 import { estimationStarts } from "./estimationStarts.ts";
 import type { EstimationProblem, MapEstimate } from "./estimationTypes.ts";
 import { residualSd } from "./residualTerm.ts";
 
-/** The search with the expected curvature need only come near: Newton's steps finish. */
+/** Near enough to tell whether a minimum is a new one. */
 const NEAR: MinimiseOptions = { gradientTolerance: 1e-3, stepTolerance: 1e-3, mostIterations: 60 };
-const CLOSE: MinimiseOptions = { gradientTolerance: 1e-8, stepTolerance: 1e-9, mostIterations: 100 };
+const CLOSE: MinimiseOptions = { gradientTolerance: 1e-8, stepTolerance: 1e-9, mostIterations: 60 };
 /** Two minima nearer than this, in ω (at most 1), are one. */
 const ONE_PLACE = 0.02;
 
 /**
  * The most likely η of a patient: the lowest minimum of the objective.
  *
- * Formula: from each start (estimationStarts) steps in a trust region with the expected curvature until near, then Newton's with the
- * second derivatives by differences of the analytic gradient; the lowest minimum is kept, the others are reported.
+ * Formula: from each start (estimationStarts) steps in a trust region with the expected curvature; the second derivatives by differences
+ * of the analytic gradient; Newton's steps where those led nowhere; the lowest minimum is kept, the others are reported.
  * @param problem see EstimationProblem; without levels the most likely patient is the typical one
  * @param from a start of its own, tried in the place of the usual ones: where a neighbouring problem has its minimum
  * @returns see MapEstimate
@@ -39,19 +45,26 @@ export function mostLikelyOf(objective: EstimationObjective, from?: readonly num
   const isSame = (a: readonly number[], b: readonly number[]) =>
     a.every((each, i) => Math.abs(each - b[i]!) <= ONE_PLACE * scale[i]!);
 
+  const expected = (eta: readonly number[]) => objective.expectedHessian(eta);
+
+  /** To the minimum near by: cheap steps where they lead there, Newton's where they don't or the true curvature is not positive. */
+  const finished = (start: readonly number[]): Minimum => {
+    const cheap = minimise({ ...functions, start, hessian: expected, options: { ...CLOSE, scale } });
+    if (cheap.status === "converged") {
+      const hessian = hessianByDifferences(functions.gradient, cheap.x, scale);
+      if (hessian !== null && choleskyFactor(hessian) !== null) return { ...cheap, hessian };
+    }
+    return minimise({ ...functions, start: cheap.x, options: { ...CLOSE, scale } });
+  };
+
   const minima: Minimum[] = [];
   let iterations = 0;
   let leastGradient = Number.POSITIVE_INFINITY;
   for (const start of starts) {
-    const near = minimise({
-      ...functions,
-      start,
-      hessian: (eta) => objective.expectedHessian(eta),
-      options: { ...NEAR, scale },
-    });
+    const near = minimise({ ...functions, start, hessian: expected, options: { ...NEAR, scale } });
     iterations += near.iterations;
     if (near.end === "not-finite" || minima.some(({ x }) => isSame(x, near.x))) continue;
-    const found = minimise({ ...functions, start: near.x, options: { ...CLOSE, scale } });
+    const found = finished(near.x);
     iterations += found.iterations;
     if (found.status === "converged" && found.x.every(Number.isFinite)) {
       if (!minima.some(({ x }) => isSame(x, found.x))) minima.push(found);

@@ -24,8 +24,8 @@ export class EstimationObjective {
   readonly order: readonly number[];
   readonly #levels: readonly EstimationLevel[];
   readonly #size: number;
-  readonly #values: ModelSweep;
   readonly #gradients: ModelSweep;
+  #valuesMade: ModelSweep | undefined;
   readonly #term: ResidualTerm = { value: 0, slope: 0, curvature: 0 };
   /** Of the last point a gradient was made at. */
   #at: number[] | undefined;
@@ -40,17 +40,28 @@ export class EstimationObjective {
     this.#size = problem.random.length;
     this.order = problem.levels.map((_, i) => i).sort((a, b) => problem.levels[a]!.time - problem.levels[b]!.time);
     this.#levels = this.order.map((i) => problem.levels[i]!);
-    const names = problem.random.map(({ name }) => name);
+    this.#gradients = this.#sweep(true);
+  }
+
+  #sweep(withDerivatives: boolean): ModelSweep {
+    const { history, random } = this.problem;
+    const names = random.map(({ name }) => name);
     const times = this.#levels.map(({ time }) => time);
-    this.#values = new ModelSweep(problem.history, names, times, false);
-    this.#gradients = new ModelSweep(problem.history, names, times, true);
+    return new ModelSweep(history, names, times, withDerivatives);
+  }
+
+  /** Made when first asked for: the search for the most likely η does without. */
+  get #values(): ModelSweep {
+    this.#valuesMade ??= this.#sweep(false);
+    return this.#valuesMade;
   }
 
   /** O(η). */
   value(eta: ArrayLike<number>): number {
-    if (!this.#run(this.#values, eta)) return Number.POSITIVE_INFINITY;
+    const sweep = this.#values;
+    if (!this.#run(sweep, eta)) return Number.POSITIVE_INFINITY;
     const { residual, residualModel } = this.problem;
-    const { levels } = this.#values;
+    const { levels } = sweep;
     let sum = this.#priorTerm(eta);
     for (let j = 0; j < levels.length; j++) {
       residualTerm(this.#levels[j]!, levels[j]!, residual, residualModel, this.#term);
@@ -88,10 +99,10 @@ export class EstimationObjective {
   }
 
   /** mg/L at each level, in the order of the problem. */
-  predictions(eta: ArrayLike<number>): number[] {
+  predictions(eta: readonly number[]): number[] {
     const predictions = new Array<number>(this.order.length).fill(0);
-    this.#values.run(eta);
-    for (const [j, i] of this.order.entries()) predictions[i] = this.#values.levels[j]!;
+    this.#evaluate(eta);
+    for (const [j, i] of this.order.entries()) predictions[i] = this.#gradients.levels[j]!;
     return predictions;
   }
 

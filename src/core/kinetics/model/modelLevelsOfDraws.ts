@@ -13,7 +13,7 @@ import { ModelSweep } from "./modelSweep.ts";
  * @param times h, ascending (equal ones allowed), finite
  * @returns one array a time: mg/L, a level a draw
  * Outside: bad arguments, names the kind has not, and a draw whose figures leave their range throw RangeError.
- * Accuracy: 1e-9 of the draw's largest level against modelProfile (tests/core/kinetics/model/modelSensitivity.test.ts).
+ * Accuracy: linear kinds 1e-9, saturable 1e-6 of the draw's largest level against modelProfile (tests/core/kinetics/model/modelSensitivity.test.ts).
  * Source: docs/methods/levels-to-this-patient.md.
  * @example modelLevelsOfDraws({ dispositions: [{ from: -Infinity, disposition: { kind: "one-compartment", clearance: 3, volume: 30 } }],
  *   inputs: [{ absorption: { kind: "zero-order", duration: 4 }, bioavailability: 1, lag: 0, doses: [{ time: 0, amount: 300 }] }] },

@@ -24,6 +24,7 @@ export class SaturableStep {
   readonly #state: SweepState;
   /** The depots' content by point and row. */
   readonly #waiting: Float64Array;
+  readonly #ends = new Float64Array(SUBSTEPS.length);
   readonly #powers = new Float64Array(PARTS + 1);
   readonly #columns: readonly Float64Array[];
   readonly #start: Float64Array;
@@ -64,6 +65,7 @@ export class SaturableStep {
   take(total: Float64Array, from: number, h: number): number {
     const { rows } = this.#state;
     this.#waitingSet(total[0]!, from, h);
+    if (rows === 1) return this.#takeAlone(total[0]!, h);
     this.#slopeAt(total, 0, this.#start);
     for (let j = 0; j <= LAST; j++) this.#midpoint(total, SUBSTEPS[j]!, h, this.#columns[j]!);
     const scale = total[0]! + this.#state.rate * h;
@@ -83,6 +85,42 @@ export class SaturableStep {
       if (!(error <= worst)) worst = error;
     }
     return worst / scale;
+  }
+
+  /** The same without derivatives, in plain numbers: bands are made of this. */
+  #takeAlone(total: number, h: number): number {
+    const { rate } = this.#state;
+    const waiting = this.#waiting;
+    const vmax = this.#vmax;
+    const half = this.#half;
+    const ends = this.#ends;
+    const body = Math.max(0, total - waiting[0]!);
+    const start = rate - (vmax * body) / (half + body);
+    for (let j = 0; j <= LAST; j++) {
+      const count = SUBSTEPS[j]!;
+      const part = h / count;
+      const points = PARTS / count;
+      let before = total;
+      let at = total + part * start;
+      for (let m = 1, point = points; m < count; m++, point += points) {
+        const now = Math.max(0, at - waiting[point]!);
+        const next = before + 2 * part * (rate - (vmax * now) / (half + now));
+        before = at;
+        at = next;
+      }
+      ends[j] = at;
+    }
+    let error = 0;
+    for (let k = 1; k <= LAST; k++) {
+      for (let j = LAST; j >= k; j--) {
+        const ratio = SUBSTEPS[j]! / SUBSTEPS[j - k]!;
+        const change = (ends[j]! - ends[j - 1]!) / (ratio * ratio - 1);
+        ends[j] = ends[j]! + change;
+        if (j === LAST) error = Math.abs(change);
+      }
+    }
+    this.result[0] = ends[LAST]!;
+    return error / (total + rate * h);
   }
 
   #midpoint(total: Float64Array, count: number, h: number, column: Float64Array): void {

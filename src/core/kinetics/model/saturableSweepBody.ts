@@ -2,8 +2,9 @@ import { argumentRefuse } from "../argumentCheck.ts";
 import { SaturableStep } from "./saturableStep.ts";
 import type { SweepBody, SweepState } from "./sweepBody.ts";
 
-/** Error allowed in one step, as a part of everything in gut and body. */
-const ALLOWED = 1e-11;
+/** Error allowed in one step, as a part of everything in gut and body: with derivatives, which are differenced again, and without. */
+const ALLOWED = 1e-9;
+const ALLOWED_ALONE = 1e-7;
 /** Step control, as usual for a method of this order: the error goes with the 7th power of the step. */
 const SAFETY = 0.85;
 const ORDER = 7;
@@ -17,6 +18,7 @@ export class SaturableSweepBody
 {
   readonly #state: SweepState;
   readonly #step: SaturableStep;
+  readonly #allowed: number;
   /** mg in gut and body together, by row, at the cursor. */
   readonly #total: Float64Array;
   readonly #waiting: Float64Array;
@@ -33,6 +35,7 @@ export class SaturableSweepBody
   constructor(state: SweepState) {
     this.#state = state;
     this.#step = new SaturableStep(state);
+    this.#allowed = state.rows === 1 ? ALLOWED_ALONE : ALLOWED;
     this.#total = new Float64Array(state.rows);
     this.#waiting = new Float64Array(state.rows);
     this.#left = new Float64Array(state.depots);
@@ -109,7 +112,7 @@ export class SaturableSweepBody
         argumentRefuse("vmax / (km × volume)", this.#linearRate, "/h", `a rate that ${u} h can be followed at`);
       }
       const h = Math.min(this.#h, remaining);
-      const error = this.#step.take(total, this.#cursor, h) / ALLOWED;
+      const error = this.#step.take(total, this.#cursor, h) / this.#allowed;
       const factor = error > 0 ? SAFETY * error ** (-1 / ORDER) : MOST_CHANGE;
       if (!(error <= 1)) {
         this.#h = h * (factor > LEAST_CHANGE ? Math.min(SAFETY, factor) : LEAST_CHANGE);

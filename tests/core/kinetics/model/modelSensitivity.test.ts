@@ -110,3 +110,59 @@ describe("levels and their derivatives by every parameter", () => {
     },
   );
 });
+
+const isLinear = (history: ModelHistory) => history.dispositions[0]!.disposition.kind !== "saturable";
+
+describe("invariants", () => {
+  test.each(CASES.filter(([, history]) => isLinear(history)))(
+    "%s: by bioavailability the level itself; all volumes, flows and doses together: nothing, 1e-12",
+    (_name, history) => {
+      const names = kineticsParametersOf(history);
+      const { levels, derivatives } = modelSensitivity(history, TIMES, names);
+      const by = (name: KineticsParameter) => derivatives[names.indexOf(name)]!;
+      expect(farthest(by("bioavailability"), levels)).toBeLessThanOrEqual(1e-12 * largest(levels));
+      // Twice the body and twice the dose leave every level as it is.
+      const sum = levels.map((_, i) =>
+        names.filter((name) => name !== "ka").reduce((total, name) => total + derivatives[names.indexOf(name)]![i]!, 0),
+      );
+      expect(largest(sum)).toBeLessThanOrEqual(1e-12 * largest(levels));
+    },
+  );
+
+  test("saturable: twice Vmax, volume and dose leave every level as it is, 1e-9", () => {
+    for (const [, history] of CASES.filter(([, each]) => !isLinear(each))) {
+      const { levels, derivatives } = modelSensitivity(history, TIMES, ["vmax", "volume", "bioavailability"]);
+      const sum = levels.map((_, i) => derivatives.reduce((total, each) => total + each[i]!, 0));
+      expect(largest(sum)).toBeLessThanOrEqual(1e-9 * largest(levels));
+    }
+  });
+
+  test("names the kind has not, and names twice, are refused", () => {
+    const history = historyOf([ONE], [FIRST]);
+    expect(() => modelSensitivity(history, [1], ["vmax"])).toThrow(/names\[0\] is vmax/);
+    expect(() => modelScaled(history, ["ka", "ka"], [0, 0])).toThrow(/names\[1\]/);
+    expect(() => modelScaled(history, ["ka"], [Number.NaN])).toThrow(/eta\[0\]/);
+  });
+});
+
+describe("levels of many patients", () => {
+  const ETA = [
+    [0.4, -0.8, 0, 1.1],
+    [-0.3, 0.5, 0, 0.9],
+    [0.7, -1.2, 0, 0.2],
+  ].map((column) => Float64Array.from(column));
+
+  test.each(CASES)(
+    "%s: each is modelProfile of the scaled history, linear 1e-9, saturable 1e-6 of its largest",
+    (_name, history) => {
+      const names = kineticsParametersOf(history).slice(-3);
+      const found = modelLevelsOfDraws(history, names, ETA, TIMES);
+      for (let draw = 0; draw < 4; draw++) {
+        const own = ETA.map((column) => column[draw]!);
+        const expected = modelProfile(modelScaled(history, names, own), TIMES);
+        const levels = found.map((each) => each[draw]!);
+        expect(farthest(levels, expected)).toBeLessThanOrEqual((isLinear(history) ? 1e-9 : 1e-6) * largest(expected));
+      }
+    },
+  );
+});
