@@ -43,7 +43,7 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
     title: `The level of ${when(data)} was not drawn at steady state`,
     text: `${span(number(data, "sinceH"))} after the regimen began or changed. ${waits(data)}${data.hasWindow === true ? " The target window is for a level at steady state." : ""}`,
   }),
-  autoinduction: (data) => ({
+  "autoinduction-unsettled": (data) => ({
     title: `${capital(text(data, "name"))} speeds up its own elimination: clearance will still rise`,
     text: `${sentence(text(data, "text"))}. ${course(data)} The prediction does not follow it (${text(data, "source")}; ${text(data, "basis")}).`,
   }),

@@ -124,7 +124,7 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     withLevel({ steadyStateAfter: figure(71, "h") }),
   ],
   [
-    "autoinduction",
+    "autoinduction-unsettled",
     value({ autoinduction: { text: "Clearance rises.", ...known, settledAfter: figure(28, "d") } }),
     value({ autoinduction: { text: "Clearance rises.", ...known, settledAfter: figure(3, "d") } }),
   ],

@@ -14,7 +14,7 @@ export const autoinduction: ConcernRule = ({ case: value, given, clock }) => {
   if (settledD !== null && courseD >= settledD) return [];
   return [
     concern(
-      "autoinduction",
+      "autoinduction-unsettled",
       settledD === null ? "note" : "check",
       { kind: "medicine" },
       {

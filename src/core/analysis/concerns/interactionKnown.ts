@@ -13,10 +13,11 @@ export const interactionKnown: ConcernRule = ({ case: value }) =>
       const used = effect ? ((interaction.parameter === "clearance" ? effect.clearance : effect.volume) ?? 1) : null;
       const isRecords =
         effect?.source !== undefined && used !== null && Math.abs(used - interaction.factor.value) <= SAME;
-      const state = used === null ? "not-applied" : isRecords ? "applied" : "own-figure";
+      const code =
+        used === null ? "interaction-not-applied" : isRecords ? "interaction-applied" : "interaction-own-figure";
       return concern(
-        `interaction-${state}`,
-        state === "applied" ? "note" : "check",
+        code,
+        code === "interaction-applied" ? "note" : "check",
         { kind: "patient", id: `factor-${index}/${interaction.id}` },
         {
           detail: factor.detail,
