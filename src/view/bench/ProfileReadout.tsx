@@ -3,7 +3,7 @@ import type { Case } from "../../core/case/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import type { CurveStyle } from "../chart/ProfileChart.tsx";
 import type { ProfileScene } from "../chart/profileScene.ts";
-import { curveAt, curvesAt, levelLines, readoutLines } from "./readoutLines.ts";
+import { levelLines, type Readout, readoutLines } from "./readoutLines.ts";
 import type { ShownUnit } from "./shownUnit.ts";
 
 interface ProfileReadoutProps {
@@ -11,6 +11,7 @@ interface ProfileReadoutProps {
   readonly analysis: Analysis;
   readonly scene: ProfileScene;
   readonly hours: number;
+  readonly readouts: readonly Readout[];
   /** The level pointed at. */
   readonly level: LevelResult | null;
   readonly unit: ShownUnit;
@@ -22,10 +23,10 @@ const CHAR = 6.4;
 const GAP = 14;
 
 /** Dotted line, a dot on each curve and a box with what they say. */
-export function ProfileReadout({ value, analysis, scene, hours, level, unit, styleOf }: ProfileReadoutProps) {
+export function ProfileReadout({ value, analysis, scene, hours, readouts, level, unit, styleOf }: ProfileReadoutProps) {
   const x = scene.clock.x(hours);
   const title = instantText(analysis.clock.originMs + hours * 3_600_000, value.timeZone, "dayClock");
-  const all = [...readoutLines(value, analysis, hours, unit), ...(level ? levelLines(value, level, unit) : [])];
+  const all = [...readoutLines(value, readouts, unit), ...(level ? levelLines(value, level, unit) : [])];
   const most = Math.floor((scene.plot.right - scene.plot.left - 24) / CHAR);
   const lines = all.flatMap((line) => wrapped(line, most));
   const width = Math.max(title.length * (CHAR + 0.6), ...lines.map((line) => line.length * CHAR)) + 22;
@@ -35,19 +36,18 @@ export function ProfileReadout({ value, analysis, scene, hours, level, unit, sty
   return (
     <g className="readout" aria-hidden="true" pointerEvents="none">
       <line className="readout-line" x1={x} x2={x} y1={scene.plot.top} y2={scene.plot.bottom} />
-      {curvesAt(analysis, hours).map((option) => {
-        const found = curveAt(analysis, option, hours);
+      {readouts.map(({ option, typical, individual }) =>
         // A level's own mark is not to be hidden.
-        return found && !(level && option === null) ? (
+        level && option === null ? null : (
           <circle
             key={option ?? "given"}
             className={`readout-dot readout-${styleOf(option ?? "given")}`}
             cx={x}
-            cy={scene.concentration.y((found.individual?.q50 ?? found.typical) * scene.factor)}
+            cy={scene.concentration.y((individual?.q50 ?? typical) * scene.factor)}
             r={5}
           />
-        ) : null;
-      })}
+        ),
+      )}
       <rect className="readout-box" x={boxX} y={scene.plot.top + 6} width={width} height={height} rx={2} />
       <text className="readout-title" x={boxX + 11} y={scene.plot.top + 6 + LINE + 2}>
         {title}

@@ -4,12 +4,13 @@ import type { Case } from "../../core/case/index.ts";
 import { fitWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
+import { valueAt } from "../chart/bandAt.ts";
 import { optionStyle, ProfileChart } from "../chart/ProfileChart.tsx";
 import { profileParts } from "../chart/profileParts.ts";
 import { type ProfileScene, profileScene } from "../chart/profileScene.ts";
 import type { BenchSpan } from "./benchSpan.ts";
 import { ProfileReadout } from "./ProfileReadout.tsx";
-import { curveAt, levelLines, levelNear, readoutLines } from "./readoutLines.ts";
+import { levelLines, levelNear, type Readout, readoutLines, readoutsAt } from "./readoutLines.ts";
 import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 import "./ProfileRow.css";
 
@@ -94,6 +95,7 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit, l
   const style = (id: string) =>
     id === "given" ? ("given" as const) : optionStyle(value.options.findIndex((option) => option.id === id));
   const shownH = readoutH ?? clamp(analysis.clock.nowH);
+  const readouts = useMemo(() => readoutsAt(analysis, shownH), [analysis, shownH]);
   const level = readoutH === null ? null : levelNear(analysis, readoutH, pxPerHour);
   return (
     <div
@@ -104,7 +106,7 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit, l
       aria-valuemin={span.fromH}
       aria-valuemax={span.toH}
       aria-valuenow={shownH}
-      aria-valuetext={readoutWords(value, analysis, shownH, unit, level)}
+      aria-valuetext={readoutWords(value, analysis, shownH, readouts, unit, level)}
       aria-describedby={hintId}
       onPointerMove={onPointerMove}
       onPointerDown={onPointerMove}
@@ -133,6 +135,7 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit, l
             analysis={analysis}
             scene={scene}
             hours={readoutH}
+            readouts={readouts}
             level={level}
             unit={unit}
             styleOf={style}
@@ -173,24 +176,26 @@ function readoutWords(
   value: Case,
   analysis: Analysis,
   hours: number,
+  readouts: readonly Readout[],
   unit: ShownUnit,
   level: LevelResult | null,
 ): string {
-  const lines = [...readoutLines(value, analysis, hours, unit), ...(level ? levelLines(value, level, unit) : [])];
+  const lines = [...readoutLines(value, readouts, unit), ...(level ? levelLines(value, level, unit) : [])];
   return [instantText(analysis.clock.originMs + hours * 3_600_000, value.timeZone, "dayClock"), ...lines].join("; ");
 }
 
 /** How near the pointer counts as on a curve, px. */
 const NEAR_CURVE = 28;
 
-/** The option whose curve lies under the pointer. */
+/** The option whose curve, as drawn, lies under the pointer. */
 function optionNear(analysis: Analysis, hours: number, scene: ProfileScene, y: number): string | null {
   if (hours < analysis.clock.nowH) return null;
-  const near = analysis.options.flatMap(({ id }) => {
-    const found = curveAt(analysis, id, hours);
-    if (!found) return [];
-    const at = scene.concentration.y((found.individual?.q50 ?? found.typical) * scene.factor);
-    return Math.abs(at - y) <= NEAR_CURVE ? [{ id, distance: Math.abs(at - y) }] : [];
+  const near = analysis.options.flatMap(({ id, curve, band }) => {
+    const drawn = band ? { timesH: band.timesH, values: band.q50 } : curve;
+    const at = drawn && valueAt(drawn.timesH, drawn.values, hours);
+    if (at === null) return [];
+    const distance = Math.abs(scene.concentration.y(at * scene.factor) - y);
+    return distance <= NEAR_CURVE ? [{ id, distance }] : [];
   });
   return near.sort((a, b) => a.distance - b.distance)[0]?.id ?? null;
 }

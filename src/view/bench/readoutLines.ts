@@ -11,42 +11,53 @@ import { numberPrint, unitSpoken } from "../../core/units/index.ts";
 import { bandAt, bandOf } from "../chart/bandAt.ts";
 import { type ShownUnit, unitFactor } from "./shownUnit.ts";
 
+/** What stands at an instant on one curve, mg/L. */
+export interface Readout {
+  /** null: the doses given. */
+  readonly option: string | null;
+  readonly typical: number;
+  /** This patient's limits, where there is a fit. */
+  readonly individual: Spread | null;
+  /** Since the last counted dose, h; null before the first. */
+  readonly sinceDoseH: number | null;
+}
+
 /** Which curves exist at an instant: the doses given up to the now line, the options from it on. */
-export function curvesAt(analysis: Analysis, hours: number): readonly (string | null)[] {
+function curvesAt(analysis: Analysis, hours: number): readonly (string | null)[] {
   const options = analysis.options.filter((option) => option.curve !== null).map((option) => option.id);
   return hours < analysis.clock.nowH || options.length === 0 ? [null] : options;
 }
 
 /**
- * What stands at an instant on one curve, mg/L: this patient's limits where there is a fit, and the typical patient's value.
- * At a level of the doses given they are the level's own, found there and not read off the drawing.
+ * Every curve at an instant. At a level of the doses given this patient's limits are the level's own, found there and not read
+ * off the drawing.
  */
-export function curveAt(
-  analysis: Analysis,
-  option: string | null,
-  hours: number,
-): { readonly typical: number; readonly individual: Spread | null } | null {
-  const found = concentrationAt(analysis, option, [hours]);
-  if (!found) return null;
-  const band = bandOf(analysis, option);
-  const level = option === null ? analysis.levels.find(({ atH, fit }) => atH === hours && fit !== null) : undefined;
-  return { typical: found[0]!, individual: level?.fit?.predicted ?? (band && bandAt(band, hours)) };
+export function readoutsAt(analysis: Analysis, hours: number): readonly Readout[] {
+  return curvesAt(analysis, hours).flatMap((option) => {
+    const found = concentrationAt(analysis, option, [hours]);
+    if (!found) return [];
+    const band = bandOf(analysis, option);
+    const level = option === null ? analysis.levels.find(({ atH, fit }) => atH === hours && fit !== null) : undefined;
+    return {
+      option,
+      typical: found[0]!,
+      individual: level?.fit?.predicted ?? (band && bandAt(band, hours)),
+      sinceDoseH: hoursSinceDose(analysis, option, hours),
+    };
+  });
 }
 
 /** What the readout says under its clock time: each curve's value, for this patient with its 90 % interval, and the hours since its last dose. */
-export function readoutLines(value: Case, analysis: Analysis, hours: number, unit: ShownUnit): string[] {
+export function readoutLines(value: Case, readouts: readonly Readout[], unit: ShownUnit): string[] {
   const { three, shown } = printing(value, unit);
-  return curvesAt(analysis, hours).flatMap((option) => {
-    const found = curveAt(analysis, option, hours);
-    if (!found) return [];
-    const since = hoursSinceDose(analysis, option, hours);
-    const after = since === null ? "no dose before" : `${numberPrint(since, { decimals: 1 })} h after the dose`;
+  return readouts.map(({ option, individual, typical, sinceDoseH }) => {
+    const after =
+      sinceDoseH === null ? "no dose before" : `${numberPrint(sinceDoseH, { decimals: 1 })} h after the dose`;
     const name = option === null ? "" : `${option}  `;
-    const { individual, typical } = found;
     const figures = individual
       ? `${three(individual.q50)} ${shown}, ${fitWords.interval} ${range(individual, three)}; ${fitWords.typical} ${three(typical)}`
       : `${three(typical)} ${shown}`;
-    return [`${name}${figures}, ${after}`];
+    return `${name}${figures}, ${after}`;
   });
 }
 

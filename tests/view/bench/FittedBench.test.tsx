@@ -3,6 +3,7 @@ import { describe, expect, test, vi } from "vitest";
 import type { Analysis } from "../../../src/core/analysis/index.ts";
 import { fitWords, levelWords } from "../../../src/core/messages/index.ts";
 import { BenchScreen } from "../../../src/view/bench/BenchScreen.tsx";
+import { LearntPanel } from "../../../src/view/bench/LearntPanel.tsx";
 import { LevelEntry } from "../../../src/view/entry/LevelEntry.tsx";
 import { caseFixture } from "../../core/analysis/caseFixture.ts";
 import { fittedAnalysis } from "../../core/analysis/fitFixture.ts";
@@ -42,7 +43,8 @@ describe("this patient on the bench", () => {
     expect(container.querySelectorAll(".profile-band-wide")).toHaveLength(2);
     expect(container.querySelectorAll(".profile-forecast")).toHaveLength(2);
     expect(container.querySelectorAll(".profile-hollow")).toHaveLength(1);
-    expect(await axeFaults(column)).toEqual([]);
+    expect(await axeFaults(chances)).toEqual([]);
+    expect(await axeFaults(steady!)).toEqual([]);
   });
 
   test("a figure of this patient opens its working: levels, draws, seed, method", async () => {
@@ -57,24 +59,10 @@ describe("this patient on the bench", () => {
     expect(within(dialog).getByText(/^median .* mg\/L; 50 % between/)).toBeVisible();
   });
 
-  test("what the levels taught: pictures with words, figures, working; switches are edits that undo", async () => {
-    const { user, column, value, state } = await show();
+  test("what the levels taught opens from the line on what the figures rest on", async () => {
+    const { user, column } = await show();
     await user.click(within(column).getByRole("button", { name: fitWords.openTaught }));
-    const dialog = await screen.findByRole("dialog", { name: fitWords.taughtTitle });
-    expect(
-      within(dialog).getByText(
-        "The level taught much about clearance, something about volume, little about absorption rate.",
-      ),
-    ).toBeVisible();
-    expect(within(dialog).getAllByRole("img")).toHaveLength(3);
-    expect(within(dialog).getByRole("img", { name: /^Clearance: before the levels 90 % between/ })).toBeVisible();
-    expect(within(dialog).getByText(/5\.3.mg\/L, Wed 4 March, 07:30 \(left out: line contaminated\)/)).toBeVisible();
-    await user.click(within(dialog).getByRole("radio", { name: /^robust/ }));
-    expect(value().fit).toEqual({ use: "individual", residualModel: "robust" });
-    await user.click(within(dialog).getByRole("radio", { name: fitWords.uses.typical }));
-    expect(value().fit).toEqual({ use: "typical", residualModel: "robust" });
-    state().undo();
-    expect(value().fit).toEqual({ use: "individual", residualModel: "robust" });
+    expect(await screen.findByRole("dialog", { name: fitWords.taughtTitle })).toBeVisible();
   });
 
   test("L goes from level to level, and the readout says what was predicted there and whether the forecast held", async () => {
@@ -100,6 +88,28 @@ describe("this patient on the bench", () => {
     expect(column.querySelector("[data-reading=peak] .readings-cell")).toBeVisible();
     expect(column.querySelector(".readings-own")).toBeNull();
     expect(within(column).queryByText(/^Chance of/)).toBeNull();
+  });
+});
+
+describe("what the levels taught", () => {
+  test("pictures with words, figures, working; the switches are edits that undo", async () => {
+    const shown = await renderWorkbench(<LearntPanel />, { open, runner: fittedRunner(fittedAnalysis) });
+    const { user, value, state } = shown;
+    expect(
+      await screen.findByText(
+        "The level taught much about clearance, something about volume, little about absorption rate.",
+      ),
+    ).toBeVisible();
+    expect(screen.getAllByRole("img")).toHaveLength(3);
+    expect(screen.getByRole("img", { name: /^Clearance: before the levels 90 % between/ })).toBeVisible();
+    expect(screen.getByText(/5\.3.mg\/L, Wed 4 March, 07:30 \(left out: line contaminated\)/)).toBeVisible();
+    expect(await axeFaults(shown.container)).toEqual([]);
+    await user.click(screen.getByRole("radio", { name: /^robust/ }));
+    expect(value().fit).toEqual({ use: "individual", residualModel: "robust" });
+    await user.click(screen.getByRole("radio", { name: fitWords.uses.typical }));
+    expect(value().fit).toEqual({ use: "typical", residualModel: "robust" });
+    state().undo();
+    expect(value().fit).toEqual({ use: "individual", residualModel: "robust" });
   });
 });
 

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { derive } from "../../../src/core/analysis/index.ts";
 import { readingsGroups } from "../../../src/view/bench/readingsRows.ts";
-import { levelLines, levelNear, readoutLines } from "../../../src/view/bench/readoutLines.ts";
+import { levelLines, levelNear, readoutLines, readoutsAt } from "../../../src/view/bench/readoutLines.ts";
 import { bandAt } from "../../../src/view/chart/bandAt.ts";
 import { profileParts } from "../../../src/view/chart/profileParts.ts";
 import { caseFixture } from "../../core/analysis/caseFixture.ts";
@@ -58,7 +58,7 @@ describe("readout", () => {
   it("says the median and its 90 % interval, the typical value after it", () => {
     const hours = typical.clock.nowH + 20;
     const band = bandAt(fitted.options[0]!.band!, hours)!;
-    const [line] = readoutLines(value, fitted, hours, "mg/L");
+    const [line] = readoutLines(value, readoutsAt(fitted, hours), "mg/L");
     expect(line).toMatch(
       /^A {2}[\d.]+ mg\/L, 90 % interval [\d.]+ to [\d.]+; typical [\d.]+, [\d.]+ h after the dose$/,
     );
@@ -85,7 +85,9 @@ describe("readout", () => {
   it("at a level the curve's limits are the level's own, not read off the drawing", () => {
     const { atH, fit } = fitted.levels[0]!;
     const given = { ...fitted, levels: [{ ...fitted.levels[0]!, fit: { ...fit!, predicted: spread(7.77) } }] };
-    expect(readoutLines(value, given, atH, "mg/L")[0]).toMatch(/^7\.77 mg\/L, 90 % interval 5\.4 to 11\.2; typical/);
+    expect(readoutLines(value, readoutsAt(given, atH), "mg/L")[0]).toMatch(
+      /^7\.77 mg\/L, 90 % interval 5\.4 to 11\.2; typical/,
+    );
   });
 
   it("a band is read off between its times, and nowhere else", () => {
