@@ -27,6 +27,12 @@ const FACTOR_WORDS: Readonly<Record<string, string>> = {
   other: "Event",
 };
 
+const DIVISIBLE_WORDS: Readonly<Record<string, string>> = {
+  half: ", halves allowed",
+  whole: ", whole only",
+  unknown: ", taken whole as the record does not say whether they may be halved",
+};
+
 const OBSERVATION_WORDS: Readonly<Record<string, string>> = {
   weight: "Weight",
   serumCreatinine: "Creatinine",
@@ -104,7 +110,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "dose-not-makeable": (data) => ({
     title: `${quantityPrint({ value: number(data, "amountMg"), unit: "mg" }, { style: "print", microgram: "microgram" })} can't be made from the strengths in the record`,
-    text: `Option ${text(data, "option")}, ${text(data, "product")}: ${(data.strengths as number[]).map(figure).join(", ")} mg${text(data, "divisible") === "half" ? ", halves allowed" : ", whole only"}.`,
+    text: `Option ${text(data, "option")}, ${text(data, "product")}: ${(data.strengths as number[]).map(figure).join(", ")} mg${DIVISIBLE_WORDS[text(data, "divisible")] ?? ""}.`,
   }),
   "given-after-now": (data) => ({
     title: `${countWords(number(data, "count"), "dose", "doses")} on the given lane after the now line`,
