@@ -75,7 +75,11 @@ export function ProfileChart(props: ProfileChartProps) {
       {scene.curves.map((curve) => (
         <path
           key={curve.id}
-          className={`profile-curve profile-${props.styleOf(curve.of)}${curve.isThin ? " profile-thin" : curve.of === props.chosen ? " profile-chosen" : ""}`}
+          className={
+            curve.isThin
+              ? `profile-curve profile-thin profile-thin-${props.styleOf(curve.of)}`
+              : `profile-curve profile-${props.styleOf(curve.of)}${curve.of === props.chosen ? " profile-chosen" : ""}`
+          }
           d={curve.path}
         />
       ))}
