@@ -80,6 +80,7 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
       importMedicine: ward.importMedicine,
       exportMedicine: ward.exportMedicine,
       copyMedicine: ward.copyMedicine,
+      startRecordEdit: ward.startRecordEdit,
       keepRecordEdit: ward.keepRecordEdit,
       saveRecordEdit: ward.saveRecordEdit,
       removeMedicine: ward.removeMedicine,

@@ -11,6 +11,7 @@ import {
 } from "../../core/medicine/index.ts";
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
 import type { MedicineState, RecordEdit } from "./medicineState.ts";
+import { recordEditOf } from "./recordEditOf.ts";
 import { failureIssue } from "./storageSentences.ts";
 import type { StoreContext } from "./storeContext.ts";
 
@@ -79,6 +80,10 @@ export function medicineActions(context: StoreContext): MedicineActions {
 
   return {
     keepRecordEdit,
+
+    startRecordEdit(id) {
+      if (!get().recordEdits[id]) keepRecordEdit(id, recordEditOf(recordOf(id, "startRecordEdit")));
+    },
 
     async readMedicines() {
       const records = await repository.listMedicines();

@@ -21,6 +21,8 @@ export interface MedicineState {
   copyMedicine(id: string): Promise<Result<MedicineRecord>>;
   /** Removes one of the user's own and says so, with the way back. */
   removeMedicine(id: string): Promise<Result<null>>;
+  /** Begins to edit one of the user's own; where edits are kept already, nothing changes. */
+  startRecordEdit(id: string): void;
   /** Keeps unsaved edits; null gives them up. */
   keepRecordEdit(id: string, edit: RecordEdit | null): void;
   /** Stores the edited record, one version further; refused while anything in it is wrong. */

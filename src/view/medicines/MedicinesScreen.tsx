@@ -2,7 +2,6 @@ import { useState } from "react";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
 import { casesWords, issueMessage, medicinesWords, recordWords } from "../../core/messages/index.ts";
 import type { Issue, Result } from "../../core/result/index.ts";
-import { recordEditOf } from "../../shell/store/recordEditOf.ts";
 import { Button } from "../ui/Button.tsx";
 import { FilePicker } from "../ui/FilePicker.tsx";
 import { fileSave } from "../ui/fileSave.ts";
@@ -36,6 +35,7 @@ export function MedicinesScreen() {
   const exportMedicine = useWorkbench((state) => state.exportMedicine);
   const copyMedicine = useWorkbench((state) => state.copyMedicine);
   const removeMedicine = useWorkbench((state) => state.removeMedicine);
+  const startRecordEdit = useWorkbench((state) => state.startRecordEdit);
   const keepRecordEdit = useWorkbench((state) => state.keepRecordEdit);
   const saveRecordEdit = useWorkbench((state) => state.saveRecordEdit);
   const saveWindow = useWorkbench((state) => state.saveWindow);
@@ -66,12 +66,12 @@ export function MedicinesScreen() {
     const result = await copyMedicine(id);
     if (!result.ok) return refuse(recordWords.notSavedTitle, result.issues);
     setSaid(null);
-    keepRecordEdit(result.value.id, recordEditOf(result.value));
+    startRecordEdit(result.value.id);
     choose(result.value.id, "edit");
   };
   const edit = (one: MedicineRecord) => {
     setSaid(null);
-    if (!recordEdits[one.id]) keepRecordEdit(one.id, recordEditOf(one));
+    startRecordEdit(one.id);
     setMode("edit");
   };
   const save = async (id: string) => {
