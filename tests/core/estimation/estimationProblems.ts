@@ -36,7 +36,7 @@ export function problemOf(
     },
     random: NAMES[disposition.kind].map((name, i) => ({ name, omega: 0.3 + 0.05 * i })),
     residual: { additive: 0.2, proportional: 0.1 },
-    levels: levels.map(([time, value, kind = "measured"]) => ({ time, value, kind })),
+    levels: levels.map(([time, value, kind]) => ({ time, value, kind: kind ?? "measured" })),
     residualModel: "normal",
     ...change,
   };
