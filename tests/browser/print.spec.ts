@@ -9,17 +9,36 @@ const DEMOS = [
   { label: "Harbour ward 1, bed 4", file: "demo-data/start.ebbline.json" },
 ] as const;
 
+interface Interval {
+  median: number;
+  interval90: [number, number];
+}
+type Individual = Record<string, Interval> & { steadyState: Record<string, Interval> };
+
 interface Recomputed {
   fingerprint: string;
+  thisPatient: { parameters?: Record<string, Interval> };
   options: Record<
     string,
-    { chosen: boolean; typical: Record<string, { value: number }> & { steadyState: Record<string, { value: number }> } }
+    {
+      chosen: boolean;
+      typical: Record<string, { value: number }> & { steadyState: Record<string, { value: number }> };
+      individual: Individual | null;
+    }
   >;
-  levels: { measured: { value: number }; predicted: { value: number } }[];
+  levels: {
+    measured: { value: number };
+    individual: { predicted: Interval; forecast: Interval & { held: boolean } };
+  }[];
 }
+
+/** A fit takes a second or two, ten times that on a busy machine. */
+const FIT_TIMEOUT = 60_000;
 
 /** Three significant digits, as shown. */
 const shown = (value: number) => String(Number(value.toPrecision(3)));
+const spread = ({ median, interval90 }: Interval, unit: string) =>
+  `${shown(median)} ${unit} (90 %: ${interval90.map(shown).join(" to ")})`;
 const flat = (text: string) => text.replace(/\s+/g, " ");
 
 for (const demo of DEMOS) {
@@ -29,6 +48,10 @@ for (const demo of DEMOS) {
     ) as Recomputed;
     await openDemo(page, demo.label);
     const ids = Object.keys(recomputed.options);
+    const isFitted = recomputed.thisPatient.parameters !== undefined;
+    await expect(page.locator("[data-fit]")).toHaveAttribute("data-fit", isFitted ? "fitted" : "none", {
+      timeout: FIT_TIMEOUT,
+    });
     for (const [i, id] of ids.entries()) {
       const { steadyState, ...span } = recomputed.options[id]!.typical;
       const pairs: [string, number | undefined][] = [
@@ -41,7 +64,21 @@ for (const demo of DEMOS) {
       ];
       for (const [row, value] of pairs) {
         expect(value, `${row} of ${id}`).toBeDefined();
-        await expect(reading(page, row, i)).toContainText(`${shown(value!)} `);
+        await expect(reading(page, row, i)).toContainText(shown(value!));
+      }
+      const { individual } = recomputed.options[id]!;
+      expect(individual !== null).toBe(isFitted);
+      if (!individual) continue;
+      const own: [string, Interval][] = [
+        ["peak", individual.steadyState.peak!],
+        ["lowest", individual.steadyState.trough!],
+        ["average", individual.steadyState.average!],
+        ["spanPeak", individual.peak!],
+      ];
+      for (const [row, { median, interval90 }] of own) {
+        const cell = page.locator(`[data-reading=${row}] .readings-own`).nth(i);
+        await expect(cell).toContainText(shown(median));
+        await expect(cell).toContainText(interval90.map(shown).join(" to "));
       }
     }
 
@@ -50,13 +87,23 @@ for (const demo of DEMOS) {
     const sheets = await printPage(page, info.outputPath("summary.pdf"));
     const text = flat(sheets.texts.join(" "));
     const chosen = ids.find((id) => recomputed.options[id]!.chosen)!;
-    const settled = recomputed.options[chosen]!.typical.steadyState;
-    for (const value of [settled.peak!.value, settled.trough!.value, settled.average!.value]) {
-      expect(text).toContain(`${shown(value)} mg per L`);
+    const { typical, individual } = recomputed.options[chosen]!;
+    for (const name of ["peak", "trough", "average"]) {
+      expect(text).toContain(
+        individual
+          ? spread(individual.steadyState[name]!, "mg per L")
+          : `${shown(typical.steadyState[name]!.value)} mg per L`,
+      );
     }
-    for (const level of recomputed.levels) {
-      expect(text).toContain(`${shown(level.measured.value)} mg per L`);
-      expect(text).toContain(`${shown(level.predicted.value)} mg per L`);
+    expect(text).toContain(`Expected at steady state, ${individual ? "this" : "typical"} patient`);
+    if (isFitted) expect(text).toContain(spread(recomputed.thisPatient.parameters!.CL!, "L per h"));
+    for (const { measured, individual: level } of recomputed.levels) {
+      const { predicted, forecast } = level;
+      expect(text).toContain(`${shown(measured.value)} mg per L`);
+      expect(text).toContain(`${shown(predicted.median)} mg per L (${predicted.interval90.map(shown).join(" to ")})`);
+      expect(text).toContain(
+        `${forecast.interval90.map(shown).join(" to ")} mg per L: ${forecast.held ? "held" : "did NOT hold"}`,
+      );
     }
     const { fingerprint } = recomputed;
     expect(text).toContain([0, 4, 8].map((at) => fingerprint.slice(at, at + 4)).join(" "));

@@ -17,6 +17,7 @@ export const summaryPatientWords = {
   typicalWhen: (highest: string, lowest: string) => `In the typical patient: ${lowered(highest)}; ${lowered(lowest)}.`,
   chanceOf: (what: string) => `Chances: of ${what}.`,
   overSpan: (span: string) => `These days: ${span}${span.endsWith(".") ? "" : "."}`,
+  windowChance: (low: string, high: string) => `Window ${low} to ${high}: chance, hours`,
   chanceSteady: "chance when steady",
   chanceSpan: "these days",
   hoursColumn: "hours (90 %)",

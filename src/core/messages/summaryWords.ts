@@ -7,7 +7,6 @@ export const SUMMARY_TITLES = {
   expectedSteady: "Expected at steady state",
   expectedSpan: "Expected over the days shown",
   hours: "Hours in the window",
-  chance: "Chance in the window",
   kinetics: "Kinetic basis",
   levels: "Levels",
   nextLevel: "Next level",

@@ -19,7 +19,11 @@ interface SummarySheetProps {
 /** The summary as paper: the order and what it rests on, then the details. */
 export function SummarySheet({ model, chart }: SummarySheetProps) {
   return (
-    <div className="summary-sheets" data-theme="paper" data-size={model.pageSize}>
+    <div
+      className={model.levels.isIndividual ? "summary-sheets summary-dense" : "summary-sheets"}
+      data-theme="paper"
+      data-size={model.pageSize}
+    >
       <SummaryPaper model={model} heading={model.heading}>
         <Banners banners={model.banners} />
         {model.order && <Order order={model.order} />}

@@ -10,7 +10,7 @@ import { chosenOption } from "./summaryOrder.ts";
 /** One unit of the drawing is about a CSS pixel on the sheet: 184 mm wide. */
 const WIDTH = 696;
 /** Letter is 18 mm shorter than A4; the profile gives way, not the words. This patient's sheet has more words. */
-const HEIGHT = { A4: { typical: 188, individual: 168 }, Letter: { typical: 146, individual: 136 } };
+const HEIGHT = { A4: { typical: 188, individual: 146 }, Letter: { typical: 146, individual: 100 } };
 /** Room at the right for the window's edges, which stand 34 units beyond the plot. */
 const MARGIN = { top: 26, right: 58, bottom: 24, left: 34 };
 

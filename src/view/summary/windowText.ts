@@ -53,7 +53,7 @@ function individualText(
   const hasHours = SIDES.every((side) => span[HOURS[side]] !== null);
   if (!steady && !overSpan && !hasHours) return null;
   return {
-    title: words.hoursOf(titles.chance, print.number(window.low), print.exact(window.high)),
+    title: patientWords.windowChance(print.number(window.low), print.exact(window.high)),
     span: [
       ...(steady || overSpan ? [patientWords.chanceOf(windowChanceWords(window.quantity))] : []),
       ...(overSpan || hasHours ? [patientWords.overSpan(spanWords(window, span, print, hasHours))] : []),

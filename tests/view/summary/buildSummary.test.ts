@@ -2,6 +2,7 @@
 import { describe, expect, it } from "vitest";
 import type { Case } from "../../../src/core/case/index.ts";
 import { buildSummary, fingerprintGroups } from "../../../src/view/summary/buildSummary.ts";
+import { formulaPrint } from "../../../src/view/summary/figuresText.ts";
 import type { SummaryInput } from "../../../src/view/summary/summaryInput.ts";
 import type { SummaryModel, SummaryRow } from "../../../src/view/summary/summaryModel.ts";
 import { caseOrdering, orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
@@ -214,6 +215,44 @@ describe("levels", () => {
     expect(rows[1]?.measured).toBe("below the limit of 2 mg per L");
     expect(rows[1]?.difference).toBe("");
     expect(rows[2]?.remark).toBe("left out: drawn from the line");
+  });
+});
+
+describe("units", () => {
+  it("lithium stands in mmol per L, exposure too; the window as it was stated", () => {
+    const line = orderedLine({ product: "capsule", amount: { value: 300, unit: "mg" } });
+    const window = {
+      quantity: "trough" as const,
+      low: { value: 0.6, unit: "mmol/L" as const },
+      high: { value: 1, unit: "mmol/L" as const },
+      basis: "invented",
+    };
+    const at = "2026-03-03T19:30:00+00:00";
+    const levels = [
+      { id: "a", at, quantity: { value: 0.8, unit: "mmol/L" as const }, kind: "measured" as const },
+      { id: "b", at, quantity: { value: 5, unit: "mg/L" as const }, kind: "measured" as const },
+    ];
+    const input = summaryInputOf(
+      caseOrdering([line], { window, levels, given: [{ ...line, id: "g", start: at }] }, "lithium"),
+    );
+    const { expected, hours, levels: shown, chart } = plain(buildSummary(input));
+    const steady = input.analysis.options[0]!.typical!.steadyState!;
+    // 6.94 g per mol: mg per L over it is mmol per L.
+    expect(row(expected?.rows, "Average")).toBe(`${Number((steady.average / 6.94).toPrecision(3))} mmol per L`);
+    expect(row(expected?.rows, "AUC in 24 hours")).toBe(
+      `${Number((steady.auc24 / 6.94).toPrecision(3))} mmol hours per L`,
+    );
+    expect(hours?.title).toBe("Hours in the window of 0.6 to 1 mmol per L");
+    expect(shown.rows.map(({ measured }) => measured)).toEqual(["0.8 mmol per L", "5 mg per L (0.72 mmol per L)"]);
+    expect(chart.unit).toBe("mmol per L");
+  });
+
+  it("formulas are read out on paper", () => {
+    expect(formulaPrint("(0.0134 L/h/kg * weight) * (age >= 70 a ? 0.749 : 1)")).toBe(
+      "(0.0134 L ÷ h ÷ kg × weight) × (age at least 70 a, then 0.749, else 1)",
+    );
+    expect(formulaPrint("1633 L")).toBe("1,633 L");
+    expect(formulaPrint("0.12345 * x1000")).toBe("0.12345 × x1000");
   });
 });
 

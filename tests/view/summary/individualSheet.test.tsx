@@ -60,7 +60,8 @@ describe("the sheet of this patient", () => {
   });
 
   it("says the chances in words and the hours with intervals", () => {
-    const { columns, rows, span } = model.hours!;
+    const { title, columns, rows, span } = model.hours!;
+    expect(title).toBe("Window 8 to 15 mg per L: chance, hours");
     expect(columns).toEqual(["chance when steady", "these days", "hours (90 %)"]);
     expect(rows.map(({ label }) => label)).toEqual(["below", "within", "above"]);
     const chance = own().steadyState!.chance!;

@@ -43,6 +43,31 @@ describe("when to draw the next level", () => {
     expect(sentences(value)[0]).toMatch(/^Thursday 12 March 2026, between 07:30 and 08:00, before the 08:00 dose/);
   });
 
+  describe("for a window about a level at a stated time after the dose", () => {
+    const window = {
+      quantity: "trough" as const,
+      low: { value: 8, unit: "mg/L" as const },
+      high: { value: 15, unit: "mg/L" as const },
+      drawFrom: { value: 11.5, unit: "h" as const },
+      drawTo: { value: 12.5, unit: "h" as const },
+      basis: "invented",
+    };
+    const every = (hours: number) => [orderedLine({ repeat: { every: { value: hours, unit: "h" } } })];
+
+    it("is drawn then", () => {
+      expect(sentences(caseOrdering(every(24), { window }))[0]).toMatch(
+        /^Friday 6 March 2026, between 07:30 and 08:30, after the dose of Thu 5 March, 20:00: the first dose at or after 90 % of steady state /,
+      );
+    });
+
+    it("is drawn before the next dose where that comes first", () => {
+      expect(sentences(caseOrdering(every(12), { window }))[0]).toMatch(
+        /^Friday 6 March 2026, between 07:30 and 08:00, after the dose of Thu 5 March, 20:00/,
+      );
+      expect(sentences(caseOrdering(every(8), { window }))[0]).toMatch(/between \d\d:30 and \d\d:00, before the/);
+    });
+  });
+
   it("says that a short course ends before a steady level could be drawn", () => {
     const found = sentences(caseOrdering([orderedLine({ repeat: { every: { value: 12, unit: "h" }, count: 2 } })]));
     expect(found[0]).toMatch(
