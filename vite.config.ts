@@ -40,6 +40,8 @@ export default defineConfig({
           name: "unit",
           root: at("."),
           environment: "node",
+          // Pure code shares its modules from file to file: reading them anew for each took most of the time.
+          isolate: false,
           testTimeout: 30_000,
           include: ["tests/{core,shell,architecture,commands}/**/*.test.ts"],
         },
@@ -49,6 +51,7 @@ export default defineConfig({
           name: "outside",
           root: at("."),
           environment: "node",
+          isolate: false,
           testTimeout: 30_000,
           include: ["tests/outside/**/*.test.ts"],
         },

@@ -173,7 +173,7 @@ describe("importing", () => {
   test.each([
     ["no JSON", "not json"],
     ["cut short", casePrint(caseOf("a")).slice(0, 500)],
-    ["of a newer version", casePrint(caseOf("a")).replace('"version": 1', '"version": 2')],
+    ["of a newer version", casePrint(caseOf("a")).replace('"version": 2', '"version": 3')],
   ])("a file that is %s is refused, nothing is stored", async (_, text) => {
     const { state, repository } = await startWorkbench();
     const outcome = await state().importFile("x", text);
