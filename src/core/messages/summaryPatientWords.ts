@@ -8,7 +8,7 @@ export const summaryPatientWords = {
   /** "9.95 mg per L (90 %: 8.1 to 12.3)" */
   spread: (median: string, low: string, high: string) => `${median} (90 %: ${low} to ${high})`,
   /** In a column that says what it is: "9.95 (8.1 to 12.3)" */
-  cell: (median: string, low: string, high: string) => `${median} (${low} to ${high})`,
+  cell: (median: string, low: string, high: string) => `${median} (${low}\u00a0to\u00a0${high})`,
   days: (figure: string) => `${figure} ${figure === "1" ? "day" : "days"}`,
   highest: "Highest",
   lowest: "Lowest",

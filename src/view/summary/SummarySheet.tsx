@@ -8,6 +8,7 @@ import { SummaryRows } from "./SummaryRows.tsx";
 import { SummaryTable } from "./SummaryTable.tsx";
 import type { SummaryModel } from "./summaryModel.ts";
 import "./paper.css";
+import "./individual.css";
 import "./print.css";
 
 interface SummarySheetProps {

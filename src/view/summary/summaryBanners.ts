@@ -44,9 +44,10 @@ function concernWords(concern: Concern): { readonly title: string; readonly text
   return { title, text: withoutUnitStops(text) };
 }
 
-/** A full stop after the symbol of a unit can be read as a digit: the sentences are joined by a semicolon. */
-function withoutUnitStops(text: string): string {
-  return text.replace(/(\d\s?(?:kg|mg|mcg|g|ng|mL|dL|mmol|h|min|cm))\.(?=\s)/g, "$1;").replace(UNIT_STOP_AT_END, "$1");
-}
+/** The symbol of a unit with a full stop after it. */
+const UNIT_STOP = /(\d\s?(?:kg|mg|mcg|g|ng|mL|dL|mmol|h|min|cm)|\bper\s(?:L|mL|kg|h|min))\.(?=\s|$)/g;
 
-const UNIT_STOP_AT_END = /(\d\s?(?:kg|mg|mcg|g|ng|mL|dL|mmol|h|min|cm))\.$/;
+/** A full stop after the symbol of a unit can be read as a digit: the sentences are joined by a semicolon, and the last ends without. */
+function withoutUnitStops(text: string): string {
+  return text.replace(UNIT_STOP, "$1;").replace(/;$/, "");
+}

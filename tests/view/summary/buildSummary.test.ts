@@ -125,6 +125,8 @@ describe("across the sheet", () => {
         analysis: { ...input.analysis, concerns: [...input.analysis.concerns, toxic(option)] },
       });
     expect(with_("A").banners[0]?.title).toBe("Option A reaches the toxic limit");
+    // A full stop behind a unit could be read as a digit.
+    expect(JSON.stringify(with_("A").details.concerns)).not.toMatch(/per\s(L|h|kg)\./);
     expect(with_("A").marks).toBe("Option A reaches the toxic limit");
     expect(with_("B").banners.map(({ title }) => title)).toEqual(["Unchecked"]);
     expect(with_("B").details.concerns.some(({ title }) => title === "Option B reaches the toxic limit")).toBe(true);
