@@ -4,8 +4,9 @@ import { type DrawnPatients, drawnLevels } from "./drawnPatients.ts";
 import type { Band } from "./fitTypes.ts";
 import { quantileOfSorted, SPREAD_PROBABILITIES } from "./spreadOf.ts";
 
-/** Even points of a band, besides the corners of the curve. */
+/** Even points of a band, besides the corners of the curve: at least so many, and no further apart than this, h. */
 const BAND_POINTS = 240;
+const BAND_STEP_H = 1;
 /** Longest step of the grid the figures of a draw are read from, h. */
 const LONGEST_STEP_H = 0.25;
 
@@ -37,7 +38,7 @@ export function* drawnCurve(
   toH: number,
   looked: LookedAt,
 ): Generator<number, { readonly band: Band; readonly figures: DrawnFigures }> {
-  const bandTimes = curveTimes(history, fromH, toH, BAND_POINTS);
+  const bandTimes = curveTimes(history, fromH, toH, Math.max(BAND_POINTS, Math.ceil((toH - fromH) / BAND_STEP_H)));
   const step = Math.ceil((toH - fromH) / LONGEST_STEP_H);
   const times = together(bandTimes, curveTimes(history, fromH, toH, Math.max(BAND_POINTS, step)), looked.toH);
   const inBand = Int32Array.from(bandTimes, (time) => times.indexOf(time));

@@ -34,6 +34,9 @@ export interface ReadingsGroup {
 
 const three = (value: number) => numberPrint(value, { significant: 3 });
 
+/** From four days on a duration is read in days, as on paper. */
+const DAYS_FROM_H = 96;
+
 /** A unit of more characters than this would break the cells. */
 const LONGEST_UNIT = 5;
 
@@ -64,6 +67,22 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
     figure: (h) => numberPrint(h, { decimals: 1 }),
     ...(hasOwn ? { unit: "", named: ", h" } : { unit: " h" }),
   };
+  /** A row in days where its longest figure is days: four figures of hours tell nobody anything. */
+  const wait = (found: readonly (number | null | undefined)[]): Print =>
+    Math.max(0, ...found.map((h) => h ?? 0)) < DAYS_FROM_H
+      ? hours
+      : {
+          figure: (h) => numberPrint(h / 24, { decimals: 1 }),
+          ...(hasOwn ? { unit: "", named: ", days" } : { unit: " days" }),
+        };
+  const halfLife = wait(
+    analysis.options.map((option) => option.individual?.halfLifeH?.q95 ?? option.typical?.halfLifeH),
+  );
+  const steady = wait(
+    analysis.options.map(
+      ({ individual, typical }) => individual?.steadyState?.timeTo90H.q95 ?? typical?.steadyState?.timeTo90H,
+    ),
+  );
   const times: Print = { figure: three, ...(hasOwn ? { unit: "", named: ", times" } : { unit: " times" }) };
   /** When, under the figure: where there are two columns an option it has no room, and stands in the working. */
   const at = (text: string) => (hasOwn ? {} : { sub: text });
@@ -156,7 +175,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
         row(
           "halfLife",
           "Half-life",
-          hours,
+          halfLife,
           (option) => option.typical?.halfLifeH,
           (own) => own.halfLifeH,
         ),
@@ -170,8 +189,8 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
         settled(
           "timeTo90",
           "90 % steady after",
-          hours,
-          (s) => ({ text: hours.figure(s.timeTo90H) + hours.unit, ...at(`from ${clock(s.steady90AtH)}`) }),
+          steady,
+          (s) => ({ text: steady.figure(s.timeTo90H) + steady.unit, ...at(`from ${clock(s.steady90AtH)}`) }),
           (s) => s.timeTo90H,
         ),
         {
