@@ -163,7 +163,15 @@ function otherTable(record: MedicineRecord): string {
   };
   const rows = [
     ["molar mass of what is measured", quantityText(record.molarMass), ...provenanceCells(record.molarMass)],
-    ...(toxic ? [["toxic from", toxic.both, ...provenanceCells(toxic.figure)]] : []),
+    ...(toxic
+      ? [
+          [
+            record.toxicAt === "trough" ? "toxic from, just before a dose" : "toxic from",
+            toxic.both,
+            ...provenanceCells(toxic.figure),
+          ],
+        ]
+      : []),
     ...figureRows([
       ["largest single dose, as labelled", limits.maximumSingleDose],
       ["largest daily dose, as labelled", limits.maximumDailyDose],

@@ -138,6 +138,8 @@ export interface SpanReadings {
   readonly hoursBelow: number | null;
   readonly hoursWithin: number | null;
   readonly hoursAbove: number | null;
+  /** Highest level just before a dose that follows another, mg/L; null where there is none, or the record's toxic limit is not for it. */
+  readonly highestTrough: number | null;
 }
 
 export interface SteadyStateReadings {
@@ -162,6 +164,8 @@ export interface SteadyStateReadings {
   readonly slower: "absorption" | "elimination";
   /** Levels at the time after a dose the window asks for; null where it asks for none. */
   readonly timed: TimedLevels | null;
+  /** Highest level just before a dose, or at the time after it the window asks for, mg/L; null where the record's toxic limit is not for it. */
+  readonly highestTrough: number | null;
 }
 
 export interface OptionReadings {

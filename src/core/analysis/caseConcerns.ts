@@ -34,6 +34,7 @@ import { levelsTaughtLittle } from "./concerns/levelsTaughtLittle.ts";
 import { levelsWithinError } from "./concerns/levelsWithinError.ts";
 import { levelTiming } from "./concerns/levelTiming.ts";
 import { levelTooEarly } from "./concerns/levelTooEarly.ts";
+import { levelToxic } from "./concerns/levelToxic.ts";
 import { linearApproximation } from "./concerns/linearApproximation.ts";
 import { linesUnreadable } from "./concerns/linesUnreadable.ts";
 import { memoryFigures } from "./concerns/memoryFigures.ts";
@@ -63,6 +64,7 @@ const RULES: readonly ConcernRule[] = [
   inventedMedicine,
   optionToxic,
   optionChanceToxic,
+  levelToxic,
   levelOutOfRange,
   fitWithheld,
   neverSteady,

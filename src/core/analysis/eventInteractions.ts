@@ -5,7 +5,7 @@ type Sex = Case["patient"]["sex"];
 
 /**
  * The record's interactions with what an event names: whole words, whatever the case ("Sodium valproate 500 mg" names valproate).
- * "A, B or C" is named by any of them; "A with B" and "two or more of A, B and C" only by two. "…, woman" is for a woman.
+ * "A, B or C" is named by any of them, "two or more of A, B and C" by two, "A with B or C" by A and one of the others. "…, woman" is for a woman.
  */
 export function eventInteractions(value: Case, factor: Factor): readonly Interaction[] {
   const said = saidOf(factor);
@@ -24,16 +24,22 @@ function saidOf({ kind, detail }: Factor): string | null {
 }
 
 function isNamed(medicine: string, said: string): boolean {
-  const names = medicine
+  const least = TWO_OF.test(medicine) ? 2 : 1;
+  return medicine
     .replace(FOR_ONE_SEX, "")
-    .replace(/^two or more of\b/i, "")
-    .split(/,|\bor\b|\band\b|\bwith\b/i)
-    .map(wordsOf)
-    .filter((name) => name !== "");
-  const found = names.filter((name) => said.includes(` ${name} `)).length;
-  return found >= (/\bwith\b|^two or more of\b/i.test(medicine) ? 2 : 1);
+    .replace(TWO_OF, "")
+    .split(/\bwith\b/i)
+    .every((part) => namesIn(part).filter((name) => said.includes(` ${name} `)).length >= least);
 }
 
+function namesIn(part: string): readonly string[] {
+  return part
+    .split(/,|\bor\b|\band\b/i)
+    .map(wordsOf)
+    .filter((name) => name !== "");
+}
+
+const TWO_OF = /^two or more of\b/i;
 const FOR_ONE_SEX = /,\s*(woman|man)$/i;
 
 function sexOf(medicine: string): Sex {

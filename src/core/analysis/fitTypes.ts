@@ -155,6 +155,8 @@ export interface IndividualReadings {
     readonly fluctuation: Spread;
     /** Levels at the time after a dose the window asks for; null where it asks for none. */
     readonly timed: { readonly afterDoseH: number; readonly lowest: Spread; readonly highest: Spread } | null;
+    /** As in SteadyStateReadings. */
+    readonly highestTrough: Spread | null;
     readonly chance: WindowChance | null;
   } | null;
   /** Share of the draws that never reach a steady state (saturable elimination); their steady-state figures are left out. */

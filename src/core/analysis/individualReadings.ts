@@ -16,14 +16,17 @@ import { regimenPattern } from "./regimenPattern.ts";
 import { spreadOfEqual } from "./spreadOf.ts";
 import { type WindowFigures, windowChance } from "./windowChance.ts";
 import { windowLimits } from "./windowLimits.ts";
-import { timedLevels, windowDrawH } from "./windowTiming.ts";
+import { BEFORE_NEXT_DOSE, timedLevels, windowDrawH } from "./windowTiming.ts";
 
 const STEADY_NAMES = ["peak", "lowest", "average", "accumulation", "swing", "fluctuation"] as const;
 
 /** Of draws that never settle so many, and the interval of the others would hide them: no steady-state figure is given. */
 export const MOST_NEVER_STEADY = 0.05;
 
-type SteadyColumns = Record<(typeof STEADY_NAMES)[number] | "timeTo90H" | "timedLowest" | "timedHighest", Float64Array>;
+type SteadyColumns = Record<
+  (typeof STEADY_NAMES)[number] | "timeTo90H" | "timedLowest" | "timedHighest" | "highestTrough",
+  Float64Array
+>;
 
 /**
  * The readings of an option for every draw of this patient, as intervals: over the span from the drawn curves, of the steady state as the
@@ -73,6 +76,7 @@ interface SteadyDraws {
   readonly isRepeating: boolean;
   /** Hours after a dose the window asks for. */
   readonly drawH: number | null;
+  readonly isTroughToxic: boolean;
   /** How many settle at all; the columns have so many rows. */
   readonly count: number;
   readonly columns: SteadyColumns;
@@ -87,12 +91,16 @@ function* steadyDraws(
 ): Generator<number, SteadyDraws> {
   const found = regimenPattern(value, lines);
   const drawH = windowDrawH(value);
+  const isTroughToxic = value.medicine.toxicAt === "trough";
   const history: ModelHistory = {
     dispositions: [{ from: Number.NEGATIVE_INFINITY, disposition: finalDisposition(typical) }],
     inputs: found.ok ? modelInputs(typical, found.pattern.courses) : [],
   };
   const columns = Object.fromEntries(
-    [...STEADY_NAMES, "timeTo90H", "timedLowest", "timedHighest"].map((name) => [name, new Float64Array(count)]),
+    [...STEADY_NAMES, "timeTo90H", "timedLowest", "timedHighest", "highestTrough"].map((name) => [
+      name,
+      new Float64Array(count),
+    ]),
   ) as SteadyColumns;
   const halfLives = new Float64Array(count);
   let hasHalfLife = true;
@@ -118,6 +126,13 @@ function* steadyDraws(
           columns.timedLowest[settled] = timed.lowest;
           columns.timedHighest[settled] = timed.highest;
         }
+        if (isTroughToxic)
+          columns.highestTrough[settled] = timedLevels(
+            disposition,
+            own.inputs,
+            periodH,
+            drawH ?? BEFORE_NEXT_DOSE,
+          ).highest;
         settled++;
       }
     }
@@ -125,11 +140,18 @@ function* steadyDraws(
   }
   for (const name of Object.keys(columns) as (keyof SteadyColumns)[])
     columns[name] = columns[name].subarray(0, settled);
-  return { isRepeating: found.ok, drawH, count: settled, columns, halfLives: hasHalfLife ? halfLives : null };
+  return {
+    isRepeating: found.ok,
+    drawH,
+    isTroughToxic,
+    count: settled,
+    columns,
+    halfLives: hasHalfLife ? halfLives : null,
+  };
 }
 
 function steadyReadings(
-  { columns, drawH, count, isRepeating }: SteadyDraws,
+  { columns, drawH, isTroughToxic, count, isRepeating }: SteadyDraws,
   draws: number,
   chanceOf: (own: Omit<WindowFigures, "auc24" | "average"> & { readonly average: Float64Array }) => WindowChance | null,
 ): IndividualReadings["steadyState"] {
@@ -153,6 +175,7 @@ function steadyReadings(
       drawH === null
         ? null
         : { afterDoseH: drawH, lowest: spreadOfEqual(timedLowest), highest: spreadOfEqual(timedHighest) },
+    highestTrough: isTroughToxic ? spreadOfEqual(columns.highestTrough) : null,
     chance,
   };
 }

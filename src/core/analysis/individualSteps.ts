@@ -182,7 +182,7 @@ function halfLifeOf({ history, parameters }: FitProblem, posterior: Drawn): Fitt
 }
 
 function drawnPatients({ parameters }: FitProblem, posterior: Drawn, count: number): DrawnPatients {
-  const chosen = systematicDraws(posterior.weights, count);
+  const chosen = systematicDraws(posterior.weights, posterior.eta[0]!, count);
   return {
     names: parameters.map(({ name }) => name),
     count,

@@ -1,11 +1,11 @@
 import type { Case } from "../case/index.ts";
-import { modelExposure, modelSteadyState, modelTimeToSteadyState } from "../kinetics/index.ts";
+import { modelExposure, modelProfile, modelSteadyState, modelTimeToSteadyState } from "../kinetics/index.ts";
 import type { DoseLine } from "../regimen/index.ts";
 import { quantityConvert } from "../units/index.ts";
 import type { Model, OptionReadings, SpanReadings, SteadyStateReadings } from "./analysisTypes.ts";
 import { finalDisposition, modelHistory, modelInputs } from "./modelInputs.ts";
 import { type RegimenPattern, regimenPattern } from "./regimenPattern.ts";
-import { timedLevels, windowDrawH } from "./windowTiming.ts";
+import { BEFORE_NEXT_DOSE, TOGETHER_H, timedLevels, windowDrawH } from "./windowTiming.ts";
 
 const HOUR_MS = 3_600_000;
 
@@ -23,9 +23,15 @@ export function optionReadings(
   model: Model,
   clock: ReadingsClock,
 ): OptionReadings {
-  const span = spanReadings(model, doses, clock, concentrationWindow(value));
+  const isTroughToxic = value.medicine.toxicAt === "trough";
+  const span = {
+    ...spanReadings(model, doses, clock, concentrationWindow(value)),
+    highestTrough: isTroughToxic ? spanTrough(model, doses, clock) : null,
+  };
   const pattern = regimenPattern(value, lines);
-  const settled = pattern.ok ? steadyStateReadings(model, pattern.pattern, clock.originMs, windowDrawH(value)) : null;
+  const settled = pattern.ok
+    ? steadyStateReadings(model, pattern.pattern, clock.originMs, windowDrawH(value), isTroughToxic)
+    : null;
   const hasSteadyState = settled !== null && settled !== "dose-rate-at-or-above-vmax";
   return {
     span,
@@ -51,7 +57,7 @@ function spanReadings(
   doses: ReadonlyMap<string, readonly { readonly time: number; readonly amount: number }[]>,
   clock: ReadingsClock,
   window: { readonly low: number; readonly high: number } | null,
-): SpanReadings {
+): Omit<SpanReadings, "highestTrough"> {
   const found = modelExposure(modelHistory(model, doses), clock.fromH, clock.toH, window ?? undefined);
   return {
     fromH: clock.fromH,
@@ -69,11 +75,23 @@ function spanReadings(
   };
 }
 
+/** The highest level over the span just before a dose; a dose with none before it has no trough. */
+function spanTrough(
+  model: Model,
+  doses: ReadonlyMap<string, readonly { readonly time: number; readonly amount: number }[]>,
+  { fromH, toH }: ReadingsClock,
+): number | null {
+  const all = [...new Set([...doses.values()].flat().map(({ time }) => time))].sort((a, b) => a - b);
+  const times = all.filter((time, i) => time > fromH && time <= toH && i > 0 && time - all[i - 1]! > TOGETHER_H);
+  return times.length === 0 ? null : Math.max(...modelProfile(modelHistory(model, doses), times));
+}
+
 function steadyStateReadings(
   model: Model,
   pattern: RegimenPattern,
   originMs: number,
   drawH: number | null,
+  isTroughToxic: boolean,
 ): SteadyStateReadings | "dose-rate-at-or-above-vmax" {
   const disposition = finalDisposition(model);
   const inputs = modelInputs(model, pattern.courses);
@@ -99,6 +117,9 @@ function steadyStateReadings(
     steady90AtH: (waitFromMs - originMs) / HOUR_MS + slowest.hours,
     slower: slowest.slower,
     timed: drawH === null ? null : timedLevels(disposition, inputs, pattern.periodH, drawH),
+    highestTrough: isTroughToxic
+      ? timedLevels(disposition, inputs, pattern.periodH, drawH ?? BEFORE_NEXT_DOSE).highest
+      : null,
   };
 }
 

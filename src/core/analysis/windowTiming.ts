@@ -19,7 +19,10 @@ export interface TimedLevels {
 }
 
 /** A gap shorter than this is one of doses given together, h. */
-const TOGETHER_H = 1e-9;
+export const TOGETHER_H = 1e-9;
+
+/** In place of hours after a dose: the level just before the next one. */
+export const BEFORE_NEXT_DOSE = Number.POSITIVE_INFINITY;
 
 /** Where the next dose comes first, the level just before it: that is when it would be drawn. */
 export function timedLevels(

@@ -11,7 +11,7 @@ export const FIELD_ORDER: readonly string[] = (
   "kinetics variability clearance maximumRate halfMaximum volume exchange peripheralVolume apparent " +
   "absorptionRate input duration fastFraction slowRate slowDuration slowLag saltFactor salt residualProportional residualAdditive " +
   "correlations between population products product form release strengths concentration divisible swallowWhole lag bioavailability " +
-  "windows toxicFrom limits maximumSingleDose maximumDailyDose earliestSample steadyStateAfter doseLimits sampling interactions " +
+  "windows toxicFrom toxicAt limits maximumSingleDose maximumDailyDose earliestSample steadyStateAfter doseLimits sampling interactions " +
   "autoinduction settledAfter cautions parameter factor formula text category setting number ranges covariate use " +
   "window quantity low high drawFrom drawTo value unit given levels options lines amount start repeat every count clock days weekdays except " +
   "chosen confirmed excluded source basis note fit residualModel notes"

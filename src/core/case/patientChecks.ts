@@ -1,4 +1,11 @@
-import { ageQuestion, creatinineQuestion, type Doubt, heightQuestion, weightQuestion } from "../patient/index.ts";
+import {
+  ageQuestion,
+  albuminQuestion,
+  creatinineQuestion,
+  type Doubt,
+  heightQuestion,
+  weightQuestion,
+} from "../patient/index.ts";
 import { type Issue, issue } from "../result/index.ts";
 import { instantMs } from "../time/index.ts";
 import { quantityConvert } from "../units/index.ts";
@@ -45,10 +52,8 @@ function observationIssues(observation: Observation, path: Path): Issue[] {
       return impossible(weightQuestion({ weightKg: quantityConvert(observation.quantity, "kg") }), path);
     case "serumCreatinine":
       return impossible(creatinineQuestion(observation.quantity), path);
-    case "albumin": {
-      const { value, unit } = observation.quantity;
-      return value > 0 ? [] : [issue("albumin-not-positive", { found: value, unit }, path)];
-    }
+    case "albumin":
+      return impossible(albuminQuestion(observation.quantity), path);
   }
 }
 

@@ -14,6 +14,7 @@ export const RECORD_VERSION = 2;
 /** Units in which the concentrations of a medicine may be shown first. */
 export const DISPLAY_UNITS = ["mg/L", "ug/L", "umol/L", "nmol/L", "mmol/L"] as const;
 export type DisplayUnit = (typeof DISPLAY_UNITS)[number];
+export const TOXIC_AT = ["any", "trough"] as const;
 /** Units a target window may be in: a concentration by mass or by amount, or an exposure. */
 export const WINDOW_UNITS = [...DISPLAY_UNITS, "mg.h/L"] as const;
 
@@ -166,6 +167,8 @@ export const recordShapeSchema = z.strictObject({
   products: z.array(productSchema).min(1),
   windows: z.array(recordWindowSchema),
   toxicFrom: figureSchema.optional(),
+  /** Which levels the toxic limit is for: any (absent), or only those just before a dose. */
+  toxicAt: z.enum(TOXIC_AT).optional(),
   /** mg as labelled. */
   limits: z.strictObject({ maximumSingleDose: figureSchema.optional(), maximumDailyDose: figureSchema.optional() }),
   /** Hours after a dose before which a level is not to be drawn, where a source says so. */

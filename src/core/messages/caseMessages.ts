@@ -42,8 +42,6 @@ export const caseMessages: Readonly<Record<string, MessageFunction>> = {
     `A factor with an effect ends at ${String(from)}, the moment it begins: it must last, or be taken away.`,
   "factor-onset": ({ found, most }) =>
     `An onset of ${String(found)} days can't be: write a number above 0 and up to ${String(most)}, or none for an effect that is there at once.`,
-  "albumin-not-positive": ({ found, unit }) =>
-    `An albumin of ${String(found)} ${String(unit)} is impossible: it must be above 0.`,
   "level-not-positive": ({ found, unit }) =>
     `A level of ${String(found)} ${String(unit)} can't be entered: write a value above 0, or the assay's limit marked as below it.`,
   "option-named-given": () => 'An option can\'t be called "given": that is the name of the given lane.',

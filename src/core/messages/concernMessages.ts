@@ -80,7 +80,10 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "option-toxic": (data) => ({
     title: `Option ${text(data, "option")} reaches the toxic limit`,
-    text: `Highest predicted ${concentration(data, "peak")}; the record's toxic limit is ${concentration(data, "from")} (${text(data, "source")}).`,
+    text:
+      data.at === "trough"
+        ? `Highest predicted just before a dose ${concentration(data, "peak")}; the record's toxic limit for that level is ${concentration(data, "from")} (${text(data, "source")}).`
+        : `Highest predicted ${concentration(data, "peak")}; the record's toxic limit is ${concentration(data, "from")} (${text(data, "source")}).`,
   }),
   "level-after-now": (data) => ({
     title: `The level of ${when(data)} lies after the now line`,

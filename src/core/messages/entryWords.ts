@@ -19,7 +19,6 @@ export const windowWords = {
   set: "Use this window",
   clear: "Take the window away",
   current: "Now used",
-  asStored: (low: string, high: string) => `stored as ${low} to ${high}`,
 } as const;
 
 export const patientWords = {

@@ -169,7 +169,7 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
   "option-chance-below": (data) => outsideChance(data, "below", "above"),
   "option-chance-toxic": (data) => ({
     title: `Option ${text(data, "option")} may reach the toxic limit in this patient`,
-    text: `With a chance of at least ${percent(number(data, "chance"))} % the highest reaches the record's toxic limit, ${concentration(data, "from")} (${text(data, "source")}); median highest ${concentration(data, "median")}, 90 % between ${concentration(data, "low")} and ${concentration(data, "high")}.`,
+    text: `With a chance of at least ${percent(number(data, "chance"))} % the highest${data.at === "trough" ? " just before a dose at steady state" : ""} reaches the record's toxic limit${data.at === "trough" ? " for that level" : ""}, ${concentration(data, "from")} (${text(data, "source")}); median highest ${concentration(data, "median")}, 90 % between ${concentration(data, "low")} and ${concentration(data, "high")}.`,
   }),
 };
 

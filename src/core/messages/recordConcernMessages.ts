@@ -35,6 +35,10 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
     title: `The level of ${when(data)} would be usual only in another unit`,
     text: `${printed(data.quantity as Quantity)}, where this medicine is used at ${concentration(data, "low")} to ${concentration(data, "high")}; in ${orList((data.units as readonly UnitCode[]).map((unit) => unitSpoken(unit, "print")))} the same number would be. Check the unit, or confirm the value.`,
   }),
+  "level-toxic": (data) => ({
+    title: `The level of ${when(data)} reaches the toxic limit`,
+    text: `Measured ${concentration(data, "measured")}${data.at === "trough" ? " just before a dose" : ""}; the record's toxic limit${data.at === "trough" ? " for that level" : ""} is ${concentration(data, "from")} (${text(data, "source")}). Look at the patient and at how the sample was drawn before any further dose.`,
+  }),
   "level-too-early": (data) => ({
     title: `The level of ${when(data)} was drawn too soon after the dose`,
     text: `${hours(number(data, "afterDoseH"))} after it; the record says not before ${hours(number(data, "earliestH"))} (${text(data, "source")}).`,

@@ -90,6 +90,8 @@ export const recordWords = {
   drawnFrom: (from: string) => `drawn ${from} or more after the dose`,
   drawnTo: (to: string) => `drawn up to ${to} after the dose`,
   windowFor: (use: string, sampling: string) => `For ${use}; ${sampling}.`,
+  /** Behind the toxic limit: "25 microgram/L, just before a dose" */
+  toxicTrough: (value: string) => `${value}, just before a dose`,
   saltOf: (salt: string) => `labelled as ${salt}`,
 
   // the trial: reference patient, course, curve
@@ -265,6 +267,8 @@ export const recordWords = {
   drawFrom: "Drawn from, after the dose",
   drawTo: "Drawn to, after the dose",
   toxicFrom: "Toxic from",
+  toxicAt: "The toxic limit is for",
+  toxicAts: { any: "any level", trough: "the level just before a dose" },
   maximumSingleDose: "Highest single dose, as labelled",
   maximumDailyDose: "Highest daily dose, as labelled",
   doseLimit: "dose limit in words",

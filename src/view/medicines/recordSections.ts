@@ -23,7 +23,7 @@ export interface RecordSection {
 export function recordSections(record: MedicineRecord): readonly RecordSection[] {
   return [
     { id: "population", heading: recordWords.ranges, rows: populationRows(record) },
-    { id: "windows", heading: medicinesWords.windows, rows: [...windowRows(record), ...optional(record, "toxicFrom")] },
+    { id: "windows", heading: medicinesWords.windows, rows: [...windowRows(record), ...toxicRows(record)] },
     { id: "limits", heading: recordWords.limits, rows: figureRows(record.limits) },
     {
       id: "sampling",
@@ -46,6 +46,13 @@ export function recordSections(record: MedicineRecord): readonly RecordSection[]
         : [],
     },
   ];
+}
+
+function toxicRows(record: MedicineRecord): RecordRow[] {
+  const isTrough = record.toxicAt === "trough";
+  return optional(record, "toxicFrom").map((row) =>
+    isTrough ? { ...row, value: recordWords.toxicTrough(row.value) } : row,
+  );
 }
 
 function optional(record: MedicineRecord, key: "toxicFrom" | "earliestSample" | "steadyStateAfter"): RecordRow[] {

@@ -152,6 +152,7 @@ export function fittedAnalysis(typical: Analysis, change: Partial<IndividualFit>
             swing: spread(steadyState.swing, 1.1),
             fluctuation: spread(steadyState.fluctuation, 1.1),
             timed: null,
+            highestTrough: null,
             chance: { below: 0.16, within: 0.74, above: 0.1 },
           },
           shareNeverSteady: 0,

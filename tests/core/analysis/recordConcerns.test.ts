@@ -116,6 +116,12 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     value({}, { levels: [level(TROUGH, { quantity: { value: 55, unit: "mg/L" } })] }),
     value({}, { levels: [level(TROUGH, { quantity: { value: 55, unit: "mg/L" }, confirmed: true })] }),
   ],
+  [
+    "level-toxic",
+    withLevel({ toxicFrom: figure(6, "mg/L"), toxicAt: "trough" }),
+    // Seven hours after the dose and five before the next: no trough.
+    withLevel({ toxicFrom: figure(6, "mg/L"), toxicAt: "trough" }, "2026-03-04T03:00:00+00:00"),
+  ],
   ["level-too-early", withLevel({ earliestSample: figure(12, "h") }), withLevel({ earliestSample: figure(11, "h") })],
   [
     "level-not-steady",
@@ -329,6 +335,8 @@ describe("which interactions an event names", () => {
     ["diltiazem, nifedipine or verapamil", "amlodipine started", false],
     ["phenytoin with phenobarbital or felbamate", "phenytoin", false],
     ["phenytoin with phenobarbital or felbamate", "phenytoin and phenobarbital", true],
+    ["phenytoin with phenobarbital or felbamate", "felbamate beside phenytoin", true],
+    ["phenytoin with phenobarbital or felbamate", "phenobarbital and felbamate", false],
     ["two or more of phenytoin, phenobarbital and carbamazepine", "carbamazepine", false],
     ["two or more of phenytoin, phenobarbital and carbamazepine", "carbamazepine, phenytoin", true],
   ])("%s, by the words “%s”: %s", (medicine, detail, wanted) => {

@@ -139,9 +139,9 @@ const ROWS: readonly (readonly [string, Change, string, string])[] = [
     "patient.observations.1.quantity.value",
   ],
   [
-    "an albumin of 0",
-    (c) => (c.patient.observations[2]!.quantity.value = 0),
-    "albumin-not-positive",
+    "an impossible albumin",
+    (c) => (c.patient.observations[2]!.quantity.value = 0.5),
+    "albumin-impossible",
     "patient.observations.2.quantity.value",
   ],
   [

@@ -1,16 +1,18 @@
 import { quantityConvert } from "../../units/index.ts";
 import { type ConcernRule, concern } from "../concernRule.ts";
+import type { IndividualReadings, Spread } from "../fitTypes.ts";
 import { sourceText } from "../typicalModel.ts";
 
-/** This patient's highest concentration may reach the record's toxic limit: 1 in 20 is pointed out, 1 in 4 is grave. Read off the quantiles, so "at least". */
+/** This patient's highest concentration, or the highest just before a dose at steady state where the limit is for that, may reach the record's toxic limit: 1 in 20 is pointed out, 1 in 4 is grave. Read off the quantiles, so "at least". */
 export const optionChanceToxic: ConcernRule = ({ case: { medicine }, options }) => {
   const limit = medicine.toxicFrom;
   if (!limit) return [];
+  const at = medicine.toxicAt ?? "any";
   const from = quantityConvert({ value: limit.value, unit: limit.unit }, "mg/L", medicine.molarMass.value);
   return options.flatMap((option) => {
     if (!option.individual) return [];
-    const { span, steadyState } = option.individual;
-    const peak = steadyState && steadyState.peak.q95 > span.peak.q95 ? steadyState.peak : span.peak;
+    const peak = highest(option.individual, at);
+    if (!peak) return [];
     const chance =
       peak.q05 >= from ? 0.95 : peak.q50 >= from ? 0.5 : peak.q75 >= from ? 0.25 : peak.q95 >= from ? 0.05 : 0;
     return chance === 0
@@ -22,6 +24,7 @@ export const optionChanceToxic: ConcernRule = ({ case: { medicine }, options }) 
             { kind: "option", id: option.id },
             {
               option: option.id,
+              at,
               chance,
               from,
               median: peak.q50,
@@ -33,3 +36,8 @@ export const optionChanceToxic: ConcernRule = ({ case: { medicine }, options }) 
         ];
   });
 };
+
+function highest({ span, steadyState }: IndividualReadings, at: "any" | "trough"): Spread | null {
+  if (at === "trough") return steadyState?.highestTrough ?? null;
+  return steadyState && steadyState.peak.q95 > span.peak.q95 ? steadyState.peak : span.peak;
+}

@@ -1,12 +1,9 @@
 import type { Case } from "../../case/index.ts";
 import type { RecordWindow } from "../../medicine/index.ts";
 import { type Quantity, quantityConvert } from "../../units/index.ts";
-import { type ConcernContext, type ConcernRule, clockMs, concern } from "../concernRule.ts";
+import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
+import { isTroughTime, untilNextDose } from "../troughTime.ts";
 import { sourceText } from "../typicalModel.ts";
-
-/** A trough is drawn in the last part of the interval: this much of it, or two hours where that is less, may be left (our own rule, common practice). */
-const TROUGH_SHARE = 0.25;
-const TROUGH_LEAST_H = 2;
 
 /** A level drawn at another time after the dose than the window is about: the two are not to be compared as they stand. */
 export const windowSampling: ConcernRule = (context) => {
@@ -34,7 +31,7 @@ export const windowSampling: ConcernRule = (context) => {
       return isOff ? [concern("level-off-window-time", "check", about, { ...data, fromH, toH, source })] : [];
     }
     const leftH = untilNextDose(context, level.atH, level.afterDoseH);
-    if (leftH === null || leftH <= Math.max(TROUGH_LEAST_H, TROUGH_SHARE * (leftH + level.afterDoseH))) return [];
+    if (leftH === null || isTroughTime(level.afterDoseH, leftH)) return [];
     return [concern("level-not-trough", "check", about, { ...data, leftH })];
   });
 };
@@ -52,14 +49,4 @@ function recordWindow({ window, medicine }: Case): RecordWindow | null {
 function drawnBetween({ drawFrom, drawTo }: Drawn): { fromH: number | null; toH: number | null } | null {
   if (!drawFrom && !drawTo) return null;
   return { fromH: drawFrom ? quantityConvert(drawFrom, "h") : null, toH: drawTo ? quantityConvert(drawTo, "h") : null };
-}
-
-/** Hours from a level to the next dose as given; where none was given after it, the last interval goes on. null with a single dose. */
-function untilNextDose({ given }: ConcernContext, levelH: number, afterDoseH: number): number | null {
-  const times = given.filter((mark) => mark.countedMg > 0).map((mark) => mark.atH);
-  const next = times.find((atH) => atH >= levelH);
-  if (next !== undefined) return next - levelH;
-  const lastH = levelH - afterDoseH;
-  const before = times.filter((atH) => atH < lastH).at(-1);
-  return before === undefined ? null : Math.max(0, lastH - before - afterDoseH);
 }

@@ -5,6 +5,7 @@ import {
   type DraftPath,
   draftTyped,
   isDraftGroup,
+  TOXIC_AT,
   WINDOW_UNITS,
 } from "../../../core/medicine/index.ts";
 import { recordWords, windowQuantityWord } from "../../../core/messages/index.ts";
@@ -23,11 +24,17 @@ const ABOUT = ["lowest-and-highest", "trough", "peak", "average", "auc24"] as co
 
 export function WindowsSection() {
   return (
-    <DraftSection id="windows" heading={recordWords.section.windows} roots={["windows", "toxicFrom"]}>
+    <DraftSection id="windows" heading={recordWords.section.windows} roots={["windows", "toxicFrom", "toxicAt"]}>
       <DraftList path={["windows"]} entry={recordWords.window1} entryNew={windowNew}>
         {(path) => <WindowFields path={path} />}
       </DraftList>
       <DraftFigure path={["toxicFrom"]} label={recordWords.toxicFrom} units={DISPLAY_UNITS} isOptional />
+      <DraftChoice
+        path={["toxicAt"]}
+        label={recordWords.toxicAt}
+        choices={TOXIC_AT.map((value) => ({ value, label: recordWords.toxicAts[value] }))}
+        prompt={recordWords.toxicAts.any}
+      />
     </DraftSection>
   );
 }
