@@ -11,7 +11,7 @@ import type { EstimationProblem, MapEstimate } from "./estimationTypes.ts";
 import { residualSd } from "./residualTerm.ts";
 
 /** Near enough to tell whether a minimum is a new one. */
-const NEAR: MinimiseOptions = { gradientTolerance: 1e-3, stepTolerance: 1e-3, mostIterations: 60 };
+const NEAR: MinimiseOptions = { gradientTolerance: 1e-2, stepTolerance: 1e-2, mostIterations: 60 };
 const CLOSE: MinimiseOptions = { gradientTolerance: 1e-8, stepTolerance: 1e-9, mostIterations: 60 };
 /** Two minima nearer than this, in ω (at most 1), are one. */
 const ONE_PLACE = 0.02;

@@ -28,10 +28,11 @@ export class EstimationObjective {
   #valuesMade: ModelSweep | undefined;
   readonly #term: ResidualTerm = { value: 0, slope: 0, curvature: 0 };
   /** Of the last point a gradient was made at. */
-  #at: number[] | undefined;
+  readonly #at: Float64Array;
+  #isMade = false;
   #value = 0;
-  #gradient: number[] = [];
-  #curvature: number[] = [];
+  #gradient: readonly number[] = [];
+  readonly #curvature: Float64Array;
 
   constructor(problem: EstimationProblem) {
     estimationCheck(problem);
@@ -41,6 +42,8 @@ export class EstimationObjective {
     this.order = problem.levels.map((_, i) => i).sort((a, b) => problem.levels[a]!.time - problem.levels[b]!.time);
     this.#levels = this.order.map((i) => problem.levels[i]!);
     this.#gradients = this.#sweep(true);
+    this.#at = new Float64Array(this.#size);
+    this.#curvature = new Float64Array(this.#levels.length);
   }
 
   #sweep(withDerivatives: boolean): ModelSweep {
@@ -87,15 +90,22 @@ export class EstimationObjective {
     this.#evaluate(eta);
     const { precision } = this.prior;
     const { derivatives } = this.#gradients;
-    return precision.map((row, a) =>
-      row.map((each, b) => {
-        let sum = each;
-        for (let j = 0; j < this.#curvature.length; j++) {
-          sum += this.#curvature[j]! * derivatives[a]![j]! * derivatives[b]![j]!;
-        }
-        return sum;
-      }),
-    );
+    const curvature = this.#curvature;
+    const size = this.#size;
+    const hessian: number[][] = [];
+    for (let a = 0; a < size; a++) {
+      const row = new Array<number>(size);
+      const byA = derivatives[a]!;
+      for (let b = 0; b <= a; b++) {
+        const byB = derivatives[b]!;
+        let sum = precision[a]![b]!;
+        for (let j = 0; j < curvature.length; j++) sum += curvature[j]! * byA[j]! * byB[j]!;
+        row[b] = sum;
+        if (b < a) hessian[b]![a] = sum;
+      }
+      hessian.push(row);
+    }
+    return hessian;
   }
 
   /** mg/L at each level, in the order of the problem. */
@@ -107,31 +117,39 @@ export class EstimationObjective {
   }
 
   #evaluate(eta: readonly number[]): void {
-    const before = this.#at;
-    if (before?.every((each, i) => each === eta[i])) return;
-    this.#at = [...eta];
+    const size = this.#size;
+    const at = this.#at;
+    let isSame = this.#isMade;
+    for (let i = 0; i < size; i++) {
+      if (at[i] !== eta[i]) isSame = false;
+      at[i] = eta[i]!;
+    }
+    if (isSame) return;
+    this.#isMade = true;
     const { precision } = this.prior;
-    const { residual, residualModel, levels } = this.problem;
-    this.#curvature = [];
-    if (!this.#run(this.#gradients, eta)) {
-      this.#value = Number.POSITIVE_INFINITY;
-      this.#gradient = eta.map(() => Number.POSITIVE_INFINITY);
-      return;
-    }
-    const gradient = precision.map((row) => row.reduce((sum, each, b) => sum + each * eta[b]!, 0));
-    let sum = this.#priorTerm(eta);
-    for (let j = 0; j < levels.length; j++) {
-      residualTerm(this.#levels[j]!, this.#gradients.levels[j]!, residual, residualModel, this.#term);
-      const { value, slope, curvature } = this.#term;
-      sum += value;
-      this.#curvature.push(curvature);
-      for (let a = 0; a < gradient.length; a++) {
-        gradient[a] = gradient[a]! + slope * this.#gradients.derivatives[a]![j]!;
+    const { residual, residualModel } = this.problem;
+    const { levels, derivatives } = this.#gradients;
+    const gradient = new Array<number>(size).fill(0);
+    this.#gradient = gradient;
+    let sum = Number.POSITIVE_INFINITY;
+    if (this.#run(this.#gradients, eta)) {
+      sum = this.#priorTerm(eta);
+      for (let a = 0; a < size; a++) {
+        const row = precision[a]!;
+        for (let b = 0; b < size; b++) gradient[a] = gradient[a]! + row[b]! * eta[b]!;
       }
-    }
-    const isNumber = sum < Infinity && gradient.every(Number.isFinite);
+      for (let j = 0; j < levels.length; j++) {
+        residualTerm(this.#levels[j]!, levels[j]!, residual, residualModel, this.#term);
+        const { value, slope, curvature } = this.#term;
+        sum += value;
+        this.#curvature[j] = curvature;
+        for (let a = 0; a < size; a++) gradient[a] = gradient[a]! + slope * derivatives[a]![j]!;
+      }
+    } else this.#curvature.fill(0);
+    let isNumber = sum < Infinity;
+    for (let a = 0; a < size; a++) if (!Number.isFinite(gradient[a]!)) isNumber = false;
     this.#value = isNumber ? sum : Number.POSITIVE_INFINITY;
-    this.#gradient = isNumber ? gradient : gradient.map(() => Number.POSITIVE_INFINITY);
+    if (!isNumber) gradient.fill(Number.POSITIVE_INFINITY);
   }
 
   /** False where no patient has such figures. */

@@ -1,7 +1,8 @@
 import type { Matrix } from "./choleskyFactor.ts";
 import { hessianByDifferences } from "./hessianByDifferences.ts";
 import { minimumTest, scaledGradient } from "./minimumTest.ts";
-import { symmetricEigen } from "./symmetricEigen.ts";
+import { NewtonStep } from "./newtonStep.ts";
+import { type SymmetricEigen, symmetricEigen } from "./symmetricEigen.ts";
 import { trustRegionStep } from "./trustRegionStep.ts";
 
 type Point = readonly number[];
@@ -66,7 +67,7 @@ const SMALLEST_RADIUS = 1e-14;
  * A local minimum of a smooth function of a few variables.
  *
  * Formula: Newton steps in a trust region: p minimises g·p + ½ pᵀHp over ‖D·p‖ <= radius (trustRegionStep), Dᵢ the largest
- * √|Hᵢᵢ| met so far. The radius is divided by 4 when less than a quarter of the promised fall came, or a value that is not finite,
+ * √|Hᵢᵢ| met so far; by Cholesky's method where H is positive definite (newtonStep). The radius is divided by 4 when less than a quarter of the promised fall came, or a value that is not finite,
  * and doubled when more than three quarters did at its edge. Saddles and hilltops are left along the direction of negative
  * curvature. Falls too small to be seen in the value are judged by the gradient.
  * @param problem value, gradient, start (1 to about 10 variables), second derivatives if known, options; see MinimiseProblem.
@@ -89,6 +90,8 @@ export function minimise(problem: MinimiseProblem): Minimum {
   const scale = options.scale ?? problem.start.map(() => 1);
   checkArguments(problem.start, scale, { gradientTolerance, stepTolerance });
 
+  const count = problem.start.length;
+  const newton = new NewtonStep(count);
   let evaluations = 0;
   let gradientEvaluations = 0;
   const valueAt = (x: Point) => {
@@ -101,10 +104,10 @@ export function minimise(problem: MinimiseProblem): Minimum {
   };
   const hessianAt = (x: Point): Matrix | null => {
     const found = problem.hessian ? problem.hessian(x) : hessianByDifferences(gradientAt, x, scale);
-    return found?.every((row) => row.every(Number.isFinite)) ? found : null;
+    return found !== null && isFiniteMatrix(found) ? found : null;
   };
 
-  let x = [...problem.start];
+  let x: Point = [...problem.start];
   let value = valueAt(x);
   let gradient: Point = gradientAt(x);
   let hessian: Matrix | null = null;
@@ -112,7 +115,7 @@ export function minimise(problem: MinimiseProblem): Minimum {
   const result = (end: MinimiseEnd): Minimum => ({
     status: end === "minimum" ? "converged" : "not-converged",
     end,
-    x,
+    x: [...x],
     value,
     gradientNorm: Math.hypot(...gradient),
     hessian: hessian?.map((row) => [...row]) ?? [],
@@ -120,41 +123,69 @@ export function minimise(problem: MinimiseProblem): Minimum {
     evaluations,
     gradientEvaluations,
   });
-  if (!Number.isFinite(value) || !gradient.every(Number.isFinite)) return result("not-finite");
+  if (!Number.isFinite(value) || !isFiniteRow(gradient)) return result("not-finite");
 
-  let shape = x.map(() => 0);
+  const shape = new Float64Array(count);
+  const unit = new Float64Array(count);
+  const slope = new Array<number>(count).fill(0);
+  /** Length of x in the variables of even curvature. */
+  const reach = () => {
+    let sum = 0;
+    for (let i = 0; i < count; i++) sum += (unit[i]! * Math.max(Math.abs(x[i]!), scale[i]!)) ** 2;
+    return Math.sqrt(sum);
+  };
   let radius = 0;
   for (; ; iterations++) {
     // 1. What the surface looks like here, and whether this is the place.
     hessian = hessianAt(x);
     if (hessian === null) return result("not-finite");
-    if (hessian.every((row) => row.every((entry) => entry === 0)) && gradient.every((entry) => entry === 0)) {
+    const curvature: Matrix = hessian;
+    if (gradient.every((entry) => entry === 0) && curvature.every((row) => row.every((entry) => entry === 0))) {
       return result("flat");
     }
     if (scaledGradient(gradient, x, value, scale) <= gradientTolerance) {
-      if (minimumTest(hessian, gradient, x, scale, gradientTolerance * Math.max(Math.abs(value), 1)) <= stepTolerance) {
-        return result("minimum");
-      }
+      const noSlope = gradientTolerance * Math.max(Math.abs(value), 1);
+      if (minimumTest(curvature, gradient, x, scale, noSlope) <= stepTolerance) return result("minimum");
     }
     if (iterations >= mostIterations) return result("most-iterations");
 
     // 2. The model in variables of even curvature.
-    const curvature: Matrix = hessian;
-    shape = shape.map((before, i) => Math.max(before, Math.sqrt(Math.abs(curvature[i]![i]!))));
-    const unit = shape.map((each, i) => (each > 0 ? each : 1 / scale[i]!));
-    if (iterations === 0) {
-      radius =
-        (options.firstRadius ?? 1) * Math.hypot(...x.map((each, i) => unit[i]! * Math.max(Math.abs(each), scale[i]!)));
+    let steepness = 0;
+    for (let i = 0; i < count; i++) {
+      shape[i] = Math.max(shape[i]!, Math.sqrt(Math.abs(curvature[i]![i]!)));
+      unit[i] = shape[i]! > 0 ? shape[i]! : 1 / scale[i]!;
+      slope[i] = gradient[i]! / unit[i]!;
+      steepness += slope[i]! * slope[i]!;
     }
-    const eigen = symmetricEigen(curvature.map((row, i) => row.map((entry, j) => entry / unit[i]! / unit[j]!)));
-    const slope = gradient.map((entry, i) => entry / unit[i]!);
+    if (iterations === 0) radius = (options.firstRadius ?? 1) * reach();
+    // By Cholesky's method where the surface is a bowl; what costs several times as much only where it is none.
+    const isBowl = newton.factor(curvature, unit);
+    if (isBowl) newton.solve(gradient, unit);
+    let eigen: SymmetricEigen | null = null;
 
     // 3. Shorter and shorter steps until one lowers the value.
     let isTaken = false;
     while (!isTaken) {
-      const { step, predicted, isCut } = trustRegionStep(eigen, slope, radius);
-      const next = x.map((each, i) => each + step[i]! / unit[i]!);
-      if (next.every((each, i) => each === x[i])) return result("no-descent");
+      let found: { readonly step: ArrayLike<number>; readonly predicted: number; readonly isCut: boolean };
+      if (isBowl) {
+        const isCut = !(newton.length <= radius);
+        if (isCut) newton.cut(curvature, gradient, unit, radius);
+        found = { step: newton.step, predicted: newton.predicted, isCut };
+      } else {
+        eigen ??= symmetricEigen(curvature.map((row, i) => row.map((entry, j) => entry / unit[i]! / unit[j]!)));
+        found = trustRegionStep(eigen, slope, radius);
+      }
+      const { step, predicted, isCut } = found;
+      const next = new Array<number>(count);
+      let isSame = true;
+      let squares = 0;
+      for (let i = 0; i < count; i++) {
+        next[i] = x[i]! + step[i]! / unit[i]!;
+        if (next[i] !== x[i]) isSame = false;
+        squares += step[i]! * step[i]!;
+      }
+      if (isSame) return result("no-descent");
+      const length = Math.sqrt(squares);
       const nextValue = valueAt(next);
       const isUnseen = predicted <= UNSEEN * Math.max(Math.abs(value), 2 ** -1000);
       const fall = value - nextValue;
@@ -162,20 +193,17 @@ export function minimise(problem: MinimiseProblem): Minimum {
       let nextGradient: Point | null = null;
       if (Number.isFinite(nextValue) && share >= TAKEN_FROM) {
         nextGradient = gradientAt(next);
-        const isNumber = nextGradient.every(Number.isFinite);
-        const isRefused = isUnseen && Math.hypot(...nextGradient.map((g, i) => g / unit[i]!)) >= Math.hypot(...slope);
-        if (isUnseen && isNumber && isRefused) return result("no-descent");
+        const isNumber = isFiniteRow(nextGradient);
+        if (isUnseen && isNumber) {
+          let nextSteepness = 0;
+          for (let i = 0; i < count; i++) nextSteepness += (nextGradient[i]! / unit[i]!) ** 2;
+          if (nextSteepness >= steepness) return result("no-descent");
+        }
         isTaken = isNumber;
       }
-      const length = Math.hypot(...step);
       if (!isTaken) {
         radius = Math.min(radius, length) / 4;
-        if (
-          radius <=
-          SMALLEST_RADIUS * Math.hypot(...x.map((each, i) => unit[i]! * Math.max(Math.abs(each), scale[i]!)))
-        ) {
-          return result("no-descent");
-        }
+        if (radius <= SMALLEST_RADIUS * reach()) return result("no-descent");
       } else {
         if (share < POOR) radius = length / 4;
         else if (share > GOOD && isCut) radius *= 2;
@@ -185,6 +213,16 @@ export function minimise(problem: MinimiseProblem): Minimum {
       }
     }
   }
+}
+
+function isFiniteRow(row: Point): boolean {
+  for (let i = 0; i < row.length; i++) if (!Number.isFinite(row[i]!)) return false;
+  return true;
+}
+
+function isFiniteMatrix(matrix: Matrix): boolean {
+  for (let i = 0; i < matrix.length; i++) if (!isFiniteRow(matrix[i]!)) return false;
+  return true;
 }
 
 function checkArguments(start: Point, scale: Point, tolerances: Readonly<Record<string, number>>): void {

@@ -1,4 +1,5 @@
 import type { Matrix } from "./choleskyFactor.ts";
+import { NewtonStep } from "./newtonStep.ts";
 import { symmetricEigen } from "./symmetricEigen.ts";
 
 /** Curvature below this share of the greatest counts as none: differences of a gradient give no better. */
@@ -25,7 +26,13 @@ export function scaledGradient(
   scale: readonly number[],
 ): number {
   const size = Math.max(Math.abs(value), 1);
-  return Math.max(...gradient.map((g, i) => (Math.abs(g) * Math.max(Math.abs(x[i]!), scale[i]!)) / size));
+  let largest = 0;
+  for (let i = 0; i < gradient.length; i++) {
+    const each = (Math.abs(gradient[i]!) * Math.max(Math.abs(x[i]!), scale[i]!)) / size;
+    // Written so that NaN stays.
+    if (!(each <= largest)) largest = each;
+  }
+  return largest;
 }
 
 /**
@@ -53,6 +60,16 @@ export function minimumTest(
 ): number {
   const size = x.map((each, i) => Math.max(Math.abs(each), scale[i]!));
   const unit = hessian.map((row, i) => (row[i] === 0 ? 1 / size[i]! : Math.sqrt(Math.abs(row[i]!))));
+  // The diagonal is ±1, so no eigenvalue exceeds n in size; a product of them this large leaves none below the bound: all count.
+  const newton = new NewtonStep(x.length);
+  if (newton.factor(hessian, unit) && newton.determinant > NO_CURVATURE * x.length ** x.length) {
+    newton.solve(gradient, unit);
+    let farthest = 0;
+    for (let i = 0; i < size.length; i++) {
+      farthest = Math.max(farthest, Math.abs(newton.step[i]!) / unit[i]! / size[i]!);
+    }
+    return farthest;
+  }
   const { values, vectors } = symmetricEigen(
     hessian.map((row, i) => row.map((entry, j) => entry / unit[i]! / unit[j]!)),
   );

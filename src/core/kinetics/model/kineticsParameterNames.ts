@@ -24,5 +24,6 @@ export function kineticsParametersCheck(history: ModelHistory, names: readonly K
 /** Throws a RangeError unless there is one finite η a name. */
 export function kineticsEtaCheck(names: readonly KineticsParameter[], eta: ArrayLike<number>): void {
   if (eta.length !== names.length) argumentRefuse("eta.length", eta.length, "", `that of names, ${names.length}`);
-  for (let i = 0; i < eta.length; i++) argumentFinite(`eta[${i}]`, eta[i]!, "");
+  // The name is made only where it is needed: this is asked for every patient.
+  for (let i = 0; i < eta.length; i++) if (!Number.isFinite(eta[i]!)) argumentFinite(`eta[${i}]`, eta[i]!, "");
 }
