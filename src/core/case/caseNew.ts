@@ -22,7 +22,8 @@ export function caseNew(fields: {
     given: [],
     levels: [],
     options: [],
-    fit: { use: "typical", residualModel: "normal" },
+    // Without a level both are the same; the first level is to count.
+    fit: { use: "individual", residualModel: "normal" },
     notes: "",
   };
 }

@@ -99,6 +99,14 @@ describe("one level of a theophylline case", () => {
     expect([timesH[0], timesH.at(-1)]).toEqual([analysis.clock.nowH, analysis.clock.toH]);
   });
 
+  it("carries the whole spread of the clearance into the readings", () => {
+    const { posterior: clearance } = fit.parameters[0]!;
+    const { average } = analysis.options[0]!.individual!.steadyState!;
+    const doseRate = clearance.q50 * average.q50;
+    expect(relative(clearance.q05 * average.q95, doseRate)).toBeLessThan(0.01);
+    expect(relative(clearance.q95 * average.q05, doseRate)).toBeLessThan(0.01);
+  });
+
   it("is the same bits again, and can be sent from a worker", () => {
     const again = derive(value, { isFitted: true });
     expect(again).toEqual(analysis);

@@ -229,6 +229,22 @@ describe("concerns from the record", () => {
     ]);
   });
 
+  it("days long before the span shown are days of their own", () => {
+    const long = value({ limits: { maximumDailyDose: figure(400, "mg") } });
+    const given: Case["given"] = [
+      {
+        ...long.given[0]!,
+        start: "2026-01-01T08:00:00+00:00",
+        repeat: { every: { value: 12, unit: "h" }, count: 120 },
+      },
+    ];
+    // 400 mg a day for two months, the first weeks of them not shown.
+    const shown = { ...long, given, options: [] };
+    expect(found(shown, "dose-above-daily")).toEqual([]);
+    const over = value({ limits: { maximumDailyDose: figure(390, "mg") } });
+    expect(found({ ...over, given, options: [] }, "dose-above-daily")).toMatchObject([{ data: { mg: 400 } }]);
+  });
+
   it("on the day of the change the dose given that morning counts towards the day", () => {
     // 200 mg given at 08:00 and 300 mg proposed at 20:00; the days after have 600 mg.
     const once = value({ limits: { maximumDailyDose: figure(499, "mg") } });

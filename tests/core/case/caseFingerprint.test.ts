@@ -93,7 +93,7 @@ describe("caseFingerprint", () => {
     ["an option's clock time", (c) => (c.options[1]!.lines[1]!.repeat = { clock: ["21:00"] })],
     ["the choice", (c) => (c.options[0]!.chosen = false)],
     ["the name of an option", (c) => (c.options[1]!.id = "C")],
-    ["how levels are used", (c) => (c.fit.use = "individual")],
+    ["how levels are used", (c) => (c.fit.use = "typical")],
     ["the residual model", (c) => (c.fit.residualModel = "robust")],
   ])("depends on: %s", (_, change) => {
     expect(fingerprint(changed(change))).not.toBe(whole);
@@ -151,7 +151,7 @@ it("is the digest another implementation makes of the documented inputs", () => 
     given: [],
     levels: [],
     options: [],
-    fit: { use: "typical", residualModel: "normal" },
+    fit: { use: "individual", residualModel: "normal" },
   };
   const text = canonicalJson({ engine: ENGINE, inputs });
   expect(fingerprint(value)).toBe(createHash("sha256").update(text, "utf8").digest("hex"));

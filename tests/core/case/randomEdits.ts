@@ -121,6 +121,8 @@ function argumentsFor(
     levelAdd: { level: newLevel },
     ...(level && {
       levelChange: { level: { ...newLevel, id: level.id } },
+      levelMove: { id: level.id, at: at(c) },
+      levelRevalue: { id: level.id, number: 1 + (d % 20) },
       levelRemove: { id: level.id },
       levelExclude: { id: level.id, reason: b % 2 ? "reason" : null },
     }),

@@ -1,4 +1,5 @@
 import type { Figure } from "../../medicine/index.ts";
+import { localMidnight } from "../../time/index.ts";
 import { quantityConvert } from "../../units/index.ts";
 import type { Concern, DoseMark } from "../analysisTypes.ts";
 import { type ConcernContext, type ConcernRule, clockMs, concern } from "../concernRule.ts";
@@ -72,7 +73,7 @@ function greatest<T extends { readonly mg: number }>(amounts: readonly T[]): T |
   return amounts.reduce<T | null>((most, each) => (most === null || each.mg > most.mg * ROUNDING ? each : most), null);
 }
 
-/** Which local day of the clock an hour lies in. */
-function dayOf({ clock }: ConcernContext, atH: number): number {
-  return clock.midnightsH.filter((midnight) => midnight <= atH).length;
+/** The local day an hour of the clock lies in, also long before the span shown: its midnight in epoch milliseconds. */
+function dayOf(context: ConcernContext, atH: number): number {
+  return localMidnight(clockMs(context, atH), context.case.timeZone);
 }
