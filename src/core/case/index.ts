@@ -26,3 +26,4 @@ export {
 export { caseEdit, caseEditTry, EDIT_NAMES, type EditArguments, type EditName } from "./edits/editRegistry.ts";
 export type { Lane } from "./edits/lane.ts";
 export { optionNextId } from "./edits/optionEdits.ts";
+export { levelValueNear, levelValueStep } from "./levelSteps.ts";

@@ -50,4 +50,4 @@ export { type RecordFigure, recordFigures, unverifiedFigures } from "./recordFig
 export { RECORD_MIGRATIONS, recordMigrate } from "./recordMigrate.ts";
 export { BUILT_IN_RECORDS, recordById } from "./records/index.ts";
 export { pathText, schemaIssues } from "./schemaIssues.ts";
-export { windowChecks } from "./windowChecks.ts";
+export { LATEST_DRAW_H, windowChecks, windowDrawChecks } from "./windowChecks.ts";

@@ -27,6 +27,8 @@ const EDIT_WORDS: Readonly<Record<EditName, string>> = {
   lineStretch: "change how long a dose line runs",
   levelAdd: "add a level",
   levelChange: "change a level",
+  levelMove: "move a level",
+  levelRevalue: "change the value of a level",
   levelRemove: "remove a level",
   levelExclude: "leave a level out or take it back",
   optionAdd: "add an option",

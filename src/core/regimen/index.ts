@@ -17,3 +17,4 @@ export type { DoseProduct } from "./doseProduct.ts";
 export type { DoseTextContext } from "./doseText/doseSegment.ts";
 export { doseTextRead } from "./doseTextRead.ts";
 export { type Divisible, type TabletCount, tabletsFor } from "./tabletsFor.ts";
+export { VOLUME_STEP_ML, volumeSteps } from "./volumeSteps.ts";

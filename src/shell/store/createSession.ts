@@ -2,14 +2,25 @@ import { type Case, caseDiff, caseEditTry, type EditArguments, type EditName } f
 import { issue } from "../../core/result/index.ts";
 import { ANALYSIS_NONE, createAnalysisFeed } from "./createAnalysisFeed.ts";
 import { createAutosave } from "./createAutosave.ts";
-import { HISTORY_EMPTY, type History, historyPush, historyRedo, historyUndo } from "./history.ts";
+import {
+  HISTORY_EMPTY,
+  type History,
+  type HistoryEntry,
+  historyMerge,
+  historyPush,
+  historyRedo,
+  historyUndo,
+} from "./history.ts";
 import { readerSaving } from "./storageSentences.ts";
 import type { StoreContext } from "./storeContext.ts";
 import type { OpenCase, Saving } from "./workbenchState.ts";
 
+/** Presses on one thing within this of each other are one step back. Ours: a hand that goes on. ms */
+export const NUDGE_MS = 1_000;
+
 export interface Session {
   readonly id: string;
-  edit<N extends EditName>(name: N, args: EditArguments<N>): void;
+  edit<N extends EditName>(name: N, args: EditArguments<N>, nudged?: string): void;
   previewEdit<N extends EditName>(name: N, args: EditArguments<N>): void;
   cancelPreview(): void;
   undo(): void;
@@ -41,6 +52,8 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
   const { id } = start.value;
   let history: History = HISTORY_EMPTY;
   let exported: Case | null = null;
+  /** The last edit, if it was a nudge: what it was of, the step it stands in, and when. */
+  let nudge: { readonly of: string; readonly entry: HistoryEntry; readonly at: number } | null = null;
   let isFrozen = false;
   let isStopped = false;
   let open: OpenCase = {
@@ -88,6 +101,7 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
   /** The one way to a new state of the case. */
   function change(value: Case, next: History): void {
     history = next;
+    nudge = null;
     together(() => {
       put({ value, revision: open.revision + 1, preview: null, undo: history.undo, redo: history.redo });
       autosave.queue(value);
@@ -103,7 +117,7 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
 
   const session: Session = {
     id,
-    edit(name, args) {
+    edit(name, args, nudged) {
       if (!mayChange()) return;
       const result = caseEditTry(open.value, name, args);
       if (!result.ok) {
@@ -112,14 +126,26 @@ export function createSession(context: StoreContext, start: SessionStart): Sessi
         return;
       }
       const diff = caseDiff(open.value, result.value);
-      if (diff.length === 0) session.cancelPreview();
-      else change(result.value, historyPush(history, { name, diff }));
+      if (diff.length === 0) {
+        session.cancelPreview();
+        return;
+      }
+      const of = nudged === undefined ? null : `${name} ${nudged}`;
+      const at = context.clock();
+      const goesOn = nudge?.of === of && nudge.entry === history.undo.at(-1) && at - nudge.at <= NUDGE_MS;
+      const next = goesOn ? historyMerge(history, open.value, result.value) : historyPush(history, { name, diff });
+      // Steps that cancelled out have left none to join.
+      const entry = next.undo.length < history.undo.length ? undefined : next.undo.at(-1);
+      change(result.value, next);
+      nudge = of !== null && entry ? { of, entry, at } : null;
     },
     previewEdit(name, args) {
       if (!mayChange()) return;
       const result = caseEditTry(open.value, name, args);
       // A state that could not be opened again is never shown or made. A drag over a place where it can't be dropped stays at the last good one; the drop itself says why.
       if (!result.ok) return;
+      // A hand moves in pixels, what it moves in steps: most moves show what is shown already.
+      if (caseDiff(open.preview ?? open.value, result.value).length === 0) return;
       together(() => {
         put({ preview: result.value });
         feed.askPreview(result.value, open.revision);

@@ -88,7 +88,7 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
       removeWindow: ward.removeWindow,
       changeSettings: ward.changeSettings,
 
-      edit: (name, args) => withOpen((session) => session.edit(name, args)),
+      edit: (name, args, nudged) => withOpen((session) => session.edit(name, args, nudged)),
       previewEdit: (name, args) => withOpen((session) => session.previewEdit(name, args)),
       cancelPreview: () => context.session?.cancelPreview(),
       undo: () => context.session?.undo(),

@@ -1,4 +1,4 @@
-import { type Case, type CaseDiff, diffApply, diffInvert, type EditName } from "../../core/case/index.ts";
+import { type Case, type CaseDiff, caseDiff, diffApply, diffInvert, type EditName } from "../../core/case/index.ts";
 
 export interface HistoryEntry {
   readonly name: EditName;
@@ -17,6 +17,15 @@ export const HISTORY_EMPTY: History = { undo: [], redo: [] };
 
 export function historyPush({ undo }: History, entry: HistoryEntry): History {
   return { undo: [...undo, entry].slice(-HISTORY_MOST), redo: [] };
+}
+
+/** A further edit joined to the newest step, so that one undo takes both back; none is left where they cancel out. `before`: the case as that step left it. */
+export function historyMerge({ undo }: History, before: Case, after: Case): History {
+  const entry = undo.at(-1);
+  if (!entry) throw new RangeError("undo: there is no step to join");
+  const diff = caseDiff(diffApply(diffInvert(entry.diff), before), after);
+  const others = undo.slice(0, -1);
+  return { undo: diff.length === 0 ? others : [...others, { name: entry.name, diff }], redo: [] };
 }
 
 /** null: nothing to take back. */

@@ -112,7 +112,8 @@ export interface WorkbenchState extends MedicineState {
   saveWindow(medicine: string, id: string, window: TargetWindow): Promise<Result<null>>;
   removeWindow(medicine: string, id: string): Promise<Result<null>>;
 
-  edit<N extends EditName>(name: N, args: EditArguments<N>): void;
+  /** `nudged`: what an arrow key nudged. The same nudge of the same thing within a second joins the step before it. */
+  edit<N extends EditName>(name: N, args: EditArguments<N>, nudged?: string): void;
   /** During a drag: show the outcome of the edit without making it. */
   previewEdit<N extends EditName>(name: N, args: EditArguments<N>): void;
   cancelPreview(): void;

@@ -3,6 +3,7 @@ import { describe, expect, test } from "vitest";
 import { type Case, caseValidate, type EditArguments, type EditName } from "../../../src/core/case/index.ts";
 import { HISTORY_MOST } from "../../../src/shell/store/history.ts";
 import { caseOf } from "../storage/fakeBrowser.ts";
+import { MemoryRepository } from "./memoryRepository.ts";
 import { startOpen, startWorkbench, turns } from "./workbenchSupport.ts";
 
 type Edit = { [N in EditName]: readonly [N, EditArguments<N>] }[EditName];
@@ -198,4 +199,85 @@ test("what another tab saves of the case this tab writes is not read over its wo
   await turns();
   expect(open()).toMatchObject({ role: "writer", value: { label: "mine" }, revision: 1 });
   expect(state().notices).toEqual([]);
+});
+
+describe("nudges", () => {
+  const open = async () => {
+    let now = 0;
+    const repository = new MemoryRepository();
+    repository.store(caseOf("a", "Harbour ward"));
+    const started = await startWorkbench({ clock: () => now }, repository);
+    const { state } = started;
+    await state().openCase("a");
+    state().edit("levelAdd", { level: level("l", 8) });
+    state().edit("levelAdd", { level: level("m", 9) });
+    const nudge = (id: string, number: number, atMs: number) => {
+      now = atMs;
+      state().edit("levelRevalue", { id, number }, id);
+    };
+    const names = () => started.open().undo.map(({ name }) => name);
+    return { ...started, nudge, names, wait: (ms: number) => (now = ms) };
+  };
+
+  test("presses within a second of each other on one thing are one step; undo takes all of them, redo brings all back", async () => {
+    const { state, open: shown, nudge, names } = await open();
+    const before = shown().value;
+    nudge("l", 8.1, 0);
+    nudge("l", 8.2, 1_000);
+    nudge("l", 8.3, 2_000);
+    expect(names()).toEqual(["levelAdd", "levelAdd", "levelRevalue"]);
+    expect(shown().revision).toBe(6);
+    const after = shown().value;
+    state().undo();
+    expect(shown().value).toEqual(before);
+    state().redo();
+    expect(shown().value).toEqual(after);
+  });
+
+  test.each([
+    ["later than a second", (each: Awaited<ReturnType<typeof open>>) => each.nudge("l", 8.2, 1_001), 4],
+    ["on another level", (each: Awaited<ReturnType<typeof open>>) => each.nudge("m", 9.1, 10), 4],
+    [
+      "no nudge",
+      ({ state }: Awaited<ReturnType<typeof open>>) => state().edit("levelRevalue", { id: "l", number: 9 }),
+      4,
+    ],
+  ] as const)("%s: a step of its own", async (_, act, steps) => {
+    const shown = await open();
+    shown.nudge("l", 8.1, 0);
+    act(shown);
+    expect(shown.names()).toHaveLength(steps);
+  });
+
+  test("undone and done again, or with something between: a step of its own", async () => {
+    const { state, nudge, names } = await open();
+    nudge("l", 8.1, 0);
+    state().undo();
+    state().redo();
+    nudge("l", 8.2, 1);
+    expect(names()).toHaveLength(4);
+    state().edit("notesSet", { notes: "n" });
+    nudge("l", 8.3, 2);
+    expect(names()).toHaveLength(6);
+  });
+
+  test("presses that cancel out leave no step, and the next joins none that was there before", async () => {
+    const { state, open: shown, nudge, names } = await open();
+    state().edit("levelRevalue", { id: "l", number: 7 });
+    nudge("l", 7.1, 0);
+    nudge("l", 7, 1);
+    expect(names()).toEqual(["levelAdd", "levelAdd", "levelRevalue"]);
+    nudge("l", 7.1, 2);
+    expect(names()).toHaveLength(4);
+    state().undo();
+    expect(shown().value.levels[0]!.quantity.value).toBe(7);
+  });
+});
+
+test("a drag within a step asks for nothing new", async () => {
+  const { state, runner } = await startOpen();
+  const asked = runner.asked.length;
+  state().previewEdit("caseRename", { label: "moved" });
+  state().previewEdit("caseRename", { label: "moved" });
+  expect(runner.asked.length).toBe(asked + 1);
 });
