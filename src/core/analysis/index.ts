@@ -17,3 +17,4 @@ export {
 } from "./recordProfile.ts";
 export { type ReferencePatient, referenceCovariates } from "./referenceCovariates.ts";
 export { TAUGHT_LITTLE, TAUGHT_MUCH } from "./taughtThresholds.ts";
+export { windowDrawH, windowDrawnAt } from "./windowTiming.ts";

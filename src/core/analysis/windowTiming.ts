@@ -1,4 +1,4 @@
-import type { Case } from "../case/index.ts";
+import type { Case, TargetWindow } from "../case/index.ts";
 import { type ModelDisposition, type ModelInput, modelSteadyProfile } from "../kinetics/index.ts";
 
 /**
@@ -7,8 +7,12 @@ import { type ModelDisposition, type ModelInput, modelSteadyProfile } from "../k
  * Example: a lithium window drawn 11 to 13 h after the dose: 12.
  */
 export function windowDrawH({ window }: Case): number | null {
-  if (window?.quantity !== "trough" || !window.drawFrom || !window.drawTo) return null;
-  return (window.drawFrom.value + window.drawTo.value) / 2;
+  return window ? windowDrawnAt(window) : null;
+}
+
+/** The same of a window by itself. */
+export function windowDrawnAt({ quantity, drawFrom, drawTo }: TargetWindow): number | null {
+  return quantity === "trough" && drawFrom && drawTo ? (drawFrom.value + drawTo.value) / 2 : null;
 }
 
 /** Levels of a pattern at steady state so many hours after each dose: mg/L. */

@@ -1,4 +1,4 @@
-import { doseMg, productOf, windowChecks } from "../medicine/index.ts";
+import { doseMg, productOf, windowChecks, windowDrawChecks } from "../medicine/index.ts";
 import { type DoseLine, doseLineCount, MOST_DOSES } from "../regimen/index.ts";
 import { type Issue, issue } from "../result/index.ts";
 import type { Case, Level, Option } from "./caseSchema.ts";
@@ -12,13 +12,18 @@ export function caseChecks(value: Case): Issue[] {
   const { patient, window, levels, options, given } = value;
   return [
     ...patientChecks(patient),
-    ...(window ? windowChecks(window, ["window"]).map(({ code, data, path }) => issue(code, data, path)) : []),
+    ...(window ? windowIssues(window) : []),
     ...duplicateIds(levels, ["levels"]),
     ...levels.flatMap(levelChecks),
     ...laneChecks(given, value, ["given"]),
     ...optionChecks(options),
     ...options.flatMap((option, i) => laneChecks(option.lines, value, ["options", i, "lines"])),
   ];
+}
+
+function windowIssues(window: NonNullable<Case["window"]>): Issue[] {
+  const faults = [...windowChecks(window, ["window"]), ...windowDrawChecks(window, ["window"])];
+  return faults.map(({ code, data, path }) => issue(code === "record-range" ? "window-draw-hours" : code, data, path));
 }
 
 function levelChecks({ quantity }: Level, i: number): Issue[] {

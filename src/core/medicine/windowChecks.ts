@@ -23,14 +23,22 @@ export function windowChecks(
 }
 
 /** A day and more: some levels are drawn before the next dose of a long interval. h */
-const LATEST_DRAW_H = 168;
+export const LATEST_DRAW_H = 168;
 
 /** The window of a record, and the hours between which its level is drawn. */
 export function recordWindowChecks(window: RecordWindow, path: FaultPath): RecordFault[] {
-  const { drawFrom, drawTo } = window;
+  return [...windowChecks(window, path), ...windowDrawChecks(window, path)];
+}
+
+type Hours = Parameters<typeof boundsFaults>[0];
+
+/** The hours alone, shared with the target window of a case. */
+export function windowDrawChecks(
+  { drawFrom, drawTo }: { readonly drawFrom?: Hours; readonly drawTo?: Hours },
+  path: FaultPath,
+): RecordFault[] {
   const hours = { unit: "h", least: 0, most: LATEST_DRAW_H } as const;
   const faults = [
-    ...windowChecks(window, path),
     ...boundsFaults(drawFrom, hours, [...path, "drawFrom"]),
     ...boundsFaults(drawTo, hours, [...path, "drawTo"]),
   ];

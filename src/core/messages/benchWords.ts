@@ -38,6 +38,7 @@ export const benchWords = {
   noPrediction: "No prediction: the concerns say what is missing.",
   steadyHead: "Readings at steady state",
   steadyHeadFinal: "Readings at steady state of the final kinetics",
+  timed: (hours: string) => `${hours} h after a dose`,
   demoShort: "demo, invented",
   intended:
     "Supports, and does not replace, the judgement of a licensed professional and local policy. Check against current product information.",

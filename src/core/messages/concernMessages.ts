@@ -17,7 +17,7 @@ import {
 import { fitConcernMessages } from "./fitMessages.ts";
 import { issueMessage } from "./issueMessage.ts";
 import { recordConcernMessages } from "./recordConcernMessages.ts";
-import { windowQuantityWord } from "./windowWords.ts";
+import { windowPointWords } from "./windowWords.ts";
 
 const FACTOR_WORDS: Readonly<Record<string, string>> = {
   smoking: "Smoking",
@@ -47,7 +47,9 @@ function outsideWindow(data: ConcernData, side: "above" | "below"): ConcernWords
   const found = side === "above" ? number(data, "most") : number(data, "least");
   const edge = side === "above" ? number(data, "high") : number(data, "low");
   const name = text(data, "quantity") as TargetWindow["quantity"];
-  const words = name === "lowest-and-highest" ? (side === "above" ? "highest" : "lowest") : windowQuantityWord(name);
+  const afterDoseH = (data.afterDoseH as number | null | undefined) ?? null;
+  const point = `${afterDoseH === null ? "" : "level "}${windowPointWords(name, afterDoseH)}`;
+  const words = name === "lowest-and-highest" ? (side === "above" ? "highest" : "lowest") : point;
   return {
     title: `Option ${text(data, "option")} settles ${side} the target window`,
     text: `Expected ${words} at steady state ${print(found)}; the window's ${side === "above" ? "upper" : "lower"} edge is ${print(edge)}.`,

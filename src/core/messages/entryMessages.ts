@@ -5,6 +5,10 @@ type Data = Readonly<Record<string, unknown>>;
 /** Sentences about what was typed into the entry panels. */
 export const entryMessages: Readonly<Record<string, MessageFunction>> = {
   "window-about-missing": () => "Choose what the window is about: the lowest, the highest, the average, or both ends.",
+  "window-draw-from-missing": () =>
+    "Write from when after the dose the level is drawn, or leave both fields empty for just before the next dose.",
+  "window-draw-hours": ({ found, most }: Data) =>
+    `${String(found)} hours after the dose can't be: write a number from 0 to ${String(most)}.`,
   "window-basis-missing": () => "Say on what basis: local policy, a guideline, or a reason.",
   "window-ends": ({ low, high, unit }: Data) =>
     `The low end, ${String(low)}, must lie below the high end, ${String(high)} ${String(unit)}, and not below 0.`,

@@ -85,7 +85,7 @@ const outcome = (data: ConcernData): string => {
 function outsideChance(data: ConcernData, side: "above" | "below", other: "above" | "below"): ConcernWords {
   return {
     title: `Option ${text(data, "option")}: chance of lying ${side} the window ${chanceWords(number(data, side))}`,
-    text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"])} ${data.isSteady ? "at steady state" : "over the span shown"}, in this patient. Chance of lying ${other} the window ${chanceWords(number(data, other))}.`,
+    text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"], (data.afterDoseH as number | null | undefined) ?? null)} ${data.isSteady ? "at steady state" : "over the span shown"}, in this patient. Chance of lying ${other} the window ${chanceWords(number(data, other))}.`,
   };
 }
 

@@ -8,7 +8,7 @@ import {
 import type { TargetWindow } from "../case/index.ts";
 import { numberPrint } from "../units/index.ts";
 import { figure, hours, wordList } from "./concernFigures.ts";
-import { windowQuantityWord } from "./windowWords.ts";
+import { windowPointWords } from "./windowWords.ts";
 
 /** Fixed words about this patient's figures. */
 export const fitWords = {
@@ -79,9 +79,10 @@ function knownWords(levels: number): string {
   return levels === 0 ? "no level known" : levels === 1 ? "1 level known" : `${levels} levels known`;
 }
 
-/** What a chance of a window is about, with its article: "the lowest", "the whole curve". */
-export function windowChanceWords(quantity: TargetWindow["quantity"]): string {
-  return quantity === "lowest-and-highest" ? "the whole curve" : `the ${windowQuantityWord(quantity)}`;
+/** What a chance of a window is about, with its article: "the lowest", "the level 12 hours after the dose", "the whole curve". */
+export function windowChanceWords(quantity: TargetWindow["quantity"], afterDoseH: number | null): string {
+  if (quantity === "lowest-and-highest") return "the whole curve";
+  return `the ${afterDoseH === null ? "" : "level "}${windowPointWords(quantity, afterDoseH)}`;
 }
 
 /** A chance in words: never "0 %" or "100 %". */

@@ -7,11 +7,13 @@ import type {
   Spread,
 } from "../analysis/index.ts";
 import type { Case } from "../case/index.ts";
+import { concentrationUnit, type DisplayUnit } from "../medicine/index.ts";
 import { instantText } from "../time/index.ts";
 import { numberPrint, quantityPrint, unitSpoken } from "../units/index.ts";
 import { figure, hours } from "./concernFigures.ts";
 import { chanceWords, fitWords, taughtWord } from "./fitWords.ts";
-import { readingWorking, type WorkingWords } from "./workingWords.ts";
+import { workingUnit } from "./workingUnit.ts";
+import { readingWorking, timedTitle, type WorkingWords } from "./workingWords.ts";
 
 /** Six digits: enough to check by hand. */
 const six = (value: number): string => numberPrint(value, { significant: 6 });
@@ -82,34 +84,44 @@ export function levelTimes(value: Case, analysis: Analysis): ReadonlyMap<string,
 type Reader = (readings: IndividualReadings) => Spread | null | undefined;
 
 /** Each reading of this patient by its row on the bench: what it is called, its unit, where it stands. */
-const READINGS: Readonly<Record<string, readonly [title: string, unit: string, of: Reader]>> = {
-  peak: ["Highest at steady state", "mg/L", (r) => r.steadyState?.peak],
-  lowest: ["Lowest at steady state", "mg/L", (r) => r.steadyState?.lowest],
-  average: ["Average at steady state", "mg/L", (r) => r.steadyState?.average],
-  auc24: ["AUC in 24 hours at steady state", "mg·h/L", (r) => r.steadyState?.auc24],
+const READINGS: Readonly<
+  Record<string, readonly [title: string, unit: "concentration" | "exposure" | "times" | "h", of: Reader]>
+> = {
+  peak: ["Highest at steady state", "concentration", (r) => r.steadyState?.peak],
+  lowest: ["Lowest at steady state", "concentration", (r) => r.steadyState?.lowest],
+  average: ["Average at steady state", "concentration", (r) => r.steadyState?.average],
+  auc24: ["AUC in 24 hours at steady state", "exposure", (r) => r.steadyState?.auc24],
   accumulation: ["Accumulation", "times", (r) => r.steadyState?.accumulation],
   timeTo90: ["90 % of the way to steady state", "h", (r) => r.steadyState?.timeTo90H],
   halfLife: ["Half-life of elimination", "h", (r) => r.halfLifeH],
-  spanPeak: ["Highest over the span", "mg/L", (r) => r.span.peak],
-  spanLowest: ["Lowest over the span", "mg/L", (r) => r.span.lowest],
-  spanAverage: ["Average over the span", "mg/L", (r) => r.span.average],
+  spanPeak: ["Highest over the span", "concentration", (r) => r.span.peak],
+  spanLowest: ["Lowest over the span", "concentration", (r) => r.span.lowest],
+  spanAverage: ["Average over the span", "concentration", (r) => r.span.average],
   hoursBelow: ["Hours below the window", "h", (r) => r.span.hoursBelow],
   hoursWithin: ["Hours within the window", "h", (r) => r.span.hoursWithin],
   hoursAbove: ["Hours above the window", "h", (r) => r.span.hoursAbove],
 };
 
 /** The working of a reading of this patient: how the draws were made and what they give; null when there is none. */
-export function individualWorking(value: Case, analysis: Analysis, optionId: string, row: string): WorkingWords | null {
+export function individualWorking(
+  value: Case,
+  analysis: Analysis,
+  optionId: string,
+  row: string,
+  unit: DisplayUnit = concentrationUnit(value.medicine),
+): WorkingWords | null {
   const readings = analysis.options.find(({ id }) => id === optionId)?.individual;
-  const known = READINGS[row];
-  if (!readings || !known || analysis.fit.kind !== "fitted") return null;
-  const [title, unit, of] = known;
-  const spread = of(readings);
-  if (!spread) return null;
+  if (!readings || analysis.fit.kind !== "fitted") return null;
+  const found = row === "timed" ? timedFound(readings) : readingFound(readings, row);
+  if (!found) return null;
+  const shown = workingUnit(value, unit);
+  const isLevel = found.unit === "concentration" || found.unit === "exposure";
+  const spoken = found.unit === "concentration" || found.unit === "exposure" ? shown[found.unit] : found.unit;
+  const print = (figure: number) => six(isLevel ? figure * shown.factor : figure);
   const { fit } = analysis.fit;
   const used = fit.levelsUsed.map((id) => levelTimes(value, analysis).get(id) ?? id);
   return {
-    title,
+    title: found.title,
     steps: [
       `levels used: ${used.join("; ")}`,
       ...fit.parameters.map(
@@ -121,15 +133,49 @@ export function individualWorking(value: Case, analysis: Analysis, optionId: str
       ...(readings.shareNeverSteady > 0 && row in STEADY
         ? [`draws that never reach a steady state are left out (${chanceWords(readings.shareNeverSteady)})`]
         : []),
+      ...(isLevel ? shown.steps : []),
     ],
-    result: `median ${six(spread.q50)} ${unit}; 50 % between ${six(spread.q25)} and ${six(spread.q75)}, 90 % between ${six(spread.q05)} and ${six(spread.q95)} ${unit}`,
-    sources: readingWorking(value, analysis, optionId, row)?.sources ?? [],
+    result: found.spreads
+      .map(
+        ([name, { q05, q25, q50, q75, q95 }]) =>
+          `${name}median ${print(q50)} ${spoken}; 50 % between ${print(q25)} and ${print(q75)}, 90 % between ${print(q05)} and ${print(q95)} ${spoken}`,
+      )
+      .join("; "),
+    sources: readingWorking(value, analysis, optionId, row, unit)?.sources ?? [],
   };
+}
+
+interface Found {
+  readonly title: string;
+  readonly unit: (typeof READINGS)[string][1];
+  readonly spreads: readonly (readonly [name: string, Spread])[];
+}
+
+function readingFound(readings: IndividualReadings, row: string): Found | null {
+  const known = READINGS[row];
+  const spread = known?.[2](readings);
+  return known && spread ? { title: known[0], unit: known[1], spreads: [["", spread]] } : null;
+}
+
+/** Levels at the hour the window asks for: of unequal doses the lowest and the highest of them. */
+function timedFound({ steadyState }: IndividualReadings): Found | null {
+  const timed = steadyState?.timed;
+  if (!timed) return null;
+  const { lowest, highest, afterDoseH } = timed;
+  const isOne = lowest.q50 === highest.q50 && lowest.q05 === highest.q05 && lowest.q95 === highest.q95;
+  const spreads: Found["spreads"] = isOne
+    ? [["", lowest]]
+    : [
+        ["lowest: ", lowest],
+        ["highest: ", highest],
+      ];
+  return { title: timedTitle(afterDoseH), unit: "concentration", spreads };
 }
 
 const STEADY: Readonly<Record<string, true>> = {
   peak: true,
   lowest: true,
+  timed: true,
   average: true,
   auc24: true,
   accumulation: true,

@@ -34,5 +34,5 @@ export * from "./screenWords.ts";
 export * from "./summaryPatientWords.ts";
 export * from "./summaryWords.ts";
 export { weekdayList, weekdayName } from "./weekdayWords.ts";
-export { windowQuantityWord, windowRangeWords, windowRemarkWords } from "./windowWords.ts";
+export { windowAboutWords, windowQuantityWord, windowRangeWords, windowRemarkWords } from "./windowWords.ts";
 export { readingWorking, tracedWords, type WorkingWords } from "./workingWords.ts";

@@ -1,3 +1,4 @@
+import { windowDrawnAt } from "../analysis/index.ts";
 import type { TargetWindow } from "../case/index.ts";
 import type { DisplayUnit } from "../medicine/index.ts";
 import { numberPrint, quantityConvert, unitDimension, unitSpoken } from "../units/index.ts";
@@ -15,6 +16,18 @@ export function windowQuantityWord(quantity: TargetWindow["quantity"]): string {
   return WORDS[quantity];
 }
 
+/** The same, or where the level is taken at an hour after the dose: "12 hours after the dose". */
+export function windowPointWords(quantity: TargetWindow["quantity"], afterDoseH: number | null): string {
+  return afterDoseH === null
+    ? windowQuantityWord(quantity)
+    : `${numberPrint(afterDoseH)} ${afterDoseH === 1 ? "hour" : "hours"} after the dose`;
+}
+
+/** What a window is about: "lowest"; "12 hours after the dose" where its level is drawn then. */
+export function windowAboutWords(window: TargetWindow): string {
+  return windowPointWords(window.quantity, windowDrawnAt(window));
+}
+
 /** "5 to 15 mg/L"; a concentration in the unit the medicine is read in, but one that was stated in a molar unit as it was stated. */
 export function windowRangeWords({ low, high }: TargetWindow, medicineUnit: DisplayUnit): string {
   if (low.unit === "mg.h/L" || high.unit === "mg.h/L") {
@@ -26,6 +39,7 @@ export function windowRangeWords({ low, high }: TargetWindow, medicineUnit: Disp
 }
 
 /** Beside hours below, within and above a window that is meant for one point of the curve. */
-export function windowRemarkWords(quantity: TargetWindow["quantity"]): string {
-  return `The window is meant for the ${windowQuantityWord(quantity)}; the hours are those of the whole curve`;
+export function windowRemarkWords(window: TargetWindow): string {
+  const at = windowDrawnAt(window);
+  return `The window is meant for the ${at === null ? "" : "level "}${windowAboutWords(window)}; the hours are those of the whole curve`;
 }

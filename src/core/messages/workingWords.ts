@@ -1,7 +1,10 @@
 import type { Analysis, Model, OptionResult, Traced } from "../analysis/index.ts";
 import type { Case } from "../case/index.ts";
+import { concentrationUnit, type DisplayUnit } from "../medicine/index.ts";
 import { instantText } from "../time/index.ts";
 import { numberPrint, quantityConvert, unitSpoken } from "../units/index.ts";
+import { windowPointWords } from "./windowWords.ts";
+import { workingUnit } from "./workingUnit.ts";
 
 /** The arithmetic of one figure: formula, numbers put in, result, and where the parts come from. */
 export interface WorkingWords {
@@ -79,26 +82,37 @@ const CURVES: Readonly<Record<Model["kind"], string>> = {
   saturable: "dC/dt = input / V − Vmax · C / (Km + C) / V: no closed form, solved to 1e-9; doses do not add up",
 };
 
-/** The working of one reading of one option; null when there is nothing to show. */
-export function readingWorking(value: Case, analysis: Analysis, optionId: string, row: string): WorkingWords | null {
+/** The working of one reading of one option, concentrations in `unit`; null when there is nothing to show. */
+export function readingWorking(
+  value: Case,
+  analysis: Analysis,
+  optionId: string,
+  row: string,
+  unit: DisplayUnit = concentrationUnit(value.medicine),
+): WorkingWords | null {
   const option = analysis.options.find((candidate) => candidate.id === optionId);
   const model = analysis.typical;
   if (!option?.typical || !model) return null;
   const { steadyState, span } = option.typical;
+  const timed = steadyState?.timed ?? null;
   const clock = (hours: number) => instantText(analysis.clock.originMs + hours * 3_600_000, value.timeZone, "dayClock");
   const base = { sources: modelSources(model, option) };
+  const shown = workingUnit(value, unit);
+  const level = (mgPerL: number) => `${six(mgPerL * shown.factor)} ${shown.concentration}`;
+  const exposure = (mgHours: number) => `${six(mgHours * shown.factor)} ${shown.exposure}`;
   const make = (title: string, steps: readonly string[], result: string): WorkingWords => ({
     title,
     steps,
     result,
     ...base,
   });
-  const settledSteps = () => [
+  const settledSteps = (found = "highest and lowest found where its slope is 0, or at a dose") => [
     ...modelSteps(model),
     ...absorptionSteps(model, option),
     CURVES[model.kind],
-    `steady state: the same curve summed over all earlier doses of the pattern of ${six(steadyState!.periodH)} h (${six(steadyState!.dosePerPeriodMg)} mg); highest and lowest found where its slope is 0, or at a dose`,
+    `steady state: the same curve summed over all earlier doses of the pattern of ${six(steadyState!.periodH)} h (${six(steadyState!.dosePerPeriodMg)} mg); ${found}`,
   ];
+  const inUnit = (steps: readonly string[]) => [...steps, ...shown.steps];
   const spanSteps = () => [
     ...modelSteps(model),
     ...absorptionSteps(model, option),
@@ -116,7 +130,7 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
   };
   switch (row) {
     case "peak":
-      return steadyState && make("Highest at steady state", settledSteps(), `${six(steadyState.peak)} mg/L`);
+      return steadyState && make("Highest at steady state", inUnit(settledSteps()), level(steadyState.peak));
     case "peakAfterDose":
       return (
         steadyState && make("Time from the dose to the highest", settledSteps(), `${six(steadyState.peakAfterDoseH)} h`)
@@ -126,8 +140,21 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         steadyState &&
         make(
           "Lowest at steady state",
-          settledSteps(),
-          `${six(steadyState.lowest)} mg/L, ${six(steadyState.lowestAfterDoseH)} h after a dose`,
+          inUnit(settledSteps()),
+          `${level(steadyState.lowest)}, ${six(steadyState.lowestAfterDoseH)} h after a dose`,
+        )
+      );
+    case "timed":
+      return (
+        timed &&
+        make(
+          timedTitle(timed.afterDoseH),
+          inUnit(
+            settledSteps(
+              `read off it ${six(timed.afterDoseH)} h after each dose, or just before the next where that comes first`,
+            ),
+          ),
+          timed.lowest === timed.highest ? level(timed.lowest) : `${level(timed.lowest)} to ${level(timed.highest)}`,
         )
       );
     case "average":
@@ -135,13 +162,13 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         steadyState &&
         make(
           "Average at steady state",
-          [
+          inUnit([
             ...exposed(),
             model.clearance
               ? `average = F·D / (CL · ${six(steadyState.periodH)} h)`
               : "average = AUC over the period / period, from the balance: the mean of Vmax · C / (Km + C) equals F·D / period",
-          ],
-          `${six(steadyState.average)} mg/L`,
+          ]),
+          level(steadyState.average),
         )
       );
     case "auc24":
@@ -149,8 +176,8 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         steadyState &&
         make(
           "AUC in 24 hours at steady state",
-          [...exposed(), `AUC = average · 24 h = ${six(steadyState.average)} · 24`],
-          `${six(steadyState.auc24)} mg·h/L`,
+          inUnit([...exposed(), `AUC = average · 24 h = ${six(steadyState.average)} mg/L · 24 h`]),
+          exposure(steadyState.auc24),
         )
       );
     case "halfLife":
@@ -200,18 +227,18 @@ export function readingWorking(value: Case, analysis: Analysis, optionId: string
         )
       );
     case "spanPeak":
-      return make("Highest over the span", spanSteps(), `${six(span.peak)} mg/L at ${clock(span.timeOfPeakH)}`);
+      return make("Highest over the span", inUnit(spanSteps()), `${level(span.peak)} at ${clock(span.timeOfPeakH)}`);
     case "spanLowest":
-      return make("Lowest over the span", spanSteps(), `${six(span.lowest)} mg/L at ${clock(span.timeOfLowestH)}`);
+      return make("Lowest over the span", inUnit(spanSteps()), `${level(span.lowest)} at ${clock(span.timeOfLowestH)}`);
     case "spanAverage":
       return make(
         "Average over the span",
-        [
+        inUnit([
           ...spanSteps(),
           `AUC = ${six(span.auc)} mg·h/L by the exact integral between doses`,
           `average = AUC / ${six(span.toH - span.fromH)} h`,
-        ],
-        `${six(span.average)} mg/L`,
+        ]),
+        level(span.average),
       );
     case "hoursBelow":
     case "hoursWithin":
@@ -237,4 +264,9 @@ function windowEnds({ low, high }: NonNullable<Case["window"]>, molarMass: numbe
   const stated =
     low.unit === "mg/L" ? "" : ` (${six(low.value)} to ${six(high.value)} ${unitSpoken(low.unit, "screen")})`;
   return `${mgPerL(low)} to ${mgPerL(high)} mg/L${stated}`;
+}
+
+/** "Level 12 hours after the dose at steady state" */
+export function timedTitle(afterDoseH: number): string {
+  return `Level ${windowPointWords("trough", afterDoseH)} at steady state`;
 }

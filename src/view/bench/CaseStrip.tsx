@@ -1,7 +1,7 @@
 import type { ReactNode } from "react";
 import type { Analysis } from "../../core/analysis/index.ts";
 import { concentrationUnit, productOf } from "../../core/medicine/index.ts";
-import { benchWords, editLabel, windowQuantityWord, windowRangeWords } from "../../core/messages/index.ts";
+import { benchWords, editLabel, windowAboutWords, windowRangeWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, quantityPrint } from "../../core/units/index.ts";
 import type { OpenCase } from "../../shell/store/workbenchState.ts";
@@ -76,7 +76,7 @@ export function CaseStrip({ open, analysis, onPanel, onPrint }: CaseStripProps) 
         {window ? (
           <>
             <span className="strip-nowrap">{windowRangeWords(window, concentrationUnit(value.medicine))}</span>
-            <span className="strip-small">{windowQuantityWord(window.quantity)}</span>
+            <span className="strip-small">{windowAboutWords(window)}</span>
           </>
         ) : (
           <Missing />

@@ -1,4 +1,4 @@
-import type { Analysis, WindowChance } from "../../core/analysis/index.ts";
+import { type Analysis, type WindowChance, windowDrawH } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { chanceWords, fitWords, windowChanceWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
@@ -21,7 +21,7 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
   return (
     <section className="chances" aria-labelledby="chances-head">
       <h2 className="readings-head" id="chances-head">
-        {fitWords.chanceHead(windowChanceWords(window.quantity))}
+        {fitWords.chanceHead(windowChanceWords(window.quantity, windowDrawH(value)))}
       </h2>
       <ul className="chances-list">
         {analysis.options.map(({ id, individual }, i) => {

@@ -1,6 +1,7 @@
 import { fitWords, individualWorking, readingWorking } from "../../core/messages/index.ts";
 import { useWorkbench } from "../useWorkbench.ts";
 import type { ReadingOf } from "./ReadingsTable.tsx";
+import type { ShownUnit } from "./shownUnit.ts";
 import "./OptionPanel.css";
 
 /** The arithmetic of one reading, so that a second person can check it by hand. */
@@ -8,16 +9,18 @@ export function WorkingPanel({
   row,
   option,
   of,
+  unit,
 }: {
   readonly row: string;
   readonly option: string;
   readonly of: ReadingOf;
+  readonly unit?: ShownUnit;
 }) {
   const open = useWorkbench((state) => state.open);
   const analysis = open?.analysis.result;
   const working =
     open && analysis
-      ? (of === "typical" ? readingWorking : individualWorking)(open.value, analysis, option, row)
+      ? (of === "typical" ? readingWorking : individualWorking)(open.value, analysis, option, row, unit)
       : null;
   if (!working) return <p>There is nothing to show for this reading now.</p>;
   return (

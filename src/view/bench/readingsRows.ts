@@ -158,6 +158,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
           (s) => s.lowest,
           (s) => s.lowest,
         ),
+        ...timedRows(analysis, concentration),
         settled(
           "average",
           "Average",
@@ -267,13 +268,36 @@ function dailyDose(option: OptionResult): ReadingCell | null {
 
 /** Hours are always of the whole curve; a window meant for one point of it is easily misread. */
 function windowRemark(value: Case): string {
-  const quantity = value.window?.quantity;
-  return quantity === undefined || quantity === "lowest-and-highest" || quantity === "auc24"
+  const { window } = value;
+  return !window || window.quantity === "lowest-and-highest" || window.quantity === "auc24"
     ? ""
-    : `. ${windowRemarkWords(quantity)}`;
+    : `. ${windowRemarkWords(window)}`;
 }
 
 /** In a narrow cell a unit may stand under its number. */
 function breaking(text: string): string {
   return text.replaceAll("\u00a0", " ");
+}
+
+/** Levels at the hour after a dose the window asks for: from the lowest to the highest where doses or gaps differ; no row where it asks for none. */
+function timedRows({ options }: Analysis, { figure, unit }: Print): readonly ReadingsRow[] {
+  const afterDoseH = options.find((option) => option.typical?.steadyState?.timed)?.typical?.steadyState?.timed
+    ?.afterDoseH;
+  if (afterDoseH === undefined) return [];
+  const range = (low: number, high: number) =>
+    figure(low) === figure(high) ? figure(low) : `${figure(low)} to ${figure(high)}`;
+  const cells = options.map((option): ReadingPair => {
+    const typical = option.typical?.steadyState?.timed;
+    const own = option.individual?.steadyState?.timed;
+    return {
+      typical: typical ? { text: range(typical.lowest, typical.highest) + unit } : null,
+      individual: own
+        ? {
+            text: range(own.lowest.q50, own.highest.q50) + unit,
+            sub: `${figure(own.lowest.q05)} to ${figure(own.highest.q95)}`,
+          }
+        : null,
+    };
+  });
+  return [{ id: "timed", name: benchWords.timed(numberPrint(afterDoseH)), cells }];
 }

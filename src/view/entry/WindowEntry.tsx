@@ -1,6 +1,6 @@
 import { type FormEvent, useState } from "react";
 import type { TargetWindow } from "../../core/case/index.ts";
-import { windowQuantityWord, windowWords } from "../../core/messages/index.ts";
+import { windowAboutWords, windowWords } from "../../core/messages/index.ts";
 import { numberPrint, quantityPrint } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
@@ -134,12 +134,13 @@ function isSameRange(a: TargetWindow, b: TargetWindow): boolean {
   return JSON.stringify([a.low, a.high]) === JSON.stringify([b.low, b.high]);
 }
 
-function windowSentence({ low, high, quantity, basis }: TargetWindow): string {
+function windowSentence(window: TargetWindow): string {
+  const { low, high, basis } = window;
   const top = quantityPrint(high, { style: "screen", significant: 4 });
-  return `${numberPrint(low.value, { significant: 4 })} to ${top}, ${windowQuantityWord(quantity)} (${basis})`;
+  return `${numberPrint(low.value, { significant: 4 })} to ${top}, ${windowAboutWords(window)} (${basis})`;
 }
 
 function offerDetail({ window, from, origin }: OfferedWindow): string {
   const place = from === "record" ? windowWords.fromRecord : windowWords.fromWard;
-  return `${windowQuantityWord(window.quantity)}; ${place}: ${origin}`;
+  return `${windowAboutWords(window)}; ${place}: ${origin}`;
 }

@@ -9,7 +9,14 @@ import { DataTable } from "../ui/DataTable.tsx";
 import { Notice } from "../ui/Notice.tsx";
 import { partId } from "../ui/partId.ts";
 import { WindowFields } from "../ui/WindowFields.tsx";
-import { EMPTY_WINDOW, type WindowDraft, windowDraftRead } from "../ui/windowDraft.ts";
+import {
+  type WindowAsk,
+  type WindowDraft,
+  windowAsk,
+  windowDraftEmpty,
+  windowDraftRead,
+  windowUnitsFor,
+} from "../ui/windowDraft.ts";
 import { windowValue } from "./recordRows.ts";
 
 export interface WardWindowsProps {
@@ -23,19 +30,31 @@ export interface WardWindowsProps {
 export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsProps) {
   const [draft, setDraft] = useState<WindowDraft | null>(null);
   const [isSent, setSent] = useState(false);
+  const [asked, setAsked] = useState<WindowAsk | null>(null);
   const [faults, setFaults] = useState<readonly Issue[]>([]);
 
+  const change = (next: WindowDraft | null) => {
+    setDraft(next);
+    setAsked(null);
+  };
+  const store = async (taken: WindowDraft, isConfirmed: boolean) => {
+    const read = windowDraftRead(taken);
+    if (!read.ok) return;
+    change(taken);
+    const window = { ...read.value, ...(isConfirmed ? { confirmed: true as const } : {}) };
+    const outcome = await onSave(record.id, partId(), window);
+    setFaults(outcome.ok ? [] : outcome.issues);
+    if (!outcome.ok) return;
+    change(null);
+    setSent(false);
+  };
   const send = async (event: FormEvent) => {
     event.preventDefault();
     setSent(true);
-    if (!draft) return;
-    const read = windowDraftRead(draft);
-    if (!read.ok) return;
-    const outcome = await onSave(record.id, partId(), read.value);
-    setFaults(outcome.ok ? [] : outcome.issues);
-    if (!outcome.ok) return;
-    setDraft(null);
-    setSent(false);
+    if (!draft || !windowDraftRead(draft).ok) return;
+    const ask = windowAsk(draft, record);
+    if (ask) setAsked(ask);
+    else await store(draft, false);
   };
   const remove = async (id: string) => {
     const outcome = await onRemove(record.id, id);
@@ -75,9 +94,26 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
       ))}
       {draft ? (
         <form className="ward-windows-form" onSubmit={(event) => void send(event)} noValidate>
-          <WindowFields draft={draft} onChange={setDraft} molarMass={record.molarMass.value} isTold={isSent} />
+          <WindowFields
+            draft={draft}
+            onChange={change}
+            molarMass={record.molarMass.value}
+            isTold={isSent}
+            units={windowUnitsFor(draft, record)}
+            question={
+              asked
+                ? {
+                    text: asked.text,
+                    answers: asked.answers.map((answer) => ({
+                      label: answer.label,
+                      onAnswer: () => void store(answer.draft, answer.isConfirmed),
+                    })),
+                  }
+                : undefined
+            }
+          />
           <div className="dialog-actions">
-            <Button onPress={() => setDraft(null)}>{medicinesWords.cancel}</Button>
+            <Button onPress={() => change(null)}>{medicinesWords.cancel}</Button>
             <Button kind="main" type="submit">
               {medicinesWords.wardWindowStore}
             </Button>
@@ -85,7 +121,7 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
         </form>
       ) : (
         <div>
-          <Button onPress={() => setDraft(EMPTY_WINDOW)}>{medicinesWords.wardWindowAdd}</Button>
+          <Button onPress={() => change(windowDraftEmpty(record))}>{medicinesWords.wardWindowAdd}</Button>
         </div>
       )}
     </div>

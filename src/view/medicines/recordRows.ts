@@ -1,3 +1,4 @@
+import type { TargetWindow } from "../../core/case/index.ts";
 import {
   type Basis,
   COVARIATES,
@@ -9,7 +10,7 @@ import {
   type Product,
   type RecordWindow,
 } from "../../core/medicine/index.ts";
-import { medicinesWords, recordWords, windowQuantityWord } from "../../core/messages/index.ts";
+import { medicinesWords, recordWords, windowAboutWords, windowQuantityWord } from "../../core/messages/index.ts";
 import { numberPrint, type Quantity, quantityPrint, type UnitCode, unitSpoken } from "../../core/units/index.ts";
 import { windowOtherUnit } from "./windowOtherUnit.ts";
 
@@ -114,8 +115,8 @@ function ends(low: Quantity, high: Quantity): string {
 }
 
 /** "10 to 20 mg/L, lowest and highest" */
-export function windowValue(window: Pick<RecordWindow, "low" | "high" | "quantity">): string {
-  return `${ends(window.low, window.high)}, ${windowQuantityWord(window.quantity)}`;
+export function windowValue(window: TargetWindow): string {
+  return `${ends(window.low, window.high)}, ${windowAboutWords(window)}`;
 }
 
 /** By mass and by amount: "10 to 20 mg/L (55.5 to 111 micromol/L), lowest and highest; drawn 6 h or more after the dose" */

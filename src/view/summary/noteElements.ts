@@ -3,7 +3,7 @@ import {
   listWords,
   NOT_RECORDED,
   summaryDetailWords,
-  windowQuantityWord,
+  windowAboutWords,
   summaryElementWords as words,
 } from "../../core/messages/index.ts";
 import { instantMs } from "../../core/time/index.ts";
@@ -81,7 +81,7 @@ function latest(value: Case, kind: "albumin", print: SummaryPrint): string {
 
 export function targetWords(window: NonNullable<Case["window"]>, print: SummaryPrint): string {
   return summaryDetailWords.window(
-    windowQuantityWord(window.quantity),
+    windowAboutWords(window),
     print.number(window.low),
     print.exact(window.high),
     window.basis === "" ? NOT_RECORDED : window.basis,

@@ -1,4 +1,4 @@
-import type { IndividualReadings } from "../../core/analysis/index.ts";
+import { type IndividualReadings, windowDrawH } from "../../core/analysis/index.ts";
 import type { TargetWindow } from "../../core/case/index.ts";
 import {
   chanceWords,
@@ -55,7 +55,9 @@ function individualText(
   return {
     title: patientWords.windowChance(print.number(window.low), print.exact(window.high)),
     span: [
-      ...(steady || overSpan ? [patientWords.chanceOf(windowChanceWords(window.quantity))] : []),
+      ...(steady || overSpan
+        ? [patientWords.chanceOf(windowChanceWords(window.quantity, windowDrawH(input.case)))]
+        : []),
       ...(overSpan || hasHours ? [patientWords.overSpan(spanWords(window, span, print, hasHours))] : []),
     ].join(" "),
     columns: [
@@ -84,7 +86,5 @@ function spanWords(
   hasHours = true,
 ): string {
   const fromTo = words.span(print.at(print.ms(span.fromH), "dayClock"), print.at(print.ms(span.toH), "dayClock"));
-  return window.quantity === "lowest-and-highest" || !hasHours
-    ? fromTo
-    : `${fromTo}. ${windowRemarkWords(window.quantity)}.`;
+  return window.quantity === "lowest-and-highest" || !hasHours ? fromTo : `${fromTo}. ${windowRemarkWords(window)}.`;
 }

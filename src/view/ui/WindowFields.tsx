@@ -1,6 +1,7 @@
 import { useId } from "react";
+import { windowDrawnAt } from "../../core/analysis/index.ts";
 import type { TargetWindow } from "../../core/case/index.ts";
-import { issueMessage, windowQuantityWord, windowWords } from "../../core/messages/index.ts";
+import { issueMessage, windowAboutWords, windowQuantityWord, windowWords } from "../../core/messages/index.ts";
 import { quantityConvert, quantityPrint, unitDimension, unitSpoken } from "../../core/units/index.ts";
 import { Button } from "./Button.tsx";
 import { ChoiceField } from "./ChoiceField.tsx";
@@ -92,6 +93,28 @@ export function WindowFields({
               {answer.label}
             </Button>
           ))}
+        </div>
+      ) : null}
+      {draft.about === "trough" ? (
+        <div className="window-fields-drawn">
+          <TextField
+            label={windowWords.drawFrom}
+            value={draft.drawFrom}
+            onChange={(drawFrom) => onChange({ ...draft, drawFrom })}
+            description={windowWords.drawHelp}
+            fault={faultOf("drawFrom", draft.drawFrom + draft.drawTo)}
+          />
+          <TextField
+            label={windowWords.drawTo}
+            value={draft.drawTo}
+            onChange={(drawTo) => onChange({ ...draft, drawTo })}
+            fault={faultOf("drawTo", draft.drawTo)}
+            reading={
+              read.ok && windowDrawnAt(read.value) !== null
+                ? windowWords.drawReading(windowAboutWords(read.value))
+                : undefined
+            }
+          />
         </div>
       ) : null}
       <TextField

@@ -1,5 +1,5 @@
 import type { TargetWindow } from "../../core/case/index.ts";
-import { concentrationUnits, type MedicineRecord } from "../../core/medicine/index.ts";
+import { concentrationUnits, LATEST_DRAW_H, type MedicineRecord } from "../../core/medicine/index.ts";
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
 import { numberPlain, numberRead, type Quantity, quantityConvert, unitSpoken } from "../../core/units/index.ts";
 import { concentrationAsk } from "./concentrationAsk.ts";
@@ -16,10 +16,21 @@ export interface WindowDraft {
   readonly low: string;
   readonly high: string;
   readonly unit: WindowUnit;
+  /** Hours after the dose between which a trough's level is drawn; both empty: just before the next dose. */
+  readonly drawFrom: string;
+  readonly drawTo: string;
   readonly basis: string;
 }
 
-export const EMPTY_WINDOW: WindowDraft = { about: null, low: "", high: "", unit: "mg/L", basis: "" };
+export const EMPTY_WINDOW: WindowDraft = {
+  about: null,
+  low: "",
+  high: "",
+  unit: "mg/L",
+  drawFrom: "",
+  drawTo: "",
+  basis: "",
+};
 
 export function windowDraft(window: TargetWindow): WindowDraft {
   return {
@@ -27,6 +38,8 @@ export function windowDraft(window: TargetWindow): WindowDraft {
     low: numberPlain(window.low.value),
     high: numberPlain(window.high.value),
     unit: window.low.unit,
+    drawFrom: window.drawFrom ? numberPlain(window.drawFrom.value) : "",
+    drawTo: window.drawTo ? numberPlain(window.drawTo.value) : "",
     basis: window.basis,
   };
 }
@@ -75,7 +88,7 @@ export interface WindowAsk {
   readonly answers: readonly { readonly label: string; readonly draft: WindowDraft; readonly isConfirmed: boolean }[];
 }
 
-/** The window as stored, or an issue a field: path "about", "low", "high" or "basis". */
+/** The window as stored, or an issue a field: path "about", "low", "high", "drawFrom", "drawTo" or "basis". */
 export function windowDraftRead(draft: WindowDraft): Result<TargetWindow> {
   const { about, unit } = draft;
   const low = numberRead(draft.low);
@@ -91,8 +104,32 @@ export function windowDraftRead(draft: WindowDraft): Result<TargetWindow> {
     const data = { low: low.value, high: high.value, unit: unitSpoken(unit, "screen") };
     faults.push(issue("window-ends", data, ["high"]));
   }
-  if (faults.length > 0 || about === null || !low.ok || !high.ok) return fail(...faults);
+  const drawn = drawnRead(draft);
+  if (!drawn.ok) faults.push(...drawn.issues);
+  if (faults.length > 0 || about === null || !low.ok || !high.ok || !drawn.ok) return fail(...faults);
   const stored = STORED[unit] ?? (unit as TargetWindow["low"]["unit"]);
   const end = (value: number) => ({ value: quantityConvert({ value, unit }, stored), unit: stored });
-  return succeed({ quantity: about, low: end(low.value), high: end(high.value), basis });
+  return succeed({ quantity: about, low: end(low.value), high: end(high.value), ...drawn.value, basis });
+}
+
+type Drawn = Pick<TargetWindow, "drawFrom" | "drawTo">;
+
+/** The hours after the dose, of a trough only; a first hour alone is "so many hours or more", a second alone says nothing. */
+function drawnRead({ about, drawFrom, drawTo }: WindowDraft): Result<Drawn> {
+  const typed = [["drawFrom", drawFrom.trim()] as const, ["drawTo", drawTo.trim()] as const];
+  if (about !== "trough" || typed.every(([, text]) => text === "")) return succeed({});
+  if (drawFrom.trim() === "") return fail(issue("window-draw-from-missing", {}, ["drawFrom"]));
+  const drawn: { drawFrom?: Drawn["drawFrom"]; drawTo?: Drawn["drawTo"] } = {};
+  const faults: Issue[] = [];
+  for (const [name, text] of typed) {
+    if (text === "") continue;
+    const read = numberRead(text);
+    if (!read.ok) faults.push(...read.issues.map((one) => ({ ...one, path: [name] })));
+    else if (!(read.value >= 0 && read.value <= LATEST_DRAW_H))
+      faults.push(issue("window-draw-hours", { found: read.value, most: LATEST_DRAW_H }, [name]));
+    else drawn[name] = { value: read.value, unit: "h" };
+  }
+  if (drawn.drawFrom && drawn.drawTo && drawn.drawFrom.value >= drawn.drawTo.value)
+    faults.push(issue("window-draw-order", { from: drawn.drawFrom.value, to: drawn.drawTo.value }, ["drawTo"]));
+  return faults.length > 0 ? fail(...faults) : succeed(drawn);
 }

@@ -118,6 +118,18 @@ const ROWS: readonly (readonly [string, Change, string, string])[] = [
     "window-units-differ",
     "window.high.unit",
   ],
+  [
+    "a window drawn before the dose",
+    (c) => (c.window!.drawFrom = { value: -1, unit: "h" }),
+    "window-draw-hours",
+    "window.drawFrom.value",
+  ],
+  [
+    "a window drawn from a later hour than to",
+    (c) => Object.assign(c.window!, { drawFrom: { value: 13, unit: "h" }, drawTo: { value: 12, unit: "h" } }),
+    "window-draw-order",
+    "window",
+  ],
   ["an impossible age", (c) => (c.patient.age!.value = 200), "age-impossible", "patient.age.value"],
   ["a year of birth as age", (c) => (c.patient.age!.value = 1961), "age-birth-year", "patient.age.value"],
   [

@@ -45,6 +45,24 @@ describe("readings of this patient", () => {
     expect(cell!.typical!.text).toMatch(/ mg\/L$/);
   });
 
+  it("have a row for the hour after the dose that the window is about: one figure, or from the lowest to the highest", () => {
+    expect(readingsGroups(value, fitted, "mg/L")[0]!.rows.map(({ id }) => id)).not.toContain("timed");
+    const timed = { afterDoseH: 12, lowest: 5, highest: 5 };
+    const own = { afterDoseH: 12, lowest: spread(6, 1.1), highest: spread(8, 1.1) };
+    const [option] = fitted.options;
+    const options = [
+      {
+        ...option!,
+        typical: { ...option!.typical!, steadyState: { ...option!.typical!.steadyState!, timed } },
+        individual: { ...option!.individual!, steadyState: { ...option!.individual!.steadyState!, timed: own } },
+      },
+    ];
+    const found = row({ ...fitted, options }, "timed");
+    expect(found.name).toBe("12 h after a dose");
+    // 6 / 1.21 and 8 · 1.21.
+    expect(found.cells).toEqual([{ typical: { text: "5" }, individual: { text: "6 to 8", sub: "4.96 to 9.68" } }]);
+  });
+
   it("follow the unit shown", () => {
     const molar = readingsGroups(value, fitted, "umol/L")[0]!.rows.find((each) => each.id === "peak")!;
     const shown = Number(molar.cells[0]!.individual!.text);

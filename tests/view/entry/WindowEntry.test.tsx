@@ -65,6 +65,31 @@ describe("WindowEntry", () => {
     await user.type(screen.getByRole("textbox", { name: windowWords.basis }), "ward policy (invented)");
   };
 
+  test("a trough may be one of so many hours after the dose; both hours are kept, shown, and typed again", async () => {
+    const { user, value } = await renderWorkbench(<WindowEntry onDone={vi.fn()} />, { open: lithium() });
+    await fill(user, "0.6", "0.9");
+    await user.type(screen.getByRole("textbox", { name: windowWords.drawTo }), "12.5");
+    await user.click(screen.getByRole("button", { name: windowWords.set }));
+    expect(value()).not.toHaveProperty("window");
+    expect(screen.getByText(issueMessage(issue("window-draw-from-missing")))).toBeVisible();
+    await user.type(screen.getByRole("textbox", { name: windowWords.drawFrom }), "13");
+    expect(screen.getByText(issueMessage(issue("window-draw-order", { from: 13, to: 12.5 })))).toBeVisible();
+    await user.clear(screen.getByRole("textbox", { name: windowWords.drawFrom }));
+    await user.type(screen.getByRole("textbox", { name: windowWords.drawFrom }), "11.5");
+    expect(screen.getByText(windowWords.drawReading("12 hours after the dose"))).toBeVisible();
+    await user.click(screen.getByRole("button", { name: windowWords.set }));
+    expect(value().window).toMatchObject({
+      quantity: "trough",
+      drawFrom: { value: 11.5, unit: "h" },
+      drawTo: { value: 12.5, unit: "h" },
+    });
+    expect(screen.getByText(/^0\.6 to 0\.9 mmol\/L, 12 hours after the dose/)).toBeVisible();
+
+    await user.selectOptions(screen.getByRole("combobox", { name: windowWords.about }), windowQuantityWord("peak"));
+    await user.click(screen.getByRole("button", { name: windowWords.set }));
+    expect(value().window).not.toHaveProperty("drawFrom");
+  });
+
   test("lithium is asked for in mmol/L, and 0.6 stays 0.6", async () => {
     const { user, value } = await renderWorkbench(<WindowEntry onDone={vi.fn()} />, { open: lithium() });
     await fill(user, "0.6", "0.9");

@@ -185,3 +185,34 @@ test("a window of the ward's own is stored and removed", async () => {
   fireEvent.click(button(medicinesWords.removeWindow));
   await waitFor(() => expect(state().wardWindows).toEqual([]));
 });
+
+test("a ward's window is typed in the medicine's unit, asked about in another, and may be hours after the dose", async () => {
+  const { state } = await renderWorkbench(<MedicinesScreen />);
+  choose("lithium");
+  fireEvent.click(button(medicinesWords.wardWindowAdd));
+  const form = document.querySelector<HTMLElement>(".ward-windows-form")!;
+  const fill = (name: string, value: string) =>
+    fireEvent.change(within(form).getByLabelText(name), { target: { value } });
+  expect(within(form).getByLabelText(windowWords.unit)).toHaveValue("mmol/L");
+  fill(windowWords.about, "trough");
+  fill(windowWords.unit, "mg/L");
+  fill(windowWords.low, "0.6");
+  fill(windowWords.high, "0.9");
+  fill(windowWords.drawFrom, "11");
+  fill(windowWords.drawTo, "13");
+  fill(windowWords.basis, "ward policy (invented)");
+  fireEvent.submit(form);
+  await waitFor(() => expect(form.querySelector(".field-frame-answers")).not.toBeNull());
+  expect(state().wardWindows).toEqual([]);
+  fireEvent.click(within(form).getAllByRole("button", { name: /mmol\/L/ })[0]!);
+  await waitFor(() => expect(state().wardWindows).toHaveLength(1));
+  expect(state().wardWindows[0]!.window).toEqual({
+    quantity: "trough",
+    low: { value: 0.6, unit: "mmol/L" },
+    high: { value: 0.9, unit: "mmol/L" },
+    drawFrom: { value: 11, unit: "h" },
+    drawTo: { value: 13, unit: "h" },
+    basis: "ward policy (invented)",
+  });
+  expect(screen.getByRole("rowheader", { name: /12 hours after the dose/ })).toBeVisible();
+});

@@ -1,5 +1,6 @@
 import { type ConcernContext, type ConcernRule, concern } from "../concernRule.ts";
 import type { WindowChance } from "../fitTypes.ts";
+import { windowDrawH } from "../windowTiming.ts";
 
 /** Chance of this patient lying outside the window from which it is pointed out: of the chosen option; and of any other, where it is likelier than not. Our own rule, no published limit. */
 export const CHANCE_CHOSEN = 0.25;
@@ -13,6 +14,7 @@ export const optionChanceOutside: ConcernRule = ({ case: value, options }) => {
   const { window } = value;
   const chosen = value.options.find((option) => option.chosen)?.id;
   if (!window) return [];
+  const afterDoseH = windowDrawH(value);
   return options.flatMap((option) => {
     const found = chanceOf(option);
     if (!found) return [];
@@ -20,7 +22,14 @@ export const optionChanceOutside: ConcernRule = ({ case: value, options }) => {
     const isChosen = option.id === chosen;
     const from = isChosen || chosen === undefined ? CHANCE_CHOSEN : CHANCE_OTHER;
     const about = { kind: "option", id: option.id } as const;
-    const data = { option: option.id, quantity: window.quantity, isSteady, above: chance.above, below: chance.below };
+    const data = {
+      option: option.id,
+      quantity: window.quantity,
+      afterDoseH,
+      isSteady,
+      above: chance.above,
+      below: chance.below,
+    };
     const gravity = isChosen && chance.above > CHANCE_OTHER ? "stop" : "check";
     return [
       ...(chance.above >= from ? [concern("option-chance-above", gravity, about, data)] : []),
