@@ -1,5 +1,6 @@
 import adjustment from "../../demo-data/adjustment.ebbline.json";
 import kidney from "../../demo-data/kidney.ebbline.json";
+import lithium from "../../demo-data/lithium.ebbline.json";
 import modifiedRelease from "../../demo-data/modified-release.ebbline.json";
 import saturable from "../../demo-data/saturable.ebbline.json";
 import start from "../../demo-data/start.ebbline.json";
@@ -34,7 +35,7 @@ export function compose(): Workbench {
       loadDeriveSteps: async () => deriveSteps,
     });
   const [runner, fitter] = [makeRunner(), makeRunner()];
-  const demos = { start, adjustment, modifiedRelease, saturable, kidney };
+  const demos = { start, adjustment, modifiedRelease, saturable, kidney, lithium };
   return createWorkbench({ repository, runner, fitter, clock, newId, demos, builtInRecords: BUILT_IN_RECORDS });
 }
 

@@ -13,9 +13,9 @@ function demo(name: string): Case {
 }
 
 describe("demo cases", () => {
-  const names = ["adjustment", "kidney", "modified-release", "saturable", "start"];
+  const names = ["adjustment", "kidney", "lithium", "modified-release", "saturable", "start"];
 
-  it("are these five", () => {
+  it("are these six", () => {
     expect(readdirSync(folder).sort()).toEqual(names.map((name) => `${name}.ebbline.json`));
   });
 
@@ -96,5 +96,25 @@ describe("the cases for the other kinds of kinetics", () => {
     for (const [i, each] of clearances.slice(1).entries()) expect(each).toBeLessThan(clearances[i]!);
     // The whole effect of the factor: relative tolerance 1e-14, four powers of a quarter.
     expect(Math.abs(clearances[5]! / clearances[1]! / 0.784 - 1)).toBeLessThan(1e-14);
+  });
+});
+
+describe("lithium once a day", () => {
+  const value = demo("lithium");
+  const [option] = derive(value, { isFitted: true }).options;
+
+  it("is in mmol/L, with levels 12 hours after the dose", () => {
+    expect(value.levels.map(({ quantity }) => quantity.unit)).toEqual(["mmol/L", "mmol/L"]);
+    for (const { afterDoseH } of derive(value).levels) expect(Math.abs(afterDoseH! - 12)).toBeLessThanOrEqual(0.5);
+  });
+
+  it("the chosen option is held against the window 12 hours after the dose, not by its lowest, which lies below it", () => {
+    // mmol/L by the molar mass of lithium, 6.94 g/mol.
+    const { timed, lowest, chance } = option!.individual!.steadyState!;
+    expect(timed!.afterDoseH).toBe(12);
+    expect(timed!.lowest.q50 / 6.94).toBeGreaterThan(value.window!.low.value);
+    expect(timed!.lowest.q50 / 6.94).toBeLessThan(value.window!.high.value);
+    expect(lowest.q50 / 6.94).toBeLessThan(value.window!.low.value);
+    expect(chance!.within).toBeGreaterThan(0.5);
   });
 });
