@@ -5,10 +5,10 @@ import {
   type Matrix,
   symmetricInverse,
 } from "../numerics/index.ts";
-import { drawMoments } from "./drawSummary.ts";
 import { type DrawOptions, drawOptionsCheck } from "./estimationDraws.ts";
 import { EstimationObjective } from "./estimationObjective.ts";
 import type { EstimationProblem, MapEstimate, Posterior } from "./estimationTypes.ts";
+import { drawMoments } from "./drawSummary.ts";
 import { type Component, mixtureSample } from "./mixtureSample.ts";
 import { thinnedDraws } from "./thinnedDraws.ts";
 
@@ -23,8 +23,13 @@ const PRIOR_SHARE = 0.2;
 /** First draws, that only learn where to draw, and the part of the draws that comes from there. */
 const PILOT_DRAWS = 1024;
 const LEARNT_SHARE = 0.8;
+/**
+ * Its scale as a multiple of their covariance, 1 + 3/d in d dimensions: a skew posterior reaches farther on one side than its covariance
+ * says. Of 1, 1.5 and 2 in three dimensions the last alone kept the steady-state troughs' percentiles of every seed within 2 %.
+ */
+const WIDENED_BY = 3;
 /** Draws weighed for each one kept where a level costs microseconds: tails then hold their percentiles (see thinnedDraws). */
-const WEIGHED_FOR_ONE = 8;
+const WEIGHED_FOR_ONE = 4;
 
 type Converged = Extract<MapEstimate, { status: "converged" }>;
 
@@ -32,8 +37,8 @@ type Converged = Extract<MapEstimate, { status: "converged" }>;
  * Draws from what the levels leave possible.
  *
  * Formula: importance sampling from a mixture of t distributions with 4 degrees: about each minimum with its inverse Hessian as scale, the
- * prior, and, by far the most, mean and covariance as 1,024 draws from those have found them (mixtureSample); weights smoothed
- * (paretoSmoothed). Kinds of closed form weigh 8 draws for each one kept (thinnedDraws). k̂ > 0.7: an adaptive Markov chain
+ * prior, and, by far the most, mean and (widened) covariance as 1,024 draws from those have found them (mixtureSample); weights smoothed
+ * (paretoSmoothed). Kinds of closed form weigh 4 draws for each one kept (thinnedDraws). k̂ > 0.7: an adaptive Markov chain
  * (adaptiveChain). Neither to be trusted: withheld.
  * @param problem see EstimationProblem
  * @param map of the same problem, converged
@@ -59,7 +64,7 @@ export function posteriorFrom(objective: EstimationObjective, map: Converged, op
   const sample = mixtureSample(logDensity, components, many, seed);
   const paretoK = sample.status === "drawn" ? sample.paretoK : Number.POSITIVE_INFINITY;
   if (sample.status === "drawn" && paretoK <= LARGEST_PARETO_K) {
-    const { points, weights } = many === draws ? sample : thinnedDraws(sample.points, sample.weights, many / draws);
+    const { points, weights } = many === draws ? sample : thinnedDraws(sample.points, sample.weights, draws);
     for (let n = 0; n < draws; n++) {
       if (weights[n] === 0) for (const [i, column] of points.entries()) column[n] = map.eta[i]!;
     }
@@ -134,7 +139,7 @@ function componentsLearnt(
       for (let n = 0; n < weights.length; n++) {
         sum += weights[n]! * (a[n]! - moments[i]!.mean) * (b[n]! - moments[j]!.mean);
       }
-      return sum;
+      return (1 + WIDENED_BY / points.length) * sum;
     }),
   );
   const hessian = symmetricInverse(covariance);
