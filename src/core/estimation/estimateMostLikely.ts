@@ -8,6 +8,7 @@ import {
 import { EstimationObjective } from "./estimationObjective.ts";
 import { estimationStarts } from "./estimationStarts.ts";
 import type { EstimationProblem, MapEstimate } from "./estimationTypes.ts";
+import { kinkMinimum } from "./kinkMinimum.ts";
 import { residualSd } from "./residualTerm.ts";
 
 /** Near enough to tell whether a minimum is a new one. */
@@ -54,7 +55,9 @@ export function mostLikelyOf(objective: EstimationObjective, from?: readonly num
       const hessian = hessianByDifferences(functions.gradient, cheap.x, scale);
       if (hessian !== null && choleskyFactor(hessian) !== null) return { ...cheap, hessian };
     }
-    return minimise({ ...functions, start: cheap.x, options: { ...CLOSE, scale } });
+    const newton = minimise({ ...functions, start: cheap.x, options: { ...CLOSE, scale } });
+    if (newton.status === "converged") return newton;
+    return kinkMinimum(objective, newton, { ...CLOSE, scale }) ?? newton;
   };
 
   const minima: Minimum[] = [];
