@@ -3,6 +3,7 @@ import { numberPrint } from "../../core/units/index.ts";
 import { LevelMark } from "./LevelMark.tsx";
 import "./profileChart.css";
 import type { ProfileScene } from "./profileScene.ts";
+import { windowEdges } from "./windowEdges.ts";
 
 /** How a curve is drawn: by its place among the options (dash first, hue second), or as the doses given. */
 export type CurveStyle = "given" | "option-1" | "option-2" | "option-3" | "option-4";
@@ -121,6 +122,7 @@ function BandPaths({ band, style }: { band: ProfileScene["bands"][number]; style
 function WindowChannel({ scene, hatch }: { scene: ProfileScene; hatch: string | undefined }) {
   const { plot, window } = scene;
   if (!window) return null;
+  const numbers = windowEdges(window);
   return (
     <g>
       <rect
@@ -134,7 +136,7 @@ function WindowChannel({ scene, hatch }: { scene: ProfileScene; hatch: string | 
       {[window.top, window.bottom].map((y, index) => (
         <g key={index}>
           <line className="profile-edge" x1={plot.left} x2={plot.right} y1={y} y2={y} />
-          <text className="profile-edge-value" x={plot.right + 34} y={y + 5}>
+          <text className="profile-edge-value" x={plot.right + 34} y={(numbers[index] ?? y) + 5}>
             {numberPrint(index === 0 ? window.high : window.low, { significant: 3 })}
           </text>
         </g>
