@@ -1,6 +1,7 @@
 export { benchWords } from "./benchWords.ts";
 export type { ConcernWords } from "./concernFigures.ts";
 export { CONCERN_CODES, concernMessage, GRAVITY_WORDS } from "./concernMessages.ts";
+export { dragWords } from "./dragWords.ts";
 export { editLabel } from "./editWords.ts";
 export * from "./entryWords.ts";
 export { amountsWords, eventEffectWords, eventLine, eventName, eventWords, isEventMoment } from "./eventWords.ts";

@@ -3,6 +3,7 @@ import { CaseEntry } from "../entry/CaseEntry.tsx";
 import { DoseEntry } from "../entry/DoseEntry.tsx";
 import { EventEntry } from "../entry/EventEntry.tsx";
 import { LevelEntry } from "../entry/LevelEntry.tsx";
+import type { OpenLevel } from "../entry/LevelTable.tsx";
 import { PatientPanel } from "../entry/PatientPanel.tsx";
 import { WindowEntry } from "../entry/WindowEntry.tsx";
 import { RichLevelsPanel } from "../rich/RichLevelsPanel.tsx";
@@ -21,15 +22,17 @@ export type OpenPanel =
   | { readonly kind: BenchPanelKind }
   | { readonly kind: "doses"; readonly lineId?: string }
   | { readonly kind: "events"; readonly index?: number }
+  | ({ readonly kind: "level" } & OpenLevel)
   | { readonly kind: "option"; readonly option: string; readonly lineId?: string }
   | { readonly kind: "working"; readonly row: string; readonly option: string; readonly of: ReadingOf };
 
-const TITLES: Readonly<Record<BenchPanelKind | "doses" | "events", string>> = {
+const TITLES: Readonly<Record<BenchPanelKind | "doses" | "events" | "level", string>> = {
   case: "Case",
   patient: "Patient",
   medicine: "Medicine",
   window: "Target window",
   levels: "Measured levels",
+  level: "Measured levels",
   rich: "Levels without a model",
   learnt: fitWords.taughtTitle,
   doses: "Doses given",
@@ -52,6 +55,9 @@ export function BenchPanel({ panel, unit, onClose }: BenchPanelProps) {
       {panel.kind === "medicine" && <MedicinePanel />}
       {panel.kind === "window" && <WindowEntry onDone={onClose} />}
       {panel.kind === "levels" && <LevelEntry onDone={onClose} />}
+      {panel.kind === "level" && (
+        <LevelEntry key={panel.id} opened={{ id: panel.id, form: panel.form }} onDone={onClose} />
+      )}
       {panel.kind === "learnt" && <LearntPanel />}
       {panel.kind === "rich" && <RichLevelsPanel unit={unit} />}
       {panel.kind === "doses" && (
@@ -63,7 +69,7 @@ export function BenchPanel({ panel, unit, onClose }: BenchPanelProps) {
       {panel.kind === "option" && (
         <OptionPanel option={panel.option} onDone={onClose} {...(panel.lineId ? { lineId: panel.lineId } : {})} />
       )}
-      {panel.kind === "working" && <WorkingPanel row={panel.row} option={panel.option} of={panel.of} />}
+      {panel.kind === "working" && <WorkingPanel row={panel.row} option={panel.option} of={panel.of} unit={unit} />}
     </Dialog>
   );
 }

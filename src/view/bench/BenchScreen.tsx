@@ -174,6 +174,8 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
                 scale={scale}
                 unit={unit}
                 lit={lit}
+                isReadOnly={isReader}
+                onOpenLevel={(id, form) => setPanel({ kind: "level", id, form })}
               />
             ) : (
               <p className="bench-waiting">{benchWords.analysisStates.running}</p>

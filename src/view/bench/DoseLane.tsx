@@ -6,6 +6,7 @@ import type { ClockScale } from "../chart/clockScale.ts";
 import type { CurveStyle } from "../chart/ProfileChart.tsx";
 import { DoseToken } from "./DoseToken.tsx";
 import "./DoseLane.css";
+import { DragReadout } from "./DragReadout.tsx";
 import { lineReach } from "./gestures/lineReach.ts";
 import { LineEnd } from "./LineEnd.tsx";
 import { laneTokens } from "./laneTokens.ts";
@@ -37,12 +38,14 @@ const BASELINE = 52;
 export function DoseLane(props: DoseLaneProps) {
   const { marks, scale, width, nowX } = props;
   const [selected, setSelected] = useState<string | null>(null);
+  const [dragged, setDragged] = useState<{ readonly key: string; readonly words: string } | null>(null);
   const tokens = useMemo(() => laneTokens(marks, scale, props.largest), [marks, scale, props.largest]);
   const ends = props.lines.flatMap((line) => {
     const reach = lineReach(line);
     const last = marks.filter((mark) => mark.lineId === line.id).at(-1);
     return reach && last && last.atH >= scale.fromH && last.atH <= scale.toH ? [{ line, reach, lastH: last.atH }] : [];
   });
+  const held = tokens.find((token) => token.key === dragged?.key);
   const chosen = tokens.find((token) => token.key === selected) ?? null;
   return (
     <section
@@ -75,6 +78,7 @@ export function DoseLane(props: DoseLaneProps) {
               isReadOnly={props.isReadOnly}
               onSelect={() => setSelected(token.key === selected ? null : token.key)}
               onOpenLine={() => props.onOpenLine(token.mark.lineId)}
+              onWords={(words) => setDragged(words === null ? null : { key: token.key, words })}
             />
           ))}
           {!props.isReadOnly &&
@@ -92,6 +96,7 @@ export function DoseLane(props: DoseLaneProps) {
               />
             ))}
         </svg>
+        {dragged && held && <DragReadout words={dragged.words} x={held.x} y={BASELINE - 8} width={width} />}
         {chosen && (
           <TokenBar
             mark={chosen.mark}

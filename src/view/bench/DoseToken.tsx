@@ -6,9 +6,8 @@ import { instantIso, instantText } from "../../core/time/index.ts";
 import { quantityPrint } from "../../core/units/index.ts";
 import type { ClockScale } from "../chart/clockScale.ts";
 import type { CurveStyle } from "../chart/ProfileChart.tsx";
-import { useWorkbench } from "../useWorkbench.ts";
-import { tokenNudge, tokenSnap } from "./gestures/tokenSnap.ts";
-import { useTokenDrag } from "./gestures/useTokenDrag.ts";
+import { tokenNudge } from "./gestures/tokenSnap.ts";
+import { useDoseDrag } from "./gestures/useDoseDrag.ts";
 import type { LaneToken } from "./laneTokens.ts";
 import { useTokenActions } from "./useTokenActions.ts";
 
@@ -24,6 +23,8 @@ interface DoseTokenProps {
   readonly isReadOnly: boolean;
   readonly onSelect: () => void;
   readonly onOpenLine: () => void;
+  /** While it is dragged: what changes, from what to what. */
+  readonly onWords: (words: string | null) => void;
 }
 
 const HOUR_MS = 3_600_000;
@@ -45,29 +46,14 @@ function tokenCorner(product: Product): number {
   return product.form === "liquid" ? 4.5 : 2;
 }
 
-/** One dose: dragged along the clock, moved with arrow keys, opened with Enter. */
+/** One dose: dragged along the clock, in an option also up and down; moved and changed with arrow keys, opened with Enter. */
 export function DoseToken(props: DoseTokenProps) {
   const { token, lane, scale, originMs, value, baseline } = props;
   const { mark } = token;
-  const previewEdit = useWorkbench((state) => state.previewEdit);
-  const cancelPreview = useWorkbench((state) => state.cancelPreview);
-  const edit = useWorkbench((state) => state.edit);
   const actions = useTokenActions(value, lane, mark, originMs);
-
   const atMs = originMs + mark.atH * HOUR_MS;
-  const moved = (dx: number, isFine: boolean) => {
-    const ms = tokenSnap(atMs + (scale.hours(scale.left + dx) - scale.hours(scale.left)) * HOUR_MS, isFine);
-    return { lane, lineId: mark.lineId, index: mark.index, at: instantIso(ms, value.timeZone) };
-  };
-  const startDrag = useTokenDrag({
-    onMove: (dx, isFine) => previewEdit("doseMove", moved(dx, isFine)),
-    onDrop: (dx, isFine) => {
-      cancelPreview();
-      edit("doseMove", moved(dx, isFine));
-    },
-    onCancel: cancelPreview,
-    onPress: props.onSelect,
-  });
+  const { onSelect: onPress, onWords } = props;
+  const startDrag = useDoseDrag({ value, lane, mark, scale, originMs, onPress, onWords });
 
   const onKeyDown = (event: KeyboardEvent) => {
     if (event.ctrlKey || event.metaKey) return;
@@ -100,7 +86,7 @@ export function DoseToken(props: DoseTokenProps) {
   const y = baseline - token.height;
   return (
     <g
-      className={`token token-${props.style}${isHollow ? " token-hollow" : ""}${props.isSelected ? " token-selected" : ""}`}
+      className={`token token-${props.style}${lane === "given" ? "" : " token-scales"}${isHollow ? " token-hollow" : ""}${props.isSelected ? " token-selected" : ""}`}
       role="slider"
       tabIndex={0}
       aria-label={`Dose ${mark.index + 1}`}

@@ -4,7 +4,7 @@ import type { ClockScale } from "../chart/clockScale.ts";
 import type { CurveStyle } from "../chart/ProfileChart.tsx";
 import { useWorkbench } from "../useWorkbench.ts";
 import { type LineReach, lineReachPulled, lineReachStepped } from "./gestures/lineReach.ts";
-import { useTokenDrag } from "./gestures/useTokenDrag.ts";
+import { useAxisDrag } from "./gestures/useAxisDrag.ts";
 
 interface LineEndProps {
   readonly lane: string;
@@ -31,9 +31,10 @@ export function LineEnd({ lane, line, reach, lastH, scale, baseline, style, onPr
     lineId: line.id,
     ...lineReachPulled(line, reach, scale.hours(scale.left + dx) - scale.hours(scale.left)),
   });
-  const start = useTokenDrag({
-    onMove: (dx) => previewEdit("lineStretch", pulled(dx)),
-    onDrop: (dx) => {
+  const start = useAxisDrag({
+    axes: ["clock"],
+    onMove: (_, dx) => previewEdit("lineStretch", pulled(dx)),
+    onDrop: (_, dx) => {
       cancelPreview();
       edit("lineStretch", pulled(dx));
     },

@@ -1,14 +1,16 @@
 import { type KeyboardEvent, type PointerEvent, useId, useMemo, useState } from "react";
 import { type Analysis, concentrationWindow, type LevelResult } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { fitWords } from "../../core/messages/index.ts";
+import { benchWords, fitWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
 import { valueAt } from "../chart/bandAt.ts";
 import { optionStyle, ProfileChart } from "../chart/ProfileChart.tsx";
 import { profileParts } from "../chart/profileParts.ts";
 import { type ProfileScene, profileScene } from "../chart/profileScene.ts";
+import type { OpenLevel } from "../entry/LevelTable.tsx";
 import type { BenchSpan } from "./benchSpan.ts";
+import { LevelHandles } from "./LevelHandles.tsx";
 import { ProfileReadout } from "./ProfileReadout.tsx";
 import { levelLines, levelNear, type Readout, readoutLines, readoutsAt } from "./readoutLines.ts";
 import { type ShownUnit, unitFactor } from "./shownUnit.ts";
@@ -24,15 +26,19 @@ interface ProfileRowProps {
   readonly unit: ShownUnit;
   /** The option pointed at elsewhere on the bench: its band is filled. */
   readonly lit: string | null;
+  readonly isReadOnly: boolean;
+  readonly onOpenLevel: (id: string, form: OpenLevel["form"]) => void;
 }
 
 export const PROFILE_HEIGHT = 430;
 const MARGIN = { top: 14, bottom: 28, left: 0 };
 
 /** The concentration-time curve on the shared clock, with a readout that follows the pointer or the arrow keys. */
-export function ProfileRow({ value, analysis, span, width, right, scale, unit, lit }: ProfileRowProps) {
+export function ProfileRow(props: ProfileRowProps) {
+  const { value, analysis, span, width, right, scale, unit, lit } = props;
   const [readoutH, setReadoutH] = useState<number | null>(null);
   const [nearest, setNearest] = useState<string | null>(null);
+  const [isDragging, setDragging] = useState(false);
   const factor = unitFactor(value, unit);
   const chosen = value.options.find((option) => option.chosen)?.id ?? null;
   const litOption = lit ?? nearest ?? chosen ?? value.options[0]?.id ?? null;
@@ -57,6 +63,7 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit, l
   const hintId = useId();
   const clamp = (hours: number) => Math.min(Math.max(hours, span.fromH), span.toH);
   const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
+    if (isDragging) return;
     const box = event.currentTarget.getBoundingClientRect();
     const hours = clamp(scene.clock.hours(event.clientX - box.left));
     const level = levelNear(analysis, hours, pxPerHour);
@@ -99,52 +106,66 @@ export function ProfileRow({ value, analysis, span, width, right, scale, unit, l
   const level = readoutH === null ? null : levelNear(analysis, readoutH, pxPerHour);
   return (
     <div
-      className="profile-row"
-      role="slider"
-      tabIndex={0}
-      aria-label="Time on the profile"
-      aria-valuemin={span.fromH}
-      aria-valuemax={span.toH}
-      aria-valuenow={shownH}
-      aria-valuetext={readoutWords(value, analysis, shownH, readouts, unit, level)}
-      aria-describedby={hintId}
+      className="profile-place"
+      role="group"
+      aria-label={benchWords.profile}
       onPointerMove={onPointerMove}
       onPointerDown={onPointerMove}
       onPointerLeave={() => {
         setReadoutH(null);
         setNearest(null);
       }}
-      onFocus={(event) => {
-        if (event.currentTarget.matches(":focus-visible"))
-          setReadoutH((current) => current ?? clamp(analysis.clock.nowH));
-      }}
-      onBlur={() => setReadoutH(null)}
-      onKeyDown={onKeyDown}
     >
-      <ProfileChart
-        scene={scene}
-        styleOf={style}
-        chosen={chosen}
-        litLevel={level?.id ?? null}
-        mode="screen"
-        title={profileTitle(value, analysis, unit)}
+      <div
+        className="profile-row"
+        role="slider"
+        tabIndex={0}
+        aria-label="Time on the profile"
+        aria-valuemin={span.fromH}
+        aria-valuemax={span.toH}
+        aria-valuenow={shownH}
+        aria-valuetext={readoutWords(value, analysis, shownH, readouts, unit, level)}
+        aria-describedby={hintId}
+        onFocus={(event) => {
+          if (event.currentTarget.matches(":focus-visible"))
+            setReadoutH((current) => current ?? clamp(analysis.clock.nowH));
+        }}
+        onBlur={() => setReadoutH(null)}
+        onKeyDown={onKeyDown}
       >
-        {readoutH !== null && (
-          <ProfileReadout
-            value={value}
-            analysis={analysis}
-            scene={scene}
-            hours={readoutH}
-            readouts={readouts}
-            level={level}
-            unit={unit}
-            styleOf={style}
-          />
-        )}
-      </ProfileChart>
-      <span id={hintId} className="visually-hidden">
-        {fitWords.profileHint}
-      </span>
+        <ProfileChart
+          scene={scene}
+          styleOf={style}
+          chosen={chosen}
+          litLevel={level?.id ?? null}
+          mode="screen"
+          title={profileTitle(value, analysis, unit)}
+        >
+          {readoutH !== null && !isDragging && (
+            <ProfileReadout
+              value={value}
+              analysis={analysis}
+              scene={scene}
+              hours={readoutH}
+              readouts={readouts}
+              level={level}
+              unit={unit}
+              styleOf={style}
+            />
+          )}
+        </ProfileChart>
+        <span id={hintId} className="visually-hidden">
+          {fitWords.profileHint}
+        </span>
+      </div>
+      <LevelHandles
+        value={value}
+        scene={scene}
+        originMs={analysis.clock.originMs}
+        isReadOnly={props.isReadOnly}
+        onOpen={props.onOpenLevel}
+        onDragging={setDragging}
+      />
     </div>
   );
 }

@@ -35,7 +35,7 @@ export function TokenBar(props: TokenBarProps) {
         <div className="token-bar-buttons">
           <Button onPress={() => actions.moveByMinutes(-SNAP_MIN)}>{SNAP_MIN} min earlier</Button>
           <Button onPress={() => actions.moveByMinutes(SNAP_MIN)}>{SNAP_MIN} min later</Button>
-          {product.form !== "liquid" && mark.status !== "missed" && (
+          {mark.status !== "missed" && (
             <>
               <Button onPress={() => actions.step(-1)}>Less</Button>
               <Button onPress={() => actions.step(1)}>More</Button>

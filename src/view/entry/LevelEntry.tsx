@@ -2,16 +2,18 @@ import { fitWords, levelWords } from "../../core/messages/index.ts";
 import { partId } from "../ui/partId.ts";
 import { useWorkbench } from "../useWorkbench.ts";
 import { LevelForm } from "./LevelForm.tsx";
-import { LevelTable } from "./LevelTable.tsx";
+import { LevelTable, type OpenLevel } from "./LevelTable.tsx";
 import { PanelDone } from "./PanelDone.tsx";
 import "./entryPanel.css";
 import "./LevelEntry.css";
 
 export interface LevelEntryProps {
   readonly onDone: () => void;
+  /** The form of one level, open from the start. */
+  readonly opened?: OpenLevel;
 }
 
-export function LevelEntry({ onDone }: LevelEntryProps) {
+export function LevelEntry({ onDone, opened }: LevelEntryProps) {
   const open = useWorkbench((state) => state.open);
   const edit = useWorkbench((state) => state.edit);
   if (!open) return null;
@@ -26,6 +28,7 @@ export function LevelEntry({ onDone }: LevelEntryProps) {
           value={open.value}
           results={result?.levels ?? []}
           isReadOnly={isReadOnly}
+          {...(opened ? { opened } : {})}
           onExclude={(id, reason) => edit("levelExclude", { id, reason })}
           onChange={(level) => edit("levelChange", { level })}
           onRemove={(id) => edit("levelRemove", { id })}
@@ -35,7 +38,7 @@ export function LevelEntry({ onDone }: LevelEntryProps) {
         ) : null}
         {isStale ? <p className="entry-panel-soft">{levelWords.stale}</p> : null}
       </div>
-      {isReadOnly ? null : (
+      {isReadOnly || opened ? null : (
         <section aria-labelledby="level-entry-add">
           <h3 id="level-entry-add">{levelWords.add}</h3>
           <LevelForm

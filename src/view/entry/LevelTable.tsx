@@ -11,18 +11,27 @@ import { TextField } from "../ui/TextField.tsx";
 import { LevelFindings } from "./LevelFindings.tsx";
 import { LevelForm } from "./LevelForm.tsx";
 
+/** Which level's form is open: to change it, or to say why it is left out. */
+export interface OpenLevel {
+  readonly id: string;
+  readonly form: "change" | "reason";
+}
+
 export interface LevelTableProps {
   readonly value: Case;
   readonly results: readonly LevelResult[];
   readonly isReadOnly: boolean;
+  /** Open from the start. */
+  readonly opened?: OpenLevel;
   readonly onChange: (level: Level) => void;
   readonly onExclude: (id: string, reason: string | null) => void;
   readonly onRemove: (id: string) => void;
 }
 
 /** Every level with what was predicted at that time; one left out stays, with its reason. */
-export function LevelTable({ value, results, isReadOnly, onChange, onExclude, onRemove }: LevelTableProps) {
-  const [opened, setOpened] = useState<{ readonly id: string; readonly form: "change" | "reason" } | null>(null);
+export function LevelTable(props: LevelTableProps) {
+  const { value, results, isReadOnly, onChange, onExclude, onRemove } = props;
+  const [opened, setOpened] = useState<OpenLevel | null>(props.opened ?? null);
   const openedLevel = value.levels.find((level) => level.id === opened?.id);
   const resultOf = (level: Level) => results.find((one) => one.id === level.id);
   const hasFit = results.some((result) => result.fit !== null);
@@ -173,6 +182,7 @@ export function LevelTable({ value, results, isReadOnly, onChange, onExclude, on
       {openedLevel && opened?.form === "reason" && !isReadOnly ? (
         <ReasonForm
           key={openedLevel.id}
+          name={nameOf(openedLevel)}
           onCancel={() => setOpened(null)}
           onSave={(reason) => {
             onExclude(openedLevel.id, reason);
@@ -202,9 +212,11 @@ function measuredWords(level: Level): string {
 }
 
 function ReasonForm({
+  name,
   onSave,
   onCancel,
 }: {
+  readonly name: string;
   readonly onSave: (reason: string) => void;
   readonly onCancel: () => void;
 }) {
@@ -217,6 +229,7 @@ function ReasonForm({
   };
   return (
     <form className="entry-panel-form entry-panel-inset" onSubmit={send} noValidate>
+      <p className="entry-panel-soft">{name}</p>
       <TextField
         label={levelWords.reason}
         value={reason}
