@@ -81,8 +81,8 @@ describe("most likely values of six published-form cases", () => {
 
 /** A steady-state trough is the level after as many doses as leave nothing to come. */
 const PERIODS = 80;
-/** The default seed. Over 30 seeds the worst are 3.3 % (MP3, sd of CL), 8 % (MP4, sd of ka) and 3.7 % (MP3, 5 % of the trough). */
-const SEEDS = [1];
+/** Of 60 seeds the worst trough percentile is 1.6 % off (MP3, 5 %), the worst mean 0.4 % and the worst sd 2.5 %. */
+const SEEDS = [1, 2, 3];
 
 describe("posteriors of the same cases by quadrature, 4,000 draws", () => {
   test.each(NAMED)("%s: mean within 1 %, sd within 3 %, trough percentiles within 2 %", (_id, one) => {

@@ -21,11 +21,20 @@ export class SaturableStep {
   readonly body: Float64Array;
   /** The total by row after the last step taken. */
   readonly result: Float64Array;
+  /** How many columns the last step took: its error is of order 2·columns − 1. */
+  columns: number = SUBSTEPS.length;
+  /** Whether it took fewer than there are. */
+  get isEarly(): boolean {
+    return this.columns <= LAST;
+  }
   readonly #state: SweepState;
   /** The depots' content by point and row. */
   readonly #waiting: Float64Array;
   readonly #ends = new Float64Array(SUBSTEPS.length);
   readonly #powers = new Float64Array(PARTS + 1);
+  /** By depot: mg at the start of the step, and what a 24th of it leaves of them. */
+  readonly #now: Float64Array;
+  readonly #part: Float64Array;
   readonly #columns: readonly Float64Array[];
   readonly #start: Float64Array;
   readonly #slope: Float64Array;
@@ -44,6 +53,8 @@ export class SaturableStep {
     this.body = zeros();
     this.result = zeros();
     this.#waiting = new Float64Array(rows * (PARTS + 1));
+    this.#now = new Float64Array(state.depots);
+    this.#part = new Float64Array(state.depots);
     this.#columns = SUBSTEPS.map(zeros);
     this.#start = zeros();
     this.#slope = zeros();
@@ -65,7 +76,7 @@ export class SaturableStep {
   take(total: Float64Array, from: number, h: number): number {
     const { rows } = this.#state;
     this.#waitingSet(total[0]!, from, h);
-    if (rows === 1) return this.#takeAlone(total[0]!, h);
+    this.columns = SUBSTEPS.length;
     this.#slopeAt(total, 0, this.#start);
     for (let j = 0; j <= LAST; j++) this.#midpoint(total, SUBSTEPS[j]!, h, this.#columns[j]!);
     const scale = total[0]! + this.#state.rate * h;
@@ -87,19 +98,26 @@ export class SaturableStep {
     return worst / scale;
   }
 
-  /** The same without derivatives, in plain numbers: bands are made of this. */
-  #takeAlone(total: number, h: number): number {
+  /**
+   * The same without derivatives, in plain numbers: bands are made of this. It ends with the first column whose difference to the order
+   * below is within what is allowed: most steps are cut short by the times asked for.
+   */
+  takeAlone(total: number, from: number, h: number, allowed: number): number {
     const { rate } = this.#state;
     const waiting = this.#waiting;
     const vmax = this.#vmax;
     const half = this.#half;
     const ends = this.#ends;
+    const scale = total + rate * h;
+    const isWaiting = this.#waitingStart(total, from, h);
     const body = Math.max(0, total - waiting[0]!);
     const start = rate - (vmax * body) / (half + body);
+    let error = 0;
     for (let j = 0; j <= LAST; j++) {
       const count = SUBSTEPS[j]!;
       const part = h / count;
       const points = PARTS / count;
+      if (isWaiting) this.#waitingAdd(j);
       let before = total;
       let at = total + part * start;
       for (let m = 1, point = points; m < count; m++, point += points) {
@@ -108,19 +126,66 @@ export class SaturableStep {
         before = at;
         at = next;
       }
+      // The next row of the extrapolation, over the one before it.
+      for (let k = 1; k <= j; k++) {
+        const ratio = count / SUBSTEPS[j - k]!;
+        const change = (at - ends[k - 1]!) / (ratio * ratio - 1);
+        ends[k - 1] = at;
+        at += change;
+        error = Math.abs(change) / scale;
+      }
       ends[j] = at;
+      this.columns = j + 1;
+      if (j > 0 && error <= allowed) break;
     }
-    let error = 0;
-    for (let k = 1; k <= LAST; k++) {
-      for (let j = LAST; j >= k; j--) {
-        const ratio = SUBSTEPS[j]! / SUBSTEPS[j - k]!;
-        const change = (ends[j]! - ends[j - 1]!) / (ratio * ratio - 1);
-        ends[j] = ends[j]! + change;
-        if (j === LAST) error = Math.abs(change);
+    this.result[0] = ends[this.columns - 1]!;
+    return error;
+  }
+
+  /** The depots' content at the points of the columns to come: their share at the start, and how much a 24th of the step leaves. */
+  #waitingStart(total: number, from: number, h: number): boolean {
+    const { ka, gut, depots } = this.#state;
+    const waiting = this.#waiting;
+    waiting.fill(0);
+    let isWaiting = false;
+    for (let i = 0; i < depots; i++) {
+      const now = gut[i]! * Math.exp(-ka[i]! * from);
+      this.#now[i] = now > EMPTY_BELOW * total ? now : 0;
+      if (this.#now[i] === 0) continue;
+      isWaiting = true;
+      this.#part[i] = Math.exp((-ka[i]! * h) / PARTS);
+      waiting[0] = waiting[0]! + now;
+    }
+    return isWaiting;
+  }
+
+  /** Adds the points that this column is the first to look at. */
+  #waitingAdd(column: number): void {
+    const waiting = this.#waiting;
+    for (let i = 0; i < this.#now.length; i++) {
+      const now = this.#now[i]!;
+      if (now === 0) continue;
+      const x = this.#part[i]!;
+      const x3 = x * x * x;
+      const x6 = x3 * x3;
+      const x12 = x6 * x6;
+      if (column === 0) waiting[12] = waiting[12]! + now * x12;
+      else if (column === 1) {
+        waiting[6] = waiting[6]! + now * x6;
+        waiting[18] = waiting[18]! + now * x12 * x6;
+      } else if (column === 2) {
+        const x4 = x3 * x;
+        waiting[4] = waiting[4]! + now * x4;
+        waiting[8] = waiting[8]! + now * x4 * x4;
+        waiting[16] = waiting[16]! + now * x12 * x4;
+        waiting[20] = waiting[20]! + now * x12 * x4 * x4;
+      } else {
+        waiting[3] = waiting[3]! + now * x3;
+        waiting[9] = waiting[9]! + now * x6 * x3;
+        waiting[15] = waiting[15]! + now * x12 * x3;
+        waiting[21] = waiting[21]! + now * x12 * x6 * x3;
       }
     }
-    this.result[0] = ends[LAST]!;
-    return error / (total + rate * h);
   }
 
   #midpoint(total: Float64Array, count: number, h: number, column: Float64Array): void {
