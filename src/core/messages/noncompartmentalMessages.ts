@@ -1,10 +1,14 @@
-import { type NumberPrintOptions, numberPrint } from "../units/index.ts";
+import { type NumberPrintOptions, numberPrint, type UnitCode, unitSpoken } from "../units/index.ts";
 import type { MessageFunction } from "./messageFunction.ts";
 
 const number = (value: unknown, options: NumberPrintOptions = { significant: 3 }): string =>
   typeof value === "number" && Number.isFinite(value) ? numberPrint(value, options) : "no number";
 const hours = (value: unknown): string => `${number(value, { significant: 4 })} h`;
-const level = (value: unknown): string => `${number(value)} mg/L`;
+/** mg/L, or in the unit that stands beside the issue's data: how many of it make 1 mg/L. */
+const level = (value: unknown, shownIn: unknown): string => {
+  const { unit, factor } = (shownIn as { unit: UnitCode; factor: number } | undefined) ?? { unit: "mg/L", factor: 1 };
+  return `${number(typeof value === "number" ? value * factor : value)} ${unitSpoken(unit, "screen")}`;
+};
 const percent = (share: unknown): string => (typeof share === "number" ? `${number(share * 100)} %` : "a part");
 const levels = (count: unknown): string => (count === 1 ? "1 level" : `${number(count)} levels`);
 
@@ -14,12 +18,14 @@ export const noncompartmentalMessages: Readonly<Record<string, MessageFunction>>
   "nca-time-unusable": ({ position }) => `The time of level ${number(position)} is not a number.`,
   "nca-level-unusable": ({ time }) => `The level at ${hours(time)} is not a number.`,
   "nca-time-negative": ({ time }) => `A level at ${hours(time)} was drawn before the dose.`,
-  "nca-level-negative": ({ time, value }) => `The level at ${hours(time)} is below 0: ${level(value)}.`,
+  "nca-level-negative": ({ time, value, shownIn }) =>
+    `The level at ${hours(time)} is below 0: ${level(value, shownIn)}.`,
   "nca-times-equal": ({ time }) => `Two levels stand at ${hours(time)}: leave one out.`,
   "nca-times-unsorted": ({ time, before }) =>
     `The levels are not in order of time: ${hours(time)} comes after ${hours(before)}.`,
   "nca-levels-zero": () => "All levels are 0.",
-  "nca-levels-equal": ({ value }) => `All levels are ${level(value)}: nothing falls, so there is no half-life.`,
+  "nca-levels-equal": ({ value, shownIn }) =>
+    `All levels are ${level(value, shownIn)}: nothing falls, so there is no half-life.`,
   "nca-dose-not-positive": ({ dose }) => `The dose is ${number(dose)} mg: it has to be above 0.`,
   "nca-interval-not-positive": ({ tau }) => `The interval is ${number(tau)} h: it has to be above 0.`,
   "nca-interval-empty": ({ tau, first }) =>
@@ -40,14 +46,14 @@ export const noncompartmentalMessages: Readonly<Record<string, MessageFunction>>
     `${percent(share)} of the area was not measured but carried on, more than ${percent(limit)}: clearance is uncertain.`,
   "nca-area-begins-late": ({ time }) =>
     `The area begins at the first level, ${hours(time)} after the dose: what lies before is not in it.`,
-  "nca-level-at-dose": ({ value }) =>
-    `The level at the time of the dose is ${level(value)}, not 0: something was still there from before, or it entered at once.`,
-  "nca-start-from-end": ({ level: value }) =>
-    `No level was drawn at the start of the interval: ${level(value)}, the level at its end, stands there too, as at steady state.`,
-  "nca-end-from-start": ({ level: value }) =>
-    `No level was drawn at the end of the interval: ${level(value)}, the level at its start, stands there too, as at steady state.`,
-  "nca-end-from-line": ({ level: value }) =>
-    `No level was drawn at the end of the interval: ${level(value)} on the terminal line stands there.`,
+  "nca-level-at-dose": ({ value, shownIn }) =>
+    `The level at the time of the dose is ${level(value, shownIn)}, not 0: something was still there from before, or it entered at once.`,
+  "nca-start-from-end": ({ level: value, shownIn }) =>
+    `No level was drawn at the start of the interval: ${level(value, shownIn)}, the level at its end, stands there too, as at steady state.`,
+  "nca-end-from-start": ({ level: value, shownIn }) =>
+    `No level was drawn at the end of the interval: ${level(value, shownIn)}, the level at its start, stands there too, as at steady state.`,
+  "nca-end-from-line": ({ level: value, shownIn }) =>
+    `No level was drawn at the end of the interval: ${level(value, shownIn)} on the terminal line stands there.`,
   "nca-residuals-few": ({ found, needed }) =>
     `${found === 0 ? "No residual" : `Only ${number(found)} residual`} of the early levels can be used; an absorption rate needs ${number(needed)}.`,
   "nca-residuals-rise": ({ count }) =>

@@ -1,5 +1,5 @@
 import { useMemo, useState } from "react";
-import { issueMessage, richWords } from "../../core/messages/index.ts";
+import { richWords } from "../../core/messages/index.ts";
 import type { AreaMethod } from "../../core/noncompartmental/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { quantityConvert, quantityPrint } from "../../core/units/index.ts";
@@ -10,6 +10,7 @@ import { useWorkbench } from "../useWorkbench.ts";
 import "./RichLevelsPanel.css";
 import { RichOccasionView } from "./RichOccasionView.tsx";
 import type { RichUnit } from "./richFigures.ts";
+import { richMessage } from "./richMessage.ts";
 import { type RichOccasion, richOccasions } from "./richOccasions.ts";
 
 const HOUR_MS = 3_600_000;
@@ -20,7 +21,7 @@ const METHODS = (["linear-up-log-down", "linear"] as const satisfies readonly Ar
 }));
 
 /** What the levels of the open case say without a model, where one dose has enough of them; otherwise what is missing. */
-export function RichLevelsPanel({ unit = "mg/L" }: { readonly unit?: RichUnit }) {
+export function RichLevelsPanel({ unit }: { readonly unit: RichUnit }) {
   const open = useWorkbench((state) => state.open);
   const [method, setMethod] = useState<AreaMethod>("linear-up-log-down");
   const [chosenId, setChosenId] = useState<string | null>(null);
@@ -31,6 +32,7 @@ export function RichLevelsPanel({ unit = "mg/L" }: { readonly unit?: RichUnit })
   if (!analysis || !found) return <p>{richWords.waiting}</p>;
 
   const { medicine, timeZone } = open.value;
+  const factor = quantityConvert({ value: 1, unit: "mg/L" }, unit, medicine.molarMass.value);
   const clock = (hours: number) => instantText(analysis.clock.originMs + hours * HOUR_MS, timeZone, "dayClock");
   const occasion = found.occasions.find((each) => each.id === chosenId) ?? found.occasions[0];
   const label = ({ kind, doseAtH, doseMg, measured }: RichOccasion) => {
@@ -65,14 +67,14 @@ export function RichLevelsPanel({ unit = "mg/L" }: { readonly unit?: RichUnit })
             occasion={occasion}
             method={method}
             unit={unit}
-            factor={quantityConvert({ value: 1, unit: "mg/L" }, unit, medicine.molarMass.value)}
+            factor={factor}
             clock={clock}
           />
         </>
       ) : (
         <Notice gravity="note" title={richWords.lacking}>
           {found.lacks.map((lack, i) => (
-            <p key={i}>{issueMessage(lack)}</p>
+            <p key={i}>{richMessage(lack, unit, factor)}</p>
           ))}
           <p>{richWords.needs}</p>
         </Notice>

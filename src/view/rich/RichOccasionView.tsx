@@ -1,5 +1,5 @@
 import { useMemo, useState } from "react";
-import { issueMessage, richWords } from "../../core/messages/index.ts";
+import { richWords } from "../../core/messages/index.ts";
 import type { AreaMethod } from "../../core/noncompartmental/index.ts";
 import { unitSpoken } from "../../core/units/index.ts";
 import { TerminalChart } from "../chart/TerminalChart.tsx";
@@ -8,6 +8,7 @@ import { DataTable } from "../ui/DataTable.tsx";
 import { Notice } from "../ui/Notice.tsx";
 import { RichPoints } from "./RichPoints.tsx";
 import { type RichUnit, richFigures, richUnits } from "./richFigures.ts";
+import { richMessage } from "./richMessage.ts";
 import type { RichOccasion } from "./richOccasions.ts";
 import { type RichReading, richFlags, richLineIndices, richLineIssues, richReading } from "./richReading.ts";
 
@@ -63,14 +64,14 @@ export function RichOccasionView({ occasion, method, unit, factor, clock }: Rich
       {!result.ok && (
         <Notice gravity="stop" title={richWords.refused} isAnnounced>
           {result.issues.map((each, i) => (
-            <p key={i}>{issueMessage(each)}</p>
+            <p key={i}>{richMessage(each, unit, factor)}</p>
           ))}
         </Notice>
       )}
       {flags.length > 0 && (
         <Notice gravity="check" title={richWords.flagged}>
           {flags.map((each) => (
-            <p key={each.code}>{issueMessage(each)}</p>
+            <p key={each.code}>{richMessage(each, unit, factor)}</p>
           ))}
         </Notice>
       )}

@@ -9,7 +9,7 @@ import {
   wagnerNelson,
   wagnerNelsonRate,
 } from "../../../src/core/noncompartmental/index.ts";
-import type { Result } from "../../../src/core/result/index.ts";
+import { issue, type Result } from "../../../src/core/result/index.ts";
 import { levelsAt, ORAL } from "./levelSets.ts";
 
 const good: NoncompartmentalOptions = { dose: 100, method: "linear-up-log-down" };
@@ -289,3 +289,10 @@ it("whatever comes in: a reason with its sentence, or finite figures; never NaN,
 
 const numbersNamed = (_: string, value: unknown) =>
   typeof value === "number" && !Number.isFinite(value) ? "BAD" : value;
+
+it("a sentence names a level in the unit shown, where one is", () => {
+  const data = { value: 4.164, shownIn: { unit: "mmol/L", factor: 1 / 6.94 } };
+  expect(issueMessage(issue("nca-levels-equal", data))).toBe(
+    "All levels are 0.6 mmol/L: nothing falls, so there is no half-life.",
+  );
+});

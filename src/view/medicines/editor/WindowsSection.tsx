@@ -23,9 +23,14 @@ import { entryId } from "./entryId.ts";
 const ABOUT = ["lowest-and-highest", "trough", "peak", "average", "auc24"] as const;
 
 export function WindowsSection() {
+  const { nodeAt } = useDraft();
   return (
     <DraftSection id="windows" heading={recordWords.section.windows} roots={["windows", "toxicFrom", "toxicAt"]}>
-      <DraftList path={["windows"]} entry={recordWords.window1} entryNew={windowNew}>
+      <DraftList
+        path={["windows"]}
+        entry={recordWords.window1}
+        entryNew={(list) => windowNew(list, draftTyped(nodeAt(["displayUnit"])) || "mg/L")}
+      >
         {(path) => <WindowFields path={path} />}
       </DraftList>
       <DraftFigure path={["toxicFrom"]} label={recordWords.toxicFrom} units={DISPLAY_UNITS} isOptional />
@@ -83,8 +88,9 @@ function withUnit(window: DraftGroup, unit: string): DraftGroup {
   return { ...window, low: end(window.low), high: end(window.high) };
 }
 
-function windowNew(list: readonly DraftNode[]): DraftGroup {
-  const end = { value: "", unit: "mg/L" };
+/** In the unit the medicine is read in. */
+function windowNew(list: readonly DraftNode[], unit: string): DraftGroup {
+  const end = { value: "", unit };
   return {
     id: entryId("window", list),
     label: "",
