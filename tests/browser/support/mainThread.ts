@@ -53,6 +53,7 @@ export async function watchMainThread(browser: Browser, page: Page, work: () => 
       ph === "X" && (name === "RunTask" || name === "ThreadControllerImpl::RunTask") && mains.has(`${pid}/${tid}`),
   );
   if (tasks.length === 0) throw new Error("the trace holds no task of the main thread");
+  if (!tasks.some(({ tdur }) => tdur !== undefined && tdur > 0)) throw new Error("the trace holds no processor time");
   const longest = (of: (task: TraceEvent) => number) =>
     tasks.reduce((most, task) => Math.max(most, of(task)), 0) / 1_000;
   return { longestTask: longest(({ dur }) => dur ?? 0), longestWork: longest(({ tdur }) => tdur ?? 0), longestGap };
