@@ -14,7 +14,7 @@ export function WorkingPanel({
   readonly row: string;
   readonly option: string;
   readonly of: ReadingOf;
-  readonly unit?: ShownUnit;
+  readonly unit: ShownUnit;
 }) {
   const open = useWorkbench((state) => state.open);
   const analysis = open?.analysis.result;
