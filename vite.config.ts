@@ -34,6 +34,8 @@ export default defineConfig({
   test: {
     root: at("."),
     allowOnly: false,
+    // Left to itself the runner keeps one of two cores free.
+    maxWorkers: 2,
     projects: [
       {
         test: {

@@ -90,8 +90,8 @@ export function recomputeIndividual(readings: IndividualReadings | null, fit: An
         lowest: interval(timed.lowest, "mg/L"),
         highest: interval(timed.highest, "mg/L"),
       },
-      chance: steadyState.chance,
     },
+    chanceAtSteadyState: readings.steadyChance,
     shareNeverSteady: readings.shareNeverSteady,
   };
 }

@@ -131,17 +131,18 @@ test.describe("dose text", () => {
 });
 
 test.describe("files", () => {
-  const newer = adjustment.replace(/"version": 1,/, '"version": 99,');
+  const newer = adjustment.replace(/"version": \d+,/, '"version": 99,');
   for (const [what, text, sentence] of [
     ["a corrupt file", adjustment.replace('"label"', '"label'), /JSON|read|damaged|corrupt/i],
     ["a truncated file", adjustment.slice(0, 1500), /truncated|ends|cut|JSON|incomplete/i],
-    ["a file of a newer version", newer, /newer version/i],
+    ["a file of a newer version", newer, /newer version of Ebbline: its file version is 99/],
     ["a file that is something else", '{"hello":1}', /not .*(case|Ebbline)/i],
     ["a file with an unknown field", adjustment.replace('"label"', '"surprise": 1, "label"'), /surprise/],
     ["a case whose record lacks a source", adjustment.replace(/"source": "[^"]+",\s*/, ""), /source/i],
     ["a file that is too large", `${adjustment}${" ".repeat(6 * 1024 * 1024)}`, /too large|larger/i],
   ] as const) {
     test(`${what} is refused with a sentence and nothing is stored`, async ({ page }) => {
+      expect(text, "the file is spoilt").not.toBe(adjustment);
       await openDemo(page, DEMO);
       await expectSaved(page);
       await page.goto("/");

@@ -63,7 +63,8 @@ interface Recomputed {
     {
       readonly individual: Record<string, Interval> & {
         readonly chance: Record<string, number>;
-        readonly steadyState: Record<string, Interval> & { readonly chance: Record<string, number> };
+        readonly chanceAtSteadyState: Record<string, number>;
+        readonly steadyState: Record<string, Interval>;
       };
     }
   >;
@@ -119,7 +120,7 @@ test("every figure of this patient on the sheet is a rounding of one recompute p
   expect(model.hours!.rows.map(({ label, cells }) => [label, cells[0], cells[1], figuresOf(cells[2]!)])).toEqual(
     (["below", "within", "above"] as const).map((side) => [
       side,
-      share(steadyState.chance[side]!),
+      share(individual.chanceAtSteadyState[side]!),
       share(individual.chance[side]!),
       shown(individual[`hours${side.charAt(0).toUpperCase()}${side.slice(1)}`]!, hours),
     ]),

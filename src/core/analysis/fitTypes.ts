@@ -157,8 +157,9 @@ export interface IndividualReadings {
     readonly timed: { readonly afterDoseH: number; readonly lowest: Spread; readonly highest: Spread } | null;
     /** As in SteadyStateReadings. */
     readonly highestTrough: Spread | null;
-    readonly chance: WindowChance | null;
   } | null;
+  /** At steady state, of what the window is about; a draw that never settles lies above it. null without a window or a repeat. */
+  readonly steadyChance: WindowChance | null;
   /** Share of the draws that never reach a steady state (saturable elimination); their steady-state figures are left out. */
   readonly shareNeverSteady: number;
   readonly halfLifeH: Spread | null;

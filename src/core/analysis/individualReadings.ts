@@ -1,11 +1,5 @@
 import type { Case } from "../case/index.ts";
-import {
-  type ModelHistory,
-  modelHalfLife,
-  modelScaled,
-  modelSteadyState,
-  modelTimeToSteadyState,
-} from "../kinetics/index.ts";
+import { type ModelHistory, modelScaled, modelSteadyState, modelTimeToSteadyState } from "../kinetics/index.ts";
 import type { DoseLine } from "../regimen/index.ts";
 import type { Model } from "./analysisTypes.ts";
 import type { DrawnFigures } from "./drawnCurve.ts";
@@ -39,6 +33,7 @@ export function* individualReadings(
   patients: DrawnPatients,
   figures: DrawnFigures,
   { fromH, toH }: { readonly fromH: number; readonly toH: number },
+  halfLifeH: Spread | null,
 ): Generator<number, IndividualReadings> {
   const settled = yield* steadyDraws(value, lines, typical, patients);
   const chance = (own: Omit<WindowFigures, "auc24" | "average"> & { readonly average: Float64Array }) => {
@@ -48,7 +43,8 @@ export function* individualReadings(
   };
   // A window for a level at a time after the dose is not about the lowest level of a span. Chances first: spreads put a column in order.
   const spanChance = settled.drawH === null ? chance(figures) : null;
-  const steadyState = steadyReadings(settled, patients.count, chance);
+  const chanceSettled = steadyChance(settled, patients.count, value.window !== undefined, chance);
+  const steadyState = steadyReadings(settled, patients.count);
   const hasWindow = value.window !== undefined && value.window.quantity !== "auc24";
   const hours = (column: Float64Array) => (hasWindow ? spreadOfEqual(column) : null);
   const average = spreadOfEqual(figures.average);
@@ -67,8 +63,9 @@ export function* individualReadings(
       chance: spanChance,
     },
     steadyState,
+    steadyChance: chanceSettled,
     shareNeverSteady: settled.isRepeating ? (patients.count - settled.count) / patients.count : 0,
-    halfLifeH: settled.halfLives && spreadOfEqual(settled.halfLives),
+    halfLifeH,
   };
 }
 
@@ -80,7 +77,6 @@ interface SteadyDraws {
   /** How many settle at all; the columns have so many rows. */
   readonly count: number;
   readonly columns: SteadyColumns;
-  readonly halfLives: Float64Array | null;
 }
 
 function* steadyDraws(
@@ -102,8 +98,6 @@ function* steadyDraws(
       new Float64Array(count),
     ]),
   ) as SteadyColumns;
-  const halfLives = new Float64Array(count);
-  let hasHalfLife = true;
   let settled = 0;
   for (let n = 0; n < count; n++) {
     const own = modelScaled(
@@ -112,9 +106,6 @@ function* steadyDraws(
       eta.map((column) => column[n]!),
     );
     const { disposition } = own.dispositions[0]!;
-    const halfLife = modelHalfLife(disposition);
-    if (halfLife === null) hasHalfLife = false;
-    else halfLives[n] = halfLife;
     if (found.ok) {
       const { periodH } = found.pattern;
       const state = modelSteadyState(disposition, own.inputs, periodH);
@@ -146,21 +137,19 @@ function* steadyDraws(
     isTroughToxic,
     count: settled,
     columns,
-    halfLives: hasHalfLife ? halfLives : null,
   };
 }
+
+type ChanceOf = (
+  own: Omit<WindowFigures, "auc24" | "average"> & { readonly average: Float64Array },
+) => WindowChance | null;
 
 function steadyReadings(
   { columns, drawH, isTroughToxic, count, isRepeating }: SteadyDraws,
   draws: number,
-  chanceOf: (own: Omit<WindowFigures, "auc24" | "average"> & { readonly average: Float64Array }) => WindowChance | null,
 ): IndividualReadings["steadyState"] {
   if (!isRepeating || draws - count > MOST_NEVER_STEADY * draws) return null;
   const { peak, lowest, average, timedLowest, timedHighest } = columns;
-  const chance = withNeverSteady(
-    chanceOf(drawH === null ? { peak, lowest, average } : { peak, lowest: timedLowest, timedHighest, average }),
-    (draws - count) / draws,
-  );
   const mean = spreadOfEqual(average);
   return {
     peak: spreadOfEqual(peak),
@@ -176,8 +165,23 @@ function steadyReadings(
         ? null
         : { afterDoseH: drawH, lowest: spreadOfEqual(timedLowest), highest: spreadOfEqual(timedHighest) },
     highestTrough: isTroughToxic ? spreadOfEqual(columns.highestTrough) : null,
-    chance,
   };
+}
+
+/** Of what the window is about, before a spread puts the columns in order; also where too many draws never settle for any other figure. */
+function steadyChance(
+  { columns, drawH, count, isRepeating }: SteadyDraws,
+  draws: number,
+  hasWindow: boolean,
+  chanceOf: ChanceOf,
+): WindowChance | null {
+  if (!isRepeating || !hasWindow) return null;
+  if (count === 0) return { below: 0, within: 0, above: 1 };
+  const { peak, lowest, average, timedLowest, timedHighest } = columns;
+  const settled = chanceOf(
+    drawH === null ? { peak, lowest, average } : { peak, lowest: timedLowest, timedHighest, average },
+  );
+  return withNeverSteady(settled, (draws - count) / draws);
 }
 
 /** A draw that never settles rises above every window. */

@@ -92,9 +92,10 @@ export function* individualSteps(value: Case, input: IndividualInput): Generator
   const fittedLevels = yield* parts(levelSteps, PART_DRAWN, PART_LEVELS, levels.length + 1);
 
   const patients = drawnPatients(posed.value, posterior, draws.carried);
-  const { givenBand, fittedOptions } = yield* shownSteps(value, input, posed.value, typical!, patients);
+  const fit = individualFit(value, typical!, posed.value, map, posterior, levels);
+  const { givenBand, fittedOptions } = yield* shownSteps(value, input, posed.value, typical!, patients, fit);
   return {
-    fit: { kind: "fitted", fit: individualFit(value, typical!, posed.value, map, posterior, levels) },
+    fit: { kind: "fitted", fit },
     givenBand,
     levels: fittedLevels,
     options: fittedOptions,
@@ -108,6 +109,7 @@ function* shownSteps(
   { history }: FitProblem,
   typical: Model,
   patients: DrawnPatients,
+  fit: IndividualFit,
 ): Generator<number, { givenBand: Band; fittedOptions: readonly OptionResult[] }> {
   const drawn = options.filter((option) => option.typical !== null);
   const piece = (1 - PART_LEVELS) / (1 + 2 * drawn.length);
@@ -119,6 +121,7 @@ function* shownSteps(
   };
   const past = drawnCurve(history, patients, clock.fromH, givenUntilH, { toH: givenUntilH, window: null });
   const { band: givenBand } = yield* next(past);
+  const halfLifeH = fit.halfLife?.posterior ?? null;
   const fitted = new Map<string, Pick<OptionResult, "individual" | "band">>();
   for (const { id, doses } of drawn) {
     const whole: ModelHistory = modelHistory(typical, countedByProduct([...given, ...doses]));
@@ -126,7 +129,7 @@ function* shownSteps(
     const looked = { toH: clock.readingsToH, window: concentrationWindow(value) };
     const { band, figures } = yield* next(drawnCurve(whole, patients, clock.nowH, clock.toH, looked));
     const span = { fromH: clock.nowH, toH: clock.readingsToH };
-    const individual = yield* next(individualReadings(value, lines, typical, patients, figures, span));
+    const individual = yield* next(individualReadings(value, lines, typical, patients, figures, span, halfLifeH));
     fitted.set(id, { individual, band });
   }
   return { givenBand, fittedOptions: options.map((option) => ({ ...option, ...fitted.get(option.id) })) };

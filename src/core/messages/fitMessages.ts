@@ -50,11 +50,11 @@ export function fitFailureSentence(reason: FitFailure, data: ConcernData): strin
 }
 
 /** One line on what the figures rest on. `levels`: how many the case has, used or not. */
-export function fitLine(fit: FitState, levels: number): string {
+export function fitLine(fit: FitState, levels: number, use: "typical" | "individual" = "individual"): string {
   switch (fit.kind) {
     case "fitted": {
       const out = fit.fit.levelsLeftOut.length;
-      return `${fitWords.individual}: ${countWords(fit.fit.levelsUsed.length, "level", "levels")} used${out > 0 ? `, ${out} left out` : ""}`;
+      return `${fitWords.individual}: ${countWords(fit.fit.levelsUsed.length, "level", "levels")} used${out > 0 ? `, ${out} left out` : ""}${use === "typical" ? fitWords.setAside : ""}`;
     }
     case "pending":
       return fitWords.pending;
@@ -84,8 +84,8 @@ const outcome = (data: ConcernData): string => {
 
 function outsideChance(data: ConcernData, side: "above" | "below", other: "above" | "below"): ConcernWords {
   return {
-    title: `Option ${text(data, "option")}: chance of lying ${side} the window ${chanceWords(number(data, side))}`,
-    text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"], (data.afterDoseH as number | null | undefined) ?? null)} ${data.isSteady ? "at steady state" : "over the span shown"}, in this patient. Chance of lying ${other} the window ${chanceWords(number(data, other))}.`,
+    title: `Option ${text(data, "option")}: chance of lying ${side} the window in this patient ${chanceWords(number(data, side))}`,
+    text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"], (data.afterDoseH as number | null | undefined) ?? null)} ${data.isSteady ? "at steady state" : "over the span shown"}. Chance of lying ${other} the window ${chanceWords(number(data, other))}.`,
   };
 }
 

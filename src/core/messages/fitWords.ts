@@ -12,6 +12,8 @@ import { windowPointWords } from "./windowWords.ts";
 
 /** Fixed words about this patient's figures. */
 export const fitWords = {
+  /** Behind the levels used, where the order does not rest on them. */
+  setAside: ". The order rests on the typical patient",
   typical: "typical",
   individual: "this patient",
   typicalPatient: "typical patient",

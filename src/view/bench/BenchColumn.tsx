@@ -41,6 +41,7 @@ export function BenchColumn({ open, value, analysis, unit, onPanel, onAddOption,
         <FitLine
           fit={analysis.fit}
           levels={value.levels.length}
+          use={value.fit.use}
           state={open.analysis}
           onOpen={() => onPanel({ kind: "learnt" })}
         />

@@ -26,9 +26,9 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
       <ul className="chances-list">
         {analysis.options.map(({ id, individual }, i) => {
           if (!individual) return null;
-          const { steadyState, span } = individual;
+          const { steadyChance, span } = individual;
           const about = [
-            ...(steadyState?.chance ? [{ when: fitWords.chanceSteady, chance: steadyState.chance }] : []),
+            ...(steadyChance ? [{ when: fitWords.chanceSteady, chance: steadyChance }] : []),
             ...(span.chance ? [{ when: `${clock(span.fromH)} to ${clock(span.toH)}`, chance: span.chance }] : []),
           ];
           return (

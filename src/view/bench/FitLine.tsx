@@ -8,16 +8,18 @@ interface FitLineProps {
   readonly fit: FitState;
   /** How many levels the case has, used or not. */
   readonly levels: number;
+  /** On which patient the order rests. */
+  readonly use: "typical" | "individual";
   readonly state: Pick<AnalysisState, "isFitStale" | "fitProgress">;
   readonly onOpen: () => void;
 }
 
 /** What the figures rest on: levels used, the typical patient alone, being worked out, or withheld and why. */
-export function FitLine({ fit, levels, state, onOpen }: FitLineProps) {
+export function FitLine({ fit, levels, use, state, onOpen }: FitLineProps) {
   return (
     <div className={`fit-line fit-line-${fit.kind}`} data-fit={state.isFitStale ? "stale" : fit.kind}>
       <p className="fit-line-words" role="status">
-        {fitLine(fit, levels)}
+        {fitLine(fit, levels, use)}
         {state.isFitStale && <span className="fit-line-stale">{fitWords.stale}</span>}
       </p>
       {state.fitProgress !== null && (

@@ -108,8 +108,12 @@ function Stacked({ pair, cell }: { pair: ReadingPair; cell: (of: ReadingOf) => R
         <span className="readings-under">
           {fitWords.typical} {cell("typical")}
         </span>
-      ) : (
+      ) : pair.isShared || pair.typical === null ? (
         cell("typical")
+      ) : (
+        <span className="readings-under">
+          {fitWords.typical} {cell("typical")}
+        </span>
       )}
     </>
   );

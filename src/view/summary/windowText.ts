@@ -47,8 +47,8 @@ function individualText(
 ): SummaryModel["hours"] {
   const { window } = input.case;
   if (!readings || !window) return null;
-  const { span, steadyState } = readings;
-  const steady = steadyState?.chance ?? null;
+  const { span, steadyChance } = readings;
+  const steady = steadyChance;
   const overSpan = span.chance;
   const hasHours = SIDES.every((side) => span[HOURS[side]] !== null);
   if (!steady && !overSpan && !hasHours) return null;

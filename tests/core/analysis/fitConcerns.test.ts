@@ -65,9 +65,7 @@ const withOption = (change: (option: NonNullable<ConcernContext["options"][numbe
   })),
 });
 const chance = (above: number, below = 0) =>
-  withOption((found) => ({
-    steadyState: { ...found.steadyState!, chance: { below, within: 1 - above - below, above } },
-  }));
+  withOption(() => ({ steadyChance: { below, within: 1 - above - below, above } }));
 const peak = (median: number) =>
   withOption((found) => ({ span: { ...found.span, peak: spread(median) }, steadyState: null }));
 const ambiguous = (isAmbiguous: boolean) =>
@@ -117,8 +115,9 @@ const TABLE: readonly (readonly [code: string, raises: ConcernContext, doesNot: 
   ],
   [
     "one-level",
-    withFit({ levelsUsed: ["m"], parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.3 })] }),
-    withFit({ parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.3 })] }),
+    withFit({ levelsUsed: ["m"], parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.19 })] }),
+    // What a level taught something of does not stay near the record's.
+    withFit({ levelsUsed: ["m"], parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.21 })] }),
   ],
   ["levels-absorption-only", withLevels(early(2), early(3)), withLevels(early(2), early(11.9))],
   [

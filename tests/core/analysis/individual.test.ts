@@ -1,7 +1,8 @@
+import { readFileSync } from "node:fs";
 import { describe, expect, it, test } from "vitest";
 import { omegaOfVariation } from "../../../src/core/analysis/fitProblem.ts";
 import { type Analysis, derive, deriveSteps, type IndividualFit } from "../../../src/core/analysis/index.ts";
-import type { Case, Level } from "../../../src/core/case/index.ts";
+import { type Case, caseParse, type Level } from "../../../src/core/case/index.ts";
 import { mapEstimate, type OralProblem, posterior } from "../../../src/core/estimation/index.ts";
 import { caseFixture } from "./caseFixture.ts";
 
@@ -88,7 +89,7 @@ describe("one level of a theophylline case", () => {
     expect(plain.individual).toBeNull();
     const { individual, band } = option!;
     expect(individual!.steadyState!.lowest.q05).toBeLessThan(individual!.steadyState!.lowest.q95);
-    const { below, within, above } = individual!.steadyState!.chance!;
+    const { below, within, above } = individual!.steadyChance!;
     expect(below + within + above).toBeCloseTo(1, 12);
     const { timesH, q05, q25, q50, q75, q95 } = band!;
     for (const [i] of timesH.entries()) {
@@ -191,4 +192,20 @@ test.each<[string, Case, string]>([
   expect(analysis.fit).toEqual({ kind: "none", reason });
   expect(analysis.options[0]!.individual).toBeNull();
   expect(analysis.givenBand).toBeNull();
+});
+
+test("an option that many draws never settle under is said to lie above the window, not below it for today's level", () => {
+  const parsed = caseParse(readFileSync("demo-data/saturable.ebbline.json", "utf8"));
+  if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
+  const { analysis } = fitted(parsed.value);
+  const [, b, c] = analysis.options;
+  for (const option of [b!, c!]) {
+    const { shareNeverSteady, steadyChance, steadyState } = option.individual!;
+    expect(shareNeverSteady).toBeGreaterThan(0.05);
+    expect(steadyState).toBeNull();
+    expect(steadyChance!.above).toBeGreaterThan(0.5);
+    const codes = analysis.concerns.filter(({ about }) => about.id === option.id).map(({ code }) => code);
+    expect(codes).toContain("option-chance-above");
+    expect(codes).not.toContain("option-chance-below");
+  }
 });

@@ -64,7 +64,7 @@ describe("the sheet of this patient", () => {
     expect(title).toBe("Window 8 to 15 mg per L: chance, hours");
     expect(columns).toEqual(["chance when steady", "these days", "hours (90 %)"]);
     expect(rows.map(({ label }) => label)).toEqual(["below", "within", "above"]);
-    const chance = own().steadyState!.chance!;
+    const chance = own().steadyChance!;
     rows.forEach(({ label, cells }) => {
       const share = chance[label as "below" | "within" | "above"];
       const words = share < 0.01 ? "under 1 %" : share > 0.99 ? "over 99 %" : `${Math.round(share * 100)} %`;

@@ -39,7 +39,10 @@ export const optionChanceOutside: ConcernRule = ({ case: value, options }) => {
 };
 
 function chanceOf(option: ConcernContext["options"][number]): { chance: WindowChance; isSteady: boolean } | null {
-  const { steadyState, span } = option.individual ?? {};
-  const chance = steadyState ? steadyState.chance : span?.chance;
-  return chance ? { chance, isSteady: !!steadyState } : null;
+  const { steadyChance, span } = option.individual ?? {};
+  // Over a span the level of today counts as much as the option: it is judged by that only where it settles into nothing.
+  if (steadyChance) return { chance: steadyChance, isSteady: true };
+  const isRepeating =
+    option.typical?.noSteadyState !== "no-repeat" && option.typical?.noSteadyState !== "no-common-period";
+  return span?.chance && !isRepeating ? { chance: span.chance, isSteady: false } : null;
 }

@@ -12,7 +12,7 @@ export const optionOutsideWindow: ConcernRule = ({ case: value, options }) => {
   return options.flatMap((option) => {
     const settled = option.typical?.steadyState;
     // Where the order rests on this patient, the chance of lying outside is said instead (optionChanceOutside).
-    if (!settled || (option.individual && value.fit.use === "individual")) return [];
+    if (!settled || (option.individual?.steadyChance && value.fit.use === "individual")) return [];
     const [least, most] = {
       trough: settled.timed ? [settled.timed.lowest, settled.timed.highest] : [settled.lowest, settled.lowest],
       peak: [settled.peak, settled.peak],

@@ -38,5 +38,5 @@ function highest({ span, steadyState }: OptionReadings, at: ToxicAt): number {
 
 /** Of this patient the level before a dose is known at steady state only. */
 function isSaidOfPatient(individual: IndividualReadings | null, at: ToxicAt): boolean {
-  return individual !== null && (at === "any" || !!individual.steadyState?.highestTrough);
+  return !!individual?.steadyState && (at === "any" || !!individual.steadyState.highestTrough);
 }
