@@ -12,6 +12,7 @@ import { fitSetAside } from "./concerns/fitSetAside.ts";
 import { fitWithheld } from "./concerns/fitWithheld.ts";
 import { flipFlop } from "./concerns/flipFlop.ts";
 import { flipFlopAmbiguous } from "./concerns/flipFlopAmbiguous.ts";
+import { forecastMissed } from "./concerns/forecastMissed.ts";
 import { historyAssumed } from "./concerns/historyAssumed.ts";
 import { interactionKnown } from "./concerns/interactionKnown.ts";
 import { inventedMedicine } from "./concerns/inventedMedicine.ts";
@@ -75,6 +76,7 @@ const RULES: readonly ConcernRule[] = [
   levelOutlier,
   levelResidual,
   levelOutsidePrior,
+  forecastMissed,
   parameterUnusual,
   levelsSameTime,
   typicalOnly,

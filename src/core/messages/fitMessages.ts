@@ -123,6 +123,10 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
     title: `The level of ${when(data)} is unusual for this medicine`,
     text: `Measured ${concentration(data, "measured")}; of patients like this one on these doses 95 % would have between ${concentration(data, "low")} and ${concentration(data, "high")}. An error, a wrong time, doses not taken, or an unusual patient?`,
   }),
+  "forecast-missed": (data) => ({
+    title: `The level of ${when(data)} is not what the levels before it foretold`,
+    text: `Measured ${concentration(data, "measured")}; the 90 % interval forecast was ${concentration(data, "low")} to ${concentration(data, "high")}. Has the patient changed (an interaction, illness, doses not taken), or is one of the levels or times wrong? The fit lies between them.`,
+  }),
   "parameter-unusual": (data) => ({
     title: `${text(data, "words")} lies far from the typical patient's`,
     text: `${figure(number(data, "ratio"))} times the typical, ${figure(Math.abs(number(data, "omegas")))} standard deviations between patients away. Few patients are so; errors in doses or times look the same.`,

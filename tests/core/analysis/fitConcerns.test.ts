@@ -104,6 +104,11 @@ const TABLE: readonly (readonly [code: string, raises: ConcernContext, doesNot: 
     withLevels({ fit: levelFit(6, { isOutsidePrior: false }) }),
   ],
   [
+    "forecast-missed",
+    withLevels({ fit: levelFit(6, { forecast: { predictive: spread(3), levelsKnown: 1, held: false } }) }),
+    withLevels({ fit: levelFit(6, { forecast: { predictive: spread(3), levelsKnown: 0, held: false } }) }),
+  ],
+  [
     "parameter-unusual",
     withFit({ parameters: [parameter({ symbol: "CL", words: "Clearance", omega: 0.3, eta: -0.601 })] }),
     withFit({ parameters: [parameter({ symbol: "CL", words: "Clearance", omega: 0.3, eta: -0.599 })] }),
