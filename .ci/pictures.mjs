@@ -31,6 +31,7 @@ async function openDemo(page) {
   await page.getByRole("button", { name: DEMO }).click();
   await page.locator("[data-saving=saved]").waitFor();
   await page.locator("[data-reading=peak]").waitFor();
+  await page.locator("[data-fit=fitted]").waitFor();
 }
 
 /** @param {import("@playwright/test").Page} page */

@@ -47,7 +47,9 @@ export function rememberPlace(workbench: Workbench): void {
     if (text !== location.hash) history.pushState(null, "", text === "" ? location.pathname : text);
   };
   addEventListener("popstate", () => void go(placeRead(location.hash)));
-  void go(placeRead(location.hash)).finally(() => {
+  // Who has gone elsewhere while the store was still opening is not fetched back.
+  const isMoved = placeText(now()) !== "";
+  void (isMoved ? Promise.resolve() : go(placeRead(location.hash))).finally(() => {
     write();
     workbench.subscribe((state, before) => {
       if (state.screen !== before.screen || state.open?.value.id !== before.open?.value.id) write();

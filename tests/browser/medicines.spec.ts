@@ -106,6 +106,22 @@ test("a copy is edited wrongly and rightly, survives a reload, is saved, compare
   await expect(page.getByText("“theophylline, copy”, record version 2, is stored on this device")).toBeVisible();
 });
 
+test("a screen pressed while the store is still opening stays", async ({ page }) => {
+  // Pressed in the same turn in which it appears: before any answer of the store.
+  await page.addInitScript(() => {
+    const seen = new MutationObserver(() => {
+      const press = [...document.querySelectorAll("button")].find((each) => each.textContent === "Medicines");
+      if (!press) return;
+      seen.disconnect();
+      press.click();
+    });
+    seen.observe(document, { childList: true, subtree: true });
+  });
+  await page.goto("/");
+  await expect(page).toHaveURL(/#medicines$/);
+  await expect(page.getByRole("heading", { name: "Medicine records", level: 1 })).toBeVisible();
+});
+
 test("a bad file is answered with where, what was found and what is allowed", async ({ page }) => {
   await openMedicines(page);
   const put = (text: string) =>
