@@ -239,10 +239,10 @@ export const summaryNextLevelWords = {
   drawTimedAcross: (from: string, to: string, dose: string, steady: string) =>
     `Between ${from} and ${to}, after the dose of ${dose}: the first dose at or after 90 % of steady state (${steady}).`,
   longerWait: (own: string, typical: string) =>
-    `This patient may take longer than the typical one (${own} to 90 % of steady state, typical ${typical}): the longer wait is used.`,
+    `This patient may take longer than the typical one (up to ${own} to 90 % of steady state, the upper end of the 90 % interval; typical ${typical}): the longer wait is used.`,
   maybeNever: (share: string) => `With a chance of ${share} a steady state is never reached: do not wait for it alone.`,
   tooLong: (own: string, typical: string | null) =>
-    `90 % of steady state may take ${own}${typical === null ? "" : ` in this patient, ${typical} in the typical one`}: too long to wait for it.`,
+    `90 % of steady state may take ${own}${typical === null ? "" : ` in this patient (upper end of the 90 % interval), ${typical} in the typical one`}: too long to wait for it.`,
   writeTimes: "Write the time of the last dose and of the sample on the request.",
   noOption: "No option is chosen, so no time can be given.",
   noModel: "There is no prediction, so no time can be given.",

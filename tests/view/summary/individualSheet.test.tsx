@@ -143,7 +143,7 @@ describe("the sheet of this patient", () => {
     expect(waiting(fast)[0]).toMatch(/^Thursday 5 March 2026/);
     expect(waiting(slow)[0]).toMatch(/^Saturday 7 March 2026/);
     expect(waiting(slow)[1]).toBe(
-      "This patient may take longer than the typical one (70.5 hours to 90 % of steady state, typical 22.5 hours): the longer wait is used."
+      "This patient may take longer than the typical one (up to 70.5 hours to 90 % of steady state, the upper end of the 90 % interval; typical 22.5 hours): the longer wait is used."
         .replace("70.5", String(Number((steady.timeTo90H + 48).toFixed(1))))
         .replace("22.5", String(Number(steady.timeTo90H.toFixed(1)))),
     );
