@@ -64,6 +64,7 @@ export default defineConfig({
           name: "component",
           root: at("."),
           environment: "jsdom",
+          isolate: false,
           include: ["tests/{view,app}/**/*.test.{ts,tsx}"],
           setupFiles: ["tests/view/setup.ts"],
           testTimeout: 20_000,

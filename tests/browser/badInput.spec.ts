@@ -33,43 +33,33 @@ test.describe("numbers and levels", () => {
     await expect(panel.getByRole("row")).toHaveCount(rows);
   });
 
-  for (const [text, sentence] of [
-    ["", /enter|empty|missing|write/i],
-    ["-3", /above 0|negative|greater than 0|more than 0/i],
-    ["0", /above 0|greater than 0|more than 0/i],
-  ] as const) {
-    test(`a level of "${text}" is refused`, async ({ page }) => {
-      await openDemo(page, DEMO);
-      await page.getByRole("button", { name: "Levels", exact: true }).click();
-      const panel = page.getByRole("dialog");
-      const rows = await panel.getByRole("row").count();
-      await panel.getByRole("textbox", { name: "Concentration" }).fill(text);
-      await panel.getByRole("textbox", { name: "Drawn at" }).fill("4 March 09:00");
-      await panel.getByRole("button", { name: "Add a level" }).click();
-      await expect(panel.getByText(sentence).first()).toBeVisible();
-      await expect(panel.getByRole("row")).toHaveCount(rows);
-    });
-  }
-
-  for (const [drawn, sentence] of [
-    ["1 March 07:00", /before .*dose/i],
-    ["5 March 09:00", /now line/i],
-    ["29 March 2026 01:30", /does not exist|skip|now line/i],
-    ["4/3 09:00", /month by name|name of the month/i],
-  ] as const) {
-    test(`a level drawn ${drawn} is answered with a sentence`, async ({ page }) => {
-      await openDemo(page, DEMO);
-      await page.getByRole("button", { name: "Levels", exact: true }).click();
-      const panel = page.getByRole("dialog");
-      const rows = await panel.getByRole("row").count();
-      await panel.getByRole("textbox", { name: "Concentration" }).fill("6");
-      await panel.getByRole("textbox", { name: "Drawn at" }).fill(drawn);
-      await panel.getByRole("button", { name: "Add a level" }).click();
-      await expect(panel.getByText(sentence).first()).toBeVisible();
-      await expect(panel.getByRole("textbox", { name: "Concentration" })).toHaveValue("6");
-      await expect(panel.getByRole("row")).toHaveCount(rows);
-    });
-  }
+  test("a level that is no concentration, or was drawn when none can have been, is refused with a sentence", async ({
+    page,
+  }) => {
+    await openDemo(page, DEMO);
+    await page.getByRole("button", { name: "Levels", exact: true }).click();
+    const panel = page.getByRole("dialog");
+    const concentration = panel.getByRole("textbox", { name: "Concentration" });
+    const rows = await panel.getByRole("row").count();
+    for (const [text, drawn, sentence] of [
+      ["", "4 March 09:00", /Write a number\./],
+      ["-3", "4 March 09:00", /-3 mg\/L can't be entered: write a value above 0/],
+      ["0", "4 March 09:00", / 0 mg\/L can't be entered: write a value above 0/],
+      ["6", "1 March 07:00", /07:00 lies before the first dose given/],
+      ["6", "5 March 09:00", /lies after the now line/],
+      ["6", "29 March 2026 01:30", /01:30 does not exist on Sunday 29 March 2026/],
+      ["6", "4/3 09:00", /"4\/3" can be read as two different days/],
+    ] as const) {
+      await test.step(`"${text}" drawn ${drawn}`, async () => {
+        await concentration.fill(text);
+        await panel.getByRole("textbox", { name: "Drawn at" }).fill(drawn);
+        await panel.getByRole("button", { name: "Add a level" }).click();
+        await expect(panel.getByText(sentence).first()).toBeVisible();
+        await expect(concentration).toHaveValue(text);
+        await expect(panel.getByRole("row")).toHaveCount(rows);
+      });
+    }
+  });
 
   test("a weight that looks like pounds is asked about, and the answer is recorded", async ({ page }) => {
     await openDemo(page, DEMO);
@@ -88,28 +78,32 @@ test.describe("numbers and levels", () => {
 });
 
 test.describe("dose text", () => {
-  for (const [text, sentence] of [
-    ["300 mg evry 12 h from 08:00", /evry/],
-    ["mg every 12 h from 08:00", /"mg" could not be read/],
-    ["1,5 mg once at 20:00", /1\.5/],
-    ["-300 mg once at 20:00", /negative|above 0|-300|greater/i],
-    ["5 mL once at 20:00", /not measured in mL/],
-    ["300 mg q12h", /q12h/],
-    ["300 mg once at 25:00", /25:00/],
-  ] as const) {
-    test(`"${text}" is refused and says which part`, async ({ page }) => {
-      await openDemo(page, DEMO);
-      await page.getByRole("button", { name: "Option A, chosen: open" }).click();
-      const panel = page.getByRole("dialog");
-      const rows = await panel.getByRole("row").count();
-      const field = panel.getByRole("textbox", { name: "Type a dose" });
-      await field.fill(text);
-      await field.press("Enter");
-      await expect(panel.getByText(sentence).first()).toBeVisible();
-      await expect(field).toHaveValue(text);
-      await expect(panel.getByRole("row")).toHaveCount(rows);
-    });
-  }
+  test("each that can't be read is refused, stays as typed, and the answer says which part", async ({ page }) => {
+    await openDemo(page, DEMO);
+    await page.getByRole("button", { name: "Option A, chosen: open" }).click();
+    const panel = page.getByRole("dialog");
+    const rows = await panel.getByRole("row").count();
+    const field = panel.getByRole("textbox", { name: "Type a dose" });
+    for (const [text, sentence] of [
+      ["300 mg evry 12 h from 08:00", /evry/],
+      ["mg every 12 h from 08:00", /"mg" could not be read/],
+      ["1,5 mg once at 20:00", /1\.5/],
+      ["-300 mg once at 20:00", /negative|above 0|-300|greater/i],
+      ["5 mL once at 20:00", /not measured in mL/],
+      ["300 mg q12h", /q12h/],
+      ["300 mg once at 25:00", /25:00/],
+    ] as const) {
+      await test.step(text, async () => {
+        await field.fill(text);
+        await field.press("Enter");
+        await expect(panel.getByText(sentence).first()).toBeVisible();
+        await expect(field).toHaveValue(text);
+        await expect(panel.getByRole("row")).toHaveCount(rows);
+        await field.fill("");
+        await expect(panel.getByText(sentence)).toHaveCount(0);
+      });
+    }
+  });
 
   test("a clock time that exists twice is asked about", async ({ page }) => {
     const value = JSON.parse(adjustment) as Record<string, unknown>;
@@ -131,30 +125,36 @@ test.describe("dose text", () => {
 });
 
 test.describe("files", () => {
-  const newer = adjustment.replace(/"version": \d+,/, '"version": 99,');
-  for (const [what, text, sentence] of [
-    ["a corrupt file", adjustment.replace('"label"', '"label'), /JSON|read|damaged|corrupt/i],
-    ["a truncated file", adjustment.slice(0, 1500), /truncated|ends|cut|JSON|incomplete/i],
-    ["a file of a newer version", newer, /newer version of Ebbline: its file version is 99/],
-    ["a file that is something else", '{"hello":1}', /not .*(case|Ebbline)/i],
-    ["a file with an unknown field", adjustment.replace('"label"', '"surprise": 1, "label"'), /surprise/],
-    ["a case whose record lacks a source", adjustment.replace(/"source": "[^"]+",\s*/, ""), /source/i],
-    ["a file that is too large", `${adjustment}${" ".repeat(6 * 1024 * 1024)}`, /too large|larger/i],
-  ] as const) {
-    test(`${what} is refused with a sentence and nothing is stored`, async ({ page }) => {
-      expect(text, "the file is spoilt").not.toBe(adjustment);
-      await openDemo(page, DEMO);
-      await expectSaved(page);
-      await page.goto("/");
-      const stored = page.getByRole("button", { name: /^Open / });
-      await expect(stored.first()).toBeVisible();
-      const count = await stored.count();
-      await importFile(page, "bad.ebbline.json", text);
-      await expect(page.getByText(sentence).first()).toBeVisible();
-      await page.reload();
-      await expect(stored).toHaveCount(count);
-    });
-  }
+  test("each that can't be taken is refused with a sentence, and nothing is stored", async ({ page }) => {
+    await openDemo(page, DEMO);
+    await expectSaved(page);
+    await page.goto("/");
+    const stored = page.getByRole("button", { name: /^Open / });
+    await expect(stored.first()).toBeVisible();
+    const count = await stored.count();
+    for (const [what, text, sentence] of [
+      ["corrupt", adjustment.replace('"label"', '"label'), /JSON|read|damaged|corrupt/i],
+      ["truncated", adjustment.slice(0, 1500), /truncated|ends|cut|JSON|incomplete/i],
+      [
+        "of a newer version",
+        adjustment.replace(/"version": \d+,/, '"version": 99,'),
+        /newer version of Ebbline: its file version is 99/,
+      ],
+      ["something else", '{"hello":1}', /not .*(case|Ebbline)/i],
+      ["with an unknown field", adjustment.replace('"label"', '"surprise": 1, "label"'), /surprise/],
+      ["whose record lacks a source", adjustment.replace(/"source": "[^"]+",\s*/, ""), /source/i],
+      ["too large", `${adjustment}${" ".repeat(6 * 1024 * 1024)}`, /too large|larger/i],
+    ] as const) {
+      await test.step(what, async () => {
+        expect(text, "the file is spoilt").not.toBe(adjustment);
+        await importFile(page, "bad.ebbline.json", text);
+        await expect(page.getByText(sentence).first()).toBeVisible();
+        // Without what was said before it, the next sentence is the next file's.
+        await page.reload();
+        await expect(stored).toHaveCount(count);
+      });
+    }
+  });
 
   test("a good file is imported and gives the same case; exported, it is the same file again", async ({ page }) => {
     await page.goto("/");

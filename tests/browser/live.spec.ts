@@ -6,6 +6,7 @@ import { PROJECT } from "../../.ci/install.mjs";
 import { PAGE_OPTIONS } from "./support/browserOptions.ts";
 import { expectSaved, openDemo } from "./support/caseSteps.ts";
 import { watchMainThread } from "./support/mainThread.ts";
+import { flat } from "./support/printedText.ts";
 import { printPage } from "./support/printPage.ts";
 import { expect, test } from "./support/test.ts";
 
@@ -147,7 +148,6 @@ interface Recomputed {
   options: { A: { individual: { steadyState: Record<"peak" | "trough" | "average", Spread> } } };
 }
 const three = (value: number) => String(Number(value.toPrecision(3)));
-const flat = (text: string) => text.replace(/\s+/g, " ");
 
 test("dropped, then left out with a reason: hollow on the profile, and screen, PDF and recompute say the same", async ({
   page,

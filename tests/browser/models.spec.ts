@@ -1,12 +1,11 @@
 import type { Page } from "@playwright/test";
 import { openDemo, reading } from "./support/caseSteps.ts";
+import { acrossColumns, flat } from "./support/printedText.ts";
 import { printPage } from "./support/printPage.ts";
 import { expect, test } from "./support/test.ts";
 
 /** Wide, for a busy machine; ms. */
 const FIT_TIMEOUT = 60_000;
-
-const flat = (text: string) => text.replace(/\s+/g, " ");
 
 /** Until what the levels make of this patient is there: before it the sheet says that it is not to be printed. */
 async function expectFit(page: Page, kind: "fitted" | "none" = "fitted"): Promise<void> {
@@ -45,8 +44,7 @@ test("changing kidney function: events on the clock, the final state named, micr
   const text = flat((await printPage(page, info.outputPath("summary.pdf"))).texts.join(" "));
   expect(text).toContain("Digoxin 125 microgram tablet");
   expect(text).toContain("half a tablet by mouth every day at 20:00");
-  // The columns of the sheet come side by side out of the PDF.
-  expect(text).toMatch(/Never earlier than 6.*hours after a dose/);
+  expect(text).toMatch(acrossColumns("Never earlier than 6 hours after a dose: distribution is not over."));
   expect(text).toContain("Window 0.5 to 0.8 microgram per L: chance,");
   expect(text).toMatch(/Lowest [\d.]+ microgram per L \(90 %: [\d.]+ to [\d.]+\)/);
   expect(text).not.toContain("0.0625 mg");

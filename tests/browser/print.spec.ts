@@ -1,6 +1,7 @@
 import { execFileSync } from "node:child_process";
 import { PROJECT } from "../../.ci/install.mjs";
 import { openDemo, reading } from "./support/caseSteps.ts";
+import { flat } from "./support/printedText.ts";
 import { printPage } from "./support/printPage.ts";
 import { expect, test } from "./support/test.ts";
 
@@ -39,7 +40,6 @@ const FIT_TIMEOUT = 60_000;
 const shown = (value: number) => String(Number(value.toPrecision(3)));
 const spread = ({ median, interval90 }: Interval, unit: string) =>
   `${shown(median)} ${unit} (90 %: ${interval90.map(shown).join(" to ")})`;
-const flat = (text: string) => text.replace(/\s+/g, " ");
 
 for (const demo of DEMOS) {
   test(`screen, sheet and recompute say the same of ${demo.label}`, async ({ page }, info) => {

@@ -2,6 +2,7 @@ export { type AmountsOverTime, amountsOverTime } from "./amountsAt.ts";
 export type * from "./analysisTypes.ts";
 export { laneDoses } from "./caseDoses.ts";
 export { concentrationAt, hoursSinceDose } from "./concentrationAt.ts";
+export { crossCheckAdded } from "./crossCheckAdded.ts";
 export { type DeriveOptions, derive, deriveSteps, ENGINE } from "./derive.ts";
 export { eventInteractions, interactionsFor } from "./eventInteractions.ts";
 export type * from "./fitTypes.ts";

@@ -1,4 +1,4 @@
-import type { Analysis } from "../../core/analysis/index.ts";
+import { type Analysis, crossCheckAdded } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { issueMessage } from "../../core/messages/index.ts";
 import { issue } from "../../core/result/index.ts";
@@ -95,7 +95,7 @@ export function createAnalysisFeed(
   /** What comes after the typical patient is on the screen. */
   function follow(question: Question, analysis: Analysis): void {
     if (analysis.fit?.kind === "pending") void requestFit(question);
-    else if (!question.ofPreview) crossCheckSoon(question);
+    else if (!question.ofPreview) crossCheckSoon(question, analysis);
   }
 
   async function requestFit(question: Question): Promise<void> {
@@ -113,19 +113,20 @@ export function createAnalysisFeed(
     fitted = { analysis: answer.analysis, number: question.number };
     if (isNewest(question)) {
       say({ result: answer.analysis, isFitStale: false, fitProgress: null });
-      if (!question.ofPreview) crossCheckSoon(question);
+      if (!question.ofPreview) crossCheckSoon(question, answer.analysis);
     } else if (state.result !== null && (state.isFitStale || state.result.fit?.kind === "pending")) {
       say({ result: fitRenewed(state.result, answer.analysis), isFitStale: true });
     }
   }
 
   /** The second road to a settled result; put in its place if nothing has been asked since, without any other sign. */
-  function crossCheckSoon(question: Question): void {
+  function crossCheckSoon(question: Question, settled: Analysis): void {
     settling = setTimeout(async () => {
-      const answer = await answerSafely(fitter, question.value, { isFitted: true, isCrossChecked: true });
+      const answer = await answerSafely(fitter, question.value, { isCrossChecked: true });
       if (!answer?.ok || !isNewest(question)) return;
-      keep(question, answer.analysis);
-      say({ result: answer.analysis });
+      const result = crossCheckAdded(settled, answer.analysis);
+      keep(question, result);
+      say({ result });
     }, settleMs);
   }
 

@@ -1,9 +1,9 @@
-import { readFileSync } from "node:fs";
 import { describe, expect, it, test } from "vitest";
 import { omegaOfVariation } from "../../../src/core/analysis/fitProblem.ts";
 import { type Analysis, derive, deriveSteps, type IndividualFit } from "../../../src/core/analysis/index.ts";
-import { type Case, caseParse, type Level } from "../../../src/core/case/index.ts";
+import type { Case, Level } from "../../../src/core/case/index.ts";
 import { mapEstimate, type OralProblem, posterior } from "../../../src/core/estimation/index.ts";
+import { demoCase } from "../../fixtures/demoCase.ts";
 import { caseFixture } from "./caseFixture.ts";
 
 const TROUGH: Level = {
@@ -195,9 +195,7 @@ test.each<[string, Case, string]>([
 });
 
 test("an option that many draws never settle under is said to lie above the window, not below it for today's level", () => {
-  const parsed = caseParse(readFileSync("demo-data/saturable.ebbline.json", "utf8"));
-  if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
-  const { analysis } = fitted(parsed.value);
+  const { analysis } = fitted(demoCase("saturable"));
   const [, b, c] = analysis.options;
   for (const option of [b!, c!]) {
     const { shareNeverSteady, steadyChance, steadyState } = option.individual!;

@@ -1,13 +1,10 @@
-import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { concentrationWindow, derive } from "../../../src/core/analysis/index.ts";
-import { type Case, caseParse } from "../../../src/core/case/index.ts";
+import type { Case } from "../../../src/core/case/index.ts";
 import { windowRangeWords } from "../../../src/core/messages/index.ts";
+import { demoCase } from "../../fixtures/demoCase.ts";
 
-const file = new URL("../../../demo-data/modified-release.ebbline.json", import.meta.url);
-const parsed = caseParse(readFileSync(file, "utf8"));
-if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
-const byMass = parsed.value;
+const byMass = demoCase("modified-release");
 
 /** The same window in other units: at 250 g/mol, 4 mg/L are 16 umol/L exactly. */
 const molar = (unit: "umol/L" | "nmol/L" | "mmol/L" | "ug/L", factor: number): Case => ({

@@ -1,16 +1,11 @@
 import { readdirSync, readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { derive } from "../../../src/core/analysis/index.ts";
-import { type Case, caseParse, casePrint } from "../../../src/core/case/index.ts";
+import { casePrint } from "../../../src/core/case/index.ts";
 import { recordById } from "../../../src/core/medicine/index.ts";
+import { demoCase } from "../../fixtures/demoCase.ts";
 
 const folder = new URL("../../../demo-data/", import.meta.url);
-
-function demo(name: string): Case {
-  const parsed = caseParse(readFileSync(new URL(`${name}.ebbline.json`, folder), "utf8"));
-  if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
-  return parsed.value;
-}
 
 describe("demo cases", () => {
   const names = ["adjustment", "kidney", "lithium", "modified-release", "saturable", "start"];
@@ -20,7 +15,7 @@ describe("demo cases", () => {
   });
 
   it.each(names)("%s is marked as a demo, printed by casePrint, and holds the record as it is now", (name) => {
-    const value = demo(name);
+    const value = demoCase(name);
     expect(value.demo).toBe(true);
     expect(readFileSync(new URL(`${name}.ebbline.json`, folder), "utf8")).toBe(casePrint(value));
     // After a change of the record: node .ci/schema.mjs
@@ -29,7 +24,7 @@ describe("demo cases", () => {
   });
 
   it("the adjustment's levels lie near the typical prediction, above it", () => {
-    const levels = derive(demo("adjustment")).levels;
+    const levels = derive(demoCase("adjustment")).levels;
     expect(levels).toHaveLength(2);
     for (const { measured, predicted } of levels) {
       const ratio = measured / (predicted as number);
@@ -39,12 +34,12 @@ describe("demo cases", () => {
   });
 
   it("the adjustment's creatinine clearance is about 52 mL/min", () => {
-    const clearance = derive(demo("adjustment")).patient.creatinineClearance;
+    const clearance = derive(demoCase("adjustment")).patient.creatinineClearance;
     expect(Math.abs((clearance?.value ?? 0) - 52)).toBeLessThan(0.5);
   });
 
   it("the start has no level, no dose given and two options, the first chosen", () => {
-    const value = demo("start");
+    const value = demoCase("start");
     expect([value.levels, value.given]).toEqual([[], []]);
     expect(value.options.map((each) => each.chosen)).toEqual([true, false]);
   });
@@ -52,10 +47,10 @@ describe("demo cases", () => {
 
 describe("the cases for the other kinds of kinetics", () => {
   const steady = (name: string) =>
-    Object.fromEntries(derive(demo(name)).options.map(({ id, typical }) => [id, typical?.steadyState ?? null]));
+    Object.fromEntries(derive(demoCase(name)).options.map(({ id, typical }) => [id, typical?.steadyState ?? null]));
 
   it.each(["modified-release", "saturable", "kidney"])("%s: its levels lie near the typical prediction", (name) => {
-    const levels = derive(demo(name)).levels.filter((each) => each.excluded === null);
+    const levels = derive(demoCase(name)).levels.filter((each) => each.excluded === null);
     expect(levels.length).toBeGreaterThan(0);
     for (const { measured, predicted } of levels) {
       expect(measured / (predicted as number)).toBeGreaterThan(0.8);
@@ -66,7 +61,7 @@ describe("the cases for the other kinds of kinetics", () => {
   it.each(["modified-release", "saturable", "kidney"])(
     "%s: the chosen option stays above the window's low end and below its high",
     (name) => {
-      const value = demo(name);
+      const value = demoCase(name);
       const chosen = value.options.find((each) => each.chosen)!;
       const lowest = steady(name)[chosen.id]!.lowest;
       expect(lowest).toBeGreaterThan(value.window!.low.value);
@@ -89,7 +84,7 @@ describe("the cases for the other kinds of kinetics", () => {
   });
 
   it("kidney: clearance falls with the second creatinine and then with the factor, step by step", () => {
-    const clearances = derive(demo("kidney")).typical!.dispositions.map(({ disposition }) =>
+    const clearances = derive(demoCase("kidney")).typical!.dispositions.map(({ disposition }) =>
       disposition.kind === "two-compartment" ? disposition.clearance : Number.NaN,
     );
     expect(clearances).toHaveLength(1 + 1 + 4);
@@ -100,7 +95,7 @@ describe("the cases for the other kinds of kinetics", () => {
 });
 
 describe("lithium once a day", () => {
-  const value = demo("lithium");
+  const value = demoCase("lithium");
   const [option] = derive(value, { isFitted: true }).options;
 
   it("is in mmol/L, with levels 12 hours after the dose", () => {

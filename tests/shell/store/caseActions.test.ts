@@ -235,6 +235,14 @@ describe("demonstrations", () => {
     ]);
   });
 
+  test("one that turns out faulty when it is opened is refused with the reasons, and nothing is stored", async () => {
+    const { state } = await startWorkbench({ demos: { spoilt: { ...(read("start") as object), options: "none" } } });
+    expect(state().demos.map(({ name }) => name)).toEqual(["spoilt"]);
+    await state().openDemo("spoilt");
+    expect([state().open, state().entries]).toEqual([null, []]);
+    expect(state().notices).toMatchObject([{ gravity: "stop", issues: [{ path: ["options"] }] }]);
+  });
+
   test("each opening is a fresh copy, marked as a demonstration", async () => {
     const { state, open } = await startWorkbench({ demos });
     await state().openDemo("start");

@@ -1,5 +1,6 @@
-import { describe, expect, test } from "vitest";
+import { describe, expect, test, vi } from "vitest";
 import type { Analysis, FitState } from "../../../src/core/analysis/index.ts";
+import { SETTLE_MS } from "../../../src/shell/store/createAnalysisFeed.ts";
 import { startOpen, turns } from "./workbenchSupport.ts";
 
 async function started() {
@@ -235,6 +236,25 @@ describe("this patient", () => {
     fitter.answer(0, "fitted 0", fitOf(1));
     await turns();
     expect([...shown(), ...fitShown()]).toEqual(["fitted 0", 1, "fresh", false, 1, false, null]);
+  });
+
+  test("is cross-checked once the edit has settled, without being worked out a second time", async () => {
+    vi.useFakeTimers();
+    try {
+      const { fitter, open, shown, fitShown } = await fitting();
+      fitter.answer(0, "fitted 0", { ...fitOf(1), concerns: [] });
+      await turns();
+      await vi.advanceTimersByTimeAsync(SETTLE_MS + 1);
+      expect(fitter.asked.map(({ options }) => options)).toMatchObject([{ isFitted: true }, { isCrossChecked: true }]);
+      expect(fitter.asked[1]!.options.isFitted).not.toBe(true);
+      const crossCheck = { worst: 1e-9, where: "given", isAgreed: true };
+      fitter.answer(1, "typical 0", { ...PENDING, concerns: [], crossCheck });
+      await turns();
+      expect([...shown(), ...fitShown()]).toEqual(["fitted 0", 1, "fresh", false, 1, false, null]);
+      expect(open().analysis.result!.crossCheck).toEqual(crossCheck);
+    } finally {
+      vi.useRealTimers();
+    }
   });
 
   test("of the state before stays in sight, marked stale, until its own is there", async () => {

@@ -1,10 +1,9 @@
-import { readFileSync } from "node:fs";
 import { expect, test } from "vitest";
 import { type Analysis, deriveSteps } from "../../../src/core/analysis/index.ts";
-import { caseParse } from "../../../src/core/case/index.ts";
 import { analysisAnswer, arrayBuffers, type DeriveSteps } from "../../../src/shell/workers/analysisAnswer.ts";
 import type { AnalysisReply } from "../../../src/shell/workers/analysisMessages.ts";
 import { pauseForMessages } from "../../../src/shell/workers/pauseForMessages.ts";
+import { demoCase } from "../../fixtures/demoCase.ts";
 import { caseOf } from "../storage/fakeBrowser.ts";
 
 test("each buffer is named once, wherever it stands and however often", () => {
@@ -89,12 +88,11 @@ test("a pause lets a message in that was sent before it", async () => {
 });
 
 test("arrays are handed over, not copied, and nothing kept by the analysis is taken away with them", async () => {
-  const parsed = caseParse(readFileSync("demo-data/adjustment.ebbline.json", "utf8"));
-  if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
+  const value = demoCase("adjustment");
   const answers: (Analysis | null)[] = [];
   for (const sequence of [0, 1]) {
     await analysisAnswer(
-      { sequence, case: parsed.value, options: { isFitted: true } },
+      { sequence, case: value, options: { isFitted: true } },
       {
         deriveSteps,
         say: (reply, transfer) => {

@@ -1,13 +1,13 @@
-import { readFileSync } from "node:fs";
 import { afterEach, beforeEach, describe, expect, test, vi } from "vitest";
 import { type Analysis, derive, deriveSteps } from "../../../src/core/analysis/index.ts";
-import { type Case, caseParse } from "../../../src/core/case/index.ts";
+import type { Case } from "../../../src/core/case/index.ts";
 import type { DeriveSteps } from "../../../src/shell/workers/analysisAnswer.ts";
 import {
   ABANDON_AFTER,
   ANALYSIS_DEADLINE,
   createAnalysisClient,
 } from "../../../src/shell/workers/createAnalysisClient.ts";
+import { demoCase } from "../../fixtures/demoCase.ts";
 import { caseOf } from "../storage/fakeBrowser.ts";
 import { FakeWorker } from "./fakeWorker.ts";
 
@@ -188,15 +188,14 @@ test("stopped, it answers what is open", async () => {
 });
 
 test.each(["start", "adjustment"])("worker, page and direct call give the same analysis: demo %s", async (name) => {
-  const parsed = caseParse(readFileSync(`demo-data/${name}.ebbline.json`, "utf8"));
-  if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
+  const value = demoCase(name);
   const inWorker = client();
-  const answered = inWorker.run(parsed.value);
+  const answered = inWorker.run(value);
   last().answer(derive);
   const onPage = client(async () => deriveSteps);
-  const fallback = onPage.run(parsed.value);
+  const fallback = onPage.run(value);
   last().break();
-  const direct = { ok: true, analysis: derive(parsed.value) };
+  const direct = { ok: true, analysis: derive(value) };
   expect(await answered).toEqual(direct);
   expect(await fallback).toEqual(direct);
   expect(direct.analysis.options.some((option) => (option.curve?.values.length ?? 0) > 10)).toBe(true);

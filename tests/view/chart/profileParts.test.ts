@@ -1,17 +1,11 @@
-import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { derive } from "../../../src/core/analysis/index.ts";
-import { type Case, caseParse } from "../../../src/core/case/index.ts";
+import type { Case } from "../../../src/core/case/index.ts";
 import { profileParts } from "../../../src/view/chart/profileParts.ts";
-
-function demo(name: string): Case {
-  const parsed = caseParse(readFileSync(`demo-data/${name}.ebbline.json`, "utf8"));
-  if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
-  return parsed.value;
-}
+import { demoCase } from "../../fixtures/demoCase.ts";
 
 describe("the window on the bench's profile", () => {
-  const value = demo("modified-release");
+  const value = demoCase("modified-release");
   const analysis = derive(value);
   const drawn = (window: NonNullable<Case["window"]>) => profileParts({ ...value, window }, analysis, 1, null).window;
 

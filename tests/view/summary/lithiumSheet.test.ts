@@ -1,20 +1,19 @@
 // @vitest-environment node
-import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { derive } from "../../../src/core/analysis/index.ts";
-import { type Case, caseParse } from "../../../src/core/case/index.ts";
+import type { Case } from "../../../src/core/case/index.ts";
 import { buildSummary } from "../../../src/view/summary/buildSummary.ts";
+import { demoCase } from "../../fixtures/demoCase.ts";
 import { summaryInputOf } from "./summaryFixture.ts";
 
-const parsed = caseParse(readFileSync(new URL("../../../demo-data/lithium.ebbline.json", import.meta.url), "utf8"));
-if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
+const lithium = demoCase("lithium");
 const sheetOf = (value: Case) =>
   buildSummary({ ...summaryInputOf(value), analysis: derive(value, { isFitted: true, isCrossChecked: true }) });
 
 /** The lithium demo: once a day, mmol per L, a window 12 hours after the dose. */
 describe.each([
-  ["this patient", parsed.value],
-  ["the typical patient", { ...parsed.value, fit: { ...parsed.value.fit, use: "typical" as const } }],
+  ["this patient", lithium],
+  ["the typical patient", { ...lithium, fit: { ...lithium.fit, use: "typical" as const } }],
 ])("the sheet of lithium, %s", (_, value) => {
   const sheet = sheetOf(value);
   const readings = new Map(

@@ -1,13 +1,12 @@
 // @vitest-environment node
-import { readFileSync } from "node:fs";
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
-import { caseParse } from "../../../src/core/case/index.ts";
 import { BUILT_IN_RECORDS } from "../../../src/core/medicine/index.ts";
 import type { DoseLine } from "../../../src/core/regimen/index.ts";
 import { forbiddenForms } from "../../../src/core/units/index.ts";
 import { buildSummary, fingerprintGroups } from "../../../src/view/summary/buildSummary.ts";
 import type { SummaryInput } from "../../../src/view/summary/summaryInput.ts";
+import { demoCase } from "../../fixtures/demoCase.ts";
 import { caseOrdering, orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
 
 /** Every string of a value, with its path. */
@@ -47,9 +46,7 @@ describe("nothing printed has an error-prone form", () => {
   });
 
   it.each(["adjustment", "start"])("in the %s demo", (name) => {
-    const parsed = caseParse(readFileSync(new URL(`../../../demo-data/${name}.ebbline.json`, import.meta.url), "utf8"));
-    if (!parsed.ok) throw new Error(`demo ${name} does not parse`);
-    expect(found(summaryInputOf(parsed.value))).toEqual([]);
+    expect(found(summaryInputOf(demoCase(name)))).toEqual([]);
   });
 
   it.each(BUILT_IN_RECORDS.map((record) => [record.id, record.products[0]!.id] as const))(

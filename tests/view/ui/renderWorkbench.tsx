@@ -12,11 +12,14 @@ import { MemoryRepository } from "../../shell/store/memoryRepository.ts";
 // A second is near when two cores share the whole suite.
 configure({ asyncUtilTimeout: 10_000 });
 
-/** The real analysis, at once and in the page. */
+/** The real analysis of the typical patient, at once and in the page. */
 const runner: AnalysisRunner = {
   where: "page",
   run: async (value, options) => ({ ok: true, analysis: derive(value, options) }),
 };
+
+/** The fit is the longest part of it, and most screens are not about it: for them the fit goes on and on. */
+const fitPending: AnalysisRunner = { where: "page", run: () => new Promise(() => {}) };
 
 interface Setting {
   readonly repository?: MemoryRepository;
@@ -34,7 +37,7 @@ export async function renderWorkbench(screen: ReactNode, setting: Setting = {}) 
   const workbench = createWorkbench({
     repository,
     runner: setting.runner ?? runner,
-    fitter: setting.runner ?? runner,
+    fitter: setting.runner ?? fitPending,
     clock: () => Date.parse("2026-03-04T12:00:00Z"),
     newId: () => `new-${++ids}`,
     demos: setting.demos ?? {},
