@@ -5,9 +5,19 @@ import { type WallClock, wallClock } from "./wallClock.ts";
 
 /**
  * clock "07:30" · day "Wed 4 March" · dayClock "Wed 4 March, 07:30" · date "Wednesday 4 March" · dateYear "Wednesday 4 March 2026" ·
- * full "Wednesday 4 March 2026, 07:30" · typed "Wed 4 March 2026 07:30" (as `instantRead` takes it) · isoLocal "2026-03-04 07:30"
+ * full "Wednesday 4 March 2026, 07:30" · typed "Wed 4 March 2026 07:30" and typedShort "Wed 4 March 07:30" (as `instantRead` takes them) ·
+ * isoLocal "2026-03-04 07:30"
  */
-export type InstantForm = "clock" | "day" | "dayClock" | "date" | "dateYear" | "full" | "typed" | "isoLocal";
+export type InstantForm =
+  | "clock"
+  | "day"
+  | "dayClock"
+  | "date"
+  | "dateYear"
+  | "full"
+  | "typed"
+  | "typedShort"
+  | "isoLocal";
 
 /** An instant in words and the 24-hour clock of its zone, to the minute. A time that the clocks show twice that day gets its offset: "01:30 (UTC+01:00)". */
 export function instantText(ms: number, zone: string, form: InstantForm): string {
@@ -30,6 +40,8 @@ export function instantText(ms: number, zone: string, form: InstantForm): string
       return `${weekday} ${dayMonth} ${at.year}, ${time()}`;
     case "typed":
       return `${weekday.slice(0, 3)} ${dayMonth} ${at.year} ${time()}`;
+    case "typedShort":
+      return `${weekday.slice(0, 3)} ${dayMonth} ${time()}`;
     case "isoLocal":
       return `${at.year}-${twoDigits(at.month)}-${twoDigits(at.day)} ${time()}`;
   }

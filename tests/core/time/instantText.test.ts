@@ -12,6 +12,7 @@ describe("instantText", () => {
     ["dateYear", "Wednesday 4 March 2026"],
     ["full", "Wednesday 4 March 2026, 07:30"],
     ["typed", "Wed 4 March 2026 07:30"],
+    ["typedShort", "Wed 4 March 07:30"],
     ["isoLocal", "2026-03-04 07:30"],
   ] as const)("%s: %s", (form, text) => {
     expect(instantText(ms, "Europe/London", form)).toBe(text);
