@@ -1,15 +1,6 @@
 import { describe, expect, it } from "vitest";
-import {
-  expectRoundsTo,
-  expectWithin,
-  recordAverage,
-  recordFactor,
-  recordHalfLife,
-  recordNamed,
-  recordPeakTime,
-  recordValue,
-  recordWindow,
-} from "./recordFigure.ts";
+import { expectEndsRoundTo, expectEndsWithin, expectInside, expectRoundsTo, expectWithin } from "./expectFigure.ts";
+import { recordTypical } from "./recordTypical.ts";
 
 /*
  * Population pharmacokinetics of carbamazepine in adults with epilepsy (829 adults), abstract, 1998 (authors and journal recalled: Graves NM,
@@ -17,8 +8,7 @@ import {
  * CL/F = (0.0134·weight + 3.58) L/h, times 1.42 with phenytoin, 1.17 with phenobarbital or felbamate, 1.62 with both, 0.749 from 70 years on;
  * V/F 1.97 L/kg; ka 0.441 /h; between patients 26 % and 82 %; additive error 1.8 mg/L.
  */
-const record = recordNamed("carbamazepine");
-const adult = { weight: 70, age: 40 };
+const carbamazepine = recordTypical("carbamazepine", { weight: 70, age: 40 });
 
 describe("carbamazepine, the published population result", () => {
   it.each([
@@ -29,17 +19,17 @@ describe("carbamazepine, the published population result", () => {
     [70, 85, 3.383982],
     [110, 30, 5.054],
   ])("clearance at %d kg and %d years is %d L/h, relative 1e-12", (weight, age, wanted) => {
-    expectWithin(recordValue(record, "clearance", { weight, age }), wanted, 1e-12);
+    expectWithin(carbamazepine.value("clearance", { weight, age }), wanted, 1e-12);
   });
 
   it("variability and error are those of the same model, and the record says so", () => {
-    const { clearance, volume, residualAdditive } = record.variability;
+    const { clearance, volume, residualAdditive } = carbamazepine.record.variability;
     expect([clearance?.value, volume?.value, residualAdditive?.value]).toEqual([26, 82, 1.8]);
-    expect(record.estimates.from).toBe("one-model");
+    expect(carbamazepine.record.estimates.from).toBe("one-model");
   });
 
   it("its factors with other medicines stand in the record", () => {
-    expect(Object.fromEntries(record.interactions.map(({ id, factor }) => [id, factor.value]))).toEqual({
+    expect(Object.fromEntries(carbamazepine.record.interactions.map(({ id, factor }) => [id, factor.value]))).toEqual({
       phenytoin: 1.42,
       phenobarbital: 1.17,
       felbamate: 1.17,
@@ -56,13 +46,13 @@ describe("carbamazepine, the typical patient", () => {
   ])(
     "800 mg a day as %s of %d mg every %d h averages 7.38 mg/L (dose rate / CL) within 2 %%",
     (product, mg, everyH) => {
-      expectWithin(recordAverage(record, adult, { product, dose: { value: mg, unit: "mg" }, everyH }), 7.38, 0.02);
+      expectWithin(carbamazepine.average({ product, dose: { value: mg, unit: "mg" }, everyH }), 7.38, 0.02);
     },
   );
 
   it("40 mL of the suspension a day are 800 mg: the same average within 2 %", () => {
     expectWithin(
-      recordAverage(record, adult, { product: "suspension", dose: { value: 10, unit: "mL" }, everyH: 6 }),
+      carbamazepine.average({ product: "suspension", dose: { value: 10, unit: "mL" }, everyH: 6 }),
       7.38,
       0.02,
     );
@@ -73,7 +63,7 @@ describe("carbamazepine, the typical patient", () => {
     ["tablet-12h", 7.5],
     ["suspension", 1.5],
   ])("a single dose of the %s peaks at %d h, as its note says, within 0.05 h", (product, hours) => {
-    expectRoundsTo(recordPeakTime(record, adult, product), hours, 0.1);
+    expectRoundsTo(carbamazepine.peakTime(product), hours, 0.1);
   });
 
   /*
@@ -81,34 +71,29 @@ describe("carbamazepine, the typical patient", () => {
    * The model's V/F and CL/F give more than the latter: the record's note says so, and this holds it to it.
    */
   it("half-life 21.2 h lies inside the printed 12 to 65 h, but above the 12 to 17 h of long-term treatment", () => {
-    const hours = recordHalfLife(record, adult);
+    const hours = carbamazepine.halfLife();
     expectWithin(hours, (Math.LN2 * 137.9) / 4.518, 1e-12);
-    expect(hours).toBeGreaterThan(17);
-    expect(hours).toBeLessThan(25);
-    expect(record.kinetics.volume.note).toContain("12 to 17 h");
+    expectInside(hours, 17, 25);
+    expect(carbamazepine.record.kinetics.volume.note).toContain("12 to 17 h");
   });
 
   it("volume is the printed 1.97 L/kg", () => {
-    expectWithin(recordValue(record, "volume", adult) / 70, 1.97, 1e-15);
+    expectWithin(carbamazepine.valuePerKg("volume"), 1.97, 1e-15);
   });
 });
 
 describe("carbamazepine, mass and mole", () => {
   /* ASHP, Therapeutic ranges of drugs in traditional and SI units, Appendix A: factor 4.23, 4–12 mg/L is 17–51 µmol/L. */
   it("the factor agrees with the printed 4.23 within 0.5 %", () => {
-    expectWithin(recordFactor(record, "mg/L", "umol/L"), 4.23, 0.005);
+    expectWithin(carbamazepine.factor("mg/L", "umol/L"), 4.23, 0.005);
   });
 
   it("4 to 12 mg/L is the printed 17 to 51 umol/L within 0.5 %", () => {
-    const [low, high] = recordWindow(record, "4-12", "umol/L");
-    expectWithin(low, 17, 0.005);
-    expectWithin(high, 51, 0.005);
+    expectEndsWithin(carbamazepine.window("4-12", "umol/L"), [17, 51], 0.005);
   });
 
   /* Taranaki Medlab, New Zealand, Anticonvulsant drugs, table: 17–42 µmol/L. The record's note says 4 to 9.9 mg/L. */
   it("17 to 42 umol/L is 4 to 9.9 mg/L as the note says", () => {
-    const [low, high] = recordWindow(record, "17-42", "mg/L");
-    expectRoundsTo(low, 4, 0.1);
-    expectRoundsTo(high, 9.9, 0.1);
+    expectEndsRoundTo(carbamazepine.window("17-42", "mg/L"), [4, 9.9], 0.1);
   });
 });

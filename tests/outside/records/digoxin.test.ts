@@ -1,21 +1,15 @@
 import { describe, expect, it } from "vitest";
-import {
-  expectWithin,
-  recordAverage,
-  recordFactor,
-  recordHalfLife,
-  recordNamed,
-  recordValue,
-  recordWindow,
-} from "./recordFigure.ts";
+import { expectEndsWithin, expectWithin } from "./expectFigure.ts";
+import { recordAverage } from "./recordFigure.ts";
+import { recordTypical } from "./recordTypical.ts";
 
 /*
  * Population pharmacokinetics of digoxin in Japanese patients: a 2-compartment pharmacokinetic model, Clin Pharmacokinet 2001;40(10), abstract,
  * 106 patients: CL (L/h) = 0.036·weight + 0.112·CLcr, times 0.784 with a calcium antagonist, 0.77 with spironolactone;
  * V1 1.83 L/kg, V2 22.6 L/kg, Q 0.629 L/h/kg.
  */
-const record = recordNamed("digoxin");
 const adult = { weight: 60, creatinineClearance: 70 };
+const digoxin = recordTypical("digoxin", adult);
 const tablet = { product: "tablet", dose: { value: 0.125, unit: "mg" }, everyH: 24 } as const;
 
 describe("digoxin, the published population result", () => {
@@ -24,13 +18,13 @@ describe("digoxin, the published population result", () => {
     [50, 30, 5.16],
     [80, 100, 14.08],
   ])("clearance at %d kg and %d mL/min is %d L/h, relative 1e-12", (weight, creatinineClearance, wanted) => {
-    expectWithin(recordValue(record, "clearance", { weight, creatinineClearance }), wanted, 1e-12);
+    expectWithin(digoxin.value("clearance", { weight, creatinineClearance }), wanted, 1e-12);
   });
 
   it("the volumes and the exchange are the printed ones per kg", () => {
-    expectWithin(recordValue(record, "volume", adult) / 60, 1.83, 1e-12);
-    expectWithin(recordValue(record, "peripheralVolume", adult) / 60, 22.6, 1e-12);
-    expectWithin(recordValue(record, "exchange", adult) / 60, 0.629, 1e-12);
+    expectWithin(digoxin.valuePerKg("volume"), 1.83, 1e-12);
+    expectWithin(digoxin.valuePerKg("peripheralVolume"), 22.6, 1e-12);
+    expectWithin(digoxin.valuePerKg("exchange"), 0.629, 1e-12);
   });
 });
 
@@ -40,13 +34,12 @@ it.each([
   ["spironolactone", 0.77],
   ["amiodarone", 1 / 1.787],
 ])("digoxin: with %s clearance is %d of it, within rounding to two digits", (id, wanted) => {
-  const found = record.interactions.find((each) => each.id === id);
-  expectWithin(found?.factor.value ?? Number.NaN, wanted, 0.002);
+  expectWithin(digoxin.interaction(id), wanted, 0.002);
 });
 
 describe("digoxin, the typical patient", () => {
   it("0.125 mg a day averages dose rate / CL: 0.521 ug/L, within 2 %", () => {
-    expectWithin(recordAverage(record, adult, tablet, "ug/L"), 0.521, 0.02);
+    expectWithin(digoxin.average(tablet, "ug/L"), 0.521, 0.02);
   });
 
   /*
@@ -55,6 +48,7 @@ describe("digoxin, the typical patient", () => {
    * names this difference.
    */
   it("with the clearance of the other study it averages 0.591 ug/L within 2 %; the record's own lies 12 % below", () => {
+    const { record } = digoxin;
     if (record.kinetics.kind !== "two-compartment-oral") throw new Error("kind");
     const clearance = {
       ...record.kinetics.clearance,
@@ -63,20 +57,22 @@ describe("digoxin, the typical patient", () => {
     const other = { ...record, kinetics: { ...record.kinetics, clearance } };
     const average = recordAverage(other, adult, tablet, "ug/L");
     expectWithin(average, 0.591, 0.02);
-    expectWithin(recordAverage(record, adult, tablet, "ug/L") / average, 0.88, 0.01);
+    expectWithin(digoxin.average(tablet, "ug/L") / average, 0.88, 0.01);
   });
 
   /* Royal Liverpool and Broadgreen University Hospitals laboratory, 2012: 36–48 h with a normal kidney function. */
   it("the terminal half-life lies above the printed 36 to 48 h, and the record's note says so", () => {
-    expect(recordHalfLife(record, adult)).toBeGreaterThan(48);
-    expect(record.kinetics).toMatchObject({ peripheralVolume: { note: expect.stringContaining("36 to 48 h") } });
+    expect(digoxin.halfLife()).toBeGreaterThan(48);
+    expect(digoxin.record.kinetics).toMatchObject({
+      peripheralVolume: { note: expect.stringContaining("36 to 48 h") },
+    });
   });
 });
 
 describe("digoxin, mass and mole", () => {
   /* ASHP, Therapeutic ranges of drugs in traditional and SI units, Appendix A: factor 1.281 from ng/mL to nmol/L. */
   it("the factor agrees with the printed 1.281 within 0.5 %", () => {
-    expectWithin(recordFactor(record, "ng/mL", "nmol/L"), 1.281, 0.005);
+    expectWithin(digoxin.factor("ng/mL", "nmol/L"), 1.281, 0.005);
   });
 
   it.each([
@@ -84,12 +80,10 @@ describe("digoxin, mass and mole", () => {
     ["0.5-1", 0.64, 1.28],
     ["0.8-2", 1.02, 2.56],
   ])("window %s ug/L is %d to %d nmol/L within 0.5 %%", (id, low, high) => {
-    const [foundLow, foundHigh] = recordWindow(record, id, "nmol/L");
-    expectWithin(foundLow, low, 0.005);
-    expectWithin(foundHigh, high, 0.005);
+    expectEndsWithin(digoxin.window(id, "nmol/L"), [low, high], 0.005);
   });
 
   it("is shown in ug/L", () => {
-    expect(record.displayUnit).toBe("ug/L");
+    expect(digoxin.record.displayUnit).toBe("ug/L");
   });
 });

@@ -1,30 +1,21 @@
 import { describe, expect, it } from "vitest";
-import {
-  expectRoundsTo,
-  expectWithin,
-  recordAverage,
-  recordFactor,
-  recordHalfLife,
-  recordNamed,
-  recordValue,
-  recordWindow,
-} from "./recordFigure.ts";
+import { expectEndsRoundTo, expectInside, expectWithin } from "./expectFigure.ts";
+import { recordTypical } from "./recordTypical.ts";
 
 /*
  * Hussein Z, Posner J, Population pharmacokinetics of lamotrigine monotherapy in patients with epilepsy: routine monitoring data,
  * Br J Clin Pharmacol 1997;43:457–465, abstract: CL/F 1.94 L/h at the start, 17.3 % more after 48 weeks; V/F 77.4 L;
  * between patients 32 % and 34 %; residual 21 %.
  */
-const record = recordNamed("lamotrigine");
-const adult = { weight: 70 };
+const lamotrigine = recordTypical("lamotrigine", { weight: 70 });
 
 describe("lamotrigine, the published population result", () => {
   it("clearance is 1.94 L/h risen by 17.3 %, within the rounding of 2.28 L/h (0.5 %)", () => {
-    expectWithin(recordValue(record, "clearance", adult), 1.94 * 1.173, 0.005);
+    expectWithin(lamotrigine.value("clearance"), 1.94 * 1.173, 0.005);
   });
 
   it("variability and error are those of the same model", () => {
-    const { clearance, volume, residualProportional } = record.variability;
+    const { clearance, volume, residualProportional } = lamotrigine.record.variability;
     expect([clearance?.value, volume?.value, residualProportional?.value]).toEqual([32, 34, 21]);
   });
 
@@ -40,7 +31,7 @@ describe("lamotrigine, the published population result", () => {
   ])(
     "with %s clearance changes by exp(%d), within the rounding of the printed factor (0.5 %%)",
     (medicine, exponent) => {
-      const found = record.interactions.find((each) => each.medicine.includes(medicine));
+      const found = lamotrigine.record.interactions.find((each) => each.medicine.includes(medicine));
       expectWithin(found?.factor.value ?? Number.NaN, Math.exp(exponent), 0.005);
     },
   );
@@ -53,35 +44,30 @@ describe("lamotrigine, the typical patient", () => {
   ])(
     "200 mg a day as %s of %d mg every %d h averages 3.65 mg/L (dose rate / CL) within 2 %%",
     (product, mg, everyH) => {
-      expectWithin(recordAverage(record, adult, { product, dose: { value: mg, unit: "mg" }, everyH }), 3.65, 0.02);
+      expectWithin(lamotrigine.average({ product, dose: { value: mg, unit: "mg" }, everyH }), 3.65, 0.02);
     },
   );
 
   /* Lamotrigine label, section 12.3, adult table: half-life alone 25.4 h (11.6–61.6). */
   it("half-life lies inside the printed 11.6 to 61.6 h", () => {
-    const hours = recordHalfLife(record, adult);
-    expect(hours).toBeGreaterThan(11.6);
-    expect(hours).toBeLessThan(61.6);
+    expectInside(lamotrigine.halfLife(), 11.6, 61.6);
   });
 
   /* V/F 53.6 L in Indian adults (2013, quoted abstract); 1.5 L/kg fixed in the coefficients quoted above, 105 L at 70 kg. */
   it("volume is the printed 77.4 L, between 53.6 L and 105 L of two other models", () => {
-    const litres = recordValue(record, "volume", adult);
+    const litres = lamotrigine.value("volume");
     expectWithin(litres, 77.4, 1e-15);
-    expect(litres).toBeGreaterThan(53.6);
-    expect(litres).toBeLessThan(105);
+    expectInside(litres, 53.6, 105);
   });
 });
 
 describe("lamotrigine, mass and mole", () => {
   /* Anticonvulsant drugs, Davis Lab and Diagnostic Tests: factor 3.9, 3–15 mg/L is about 12–59 µmol/L. */
   it("the factor agrees with the printed 3.9 within 0.5 %", () => {
-    expectWithin(recordFactor(record, "mg/L", "umol/L"), 3.9, 0.005);
+    expectWithin(lamotrigine.factor("mg/L", "umol/L"), 3.9, 0.005);
   });
 
   it("3 to 15 mg/L rounds to the printed 12 to 59 umol/L", () => {
-    const [low, high] = recordWindow(record, "3-15", "umol/L");
-    expectRoundsTo(low, 12, 1);
-    expectRoundsTo(high, 59, 1);
+    expectEndsRoundTo(lamotrigine.window("3-15", "umol/L"), [12, 59], 1);
   });
 });

@@ -1,13 +1,13 @@
-import { describe, expect, it } from "vitest";
-import { expectWithin, recordAverage, recordHalfLife, recordNamed, recordValue, recordWindow } from "./recordFigure.ts";
+import { describe, it } from "vitest";
+import { expectEndsWithin, expectInside, expectWithin } from "./expectFigure.ts";
+import { recordTypical } from "./recordTypical.ts";
 
 /*
  * Population pharmacokinetics of levetiracetam: a systematic review, Clin Pharmacokinet 2021, abstract: CL/F in adults 0.054 L/h/kg (median, 0.039–0.061).
  * Levetiracetam pharmacokinetics in Japanese subjects with renal impairment, Clin Drug Investig 2014;34:819–828, abstract: 52, 31, 25, 20
  * mL/min/1.73 m² with normal function, mild, moderate, severe impairment. Borders 80, 50, 30 mL/min: dose table, Browne 2004 (epilepsy.com).
  */
-const record = recordNamed("levetiracetam");
-const adult = { weight: 70, creatinineClearance: 100 };
+const levetiracetam = recordTypical("levetiracetam", { weight: 70, creatinineClearance: 100 });
 
 describe("levetiracetam, clearance", () => {
   it.each([
@@ -20,7 +20,7 @@ describe("levetiracetam, clearance", () => {
   ])(
     "at a creatinine clearance of %d mL/min it is %d of 0.054 L/h/kg, relative 1e-12",
     (creatinineClearance, share) => {
-      const found = recordValue(record, "clearance", { weight: 70, creatinineClearance });
+      const found = levetiracetam.value("clearance", { weight: 70, creatinineClearance });
       expectWithin(found, 0.054 * 70 * share, 1e-12);
     },
   );
@@ -32,30 +32,22 @@ describe("levetiracetam, the typical patient", () => {
     ["tablet-er", { value: 3000, unit: "mg" }, 24],
     ["solution", { value: 15, unit: "mL" }, 12],
   ] as const)("3,000 mg a day as %s, %o every %d h, averages 33.1 mg/L within 2 %%", (product, dose, everyH) => {
-    expectWithin(recordAverage(record, adult, { product, dose, everyH }), 33.1, 0.02);
+    expectWithin(levetiracetam.average({ product, dose, everyH }), 33.1, 0.02);
   });
 
   /* Labcorp, test 716936, interpretive text: half-life 6–8 h in healthy adults. V 0.5–0.7 L/kg: label, from memory, unverified. */
   it("half-life lies inside the printed 6 to 8 h, volume inside the recalled 0.5 to 0.7 L/kg", () => {
-    const hours = recordHalfLife(record, adult);
-    expect(hours).toBeGreaterThan(6);
-    expect(hours).toBeLessThan(8);
-    const litresPerKg = recordValue(record, "volume", adult) / 70;
-    expect(litresPerKg).toBeGreaterThan(0.5);
-    expect(litresPerKg).toBeLessThan(0.7);
+    expectInside(levetiracetam.halfLife(), 6, 8);
+    expectInside(levetiracetam.valuePerKg("volume"), 0.5, 0.7);
   });
 
   it("with valproate clearance is 18.8 % lower, with inducers inside 9 to 22 % higher, as the review prints", () => {
-    const factor = (id: string) => record.interactions.find((each) => each.id === id)?.factor.value ?? Number.NaN;
-    expectWithin(factor("valproate"), 1 - 0.188, 1e-12);
-    expect(factor("inducers")).toBeGreaterThan(1.09);
-    expect(factor("inducers")).toBeLessThan(1.22);
+    expectWithin(levetiracetam.interaction("valproate"), 1 - 0.188, 1e-12);
+    expectInside(levetiracetam.interaction("inducers"), 1.09, 1.22);
   });
 });
 
 /* Mayo Clinic Laboratories, test LEVE: 10–40 mg/L; computed from 1000 / 170.21: 59–235 µmol/L. */
 it("levetiracetam: 10 to 40 mg/L is 59 to 235 umol/L within 0.5 %", () => {
-  const [low, high] = recordWindow(record, "10-40", "umol/L");
-  expectWithin(low, 59, 0.005);
-  expectWithin(high, 235, 0.005);
+  expectEndsWithin(levetiracetam.window("10-40", "umol/L"), [59, 235], 0.005);
 });

@@ -7,7 +7,8 @@ import {
 } from "../../../src/core/medicine/index.ts";
 import type { DoseAmount } from "../../../src/core/regimen/index.ts";
 import { quantityConvert, type UnitCode } from "../../../src/core/units/index.ts";
-import { expectWithin, recordAverage, recordHalfLife, recordNamed, recordValue, recordWindow } from "./recordFigure.ts";
+import { expectWithin } from "./expectFigure.ts";
+import { recordAverage, recordHalfLife, recordNamed, recordValue, recordWindow } from "./recordFigure.ts";
 
 /** What published figures say a record must give; where each was read stands beside it. */
 export interface RecordClaims {

@@ -1,4 +1,3 @@
-import { expect } from "vitest";
 import { kineticsDisposition } from "../../../src/core/analysis/kineticsDisposition.ts";
 import { modelHalfLife, modelProfile, modelSteadyState } from "../../../src/core/kinetics/index.ts";
 import {
@@ -47,7 +46,7 @@ export function recordHalfLife(record: MedicineRecord, covariates: Covariates): 
   return hours;
 }
 
-interface Course {
+export interface Course {
   readonly product: string;
   readonly dose: DoseAmount;
   readonly everyH: number;
@@ -103,13 +102,4 @@ export function recordWindow(record: MedicineRecord, id: string, unit: UnitCode)
 /** Molar units in one mass unit, by the record's molar mass: what sources print as the factor between the two. */
 export function recordFactor(record: MedicineRecord, from: UnitCode, to: UnitCode): number {
   return quantityConvert({ value: 1, unit: from }, to, record.molarMass.value);
-}
-
-export function expectWithin(found: number, wanted: number, relative: number): void {
-  expect(Math.abs(found / wanted - 1), `${found} against ${wanted}`).toBeLessThanOrEqual(relative);
-}
-
-/** A printed end that was rounded to whole `grain`s: the converted one must round to it. */
-export function expectRoundsTo(found: number, printed: number, grain: number): void {
-  expect(Math.abs(found - printed), `${found} against ${printed} printed`).toBeLessThanOrEqual(grain / 2);
 }
