@@ -1,18 +1,19 @@
 import { CompensatedSum } from "../numerics/index.ts";
-import { bodySegmentHours, bodySegmentPeak } from "./bodySegment.ts";
-import type { BodyState } from "./bodyState.ts";
 
-/** A window, 0 <= low <= high: of levels (mg/L) at the door, of amounts in the body (mg) within the tally. */
+/** A window, 0 <= low <= high: of levels (mg/L) at the door, of amounts in the body (mg) within SegmentTally. */
 export interface LevelWindow {
   low: number;
   high: number;
 }
 
-/** Gathers readings segment by segment: amounts in the body mg, times h, area mg·h; levels are these over the volume. */
-export class ExposureTally {
-  peakMg = -Infinity;
+/** Hours below, within and above a window. */
+export type WindowHours = [below: number, within: number, above: number];
+
+/** Gathers readings part by part of a course, in one unit: mg/L, or in SegmentTally mg. Times h, the area in this unit times h. */
+export abstract class ExposureTally {
+  peak = -Infinity;
   timeOfPeak = 0;
-  lowestMg = Infinity;
+  lowest = Infinity;
   timeOfLowest = 0;
   readonly #window: LevelWindow | undefined;
   readonly #area = new CompensatedSum();
@@ -24,47 +25,41 @@ export class ExposureTally {
     this.#window = window;
   }
 
-  /** One instant. The earliest of equal ones stands. */
-  instant(bodyMg: number, timeH: number): void {
-    if (bodyMg > this.peakMg) {
-      this.peakMg = bodyMg;
+  /** One level. The earliest of equal ones stands. */
+  level(level: number, timeH: number): void {
+    if (level > this.peak) {
+      this.peak = level;
       this.timeOfPeak = timeH;
     }
-    if (bodyMg < this.lowestMg) {
-      this.lowestMg = bodyMg;
+    if (level < this.lowest) {
+      this.lowest = level;
       this.timeOfLowest = timeH;
     }
   }
 
-  /** The stretch of `length` h from the instant `at` + `atRest`, whose state is given. Its end is left to the next. */
-  segment(state: BodyState, at: number, atRest: number, length: number): void {
-    this.instant(state.body, at + atRest);
-    const peak = bodySegmentPeak(state, length);
-    if (peak !== undefined) this.instant(state.bodyAt(peak), at + (atRest + peak));
-    this.#area.add(state.areaOver(length));
+  /** The area of a part `length` h long, and its hours strictly beyond an edge of the window. */
+  protected part(area: number, length: number, beyond: (edge: number, side: "below" | "above") => number): void {
+    this.#area.add(area);
     if (this.#window === undefined) return;
-    const below = bodySegmentHours(state, length, peak, this.#window.low, "below");
-    const above = bodySegmentHours(state, length, peak, this.#window.high, "above");
+    const below = beyond(this.#window.low, "below");
+    const above = beyond(this.#window.high, "above");
     this.#below.add(below);
     this.#above.add(above);
     this.#within.add(Math.max(0, length - below - above));
   }
 
-  /** mg·h */
-  get areaMgH(): number {
+  get area(): number {
     return this.#area.value;
   }
+
+  /** Puts the rounding of the parts into the longest, where it is least, so that the three add up to `total`. */
+  protected abstract rounded(hours: WindowHours, total: number): WindowHours;
 
   /** Hours below, within and above the window; without one all hours count as within. The three add up to `total`. */
   hours(total: number): { hoursBelow: number; hoursWithin: number; hoursAbove: number } {
     if (this.#window === undefined) return { hoursBelow: 0, hoursWithin: total, hoursAbove: 0 };
-    const hours = [this.#below.value, this.#within.value, this.#above.value] as [number, number, number];
-    // Rounding of the parts goes into the longest, where it is least. Twice: the first correction is itself rounded.
-    const longest = hours.indexOf(Math.max(...hours));
-    for (let i = 0; i < 2; i++) {
-      const missing = total - (hours[0] + hours[1] + hours[2]);
-      if (Number.isFinite(missing)) hours[longest]! += missing;
-    }
-    return { hoursBelow: hours[0], hoursWithin: hours[1], hoursAbove: hours[2] };
+    const gathered: WindowHours = [this.#below.value, this.#within.value, this.#above.value];
+    const [hoursBelow, hoursWithin, hoursAbove] = this.rounded(gathered, total);
+    return { hoursBelow, hoursWithin, hoursAbove };
   }
 }

@@ -2,7 +2,8 @@ import { absorptionEventsGap, absorptionEventsOf } from "./absorptionEvents.ts";
 import { argumentFinite, argumentNotNegative, argumentRefuse } from "./argumentCheck.ts";
 import { BodyState } from "./bodyState.ts";
 import { type Course, coursesCheck, type Disposition, dispositionCheck } from "./course.ts";
-import { ExposureTally, type LevelWindow } from "./exposureTally.ts";
+import type { LevelWindow } from "./exposureTally.ts";
+import { SegmentTally } from "./segmentTally.ts";
 
 export interface Exposure {
   /** mg/L */
@@ -82,7 +83,7 @@ export function historyExposure(
   if (e > 0) state.advance(from - events.at[e - 1]! - events.rest[e - 1]!);
 
   const { volume } = disposition;
-  const tally = new ExposureTally(window && { low: window.low * volume, high: window.high * volume });
+  const tally = new SegmentTally(window && { low: window.low * volume, high: window.high * volume });
   let at = from;
   let rest = 0;
   for (;;) {
@@ -98,13 +99,14 @@ export function historyExposure(
     rest = nextRest;
     e++;
   }
-  tally.instant(state.body, to);
+  tally.level(state.body, to);
 
-  const auc = tally.areaMgH / volume;
+  // The tally is in mg and mg·h.
+  const auc = tally.area / volume;
   return {
-    peak: tally.peakMg / volume,
+    peak: tally.peak / volume,
     timeOfPeak: tally.timeOfPeak,
-    lowest: tally.lowestMg / volume,
+    lowest: tally.lowest / volume,
     timeOfLowest: tally.timeOfLowest,
     auc,
     average: auc / (to - from),

@@ -2,8 +2,8 @@ import { CompensatedSum, passedTwoSteps } from "../numerics/index.ts";
 import { argumentRefuse } from "./argumentCheck.ts";
 import { BodyState } from "./bodyState.ts";
 import type { Course, Disposition } from "./course.ts";
-import { ExposureTally } from "./exposureTally.ts";
 import { patternAtSteadyState, patternCheck, patternSweep } from "./pattern.ts";
+import { SegmentTally } from "./segmentTally.ts";
 
 export interface PatternSteadyState {
   /** mg/L */
@@ -68,13 +68,13 @@ export function patternSteadyState(
     courses.map((course) => course.ka),
   );
   state.set(pattern.body, pattern.gut);
-  const tally = new ExposureTally();
+  const tally = new SegmentTally();
   patternSweep(state, pattern.events, period, (at, rest, nextAt, nextRest) => {
     const length = nextAt - at + (nextRest - rest);
     if (length > 0) tally.segment(state, at, rest, length);
   });
 
-  const { peakMg, lowestMg } = tally;
+  const { peak: peakMg, lowest: lowestMg } = tally;
   const swingMg = peakMg - lowestMg;
   const auc = absorbed / ke / volume;
   return {

@@ -46,6 +46,6 @@ export function modelExposure(history: ModelHistory, from: number, to: number, w
   // Should the volume change at this very instant, the level before it is one of the two.
   tally.level(run.level, from);
   run.go({ at: from, rest: 0 }, { at: to, rest: 0 }, (seen) => tally.add(seen));
-  const { peak, timeOfPeak, lowest, timeOfLowest, auc } = tally;
+  const { peak, timeOfPeak, lowest, timeOfLowest, area: auc } = tally;
   return { peak, timeOfPeak, lowest, timeOfLowest, auc, average: auc / (to - from), ...tally.hours(to - from) };
 }

@@ -52,7 +52,7 @@ export function modelSteadyState(
   }
   const tally = new StretchTally();
   for (const seen of steadyRun(pattern).stretches) tally.add(seen);
-  const { peak, lowest, auc } = tally;
+  const { peak, lowest, area: auc } = tally;
   const average = auc / period;
   return {
     status: "settled",
