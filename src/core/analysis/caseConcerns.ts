@@ -24,6 +24,7 @@ import { levelNotSteady } from "./concerns/levelNotSteady.ts";
 import { levelOutlier } from "./concerns/levelOutlier.ts";
 import { levelOutOfRange } from "./concerns/levelOutOfRange.ts";
 import { levelOutsidePrior } from "./concerns/levelOutsidePrior.ts";
+import { levelOutsideWindow } from "./concerns/levelOutsideWindow.ts";
 import { levelResidual } from "./concerns/levelResidual.ts";
 import { levelsAbsorptionOnly } from "./concerns/levelsAbsorptionOnly.ts";
 import { levelsAllLeftOut } from "./concerns/levelsAllLeftOut.ts";
@@ -47,6 +48,7 @@ import { optionChanceOutside } from "./concerns/optionChanceOutside.ts";
 import { optionChanceToxic } from "./concerns/optionChanceToxic.ts";
 import { optionOutsideWindow } from "./concerns/optionOutsideWindow.ts";
 import { optionToxic } from "./concerns/optionToxic.ts";
+import { parametersHeld } from "./concerns/parametersHeld.ts";
 import { parameterUnusual } from "./concerns/parameterUnusual.ts";
 import { populationOutside } from "./concerns/populationOutside.ts";
 import { productSwitch } from "./concerns/productSwitch.ts";
@@ -72,6 +74,7 @@ const RULES: readonly ConcernRule[] = [
   populationOutside,
   levelTiming,
   levelTooEarly,
+  levelOutsideWindow,
   levelFarOff,
   levelOutlier,
   levelResidual,
@@ -105,6 +108,7 @@ const RULES: readonly ConcernRule[] = [
   flipFlop,
   levelLeftOut,
   oneLevel,
+  parametersHeld,
   levelsBeforeSteady,
   levelsWithinError,
   levelsBelowLimit,

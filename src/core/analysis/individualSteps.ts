@@ -4,6 +4,7 @@ import { type ModelHistory, modelHalfLife, modelScaled } from "../kinetics/index
 import type { AnalysisClock } from "./analysisClock.ts";
 import type { DoseMark, LevelResult, Model, OptionResult } from "./analysisTypes.ts";
 import { countedByProduct } from "./caseDoses.ts";
+import { DRAW_COUNTS } from "./drawCounts.ts";
 import { drawnCurve } from "./drawnCurve.ts";
 import type { DrawnPatients } from "./drawnPatients.ts";
 import { type FitProblem, fitProblem } from "./fitProblem.ts";
@@ -19,16 +20,6 @@ import { systematicDraws } from "./systematicDraws.ts";
 
 /** Part of the engine, so that the same case always gives the same figures. */
 export const POSTERIOR_SEED = 1;
-
-/**
- * How many draws, as the kind's cost allows: from the posterior; for each level's forecast and the typical patient's range; and, of the
- * posterior by weight, those that carry the bands and readings.
- */
-const DRAWS: Readonly<Record<Model["kind"], { posterior: number; aside: number; carried: number }>> = {
-  "one-compartment": { posterior: 2_048, aside: 1_024, carried: 1_024 },
-  "two-compartment": { posterior: 2_048, aside: 512, carried: 512 },
-  saturable: { posterior: 1_024, aside: 256, carried: 256 },
-};
 
 /** Share of the work that is done when the draws are there, and when the levels have been looked at one by one. */
 const PART_DRAWN = 0.2;
@@ -66,7 +57,7 @@ export function* individualSteps(value: Case, input: IndividualInput): Generator
   if (!posed.ok) return without({ kind: "none", reason: posed.reason });
   if (!input.isFitted) return without({ kind: "pending" });
   const { problem } = posed.value;
-  const draws = DRAWS[typical!.kind];
+  const draws = DRAW_COUNTS[typical!.kind];
 
   yield 0;
   const map = estimateMostLikely(problem);

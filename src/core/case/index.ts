@@ -1,6 +1,7 @@
 /** The saved case: its shape, reading and printing it, and every change that can be made to it. */
 export { type CaseDiff, caseDiff, diffApply, diffInvert } from "./caseDiff.ts";
 export { caseFingerprint } from "./caseFingerprint.ts";
+export { type CaseHead, caseHeadRead } from "./caseHeadRead.ts";
 export { caseNew } from "./caseNew.ts";
 export { caseParse, caseValidate } from "./caseParse.ts";
 export { casePrint } from "./casePrint.ts";

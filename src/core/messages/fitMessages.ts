@@ -137,6 +137,10 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
       ? `What they say of it is mostly what the medicine record already said. The dose rests on it: another level would help.`
       : "What they say of it is mostly what the medicine record already said.",
   }),
+  "parameters-held": (data) => ({
+    title: `The levels do not adjust ${wordList(parts(data))}`,
+    text: `The medicine record states no variation between patients for ${parts(data).length === 1 ? "it: it stays the typical patient's, and no interval has its doubt in it" : "them: they stay the typical patient's, and no interval has their doubt in it"}.`,
+  }),
   "one-level": (data) => ({
     title: "This patient rests on one level",
     text: `One level can settle one figure: ${wordList(parts(data))} ${parts(data).length === 1 ? "stays" : "stay"} near what the medicine record says.`,

@@ -1,3 +1,4 @@
+import type { TargetWindow } from "../case/index.ts";
 import type { CovariateName } from "../medicine/index.ts";
 import { numberPrint, type Quantity, quantityPrint, type UnitCode, unitSpoken } from "../units/index.ts";
 import {
@@ -71,6 +72,14 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
     title: `The level of ${when(data)} is no trough`,
     text: `${hours(number(data, "afterDoseH"))} after the dose and ${hours(number(data, "leftH"))} before the next; the target window is about the ${windowQuantityWord("trough")}. Compare the predicted lowest with it, not this level.`,
   }),
+  "level-above-window": (data) => ({
+    title: `The latest level, of ${when(data)}, is above the target window`,
+    text: `${measuredBeside(data)} Look at the patient before the next dose, and at what each option makes of it.`,
+  }),
+  "level-below-window": (data) => ({
+    title: `The latest level, of ${when(data)}, is below the target window`,
+    text: `${measuredBeside(data)} What each option makes of it stands in the readings.`,
+  }),
   "figures-from-memory": (data) => ({
     title: "Figures from memory are in use",
     text: `${capital(text(data, "name"))}: ${wordList(figureNames(data))}. They were recalled and not found in their source: unverified.`,
@@ -106,6 +115,13 @@ const mg = (data: ConcernData, key: string): string =>
   quantityPrint({ value: number(data, key), unit: "mg" }, { ...PRINT, significant: 6 });
 const printed = (quantity: Quantity): string => quantityPrint(quantity, { ...PRINT, significant: 4 });
 const orList = (words: readonly string[]): string => wordList(words).replace(/ and ([^,]*)$/, " or $1");
+/** "Measured 9.1 mg per L; the window for the lowest is 4 to 8 mg per L." */
+function measuredBeside(data: ConcernData): string {
+  const quantity = windowQuantityWord(text(data, "quantity") as TargetWindow["quantity"]);
+  const measured = `${data.belowLimit === true ? "below the assay's limit of " : ""}${concentration(data, "measured")}`;
+  return `Measured ${measured}; the window for the ${quantity} is ${concentration(data, "low")} to ${concentration(data, "high")}.`;
+}
+
 const percent = (share: number): string => `${figure(share * 100)} %`;
 const capital = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);
 const sentence = (words: string): string => words.replace(/\.$/, "");

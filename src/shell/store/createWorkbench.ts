@@ -1,5 +1,5 @@
-import { z } from "zod";
 import { createStore, type StoreApi } from "zustand/vanilla";
+import { caseHeadRead } from "../../core/case/index.ts";
 import { type Issue, issue } from "../../core/result/index.ts";
 import { bootActions } from "./bootActions.ts";
 import { caseActions } from "./caseActions.ts";
@@ -121,8 +121,6 @@ export function createWorkbench(setting: WorkbenchSetting): Workbench {
   });
 }
 
-const DEMO_SHOWN = z.object({ label: z.string(), medicine: z.object({ name: z.string() }), notes: z.string() });
-
 /**
  * What the list shows of each demonstration; one without it is not offered, and named. Whether the whole is a good case is asked when it is
  * opened: asking it of all of them is a good part of the time the program takes to start.
@@ -131,12 +129,12 @@ function demosRead(demos: Readonly<Record<string, unknown>>): { good: DemoEntry[
   const good: DemoEntry[] = [];
   const faults: Issue[] = [];
   for (const [name, value] of Object.entries(demos)) {
-    const parsed = DEMO_SHOWN.safeParse(value);
-    if (!parsed.success) faults.push(issue("demo-unreadable", { name }));
+    const head = caseHeadRead(value);
+    if (!head) faults.push(issue("demo-unreadable", { name }));
     else {
-      const { label, medicine, notes } = parsed.data;
+      const { label, medicine, notes } = head;
       // What the case says of itself: the first line of its notes.
-      good.push({ name, label, medicine: medicine.name, about: notes.split("\n", 1)[0]?.trim() ?? "" });
+      good.push({ name, label, medicine, about: notes.split("\n", 1)[0]?.trim() ?? "" });
     }
   }
   return { good, faults };

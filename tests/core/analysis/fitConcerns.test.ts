@@ -119,6 +119,17 @@ const TABLE: readonly (readonly [code: string, raises: ConcernContext, doesNot: 
     withFit({ parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.21 })] }),
   ],
   [
+    "parameters-held",
+    withFit({ parameters: [parameter({ symbol: "CL", words: "Clearance" })] }),
+    withFit({
+      parameters: [
+        parameter({ symbol: "CL", words: "Clearance" }),
+        parameter({ symbol: "V", words: "Volume" }),
+        parameter({ symbol: "ka", words: "Absorption rate" }),
+      ],
+    }),
+  ],
+  [
     "one-level",
     withFit({ levelsUsed: ["m"], parameters: [parameter({ symbol: "V", words: "Volume", taught: 0.19 })] }),
     // What a level taught something of does not stay near the record's.

@@ -2,92 +2,30 @@ import { describe, expect, it } from "vitest";
 import { eventInteractions } from "../../../src/core/analysis/eventInteractions.ts";
 import { derive } from "../../../src/core/analysis/index.ts";
 import type { Case, Factor } from "../../../src/core/case/index.ts";
-import { type Figure, type MedicineRecord, type RecordWindow, recordById } from "../../../src/core/medicine/index.ts";
+import { recordById } from "../../../src/core/medicine/index.ts";
 import { concernMessage } from "../../../src/core/messages/index.ts";
 import { RECORD_CONCERN_CODES } from "../../../src/core/messages/recordConcernMessages.ts";
 import { forbiddenForms } from "../../../src/core/units/index.ts";
-import { caseFixture } from "./caseFixture.ts";
-
-const known = { source: "invented-for-tests", basis: "seen" } as const;
-const figure = (value: number, unit: Figure["unit"], basis: Figure["basis"] = "seen"): Figure => ({
+import {
+  event,
+  figure,
+  found,
+  interactions,
+  kineticsFromMemory,
+  known,
+  level,
+  optionOf,
+  otherProduct,
+  plain,
+  quiet,
+  TROUGH,
+  tablet12h,
+  trough,
+  troughOf,
+  troughWindow,
   value,
-  unit,
-  source: known.source,
-  basis,
-});
-const fixture = caseFixture();
-/** As if every figure had been read in its source. */
-const asSeen = (record: MedicineRecord): MedicineRecord =>
-  JSON.parse(JSON.stringify(record).replaceAll('"basis":"memory"', '"basis":"seen"'));
-const plain: Case = { ...fixture, medicine: asSeen(fixture.medicine) };
-const [tablet12h] = plain.medicine.products.filter((each) => each.id === "tablet-12h");
-/** Theophylline's record with nothing that a rule below would point out. */
-const quiet: MedicineRecord = {
-  ...plain.medicine,
-  sources: { ...plain.medicine.sources, "invented-for-tests": { title: "Invented for tests" } },
-  estimates: { from: "one-model", text: "One model.", ...known },
-  population: { text: "Adults.", ...known, ranges: [{ covariate: "age", low: 18, high: 90, unit: "a", ...known }] },
-  limits: {},
-  interactions: [],
-  cautions: [],
-};
-delete quiet.steadyStateAfter;
-delete quiet.earliestSample;
-delete quiet.autoinduction;
-
-const value = (record: Partial<MedicineRecord> = {}, change: Partial<Case> = {}): Case => ({
-  ...plain,
-  medicine: { ...quiet, ...record },
-  ...change,
-});
-const level = (at: string, change: Partial<Case["levels"][number]> = {}): Case["levels"][number] => ({
-  id: "l",
-  at,
-  quantity: { value: 6, unit: "mg/L" },
-  kind: "measured",
-  ...change,
-});
-/** Doses at 08:00 and 20:00 from 1 March; the last at 08:00 on 4 March, now is 12:00. */
-const TROUGH = "2026-03-04T07:30:00+00:00";
-const withLevel = (record: Partial<MedicineRecord> = {}, at = TROUGH, change: Partial<Case> = {}): Case =>
-  value(record, { levels: [level(at)], ...change });
-const event = (detail: string, change: Partial<Factor> = {}): Partial<Case> => ({
-  patient: { ...plain.patient, factors: [{ kind: "interacting-medicine", from: plain.now, detail, ...change }] },
-});
-const interactions: MedicineRecord["interactions"] = [
-  {
-    id: "i",
-    medicine: "valproate",
-    parameter: "clearance",
-    factor: figure(0.49, "1"),
-    text: "Valproate slows elimination.",
-  },
-];
-const trough: RecordWindow = {
-  id: "w",
-  label: "Trough",
-  use: "invented",
-  sampling: "just before a dose",
-  quantity: "trough",
-  low: { value: 8, unit: "mg/L" },
-  high: { value: 15, unit: "mg/L" },
-  ...known,
-};
-const troughWindow: Case["window"] = { quantity: "trough", low: trough.low, high: trough.high, basis: "invented" };
-const otherProduct = (change: Partial<MedicineRecord["products"][number]>): Partial<MedicineRecord> => ({
-  products: [...quiet.products, { ...tablet12h!, id: "other", name: "other tablet", ...change }],
-});
-const optionOf = (product: string, mg: number): Case["options"] => [
-  {
-    ...plain.options[0]!,
-    lines: [{ ...plain.options[0]!.lines[0]!, product, amount: { value: mg, unit: "mg" } }],
-  },
-];
-const kineticsFromMemory = (): MedicineRecord => {
-  const { kinetics } = quiet;
-  if (kinetics.kind !== "one-compartment-oral") throw new RangeError("theophylline: one compartment expected");
-  return { ...quiet, kinetics: { ...kinetics, clearance: { ...kinetics.clearance, basis: "memory" } } };
-};
+  withLevel,
+} from "./recordConcernCases.ts";
 
 /** For every concern: a case that raises it, and one as like it as can be that does not. */
 const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] = [
@@ -163,6 +101,16 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     withLevel({}, "2026-03-04T03:00:00+00:00", { window: troughWindow! }),
     withLevel({}, TROUGH, { window: troughWindow! }),
   ],
+  [
+    "level-above-window",
+    withLevel({}, TROUGH, { window: troughOf(1, 4) }),
+    withLevel({}, "2026-03-04T03:00:00+00:00", { window: troughOf(1, 4) }),
+  ],
+  [
+    "level-below-window",
+    withLevel({}, TROUGH, { window: troughOf(20, 30) }),
+    withLevel({}, TROUGH, { window: troughOf(1, 30) }),
+  ],
   ["figures-from-memory", value(kineticsFromMemory()), value(quiet)],
   [
     "figures-pieced-together",
@@ -175,8 +123,6 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     value({ cautions: [{ text: "Take with food.", category: "food", ...known }] }),
   ],
 ];
-
-const found = (one: Case, code: string) => derive(one).concerns.filter((each) => each.code === code);
 
 describe("concerns from the record", () => {
   it.each(TABLE)("%s is raised where it should be and not where it should not", (code, raises, doesNot) => {
