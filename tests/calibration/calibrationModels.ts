@@ -1,3 +1,4 @@
+import { DRAW_COUNTS, type DrawCounts } from "../../src/core/analysis/drawCounts.ts";
 import { omegaOfVariation } from "../../src/core/analysis/fitProblem.ts";
 import { kineticsDisposition } from "../../src/core/analysis/kineticsDisposition.ts";
 import { type ReferencePatient, referenceCovariates } from "../../src/core/analysis/referenceCovariates.ts";
@@ -36,8 +37,8 @@ export interface CalibrationModel {
   readonly disposition: ModelDisposition;
   /** Patients take them in turn. */
   readonly courses: readonly CalibrationCourse[];
-  /** As individualSteps has them for this kind. */
-  readonly draws: { readonly posterior: number; readonly carried: number };
+  /** As this patient's figures have them. */
+  readonly draws: Pick<DrawCounts, "posterior" | "carried">;
 }
 
 /** Invented: one reference patient, so that all that differs between the simulated ones is what the record says differs. */
@@ -66,8 +67,6 @@ const SATURABLE: readonly Varied[] = [
   ["Km", "km", "halfMaximum"],
   ["V", "volume", "volume"],
 ];
-const LINEAR_DRAWS = { posterior: 2_048, carried: 1_024 };
-const SATURABLE_DRAWS = { posterior: 1_024, carried: 256 };
 
 /** The three models. Doses and intervals are invented, within what the record allows. */
 export function calibrationModels(): readonly CalibrationModel[] {
@@ -89,7 +88,7 @@ export function calibrationModels(): readonly CalibrationModel[] {
     { doseMg: 200, intervalH: 12 },
   ].map((course) => ({ product: "capsule-er", ...course }));
   return [
-    modelOf("immediate", "one compartment, immediate release", "theophylline", LINEAR, 0.5, immediate, LINEAR_DRAWS),
+    modelOf("immediate", "one compartment, immediate release", "theophylline", LINEAR, 0.5, immediate),
     modelOf(
       "modified",
       "one compartment, modified release: slow first-order (flip-flop) and two-phase capsules by turns",
@@ -97,9 +96,8 @@ export function calibrationModels(): readonly CalibrationModel[] {
       LINEAR,
       0.4,
       modified,
-      LINEAR_DRAWS,
     ),
-    modelOf("saturable", "Michaelis–Menten", "phenytoin", SATURABLE, 0.5, saturable, SATURABLE_DRAWS),
+    modelOf("saturable", "Michaelis–Menten", "phenytoin", SATURABLE, 0.5, saturable),
   ];
 }
 
@@ -110,7 +108,6 @@ function modelOf(
   varied: readonly Varied[],
   limit: number,
   courses: readonly CalibrationCourse[],
-  draws: CalibrationModel["draws"],
 ): CalibrationModel {
   const record = recordById(recordId);
   if (!record) throw new RangeError(`recordId: no record "${recordId}"`);
@@ -134,6 +131,8 @@ function modelOf(
       return variability.correlations?.find(({ between }) => between.includes(a) && between.includes(b))?.value ?? 0;
     }),
   );
+  const disposition = kineticsDisposition(record, values);
+  const { posterior, carried } = DRAW_COUNTS[disposition.kind];
   return {
     id,
     name,
@@ -146,9 +145,9 @@ function modelOf(
       proportional: (variability.residualProportional?.value ?? 0) / 100,
     },
     limit,
-    disposition: kineticsDisposition(record, values),
+    disposition,
     courses,
-    draws,
+    draws: { posterior, carried },
   };
 }
 
