@@ -8,21 +8,9 @@ import {
   formulaTrace,
 } from "../../../src/core/medicine/index.ts";
 import { issueMessage } from "../../../src/core/messages/index.ts";
+import { woman } from "./woman.ts";
 
 type Unit = Formula["unit"];
-
-const woman = {
-  weight: 58,
-  idealWeight: 54.2,
-  adjustedWeight: 55.7,
-  leanWeight: 41.3,
-  height: 162,
-  age: 64,
-  creatinineClearance: 52,
-  albumin: 36,
-  bodySurface: 1.6,
-  isFemale: 1,
-} as const satisfies Covariates;
 
 function value(formula: string, unit: Unit, covariates: Covariates = woman): number {
   const result = formulaEvaluate({ formula, unit }, covariates);

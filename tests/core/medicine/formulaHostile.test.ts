@@ -3,19 +3,7 @@ import type { FormulaNode } from "../../../src/core/medicine/formulaNode.ts";
 import { formulaRead } from "../../../src/core/medicine/formulaRead.ts";
 import { COVARIATE_NAMES, formulaEvaluate, formulaFaults, UNIT_WORDS } from "../../../src/core/medicine/index.ts";
 import { issueMessage, MESSAGE_CODES } from "../../../src/core/messages/index.ts";
-
-const woman = {
-  weight: 58,
-  idealWeight: 54.2,
-  adjustedWeight: 55.7,
-  leanWeight: 41.3,
-  height: 162,
-  age: 64,
-  creatinineClearance: 52,
-  albumin: 36,
-  bodySurface: 1.6,
-  isFemale: 1,
-} as const;
+import { woman } from "./woman.ts";
 
 /** The codes of its faults; every one has a sentence, and a place that lies in the text. */
 function codes(formula: string): string[] {
