@@ -3,6 +3,7 @@ import type { Case, Level } from "../../core/case/index.ts";
 import { issueMessage, levelWords } from "../../core/messages/index.ts";
 import type { Quantity } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
+import { fieldQuestion } from "../ui/fieldQuestion.ts";
 import { InstantInput } from "../ui/InstantInput.tsx";
 import type { QuantityAsk } from "../ui/QuantityField.tsx";
 import { QuantityInput } from "../ui/QuantityInput.tsx";
@@ -66,15 +67,7 @@ export function LevelForm({ value, level, word, onLevel, onCancel }: LevelFormPr
           hasInitialFocus
           isTold={isSent}
           fault={faultOf("quantity")}
-          question={
-            asked && {
-              text: asked.text,
-              answers: asked.answers.map((answer) => ({
-                label: answer.label,
-                onAnswer: () => add(answer.value, answer.isConfirmed),
-              })),
-            }
-          }
+          question={fieldQuestion(asked, add)}
           onChange={(quantity) => change({ ...draft, quantity })}
         />
         <InstantInput

@@ -6,6 +6,7 @@ import { instantMs, instantRead, instantText } from "../../core/time/index.ts";
 import { type Quantity, quantityPrint, type UnitCode } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { DataTable } from "../ui/DataTable.tsx";
+import { fieldQuestion } from "../ui/fieldQuestion.ts";
 import { InstantInput, instantTyped } from "../ui/InstantInput.tsx";
 import type { QuantityAsk, QuantityLook } from "../ui/QuantityField.tsx";
 import { QuantityInput } from "../ui/QuantityInput.tsx";
@@ -98,15 +99,7 @@ export function ObservationEntry<U extends UnitCode>(props: ObservationEntryProp
             units={units}
             isTold={isSent}
             fault={fault}
-            question={
-              asked && {
-                text: asked.text,
-                answers: asked.answers.map((answer) => ({
-                  label: answer.label,
-                  onAnswer: () => add(answer.value, answer.isConfirmed),
-                })),
-              }
-            }
+            question={fieldQuestion(asked, add)}
             onChange={(next) => {
               setFault(undefined);
               setAsked(undefined);

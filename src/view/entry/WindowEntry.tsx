@@ -1,20 +1,11 @@
-import { type FormEvent, useState } from "react";
+import { useState } from "react";
 import type { TargetWindow } from "../../core/case/index.ts";
 import { windowAboutWords, windowWords } from "../../core/messages/index.ts";
 import { numberPrint, quantityPrint } from "../../core/units/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
-import { WindowFields } from "../ui/WindowFields.tsx";
-import {
-  EMPTY_WINDOW,
-  type WindowAsk,
-  type WindowDraft,
-  windowAsk,
-  windowDraft,
-  windowDraftEmpty,
-  windowDraftRead,
-  windowUnitsFor,
-} from "../ui/windowDraft.ts";
+import { NO_WINDOW_TYPED, WindowForm, type WindowTyped } from "../ui/WindowForm.tsx";
+import { EMPTY_WINDOW, windowDraft, windowDraftEmpty } from "../ui/windowDraft.ts";
 import { useWorkbench } from "../useWorkbench.ts";
 import { PanelDone } from "./PanelDone.tsx";
 import { type OfferedWindow, windowOfferOf, windowOffers } from "./windowOffers.ts";
@@ -35,35 +26,12 @@ export function WindowEntry({ onDone }: WindowEntryProps) {
   const offers = open ? windowOffers(open.value.medicine, wardWindows) : [];
   const offered = current ? windowOfferOf(current, offers) : null;
   const [isOwn, setOwn] = useState(() => current !== undefined && offered === null);
-  const [draft, setDraft] = useState(() =>
-    current ? windowDraft(current) : open ? windowDraftEmpty(open.value.medicine) : EMPTY_WINDOW,
-  );
-  const [isSent, setSent] = useState(false);
-  const [asked, setAsked] = useState<WindowAsk | null>(null);
+  const [typed, setTyped] = useState<WindowTyped>(() => ({
+    ...NO_WINDOW_TYPED,
+    draft: current ? windowDraft(current) : open ? windowDraftEmpty(open.value.medicine) : EMPTY_WINDOW,
+  }));
   if (!open) return null;
   const isReadOnly = open.role === "reader";
-  const { medicine } = open.value;
-
-  const change = (next: WindowDraft) => {
-    setDraft(next);
-    setAsked(null);
-  };
-  const set = (taken: WindowDraft, isConfirmed: boolean) => {
-    const read = windowDraftRead(taken);
-    if (!read.ok) return;
-    change(taken);
-    edit("windowSet", { window: { ...read.value, ...(isConfirmed ? { confirmed: true as const } : {}) } });
-  };
-  const send = (event: FormEvent) => {
-    event.preventDefault();
-    setSent(true);
-    const read = windowDraftRead(draft);
-    if (!read.ok) return;
-    if (current?.confirmed === true && isSameRange(current, read.value)) return set(draft, true);
-    const ask = windowAsk(draft, medicine);
-    if (ask) setAsked(ask);
-    else set(draft, false);
-  };
   return (
     <div className="entry-panel">
       <p>
@@ -85,31 +53,20 @@ export function WindowEntry({ onDone }: WindowEntryProps) {
         }}
       />
       {isOwn && !isReadOnly ? (
-        <form className="entry-panel-form entry-panel-inset" onSubmit={send} noValidate>
-          <WindowFields
-            draft={draft}
-            onChange={change}
-            molarMass={medicine.molarMass.value}
-            isTold={isSent}
-            units={windowUnitsFor(draft, medicine)}
-            question={
-              asked
-                ? {
-                    text: asked.text,
-                    answers: asked.answers.map((answer) => ({
-                      label: answer.label,
-                      onAnswer: () => set(answer.draft, answer.isConfirmed),
-                    })),
-                  }
-                : undefined
-            }
-          />
+        <WindowForm
+          className="entry-panel-form entry-panel-inset"
+          typed={typed}
+          onTyped={setTyped}
+          record={open.value.medicine}
+          isAnswered={(window) => current?.confirmed === true && isSameRange(current, window)}
+          onWindow={(window) => edit("windowSet", { window })}
+        >
           <div>
             <Button kind="main" type="submit">
               {windowWords.set}
             </Button>
           </div>
-        </form>
+        </WindowForm>
       ) : null}
       {current && !isReadOnly ? (
         <div>

@@ -1,4 +1,4 @@
-import { type FormEvent, useState } from "react";
+import { useState } from "react";
 import type { TargetWindow } from "../../core/case/index.ts";
 import type { MedicineRecord } from "../../core/medicine/index.ts";
 import { issueMessage, medicinesWords } from "../../core/messages/index.ts";
@@ -8,15 +8,8 @@ import { Button } from "../ui/Button.tsx";
 import { DataTable } from "../ui/DataTable.tsx";
 import { Notice } from "../ui/Notice.tsx";
 import { partId } from "../ui/partId.ts";
-import { WindowFields } from "../ui/WindowFields.tsx";
-import {
-  type WindowAsk,
-  type WindowDraft,
-  windowAsk,
-  windowDraftEmpty,
-  windowDraftRead,
-  windowUnitsFor,
-} from "../ui/windowDraft.ts";
+import { NO_WINDOW_TYPED, WindowForm } from "../ui/WindowForm.tsx";
+import { type WindowDraft, windowDraftEmpty } from "../ui/windowDraft.ts";
 import { windowValue } from "./recordRows.ts";
 
 export interface WardWindowsProps {
@@ -28,33 +21,14 @@ export interface WardWindowsProps {
 
 /** The windows a ward keeps of its own for one medicine, offered on the bench beside those of the record. */
 export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsProps) {
-  const [draft, setDraft] = useState<WindowDraft | null>(null);
-  const [isSent, setSent] = useState(false);
-  const [asked, setAsked] = useState<WindowAsk | null>(null);
+  const [typed, setTyped] = useState(NO_WINDOW_TYPED);
   const [faults, setFaults] = useState<readonly Issue[]>([]);
 
-  const change = (next: WindowDraft | null) => {
-    setDraft(next);
-    setAsked(null);
-  };
-  const store = async (taken: WindowDraft, isConfirmed: boolean) => {
-    const read = windowDraftRead(taken);
-    if (!read.ok) return;
-    change(taken);
-    const window = { ...read.value, ...(isConfirmed ? { confirmed: true as const } : {}) };
+  const type = (draft: WindowDraft | null) => setTyped({ ...typed, draft, asked: null });
+  const store = async (window: TargetWindow) => {
     const outcome = await onSave(record.id, partId(), window);
     setFaults(outcome.ok ? [] : outcome.issues);
-    if (!outcome.ok) return;
-    change(null);
-    setSent(false);
-  };
-  const send = async (event: FormEvent) => {
-    event.preventDefault();
-    setSent(true);
-    if (!draft || !windowDraftRead(draft).ok) return;
-    const ask = windowAsk(draft, record);
-    if (ask) setAsked(ask);
-    else await store(draft, false);
+    if (outcome.ok) setTyped(NO_WINDOW_TYPED);
   };
   const remove = async (id: string) => {
     const outcome = await onRemove(record.id, id);
@@ -92,36 +66,24 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
           <p>{issueMessage(fault)}</p>
         </Notice>
       ))}
-      {draft ? (
-        <form className="ward-windows-form" onSubmit={(event) => void send(event)} noValidate>
-          <WindowFields
-            draft={draft}
-            onChange={change}
-            molarMass={record.molarMass.value}
-            isTold={isSent}
-            units={windowUnitsFor(draft, record)}
-            question={
-              asked
-                ? {
-                    text: asked.text,
-                    answers: asked.answers.map((answer) => ({
-                      label: answer.label,
-                      onAnswer: () => void store(answer.draft, answer.isConfirmed),
-                    })),
-                  }
-                : undefined
-            }
-          />
+      {typed.draft ? (
+        <WindowForm
+          className="ward-windows-form"
+          typed={typed}
+          onTyped={setTyped}
+          record={record}
+          onWindow={(window) => void store(window)}
+        >
           <div className="dialog-actions">
-            <Button onPress={() => change(null)}>{medicinesWords.cancel}</Button>
+            <Button onPress={() => type(null)}>{medicinesWords.cancel}</Button>
             <Button kind="main" type="submit">
               {medicinesWords.wardWindowStore}
             </Button>
           </div>
-        </form>
+        </WindowForm>
       ) : (
         <div>
-          <Button onPress={() => change(windowDraftEmpty(record))}>{medicinesWords.wardWindowAdd}</Button>
+          <Button onPress={() => type(windowDraftEmpty(record))}>{medicinesWords.wardWindowAdd}</Button>
         </div>
       )}
     </div>

@@ -1,13 +1,7 @@
 import { type ReactNode, useId } from "react";
-import { Button } from "./Button.tsx";
-import { GravityMark } from "./GravityMark.tsx";
+import { FieldSaid } from "./FieldSaid.tsx";
+import type { FieldQuestion } from "./fieldQuestion.ts";
 import "./FieldFrame.css";
-
-/** What was typed can be meant, but is odd: asked about, never changed silently. */
-export interface FieldQuestion {
-  readonly text: string;
-  readonly answers: readonly { readonly label: string; readonly onAnswer: () => void }[];
-}
 
 /** What the control itself has to carry so that label, description and fault are read with it. */
 export interface FieldWiring {
@@ -64,28 +58,7 @@ export function FieldFrame({
           {reading}
         </p>
       ) : null}
-      <div role="status" className="field-frame-said" id={`${id}-said`}>
-        {fault ? (
-          <p className="field-frame-fault">
-            <GravityMark gravity="stop" /> {fault}
-          </p>
-        ) : null}
-        {question && !fault ? (
-          <p className="field-frame-asked">
-            <GravityMark gravity="check" /> {question.text}
-          </p>
-        ) : null}
-      </div>
-      {question && !fault ? (
-        // biome-ignore lint/a11y/useSemanticElements: a fieldset would need its own visible legend; the question is the legend
-        <div className="field-frame-answers" role="group" aria-labelledby={`${id}-said`}>
-          {question.answers.map((answer) => (
-            <Button key={answer.label} onPress={answer.onAnswer}>
-              {answer.label}
-            </Button>
-          ))}
-        </div>
-      ) : null}
+      <FieldSaid id={`${id}-said`} fault={fault} question={question} />
     </div>
   );
 }

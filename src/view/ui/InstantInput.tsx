@@ -1,7 +1,8 @@
 import { type KeyboardEvent, useState } from "react";
 import { fieldWords, issueMessage } from "../../core/messages/index.ts";
 import { instantMs, instantRead, instantText } from "../../core/time/index.ts";
-import { FieldFrame, type FieldQuestion } from "./FieldFrame.tsx";
+import { FieldFrame } from "./FieldFrame.tsx";
+import type { FieldQuestion } from "./fieldQuestion.ts";
 
 export interface InstantInputProps {
   readonly label: string;

@@ -2,14 +2,11 @@ import { useState } from "react";
 import { issueMessage } from "../../core/messages/index.ts";
 import type { Issue } from "../../core/result/index.ts";
 import type { Quantity, UnitCode } from "../../core/units/index.ts";
+import { type FieldAsk, fieldQuestion } from "./fieldQuestion.ts";
 import { QuantityInput } from "./QuantityInput.tsx";
 import { isDraftEmpty, type QuantityDraft, quantityDraft, quantityDraftRead } from "./quantityDraft.ts";
 
-/** An odd value, asked about: every answer is a value to take; `isConfirmed` when it is the one that was typed. */
-export interface QuantityAsk<U extends UnitCode> {
-  readonly text: string;
-  readonly answers: readonly { readonly label: string; readonly value: Quantity<U>; readonly isConfirmed: boolean }[];
-}
+export type QuantityAsk<U extends UnitCode> = FieldAsk<Quantity<U>>;
 
 export type QuantityLook<U extends UnitCode> =
   | { readonly kind: "fine" }
@@ -83,15 +80,7 @@ export function QuantityField<U extends UnitCode>(props: QuantityFieldProps<U>) 
       isReadOnly={props.isReadOnly ?? false}
       isLabelHidden={props.isLabelHidden ?? false}
       fault={fault}
-      question={
-        asked && {
-          text: asked.text,
-          answers: asked.answers.map((answer) => ({
-            label: answer.label,
-            onAnswer: () => take(answer.value, answer.isConfirmed),
-          })),
-        }
-      }
+      question={fieldQuestion(asked, take)}
       onChange={(next) => {
         setFault(undefined);
         setAsked(undefined);

@@ -1,7 +1,8 @@
 import { type KeyboardEvent, useState } from "react";
 import { issueMessage } from "../../core/messages/index.ts";
 import { type UnitCode, unitSpoken } from "../../core/units/index.ts";
-import { FieldFrame, type FieldQuestion } from "./FieldFrame.tsx";
+import { FieldFrame } from "./FieldFrame.tsx";
+import type { FieldQuestion } from "./fieldQuestion.ts";
 import { isDraftEmpty, type QuantityDraft, quantityDraftRead } from "./quantityDraft.ts";
 import "./QuantityInput.css";
 

@@ -3,10 +3,9 @@ import { windowDrawnAt } from "../../core/analysis/index.ts";
 import type { TargetWindow } from "../../core/case/index.ts";
 import { issueMessage, windowAboutWords, windowQuantityWord, windowWords } from "../../core/messages/index.ts";
 import { quantityConvert, quantityPrint, unitDimension, unitSpoken } from "../../core/units/index.ts";
-import { Button } from "./Button.tsx";
 import { ChoiceField } from "./ChoiceField.tsx";
-import type { FieldQuestion } from "./FieldFrame.tsx";
-import { GravityMark } from "./GravityMark.tsx";
+import { FieldSaid } from "./FieldSaid.tsx";
+import type { FieldQuestion } from "./fieldQuestion.ts";
 import { TextField } from "./TextField.tsx";
 import { type WindowDraft, type WindowUnit, windowDraftRead, windowUnits } from "./windowDraft.ts";
 import "./WindowFields.css";
@@ -78,23 +77,7 @@ export function WindowFields({
           onChoose={(unit) => onChange({ ...draft, unit })}
         />
       </div>
-      <div role="status" className="field-frame-said" id={askedId}>
-        {question ? (
-          <p className="field-frame-asked">
-            <GravityMark gravity="check" /> {question.text}
-          </p>
-        ) : null}
-      </div>
-      {question ? (
-        // biome-ignore lint/a11y/useSemanticElements: a fieldset would need its own visible legend; the question is the legend
-        <div className="field-frame-answers" role="group" aria-labelledby={askedId}>
-          {question.answers.map((answer) => (
-            <Button key={answer.label} onPress={answer.onAnswer}>
-              {answer.label}
-            </Button>
-          ))}
-        </div>
-      ) : null}
+      <FieldSaid id={askedId} question={question} />
       {draft.about === "trough" ? (
         <div className="window-fields-drawn">
           <TextField

@@ -3,6 +3,7 @@ import { concentrationUnits, LATEST_DRAW_H, type MedicineRecord } from "../../co
 import { fail, type Issue, issue, type Result, succeed } from "../../core/result/index.ts";
 import { numberPlain, numberRead, type Quantity, quantityConvert, unitSpoken } from "../../core/units/index.ts";
 import { concentrationAsk } from "./concentrationAsk.ts";
+import type { FieldAsk } from "./fieldQuestion.ts";
 
 export const WINDOW_UNITS = ["mg/L", "ug/mL", "ug/L", "ng/mL", "umol/L", "nmol/L", "mmol/L", "mg.h/L"] as const;
 export type WindowUnit = (typeof WINDOW_UNITS)[number];
@@ -60,11 +61,8 @@ export function windowDraftEmpty(record: MedicineRecord): WindowDraft {
   return { ...EMPTY_WINDOW, unit: record.displayUnit };
 }
 
-/**
- * Asks about a window whose middle is everyday for the medicine only in another unit, or far from all it is used at.
- * Every answer is a draft to take; `isConfirmed` when it is the one that was typed.
- */
-export function windowAsk(draft: WindowDraft, record: MedicineRecord): WindowAsk | null {
+/** Asks about a window whose middle is everyday for the medicine only in another unit, or far from all it is used at. */
+export function windowAsk(draft: WindowDraft, record: MedicineRecord): FieldAsk<WindowDraft> | null {
   const { unit, about } = draft;
   const [low, high] = [numberRead(draft.low), numberRead(draft.high)];
   if (about === "auc24" || unit === "mg.h/L" || !low.ok || !high.ok) return null;
@@ -73,19 +71,10 @@ export function windowAsk(draft: WindowDraft, record: MedicineRecord): WindowAsk
   const ask = concentrationAsk({ value: (low.value + high.value) / 2, unit }, record, print);
   return (
     ask && {
-      text: ask.text,
-      answers: ask.answers.map(({ label, value, isConfirmed }) => ({
-        label,
-        draft: { ...draft, unit: value.unit },
-        isConfirmed,
-      })),
+      ...ask,
+      answers: ask.answers.map((answer) => ({ ...answer, value: { ...draft, unit: answer.value.unit } })),
     }
   );
-}
-
-export interface WindowAsk {
-  readonly text: string;
-  readonly answers: readonly { readonly label: string; readonly draft: WindowDraft; readonly isConfirmed: boolean }[];
 }
 
 /** The window as stored, or an issue a field: path "about", "low", "high", "drawFrom", "drawTo" or "basis". */
