@@ -2,6 +2,7 @@ import { UNIT_CODES, unitSpoken } from "../units/index.ts";
 import { either, said } from "./either.ts";
 import { formulaMessages } from "./formulaMessages.ts";
 import type { MessageFunction } from "./messageFunction.ts";
+import { recordWords } from "./recordWords.ts";
 
 type Data = Parameters<MessageFunction>[0];
 
@@ -9,6 +10,11 @@ type Data = Parameters<MessageFunction>[0];
 function unitWord(unit: unknown): string {
   const known = UNIT_CODES.find((code) => code === unit);
   return known ? unitSpoken(known, "screen") : String(unit);
+}
+
+/** What a population's range is of: covariates as on screen, but a range is of "sex", not of "female sex". */
+function rangedWord(covariate: unknown): string {
+  return covariate === "isFemale" ? "sex" : (recordWords.covariates[String(covariate)] ?? String(covariate));
 }
 
 function quoted(list: unknown): string {
@@ -146,8 +152,8 @@ export const medicineMessages: Readonly<Record<string, MessageFunction>> = {
     `The record is of version ${String(found)}, made by a newer version of the program; this one reads up to version ${String(known)}.`,
   "record-population-range": ({ covariate, low, high, unit }) =>
     low === null && high === null
-      ? `The range of ${COVARIATE_NAMES_SAID[String(covariate)] ?? String(covariate)} in the population states neither its low nor its high end.`
-      : `The range of ${COVARIATE_NAMES_SAID[String(covariate)] ?? String(covariate)} in the population, ${String(low ?? "open")} to ${String(high ?? "open")} ${String(unit)}, is not possible: its ends must be 0 or more, the low one not above the high one.`,
+      ? `The range of ${rangedWord(covariate)} in the population states neither its low nor its high end.`
+      : `The range of ${rangedWord(covariate)} in the population, ${String(low ?? "open")} to ${String(high ?? "open")} ${String(unit)}, is not possible: its ends must be 0 or more, the low one not above the high one.`,
   "record-variability": (data) =>
     `${at(data)} varies something that the record's kinetics do not have: use ${either(data.possible)}.`,
   "record-correlation-between": (data) =>
@@ -175,17 +181,4 @@ export const medicineMessages: Readonly<Record<string, MessageFunction>> = {
     `A dose of ${String(found)} ${String(unit)} can't be given: write an amount above 0.`,
   "dose-unit-mismatch": ({ unit, product, allowed }) =>
     `The ${String(product)} is not measured in ${unitWord(unit)}: write ${either((allowed as readonly unknown[]).map(unitWord))}.`,
-};
-
-const COVARIATE_NAMES_SAID: Readonly<Record<string, string>> = {
-  weight: "weight",
-  idealWeight: "ideal weight",
-  adjustedWeight: "adjusted weight",
-  leanWeight: "lean weight",
-  height: "height",
-  age: "age",
-  creatinineClearance: "creatinine clearance",
-  albumin: "albumin",
-  bodySurface: "body surface",
-  isFemale: "sex",
 };

@@ -8,7 +8,7 @@ export type StorageState =
       /** How many cases are concerned; null when nothing was noted outside the database. */
       readonly cases: number | null;
       readonly lastSavedAt: number | null;
-      /** How many of them have a second copy that `restoreCopies` can put back. */
+      /** How many of them have a second copy which `acceptLoss` puts back. */
       readonly recoverable: number;
       readonly detail: string;
     }
