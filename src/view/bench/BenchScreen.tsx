@@ -59,8 +59,11 @@ export function BenchScreen({ onPrint }: BenchScreenProps) {
   const analysis = open?.analysis.result ?? null;
   const value = open ? (open.preview ?? open.value) : null;
   const whole = analysis ? { fromH: analysis.clock.fromH, toH: analysis.clock.toH } : null;
-  const span =
-    whole && analysis ? (chosenSpan ? spanWithin(whole, chosenSpan) : spanStart(whole, analysis.clock.nowH)) : null;
+  const span = useMemo(() => {
+    if (!analysis) return null;
+    const { nowH, fromH, toH } = analysis.clock;
+    return chosenSpan ? spanWithin({ fromH, toH }, chosenSpan) : spanStart({ fromH, toH }, nowH, width - RIGHT);
+  }, [analysis, chosenSpan, width]);
 
   const lanes = useMemo(() => {
     if (!value || !analysis) return null;

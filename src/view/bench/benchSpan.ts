@@ -6,9 +6,23 @@ export interface BenchSpan {
 
 const SHORTEST_H = 6;
 
-/** What is shown of a case at first: the last four days of the past and the first five of the future, or all if it is less. */
-export function spanStart(whole: BenchSpan, nowH: number): BenchSpan {
-  return spanWithin(whole, { fromH: Math.max(whole.fromH, nowH - 4 * 24), toH: Math.min(whole.toH, nowH + 5 * 24) });
+const DAYS_BEFORE = 4;
+const DAYS_AFTER = 5;
+const DAYS_LEAST = 2;
+/** Room of a day in which its name and the doses of a 12-hourly line can be told apart, px. */
+const DAY_ROOM = 56;
+
+/**
+ * What is shown of a case at first: the last four days of the past and the first five of the future, or all if it is less; where `width`, px,
+ * has no room for so many, as many days as it has, in the same proportion.
+ */
+export function spanStart(whole: BenchSpan, nowH: number, width: number): BenchSpan {
+  const room = Math.max(DAYS_LEAST, width / DAY_ROOM);
+  const share = Math.min(1, room / (DAYS_BEFORE + DAYS_AFTER));
+  return spanWithin(whole, {
+    fromH: Math.max(whole.fromH, nowH - DAYS_BEFORE * share * 24),
+    toH: Math.min(whole.toH, nowH + DAYS_AFTER * share * 24),
+  });
 }
 
 /** `span` moved and cut to lie inside `whole`. */
