@@ -30,7 +30,8 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
   const weights = observations.filter((one) => one.kind === "weight");
   const creatinines = observations.filter((one) => one.kind === "serumCreatinine");
   const albumins = observations.filter((one) => one.kind === "albumin");
-  const add = (observation: Observation) => edit("observationAdd", { observation });
+  const add = (observation: Observation, isConfirmed: boolean) =>
+    edit("observationAdd", { observation: isConfirmed ? { ...observation, confirmed: true } : observation });
   const shared = { value, isReadOnly, onRemove: (id: string) => edit("observationRemove", { id }) };
   return (
     <div className="entry-panel">
@@ -76,9 +77,7 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
         units={["kg", "[lb_av]"]}
         unit={weights.at(-1)?.quantity.unit ?? "kg"}
         look={(typed) => weightLook(typed, known)}
-        onAdd={(at, quantity, isConfirmed) =>
-          add({ id: partId(), at, kind: "weight", quantity, ...(isConfirmed ? { confirmed: true } : {}) })
-        }
+        onAdd={(at, quantity, isConfirmed) => add({ id: partId(), at, kind: "weight", quantity }, isConfirmed)}
       />
       <ObservationEntry
         {...shared}
@@ -92,15 +91,7 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
         units={["mg/dL", "umol/L"]}
         unit={creatinines.at(-1)?.quantity.unit ?? "mg/dL"}
         look={creatinineLook}
-        onAdd={(at, quantity, isConfirmed) =>
-          add({
-            id: partId(),
-            at,
-            kind: "serumCreatinine",
-            quantity,
-            ...(isConfirmed ? { confirmed: true } : {}),
-          })
-        }
+        onAdd={(at, quantity, isConfirmed) => add({ id: partId(), at, kind: "serumCreatinine", quantity }, isConfirmed)}
       />
       <ObservationEntry
         {...shared}
@@ -114,9 +105,7 @@ export function PatientPanel({ onDone }: PatientPanelProps) {
         units={["g/L", "g/dL"]}
         unit={albumins.at(-1)?.quantity.unit ?? "g/L"}
         look={albuminLook}
-        onAdd={(at, quantity, isConfirmed) =>
-          add({ id: partId(), at, kind: "albumin", quantity, ...(isConfirmed ? { confirmed: true } : {}) })
-        }
+        onAdd={(at, quantity, isConfirmed) => add({ id: partId(), at, kind: "albumin", quantity }, isConfirmed)}
       />
       <p className="entry-panel-soft">{patientWords.latest}</p>
       <PatientFigures value={value} figures={open.analysis.result?.patient ?? null} />
