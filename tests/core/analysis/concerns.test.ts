@@ -6,6 +6,7 @@ import type { Case } from "../../../src/core/case/index.ts";
 import { recordById } from "../../../src/core/medicine/index.ts";
 import { CONCERN_CODES, concernMessage, FIT_CONCERN_CODES } from "../../../src/core/messages/index.ts";
 import { RECORD_CONCERN_CODES } from "../../../src/core/messages/recordConcernMessages.ts";
+import { orderedLine } from "../case/orderedLine.ts";
 import { caseFixture } from "./caseFixture.ts";
 
 const base = caseFixture();
@@ -16,14 +17,7 @@ const level = (change: Partial<Case["levels"][number]> = {}): Case["levels"][num
   kind: "measured",
   ...change,
 });
-const line = (change: Partial<Case["given"][number]> = {}): Case["given"][number] => ({
-  id: "x",
-  product: "tablet-12h",
-  amount: { value: 300, unit: "mg" },
-  start: "2026-03-04T20:00:00+00:00",
-  repeat: { every: { value: 12, unit: "h" } },
-  ...change,
-});
+const line = (change: Partial<Case["given"][number]> = {}) => orderedLine({ id: "x", ...change });
 const option = (lines: Case["given"], id = "A"): Case["options"][number] => ({ id, label: "", chosen: false, lines });
 const record = base.medicine;
 

@@ -10,7 +10,8 @@ import {
   casePrint,
   EDIT_NAMES,
 } from "../../../src/core/case/index.ts";
-import { recordOf, sampleCase } from "./sampleCase.ts";
+import { recordOf } from "../medicine/recordOf.ts";
+import { sampleCase } from "./sampleCase.ts";
 
 const ENGINE = "test-engine 1";
 const fingerprint = (value: Case) => caseFingerprint(value, ENGINE);

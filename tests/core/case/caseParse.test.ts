@@ -2,7 +2,8 @@ import { describe, expect, it } from "vitest";
 import { caseNew, caseParse, casePrint, caseValidate } from "../../../src/core/case/index.ts";
 import { issueMessage } from "../../../src/core/messages/index.ts";
 import type { Issue } from "../../../src/core/result/index.ts";
-import { recordOf, sampleCase } from "./sampleCase.ts";
+import { recordOf } from "../medicine/recordOf.ts";
+import { sampleCase } from "./sampleCase.ts";
 
 /** A case as short as one can be, on one line, with letters of two bytes. */
 const demoxiline = recordOf("demoxiline");

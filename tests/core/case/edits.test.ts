@@ -1,7 +1,8 @@
 import { describe, expect, it } from "vitest";
 import { type Case, caseEdit, caseEditTry, caseNew, EDIT_NAMES, optionNextId } from "../../../src/core/case/index.ts";
 import { editLabel } from "../../../src/core/messages/index.ts";
-import { recordOf, sampleCase } from "./sampleCase.ts";
+import { recordOf } from "../medicine/recordOf.ts";
+import { sampleCase } from "./sampleCase.ts";
 
 const before: Case = sampleCase();
 const mg = (value: number) => ({ value, unit: "mg" as const });

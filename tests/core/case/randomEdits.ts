@@ -9,7 +9,7 @@ import {
 } from "../../../src/core/case/index.ts";
 import { doseLineCount, doseLineScheduledMs } from "../../../src/core/regimen/index.ts";
 import { instantIso } from "../../../src/core/time/index.ts";
-import { recordOf } from "./sampleCase.ts";
+import { recordOf } from "../medicine/recordOf.ts";
 
 /** One random edit: its name and numbers from which its arguments are made, fitting whatever case it meets. */
 export interface EditStep {

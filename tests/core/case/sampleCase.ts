@@ -1,26 +1,14 @@
-import { type Case, caseNew } from "../../../src/core/case/index.ts";
-import { type MedicineRecord, recordById } from "../../../src/core/medicine/index.ts";
-
-export function recordOf(id: string): MedicineRecord {
-  const record = recordById(id);
-  if (!record) throw new Error(`no record ${id}`);
-  return record;
-}
+import type { Case } from "../../../src/core/case/index.ts";
+import { caseBegun } from "./caseBegun.ts";
+import { orderedLine } from "./orderedLine.ts";
 
 /** An invented case with something in every part of it. */
 export function sampleCase(): Case {
+  const begun = caseBegun("sample-1", "Sample ward 1, bed 2");
   return {
-    ...caseNew({
-      id: "sample-1",
-      label: "Sample ward 1, bed 2",
-      timeZone: "Europe/Lisbon",
-      now: "2026-03-04T12:00:00+00:00",
-      medicine: recordOf("theophylline"),
-    }),
+    ...begun,
     patient: {
-      sex: "female",
-      age: { value: 64, unit: "a" },
-      height: { value: 162, unit: "cm" },
+      ...begun.patient,
       observations: [
         { id: "o1", at: "2026-03-01T08:00:00+00:00", kind: "weight", quantity: { value: 58, unit: "kg" } },
         { id: "o2", at: "2026-03-02T07:00:00+00:00", kind: "serumCreatinine", quantity: { value: 1, unit: "mg/dL" } },
@@ -35,12 +23,6 @@ export function sampleCase(): Case {
       factors: [
         { kind: "meal", from: "2026-03-02T12:00:00+00:00", to: "2026-03-02T12:30:00+00:00", detail: "invented" },
       ],
-    },
-    window: {
-      quantity: "lowest-and-highest",
-      low: { value: 8, unit: "mg/L" },
-      high: { value: 15, unit: "mg/L" },
-      basis: "invented ward policy",
     },
     given: [
       {
@@ -71,35 +53,20 @@ export function sampleCase(): Case {
         id: "A",
         label: "300 mg every 12 h",
         chosen: true,
-        lines: [
-          {
-            id: "a1",
-            product: "tablet-12h",
-            amount: { value: 300, unit: "mg" },
-            start: "2026-03-04T20:00:00+00:00",
-            repeat: { every: { value: 12, unit: "h" }, count: 10 },
-          },
-        ],
+        lines: [orderedLine({ id: "a1", repeat: { every: { value: 12, unit: "h" }, count: 10 } })],
       },
       {
         id: "B",
         label: "",
         chosen: false,
         lines: [
-          {
+          orderedLine({
             id: "b1",
-            product: "tablet-12h",
             amount: { value: 200, unit: "mg" },
             start: "2026-03-05T08:00:00+00:00",
             repeat: { clock: ["08:00"], days: 5 },
-          },
-          {
-            id: "b2",
-            product: "tablet-12h",
-            amount: { value: 300, unit: "mg" },
-            start: "2026-03-04T22:00:00+00:00",
-            repeat: { clock: ["22:00"] },
-          },
+          }),
+          orderedLine({ id: "b2", start: "2026-03-04T22:00:00+00:00", repeat: { clock: ["22:00"] } }),
         ],
       },
     ],

@@ -1,7 +1,7 @@
 import { expect, test } from "vitest";
 import { doseStepped, type Product, productOf } from "../../../src/core/medicine/index.ts";
 import { VOLUME_STEP_ML, volumeSteps } from "../../../src/core/regimen/index.ts";
-import { recordOf } from "../case/sampleCase.ts";
+import { recordOf } from "./recordOf.ts";
 
 const record = recordOf("theophylline");
 const tablet: Product = productOf(record, "tablet-12h");

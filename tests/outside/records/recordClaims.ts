@@ -7,8 +7,9 @@ import {
 } from "../../../src/core/medicine/index.ts";
 import type { DoseAmount } from "../../../src/core/regimen/index.ts";
 import { quantityConvert, type UnitCode } from "../../../src/core/units/index.ts";
+import { recordOf } from "../../core/medicine/recordOf.ts";
 import { expectWithin } from "./expectFigure.ts";
-import { recordAverage, recordHalfLife, recordNamed, recordValue, recordWindow } from "./recordFigure.ts";
+import { recordAverage, recordHalfLife, recordValue, recordWindow } from "./recordFigure.ts";
 
 /** What published figures say a record must give; where each was read stands beside it. */
 export interface RecordClaims {
@@ -73,7 +74,7 @@ function foundLevel(record: MedicineRecord, patient: Covariates, claim: AverageC
 
 export function recordClaims({ record: id, patient, averages, spans, windows }: RecordClaims): void {
   describe(`the ${id} record`, () => {
-    const record = recordNamed(id);
+    const record = recordOf(id);
 
     it.each(averages)("$what: $wanted $unit within 2 %", (claim) => {
       expectWithin(foundLevel(record, patient, claim), claim.wanted, AVERAGE_TOLERANCE);

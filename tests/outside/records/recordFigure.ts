@@ -9,18 +9,11 @@ import {
   type MedicineRecord,
   productAbsorption,
   productOf,
-  recordById,
 } from "../../../src/core/medicine/index.ts";
 import type { DoseAmount } from "../../../src/core/regimen/index.ts";
 import { quantityConvert, type UnitCode } from "../../../src/core/units/index.ts";
 
 /** What a built-in record gives for a patient, by the road the program takes: record, formula, product, steady state. */
-
-export function recordNamed(id: string): MedicineRecord {
-  const record = recordById(id);
-  if (!record) throw new RangeError(`id: no built-in record "${id}"`);
-  return record;
-}
 
 /** A formula of the record's kinetics with the patient's figures put in, in the unit its kind wants. */
 export function recordValue(record: MedicineRecord, name: KineticsFormulaName, covariates: Covariates): number {

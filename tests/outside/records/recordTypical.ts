@@ -1,11 +1,11 @@
 import type { Covariates, KineticsFormulaName } from "../../../src/core/medicine/index.ts";
 import type { UnitCode } from "../../../src/core/units/index.ts";
+import { recordOf } from "../../core/medicine/recordOf.ts";
 import {
   type Course,
   recordAverage,
   recordFactor,
   recordHalfLife,
-  recordNamed,
   recordPeakTime,
   recordValue,
   recordWindow,
@@ -13,7 +13,7 @@ import {
 
 /** A built-in record and the typical patient of its checks: what the record gives for them, where no other patient is named. */
 export function recordTypical(id: string, typical: Covariates) {
-  const record = recordNamed(id);
+  const record = recordOf(id);
   return {
     record,
     value: (name: KineticsFormulaName, patient = typical) => recordValue(record, name, patient),

@@ -4,7 +4,8 @@ import { describe, expect, it } from "vitest";
 import { buildSummary } from "../../../src/view/summary/buildSummary.ts";
 import { SummarySheet } from "../../../src/view/summary/SummarySheet.tsx";
 import type { SummaryInput } from "../../../src/view/summary/summaryInput.ts";
-import { caseOrdering, orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
+import { caseOrdering, summaryCase, summaryInputOf } from "./summaryFixture.ts";
 
 function show(input: SummaryInput) {
   const model = buildSummary(input);
@@ -78,7 +79,7 @@ describe("SummarySheet", () => {
     ["one line", summaryInputOf(summaryCase({ demo: true }))],
     [
       "two lines, one not makeable, stale",
-      summaryInputOf(caseOrdering([orderedLine({}), orderedLine({ id: "b", amount: { value: 130, unit: "mg" } })]), {
+      summaryInputOf(caseOrdering([orderedLine(), orderedLine({ id: "b", amount: { value: 130, unit: "mg" } })]), {
         revision: 15,
       }),
     ],

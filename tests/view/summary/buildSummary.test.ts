@@ -5,7 +5,8 @@ import { buildSummary, fingerprintGroups } from "../../../src/view/summary/build
 import { formulaPrint } from "../../../src/view/summary/figuresText.ts";
 import type { SummaryInput } from "../../../src/view/summary/summaryInput.ts";
 import type { SummaryModel, SummaryRow } from "../../../src/view/summary/summaryModel.ts";
-import { caseOrdering, orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
+import { caseOrdering, summaryCase, summaryInputOf } from "./summaryFixture.ts";
 
 const plain = <T>(value: T): T => JSON.parse(JSON.stringify(value).replaceAll("\u00a0", " ")) as T;
 const summary = (change: Partial<Case> = {}, input: Partial<SummaryInput> = {}): SummaryModel =>
@@ -156,7 +157,7 @@ describe("readings", () => {
   });
 
   it("are over the stated days when there is no steady state", () => {
-    const { repeat: _, ...single } = orderedLine({});
+    const { repeat: _, ...single } = orderedLine();
     const { expected } = plain(buildSummary(summaryInputOf(caseOrdering([single]))));
     expect(expected?.title).toBe("Expected over the days shown, typical patient");
     expect(expected?.remark).toContain("The option does not repeat, so it has no steady state.");

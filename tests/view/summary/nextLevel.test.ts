@@ -3,7 +3,8 @@ import { describe, expect, it } from "vitest";
 import type { Case } from "../../../src/core/case/index.ts";
 import { instantMs, MS_PER_HOUR } from "../../../src/core/time/index.ts";
 import { buildSummary } from "../../../src/view/summary/buildSummary.ts";
-import { caseOrdering, orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
+import { caseOrdering, summaryCase, summaryInputOf } from "./summaryFixture.ts";
 
 const sentences = (value: Case) => buildSummary(summaryInputOf(value)).nextLevel.sentences;
 const WRITE = "Write the time of the last dose and of the sample on the request.";
@@ -76,7 +77,7 @@ describe("when to draw the next level", () => {
   });
 
   it("leaves it to the clinical question without a steady state, a model or an option", () => {
-    const { repeat: _, ...single } = orderedLine({});
+    const { repeat: _, ...single } = orderedLine();
     expect(sentences(caseOrdering([single]))[0]).toBe("The option does not repeat, so it has no steady state.");
     expect(sentences(summaryCase({ options: [] }))).toEqual(["No option is chosen, so no time can be given."]);
     expect(sentences(summaryCase({ patient: { observations: [], factors: [] } }))).toEqual([

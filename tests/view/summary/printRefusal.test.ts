@@ -3,11 +3,12 @@ import { describe, expect, it } from "vitest";
 import { issueMessage } from "../../../src/core/messages/index.ts";
 import { printRefusal } from "../../../src/view/summary/printRefusal.ts";
 import type { SummaryInput } from "../../../src/view/summary/summaryInput.ts";
-import { orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
+import { summaryCase, summaryInputOf } from "./summaryFixture.ts";
 
 const good = summaryInputOf(summaryCase());
 const optioned = (options: SummaryInput["case"]["options"]) => summaryInputOf(summaryCase({ options }));
-const option = { id: "A", label: "", chosen: true, lines: [orderedLine({})] };
+const option = { id: "A", label: "", chosen: true, lines: [orderedLine()] };
 
 const TABLE: readonly (readonly [name: string, input: SummaryInput, code: string | null])[] = [
   ["all is saved and fresh", good, null],

@@ -6,8 +6,9 @@ import type { DoseLine } from "../../../src/core/regimen/index.ts";
 import { forbiddenForms } from "../../../src/core/units/index.ts";
 import { buildSummary, fingerprintGroups } from "../../../src/view/summary/buildSummary.ts";
 import type { SummaryInput } from "../../../src/view/summary/summaryInput.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
 import { demoCase } from "../../fixtures/demoCase.ts";
-import { caseOrdering, orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
+import { caseOrdering, summaryCase, summaryInputOf } from "./summaryFixture.ts";
 
 /** Every string of a value, with its path. */
 function strings(value: unknown, path = "model"): readonly (readonly [path: string, text: string])[] {

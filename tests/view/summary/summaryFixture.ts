@@ -1,37 +1,25 @@
 import { type Analysis, derive } from "../../../src/core/analysis/index.ts";
-import { type Case, caseNew } from "../../../src/core/case/index.ts";
-import { recordById } from "../../../src/core/medicine/index.ts";
+import type { Case } from "../../../src/core/case/index.ts";
 import type { DoseLine } from "../../../src/core/regimen/index.ts";
 import type { SummaryInput } from "../../../src/view/summary/summaryInput.ts";
+import { caseBegun } from "../../core/case/caseBegun.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
 
 /** An invented case for the summary: theophylline 200 mg every 12 hours, one dose missed, two levels, 300 mg proposed. */
 export function summaryCase(change: Partial<Case> = {}, medicine = "theophylline"): Case {
   const at = "2026-03-01T08:00:00+00:00";
-  const base = caseNew({
-    id: "summary-fixture",
-    label: "Harbour ward 3, bed 12",
-    timeZone: "Europe/Lisbon",
-    now: "2026-03-04T12:00:00+00:00",
-    medicine: recordById(medicine)!,
-  });
+  const begun = caseBegun("summary-fixture", "Harbour ward 3, bed 12", medicine);
   return {
-    ...base,
+    ...begun,
     patient: {
-      sex: "female",
-      age: { value: 64, unit: "a" },
-      height: { value: 162, unit: "cm" },
+      ...begun.patient,
       observations: [
         { id: "w", at, kind: "weight", quantity: { value: 58, unit: "kg" } },
         { id: "c", at, kind: "serumCreatinine", quantity: { value: 83, unit: "umol/L" } },
       ],
       factors: [{ kind: "interacting-medicine", from: "2026-03-03T08:00:00+00:00", detail: "clarithromycin" }],
     },
-    window: {
-      quantity: "lowest-and-highest",
-      low: { value: 8, unit: "mg/L" },
-      high: { value: 15, unit: "mg/L" },
-      basis: "invented ward window",
-    },
+    window: { ...begun.window, basis: "invented ward window" },
     given: [
       {
         id: "given-1",
@@ -47,20 +35,9 @@ export function summaryCase(change: Partial<Case> = {}, medicine = "theophylline
       { id: "l2", at: "2026-03-04T07:30:00+00:00", quantity: { value: 5.2, unit: "mg/L" }, kind: "measured" },
     ],
     options: [
-      { id: "A", label: "", chosen: true, lines: [orderedLine({})] },
+      { id: "A", label: "", chosen: true, lines: [orderedLine()] },
       { id: "B", label: "less", chosen: false, lines: [orderedLine({ id: "b", amount: { value: 200, unit: "mg" } })] },
     ],
-    ...change,
-  };
-}
-
-export function orderedLine(change: Partial<DoseLine>): DoseLine {
-  return {
-    id: "a",
-    product: "tablet-12h",
-    amount: { value: 300, unit: "mg" },
-    start: "2026-03-04T20:00:00+00:00",
-    repeat: { every: { value: 12, unit: "h" } },
     ...change,
   };
 }

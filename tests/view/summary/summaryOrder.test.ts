@@ -4,7 +4,8 @@ import type { Case } from "../../../src/core/case/index.ts";
 import type { DoseLine } from "../../../src/core/regimen/index.ts";
 import { buildSummary } from "../../../src/view/summary/buildSummary.ts";
 import type { SummaryOrder } from "../../../src/view/summary/summaryModel.ts";
-import { caseOrdering, orderedLine, summaryCase, summaryInputOf } from "./summaryFixture.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
+import { caseOrdering, summaryCase, summaryInputOf } from "./summaryFixture.ts";
 
 /** The order as it is read: products, instruction and sentences of each line, then the sentences of the whole. NBSP read as space. */
 function orderText(value: Case): readonly string[] {
@@ -177,7 +178,7 @@ describe("the chosen option in plain sentences", () => {
     // Now is Wednesday 4 March 12:00; the last dose was on Monday.
     const given = [
       {
-        ...orderedLine({}),
+        ...orderedLine(),
         id: "g",
         start: "2026-02-23T08:00:00+00:00",
         repeat: { clock: ["08:00"], days: 8, weekdays: [1, 5] },
@@ -255,13 +256,13 @@ describe("the chosen option in plain sentences", () => {
   it("says that nothing was running when the given doses had ended", () => {
     const given = [
       {
-        ...orderedLine({}),
+        ...orderedLine(),
         id: "g",
         start: "2026-03-01T08:00:00+00:00",
         repeat: { every: { value: 12, unit: "h" as const }, count: 2 },
       },
     ];
-    expect(orderText(caseOrdering([orderedLine({})], { given }))).toContain("No regimen was running at the now line.");
+    expect(orderText(caseOrdering([orderedLine()], { given }))).toContain("No regimen was running at the now line.");
   });
 
   it("warns when the clocks change under an elapsed-hours interval", () => {
@@ -291,7 +292,7 @@ describe("the chosen option in plain sentences", () => {
   });
 
   it("prints no order without a chosen option, with two, or with an empty one", () => {
-    const option = { id: "A", label: "", lines: [orderedLine({})], chosen: true };
+    const option = { id: "A", label: "", lines: [orderedLine()], chosen: true };
     const without = (options: Case["options"]) => buildSummary(summaryInputOf(summaryCase({ options })));
     for (const [options, title] of [
       [[], "No option is chosen, so there is no order to print. Choose one on the bench."],
