@@ -1,6 +1,6 @@
-import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { aucAfterDose, peakAfterDose, profile, timeOfPeak } from "../../src/core/kinetics/index.ts";
+import { theophFits, theophRows } from "./theophRows.ts";
 import { relativeError } from "./workedExample.ts";
 
 /*
@@ -20,18 +20,11 @@ interface Subject {
   };
 }
 
-const fixture = (name: string) => readFileSync(new URL(`../fixtures/${name}`, import.meta.url), "utf8");
-const { subjects } = JSON.parse(fixture("theoph_fits.json")) as { subjects: Subject[] };
-const rows = fixture("theoph.csv")
-  .trim()
-  .split(/\r?\n/)
-  .slice(1)
-  .map((line) => line.replaceAll('"', "").split(","))
-  .map(([subject, , dose, time, level]) => ({ subject, dose: Number(dose), time: Number(time), level: Number(level) }));
+const { subjects } = theophFits<{ subjects: Subject[] }>("theoph_fits.json");
 
 it("is all there: 12 subjects, 132 levels", () => {
   expect(subjects).toHaveLength(12);
-  expect(rows).toHaveLength(132);
+  expect(theophRows).toHaveLength(132);
 });
 
 describe.each(subjects)("subject $subject", ({ subject, dose_mg_per_kg, nls }) => {
@@ -39,7 +32,7 @@ describe.each(subjects)("subject $subject", ({ subject, dose_mg_per_kg, nls }) =
   const kinetics = { ka: Math.exp(nls.coef.lKa), ke, volume: Math.exp(nls.coef.lCl) / ke, bioavailability: 1, lag: 0 };
 
   it("leaves the residual sum of squares of R's fit", () => {
-    const own = rows.filter((row) => row.subject === subject);
+    const own = theophRows.filter((row) => row.subject === subject);
     expect(own).toHaveLength(11);
     expect(own.every((row) => row.dose === dose_mg_per_kg)).toBe(true);
     const levels = profile(

@@ -1,7 +1,7 @@
-import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { profile } from "../../src/core/kinetics/index.ts";
 import { decayChain, type Minimum, minimise } from "../../src/core/numerics/index.ts";
+import { type TheophRow, theophFits, theophRows } from "./theophRows.ts";
 import { relativeError } from "./workedExample.ts";
 
 /*
@@ -28,41 +28,23 @@ interface ExactFit {
   readonly lCl: string;
   readonly rss: string;
 }
-interface Level {
-  readonly subject: string;
-  readonly dose: number;
-  readonly time: number;
-  readonly level: number;
-}
 
-const fixture = (name: string) => readFileSync(new URL(`../fixtures/${name}`, import.meta.url), "utf8");
-const { subjects } = JSON.parse(fixture("theoph_fits.json")) as { subjects: Subject[] };
-const rows: Level[] = fixture("theoph.csv")
-  .trim()
-  .split(/\r?\n/)
-  .slice(1)
-  .map((line) => line.replaceAll('"', "").split(","))
-  .map(([subject = "", , dose, time, level]) => ({
-    subject,
-    dose: Number(dose),
-    time: Number(time),
-    level: Number(level),
-  }));
+const { subjects } = theophFits<{ subjects: Subject[] }>("theoph_fits.json");
 
 /** Levels at the row's times, mg/L, by core/kinetics. */
-function levelsOf([lKe = 0, lKa = 0, lCl = 0]: readonly number[], own: readonly Level[]): Float64Array | number[] {
+function levelsOf([lKe = 0, lKa = 0, lCl = 0]: readonly number[], own: readonly TheophRow[]): Float64Array | number[] {
   const [ke, ka] = [Math.exp(lKe), Math.exp(lKa)];
   const kinetics = { ka, ke, volume: Math.exp(lCl) / ke, bioavailability: 1, lag: 0 };
   return own.map(({ dose, time }) => profile(kinetics, [{ time: 0, amount: dose }], [time])[0]!);
 }
 
-function sumOfSquares(x: readonly number[], own: readonly Level[]): number {
+function sumOfSquares(x: readonly number[], own: readonly TheophRow[]): number {
   const levels = levelsOf(x, own);
   return own.reduce((sum, row, i) => sum + (row.level - levels[i]!) ** 2, 0);
 }
 
 /** C = D·ka·ke/Cl·φ, ∂φ/∂ke = −E(ke, ke, ka), ∂φ/∂ka = −E(ke, ka, ka), E the chain of decays (decayChain). */
-function slope(x: readonly number[], own: readonly Level[]): number[] {
+function slope(x: readonly number[], own: readonly TheophRow[]): number[] {
   const [ke, ka, clearance] = [Math.exp(x[0]!), Math.exp(x[1]!), Math.exp(x[2]!)];
   const levels = levelsOf(x, own);
   const sums = [0, 0, 0];
@@ -76,16 +58,13 @@ function slope(x: readonly number[], own: readonly Level[]): number[] {
   return sums;
 }
 
-function fitLevels(own: readonly Level[], start: readonly number[]): Minimum {
+function fitLevels(own: readonly TheophRow[], start: readonly number[]): Minimum {
   return minimise({ value: (x) => sumOfSquares(x, own), gradient: (x) => slope(x, own), start });
 }
 
 /** In 20 digits; R's own fits stop up to 4e-8 short of these. */
 const exactFits = new Map(
-  (JSON.parse(fixture("theoph_least_squares.json")) as { subjects: ExactFit[] }).subjects.map((each) => [
-    each.subject,
-    each,
-  ]),
+  theophFits<{ subjects: ExactFit[] }>("theoph_least_squares.json").subjects.map((each) => [each.subject, each]),
 );
 
 /**
@@ -101,7 +80,7 @@ const STARTS = [
 ] as const;
 
 describe.each(subjects)("subject $subject", ({ subject, nls: { coef } }) => {
-  const own = rows.filter((row) => row.subject === subject);
+  const own = theophRows.filter((row) => row.subject === subject);
   const exact = exactFits.get(subject)!;
   const minimum = [exact.lKe, exact.lKa, exact.lCl].map(Number);
 
@@ -132,7 +111,7 @@ describe.each(subjects)("subject $subject", ({ subject, nls: { coef } }) => {
 });
 
 it("the slope is that of the sum of squares: central differences, relative 1e-6, equal rates included", () => {
-  const own = rows.filter((row) => row.subject === "1");
+  const own = theophRows.filter((row) => row.subject === "1");
   for (const x of [
     [-2.5, 0.5, -3],
     [-1, -1, -3],
@@ -152,7 +131,7 @@ it("the slope is that of the sum of squares: central differences, relative 1e-6,
 });
 
 it("all 132 levels as if of one subject: R's pooled fit, as printed to 9 figures", () => {
-  const found = fitLevels(rows, [-2.5, 0.5, -3]);
+  const found = fitLevels(theophRows, [-2.5, 0.5, -3]);
   expect(found.end).toBe("minimum");
   // lKe −2.52423872, lKa 0.399226633, lCl −3.24826261, sum of squares 274.449135 (R 4.2.2).
   for (const [i, wanted] of [-2.52423872, 0.399226633, -3.24826261].entries()) {

@@ -1,6 +1,6 @@
-import { readFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
 import { type EstimationProblem, estimateMostLikely } from "../../src/core/estimation/index.ts";
+import { theophFits, theophRows } from "./theophRows.ts";
 
 /**
  * Theophylline levels of 12 subjects (tests/fixtures/theoph.csv) with the population fitted to them as prior: R's nlme with random lKa
@@ -17,19 +17,7 @@ interface Fits {
   };
 }
 
-const fixture = (name: string) => readFileSync(new URL(`../fixtures/${name}`, import.meta.url), "utf8");
-const { subjects, nlme_diagonal_lKa_lCl: population } = JSON.parse(fixture("theoph_fits.json")) as Fits;
-const rows = fixture("theoph.csv")
-  .trim()
-  .split(/\r?\n/)
-  .slice(1)
-  .map((line) => line.replaceAll('"', "").split(","))
-  .map(([subject = "", , dose, time, level]) => ({
-    subject,
-    dose: Number(dose),
-    time: Number(time),
-    level: Number(level),
-  }));
+const { subjects, nlme_diagonal_lKa_lCl: population } = theophFits<Fits>("theoph_fits.json");
 
 const IDS = subjects.map(({ subject }) => subject);
 
@@ -39,7 +27,7 @@ function problemOf(
   random: EstimationProblem["random"],
   additive: number,
 ): EstimationProblem {
-  const own = rows.filter((row) => row.subject === subject);
+  const own = theophRows.filter((row) => row.subject === subject);
   const clearance = Math.exp(lCl);
   return {
     history: {
@@ -73,7 +61,7 @@ function etaOf(problem: EstimationProblem): readonly number[] {
 
 test("twelve subjects of eleven levels", () => {
   expect(IDS).toHaveLength(12);
-  for (const id of IDS) expect(rows.filter(({ subject }) => subject === id)).toHaveLength(11);
+  for (const id of IDS) expect(theophRows.filter(({ subject }) => subject === id)).toHaveLength(11);
 });
 
 describe("with the population as prior", () => {
