@@ -4,17 +4,14 @@ import type { Case } from "../../core/case/index.ts";
 import { amountsWords } from "../../core/messages/index.ts";
 import { instantText, MS_PER_HOUR } from "../../core/time/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
-import type { ClockScale } from "../chart/clockScale.ts";
 import "./AmountsRow.css";
 import { amountsScene, amountsTimes } from "../chart/amountsScene.ts";
+import type { ClockRow } from "./clockRow.ts";
+import { RowGround } from "./RowGround.tsx";
 
-interface AmountsRowProps {
+interface AmountsRowProps extends ClockRow {
   readonly value: Case;
   readonly analysis: Analysis;
-  readonly scale: ClockScale;
-  readonly width: number;
-  readonly nowX: number | null;
-  readonly midnightsX: readonly number[];
 }
 
 const HEIGHT = 190;
@@ -23,7 +20,8 @@ const TOP = 34;
 const BOTTOM = HEIGHT - 12;
 
 /** Where the dose is under the chosen option: gut, body, eliminated, stacked up to all that was taken. */
-export function AmountsRow({ value, analysis, scale, width, nowX, midnightsX }: AmountsRowProps) {
+export function AmountsRow(props: AmountsRowProps) {
+  const { value, analysis, scale, width } = props;
   const option = (value.options.find((one) => one.chosen) ?? value.options.find((one) => one.lines.length > 0))?.id;
   const shown = option ?? null;
   const drawn = useMemo(() => {
@@ -62,23 +60,18 @@ export function AmountsRow({ value, analysis, scale, width, nowX, midnightsX }: 
           role="img"
           aria-label={`${amountsWords.title}, ${ofWhat}. ${sum} ${parts}.`}
         >
-          {nowX !== null && (
-            <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height={HEIGHT} />
-          )}
-          {midnightsX.map((x) => (
-            <line key={x} className="lane-day" x1={x} x2={x} y1={0} y2={HEIGHT} />
-          ))}
-          {scene.bands.map(({ part, path }) => (
-            <path key={part} className={`amounts-band amounts-${part}`} d={path} />
-          ))}
-          <path className="amounts-edge" d={scene.edge} />
-          <line className="profile-axis" x1={scale.left} x2={scale.right} y1={scene.bottom} y2={scene.bottom} />
-          {scene.ticks.map((tick) => (
-            <text key={tick.value} className="profile-tick profile-tick-y" x={scale.left - 10} y={tick.y + 5}>
-              {numberPrint(tick.value, { significant: 3 })}
-            </text>
-          ))}
-          {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2={HEIGHT} />}
+          <RowGround row={props} height={HEIGHT}>
+            {scene.bands.map(({ part, path }) => (
+              <path key={part} className={`amounts-band amounts-${part}`} d={path} />
+            ))}
+            <path className="amounts-edge" d={scene.edge} />
+            <line className="profile-axis" x1={scale.left} x2={scale.right} y1={scene.bottom} y2={scene.bottom} />
+            {scene.ticks.map((tick) => (
+              <text key={tick.value} className="profile-tick profile-tick-y" x={scale.left - 10} y={tick.y + 5}>
+                {numberPrint(tick.value, { significant: 3 })}
+              </text>
+            ))}
+          </RowGround>
           <text className="amounts-sum" x={scale.left + 8} y={22}>
             {sum}
           </text>

@@ -1,12 +1,10 @@
+import type { Analysis } from "../../core/analysis/index.ts";
 import { instantText } from "../../core/time/index.ts";
-import type { ClockScale } from "../chart/clockScale.ts";
+import type { ClockRow } from "./clockRow.ts";
+import { RowGround } from "./RowGround.tsx";
 
-interface ClockHeadProps {
-  readonly scale: ClockScale;
-  readonly width: number;
-  readonly midnightsH: readonly number[];
-  readonly nowX: number | null;
-  readonly originMs: number;
+interface ClockHeadProps extends ClockRow {
+  readonly clock: Analysis["clock"];
   readonly zone: string;
 }
 
@@ -15,7 +13,9 @@ export const CLOCK_HEAD_HEIGHT = 54;
 const DAY_ROOM = 52;
 
 /** Days of the shared clock, named at their beginning. */
-export function ClockHead({ scale, width, midnightsH, nowX, originMs, zone }: ClockHeadProps) {
+export function ClockHead(props: ClockHeadProps) {
+  const { scale, width, zone } = props;
+  const { midnightsH, originMs } = props.clock;
   const days = midnightsH.flatMap((midnight, i) => {
     const next = midnightsH[i + 1] ?? scale.toH;
     const from = Math.max(midnight, scale.fromH);
@@ -32,32 +32,18 @@ export function ClockHead({ scale, width, midnightsH, nowX, originMs, zone }: Cl
       viewBox={`0 0 ${width} ${CLOCK_HEAD_HEIGHT}`}
       aria-hidden="true"
     >
-      {nowX !== null && (
-        <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height={CLOCK_HEAD_HEIGHT} />
-      )}
-      {midnightsH
-        .filter((midnight) => midnight > scale.fromH && midnight < scale.toH)
-        .map((midnight) => (
-          <line
-            key={midnight}
-            className="lane-day"
-            x1={scale.x(midnight)}
-            x2={scale.x(midnight)}
-            y1={0}
-            y2={CLOCK_HEAD_HEIGHT}
-          />
+      <RowGround row={props} height={CLOCK_HEAD_HEIGHT}>
+        {days.map((day) => (
+          <g key={day.midnight}>
+            <text className="clock-day" x={day.x + 8} y={23}>
+              {day.day}
+            </text>
+            <text className="clock-month" x={day.x + 8} y={42}>
+              {day.month}
+            </text>
+          </g>
         ))}
-      {days.map((day) => (
-        <g key={day.midnight}>
-          <text className="clock-day" x={day.x + 8} y={23}>
-            {day.day}
-          </text>
-          <text className="clock-month" x={day.x + 8} y={42}>
-            {day.month}
-          </text>
-        </g>
-      ))}
-      {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2={CLOCK_HEAD_HEIGHT} />}
+      </RowGround>
     </svg>
   );
 }

@@ -2,26 +2,23 @@ import { type ReactNode, useMemo, useState } from "react";
 import type { DoseMark } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import type { DoseLine } from "../../core/regimen/index.ts";
-import type { ClockScale } from "../chart/clockScale.ts";
 import type { CurveStyle } from "../chart/ProfileChart.tsx";
+import type { ClockRow } from "./clockRow.ts";
 import { DoseToken } from "./DoseToken.tsx";
 import "./DoseLane.css";
 import { DragReadout } from "./DragReadout.tsx";
 import { lineReach } from "./gestures/lineReach.ts";
 import { LineEnd } from "./LineEnd.tsx";
 import { laneTokens } from "./laneTokens.ts";
+import { RowGround } from "./RowGround.tsx";
 import { TokenBar } from "./TokenBar.tsx";
 
-interface DoseLaneProps {
+interface DoseLaneProps extends ClockRow {
   readonly lane: string;
   readonly name: string;
   readonly value: Case;
   readonly lines: readonly DoseLine[];
   readonly marks: readonly DoseMark[];
-  readonly scale: ClockScale;
-  readonly width: number;
-  readonly nowX: number | null;
-  readonly midnightsX: readonly number[];
   readonly originMs: number;
   readonly largest: number;
   readonly style: CurveStyle;
@@ -36,7 +33,7 @@ const BASELINE = 52;
 
 /** A row of doses on the shared clock: tokens whose height is the dose, missed ones hollow. */
 export function DoseLane(props: DoseLaneProps) {
-  const { marks, scale, width, nowX } = props;
+  const { marks, scale, width } = props;
   const [selected, setSelected] = useState<string | null>(null);
   const [dragged, setDragged] = useState<{ readonly key: string; readonly words: string } | null>(null);
   const tokens = useMemo(() => laneTokens(marks, scale, props.largest), [marks, scale, props.largest]);
@@ -59,11 +56,7 @@ export function DoseLane(props: DoseLaneProps) {
       <div className="lane-head">{props.head}</div>
       <div className="lane-body">
         <svg className="lane-row" width={width} role="group" aria-label={`${props.name}: doses`}>
-          {nowX !== null && <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height="100%" />}
-          {props.midnightsX.map((x) => (
-            <line key={x} className="lane-day" x1={x} x2={x} y1={0} y2="100%" />
-          ))}
-          {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2="100%" />}
+          <RowGround row={props} />
           {tokens.map((token) => (
             <DoseToken
               key={token.key}

@@ -2,18 +2,15 @@ import { type KeyboardEvent, useMemo } from "react";
 import type { Analysis } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { eventEffectWords, eventWords } from "../../core/messages/index.ts";
-import type { ClockScale } from "../chart/clockScale.ts";
+import type { ClockRow } from "./clockRow.ts";
 import "./DoseLane.css";
 import "./EventsLane.css";
 import { BAR_ROW, type EventBar, type EventMark, eventsScene, MARK_ROW } from "./eventsScene.ts";
+import { RowGround } from "./RowGround.tsx";
 
-interface EventsLaneProps {
+interface EventsLaneProps extends ClockRow {
   readonly value: Case;
   readonly analysis: Analysis;
-  readonly scale: ClockScale;
-  readonly width: number;
-  readonly nowX: number | null;
-  readonly midnightsX: readonly number[];
   /** Without an index: the list, to add to. */
   readonly onOpenEvent: (index?: number) => void;
   readonly onOpenPatient: () => void;
@@ -21,7 +18,7 @@ interface EventsLaneProps {
 
 /** What happened to the patient, on the shared clock: events as bars, measured values as marks, a thin line wherever the kinetics change. */
 export function EventsLane(props: EventsLaneProps) {
-  const { value, analysis, scale, width, nowX } = props;
+  const { value, analysis, scale, width } = props;
   const { factors, observations } = value.patient;
   const dispositions = analysis.typical?.dispositions;
   const scene = useMemo(
@@ -55,14 +52,11 @@ export function EventsLane(props: EventsLaneProps) {
       </div>
       <div className="lane-body events-lane-body" style={{ minHeight: scene.height }}>
         <svg className="lane-row" width={width} role="group" aria-label={eventWords.lane}>
-          {nowX !== null && <rect className="lane-past" x={scale.left} y={0} width={nowX - scale.left} height="100%" />}
-          {props.midnightsX.map((x) => (
-            <line key={x} className="lane-day" x1={x} x2={x} y1={0} y2="100%" />
-          ))}
-          {scene.changes.map((x) => (
-            <line key={x} className="event-change" x1={x} x2={x} y1={0} y2="100%" />
-          ))}
-          {nowX !== null && <line className="lane-now" x1={nowX} x2={nowX} y1={0} y2="100%" />}
+          <RowGround row={props}>
+            {scene.changes.map((x) => (
+              <line key={x} className="event-change" x1={x} x2={x} y1={0} y2="100%" />
+            ))}
+          </RowGround>
           {scene.marks.map((mark) => (
             <MarkShape key={mark.id} mark={mark} onPress={props.onOpenPatient} />
           ))}

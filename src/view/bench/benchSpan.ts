@@ -32,6 +32,10 @@ export function spanWithin(whole: BenchSpan, span: BenchSpan): BenchSpan {
   return { fromH, toH: fromH + length };
 }
 
+export function spanHas(span: BenchSpan, hours: number): boolean {
+  return hours >= span.fromH && hours <= span.toH;
+}
+
 /** Narrower (factor below 1) or wider about `aroundH`. */
 export function spanZoomed(whole: BenchSpan, span: BenchSpan, factor: number, aroundH: number): BenchSpan {
   const length = (span.toH - span.fromH) * factor;
