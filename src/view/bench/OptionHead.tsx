@@ -22,7 +22,7 @@ export function OptionHead({ option, index, lines, onOpenLine, onMenu }: OptionH
       >
         <OptionBadge id={option.id} index={index} isChosen={option.chosen} />
         <span>
-          {option.label || (option.chosen ? "" : "")}
+          {option.label}
           {option.chosen ? (
             <span className="lane-chosen">
               {option.label ? " · " : ""}

@@ -24,7 +24,11 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
   const [typed, setTyped] = useState(NO_WINDOW_TYPED);
   const [faults, setFaults] = useState<readonly Issue[]>([]);
 
-  const type = (draft: WindowDraft | null) => setTyped({ ...typed, draft, asked: null });
+  /** Begins anew, without what was said of an entry before it; null closes the form. */
+  const begin = (draft: WindowDraft | null) => {
+    setTyped({ ...NO_WINDOW_TYPED, draft });
+    setFaults([]);
+  };
   const store = async (window: TargetWindow) => {
     const outcome = await onSave(record.id, partId(), window);
     setFaults(outcome.ok ? [] : outcome.issues);
@@ -75,7 +79,7 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
           onWindow={(window) => void store(window)}
         >
           <div className="dialog-actions">
-            <Button onPress={() => type(null)}>{medicinesWords.cancel}</Button>
+            <Button onPress={() => begin(null)}>{medicinesWords.cancel}</Button>
             <Button kind="main" type="submit">
               {medicinesWords.wardWindowStore}
             </Button>
@@ -83,7 +87,7 @@ export function WardWindows({ record, windows, onSave, onRemove }: WardWindowsPr
         </WindowForm>
       ) : (
         <div>
-          <Button onPress={() => type(windowDraftEmpty(record))}>{medicinesWords.wardWindowAdd}</Button>
+          <Button onPress={() => begin(windowDraftEmpty(record))}>{medicinesWords.wardWindowAdd}</Button>
         </div>
       )}
     </div>

@@ -186,6 +186,20 @@ test("a window of the ward's own is stored and removed", async () => {
   await waitFor(() => expect(state().wardWindows).toEqual([]));
 });
 
+test("a window of the ward's own begun again says nothing of the entry given up", async () => {
+  await renderWorkbench(<MedicinesScreen />);
+  choose("theophylline");
+  fireEvent.click(button(medicinesWords.wardWindowAdd));
+  const form = () => document.querySelector<HTMLElement>(".ward-windows-form")!;
+  const told = () => form().querySelectorAll("[aria-invalid=true]").length;
+  expect(told()).toBe(0);
+  fireEvent.submit(form());
+  expect(told()).toBeGreaterThan(0);
+  fireEvent.click(button(medicinesWords.cancel));
+  fireEvent.click(button(medicinesWords.wardWindowAdd));
+  expect(told()).toBe(0);
+});
+
 test("a ward's window is typed in the medicine's unit, asked about in another, and may be hours after the dose", async () => {
   const { state } = await renderWorkbench(<MedicinesScreen />);
   choose("lithium");
