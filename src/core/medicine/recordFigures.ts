@@ -61,6 +61,8 @@ export function unverifiedFigures(record: MedicineRecord): {
   readonly memory: number;
   readonly commonPractice: number;
   readonly invented: number;
+  /** Neither read in a source nor derived from what was. */
+  readonly unverified: number;
   readonly total: number;
 } {
   const figures = recordFigures(record);
@@ -71,6 +73,7 @@ export function unverifiedFigures(record: MedicineRecord): {
     memory: count("memory"),
     commonPractice: count("common practice"),
     invented: count("invented"),
+    unverified: figures.filter(({ basis }) => basis !== "seen" && basis !== "derived").length,
     total: figures.length,
   };
 }

@@ -15,7 +15,7 @@ export const recordWords = {
   found: (count: number, of: number) => `${count} of ${of} records`,
   foundNone: "No record has that in its name, products or interactions.",
   unverifiedOf: (count: number, of: number) => `${count} of ${of} figures unverified`,
-  allSeen: (of: number) => `none of ${of} figures from memory`,
+  allSeen: (of: number) => `none of ${of} figures unverified`,
   notReviewed: "not independently reviewed",
   reviewed: "reviewed",
   piecedTogether: "pieced together",

@@ -74,10 +74,10 @@ function byName(a: MedicineRecord, b: MedicineRecord): number {
 }
 
 function remarks(record: MedicineRecord, isEdited: boolean): string {
-  const { memory, total } = unverifiedFigures(record);
+  const { unverified, total } = unverifiedFigures(record);
   return [
     ...(isEdited ? [recordWords.unsaved] : []),
-    memory > 0 ? recordWords.unverifiedOf(memory, total) : recordWords.allSeen(total),
+    unverified > 0 ? recordWords.unverifiedOf(unverified, total) : recordWords.allSeen(total),
     record.review.status === "reviewed" ? recordWords.reviewed : recordWords.notReviewed,
     ...(record.estimates.from === "pieced-together" ? [recordWords.piecedTogether] : []),
     unitSpoken(record.displayUnit, "screen"),

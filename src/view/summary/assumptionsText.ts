@@ -94,8 +94,8 @@ function reviewWords({ review }: MedicineRecord): string {
 
 /** Figures nobody has read in their source: recalled, rules of thumb, and made up. */
 export function unverifiedWords(record: MedicineRecord): string {
-  const { memory, commonPractice, invented, total } = unverifiedFigures(record);
-  return summaryBannerWords.unverified(memory + commonPractice + invented, total);
+  const { unverified, total } = unverifiedFigures(record);
+  return summaryBannerWords.unverified(unverified, total);
 }
 
 function doseAssumption(given: readonly DoseMark[], print: SummaryPrint): string {

@@ -115,7 +115,7 @@ function steadyRows(
     ...(timed ? timedRows(timed.afterDoseH, print, (end) => print.concentration(timed[end])) : []),
     { label: words.average, value: print.concentration(steady.average) },
     { label: words.auc24, value: print.quantity(steady.auc24, "mg.h/L") },
-    { label: words.accumulation, value: words.times(print.figure(steady.accumulation, 2)) },
+    { label: words.accumulation, value: words.times(print.figure(steady.accumulation)) },
     { label: words.steady90, value: print.at(steadyMs ?? print.ms(steady.steady90AtH), "dayClock") },
   ];
 }

@@ -31,6 +31,7 @@ describe("unverifiedFigures", () => {
       memory: 9,
       commonPractice: 1,
       invented: 0,
+      unverified: 10,
       total: 25,
     });
   });
@@ -43,6 +44,7 @@ describe("unverifiedFigures", () => {
       memory: 5,
       commonPractice: 1,
       invented: 0,
+      unverified: 6,
       total: 24,
     });
   });
@@ -58,6 +60,7 @@ describe("unverifiedFigures", () => {
       memory: 8,
       commonPractice: 0,
       invented: 0,
+      unverified: 8,
       total: 28,
     });
   });
@@ -72,13 +75,15 @@ describe("unverifiedFigures", () => {
       memory: 9,
       commonPractice: 0,
       invented: 0,
+      unverified: 9,
       total: 33,
     });
   });
 
   it("the shares of all bases add up, for every record", () => {
     for (const record of BUILT_IN_RECORDS) {
-      const { total, ...shares } = unverifiedFigures(record);
+      const { total, unverified, ...shares } = unverifiedFigures(record);
+      expect(unverified).toBe(total - shares.seen - shares.derived);
       expect(Object.values(shares).reduce((sum, each) => sum + each, 0)).toBe(total);
     }
   });
