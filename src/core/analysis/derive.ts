@@ -16,7 +16,7 @@ import { patientFigures } from "./patientFigures.ts";
 import { typicalModel } from "./typicalModel.ts";
 
 /** Part of the fingerprint: changes whenever the same case may give other figures. */
-export const ENGINE = "ebbline-core 2";
+export const ENGINE = "ebbline-core 3";
 
 export interface DeriveOptions {
   /** Fits the levels too; without it a case that has levels to fit says "pending". It takes longer than the rest together. */

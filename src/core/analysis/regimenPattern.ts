@@ -4,10 +4,12 @@ import {
   type DoseLine,
   type DoseRepeat,
   doseLineEndMs,
+  doseLineFirstMs,
   doseLineGapHours,
   doseLinePeriodHours,
 } from "../regimen/index.ts";
 import { instantMs, wallClock } from "../time/index.ts";
+import { patternStartMs } from "./patternStart.ts";
 
 const MINUTE_MS = 60_000;
 const HOUR_MS = 60 * MINUTE_MS;
@@ -17,7 +19,7 @@ const LONGEST_PERIOD_MIN = 14 * DAY_MIN;
 
 export interface RegimenPattern {
   readonly periodH: number;
-  /** When the pattern begins: the first dose of the line that joins last. */
+  /** When the pattern begins: the dose from which on the option gives all of it. */
   readonly startMs: number;
   /** Doses within [0, periodH) from `startMs`, by product. */
   readonly courses: ReadonlyMap<string, readonly { readonly time: number; readonly amount: number }[]>;
@@ -48,7 +50,11 @@ export function regimenPattern(value: Case, lines: readonly DoseLine[]): Pattern
   const period = ongoing.map(periodMin).reduce(leastCommonMultiple);
   if (!Number.isInteger(period) || period > LONGEST_PERIOD_MIN) return { ok: false, reason: "no-common-period" };
 
-  const startMs = Math.max(...ongoing.map((line) => instantMs(line.start)));
+  // Accumulation and the wait count from here, so a pattern is taken in the order in which its doses are given.
+  const startMs = patternStartMs(
+    ongoing.map((line) => ({ line, firstMs: doseLineFirstMs(line, value.timeZone) ?? instantMs(line.start) })),
+    value.timeZone,
+  );
   const courses = new Map<string, { time: number; amount: number }[]>();
   let dosePerPeriodMg = 0;
   for (const line of ongoing) {

@@ -13,6 +13,12 @@ export function doseLineEndMs(line: DoseLine, zone: string): number | null {
   return last ? dueMs(last) : null;
 }
 
+/** Epoch ms when the first dose of a line is due by the schedule; null for a line that has no dose at all. */
+export function doseLineFirstMs(line: DoseLine, zone: string): number | null {
+  for (const dose of scheduledDoses(line, zone)) return dueMs(dose);
+  return null;
+}
+
 /** Epoch ms when dose `index` (from 0) is due by the schedule; throws RangeError when the line has no such dose. */
 export function doseLineScheduledMs(line: DoseLine, index: number, zone: string): number {
   if (Number.isInteger(index) && index >= 0 && index < MOST_DOSES) {

@@ -9,7 +9,7 @@ export {
   doseAmountSchema,
   doseLineSchema,
 } from "./doseLine.ts";
-export { doseLineCount, doseLineEndMs, doseLineScheduledMs } from "./doseLineEndMs.ts";
+export { doseLineCount, doseLineEndMs, doseLineFirstMs, doseLineScheduledMs } from "./doseLineEndMs.ts";
 export { type DoseEvent, type DoseLineSpan, doseLineExpand, isEndlessLine, MOST_DOSES } from "./doseLineExpand.ts";
 export { doseLineGapHours, doseLinePeriodHours } from "./doseLinePeriodHours.ts";
 export { type DoseLineTextContext, doseLineText } from "./doseLineText.ts";

@@ -34,11 +34,46 @@ describe("regimenPattern", () => {
     );
     expect(found.periodH).toBe(24);
     expect(found.dosePerPeriodMg).toBe(500);
-    // Counted from the line that joins last, 22:00.
+    expect(found.startMs).toBe(Date.parse("2026-03-05T08:00:00Z"));
     expect(found.courses.get("tablet-12h")).toEqual([
+      { time: 0, amount: 200 },
+      { time: 14, amount: 300 },
+    ]);
+  });
+
+  it("begins with the dose the option gives first, whichever line it is on and wherever that line's start stands", () => {
+    const doses = [
       { time: 0, amount: 300 },
       { time: 10, amount: 200 },
+    ];
+    const evening = "2026-03-04T22:00:00+00:00";
+    for (const morning of ["2026-03-05T08:00:00+00:00", evening]) {
+      const found = pattern(line(200, morning, { clock: ["08:00"] }), line(300, evening, { clock: ["22:00"] }));
+      expect(found.startMs).toBe(Date.parse("2026-03-04T22:00:00Z"));
+      expect(found.courses.get("tablet-12h")).toEqual(doses);
+    }
+    const hourly = pattern(line(200, "2026-03-05T08:00:00+00:00", every(24)), line(300, evening, every(24)));
+    expect([hourly.startMs, hourly.courses.get("tablet-12h")]).toEqual([Date.parse("2026-03-04T22:00:00Z"), doses]);
+  });
+
+  it("begins with a line that joins others already running", () => {
+    const found = pattern(
+      line(200, "2026-03-01T08:00:00+00:00", { clock: ["08:00"] }),
+      line(300, "2026-03-05T22:00:00+00:00", { clock: ["22:00"] }),
+    );
+    expect(found.startMs).toBe(Date.parse("2026-03-05T22:00:00Z"));
+    expect(found.courses.get("tablet-12h")!.map((dose) => dose.time)).toEqual([0, 10]);
+  });
+
+  it("begins with the first dose also over a night in which the clocks change", () => {
+    // 28 March 2026: the clocks of Berlin go on at 02:00, so the 08:00 dose comes 9 h after 22:00. A steady day has 24 h.
+    const found = regimenPattern({ ...value, timeZone: "Europe/Berlin" }, [
+      line(200, "2026-03-29T08:00:00+02:00", { clock: ["08:00"] }),
+      line(300, "2026-03-28T22:00:00+01:00", { clock: ["22:00"] }),
     ]);
+    if (!found.ok) throw new Error(found.reason);
+    expect(found.pattern.startMs).toBe(Date.parse("2026-03-28T21:00:00Z"));
+    expect(found.pattern.courses.get("tablet-12h")!.map((dose) => dose.time)).toEqual([0, 10]);
   });
 
   it("several clock times on one line", () => {
@@ -79,17 +114,27 @@ describe("regimenPattern", () => {
     expect(pattern({ ...plain, except: [{ index: 2, status: "missed" }] })).toEqual(pattern(plain));
   });
 
-  it("weekdays repeat after a week, counted from the pattern's start", () => {
-    // Starts on Wednesday 4 March at 20:00; the doses are at 08:00.
+  it("weekdays repeat after a week, counted from the first dose", () => {
+    // Starts on Wednesday 4 March at 20:00; the doses are at 08:00, the first on Friday.
     const found = pattern(line(200, "2026-03-04T20:00:00+00:00", { clock: ["08:00"], weekdays: [1, 3, 5] }));
     expect(found.periodH).toBe(168);
     expect(found.dosePerPeriodMg).toBe(600);
-    expect(found.courses.get("tablet-12h")!.map((dose) => dose.time)).toEqual([36, 108, 156]);
+    expect(found.courses.get("tablet-12h")!.map((dose) => dose.time)).toEqual([0, 72, 120]);
+    expect(found.startMs).toBe(Date.parse("2026-03-06T08:00:00Z"));
     const beside = pattern(
       line(200, "2026-03-04T08:00:00+00:00", { clock: ["08:00"], weekdays: [7] }),
       line(100, "2026-03-04T08:00:00+00:00", every(12)),
     );
     expect([beside.periodH, beside.dosePerPeriodMg]).toEqual([168, 14 * 100 + 200]);
+    // Mondays 200 mg and Thursdays 300 mg, begun on Thursday 5 March.
+    const thursday = pattern(
+      line(200, "2026-03-05T08:00:00+00:00", { clock: ["08:00"], weekdays: [1] }),
+      line(300, "2026-03-05T08:00:00+00:00", { clock: ["08:00"], weekdays: [4] }),
+    );
+    expect(thursday.courses.get("tablet-12h")).toEqual([
+      { time: 0, amount: 300 },
+      { time: 96, amount: 200 },
+    ]);
   });
 
   it("a line on weekdays that ends before a weekend is ongoing beside one that ends in it", () => {
@@ -121,7 +166,8 @@ describe("regimenPattern", () => {
       weekly.periodH,
     );
     const WEEKS = 30;
-    const untilMs = weekly.startMs + WEEKS * 168 * 3_600_000;
+    // The dose at the very end begins the next week.
+    const untilMs = weekly.startMs + WEEKS * 168 * 3_600_000 - 1;
     const events = doseLineExpand(dosed, { zone, untilMs });
     if (!events.ok) throw new Error("the line can't be laid out");
     const doses = events.value.map(({ atMs }) => ({ time: (atMs - weekly.startMs) / 3_600_000, amount: 300 }));
@@ -141,7 +187,7 @@ describe("regimenPattern", () => {
       line(100, "2026-03-05T14:00:00+00:00", every(24), "tablet"),
     );
     expect([...found.courses.keys()].sort()).toEqual(["tablet", "tablet-12h"]);
-    expect(found.courses.get("tablet-12h")!.map((dose) => dose.time)).toEqual([6, 18]);
-    expect(found.courses.get("tablet")!.map((dose) => dose.time)).toEqual([0]);
+    expect(found.courses.get("tablet-12h")!.map((dose) => dose.time)).toEqual([0, 12]);
+    expect(found.courses.get("tablet")!.map((dose) => dose.time)).toEqual([6]);
   });
 });
