@@ -5,6 +5,7 @@ import { autoinduction } from "./concerns/autoinduction.ts";
 import { doseAboveLimit } from "./concerns/doseAboveLimit.ts";
 import { doseNotMakeable } from "./concerns/doseNotMakeable.ts";
 import { dosesAfterNow } from "./concerns/dosesAfterNow.ts";
+import { dosesSameTime } from "./concerns/dosesSameTime.ts";
 import { estimatesPieced } from "./concerns/estimatesPieced.ts";
 import { factorsUnused } from "./concerns/factorsUnused.ts";
 import { firstDoseClose } from "./concerns/firstDoseClose.ts";
@@ -13,6 +14,7 @@ import { fitWithheld } from "./concerns/fitWithheld.ts";
 import { flipFlop } from "./concerns/flipFlop.ts";
 import { flipFlopAmbiguous } from "./concerns/flipFlopAmbiguous.ts";
 import { forecastMissed } from "./concerns/forecastMissed.ts";
+import { formulaStep } from "./concerns/formulaStep.ts";
 import { historyAssumed } from "./concerns/historyAssumed.ts";
 import { interactionKnown } from "./concerns/interactionKnown.ts";
 import { inventedMedicine } from "./concerns/inventedMedicine.ts";
@@ -72,6 +74,7 @@ const RULES: readonly ConcernRule[] = [
   fitWithheld,
   neverSteady,
   populationOutside,
+  formulaStep,
   levelTiming,
   levelTooEarly,
   levelOutsideWindow,
@@ -82,6 +85,7 @@ const RULES: readonly ConcernRule[] = [
   forecastMissed,
   parameterUnusual,
   levelsSameTime,
+  dosesSameTime,
   typicalOnly,
   levelsAllLeftOut,
   fitSetAside,

@@ -20,6 +20,10 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
     title: `${COVARIATE_WORDS[text(data, "covariate") as CovariateName]} outside the population the figures come from`,
     text: `${isSex(data) ? "The patients studied" : `${amount(number(data, "value"), data.valueUnit as UnitCode)}; the patients studied had ${rangeWords(data)}`}: ${sentence(text(data, "population"))} (${text(data, "source")}). The prediction may not hold.`,
   }),
+  "formula-step": (data) => ({
+    title: `The record's ${text(data, "words")} jumps close to this patient's ${COVARIATE_WORDS[text(data, "covariate") as CovariateName].toLowerCase()}`,
+    text: `${amount(number(data, "here"), data.unit as UnitCode)} at ${amount(number(data, "at"), data.covariateUnit as UnitCode)}, ${amount(number(data, "there"), data.unit as UnitCode)} at ${amount(number(data, "nearAt"), data.covariateUnit as UnitCode)}: the formula is a step (${text(data, "source")}). In a body the change is gradual: look at what each would mean.`,
+  }),
   "dose-above-single": (data) => ({
     title: `${lane(data)}: a single dose above the record's maximum`,
     text: `${mg(data, "mg")} ${when(data)}; the record's maximum single dose is ${mg(data, "limitMg")} (${text(data, "source")}; ${text(data, "basis")}).`,

@@ -90,6 +90,12 @@ export const optionOf = (product: string, mg: number): Case["options"] => [
     lines: [{ ...plain.options[0]!.lines[0]!, product, amount: { value: mg, unit: "mg" } }],
   },
 ];
+/** With another formula of the clearance. */
+export const clearanceOf = (formula: string): Partial<MedicineRecord> => {
+  const { kinetics } = quiet;
+  if (kinetics.kind !== "one-compartment-oral") throw new RangeError("theophylline: one compartment expected");
+  return { kinetics: { ...kinetics, clearance: { ...kinetics.clearance, formula } } };
+};
 export const kineticsFromMemory = (): MedicineRecord => {
   const { kinetics } = quiet;
   if (kinetics.kind !== "one-compartment-oral") throw new RangeError("theophylline: one compartment expected");

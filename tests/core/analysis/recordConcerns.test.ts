@@ -7,6 +7,7 @@ import { concernMessage } from "../../../src/core/messages/index.ts";
 import { RECORD_CONCERN_CODES } from "../../../src/core/messages/recordConcernMessages.ts";
 import { forbiddenForms } from "../../../src/core/units/index.ts";
 import {
+  clearanceOf,
   event,
   figure,
   found,
@@ -33,6 +34,12 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     "outside-population",
     value({ population: { ...quiet.population, ranges: [{ covariate: "weight", low: 60, unit: "kg", ...known }] } }),
     value({ population: { ...quiet.population, ranges: [{ covariate: "weight", low: 58, unit: "kg", ...known }] } }),
+  ],
+  [
+    "formula-step",
+    // The patient weighs 58 kg.
+    value(clearanceOf("weight >= 60 kg ? 3 L/h : 2 L/h")),
+    value(clearanceOf("weight >= 61 kg ? 3 L/h : 2 L/h")),
   ],
   [
     "dose-above-single",
@@ -261,6 +268,22 @@ describe("concerns from the record", () => {
     expect(found(withLevel({ windows }, TROUGH, { window: timed }), "level-off-window-time")).toMatchObject([
       { data: { fromH: 12, toH: 13, afterDoseH: 11.5 } },
     ]);
+  });
+
+  it("a step of a formula is told with both sides of it, one so steep that it is none is not", () => {
+    expect(found(value(clearanceOf("age >= 63 a ? 2 L/h : 3 L/h")), "formula-step")).toMatchObject([
+      { data: { covariate: "age", at: 64, here: 2, there: 3 } },
+    ]);
+    expect(found(value(clearanceOf("2 L/h * (weight / 70 kg)^4")), "formula-step")).toEqual([]);
+    expect(found(value(clearanceOf("age >= 63 a ? 2.4 L/h : 2.9 L/h")), "formula-step")).toEqual([]);
+    const { kinetics } = recordById("levetiracetam")!;
+    if (kinetics.kind !== "one-compartment-oral") throw new RangeError("levetiracetam: one compartment expected");
+    // The patient's 52.3 mL/min lie just above the border of 50.
+    const [one] = found(value(clearanceOf(kinetics.clearance.formula)), "formula-step");
+    expect(one).toMatchObject({ data: { covariate: "creatinineClearance" } });
+    expect(concernMessage(one!).title).toBe(
+      "The record's clearance jumps close to this patient's creatinine clearance",
+    );
   });
 
   it("a window that was asked about and confirmed stays visible", () => {
