@@ -125,6 +125,10 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     title: `${countWords(number(data, "count"), "dose", "doses")} of an option before the now line`,
     text: "Shown, not counted. Doses already taken belong in the given lane.",
   }),
+  "doses-same-time": (data) => ({
+    title: `${data.option === null ? "Doses given" : `Option ${text(data, "option")}`}: ${number(data, "count") === 1 ? "" : `${number(data, "count")} times `}${number(data, "most") === 2 ? "two" : "two or more"} doses of one product stand at one time`,
+    text: `${number(data, "count") === 1 ? "At" : "First at"} ${when(data)}. Entered twice, or meant? Every one of them is counted${data.option === null ? ", and what the levels say is read from them" : ""}.`,
+  }),
   "window-missing": (data) => ({
     title: "No target window chosen",
     text: `${number(data, "choices") > 1 ? `The record lists ${number(data, "choices")}; which applies is your decision.` : "Choose one, or enter the local one."} Hours in the window can't be given without it.`,

@@ -25,7 +25,7 @@ export {
   parameterFigures,
 } from "./fitWorkingWords.ts";
 export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
-export { laneLineWords } from "./laneWords.ts";
+export { laneLineWords, laneTokenWords } from "./laneWords.ts";
 export { levelFitWords } from "./levelFitWords.ts";
 export type { MessageFunction } from "./messageFunction.ts";
 export { recordWords } from "./recordWords.ts";

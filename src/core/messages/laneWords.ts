@@ -28,3 +28,10 @@ function clockWords(clock: readonly string[], weekdays: readonly number[] | unde
   // One weekday as "every Mon": "on Mon" could be a single one.
   return `at ${list} ${weekdays.length === 1 ? "every" : "on"} ${weekdayList(weekdays, "short")}`;
 }
+
+/** Under the tokens of a lane. */
+export const laneTokenWords = {
+  missed: "missed",
+  /** "2× 300"; "2×" where the amounts differ. */
+  together: (count: number, text: string) => (text === "" ? `${count}×` : `${count}× ${text}`),
+} as const;

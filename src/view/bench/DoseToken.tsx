@@ -83,7 +83,11 @@ export function DoseToken(props: DoseTokenProps) {
   const amount = quantityPrint(mark.amount, { style: "screen", microgram: "microgram" });
   const words = `${instantText(atMs, value.timeZone, "dayClock")}, ${amount}${STATUS_WORDS[mark.status]}`;
   const isHollow = mark.status === "missed" || mark.status === "after-now" || mark.status === "before-now";
-  const y = baseline - token.height;
+  const foot = baseline - token.above;
+  const y = foot - token.height;
+  // Of a stack each token answers for its own part, the lowest for the label too.
+  const hitTop = token.isTop ? Math.min(y, baseline - 40) : y;
+  const hitFoot = token.above === 0 ? baseline + 22 : foot;
   return (
     <g
       className={`token token-${props.style}${lane === "given" ? "" : " token-scales"}${isHollow ? " token-hollow" : ""}${props.isSelected ? " token-selected" : ""}`}
@@ -100,7 +104,7 @@ export function DoseToken(props: DoseTokenProps) {
       {...(props.isReadOnly ? { onClick: props.onSelect } : { onPointerDown: startDrag })}
     >
       <title>{`${words}, ${product.name}`}</title>
-      <rect className="token-hit" x={token.x - HIT / 2} y={baseline - 40} width={HIT} height={62} />
+      <rect className="token-hit" x={token.x - HIT / 2} y={hitTop} width={HIT} height={hitFoot - hitTop} />
       <rect
         className="token-body"
         x={token.x - WIDTH / 2}

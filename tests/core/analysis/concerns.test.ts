@@ -54,6 +54,10 @@ function digoxin(at: string): Case {
   };
 }
 
+const again = (given: Case["given"][number]) => ({ ...given, id: `${given.id}-again` });
+/** The same doses a minute on: near, but not at one time. */
+const later = (given: Case["given"][number]) => ({ ...again(given), start: "2026-03-01T08:01:00+00:00" });
+
 /** For every concern: a case that raises it, and one as like it as can be that does not. */
 const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] = [
   ["model-incomplete", { ...base, patient: { ...base.patient, observations: [] } }, base],
@@ -122,6 +126,11 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     "option-before-now",
     { ...base, options: [option([line({ start: "2026-03-04T11:00:00+00:00" })])] },
     { ...base, options: [option([line({ start: "2026-03-04T12:00:00+00:00" })])] },
+  ],
+  [
+    "doses-same-time",
+    { ...base, given: [...base.given, ...base.given.map(again)] },
+    { ...base, given: [...base.given, ...base.given.map(later)] },
   ],
   ["window-missing", (({ window: _, ...rest }) => rest)(base) as Case, base],
   [
@@ -231,6 +240,28 @@ describe("concerns", () => {
     const [found] = roadsDiffer(context(0.02));
     expect(found).toMatchObject({ code: "roads-differ", gravity: "stop" });
     expect(concernMessage(found!).text).toContain("option A");
+  });
+
+  it("doses at one time are counted and the first is named, of the given lane and of an option; missed ones and other products are not", () => {
+    const said = (value: Case) =>
+      derive(value).concerns.flatMap((each) => (each.code === "doses-same-time" ? [concernMessage(each)] : []));
+    const twice = { ...base, given: [...base.given, ...base.given.map(again)] };
+    expect(said(twice)).toEqual([
+      {
+        title: "Doses given: 7 times two doses of one product stand at one time",
+        text: "First at Sun 1 March, 08:00. Entered twice, or meant? Every one of them is counted, and what the levels say is read from them.",
+      },
+    ]);
+    const loading = [line(), line({ id: "y", repeat: { every: { value: 12, unit: "h" }, count: 1 } })];
+    expect(said({ ...base, options: [option(loading), option([line()], "B")] })).toEqual([
+      {
+        title: "Option A: two doses of one product stand at one time",
+        text: "At Wed 4 March, 20:00. Entered twice, or meant? Every one of them is counted.",
+      },
+    ]);
+    const missed = Array.from({ length: 7 }, (_, index) => ({ index, status: "missed" as const }));
+    expect(said({ ...base, given: [...base.given, { ...again(base.given[0]!), except: missed }] })).toEqual([]);
+    expect(said({ ...base, given: [...base.given, { ...again(base.given[0]!), product: "tablet" }] })).toEqual([]);
   });
 
   it("ids are unique, gravest first", () => {
