@@ -10,7 +10,7 @@ import { instantMs } from "../../core/time/index.ts";
 import { kidneyWords } from "./assumptionsText.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryRow } from "./summaryModel.ts";
-import { chosenOption, runningLines, runningWords } from "./summaryOrder.ts";
+import { chosenOption, runningText } from "./summaryOrder.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
 /**
@@ -22,16 +22,13 @@ export function noteElements(input: SummaryInput, print: SummaryPrint): readonly
   const { case: value, analysis } = input;
   const { medicine } = value;
   const factors = (...kinds: Factor["kind"][]) => factorWords(value, kinds, print);
-  const running = runningLines(value);
+  const before = runningText(input, chosenOption(value)?.lines ?? [], print);
   const first = analysis.given.find(({ countedMg }) => countedMg > 0);
   const missed = analysis.given.filter(({ status }) => status === "missed").length;
   const rows: readonly (readonly [string, string])[] = [
     [words.purpose, NOT_RECORDED],
     [words.assay, words.assayUnknown(medicine.matrix)],
-    [
-      words.regimen,
-      running.length > 0 ? runningWords(value, running, chosenOption(value)?.lines ?? [], print) : NOT_RECORDED,
-    ],
+    [words.regimen, before ? (before.lines.length > 0 ? before.text : words.noneRunning(before.text)) : NOT_RECORDED],
     [words.duration, first ? words.durationFrom(print.at(print.ms(first.atH), "day")) : NOT_RECORDED],
     [words.salt, NOT_RECORDED],
     [words.steady, NOT_RECORDED],

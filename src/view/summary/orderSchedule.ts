@@ -1,5 +1,12 @@
 import { weekdayList, summaryOrderWords as words } from "../../core/messages/index.ts";
-import { type DoseLine, type DoseRepeat, doseLineGapHours } from "../../core/regimen/index.ts";
+import {
+  type DoseLine,
+  type DoseRepeat,
+  doseLineEndMs,
+  doseLineGapHours,
+  doseLineScheduledMs,
+  MOST_DOSES,
+} from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR, wallClock } from "../../core/time/index.ts";
 import { numberPrint } from "../../core/units/index.ts";
 
@@ -78,8 +85,46 @@ function rhythm({ repeat, start }: DoseLine): string {
   return `clock ${[...repeat.clock].sort().join(" ")} on ${repeat.weekdays?.join(" ") ?? "every day"}`;
 }
 
-/** A given line that still runs at the now line: it repeats, has begun, and its end is less than one interval back (on weekdays, the longest gap between two). */
-export function isRunning(line: DoseLine, endMs: number | null, nowMs: number): boolean {
+/**
+ * Whether a given line is what an order made at the now line replaces: it repeats, has begun, and its end is less than one interval back
+ * (on weekdays, the longest gap between two). Up to two of its longest gaps back it still is, because a dose is often held for a level,
+ * unless another repeating line began after its end.
+ */
+export function isRunning(line: DoseLine, lines: readonly DoseLine[], nowMs: number, zone: string): boolean {
   if (!line.repeat || instantMs(line.start) > nowMs) return false;
-  return endMs === null || endMs + (doseLineGapHours(line) ?? 0) * MS_PER_HOUR > nowMs;
+  const endMs = doseLineEndMs(line, zone);
+  if (endMs === null || endMs + (doseLineGapHours(line) ?? 0) * MS_PER_HOUR > nowMs) return true;
+  const isFollowed = lines.some(({ repeat, start }) => {
+    const startMs = instantMs(start);
+    return repeat !== undefined && startMs > endMs && startMs <= nowMs;
+  });
+  return !isFollowed && endMs + HELD_GAPS * longestGapHours(line.repeat) * MS_PER_HOUR > nowMs;
+}
+
+/** A line this many of its gaps past its last dose has been stopped, not held. Our choice. */
+const HELD_GAPS = 2;
+
+/** The most hours from one dose to the next, as the wall clock counts. */
+function longestGapHours(repeat: DoseRepeat): number {
+  if ("every" in repeat) return repeat.every.value;
+  const times = repeat.clock.map((time) => {
+    const [hour = 0, minute = 0] = time.split(":").map(Number);
+    return hour + minute / 60;
+  });
+  const week = (repeat.weekdays ?? [1, 2, 3, 4, 5, 6, 7])
+    .flatMap((day) => times.map((hours) => 24 * day + hours))
+    .sort((a, b) => a - b);
+  const gaps = week.map((hours, i) => (week[i + 1] ?? (week[0] ?? hours) + 168) - hours);
+  return Math.max(...gaps);
+}
+
+/** When the dose after number `index` of a line is due by its schedule, were it to go on. */
+export function nextDueMs(line: DoseLine, index: number, zone: string): number | null {
+  const { repeat } = line;
+  if (!repeat || index + 1 >= MOST_DOSES) return null;
+  const goesOn: DoseRepeat =
+    "every" in repeat
+      ? { every: repeat.every }
+      : { clock: repeat.clock, ...(repeat.weekdays && { weekdays: repeat.weekdays }) };
+  return doseLineScheduledMs({ ...line, repeat: goesOn }, index + 1, zone);
 }

@@ -1,11 +1,11 @@
-import type { OptionReadings } from "../../core/analysis/index.ts";
+import type { DoseMark, OptionReadings } from "../../core/analysis/index.ts";
 import type { Case, Option } from "../../core/case/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { listWords, summaryOrderWords as words } from "../../core/messages/index.ts";
-import { type DoseLine, doseLineEndMs } from "../../core/regimen/index.ts";
+import type { DoseLine } from "../../core/regimen/index.ts";
 import { instantMs } from "../../core/time/index.ts";
 import { type OrderLine, orderLine } from "./orderLine.ts";
-import { isRunning, isSameRegimen, scheduleBrief } from "./orderSchedule.ts";
+import { isRunning, isSameRegimen, nextDueMs, scheduleBrief } from "./orderSchedule.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryOrder } from "./summaryModel.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
@@ -42,42 +42,51 @@ export function summaryOrder(input: SummaryInput, print: SummaryPrint): OrderRes
       lines: lines.map(({ line, mass }) =>
         lines.length === 1 ? line : { ...line, sentences: [words.perDose(mass), ...line.sentences] },
       ),
-      sentences: [...replacedSentence(input.case, option.lines, print), ...totalSentences(input, option, lines, print)],
+      sentences: [...replacedSentence(input, option.lines, print), ...totalSentences(input, option, lines, print)],
     },
     notMakeable: lines.flatMap(({ notMakeable }) => notMakeable),
     empty: lines.flatMap(({ mass, hasDoseToCome }) => (hasDoseToCome ? [] : [words.nothingLeft(mass)])),
   };
 }
 
-/** What was running at the now line. */
-export function runningLines(value: Case): readonly DoseLine[] {
-  const nowMs = instantMs(value.now);
-  return value.given.filter((line) => isRunning(line, doseLineEndMs(line, value.timeZone), nowMs));
-}
-
-export function runningWords(
-  value: Case,
-  lines: readonly DoseLine[],
+/** What was running at the now line, in words: null where nothing was given before it. */
+export function runningText(
+  { case: value, analysis }: Pick<SummaryInput, "case" | "analysis">,
   ordered: readonly DoseLine[],
   print: SummaryPrint,
-): string {
-  return listWords(
-    lines.map((line) => {
-      const amount = print.exact(line.amount);
-      return ordered.some(({ product }) => product === line.product)
-        ? words.running(amount, scheduleBrief(line))
-        : words.runningOf(productOf(value.medicine, line.product).name, amount, scheduleBrief(line));
-    }),
-  );
+): { readonly lines: readonly DoseLine[]; readonly text: string } | null {
+  const nowMs = instantMs(value.now);
+  const counted = analysis.given.filter(({ countedMg }) => countedMg > 0);
+  const lines = value.given.filter((line) => isRunning(line, value.given, nowMs, value.timeZone));
+  const named = (product: string, amount: string) =>
+    ordered.some((line) => line.product === product)
+      ? amount
+      : words.ofProduct(productOf(value.medicine, product).name, amount);
+  const at = ({ atH }: DoseMark) => print.at(print.ms(atH), "dayClock");
+  /** Said where a dose is due since: nobody reads from "every 12 hours" that one was held. */
+  const since = (line: DoseLine) => {
+    const last = counted.findLast(({ lineId }) => lineId === line.id);
+    const nextMs = last ? nextDueMs(line, last.index, value.timeZone) : null;
+    return last && nextMs !== null && nextMs < nowMs ? words.since(at(last)) : "";
+  };
+  if (lines.length > 0) {
+    const text = lines.map(
+      (line) => words.running(named(line.product, print.exact(line.amount)), scheduleBrief(line)) + since(line),
+    );
+    return { lines, text: listWords(text) };
+  }
+  const last = counted.at(-1);
+  return last ? { lines, text: words.lastGiven(named(last.product, print.exact(last.amount)), at(last)) } : null;
 }
 
-function replacedSentence(value: Case, ordered: readonly DoseLine[], print: SummaryPrint): readonly string[] {
-  if (value.given.length === 0) return [words.noneGiven];
-  const running = runningLines(value);
-  if (running.length === 0) return [words.noneRunning];
+function replacedSentence(input: SummaryInput, ordered: readonly DoseLine[], print: SummaryPrint): readonly string[] {
+  if (input.case.given.length === 0) return [words.noneGiven];
+  const found = runningText(input, ordered, print);
+  if (!found) return [words.noneRunning];
+  const { lines, text } = found;
+  if (lines.length === 0) return [words.noneRunningSince(text)];
   const isSame =
-    running.length === ordered.length && running.every((line) => ordered.some((other) => isSameRegimen(line, other)));
-  const text = runningWords(value, running, ordered, print);
+    lines.length === ordered.length && lines.every((line) => ordered.some((other) => isSameRegimen(line, other)));
   return [isSame ? words.continues(text) : words.replaces(text)];
 }
 

@@ -253,16 +253,78 @@ describe("the chosen option in plain sentences", () => {
     );
   });
 
-  it("says that nothing was running when the given doses had ended", () => {
-    const given = [
-      {
-        ...orderedLine(),
-        id: "g",
-        start: "2026-03-01T08:00:00+00:00",
-        repeat: { every: { value: 12, unit: "h" as const }, count: 2 },
-      },
-    ];
-    expect(orderText(caseOrdering([orderedLine()], { given }))).toContain("No regimen was running at the now line.");
+  /** What the order says of the regimen before it, and the details beside it. */
+  const replaced = (given: Case["given"], now = "2026-03-04T12:00:00+00:00", ordered = orderedLine()) => {
+    const { order, details } = buildSummary(summaryInputOf(caseOrdering([ordered], { given, now, levels: [] })));
+    const row = details.elements.find(({ label }) => label === "Regimen before");
+    return [order?.sentences[0], row?.value].map((text) => text?.replaceAll("\u00a0", " "));
+  };
+  const ended = (count: number, change: Partial<DoseLine> = {}) =>
+    orderedLine({
+      id: "g",
+      start: "2026-03-01T08:00:00+00:00",
+      repeat: { every: { value: 12, unit: "h" }, count },
+      ...change,
+    });
+
+  it("a dose held for the level: the regimen is still the one replaced, and its last dose is named", () => {
+    // Six doses: the last on Tuesday at 20:00, the next would be due on Wednesday at 08:00.
+    const held = "300 mg every 12 hours (last dose Tue 3 March, 20:00)";
+    expect(replaced([ended(6)], "2026-03-04T09:00:00+00:00")).toEqual([`Continues ${held}, unchanged.`, held]);
+    expect(replaced([ended(6, { amount: { value: 200, unit: "mg" } })], "2026-03-04T19:59:00+00:00")[0]).toBe(
+      "Replaces 200 mg every 12 hours (last dose Tue 3 March, 20:00).",
+    );
+    // Due right now is not yet held.
+    expect(replaced([ended(6)], "2026-03-04T08:00:00+00:00")[0]).toBe("Continues 300 mg every 12 hours, unchanged.");
+    // A line without an end whose last dose is marked missed.
+    const missed = orderedLine({
+      id: "g",
+      start: "2026-03-03T08:00:00+00:00",
+      amount: { value: 200, unit: "mg" },
+      except: [{ index: 2, status: "missed" }],
+    });
+    expect(replaced([missed])[0]).toBe("Replaces 200 mg every 12 hours (last dose Tue 3 March, 20:00).");
+  });
+
+  it("by the clock and on weekdays the longest gap counts twice", () => {
+    const daily = (days: number) => ended(0, { repeat: { clock: ["08:00", "12:00"], days } });
+    // The last dose on Monday at 12:00; the longest gap is 20 hours.
+    const text = "300 mg at each of 08:00 and 12:00, every day (last dose Mon 2 March, 12:00)";
+    expect(replaced([daily(2)], "2026-03-04T03:59:00+00:00")[1]).toBe(text);
+    expect(replaced([daily(2)], "2026-03-04T04:00:00+00:00")[1]).toBe(
+      "none running; last dose 300 mg, Mon 2 March, 12:00",
+    );
+    // Mondays only: two weeks less a minute after the last.
+    const mondays = ended(0, { repeat: { clock: ["08:00"], weekdays: [1], days: 2 } });
+    expect(replaced([mondays], "2026-03-16T07:59:00+00:00")[1]).toBe(
+      "300 mg on Monday at 08:00 (last dose Mon 2 March, 08:00)",
+    );
+    expect(replaced([mondays], "2026-03-16T08:00:00+00:00")[1]).toMatch(/^none running/);
+  });
+
+  it("what another line followed is not replaced a second time; two lines in parallel both are", () => {
+    const second = orderedLine({ id: "h", start: "2026-03-03T08:00:00+00:00" });
+    expect(replaced([ended(4, { amount: { value: 200, unit: "mg" } }), second], "2026-03-03T09:00:00+00:00")[0]).toBe(
+      "Continues 300 mg every 12 hours, unchanged.",
+    );
+    const each = { repeat: { every: { value: 24, unit: "h" as const }, count: 2 } };
+    const evening = ended(0, { id: "h", start: "2026-03-01T20:00:00+00:00", ...each });
+    expect(replaced([ended(0, each), evening], "2026-03-03T09:00:00+00:00")[0]).toBe(
+      "Replaces 300 mg every 24 hours (last dose Mon 2 March, 08:00) and 300 mg every 24 hours.",
+    );
+  });
+
+  it("says that nothing was running, and the last dose, when the given doses had ended or were single", () => {
+    const none = "No regimen was running at the now line; last dose";
+    expect(replaced([ended(2)])).toEqual([
+      `${none} 300 mg, Sun 1 March, 20:00.`,
+      "none running; last dose 300 mg, Sun 1 March, 20:00",
+    ]);
+    expect(replaced([ended(6)], "2026-03-04T20:00:00+00:00")[0]).toBe(`${none} 300 mg, Tue 3 March, 20:00.`);
+    const { repeat: _, ...single } = ended(1, { product: "tablet", start: "2026-03-04T08:00:00+00:00" });
+    expect(replaced([single])[0]).toBe(`${none} immediate-release tablet, 300 mg, Wed 4 March, 08:00.`);
+    const later = { ...single, start: "2026-03-04T13:00:00+00:00" };
+    expect(replaced([later])).toEqual(["No regimen was running at the now line.", "not recorded"]);
   });
 
   it("warns when the clocks change under an elapsed-hours interval", () => {
