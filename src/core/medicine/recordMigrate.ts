@@ -9,11 +9,14 @@ export const RECORD_MIGRATIONS: readonly ((record: Fields) => Fields)[] = [recor
 
 /**
  * Brings a record of any released version to the newest; what is no record is handed on for the schema to refuse.
- * A newer one gives "record-newer".
+ * A newer one gives "record-newer", a file that says it is something else "record-format".
  */
 export function recordMigrate(value: unknown): Result<unknown> {
   if (typeof value !== "object" || value === null || Array.isArray(value)) return succeed(value);
   const { format, version } = value as Fields;
+  if (typeof format === "string" && format !== RECORD_FORMAT) {
+    return fail(issue("record-format", { found: format.slice(0, 60), allowed: RECORD_FORMAT }, ["format"]));
+  }
   if (format !== RECORD_FORMAT || typeof version !== "number" || !Number.isInteger(version)) return succeed(value);
   if (version > RECORD_VERSION) {
     return fail(issue("record-newer", { found: version, known: RECORD_VERSION }, ["version"]));

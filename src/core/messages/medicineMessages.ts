@@ -117,6 +117,8 @@ function figureName({ figure, product }: Data): string {
 /** Faults of a medicine record and of amounts of its products; and those that any stored file can have. */
 export const medicineMessages: Readonly<Record<string, MessageFunction>> = {
   "field-unknown": (data) => `The field ${at(data)} is not known here.`,
+  "record-format": ({ found, allowed }) =>
+    `The file is a ${said(found)}, not a medicine record (${said(allowed)}).${found === "ebbline-case" ? " Import it on the screen of cases: its record comes with it." : ""}`,
   "field-missing": (data) => `The field ${at(data)} is missing.`,
   "value-wrong-kind": (data) =>
     `${at(data)} is ${String(data.found)}; it must be ${KINDS[String(data.allowed)] ?? String(data.allowed)}.`,

@@ -88,7 +88,7 @@ describe("across fields", () => {
     ["a field that is not known", put("products.0.colour", "white"), ["field-unknown products.0.colour"]],
     ["a field that is missing", take("matrix"), ["field-missing matrix"]],
     ["a number as text", put("toxicFrom.value", "25.1"), ["value-wrong-kind toxicFrom.value"]],
-    ["another format", put("format", "else"), ["value-not-listed format"]],
+    ["another format", put("format", "else"), ["record-format format"]],
     ["another version", put("version", 3), ["record-newer version"]],
     ["another kind of kinetics", put("kinetics.kind", "else"), ["value-not-listed kinetics.kind"]],
     [

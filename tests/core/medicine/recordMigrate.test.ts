@@ -154,6 +154,19 @@ describe("a record of another version", () => {
     expect(newer.ok ? "" : issueMessage(newer.issues[0]!)).toContain("newer version of the program");
   });
 
+  it("a file that says it is something else is answered with that alone; a case with where it belongs", () => {
+    const found = (format: string) => {
+      const read = medicineParse({ format, version: 1 });
+      return read.ok ? [] : read.issues.map(issueMessage);
+    };
+    expect(found("shopping-list")).toEqual([
+      'The file is a "shopping-list", not a medicine record ("ebbline-medicine").',
+    ]);
+    expect(found("ebbline-case")).toEqual([
+      'The file is a "ebbline-case", not a medicine record ("ebbline-medicine"). Import it on the screen of cases: its record comes with it.',
+    ]);
+  });
+
   it.each([0, -1, 1.5, "1", null])("version %j goes to the schema as it is", (version) => {
     const value = { format: "ebbline-medicine", version };
     expect(recordMigrate(value)).toEqual({ ok: true, value });
