@@ -37,7 +37,7 @@ export const summaryPatientWords = {
   taught: "taught",
   taughtCell: (word: string, left: string) => `${word}: ${left} % of the spread left`,
   method: (method: string, steps: string) =>
-    `Parameters are log-normal about the typical patient's, ω their standard deviation on the ln scale; most likely values found in ${steps} steps; ${method}. Median and intervals are of the draws.`,
+    `Parameters are log-normal about the typical patient's, ω their standard deviation on the ln scale, √(ln(1 + CV²)) of the record's CV; most likely values found in ${steps} steps; ${method}. Median and intervals are of the draws.`,
   methodSource: "Method, accuracy and where it fails: docs/methods/levels-to-this-patient.md of the program.",
   figuresRemark: "typical patient, before the levels",
 } as const;
