@@ -18,7 +18,7 @@ test("saturable elimination: no half-life is shown, and an option above Vmax is 
   await openDemo(page, "Quay ward 1, bed 7");
   await expectFit(page);
   await expect(page.locator("[data-reading=halfLife]")).toHaveCount(0);
-  await expect(page.locator("[data-concern='never-steady:C']")).toContainText("never reaches a steady state");
+  await expect(page.locator("[data-concern='never-steady-chance:C']")).toContainText("never to reach a steady state");
   await expect(page.locator("[data-reading=peak] td").nth(2)).toHaveText("none");
   await page.getByRole("button", { name: "Print summary" }).click();
   const text = flat((await printPage(page, info.outputPath("summary.pdf"))).texts.join(" "));

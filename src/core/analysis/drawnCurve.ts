@@ -20,6 +20,8 @@ export interface LookedAt {
 export interface DrawnFigures {
   readonly peak: Float64Array;
   readonly lowest: Float64Array;
+  /** When it comes: the first time, on the clock. */
+  readonly lowestAtH: Float64Array;
   readonly average: Float64Array;
   readonly hoursBelow: Float64Array;
   readonly hoursWithin: Float64Array;
@@ -48,6 +50,7 @@ export function* drawnCurve(
   const figures = {
     peak: column(),
     lowest: column(),
+    lowestAtH: column(),
     average: column(),
     hoursBelow: column(),
     hoursWithin: column(),
@@ -86,6 +89,7 @@ function readFigures(
 ): void {
   let peak = levels[0]![draw]!;
   let lowest = peak;
+  let lowestAtH = times[0]!;
   let area = 0;
   let below = 0;
   let above = 0;
@@ -95,7 +99,10 @@ function readFigures(
     const end = levels[i]![draw]!;
     const length = times[i]! - times[i - 1]!;
     peak = Math.max(peak, end);
-    lowest = Math.min(lowest, end);
+    if (end < lowest) {
+      lowest = end;
+      lowestAtH = times[i]!;
+    }
     area += ((start + end) / 2) * length;
     if (!window) continue;
     below += length * partBelow(start, end, window.low);
@@ -104,6 +111,7 @@ function readFigures(
   const span = times[i - 1]! - times[0]!;
   into.peak[at] = peak;
   into.lowest[at] = lowest;
+  into.lowestAtH[at] = lowestAtH;
   into.average[at] = area / span;
   into.hoursBelow[at] = below;
   into.hoursAbove[at] = above;

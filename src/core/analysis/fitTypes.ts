@@ -143,6 +143,8 @@ export interface IndividualReadings {
     readonly hoursAbove: Spread | null;
     /** Of what the window is about (lowest, highest, average, AUC in 24 h, or the whole curve), over the span. */
     readonly chance: WindowChance | null;
+    /** Share of the draws whose lowest comes before the option's first dose acts, which no dose of it can change; null without a dose to come. */
+    readonly lowestBeforeOption: number | null;
   };
   readonly steadyState: {
     readonly peak: Spread;
@@ -160,7 +162,9 @@ export interface IndividualReadings {
   } | null;
   /** At steady state, of what the window is about; a draw that never settles lies above it. null without a window or a repeat. */
   readonly steadyChance: WindowChance | null;
-  /** Share of the draws that never reach a steady state (saturable elimination); their steady-state figures are left out. */
+  /** Share of the draws that never reach a steady state (saturable elimination); their steady-state figures are left out, and of too many such draws no figure is given. */
   readonly shareNeverSteady: number;
+  /** Share of the draws that reach the record's toxic limit, one that never settles among them; null without a limit, or where it is for a trough and the option does not repeat. */
+  readonly toxicChance: number | null;
   readonly halfLifeH: Spread | null;
 }

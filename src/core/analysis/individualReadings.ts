@@ -8,6 +8,7 @@ import type { IndividualReadings, Spread, WindowChance } from "./fitTypes.ts";
 import { finalDisposition, modelInputs } from "./modelInputs.ts";
 import { regimenPattern } from "./regimenPattern.ts";
 import { spreadOfEqual } from "./spreadOf.ts";
+import { toxicChance } from "./toxicChance.ts";
 import { type WindowFigures, windowChance } from "./windowChance.ts";
 import { windowLimits } from "./windowLimits.ts";
 import { BEFORE_NEXT_DOSE, timedLevels, windowDrawH } from "./windowTiming.ts";
@@ -32,7 +33,7 @@ export function* individualReadings(
   typical: Model,
   patients: DrawnPatients,
   figures: DrawnFigures,
-  { fromH, toH }: { readonly fromH: number; readonly toH: number },
+  { fromH, toH, actsFromH }: { readonly fromH: number; readonly toH: number; readonly actsFromH: number | null },
   halfLifeH: Spread | null,
 ): Generator<number, IndividualReadings> {
   const settled = yield* steadyDraws(value, lines, typical, patients);
@@ -44,6 +45,10 @@ export function* individualReadings(
   // A window for a level at a time after the dose is not about the lowest level of a span. Chances first: spreads put a column in order.
   const spanChance = settled.drawH === null ? chance(figures) : null;
   const chanceSettled = steadyChance(settled, patients.count, value.window !== undefined, chance);
+  const chanceToxic = toxicChance(value, {
+    span: figures.peak,
+    steady: settled.isRepeating ? settled.highest : null,
+  });
   const steadyState = steadyReadings(settled, patients.count);
   const hasWindow = value.window !== undefined && value.window.quantity !== "auc24";
   const hours = (column: Float64Array) => (hasWindow ? spreadOfEqual(column) : null);
@@ -61,10 +66,12 @@ export function* individualReadings(
       hoursWithin: hours(figures.hoursWithin),
       hoursAbove: hours(figures.hoursAbove),
       chance: spanChance,
+      lowestBeforeOption: actsFromH === null ? null : shareBy(figures.lowestAtH, actsFromH),
     },
     steadyState,
     steadyChance: chanceSettled,
     shareNeverSteady: settled.isRepeating ? (patients.count - settled.count) / patients.count : 0,
+    toxicChance: chanceToxic,
     halfLifeH,
   };
 }
@@ -77,6 +84,8 @@ interface SteadyDraws {
   /** How many settle at all; the columns have so many rows. */
   readonly count: number;
   readonly columns: SteadyColumns;
+  /** Of every draw: the highest level, or of those before a dose where the toxic limit is for them; infinite where it never settles. */
+  readonly highest: Float64Array;
 }
 
 function* steadyDraws(
@@ -98,6 +107,7 @@ function* steadyDraws(
       new Float64Array(count),
     ]),
   ) as SteadyColumns;
+  const highest = new Float64Array(count).fill(Number.POSITIVE_INFINITY);
   let settled = 0;
   for (let n = 0; n < count; n++) {
     const own = modelScaled(
@@ -124,6 +134,7 @@ function* steadyDraws(
             periodH,
             drawH ?? BEFORE_NEXT_DOSE,
           ).highest;
+        highest[n] = isTroughToxic ? columns.highestTrough[settled]! : state.peak;
         settled++;
       }
     }
@@ -137,6 +148,7 @@ function* steadyDraws(
     isTroughToxic,
     count: settled,
     columns,
+    highest,
   };
 }
 
@@ -189,6 +201,13 @@ function withNeverSteady(chance: WindowChance | null, share: number): WindowChan
   if (!chance) return null;
   const rest = 1 - share;
   return { below: chance.below * rest, within: chance.within * rest, above: chance.above * rest + share };
+}
+
+/** Rounding of a time on the clock, h. */
+const SAME_TIME_H = 1e-6;
+
+function shareBy(timesH: Float64Array, untilH: number): number {
+  return timesH.filter((time) => time <= untilH + SAME_TIME_H).length / timesH.length;
 }
 
 function times({ q05, q25, q50, q75, q95 }: Spread, factor: number): Spread {

@@ -119,11 +119,19 @@ function* shownSteps(
     const lines = value.options.find((option) => option.id === id)!.lines;
     const looked = { toH: clock.readingsToH, window: concentrationWindow(value) };
     const { band, figures } = yield* next(drawnCurve(whole, patients, clock.nowH, clock.toH, looked));
-    const span = { fromH: clock.nowH, toH: clock.readingsToH };
+    const span = { fromH: clock.nowH, toH: clock.readingsToH, actsFromH: actsFrom(typical, doses) };
     const individual = yield* next(individualReadings(value, lines, typical, patients, figures, span, halfLifeH));
     fitted.set(id, { individual, band });
   }
   return { givenBand, fittedOptions: options.map((option) => ({ ...option, ...fitted.get(option.id) })) };
+}
+
+/** When the first dose of an option begins to be absorbed; null where none counts. */
+function actsFrom({ products }: Model, doses: readonly DoseMark[]): number | null {
+  const begins = doses
+    .filter((mark) => mark.countedMg > 0)
+    .map((mark) => mark.atH + (products.find(({ product }) => product === mark.product)?.lag.value ?? 0));
+  return begins.length === 0 ? null : Math.min(...begins);
 }
 
 function individualFit(

@@ -42,3 +42,6 @@ export function wordList(words: readonly string[]): string {
   const last = words.at(-1) ?? "";
   return words.length < 2 ? last : `${words.slice(0, -1).join(", ")} and ${last}`;
 }
+
+/** Stands behind a figure of the typical patient where this patient has its own beside it; without a fit every figure is the typical one's. */
+export const inTypical = (data: ConcernData): string => (data.isFitted === true ? " in the typical patient" : "");

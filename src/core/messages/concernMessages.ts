@@ -10,6 +10,7 @@ import {
   countWords,
   figure,
   hours,
+  inTypical,
   dataNumber as number,
   dataText as text,
   when,
@@ -51,8 +52,8 @@ function outsideWindow(data: ConcernData, side: "above" | "below"): ConcernWords
   const point = `${afterDoseH === null ? "" : "level "}${windowPointWords(name, afterDoseH)}`;
   const words = name === "lowest-and-highest" ? (side === "above" ? "highest" : "lowest") : point;
   return {
-    title: `Option ${text(data, "option")} settles ${side} the target window`,
-    text: `Expected ${words} at steady state ${print(found)}; the window's ${side === "above" ? "upper" : "lower"} edge is ${print(edge)}.`,
+    title: `Option ${text(data, "option")} settles ${side} the target window${inTypical(data)}`,
+    text: `Expected ${words} at steady state${inTypical(data)} ${print(found)}; the window's ${side === "above" ? "upper" : "lower"} edge is ${print(edge)}.`,
   };
 }
 
@@ -81,11 +82,11 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     text: `Every figure of ${text(data, "name")} is made up for demonstration.`,
   }),
   "option-toxic": (data) => ({
-    title: `Option ${text(data, "option")} reaches the toxic limit`,
+    title: `Option ${text(data, "option")} reaches the toxic limit${inTypical(data)}`,
     text:
       data.at === "trough"
-        ? `Highest predicted just before a dose ${concentration(data, "peak")}; the record's toxic limit for that level is ${concentration(data, "from")} (${text(data, "source")}).`
-        : `Highest predicted ${concentration(data, "peak")}; the record's toxic limit is ${concentration(data, "from")} (${text(data, "source")}).`,
+        ? `Highest predicted just before a dose${inTypical(data)} ${concentration(data, "peak")}; the record's toxic limit for that level is ${concentration(data, "from")} (${text(data, "source")}).`
+        : `Highest predicted${inTypical(data)} ${concentration(data, "peak")}; the record's toxic limit is ${concentration(data, "from")} (${text(data, "source")}).`,
   }),
   "level-after-now": (data) => ({
     title: `The level of ${when(data)} lies after the now line`,
@@ -97,11 +98,11 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "level-while-absorbing": (data) => ({
     title: `The level of ${when(data)} was drawn while still absorbing`,
-    text: `${hours(number(data, "afterDoseH"))} after the dose; absorption takes about ${hours(number(data, "absorbedH"))} (lag and three absorption half-lives). Not a trough.`,
+    text: `${hours(number(data, "afterDoseH"))} after the dose; absorption takes${inTypical(data)} about ${hours(number(data, "absorbedH"))} (lag and three absorption half-lives). Not a trough.`,
   }),
   "level-far-off": (data) => ({
     title: `The level of ${when(data)} is far from the prediction`,
-    text: `Measured ${concentration(data, "measured")}, predicted ${concentration(data, "predicted")}: ${figure(number(data, "ratio"))} times. Wrong time, missed dose, interaction, assay, or a patient unlike the typical one?`,
+    text: `Measured ${concentration(data, "measured")}, predicted${inTypical(data)} ${concentration(data, "predicted")}: ${figure(number(data, "ratio"))} times. Wrong time, missed dose, interaction, assay, or a patient unlike the typical one?`,
   }),
   "option-above-window": (data) => outsideWindow(data, "above"),
   "option-below-window": (data) => outsideWindow(data, "below"),
@@ -146,8 +147,8 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     text: `${countWords(number(data, "count"), "change", "changes")}, the last ${instantText(number(data, "lastMs"), text(data, "zone"), "dayClock")}. Steady-state figures refer to the final state.${number(data, "levelsBefore") > 0 ? ` ${countWords(number(data, "levelsBefore"), "level was", "levels were")} drawn before it.` : ""}`,
   }),
   "never-steady": (data) => ({
-    title: `Option ${text(data, "option")} never reaches a steady state`,
-    text: "More is taken than this patient can ever eliminate: the level rises without end.",
+    title: `Option ${text(data, "option")} never reaches a steady state${inTypical(data)}`,
+    text: "More is taken than the typical patient can ever eliminate: the level rises without end.",
   }),
   "roads-differ": (data) => ({
     title: "The cross-check does not agree",
@@ -155,7 +156,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "level-while-distributing": (data) => ({
     title: `The level of ${when(data)} was drawn before distribution was over`,
-    text: `${hours(number(data, "afterDoseH"))} after the dose; distribution takes until about ${hours(number(data, "distributedH"))} after it. It says little about the tissue.`,
+    text: `${hours(number(data, "afterDoseH"))} after the dose; distribution takes${inTypical(data)} until about ${hours(number(data, "distributedH"))} after it. It says little about the tissue.`,
   }),
   "value-confirmed": (data) => ({
     title: "An improbable value was confirmed",
@@ -165,7 +166,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     title: data.close
       ? "Absorption and elimination rates lie close together"
       : "Slower absorption could be slower elimination",
-    text: `${text(data, "product")}: the model takes half-life ${hours(number(data, "eliminationHalfLifeH"))} for elimination and ${hours(number(data, "absorptionHalfLifeH"))} for absorption. Elimination of ${hours(number(data, "otherHalfLifeH"))} with volume ${figure(number(data, "otherVolume"))} L gives the same curve; clearance ${figure(number(data, "clearance"))} L per h is the same in both. Levels after this product alone can't tell; an intravenous or immediate-release reference can.`,
+    text: `${text(data, "product")}: ${data.isFitted === true ? "in the typical patient " : ""}the model takes half-life ${hours(number(data, "eliminationHalfLifeH"))} for elimination and ${hours(number(data, "absorptionHalfLifeH"))} for absorption. Elimination of ${hours(number(data, "otherHalfLifeH"))} with volume ${figure(number(data, "otherVolume"))} L gives the same curve; clearance ${figure(number(data, "clearance"))} L per h is the same in both. Levels after this product alone can't tell; an intravenous or immediate-release reference can.`,
   }),
   "level-left-out": (data) => ({
     title: `The level of ${when(data)} is left out`,

@@ -14,6 +14,7 @@ import {
   wordList,
 } from "./concernFigures.ts";
 import { chanceWords, fitWords, influenceWords, windowChanceWords } from "./fitWords.ts";
+import { likelihoodWords } from "./likelihoodWords.ts";
 
 /** Why the levels say nothing of this patient. */
 const NO_FIT: Readonly<Record<NoFitReason, string>> = {
@@ -65,7 +66,6 @@ export function fitLine(fit: FitState, levels: number, use: "typical" | "individ
   }
 }
 
-const percent = (share: number): string => numberPrint(share * 100, { decimals: 0 });
 const beyond = (z: number): string =>
   `${figure(Math.abs(z))} residual standard deviations ${z > 0 ? "above" : "below"}`;
 const parts = (data: ConcernData): readonly string[] => data.parameters as readonly string[];
@@ -86,6 +86,27 @@ function outsideChance(data: ConcernData, side: "above" | "below", other: "above
   return {
     title: `Option ${text(data, "option")}: chance of lying ${side} the window in this patient ${chanceWords(number(data, side))}`,
     text: `Of ${windowChanceWords(data.quantity as TargetWindow["quantity"], (data.afterDoseH as number | null | undefined) ?? null)} ${data.isSteady ? "at steady state" : "over the span shown"}. Chance of lying ${other} the window ${chanceWords(number(data, other))}.`,
+  };
+}
+
+function chanceToxic(data: ConcernData): ConcernWords {
+  const isTrough = data.at === "trough";
+  const chance = number(data, "chance");
+  const words = likelihoodWords(chance, {
+    may: "may reach",
+    likely: "is likely to reach",
+    almostCertain: "almost certainly reaches",
+  });
+  const found =
+    data.median === null
+      ? ""
+      : `; ${isTrough || data.isSteady === true ? "" : "over the span shown "}median highest ${concentration(data, "median")}, 90 % between ${concentration(data, "low")} and ${concentration(data, "high")}`;
+  const never = number(data, "shareNeverSteady");
+  const counted =
+    never > 0 ? ` A level that never settles, chance ${chanceWords(never)}, counts as reaching it in the end.` : "";
+  return {
+    title: `Option ${text(data, "option")} ${words} the toxic limit in this patient`,
+    text: `With a chance of ${chanceWords(chance)} the highest${isTrough ? " just before a dose at steady state" : ""} reaches the record's toxic limit${isTrough ? " for that level" : ""}, ${concentration(data, "from")} (${text(data, "source")})${found}.${counted}`,
   };
 }
 
@@ -175,9 +196,14 @@ export const fitConcernMessages: Readonly<Record<string, (data: ConcernData) => 
   }),
   "option-chance-above": (data) => outsideChance(data, "above", "below"),
   "option-chance-below": (data) => outsideChance(data, "below", "above"),
-  "option-chance-toxic": (data) => ({
-    title: `Option ${text(data, "option")} may reach the toxic limit in this patient`,
-    text: `With a chance of at least ${percent(number(data, "chance"))} % the highest${data.at === "trough" ? " just before a dose at steady state" : ""} reaches the record's toxic limit${data.at === "trough" ? " for that level" : ""}, ${concentration(data, "from")} (${text(data, "source")}); median highest ${concentration(data, "median")}, 90 % between ${concentration(data, "low")} and ${concentration(data, "high")}.`,
+  "option-chance-toxic": chanceToxic,
+  "never-steady-chance": (data) => ({
+    title: `Option ${text(data, "option")} ${likelihoodWords(number(data, "share"), {
+      may: "may never reach",
+      likely: "is likely never to reach",
+      almostCertain: "almost certainly never reaches",
+    })} a steady state in this patient`,
+    text: `With a chance of ${chanceWords(number(data, "share"))} more is taken than this patient can ever eliminate, and the level rises without end. No steady-state figures are given for this patient.`,
   }),
 };
 

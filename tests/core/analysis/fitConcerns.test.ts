@@ -66,8 +66,9 @@ const withOption = (change: (option: NonNullable<ConcernContext["options"][numbe
 });
 const chance = (above: number, below = 0) =>
   withOption(() => ({ steadyChance: { below, within: 1 - above - below, above } }));
-const peak = (median: number) =>
-  withOption((found) => ({ span: { ...found.span, peak: spread(median) }, steadyState: null }));
+const toxic = (share: number) => withOption(() => ({ toxicChance: share }));
+const never = (share: number) =>
+  withOption((found) => ({ shareNeverSteady: share, steadyState: share > 0.05 ? null : found.steadyState }));
 const ambiguous = (isAmbiguous: boolean) =>
   withFit({
     flipFlop: {
@@ -152,7 +153,8 @@ const TABLE: readonly (readonly [code: string, raises: ConcernContext, doesNot: 
   ["levels-before-change", changed(quiet.levels[0]!.atH + 1), changed(quiet.levels[0]!.atH)],
   ["option-chance-above", chance(0.25), chance(0.24)],
   ["option-chance-below", chance(0.1, 0.25), chance(0.1, 0.24)],
-  ["option-chance-toxic", peak(20), peak(10)],
+  ["option-chance-toxic", toxic(0.05), toxic(0.049)],
+  ["never-steady-chance", never(0.17), never(0.05)],
 ];
 
 const found = (context: ConcernContext, code: string) =>
@@ -205,6 +207,82 @@ describe("concerns about the fit", () => {
     expect(codes("individual", own).filter((code) => both.includes(code))).toEqual([]);
     expect(codes("typical", own)).toEqual(expect.arrayContaining(both));
     expect(codes("individual", null)).toEqual(expect.arrayContaining(both));
+  });
+
+  it("the typical patient is named where the figure is its own although there is a fit, and only there", () => {
+    const steady = { ...quiet.options[0]!.typical!.steadyState!, peak: 40 };
+    const options = quiet.options.map((option) => ({
+      ...option,
+      typical: { ...option.typical!, steadyState: steady },
+    }));
+    const titles = (fit: ConcernContext["fit"]) => {
+      const context = { ...quiet, case: { ...value, fit: { ...value.fit, use: "typical" as const } }, options, fit };
+      return ["option-toxic", "option-above-window"].map((code) => {
+        const [one] = found(context, code);
+        const { title, text } = concernMessage(one!);
+        return [title.includes(" in the typical patient"), text.includes(" in the typical patient")];
+      });
+    };
+    expect(titles(quiet.fit)).toEqual([
+      [true, true],
+      [true, true],
+    ]);
+    expect(titles({ kind: "none", reason: "no-levels" })).toEqual([
+      [false, false],
+      [false, false],
+    ]);
+  });
+
+  it("says how likely the toxic limit is reached: may, is likely to, almost certainly", () => {
+    const words = (share: number) => concernMessage(found(toxic(share), "option-chance-toxic")[0]!);
+    expect([0.1, 0.49, 0.5, 0.94, 0.95, 1].map((share) => words(share).title)).toEqual([
+      "Option A may reach the toxic limit in this patient",
+      "Option A may reach the toxic limit in this patient",
+      "Option A is likely to reach the toxic limit in this patient",
+      "Option A is likely to reach the toxic limit in this patient",
+      "Option A almost certainly reaches the toxic limit in this patient",
+      "Option A almost certainly reaches the toxic limit in this patient",
+    ]);
+    expect(words(0.43).text).toMatch(/^With a chance of 43\u00a0% the highest reaches/);
+    expect([0.24, 0.25].map((share) => found(toxic(share), "option-chance-toxic")[0]!.gravity)).toEqual([
+      "check",
+      "stop",
+    ]);
+  });
+
+  it("a level that may rise without end is said of this patient with its chance, and not of the typical one as if of this one", () => {
+    const options = never(0.17).options.map((option) => ({
+      ...option,
+      typical: { ...option.typical!, steadyState: null, noSteadyState: "dose-rate-at-or-above-vmax" as const },
+    }));
+    const context: ConcernContext = { ...quiet, options };
+    const own = found(context, "never-steady-chance")[0]!;
+    expect(own.gravity).toBe("check");
+    expect(concernMessage(own).title).toBe("Option A may never reach a steady state in this patient");
+    expect(concernMessage(own).text).toMatch(
+      /^With a chance of 17\u00a0% more is taken than this patient can ever eliminate/,
+    );
+    expect(found(context, "never-steady")).toEqual([]);
+    const byTypical: ConcernContext = { ...context, case: { ...value, fit: { ...value.fit, use: "typical" } } };
+    expect(concernMessage(found(byTypical, "never-steady")[0]!).title).toBe(
+      "Option A never reaches a steady state in the typical patient",
+    );
+    expect(found(never(0.25), "never-steady-chance")[0]!.gravity).toBe("stop");
+  });
+
+  it("the half-lives of a flip-flop are the typical patient's, and said to be", () => {
+    const readings = {
+      assumed: { flipFlop: false, clearance: 2.92, volume: 31, eliminationHalfLife: 7.35, absorptionHalfLife: 2 },
+      alternative: { flipFlop: true, clearance: 2.92, volume: 8, eliminationHalfLife: 2, absorptionHalfLife: 7.35 },
+      reason: "rates-within-20-percent",
+    };
+    const model = {
+      ...quiet.model!,
+      products: quiet.model!.products.map((product) => ({ ...product, readings })),
+    } as unknown as NonNullable<ConcernContext["model"]>;
+    const text = (fit: ConcernContext["fit"]) => concernMessage(found({ ...quiet, model, fit }, "flip-flop")[0]!).text;
+    expect(text(quiet.fit)).toContain("in the typical patient the model takes half-life 7.35 hours");
+    expect(text({ kind: "none", reason: "no-levels" })).not.toContain("typical patient");
   });
 
   it("another option than the chosen one is pointed out only where it is likelier than not, and never as grave", () => {

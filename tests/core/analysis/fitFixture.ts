@@ -141,6 +141,7 @@ export function fittedAnalysis(typical: Analysis, change: Partial<IndividualFit>
             hoursWithin: span.hoursWithin === null ? null : spread(span.hoursWithin + 1, 1.2),
             hoursAbove: span.hoursAbove === null ? null : spread(span.hoursAbove + 1, 1.5),
             chance: { below: 0.31, within: 0.65, above: 0.04 },
+            lowestBeforeOption: 0,
           },
           steadyState: steadyState && {
             peak: of(steadyState.peak),
@@ -156,6 +157,7 @@ export function fittedAnalysis(typical: Analysis, change: Partial<IndividualFit>
           },
           steadyChance: { below: 0.16, within: 0.74, above: 0.1 },
           shareNeverSteady: 0,
+          toxicChance: 0,
           halfLifeH: halfLifeH === null ? null : spread(halfLifeH * 1.2, 1.1),
         },
       };

@@ -204,6 +204,22 @@ test("an option that many draws never settle under is said to lie above the wind
     expect(steadyChance!.above).toBeGreaterThan(0.5);
     const codes = analysis.concerns.filter(({ about }) => about.id === option.id).map(({ code }) => code);
     expect(codes).toContain("option-chance-above");
+    expect(codes).toContain("never-steady-chance");
+    expect(codes).not.toContain("never-steady");
+    expect(codes).not.toContain("option-toxic");
+    // A level that rises without end reaches any limit.
+    expect(option.individual!.toxicChance).toBeGreaterThanOrEqual(shareNeverSteady);
     expect(codes).not.toContain("option-chance-below");
   }
+});
+
+test("the lowest of the days shown is today's level where the option only raises it, and is known to be", () => {
+  const { analysis } = fitted(demoCase("saturable"));
+  for (const { individual } of analysis.options) expect(individual!.span.lowestBeforeOption).toBeGreaterThan(0.95);
+  // Less than before: the level falls to its lowest under the option.
+  const saturable = demoCase("saturable");
+  const line = saturable.options[0]!.lines[0]!;
+  const less = [{ ...line, amount: { value: 30, unit: "mg" as const } }];
+  const falling = fitted({ ...saturable, options: [{ ...saturable.options[0]!, lines: less }] }).analysis;
+  expect(falling.options[0]!.individual!.span.lowestBeforeOption).toBeLessThan(0.05);
 });

@@ -84,12 +84,13 @@ describe("a pattern is taken in the order in which the option gives it", () => {
       {
         peak: column(),
         lowest: column(),
+        lowestAtH: column(),
         average: column(),
         hoursBelow: column(),
         hoursWithin: column(),
         hoursAbove: column(),
       },
-      { fromH: 0, toH: 24 },
+      { fromH: 0, toH: 24, actsFromH: null },
       null,
     );
     let step = steps.next();

@@ -21,6 +21,7 @@ export const flipFlop: ConcernRule = ({ case: value, model, given, options, fit 
         {
           product: product.name,
           close,
+          isFitted: fit.kind === "fitted",
           flipped: readings.assumed.flipFlop,
           eliminationHalfLifeH: readings.assumed.eliminationHalfLife,
           absorptionHalfLifeH: readings.assumed.absorptionHalfLife,

@@ -21,6 +21,7 @@ export const levelFarOff: ConcernRule = (context) =>
               measured: level.measured,
               predicted: level.predicted,
               ratio,
+              isFitted: context.fit.kind === "fitted",
             },
           ),
         ]

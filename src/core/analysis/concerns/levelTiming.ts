@@ -5,7 +5,11 @@ import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 export const levelTiming: ConcernRule = (context) => {
   const { levels, given, model, clock } = context;
   return levels.flatMap((level) => {
-    const at = { atMs: clockMs(context, level.atH), zone: context.case.timeZone };
+    const at = {
+      atMs: clockMs(context, level.atH),
+      zone: context.case.timeZone,
+      isFitted: context.fit.kind === "fitted",
+    };
     const about = { kind: "level", id: level.id } as const;
     if (level.excluded !== null) return [];
     if (level.atH > clock.nowH) return [concern("level-after-now", "stop", about, at)];

@@ -2,7 +2,7 @@ import { type ConcernRule, concern } from "../concernRule.ts";
 import { concentrationWindow } from "../optionReadings.ts";
 
 /** An option whose steady state leaves the target window, judged by what the window is for. */
-export const optionOutsideWindow: ConcernRule = ({ case: value, options }) => {
+export const optionOutsideWindow: ConcernRule = ({ case: value, options, fit }) => {
   const { window } = value;
   if (!window) return [];
   const isArea = window.quantity === "auc24";
@@ -30,6 +30,7 @@ export const optionOutsideWindow: ConcernRule = ({ case: value, options }) => {
       least,
       most,
       afterDoseH: settled.timed?.afterDoseH ?? null,
+      isFitted: fit.kind === "fitted",
     };
     return [
       ...(most > high ? [concern("option-above-window", "check", about, data)] : []),
