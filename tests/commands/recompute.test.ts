@@ -94,7 +94,7 @@ test("every figure of this patient on the sheet is a rounding of one recompute p
     analysis: derive(parsed.value, { isFitted: true }),
     settings: { pageSize: "A4", microgram: "microgram", preparedBy: "" },
     revision: 1,
-    saving: { status: "saved", detail: "" },
+    saving: { status: "saved", savedAt: 0, detail: "" },
     analysisStatus: { status: "fresh", revision: 1, failure: null, isFitStale: false },
     hasChanges: false,
     isDragging: false,

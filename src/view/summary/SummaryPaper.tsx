@@ -26,7 +26,7 @@ export function SummaryPaper({ model, heading, isDetails = false, children }: Su
           </div>
           <div className="summary-when">
             <p>{model.printed}</p>
-            <p>{model.revision}</p>
+            <p>{model.saved}</p>
           </div>
           {model.marks !== "" && <p className="summary-marks">{model.marks}</p>}
         </div>

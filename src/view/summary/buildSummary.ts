@@ -54,10 +54,7 @@ export function buildSummary(input: SummaryInput): SummaryModel {
   const banners = summaryBanners(input, refusal, order);
   const record = words.record(value.medicine.name, value.medicine.recordVersion);
   const fingerprint = words.fingerprint(fingerprintGroups(analysis.fingerprint.slice(0, FINGERPRINT_SHORT)));
-  const revision = [
-    words.revision(input.revision),
-    ...(input.saving.status === "read-only" ? [words.readOnly] : []),
-  ].join(", ");
+  const saved = savedWords(input, print);
   const watermark = value.demo ? WATERMARK : null;
   return {
     pageSize: input.settings.pageSize,
@@ -65,8 +62,8 @@ export function buildSummary(input: SummaryInput): SummaryModel {
     label: value.label === "" ? words.unlabelled : value.label,
     person: personWords(input, print),
     printed: words.printed(print.at(input.printedAtMs, "full")),
-    revision,
-    running: [value.label, revision, fingerprint, ...(watermark ? [watermark] : [])]
+    saved,
+    running: [value.label, saved, fingerprint, ...(watermark ? [watermark] : [])]
       .filter((part) => part !== "")
       .join(" · "),
     watermark,
@@ -78,7 +75,7 @@ export function buildSummary(input: SummaryInput): SummaryModel {
     hours: windowText(input, print),
     kinetics: kineticsText(input, print),
     levels: levelsText(input, print),
-    nextLevel: nextLevelText(input, print),
+    nextLevel: nextLevelText(input, cite, print),
     concerns: concernsOfOption(input)
       .filter(({ gravity, code }) => gravity === "check" && !SAID_ELSEWHERE.includes(code))
       .map(concernText),
@@ -106,6 +103,17 @@ function details(input: SummaryInput, cite: Citations, print: SummaryPrint): Sum
     fingerprint: fingerprintGroups(input.analysis.fingerprint),
     recompute: words.recompute(RECOMPUTE_COMMAND),
   };
+}
+
+/**
+ * When the state shown was saved: on the sheet it tells a later state from an earlier one, as no count that begins anew with every opening can.
+ * Which state it is says the fingerprint.
+ */
+function savedWords({ saving }: SummaryInput, print: SummaryPrint): string {
+  const isReader = saving.status === "read-only";
+  const isSaved = (isReader || saving.status === "saved") && saving.savedAt !== null;
+  const when = isSaved ? words.saved(print.at(saving.savedAt, "typed")) : words.notSaved;
+  return [when, ...(isReader ? [words.readOnly] : [])].join(", ");
 }
 
 /** "woman, 64 years, 58 kg, 162 cm", with what is missing said. */

@@ -8,7 +8,7 @@ export interface SummaryInput {
   readonly analysis: Analysis;
   readonly settings: Settings;
   readonly revision: number;
-  readonly saving: Pick<Saving, "status" | "detail">;
+  readonly saving: Pick<Saving, "status" | "detail" | "savedAt">;
   readonly analysisStatus: Pick<AnalysisState, "status" | "revision" | "failure" | "isFitStale">;
   /** Something was changed since the case was opened, undone or not. */
   readonly hasChanges: boolean;

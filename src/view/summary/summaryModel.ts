@@ -109,8 +109,8 @@ export interface SummaryModel {
   /** "woman, 64 years, 58 kg, 162 cm" */
   readonly person: string;
   readonly printed: string;
-  /** "case revision 14", "read-only copy" */
-  readonly revision: string;
+  /** "case saved Wed 4 March 2026 12:03, read-only copy" */
+  readonly saved: string;
   /** In the margin of every sheet. */
   readonly running: string;
   /** null unless the case is a demonstration. */

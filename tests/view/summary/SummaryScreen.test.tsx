@@ -16,7 +16,7 @@ function openCase(change: Partial<OpenCase> = {}): OpenCase {
     role: "writer",
     undo: [],
     redo: [],
-    saving: { status: "saved", savedAt: 0, reason: null, detail: "" },
+    saving: { status: "saved", savedAt: Date.UTC(2026, 2, 4, 12, 3), reason: null, detail: "" },
     analysis: {
       result: typicalAnalysis(value),
       revision: 3,
@@ -111,7 +111,7 @@ describe("SummaryScreen", () => {
     const { store } = show({ ...open, value });
     const margin = () => document.documentElement.style.getPropertyValue("--summary-running");
     expect(margin()).toMatch(
-      /^"Ward \\"3\\" \\\\ bed · case revision 3 · fingerprint [0-9a-f ]+ · demo — invented patient"$/,
+      /^"Ward \\"3\\" \\\\ bed · case saved Wed 4 March 2026 12:03 · fingerprint [0-9a-f ]+ · demo — invented patient"$/,
     );
     act(() => store.setState({ open: null }));
     expect(margin()).toBe("");

@@ -41,14 +41,14 @@ describe("SummarySheet", () => {
     expect(screen.getByRole("img", { name: chart.title })).toBeInTheDocument();
   });
 
-  it("carries patient, printed time and revision on every sheet, and the watermark when it is a demonstration", () => {
+  it("carries patient, printed time and time of saving on every sheet, and the watermark when it is a demonstration", () => {
     const { container } = show(summaryInputOf(summaryCase({ demo: true })));
     const heads = [...container.querySelectorAll(".summary-head")].map(text);
     expect(heads).toHaveLength(2);
     for (const head of heads) {
       expect(head).toContain("Harbour ward 3, bed 12 · woman, 64 years, 58 kg, 162 cm");
       expect(head).toContain("Wednesday 4 March 2026, 12:05");
-      expect(head).toContain("case revision 14");
+      expect(head).toContain("case saved Wed 4 March 2026 12:03");
       expect(head).toContain("demo — invented patient");
     }
     expect(container.querySelectorAll(".summary-paper > .summary-watermark")).toHaveLength(2);

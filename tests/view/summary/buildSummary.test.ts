@@ -15,12 +15,13 @@ const row = (rows: readonly SummaryRow[] | undefined, label: string) =>
   rows?.find((each) => each.label === label)?.value;
 
 describe("who and when", () => {
-  it("names the case, the patient, the instant in the case's zone and the revision", () => {
+  it("names the case, the patient, the instant in the case's zone and when it was saved", () => {
     const model = summary();
     expect(model.label).toBe("Harbour ward 3, bed 12");
     expect(model.person).toBe("woman, 64 years, 58 kg, 162 cm");
     expect(model.printed).toBe("printed Wednesday 4 March 2026, 12:05");
-    expect(model.revision).toBe("case revision 14");
+    expect(model.saved).toBe("case saved Wed 4 March 2026 12:03");
+    expect(summary({ timeZone: "America/New_York" }).saved).toBe("case saved Wed 4 March 2026 07:03");
     expect(summary({ timeZone: "America/New_York" }).printed).toBe("printed Wednesday 4 March 2026, 07:05");
   });
 
@@ -95,9 +96,17 @@ describe("who and when", () => {
   });
 
   it("says that a read-only tab printed it", () => {
-    expect(summary({}, { saving: { status: "read-only", detail: "" }, hasChanges: false }).revision).toBe(
-      "case revision 14, read-only copy",
+    const savedAt = Date.UTC(2026, 2, 4, 12, 3);
+    expect(summary({}, { saving: { status: "read-only", savedAt, detail: "" }, hasChanges: false }).saved).toBe(
+      "case saved Wed 4 March 2026 12:03, read-only copy",
     );
+  });
+
+  it("says nothing of a saving of an earlier state, and nothing that begins anew when the case is opened again", () => {
+    const saving = { status: "saving" as const, savedAt: Date.UTC(2026, 2, 4, 12, 3), detail: "" };
+    expect(summary({}, { saving }).saved).toBe("case not saved as shown");
+    const analysisStatus = { status: "fresh" as const, revision: 1, failure: null, isFitStale: false };
+    expect(summary({}, { revision: 1, analysisStatus })).toEqual(summary());
   });
 });
 

@@ -38,15 +38,23 @@ const TABLE: readonly (readonly [name: string, input: SummaryInput, code: string
     { ...good, analysisStatus: { status: "failed", revision: 14, failure: "Broken.", isFitStale: false } },
     "print-failed",
   ],
-  ["a change is not saved", { ...good, saving: { status: "unsaved", detail: "" } }, "print-unsaved"],
-  ["a change is being saved", { ...good, saving: { status: "saving", detail: "" } }, "print-unsaved"],
-  ["saving failed", { ...good, saving: { status: "failed", detail: "The disk is full." } }, "print-save-failed"],
+  ["a change is not saved", { ...good, saving: { status: "unsaved", savedAt: null, detail: "" } }, "print-unsaved"],
+  ["a change is being saved", { ...good, saving: { status: "saving", savedAt: null, detail: "" } }, "print-unsaved"],
+  [
+    "saving failed",
+    { ...good, saving: { status: "failed", savedAt: null, detail: "The disk is full." } },
+    "print-save-failed",
+  ],
   [
     "read-only with changes",
-    { ...good, saving: { status: "read-only", detail: "" }, hasChanges: true },
+    { ...good, saving: { status: "read-only", savedAt: null, detail: "" }, hasChanges: true },
     "print-read-only-changed",
   ],
-  ["read-only, as opened", { ...good, saving: { status: "read-only", detail: "" }, hasChanges: false }, null],
+  [
+    "read-only, as opened",
+    { ...good, saving: { status: "read-only", savedAt: null, detail: "" }, hasChanges: false },
+    null,
+  ],
   ["a drag is under way", { ...good, isDragging: true }, "print-dragging"],
   ["no option is chosen", optioned([{ ...option, chosen: false }]), "print-no-option"],
   ["there is no option", optioned([]), "print-no-option"],
@@ -85,7 +93,7 @@ describe("printRefusal", () => {
   });
 
   it("a pick of the gravest: stale before unsaved before the order", () => {
-    const all = { ...optioned([]), revision: 99, saving: { status: "unsaved" as const, detail: "" } };
+    const all = { ...optioned([]), revision: 99, saving: { status: "unsaved" as const, savedAt: null, detail: "" } };
     expect(printRefusal(all)?.code).toBe("print-stale");
     expect(printRefusal({ ...all, revision: 14 })?.code).toBe("print-unsaved");
   });

@@ -67,7 +67,11 @@ describe("nothing printed has an error-prone form", () => {
   it("in cases with nothing recorded, stale, unsaved, without an option", () => {
     const bare = { patient: { observations: [], factors: [] }, levels: [], given: [], options: [] };
     for (const value of [summaryCase(bare), summaryCase(), summaryCase({ options: [] })]) {
-      for (const change of [{}, { revision: 15 }, { saving: { status: "unsaved" as const, detail: "" } }]) {
+      for (const change of [
+        {},
+        { revision: 15 },
+        { saving: { status: "unsaved" as const, savedAt: null, detail: "" } },
+      ]) {
         expect(found(summaryInputOf(value, change))).toEqual([]);
       }
     }

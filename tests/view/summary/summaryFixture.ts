@@ -64,7 +64,7 @@ export function summaryInputOf(value: Case, change: Partial<SummaryInput> = {}):
     analysis: change.analysis ?? typicalAnalysis(value),
     settings: { pageSize: "A4", microgram: "microgram", preparedBy: "" },
     revision: 14,
-    saving: { status: "saved", detail: "" },
+    saving: { status: "saved", savedAt: Date.UTC(2026, 2, 4, 12, 3), detail: "" },
     analysisStatus: { status: "fresh", revision: 14, failure: null, isFitStale: false },
     hasChanges: true,
     isDragging: false,
