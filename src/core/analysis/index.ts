@@ -18,4 +18,5 @@ export {
 } from "./recordProfile.ts";
 export { type ReferencePatient, referenceCovariates } from "./referenceCovariates.ts";
 export { TAUGHT_LITTLE, TAUGHT_MUCH } from "./taughtThresholds.ts";
+export { BEFORE_DOSE_H } from "./troughTime.ts";
 export { windowDrawH, windowDrawnAt } from "./windowTiming.ts";

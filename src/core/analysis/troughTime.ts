@@ -1,5 +1,8 @@
 import type { ConcernContext } from "./concernRule.ts";
 
+/** A sample before a dose is drawn within this long before it (common practice), h. */
+export const BEFORE_DOSE_H = 0.5;
+
 /** A trough is drawn in the last part of the interval: this much of it, or two hours where that is less, may be left (our own rule, common practice). */
 const TROUGH_SHARE = 0.25;
 const TROUGH_LEAST_H = 2;

@@ -32,6 +32,7 @@ export { recordWords } from "./recordWords.ts";
 export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./regimenWords.ts";
 export { richWords } from "./richWords.ts";
 export * from "./screenWords.ts";
+export * from "./summaryNextLevelWords.ts";
 export * from "./summaryPatientWords.ts";
 export * from "./summaryWords.ts";
 export { weekdayList, weekdayName } from "./weekdayWords.ts";

@@ -231,31 +231,6 @@ export const summaryLevelWords = {
   less: (figure: string) => `− ${figure}`,
 } as const;
 
-export const summaryNextLevelWords = {
-  farOff: (days: string) =>
-    `That is ${days} days on: an earlier level for safety may be wanted, by local policy (common practice).`,
-  notBefore: (hours: string) => `Never earlier than ${hours} after a dose: distribution is not over.`,
-  draw: (day: string, from: string, to: string, steady: string) =>
-    `${day}, between ${from} and ${to}, before the ${to} dose: the first dose at or after 90 % of steady state (${steady}).`,
-  drawAcross: (from: string, to: string, dose: string, steady: string) =>
-    `Between ${from} and ${to}, before the ${dose} dose: the first dose at or after 90 % of steady state (${steady}).`,
-  drawTimed: (day: string, from: string, to: string, dose: string, steady: string) =>
-    `${day}, between ${from} and ${to}, after the dose of ${dose}: the first dose at or after 90 % of steady state (${steady}).`,
-  drawTimedAcross: (from: string, to: string, dose: string, steady: string) =>
-    `Between ${from} and ${to}, after the dose of ${dose}: the first dose at or after 90 % of steady state (${steady}).`,
-  longerWait: (own: string, typical: string) =>
-    `This patient may take longer than the typical one (up to ${own} to 90 % of steady state, the upper end of the 90 % interval; typical ${typical}): the longer wait is used.`,
-  maybeNever: (share: string) => `With a chance of ${share} a steady state is never reached: do not wait for it alone.`,
-  tooLong: (own: string, typical: string | null) =>
-    `90 % of steady state may take ${own}${typical === null ? "" : ` in this patient (upper end of the 90 % interval), ${typical} in the typical one`}: too long to wait for it.`,
-  writeTimes: "Write the time of the last dose and of the sample on the request.",
-  noOption: "No option is chosen, so no time can be given.",
-  noModel: "There is no prediction, so no time can be given.",
-  byQuestion: "Time the next level by the clinical question.",
-  endsBefore: (steady: string, last: string) =>
-    `The last dose of the option (${last}) comes before 90 % of steady state (${steady}). No steady level can be drawn.`,
-} as const;
-
 export const summaryAssumptionWords = {
   typical: (kind: string) => `${kind}, typical patient: levels are compared and not used to adjust`,
   individual: (kind: string) => `${kind}, this patient: adjusted by the levels`,

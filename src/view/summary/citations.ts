@@ -8,6 +8,8 @@ type Statement = MedicineRecord["cautions"][number] | MedicineRecord["sampling"]
 export interface Citations {
   /** Where a figure comes from, and how it is known. */
   readonly ofFigure: (figure: Traced) => string;
+  /** The same of a figure as it stands in the record. */
+  readonly ofRecord: (figure: Pick<Statement, "source" | "basis">) => string;
   /** A statement of the record with the number of its source. */
   readonly ofStatement: (statement: Statement) => string;
   /** What was cited so far, in the order of its numbers. */
@@ -26,6 +28,8 @@ export function citations({ sources }: MedicineRecord): Citations {
       OWN_BASES.includes(basis) && !isCitable(source)
         ? source
         : words.sourceAndBasis(words.numbered(number(source)), BASES[basis] ?? basis),
+    ofRecord: ({ source, basis }) =>
+      words.sourceAndBasis(words.numbered(number(sourceText(sources, source))), BASES[basis] ?? basis),
     ofStatement: (statement) => words.cited(marked(statement), number(sourceText(sources, statement.source))),
     list: () => cited,
   };

@@ -1,7 +1,10 @@
+import { BEFORE_DOSE_H } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { chanceWords, SUMMARY_TITLES as titles, summaryNextLevelWords as words } from "../../core/messages/index.ts";
 import { type DoseLine, doseLineExpand } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR } from "../../core/time/index.ts";
+import { quantityConvert } from "../../core/units/index.ts";
+import type { Citations } from "./citations.ts";
 import { shownPatient } from "./shownPatient.ts";
 import { noSteadySentence, shownReadings } from "./shownReadings.ts";
 import { type SteadyFrom, steadyFrom } from "./steadyFrom.ts";
@@ -10,46 +13,46 @@ import type { SummaryModel } from "./summaryModel.ts";
 import { chosenOption } from "./summaryOrder.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
-/** A before-dose sample is drawn within this long before the dose (common practice). */
-const BEFORE_DOSE_MS = 0.5 * MS_PER_HOUR;
+const BEFORE_DOSE_MS = BEFORE_DOSE_H * MS_PER_HOUR;
 const DAY_MS = 24 * MS_PER_HOUR;
 /** Longer than this until steady state, and an earlier level is worth a thought. */
 const FAR_DAYS = 7;
 /** Longer than this, and no appointment is made: nobody stays on the same doses so long without a level. Our choice, common practice. */
 const LONGEST_DAYS = 60;
 
-export function nextLevelText(input: SummaryInput, print: SummaryPrint): SummaryModel["nextLevel"] {
-  return { title: titles.nextLevel, sentences: sentences(input, print) };
+export function nextLevelText(input: SummaryInput, cite: Citations, print: SummaryPrint): SummaryModel["nextLevel"] {
+  return { title: titles.nextLevel, sentences: sentences(input, cite, print) };
 }
 
-/** At the first dose of the chosen option at or after 90 % of steady state: before it, or as long after it as the window says. */
-function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] {
+/**
+ * At the first dose of the chosen option at or after 90 % of steady state, or after the record's wait where that is longer, so that a level drawn
+ * then is not called unsteady later: before the dose, or as long after it as the window says.
+ */
+function sentences(input: SummaryInput, cite: Citations, print: SummaryPrint): readonly string[] {
   const option = chosenOption(input.case);
   if (!option) return [words.noOption];
   const shown = shownReadings(input);
   if (!shown) return [words.noModel];
-  const from = steadyFrom(input, print);
+  const steady = steadyFrom(input, print);
   const { steadyState, noSteadyState } = shown.readings;
-  if (!steadyState || !from) return [noSteadySentence(noSteadyState), words.byQuestion, words.writeTimes];
+  if (!steadyState || !steady) return [noSteadySentence(noSteadyState), words.byQuestion, words.writeTimes];
+  const wait = waitOf(input, steady, cite, print);
   const nowMs = instantMs(input.case.now);
-  if (from.ms - nowMs > LONGEST_DAYS * DAY_MS) {
-    const { longerH, typicalH } = from;
-    const wait = print.wait(longerH ?? typicalH);
-    return [words.tooLong(wait, longerH === null ? null : print.wait(typicalH)), words.byQuestion, words.writeTimes];
-  }
-  const untilMs = Math.max(from.ms, nowMs) + (steadyState.periodH + 24) * MS_PER_HOUR;
+  if (wait.untilMs - nowMs > LONGEST_DAYS * DAY_MS) return [wait.tooLong, words.byQuestion, words.writeTimes];
+  const untilMs = Math.max(wait.untilMs, nowMs) + (steadyState.periodH + 24) * MS_PER_HOUR;
   const doses = doseInstants(option.lines, input.case.timeZone, untilMs);
-  const at = doses.findIndex((ms) => ms >= from.ms && ms >= nowMs);
+  const at = doses.findIndex((ms) => ms >= wait.untilMs && ms >= nowMs);
   const doseMs = doses[at];
   if (doseMs === undefined) {
     const last = doses.at(-1);
     return last === undefined
       ? [words.noModel]
-      : [words.endsBefore(print.at(from.ms, "full"), print.at(last, "full")), words.byQuestion];
+      : [words.endsBefore(wait.since(print.at(wait.untilMs, "full")), print.at(last, "full")), words.byQuestion];
   }
+  const since = wait.since(print.at(wait.untilMs, "dayClock"));
   return [
-    drawSentence(input.case.window, doseMs, doses[at + 1], print.at(from.ms, "dayClock"), print),
-    ...longer(from, print),
+    drawSentence(input.case.window, doseMs, doses[at + 1], since, print),
+    ...wait.why,
     ...neverSteady(input),
     ...farOff(doseMs - nowMs),
     ...distribution(input, print),
@@ -57,9 +60,36 @@ function sentences(input: SummaryInput, print: SummaryPrint): readonly string[] 
   ];
 }
 
-/** This patient may be slower than the typical one: then the longer wait holds, and is said. */
-function longer({ longerH, typicalH }: SteadyFrom, print: SummaryPrint): readonly string[] {
-  return longerH === null ? [] : [words.longerWait(print.wait(longerH), print.wait(typicalH))];
+interface Wait {
+  readonly untilMs: number;
+  /** What the dose comes at or after. */
+  readonly since: (when: string) => string;
+  readonly why: readonly string[];
+  readonly tooLong: string;
+}
+
+/** The longest of the typical patient's 90 %, this patient's, who may be slower, and the record's wait: which one holds is said. */
+function waitOf(input: SummaryInput, steady: SteadyFrom, cite: Citations, print: SummaryPrint): Wait {
+  const { longerH, typicalH } = steady;
+  const steadyH = longerH ?? typicalH;
+  const { steadyStateAfter } = input.case.medicine;
+  const recordH = steadyStateAfter ? quantityConvert(steadyStateAfter, "h") : 0;
+  if (steadyStateAfter && recordH > steadyH) {
+    const [record, source] = [print.wait(recordH), cite.ofRecord(steadyStateAfter)];
+    return {
+      untilMs: steady.startMs + recordH * MS_PER_HOUR,
+      since: words.sinceRecord,
+      why: [words.recordWait(record, print.wait(steadyH), longerH !== null, source)],
+      tooLong: words.recordTooLong(record, source),
+    };
+  }
+  const typical = print.wait(typicalH);
+  return {
+    untilMs: steady.ms,
+    since: words.sinceSteady,
+    why: longerH === null ? [] : [words.longerWait(print.wait(longerH), typical)],
+    tooLong: words.tooLong(print.wait(steadyH), longerH === null ? null : typical),
+  };
 }
 
 function neverSteady(input: SummaryInput): readonly string[] {
@@ -85,7 +115,7 @@ function drawSentence(
   window: Case["window"],
   doseMs: number,
   nextDoseMs: number | undefined,
-  steady: string,
+  since: string,
   print: SummaryPrint,
 ): string {
   const timed = window && timedDraw(window, doseMs, nextDoseMs ?? Number.POSITIVE_INFINITY);
@@ -96,12 +126,12 @@ function drawSentence(
   if (timed) {
     const whichDose = print.at(doseMs, "dayClock");
     return isOneDay
-      ? words.drawTimed(day, print.at(fromMs, "clock"), print.at(toMs, "clock"), whichDose, steady)
-      : words.drawTimedAcross(print.at(fromMs, "full"), print.at(toMs, "full"), whichDose, steady);
+      ? words.drawTimed(day, print.at(fromMs, "clock"), print.at(toMs, "clock"), whichDose, since)
+      : words.drawTimedAcross(print.at(fromMs, "full"), print.at(toMs, "full"), whichDose, since);
   }
   return isOneDay
-    ? words.draw(day, print.at(fromMs, "clock"), print.at(toMs, "clock"), steady)
-    : words.drawAcross(print.at(fromMs, "full"), print.at(toMs, "full"), dose, steady);
+    ? words.draw(day, print.at(fromMs, "clock"), print.at(toMs, "clock"), since)
+    : words.drawAcross(print.at(fromMs, "full"), print.at(toMs, "full"), dose, since);
 }
 
 /** From and to of a window whose level is drawn so long after a dose; null where it is not, or the next dose comes first. */

@@ -7,6 +7,8 @@ import type { SummaryPrint } from "./summaryPrint.ts";
 /** From when the chosen option counts as steady, and whose figure that is. */
 export interface SteadyFrom {
   readonly ms: number;
+  /** What the wait counts from: the first dose of the pattern, or the last of a lead-in that goes on beyond it. */
+  readonly startMs: number;
   /** This patient may take longer than the typical one: upper end of the 90 % interval, h; null where the typical patient's time holds. */
   readonly longerH: number | null;
   readonly typicalH: number;
@@ -19,8 +21,10 @@ export function steadyFrom(input: SummaryInput, print: SummaryPrint): SteadyFrom
   const patient = shownPatient(input);
   const own = patient.kind === "individual" ? (patient.readings?.steadyState?.timeTo90H.q95 ?? null) : null;
   const longerH = own !== null && own > steady.timeTo90H ? own : null;
+  const startMs = print.ms(steady.steady90AtH - steady.timeTo90H);
   return {
-    ms: print.ms(steady.steady90AtH) + ((longerH ?? steady.timeTo90H) - steady.timeTo90H) * MS_PER_HOUR,
+    ms: startMs + (longerH ?? steady.timeTo90H) * MS_PER_HOUR,
+    startMs,
     longerH,
     typicalH: steady.timeTo90H,
   };

@@ -295,9 +295,11 @@ describe("assumptions", () => {
 describe("sources", () => {
   it("are numbered, and every number that is cited is listed", () => {
     const model = summary();
-    const cited = [...model.cautions, ...model.details.figures.map(({ source }) => source)].flatMap((text) =>
-      [...text.matchAll(/\((\d+)\)/g)].map((match) => Number(match[1])),
-    );
+    const cited = [
+      ...model.nextLevel.sentences,
+      ...model.cautions,
+      ...model.details.figures.map(({ source }) => source),
+    ].flatMap((text) => [...text.matchAll(/\((\d+)\)/g)].map((match) => Number(match[1])));
     expect(Math.max(...cited)).toBe(model.details.sources.length);
     expect(new Set(cited).size).toBe(model.details.sources.length);
   });

@@ -131,15 +131,17 @@ describe("the sheet of this patient", () => {
     const steady = typical!.steadyState!;
     const slow = { ...individual!.steadyState!.timeTo90H, q95: steady.timeTo90H + 48 };
     const fast = { ...slow, q95: steady.timeTo90H - 1 };
-    const waiting = (timeTo90H: Spread) =>
-      withFit({
-        options: [
-          {
-            ...input.analysis.options[0]!,
-            individual: { ...individual!, steadyState: { ...individual!.steadyState!, timeTo90H } },
-          },
-        ],
-      }).nextLevel.sentences;
+    const { steadyStateAfter, ...record } = input.case.medicine;
+    const waiting = (timeTo90H: Spread, medicine: SummaryInput["case"]["medicine"] = record) => {
+      const options = [
+        {
+          ...input.analysis.options[0]!,
+          individual: { ...individual!, steadyState: { ...individual!.steadyState!, timeTo90H } },
+        },
+      ];
+      const change = { case: { ...input.case, medicine }, analysis: { ...input.analysis, options } };
+      return plain(buildSummary({ ...input, ...change })).nextLevel.sentences;
+    };
     expect(waiting(fast)[0]).toMatch(/^Thursday 5 March 2026/);
     expect(waiting(slow)[0]).toMatch(/^Saturday 7 March 2026/);
     expect(waiting(slow)[1]).toBe(
@@ -149,6 +151,14 @@ describe("the sheet of this patient", () => {
     );
     expect(waiting(fast).join(" ")).not.toContain("may take longer");
     expect(waiting({ ...slow, q95: 5000 })[0]).toMatch(/^90 % of steady state may take 208 days in this patient/);
+    // The record's 3 days are longer than this patient's 70.5 hours.
+    expect(steadyStateAfter).toMatchObject({ value: 3, unit: "d" });
+    expect(waiting(slow, input.case.medicine)[1]).toContain(
+      "longer than 90 % of steady state (up to 70.5 hours in this patient, the upper end of the 90 % interval)".replace(
+        "70.5",
+        String(Number((steady.timeTo90H + 48).toFixed(1))),
+      ),
+    );
   });
 
   it("draws the median thick, the bands, and the typical patient thin", () => {
