@@ -36,6 +36,10 @@ export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) 
     title: `Option ${text(data, "option")} changes the product mg for mg`,
     text: `From ${text(data, "from")} to ${text(data, "to")}, ${mg(data, "mg")} a day in both: ${wordList(differenceWords(data))}. What reaches the circulation is ${figure(number(data, "ratio") * 100)} % of before for the same mg.`,
   }),
+  "salt-switch": (data) => ({
+    title: `Option ${text(data, "option")} changes the salt: labelled amounts can't be compared`,
+    text: `From ${text(data, "from")} to ${text(data, "to")}: ${wordList(differenceWords(data))}. Labelled ${mg(data, "mgBefore")} on the last day given and ${mg(data, "mg")} on the option's first; active ${mg(data, "activeBefore")} and ${mg(data, "activeAfter")}, that is ${figure((number(data, "activeAfter") / number(data, "activeBefore")) * 100)} % of before.`,
+  }),
   "level-unit-doubtful": (data) => ({
     title: `The level of ${when(data)} would be usual only in another unit`,
     text: `${printed(data.quantity as Quantity)}, where this medicine is used at ${concentration(data, "low")} to ${concentration(data, "high")}; in ${orList((data.units as readonly UnitCode[]).map((unit) => unitSpoken(unit, "print")))} the same number would be. Check the unit, or confirm the value.`,

@@ -1,6 +1,7 @@
 import type { Analysis, IndividualReadings, OptionResult, Spread } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { benchWords, fitWords, windowRemarkWords } from "../../core/messages/index.ts";
+import { productOf } from "../../core/medicine/index.ts";
+import { benchWords, fitWords, summaryOrderWords, windowRemarkWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, quantityPrint, unitSpoken } from "../../core/units/index.ts";
 import { exposureSpoken, type ShownUnit, unitFactor } from "./shownUnit.ts";
@@ -136,6 +137,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
       (option) => option.typical && of(option.typical.span),
       (individual) => own(individual.span),
     );
+  const hasSalts = isSaltMixed(value);
   const units = isInHead ? `; ${spoken}, AUC ${exposureSpoken(unit)}` : "";
   const patient = hasOwn ? "" : `, ${fitWords.typicalPatient}`;
   return [
@@ -197,7 +199,11 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
         {
           id: "dailyDose",
           name: "Dose in 24 h",
-          cells: analysis.options.map((option) => ({ typical: dailyDose(option), individual: null, isShared: true })),
+          cells: analysis.options.map((option) => ({
+            typical: dailyDose(option, hasSalts ? value.medicine.name : null),
+            individual: null,
+            isShared: true,
+          })),
         },
       ],
     },
@@ -259,11 +265,21 @@ interface Print {
   readonly named?: string;
 }
 
-function dailyDose(option: OptionResult): ReadingCell | null {
-  const mg = option.typical?.dailyDoseMg ?? null;
-  return mg === null
-    ? null
-    : { text: breaking(quantityPrint({ value: mg, unit: "mg" }, { style: "screen", significant: 3 })) };
+/** As labelled; `active`: the name of the moiety, where the labels of the options can't be compared without it. */
+function dailyDose({ typical }: OptionResult, active: string | null): ReadingCell | null {
+  if (!typical || typical.dailyDoseMg === null) return null;
+  const print = (mg: number) => breaking(quantityPrint({ value: mg, unit: "mg" }, { style: "screen", significant: 3 }));
+  const text = print(typical.dailyDoseMg);
+  const { activeDailyDoseMg } = typical;
+  return active === null || activeDailyDoseMg === null
+    ? { text }
+    : { text, sub: `${print(activeDailyDoseMg)} ${summaryOrderWords.active(active)}` };
+}
+
+/** Some of the options' products are labelled as a salt and others are not, or as another. */
+function isSaltMixed({ options, medicine }: Case): boolean {
+  const products = options.flatMap(({ lines }) => lines.map((line) => productOf(medicine, line.product)));
+  return new Set(products.map(({ saltFactor }) => saltFactor?.value ?? 1)).size > 1;
 }
 
 /** Hours are always of the whole curve; a window meant for one point of it is easily misread. */

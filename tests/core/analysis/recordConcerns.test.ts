@@ -57,6 +57,12 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     value(otherProduct({ saltFactor: figure(0.8, "1"), salt: "aminophylline" }), { options: optionOf("other", 300) }),
   ],
   [
+    "salt-switch",
+    value(otherProduct({ saltFactor: figure(0.8, "1"), salt: "aminophylline" }), { options: optionOf("other", 300) }),
+    // Another salt by name of the same active part in one mg.
+    value(otherProduct({ saltFactor: figure(1, "1"), salt: "monohydrate" }), { options: optionOf("other", 300) }),
+  ],
+  [
     "level-unit-doubtful",
     value({}, { levels: [level(TROUGH, { quantity: { value: 55, unit: "mg/L" } })] }),
     value({}, { levels: [level(TROUGH, { quantity: { value: 55, unit: "mg/L" }, confirmed: true })] }),
@@ -220,6 +226,21 @@ describe("concerns from the record", () => {
     expect(found(weaker, "product-switch")).toMatchObject([{ data: { differs: ["bioavailability"] } }]);
     expect(found(value(otherProduct({}), { options: optionOf("other", 200) }), "product-switch")).toEqual([]);
     expect(found(value({}, { options: optionOf("tablet-12h", 200) }), "product-switch")).toEqual([]);
+  });
+
+  it("another salt in another amount: what is active before and after; of the same product only the amount changes", () => {
+    const salt = value(otherProduct({ saltFactor: figure(0.8, "1"), salt: "aminophylline" }), {
+      options: optionOf("other", 300),
+    });
+    // 400 mg a day of the moiety before, 600 mg of the salt after: 480 mg active.
+    const [said] = found(salt, "salt-switch").map(concernMessage);
+    expect(said!.text.replaceAll("\u00a0", " ")).toContain(
+      "one is labelled as the active moiety, the other as the aminophylline salt. Labelled 400 mg on the last day given and 600 mg on the option's first; active 400 mg and 480 mg, that is 120 % of before.",
+    );
+    expect(found(value({}, { options: optionOf("tablet-12h", 300) }), "salt-switch")).toEqual([]);
+    expect(
+      found(value(otherProduct({ release: "immediate" }), { options: optionOf("other", 300) }), "salt-switch"),
+    ).toEqual([]);
   });
 
   it("a regimen that goes on under another line has not begun anew; another amount has", () => {

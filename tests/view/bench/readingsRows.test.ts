@@ -1,11 +1,13 @@
 import { describe, expect, it } from "vitest";
 import { derive } from "../../../src/core/analysis/index.ts";
+import { recordById } from "../../../src/core/medicine/index.ts";
 import { readingsGroups } from "../../../src/view/bench/readingsRows.ts";
 import { levelLines, levelNear, readoutLines, readoutsAt } from "../../../src/view/bench/readoutLines.ts";
 import { bandAt } from "../../../src/view/chart/bandAt.ts";
 import { profileParts } from "../../../src/view/chart/profileParts.ts";
 import { caseFixture } from "../../core/analysis/caseFixture.ts";
 import { fittedAnalysis, spread } from "../../core/analysis/fitFixture.ts";
+import { orderedLine } from "../../core/case/orderedLine.ts";
 
 const value = caseFixture({
   levels: [{ id: "l", at: "2026-03-04T07:30:00+00:00", quantity: { value: 5, unit: "mg/L" }, kind: "measured" }],
@@ -69,6 +71,54 @@ describe("readings of this patient", () => {
     const mgPerL = fitted.options[0]!.individual!.steadyState!.peak.q50;
     // Theophylline, 180.17 g/mol; printed to three digits.
     expect(Math.abs(shown / ((mgPerL * 1000) / 180.17) - 1)).toBeLessThan(5e-3);
+  });
+});
+
+describe("the dose in 24 h", () => {
+  const medicine = recordById("phenytoin")!;
+  const [salt, acid] = [true, false].map((isSalt) =>
+    medicine.products.find(({ saltFactor }) => (saltFactor !== undefined) === isSalt),
+  );
+  const cells = (doses: readonly (readonly [product: string, mg: number])[]) => {
+    const options = doses.map(([product, mg], i) => ({
+      id: "AB"[i]!,
+      label: "",
+      chosen: false,
+      lines: [
+        orderedLine({
+          id: `l${i}`,
+          product,
+          amount: { value: mg, unit: "mg" },
+          repeat: { every: { value: 24, unit: "h" } },
+        }),
+      ],
+    }));
+    const of = caseFixture({ medicine, given: [], levels: [], options });
+    const rows = readingsGroups(of, derive(of), "mg/L").flatMap((group) => group.rows);
+    return rows.find(({ id }) => id === "dailyDose")!.cells.map(({ typical: cell }) => cell);
+  };
+
+  it("of a salt and of the free acid: the active part of both under the labelled amounts", () => {
+    const active = 400 * salt!.saltFactor!.value;
+    expect(active).toBeCloseTo(368, 0);
+    expect(
+      cells([
+        [salt!.id, 400],
+        [acid!.id, 350],
+      ]),
+    ).toEqual([
+      { text: "400 mg", sub: "368 mg of active phenytoin" },
+      { text: "350 mg", sub: "350 mg of active phenytoin" },
+    ]);
+  });
+
+  it("of one salt: the labelled amounts alone", () => {
+    expect(
+      cells([
+        [salt!.id, 400],
+        [salt!.id, 300],
+      ]),
+    ).toEqual([{ text: "400 mg" }, { text: "300 mg" }]);
   });
 });
 

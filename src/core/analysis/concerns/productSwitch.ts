@@ -7,7 +7,10 @@ const DAY_H = 24;
 /** Two daily amounts within this share of each other are the same mg. */
 const SAME = 0.01;
 
-/** An option gives another product mg for mg, although its salt, its release or its bioavailability differs. */
+/**
+ * An option gives another product mg for mg, although its salt, its release or its bioavailability differs;
+ * or another salt in another amount, where the labelled mg before and after do not say how much more or less it is.
+ */
 export const productSwitch: ConcernRule = ({ case: { medicine }, given, options }) => {
   const before = lastDay(given);
   return options.flatMap((option) => {
@@ -15,7 +18,11 @@ export const productSwitch: ConcernRule = ({ case: { medicine }, given, options 
     const [mgBefore, mgAfter] = [before, after].map((marks) =>
       marks.reduce((sum, mark) => sum + labelledDose(medicine, mark), 0),
     ) as [number, number];
-    if (mgBefore === 0 || Math.abs(mgAfter - mgBefore) > SAME * mgBefore) return [];
+    if (mgBefore === 0 || mgAfter === 0) return [];
+    const isSame = Math.abs(mgAfter - mgBefore) <= SAME * mgBefore;
+    const [activeBefore, activeAfter] = [before, after].map((marks) =>
+      marks.reduce((sum, mark) => sum + mark.countedMg, 0),
+    ) as [number, number];
     const stays = new Set(after.map((mark) => mark.product));
     const went = [...new Set(before.map((mark) => mark.product))].filter((id) => !stays.has(id));
     const came = [...stays].filter((id) => before.every((mark) => mark.product !== id));
@@ -24,19 +31,22 @@ export const productSwitch: ConcernRule = ({ case: { medicine }, given, options 
         const from = productOf(medicine, fromId);
         const to = productOf(medicine, toId);
         const differs = differences(from, to);
-        if (differs.length === 0) return [];
-        const share = ({ saltFactor, bioavailability }: Product) => (saltFactor?.value ?? 1) * bioavailability.value;
+        if (isSame ? differs.length === 0 : saltShare(from) === saltShare(to)) return [];
+        const share = (product: Product) => saltShare(product) * product.bioavailability.value;
         return [
           concern(
-            "product-switch",
-            "check",
+            isSame ? "product-switch" : "salt-switch",
+            isSame ? "check" : "note",
             { kind: "option", id: `${option.id}/${fromId}/${toId}` },
             {
               option: option.id,
               from: from.name,
               to: to.name,
               mg: mgAfter,
-              differs,
+              mgBefore,
+              activeBefore,
+              activeAfter,
+              differs: isSame ? differs : ["salt"],
               // What reaches the circulation of one labelled mg, after as a share of before.
               ratio: share(to) / share(from),
               fromSalt: from.salt ?? null,
@@ -51,11 +61,12 @@ export const productSwitch: ConcernRule = ({ case: { medicine }, given, options 
   });
 };
 
+/** mg of the active moiety in one labelled mg. */
+const saltShare = ({ saltFactor }: Product): number => saltFactor?.value ?? 1;
+
 function differences(from: Product, to: Product): readonly ("salt" | "release" | "bioavailability")[] {
   return [
-    ...((from.saltFactor?.value ?? 1) !== (to.saltFactor?.value ?? 1) || from.salt !== to.salt
-      ? (["salt"] as const)
-      : []),
+    ...(saltShare(from) !== saltShare(to) || from.salt !== to.salt ? (["salt"] as const) : []),
     ...(from.release !== to.release ? (["release"] as const) : []),
     ...(from.bioavailability.value !== to.bioavailability.value ? (["bioavailability"] as const) : []),
   ];
