@@ -9,6 +9,8 @@ import { runStage } from "./runStage.mjs";
 
 /** Daylight saving on other dates, and one offset of half an hour. */
 const OTHER_ZONES = ["America/St_Johns", "Europe/London"];
+/** As in the configuration of the browser tests: one after the other. */
+const BROWSER_PROJECTS = ["together", "alone"];
 const ZONED_TESTS = ["tests/core/time", "tests/core/regimen"];
 
 const total = { passed: 0, failed: 0, skipped: 0 };
@@ -85,15 +87,14 @@ async function runBrowserTests() {
   title("build");
   const broken = await run(["vite", "build", "--logLevel", "warn"], 5);
   if (broken) return note("build", crashed(), broken);
-  title("browser tests");
-  const file = join(reports, "browser.json");
-  const env = { PLAYWRIGHT_JSON_OUTPUT_NAME: file };
-  const fault = await run(
-    ["playwright", "test", "-c", "tests/browser/playwright.config.ts", "--reporter=list,json"],
-    12,
-    env,
-  );
-  note("browser tests", countPlaywright(file, fault), fault);
+  for (const project of BROWSER_PROJECTS) {
+    const name = `browser tests, ${project}`;
+    title(name);
+    const file = join(reports, `browser-${project}.json`);
+    const words = ["playwright", "test", "-c", "tests/browser/playwright.config.ts", `--project=${project}`];
+    const fault = await run([...words, "--reporter=list,json"], 12, { PLAYWRIGHT_JSON_OUTPUT_NAME: file });
+    note(name, countPlaywright(file, fault), fault);
+  }
 }
 
 /** @param {string} name */

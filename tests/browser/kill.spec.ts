@@ -10,9 +10,9 @@ const KILLS = 20;
 const WITHIN_MS = 200;
 const MOST_TRIES = 40;
 
-test(`killed ${KILLS} times within 200 ms of the strip saying "saved": nothing acknowledged is lost`, async ({
-  openProfile,
-}) => {
+test(`killed ${KILLS} times within 200 ms of the strip saying "saved": nothing acknowledged is lost`, {
+  tag: "@alone",
+}, async ({ openProfile }) => {
   test.setTimeout(300_000);
   const profile = mkdtempSync(join(tmpdir(), "ebbline-kill-"));
   try {

@@ -4,15 +4,13 @@ import { join } from "node:path";
 import type { Locator, Page } from "@playwright/test";
 import { PROJECT } from "../../.ci/install.mjs";
 import { PAGE_OPTIONS } from "./support/browserOptions.ts";
-import { expectSaved, openDemo } from "./support/caseSteps.ts";
+import { expectFit, expectSaved, FIT_TIMEOUT, openDemo } from "./support/caseSteps.ts";
 import { watchMainThread } from "./support/mainThread.ts";
 import { flat } from "./support/printedText.ts";
 import { printPage } from "./support/printPage.ts";
 import { expect, test } from "./support/test.ts";
 
 const DEMO = "Harbour ward 3, bed 12";
-/** A fit takes a second or two, ten times that on a busy machine. */
-const FIT_TIMEOUT = 60_000;
 /** No frame may be held up longer than this, ms. */
 const FRAME_MOST = 50;
 
@@ -23,10 +21,6 @@ const band = (page: Page): Locator => page.locator("[data-band=A] .profile-band-
 /** The typical patient's curve of option A: thin, and before this patient's, where that is drawn too. */
 const typical = (page: Page): Locator => page.locator("path.profile-thin-option-1, path.profile-option-1").first();
 const undo = (page: Page): Locator => page.getByRole("button", { name: "Undo", exact: true });
-
-async function expectFit(page: Page, kind: "fitted" | "none" = "fitted"): Promise<void> {
-  await expect(page.locator("[data-fit]")).toHaveAttribute("data-fit", kind, { timeout: FIT_TIMEOUT });
-}
 
 async function openFitted(page: Page): Promise<void> {
   await openDemo(page, DEMO);
@@ -193,10 +187,9 @@ test("dropped, then left out with a reason: hollow on the profile, and screen, P
   expect(text).toContain("line flushed with the medicine");
 });
 
-test("no task of the main thread works over 50 ms while a level is dragged for three seconds", async ({
-  browser,
-  page,
-}) => {
+test("no task of the main thread works over 50 ms while a level is dragged for three seconds", {
+  tag: "@alone",
+}, async ({ browser, page }) => {
   await openFitted(page);
   const { x, y } = await takeHold(page, handle(page, 1));
   const runs: string[] = [];

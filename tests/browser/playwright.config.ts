@@ -10,12 +10,17 @@ if (!existsSync(join(PROJECT, "dist", "headers.json"))) {
   throw new Error('There is no built program in dist. Run "npm run browser", which builds it first, or "npm test".');
 }
 
+const ALONE = /@alone/;
+
 export default defineConfig({
   testDir: ".",
   testMatch: "*.spec.ts",
   outputDir: join(PROJECT, "test-results"),
-  // Two cores. A test that needs them to itself says so by measuring processor time, not the clock.
-  workers: 2,
+  projects: [
+    { name: "together", grepInvert: ALONE, workers: 2 },
+    // What measures times, or kills the browser again and again, has the two cores to itself: the projects are run one after the other.
+    { name: "alone", grep: ALONE, workers: 1 },
+  ],
   fullyParallel: false,
   retries: 0,
   forbidOnly: true,

@@ -1,6 +1,6 @@
 import { execFileSync } from "node:child_process";
 import { PROJECT } from "../../.ci/install.mjs";
-import { openDemo, reading } from "./support/caseSteps.ts";
+import { expectFit, openDemo, reading } from "./support/caseSteps.ts";
 import { flat } from "./support/printedText.ts";
 import { printPage } from "./support/printPage.ts";
 import { expect, test } from "./support/test.ts";
@@ -33,9 +33,6 @@ interface Recomputed {
   }[];
 }
 
-/** A fit takes a second or two, ten times that on a busy machine. */
-const FIT_TIMEOUT = 60_000;
-
 /** Three significant digits, as shown. */
 const shown = (value: number) => String(Number(value.toPrecision(3)));
 const spread = ({ median, interval90 }: Interval, unit: string) =>
@@ -49,9 +46,7 @@ for (const demo of DEMOS) {
     await openDemo(page, demo.label);
     const ids = Object.keys(recomputed.options);
     const isFitted = recomputed.thisPatient.parameters !== undefined;
-    await expect(page.locator("[data-fit]")).toHaveAttribute("data-fit", isFitted ? "fitted" : "none", {
-      timeout: FIT_TIMEOUT,
-    });
+    await expectFit(page, isFitted ? "fitted" : "none");
     for (const [i, id] of ids.entries()) {
       const { steadyState, ...span } = recomputed.options[id]!.typical;
       const pairs: [string, number | undefined][] = [

@@ -1,8 +1,5 @@
-import { expectOfflineReady, expectSaved, pressOn, reading, tabTo, typeInto } from "./support/caseSteps.ts";
+import { expectFit, expectOfflineReady, expectSaved, pressOn, reading, tabTo, typeInto } from "./support/caseSteps.ts";
 import { expect, test } from "./support/test.ts";
-
-/** Wide, for a busy machine; ms. */
-const FIT_TIMEOUT = 60_000;
 
 test("a whole case by typing only; reload; offline and the server gone; reload again: everything is there", async ({
   page,
@@ -88,12 +85,9 @@ test("a whole case by typing only; reload; offline and the server gone; reload a
     if (id === "A") await pressOn(page, option.getByRole("button", { name: "Choose", exact: true }));
     await page.keyboard.press("Escape");
   }
-  /** The bench shows the typical patient first: facts are read when what the levels make of this patient is there. */
-  const expectFitted = () =>
-    expect(page.locator("[data-fit]")).toHaveAttribute("data-fit", "fitted", { timeout: FIT_TIMEOUT });
   await expect(reading(page, "peak", 1)).toBeVisible();
   await expectSaved(page);
-  await expectFitted();
+  await expectFit(page);
 
   const facts = async () => ({
     strip: (await strip.innerText()).replace(/saved \d\d:\d\d/, "saved"),
@@ -111,7 +105,7 @@ test("a whole case by typing only; reload; offline and the server gone; reload a
   const reopen = async () => {
     await page.reload();
     await expect(reading(page, "peak", 1)).toBeVisible();
-    await expectFitted();
+    await expectFit(page);
   };
   await reopen();
   expect(await facts()).toEqual(before);

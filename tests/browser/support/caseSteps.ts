@@ -29,6 +29,14 @@ export async function openDemo(page: Page, label: string): Promise<void> {
   await expect(page.locator("[data-reading=peak]")).toBeVisible();
 }
 
+/** A fit takes a second or two, ten times that on a busy machine; ms. */
+export const FIT_TIMEOUT = 60_000;
+
+/** Until what the levels make of this patient is there, or it is said that nothing can be: before it the sheet is not to be printed. */
+export async function expectFit(page: Page, kind: "fitted" | "none" = "fitted"): Promise<void> {
+  await expect(page.locator("[data-fit]")).toHaveAttribute("data-fit", kind, { timeout: FIT_TIMEOUT });
+}
+
 /** Waits until the strip says that everything is on disk. */
 export async function expectSaved(page: Page): Promise<void> {
   await expect(page.locator("[data-saving]")).toHaveAttribute("data-saving", "saved");
