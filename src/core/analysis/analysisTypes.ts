@@ -83,6 +83,8 @@ export interface PhenytoinForAlbumin {
   /** Epoch milliseconds. */
   readonly levelAtMs: number;
   readonly form: "usual" | "kidney-failure";
+  /** Below the formula's normal; otherwise there is nothing to correct. */
+  readonly isAlbuminLow: boolean;
   /** mg/L */
   readonly figure: Traced;
 }

@@ -52,6 +52,7 @@ import { optionOutsideWindow } from "./concerns/optionOutsideWindow.ts";
 import { optionToxic } from "./concerns/optionToxic.ts";
 import { parametersHeld } from "./concerns/parametersHeld.ts";
 import { parameterUnusual } from "./concerns/parameterUnusual.ts";
+import { phenytoinAlbumin } from "./concerns/phenytoinAlbumin.ts";
 import { populationOutside } from "./concerns/populationOutside.ts";
 import { productSwitch } from "./concerns/productSwitch.ts";
 import { recordUnreviewed } from "./concerns/recordUnreviewed.ts";
@@ -77,6 +78,7 @@ const RULES: readonly ConcernRule[] = [
   formulaStep,
   levelTiming,
   levelTooEarly,
+  phenytoinAlbumin,
   levelOutsideWindow,
   levelFarOff,
   levelOutlier,

@@ -38,10 +38,12 @@ export function phenytoinFigure(
   const displacing = value.patient.factors.find(
     (factor) => factor.kind === "interacting-medicine" && /valpro/i.test(factor.detail),
   );
+  const normalAlbumin = phenytoinForAlbuminQuestion(albuminGPerDl);
   return {
     levelId: level.id,
     levelAtMs: instantMs(level.at),
     form,
+    isAlbuminLow: normalAlbumin === null,
     figure: patientTraced(
       phenytoinForAlbumin({ measuredMgPerL, albuminGPerDl, form }),
       "mg/L",
@@ -51,7 +53,7 @@ export function phenytoinFigure(
         { name: "albumin", value: albuminGPerDl, unit: "g/dL" },
       ],
       issue("phenytoin-albumin-warning"),
-      phenytoinForAlbuminQuestion(albuminGPerDl),
+      normalAlbumin,
       clearanceMlPerMin === null ? issue("phenytoin-albumin-kidney-unknown") : null,
       displacing ? issue("phenytoin-albumin-displaced", { detail: displacing.detail }) : null,
     ),

@@ -2,6 +2,7 @@ import type { TargetWindow } from "../case/index.ts";
 import type { Issue } from "../result/index.ts";
 import { instantText } from "../time/index.ts";
 import { numberPrint, type Quantity, quantityPrint } from "../units/index.ts";
+import { albuminConcernMessages } from "./albuminConcernMessages.ts";
 import {
   type ConcernData,
   type ConcernWords,
@@ -191,6 +192,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     title: "Medicine record not independently reviewed",
     text: `${text(data, "name")}, record version ${number(data, "recordVersion")}: of ${number(data, "total")} figures, ${unverifiedWords(data)}. Check against current product information.`,
   }),
+  ...albuminConcernMessages,
   ...fitConcernMessages,
   ...recordConcernMessages,
 };

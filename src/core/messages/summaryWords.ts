@@ -297,6 +297,7 @@ export const summaryDetailWords = {
   idealWeight: "Ideal weight",
   adjustedWeight: "Adjusted weight",
   creatinineClearance: "Creatinine clearance, Cockcroft–Gault",
+  phenytoinForAlbumin: "Phenytoin level corrected for its albumin",
   eliminationRate: "Elimination rate",
   numbered: (number: number) => `(${number})`,
   marked: (text: string) => `${text}\u00a0*`,

@@ -17,15 +17,15 @@ export const PHENYTOIN_KIDNEY_FAILURE_BELOW = 20;
 
 export const phenytoinForAlbuminSource: Readonly<Record<PhenytoinForm, FormulaSource>> = {
   usual: {
-    formula: "corrected = measured ÷ (0.2 × albumin in g/dL + 0.1)",
+    formula: "corrected = measured ÷ (0.2 × albumin in g per dL + 0.1)",
     citation:
-      "Sheiner LB, Tozer TN, in Melmon KL, Morelli HF (eds), Clinical Pharmacology, 1978 (citation from memory; formula and its normal albumin of 4.4 g/dL read in a medical-algorithm reference text). Bias: Ann Pharmacother 1995;29:667-670",
+      "Sheiner LB, Tozer TN, in Melmon KL, Morelli HF (eds), Clinical Pharmacology, 1978 (citation from memory; formula and its normal albumin of 4.4 g per dL read in a medical-algorithm reference text). Bias: Ann Pharmacother 1995;29:667-670",
     basis: "seen",
   },
   "kidney-failure": {
-    formula: "corrected = measured ÷ (0.1 × albumin in g/dL + 0.1)",
+    formula: "corrected = measured ÷ (0.1 × albumin in g per dL + 0.1)",
     citation:
-      "Sheiner LB, Tozer TN, in Melmon KL, Morelli HF (eds), Clinical Pharmacology, 1978 (citation and this form, for kidney failure or a clearance below 20 mL/min, from memory, unverified). Bias: Ann Pharmacother 1995;29:667-670",
+      "Sheiner LB, Tozer TN, in Melmon KL, Morelli HF (eds), Clinical Pharmacology, 1978 (citation and this form, for kidney failure or a clearance below 20 mL per min, from memory, unverified). Bias: Ann Pharmacother 1995;29:667-670",
     basis: "memory",
   },
 };

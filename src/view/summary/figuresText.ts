@@ -26,6 +26,10 @@ export function figuresText(input: SummaryInput, cite: Citations, print: Summary
     ...figure(words.idealWeight, patient.idealWeight),
     ...figure(words.adjustedWeight, patient.clearanceWeight === "adjusted" ? patient.adjustedWeight : null),
     ...figure(words.creatinineClearance, patient.creatinineClearance),
+    ...figure(
+      words.phenytoinForAlbumin,
+      patient.phenytoinForAlbumin?.isAlbuminLow ? patient.phenytoinForAlbumin.figure : null,
+    ),
     ...(model?.parameters ?? []).flatMap((each) => figure(parameterName(each, isApparent), each.figure)),
     ...figure(words.eliminationRate, model?.kind === "one-compartment" ? model.eliminationRate : null),
     ...figure(readingWords.halfLife, model?.halfLife),

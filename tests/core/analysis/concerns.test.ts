@@ -8,6 +8,7 @@ import { CONCERN_CODES, concernMessage, FIT_CONCERN_CODES } from "../../../src/c
 import { RECORD_CONCERN_CODES } from "../../../src/core/messages/recordConcernMessages.ts";
 import { orderedLine } from "../case/orderedLine.ts";
 import { caseFixture } from "./caseFixture.ts";
+import { phenytoinCase } from "./phenytoinCase.ts";
 
 const base = caseFixture();
 const level = (change: Partial<Case["levels"][number]> = {}): Case["levels"][number] => ({
@@ -127,6 +128,7 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     { ...base, options: [option([line({ start: "2026-03-04T11:00:00+00:00" })])] },
     { ...base, options: [option([line({ start: "2026-03-04T12:00:00+00:00" })])] },
   ],
+  ["phenytoin-albumin", phenytoinCase(8.4, 3.1), phenytoinCase(8.4, 4.5)],
   [
     "doses-same-time",
     { ...base, given: [...base.given, ...base.given.map(again)] },

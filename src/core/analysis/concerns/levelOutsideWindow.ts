@@ -2,10 +2,12 @@ import { quantityConvert } from "../../units/index.ts";
 import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 import { concentrationWindow } from "../optionReadings.ts";
 import { windowDrawn } from "../windowDrawn.ts";
+import { windowSidesForAlbumin } from "./phenytoinAlbumin.ts";
 
 /**
  * The latest level in use that was drawn when the window is meant lies outside it. Above is to be looked at before the next dose; below is
- * what the options are for. Nothing where the toxic limit is reached: levelToxic says so.
+ * what the options are for. Nothing where the toxic limit is reached: levelToxic says so; nor of phenytoin below it as measured but not once
+ * corrected for a low albumin: phenytoinAlbumin says so.
  */
 export const levelOutsideWindow: ConcernRule = (context) => {
   const { window, medicine, timeZone } = context.case;
@@ -23,6 +25,8 @@ export const levelOutsideWindow: ConcernRule = (context) => {
   const { toxicFrom } = medicine;
   const isToxic = toxicFrom !== undefined && measured >= quantityConvert(toxicFrom, "mg/L", medicine.molarMass.value);
   if ((!isAbove && !isBelow) || (isAbove && isToxic)) return [];
+  const sides = windowSidesForAlbumin(context, latest.id);
+  if (isBelow && sides && sides.correctedSide !== "below") return [];
   const data = {
     atMs: clockMs(context, latest.atH),
     zone: timeZone,
