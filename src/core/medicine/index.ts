@@ -8,6 +8,7 @@ export { type FormulaInput, type FormulaTrace, formulaEvaluate, formulaTrace } f
 export { COVARIATE_NAMES, COVARIATES, type CovariateName, type Covariates } from "./covariates.ts";
 export { covariatesOf } from "./covariatesOf.ts";
 export { doseLabelledMg, doseMg, productDoseUnits } from "./doseMg.ts";
+export { DOSE_FAR, type DoseSense, doseSense } from "./doseSense.ts";
 export { doseStepped } from "./doseStepped.ts";
 export * from "./edits/recordEdits.ts";
 export { BASES, type Basis, type Figure, type Formula, type Statement } from "./figureSchema.ts";

@@ -33,6 +33,8 @@ export const entryMessages: Readonly<Record<string, MessageFunction>> = {
   "dose-whole-number": ({ part }: Data) => `"${String(part)}" is not a whole number from 1 on.`,
   "dose-share": ({ found }: Data) =>
     `${String(found)} % of a dose can't be: write a share above 0 and below 100 %, such as 50 for half; nothing of it: mark it missed.`,
+  "dose-far-above": ({ typed, per, limit, of }: Data) =>
+    `${String(typed)} in one ${String(per)} is far above the ${String(limit)} that the record states as the maximum ${String(of)} dose. Is it meant?`,
   "dose-taken-after-now": ({ at, now }: Data) =>
     `${String(at)} lies after the now line, ${String(now)}: it can't have been taken yet.`,
 };

@@ -5,7 +5,9 @@ import { type DoseLine, type DoseProduct, doseTextRead } from "../../core/regime
 import { issue } from "../../core/result/index.ts";
 import { Button } from "../ui/Button.tsx";
 import { FieldFrame } from "../ui/FieldFrame.tsx";
+import { type FieldAsk, fieldQuestion } from "../ui/fieldQuestion.ts";
 import { partId } from "../ui/partId.ts";
+import { doseAsk } from "./doseAsk.ts";
 import { doseProductsInFull } from "./doseProducts.ts";
 
 export interface DoseTextFieldProps {
@@ -25,10 +27,11 @@ export interface DoseTextFieldProps {
   readonly onLines: (lines: readonly DoseLine[]) => void;
 }
 
-/** A regimen typed as it would be said. Its meaning is said back while it is typed; Enter takes it. */
+/** A regimen typed as it would be said. Its meaning is said back while it is typed; Enter takes it, or asks about an amount that can hardly be meant. */
 export function DoseTextField(props: DoseTextFieldProps) {
   const { value, lane, products, product, text, label, sendWord, enterWord, plainText = "", onText, onLines } = props;
   const [isSent, setSent] = useState(false);
+  const [asked, setAsked] = useState<{ readonly of: string; readonly ask: FieldAsk<readonly DoseLine[]> }>();
   const read =
     product === null
       ? ({ ok: false, issues: [issue("dose-product-missing")] } as const)
@@ -42,12 +45,20 @@ export function DoseTextField(props: DoseTextFieldProps) {
         });
   const problem = read.ok ? undefined : read.issues[0];
   const isPlain = text.trim() === plainText;
+  // Another product makes the same words another dose.
+  const typed = `${product ?? ""} ${text}`;
   const send = (event: FormEvent) => {
     event.preventDefault();
     setSent(true);
     if (!read.ok) return;
-    onLines(read.value);
+    const ask = isPlain ? null : doseAsk(read.value, value, read.value);
     setSent(false);
+    if (ask) setAsked({ of: typed, ask });
+    else onLines(read.value);
+  };
+  const take = (lines: readonly DoseLine[]) => {
+    setAsked(undefined);
+    onLines(lines);
   };
   return (
     <form className="dose-text" onSubmit={send} noValidate>
@@ -55,6 +66,7 @@ export function DoseTextField(props: DoseTextFieldProps) {
         label={label}
         description={doseWords.textHelp}
         fault={isSent && problem ? issueMessage(problem) : undefined}
+        question={fieldQuestion(asked?.of === typed ? asked.ask : null, take)}
       >
         {(wiring) => (
           <div className="dose-text-line">

@@ -8,6 +8,7 @@ import { InstantField } from "../ui/InstantField.tsx";
 import { QuantityField } from "../ui/QuantityField.tsx";
 import { DoseTable } from "./DoseTable.tsx";
 import { DoseTextField } from "./DoseTextField.tsx";
+import { doseAsk } from "./doseAsk.ts";
 import { lineFault } from "./lineLook.ts";
 import { RepeatFields } from "./RepeatFields.tsx";
 
@@ -76,7 +77,9 @@ export function LineForm({ value, lane, line, products, onLine, onReplace }: Lin
           unit={line.amount.unit}
           look={(amount) => {
             const fault = faultOf({ ...line, amount });
-            return fault ? { kind: "refused", issue: fault } : { kind: "fine" };
+            if (fault) return { kind: "refused", issue: fault };
+            const ask = doseAsk([{ ...line, amount }], value, amount);
+            return ask ? { kind: "asked", ask } : { kind: "fine" };
           }}
           onCommit={(amount) => amount && onLine({ ...line, amount })}
         />

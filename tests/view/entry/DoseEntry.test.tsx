@@ -66,6 +66,23 @@ describe("typing a dose", () => {
     expect(value().given).toHaveLength(1);
   });
 
+  test("a dose far above the record's maximum is asked about before it counts, and taken with one press", async () => {
+    const { user, value } = await show({ options: [{ id: "A", label: "", chosen: false, lines: [] }] }, "A");
+    await user.type(text(), "2000 mg every 12 h from 20:00{Enter}");
+    const asked = () => screen.queryByText(/is far above the 600.mg that the record states as the maximum daily dose/);
+    expect(asked()).toBeVisible();
+    expect(text()).toHaveAccessibleDescription(expect.stringContaining("2,000\u00a0mg in one dose"));
+    expect(value().options[0]?.lines).toEqual([]);
+    // Typed on: the question is about what stood there.
+    await user.type(text(), ", 4 doses");
+    expect(asked()).toBeNull();
+    await user.keyboard("{Enter}");
+    await user.click(screen.getByRole("button", { name: "Yes, 2,000\u00a0mg is meant" }));
+    expect(value().options[0]?.lines).toMatchObject([{ amount: { value: 2000 }, repeat: { count: 4 } }]);
+    expect(asked()).toBeNull();
+    expect(text()).toHaveValue("");
+  });
+
   test("a clock time that does not exist that day is said when it is typed", async () => {
     const { user, value } = await show({
       timeZone: "Europe/London",
@@ -133,6 +150,17 @@ describe("editing a line", () => {
       products: doseProductsInFull(value().medicine),
     });
     expect(screen.getByText(asText(`${sentence}.`))).toBeVisible();
+  });
+
+  test("an amount far above the record's maximum counts only when it is said to be meant", async () => {
+    const { user, form, line } = await edit();
+    const amount = within(form).getByRole("textbox", { name: doseWords.amount });
+    const before = line().amount;
+    await user.clear(amount);
+    await user.type(amount, "99999{Enter}");
+    expect(line().amount).toEqual(before);
+    await user.click(within(form).getByRole("button", { name: "Yes, 99,999\u00a0mg is meant" }));
+    expect(line().amount).toEqual({ value: 99_999, unit: "mg" });
   });
 
   test("an amount of 0, an interval of 0 and half a dose are refused beside their fields", async () => {
