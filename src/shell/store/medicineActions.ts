@@ -110,7 +110,12 @@ export function medicineActions(context: StoreContext): MedicineActions {
 
     exportMedicine(id) {
       const record = recordOf(id, "exportMedicine");
-      const name = record.id.replaceAll(/[^A-Za-z0-9-]/g, "") || "record";
+      // What a person looks for in a folder: the medicine. A copy's id is a row of random signs.
+      const name =
+        record.name
+          .toLowerCase()
+          .replaceAll(/[^a-z0-9]+/g, "-")
+          .replaceAll(/^-|-$/g, "") || "record";
       return { name: `${name}.ebbline-medicine.json`, text: `${JSON.stringify(record, null, 2)}\n` };
     },
 

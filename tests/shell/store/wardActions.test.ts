@@ -105,7 +105,7 @@ describe("the ward's own records", () => {
     });
     expect(state().ownMedicines).toEqual(["new-1"]);
     const file = state().exportMedicine("new-1");
-    expect(file.name).toBe("new-1.ebbline-medicine.json");
+    expect(file.name).toBe("theophylline-copy.ebbline-medicine.json");
     await state().removeMedicine("new-1");
     expect(await state().importMedicine(file.name, file.text)).toEqual(copied);
   });
