@@ -32,7 +32,13 @@ interface ShownIn {
   readonly unit: UnitCode;
   readonly factor: number;
 }
-export const hours = (value: number): string => `${figure(value)} hours`;
+/** "1 hour", "5.5 hours", "1,000 hours". */
+export const hours = (value: number): string => counted(value, "hour");
+export const days = (value: number): string => counted(value, "day");
+function counted(value: number, word: string): string {
+  const shown = figure(value);
+  return `${shown} ${word}${shown === "1" ? "" : "s"}`;
+}
 export const when = (data: ConcernData): string =>
   instantText(dataNumber(data, "atMs"), dataText(data, "zone"), "dayClock");
 export const countWords = (count: number, one: string, many: string): string => `${count} ${count === 1 ? one : many}`;

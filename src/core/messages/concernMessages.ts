@@ -9,6 +9,7 @@ import {
   concentration,
   concentrationWords,
   countWords,
+  days,
   figure,
   hours,
   inTypical,
@@ -141,7 +142,7 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
   }),
   "factor-by-hand": (data) => ({
     title: `${FACTOR_WORDS[text(data, "kind")] ?? "Event"}: clearance changed by hand`,
-    text: `${text(data, "detail")}. Clearance ${figure(number(data, "clearance") * 100)} % of usual${number(data, "volume") === 1 ? "" : `, volume ${figure(number(data, "volume") * 100)} %`}${number(data, "onsetDays") > 0 ? `, reached in daily steps over ${figure(number(data, "onsetDays"))} days` : ", at once"}. ${data.source === null ? "That is the user's own figure, not the record's." : `Its source, as entered: ${text(data, "source")}.`}`,
+    text: `${text(data, "detail")}. Clearance ${figure(number(data, "clearance") * 100)} % of usual${number(data, "volume") === 1 ? "" : `, volume ${figure(number(data, "volume") * 100)} %`}${number(data, "onsetDays") > 0 ? `, reached in daily steps over ${days(number(data, "onsetDays"))}` : ", at once"}. ${data.source === null ? "That is the user's own figure, not the record's." : `Its source, as entered: ${text(data, "source")}.`}`,
   }),
   "kinetics-change": (data) => ({
     title: "The kinetics change during the course",

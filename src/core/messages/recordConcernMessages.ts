@@ -1,10 +1,11 @@
 import type { TargetWindow } from "../case/index.ts";
 import type { CovariateName } from "../medicine/index.ts";
-import { numberPrint, type Quantity, quantityPrint, type UnitCode, unitSpoken } from "../units/index.ts";
+import { type Quantity, quantityPrint, type UnitCode, unitSpoken } from "../units/index.ts";
 import {
   type ConcernData,
   type ConcernWords,
   concentration,
+  days,
   figure,
   hours,
   dataNumber as number,
@@ -12,7 +13,7 @@ import {
   when,
   wordList,
 } from "./concernFigures.ts";
-import { windowQuantityWord } from "./windowWords.ts";
+import { windowPointWords, windowQuantityWord } from "./windowWords.ts";
 
 /** Concerns that come from the medicine record: one function a code. */
 export const recordConcernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWords>> = {
@@ -125,9 +126,10 @@ const printed = (quantity: Quantity): string => quantityPrint(quantity, { ...PRI
 const orList = (words: readonly string[]): string => wordList(words).replace(/ and ([^,]*)$/, " or $1");
 /** "Measured 9.1 mg per L; the window for the lowest is 4 to 8 mg per L." */
 function measuredBeside(data: ConcernData): string {
-  const quantity = windowQuantityWord(text(data, "quantity") as TargetWindow["quantity"]);
+  const { afterDoseH } = data as { readonly afterDoseH: number | null };
+  const point = windowPointWords(text(data, "quantity") as TargetWindow["quantity"], afterDoseH);
   const measured = `${data.belowLimit === true ? "below the assay's limit of " : ""}${concentration(data, "measured")}`;
-  return `Measured ${measured}; the window for the ${quantity} is ${concentration(data, "low")} to ${concentration(data, "high")}.`;
+  return `Measured ${measured}; the window for the ${afterDoseH === null ? "" : "level "}${point} is ${concentration(data, "low")} to ${concentration(data, "high")}.`;
 }
 
 const percent = (share: number): string => `${figure(share * 100)} %`;
@@ -145,7 +147,7 @@ function rangeWords(data: ConcernData): string {
 
 /** "54 hours", from 3 days on in days. */
 function span(hoursLong: number): string {
-  return hoursLong < 72 ? hours(hoursLong) : `${figure(hoursLong / 24)} days`;
+  return hoursLong < 72 ? hours(hoursLong) : days(hoursLong / 24);
 }
 
 function waits(data: ConcernData): string {
@@ -159,16 +161,14 @@ function waits(data: ConcernData): string {
 
 function course(data: ConcernData): string {
   const { courseD, settledD } = data as { readonly courseD: number | null; readonly settledD: number | null };
-  const young = courseD === null ? "No dose has been given yet" : `The course is ${figure(courseD)} days old`;
-  return settledD === null
-    ? `${young}.`
-    : `${young}; it settles after about ${numberPrint(settledD, { significant: 3 })} days.`;
+  const young = courseD === null ? "No dose has been given yet" : `The course is ${days(courseD)} old`;
+  return settledD === null ? `${young}.` : `${young}; it settles after about ${days(settledD)}.`;
 }
 
 function known(data: ConcernData): string {
   const parameter = text(data, "parameter") === "clearance" ? "clearance" : "volume";
   const { onsetDays } = data as { readonly onsetDays: number | null };
-  const onset = onsetDays === null ? "" : ` within ${figure(onsetDays)} days`;
+  const onset = onsetDays === null ? "" : ` within ${days(onsetDays)}`;
   return `By the record: ${sentence(text(data, "text"))}, ${parameter} ${percent(number(data, "factor"))} of usual${onset} (${text(data, "source")}; ${text(data, "basis")}).`;
 }
 

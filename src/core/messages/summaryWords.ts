@@ -136,7 +136,7 @@ export const summaryOrderWords = {
   liquidTake: (volume: string, amount: string) => `${volume} (${amount})`,
   once: "once",
   every: (hours: string, clock: readonly string[]) =>
-    clock.length === 0 ? `every ${hours} hours` : `every ${hours} hours, at ${listWords(clock)}`,
+    `every ${hours === "1" ? "hour" : `${hours} hours`}${clock.length === 0 ? "" : `, at ${listWords(clock)}`}`,
   everyDay: (clock: readonly string[]) =>
     clock.length === 1 ? `every day at ${clock[0]}` : `at each of ${listWords(clock)}, every day`,
   /** `days`: "Monday, Wednesday and Friday". */

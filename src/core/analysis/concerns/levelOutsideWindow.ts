@@ -2,6 +2,7 @@ import { quantityConvert } from "../../units/index.ts";
 import { type ConcernRule, clockMs, concern } from "../concernRule.ts";
 import { concentrationWindow } from "../optionReadings.ts";
 import { windowDrawn } from "../windowDrawn.ts";
+import { windowDrawH } from "../windowTiming.ts";
 import { windowSidesForAlbumin } from "./phenytoinAlbumin.ts";
 
 /**
@@ -33,6 +34,7 @@ export const levelOutsideWindow: ConcernRule = (context) => {
     measured,
     belowLimit,
     quantity: window.quantity,
+    afterDoseH: windowDrawH(context.case),
     low: ends.low,
     high: ends.high,
   };
