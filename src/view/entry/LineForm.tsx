@@ -92,7 +92,13 @@ export function LineForm({ value, lane, line, products, onLine, onReplace }: Lin
           onCommit={(start) => onLine({ ...line, start })}
         />
       </div>
-      <RepeatFields line={line} zone={value.timeZone} faultOf={faultOf} onLine={onLine} />
+      <RepeatFields
+        line={line}
+        zone={value.timeZone}
+        faultOf={faultOf}
+        askOf={(next, taken) => doseAsk([next], value, taken)}
+        onLine={onLine}
+      />
       {lane === "given" ? <DoseTable value={value} lane={lane} line={line} units={units} onLine={onLine} /> : null}
     </section>
   );

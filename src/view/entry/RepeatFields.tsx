@@ -3,6 +3,7 @@ import { doseWords, issueMessage } from "../../core/messages/index.ts";
 import { clockTimeSchema, type DoseLine, type DoseRepeat } from "../../core/regimen/index.ts";
 import { type Issue, issue } from "../../core/result/index.ts";
 import { instantMs, wallClock } from "../../core/time/index.ts";
+import type { FieldAsk } from "../ui/fieldQuestion.ts";
 import { QuantityField } from "../ui/QuantityField.tsx";
 import { RadioField } from "../ui/RadioField.tsx";
 import { TextField } from "../ui/TextField.tsx";
@@ -13,11 +14,13 @@ export interface RepeatFieldsProps {
   readonly line: DoseLine;
   readonly zone: string;
   readonly faultOf: (line: DoseLine) => Issue | null;
+  /** A question before the line counts; `taken` is what counts then. */
+  readonly askOf: <T>(line: DoseLine, taken: T) => FieldAsk<T> | null;
   readonly onLine: (line: DoseLine) => void;
 }
 
 /** How often a line repeats and how far it reaches. */
-export function RepeatFields({ line, zone, faultOf, onLine }: RepeatFieldsProps) {
+export function RepeatFields({ line, zone, faultOf, askOf, onLine }: RepeatFieldsProps) {
   const [faults, setFaults] = useState<Readonly<Record<string, string>>>({});
   const { repeat } = line;
   /** Takes the change, or says beside the field why not. */
@@ -60,8 +63,11 @@ export function RepeatFields({ line, zone, faultOf, onLine }: RepeatFieldsProps)
             look={(every) => {
               if (every.value <= 0)
                 return { kind: "refused", issue: issue("line-interval", { found: every.value, unit: "h" }) };
-              const fault = faultOf({ ...line, repeat: { ...repeat, every } });
-              return fault ? { kind: "refused", issue: fault } : { kind: "fine" };
+              const next = { ...line, repeat: { ...repeat, every } };
+              const fault = faultOf(next);
+              if (fault) return { kind: "refused", issue: fault };
+              const ask = askOf(next, every);
+              return ask ? { kind: "asked", ask } : { kind: "fine" };
             }}
             onCommit={(every) => every && onLine({ ...line, repeat: { ...repeat, every } })}
           />

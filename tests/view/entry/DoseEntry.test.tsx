@@ -163,6 +163,19 @@ describe("editing a line", () => {
     expect(line().amount).toEqual({ value: 99_999, unit: "mg" });
   });
 
+  test("so does an interval that makes a day of it far above", async () => {
+    const [given] = caseFixture().given;
+    const endless = { ...given!, repeat: { every: { value: 12, unit: "h" as const } } };
+    const { user, form, line } = await edit({ given: [endless] });
+    const hours = within(form).getByRole("textbox", { name: doseWords.hours });
+    await user.clear(hours);
+    await user.type(hours, "2{Enter}");
+    expect(line().repeat).toEqual(endless.repeat);
+    // 12 doses of 200 mg.
+    await user.click(within(form).getByRole("button", { name: "Yes, 2,400\u00a0mg is meant" }));
+    expect(line().repeat).toEqual({ every: { value: 2, unit: "h" } });
+  });
+
   test("an amount of 0, an interval of 0 and half a dose are refused beside their fields", async () => {
     const { user, form, line } = await edit();
     const before = line();
