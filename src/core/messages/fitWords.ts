@@ -44,8 +44,12 @@ export const fitWords = {
   chanceBeside: (below: string, above: string) => `below ${below}, above ${above}`,
   chanceOption: (option: string) => `Option ${option}`,
   chanceTaken: "Of this patient, from what the levels leave possible.",
-  neverSteady: (option: string, share: string) =>
-    `Option ${option}: with a chance of ${share} a steady state is never reached; those draws are left out of its steady-state figures.`,
+  /** In the cell of a figure that is not given, and at the table why. */
+  notGiven: "not given",
+  ofOption: (option: string, sentence: string) => `Option ${option}: ${lowered(sentence)}`,
+  ofPatient: (option: string, sentence: string) => `Option ${option}, this patient: ${lowered(sentence)}`,
+  typicalNever: (option: string) =>
+    `Option ${option}, typical patient: more is taken than can be eliminated, so there is no steady state.`,
   within: "within",
   below: "below",
   above: "above",

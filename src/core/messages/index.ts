@@ -28,6 +28,7 @@ export { issueMessage, MESSAGE_CODES } from "./issueMessage.ts";
 export { laneLineWords, laneTokenWords } from "./laneWords.ts";
 export { levelFitWords } from "./levelFitWords.ts";
 export type { MessageFunction } from "./messageFunction.ts";
+export { lowestBeforeWords, neverSteadyWords, steadyWithheldWords } from "./patientSteadyWords.ts";
 export { recordWords } from "./recordWords.ts";
 export { type DoseSentenceContext, doseAmountWords, doseLineSentence } from "./regimenWords.ts";
 export { richWords } from "./richWords.ts";

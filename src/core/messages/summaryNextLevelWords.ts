@@ -14,15 +14,20 @@ export const summaryNextLevelWords = {
   /** What the dose comes at or after. */
   sinceSteady: (when: string) => `90 % of steady state (${when})`,
   sinceRecord: (when: string) => `the end of the record's wait (${when})`,
-  recordWait: (record: string, steady: string, isOwn: boolean, source: string) =>
-    `The record waits ${record} after a regimen begins or changes, longer than 90 % of steady state (${isOwn ? `up to ${steady} in this patient, the upper end of the 90 % interval` : steady}): the longer wait is used. Source ${source}.`,
+  recordWait: (record: string, steady: string, whose: "own" | "typical" | null, source: string) =>
+    `The record waits ${record} after a regimen begins or changes, longer than 90 % of steady state (${whose === "own" ? `up to ${steady} in this patient, the upper end of the 90 % interval` : `${steady}${whose === "typical" ? " in the typical patient" : ""}`}): the longer wait is used. Source ${source}.`,
   recordTooLong: (record: string, source: string) =>
     `The record waits ${record} after a regimen begins or changes: too long to wait for it. Source ${source}.`,
   longerWait: (own: string, typical: string) =>
     `This patient may take longer than the typical one (up to ${own} to 90 % of steady state, the upper end of the 90 % interval; typical ${typical}): the longer wait is used.`,
   maybeNever: (share: string) => `With a chance of ${share} a steady state is never reached: do not wait for it alone.`,
-  tooLong: (own: string, typical: string | null) =>
-    `90 % of steady state may take ${own}${typical === null ? "" : ` in this patient (upper end of the 90 % interval), ${typical} in the typical one`}: too long to wait for it.`,
+  tooLong: (typical: string) => `90 % of steady state may take ${typical}: too long to wait for it.`,
+  tooLongOf: ({ typical, own, isOwnLonger }: { typical: string; own: string; isOwnLonger: boolean }) =>
+    isOwnLonger
+      ? `90 % of steady state may take ${own} in this patient (upper end of the 90 % interval), ${typical} in the typical one: too long to wait for it.`
+      : `90 % of steady state may take ${typical} in the typical patient, up to ${own} in this one (upper end of the 90 % interval): too long to wait for it.`,
+  typicalNever: (own: string) =>
+    `The typical patient never settles under this dose; this patient may take up to ${own} to 90 % of steady state (upper end of the 90 % interval): no time is given.`,
   writeTimes: "Write the time of the last dose and of the sample on the request.",
   noOption: "No option is chosen, so no time can be given.",
   noModel: "There is no prediction, so no time can be given.",

@@ -1,6 +1,12 @@
 import { type Analysis, type WindowChance, windowDrawH } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { chanceWords, fitWords, windowChanceWords } from "../../core/messages/index.ts";
+import {
+  chanceWords,
+  fitWords,
+  lowestBeforeWords,
+  neverSteadyWords,
+  windowChanceWords,
+} from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { optionStyle } from "../chart/ProfileChart.tsx";
 import { OptionBadge } from "./OptionBadge.tsx";
@@ -17,7 +23,13 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
   const { window } = value;
   if (!window || analysis.options.every((option) => option.individual === null)) return null;
   const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
-  const never = analysis.options.filter(({ individual }) => (individual?.shareNeverSteady ?? 0) > 0);
+  const remarks = analysis.options.flatMap(({ id, individual }) =>
+    individual
+      ? [neverSteadyWords(individual), lowestBeforeWords(window.quantity, individual.span)]
+          .filter((sentence) => sentence !== null)
+          .map((sentence) => fitWords.ofOption(id, sentence))
+      : [],
+  );
   return (
     <section className="chances" aria-labelledby="chances-head">
       <h2 className="readings-head" id="chances-head">
@@ -59,9 +71,9 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
           );
         })}
       </ul>
-      {never.map(({ id, individual }) => (
-        <p key={id} className="chance-beside">
-          {fitWords.neverSteady(id, chanceWords(individual?.shareNeverSteady ?? 0))}
+      {remarks.map((sentence) => (
+        <p key={sentence} className="chance-beside">
+          {sentence}
         </p>
       ))}
       <p className="chance-beside">{fitWords.chanceTaken}</p>

@@ -6,6 +6,7 @@ import { OptionBadge } from "./OptionBadge.tsx";
 import type { ShownUnit } from "./shownUnit.ts";
 import "./ReadingsTable.css";
 import { hasIndividual, type ReadingCell, type ReadingPair, readingsGroups } from "./readingsRows.ts";
+import { isSteadyWithheld, steadyWithheldNotes } from "./steadyWithheld.ts";
 
 /** Whose figure a reading is. */
 export type ReadingOf = "typical" | "individual";
@@ -26,9 +27,16 @@ const SIDE_BY_SIDE = 2;
 export function ReadingsTable({ value, analysis, unit, onWorking, onLit }: ReadingsTableProps) {
   const groups = useMemo(() => readingsGroups(value, analysis, unit), [value, analysis, unit]);
   const hasOwn = hasIndividual(analysis);
+  const notes = steadyWithheldNotes(analysis);
   const isSplit = hasOwn && value.options.length <= SIDE_BY_SIDE;
   return groups.map((group) => (
     <section key={group.id} className="readings">
+      {group.id === "steady" &&
+        notes.map((note) => (
+          <p key={note} className="readings-note">
+            {note}
+          </p>
+        ))}
       <table className={`readings-table${hasOwn ? " readings-table-own" : ""}`}>
         <caption className="readings-head">{group.head}</caption>
         <thead>
@@ -63,10 +71,17 @@ export function ReadingsTable({ value, analysis, unit, onWorking, onLit }: Readi
               <tr key={row.id} data-reading={row.id}>
                 <th scope="row">{row.name}</th>
                 {row.cells.flatMap((pair, i) => {
-                  const option = analysis.options[i]!.id;
+                  const found = analysis.options[i]!;
+                  const option = found.id;
+                  const isWithheld = isSteadyWithheld(row.id, found);
                   const lit = { onPointerEnter: () => onLit(option), onPointerLeave: () => onLit(null) };
                   const cell = (of: ReadingOf) => (
-                    <Reading cell={pair[of]} of={of} onPress={() => onWorking(row.id, option, of)} />
+                    <Reading
+                      cell={pair[of]}
+                      of={of}
+                      isWithheld={isWithheld}
+                      onPress={() => onWorking(row.id, option, of)}
+                    />
                   );
                   if (isSplit && pair.isShared) {
                     return [
@@ -87,7 +102,7 @@ export function ReadingsTable({ value, analysis, unit, onWorking, onLit }: Readi
                   }
                   return [
                     <td key={option} {...lit}>
-                      {hasOwn ? <Stacked pair={pair} cell={cell} /> : cell("typical")}
+                      {hasOwn ? <Stacked pair={pair} isWithheld={isWithheld} cell={cell} /> : cell("typical")}
                     </td>,
                   ];
                 })}
@@ -100,11 +115,18 @@ export function ReadingsTable({ value, analysis, unit, onWorking, onLit }: Readi
 }
 
 /** This patient's figure with the typical one under it, named. */
-function Stacked({ pair, cell }: { pair: ReadingPair; cell: (of: ReadingOf) => React.ReactNode }) {
+interface StackedProps {
+  readonly pair: ReadingPair;
+  readonly isWithheld: boolean;
+  readonly cell: (of: ReadingOf) => React.ReactNode;
+}
+
+function Stacked({ pair, isWithheld, cell }: StackedProps) {
+  const hasOwn = pair.individual !== null || isWithheld;
   return (
     <>
-      {pair.individual && cell("individual")}
-      {pair.individual ? (
+      {hasOwn && cell("individual")}
+      {hasOwn ? (
         <span className="readings-under">
           {fitWords.typical} {cell("typical")}
         </span>
@@ -119,8 +141,18 @@ function Stacked({ pair, cell }: { pair: ReadingPair; cell: (of: ReadingOf) => R
   );
 }
 
-function Reading({ cell, of, onPress }: { cell: ReadingCell | null; of: ReadingOf; onPress: () => void }) {
-  if (cell === null) return of === "typical" ? <span className="readings-none">none</span> : null;
+interface ReadingProps {
+  readonly cell: ReadingCell | null;
+  readonly of: ReadingOf;
+  readonly isWithheld: boolean;
+  readonly onPress: () => void;
+}
+
+function Reading({ cell, of, isWithheld, onPress }: ReadingProps) {
+  if (cell === null) {
+    if (of === "typical") return <span className="readings-none">none</span>;
+    return isWithheld ? <span className="readings-none">{fitWords.notGiven}</span> : null;
+  }
   return (
     <button
       type="button"

@@ -1,17 +1,16 @@
 import type { DoseMark, IndividualReadings, OptionReadings } from "../../core/analysis/index.ts";
 import {
-  chanceWords,
-  fitWords,
+  neverSteadyWords,
   summaryPatientWords as patientWords,
   SUMMARY_TITLES as titles,
   summaryReadingWords as words,
 } from "../../core/messages/index.ts";
+import { noSteadyText } from "./noSteadyText.ts";
 import { shownPatient } from "./shownPatient.ts";
-import { noSteadySentence, shownReadings } from "./shownReadings.ts";
+import { shownReadings } from "./shownReadings.ts";
 import { steadyFrom } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryModel, SummaryRow } from "./summaryModel.ts";
-import { chosenOption } from "./summaryOrder.ts";
 import type { SummaryPrint } from "./summaryPrint.ts";
 
 type Steady = NonNullable<OptionReadings["steadyState"]>;
@@ -25,7 +24,7 @@ export function expectedText(input: SummaryInput, print: SummaryPrint): SummaryM
   }
   const shown = shownReadings(input);
   if (!shown) return null;
-  const { steadyState, noSteadyState } = shown.readings;
+  const { steadyState } = shown.readings;
   const why = patientWords.whyTypical(patient.reason);
   return steadyState
     ? {
@@ -36,31 +35,27 @@ export function expectedText(input: SummaryInput, print: SummaryPrint): SummaryM
     : {
         title: words.titled(titles.expectedSpan, words.typical),
         rows: spanRows(shown.readings, print),
-        remark: `${noSteadySentence(noSteadyState)} ${why}`,
+        remark: [noSteadyText(input), why].join(" "),
       };
 }
 
 function individualText(input: SummaryInput, own: IndividualReadings, print: SummaryPrint): SummaryModel["expected"] {
   const typical = shownReadings(input);
-  const { steadyState, shareNeverSteady } = own;
-  const never =
-    shareNeverSteady > 0 && shareNeverSteady < 1
-      ? [fitWords.neverSteady(chosenOption(input.case)?.id ?? "", chanceWords(shareNeverSteady))]
-      : [];
+  const { steadyState } = own;
   if (steadyState) {
+    const never = neverSteadyWords(own);
     const settled = typical?.readings.steadyState;
     const when = settled && typical ? [typicalWhen(settled, typical.option.doses, print)] : [];
     return {
       title: words.titled(titles.expectedSteady, words.individual),
       rows: ownSteadyRows(steadyState, print),
-      remark: [patientWords.spreadRemark, ...when, ...never].join(" "),
+      remark: [patientWords.spreadRemark, ...when, ...(never ? [never] : [])].join(" "),
     };
   }
-  const reason = shareNeverSteady === 1 ? words.neverSteady : noSteadySentence(typical?.readings.noSteadyState ?? null);
   return {
     title: words.titled(titles.expectedSpan, words.individual),
     rows: ownSpanRows(own, print),
-    remark: `${reason} ${patientWords.spreadRemark}`,
+    remark: [noSteadyText(input), patientWords.spreadRemark].join(" "),
   };
 }
 

@@ -5,8 +5,9 @@ import { type DoseLine, doseLineExpand } from "../../core/regimen/index.ts";
 import { instantMs, MS_PER_HOUR } from "../../core/time/index.ts";
 import { quantityConvert } from "../../core/units/index.ts";
 import type { Citations } from "./citations.ts";
+import { noSteadyText } from "./noSteadyText.ts";
 import { shownPatient } from "./shownPatient.ts";
-import { noSteadySentence, shownReadings } from "./shownReadings.ts";
+import { shownReadings } from "./shownReadings.ts";
 import { type SteadyFrom, steadyFrom } from "./steadyFrom.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import type { SummaryModel } from "./summaryModel.ts";
@@ -34,8 +35,9 @@ function sentences(input: SummaryInput, cite: Citations, print: SummaryPrint): r
   const shown = shownReadings(input);
   if (!shown) return [words.noModel];
   const steady = steadyFrom(input, print);
-  const { steadyState, noSteadyState } = shown.readings;
-  if (!steadyState || !steady) return [noSteadySentence(noSteadyState), words.byQuestion, words.writeTimes];
+  const { steadyState } = shown.readings;
+  const none = noSteadyText(input) ?? (steady ? null : typicalNever(input, print));
+  if (!steadyState || !steady || none !== null) return [none ?? words.noModel, words.byQuestion, words.writeTimes];
   const wait = waitOf(input, steady, cite, print);
   const nowMs = instantMs(input.case.now);
   if (wait.untilMs - nowMs > LONGEST_DAYS * DAY_MS) return [wait.tooLong, words.byQuestion, words.writeTimes];
@@ -70,7 +72,7 @@ interface Wait {
 
 /** The longest of the typical patient's 90 %, this patient's, who may be slower, and the record's wait: which one holds is said. */
 function waitOf(input: SummaryInput, steady: SteadyFrom, cite: Citations, print: SummaryPrint): Wait {
-  const { longerH, typicalH } = steady;
+  const { longerH, typicalH, ownH } = steady;
   const steadyH = longerH ?? typicalH;
   const { steadyStateAfter } = input.case.medicine;
   const recordH = steadyStateAfter ? quantityConvert(steadyStateAfter, "h") : 0;
@@ -79,7 +81,7 @@ function waitOf(input: SummaryInput, steady: SteadyFrom, cite: Citations, print:
     return {
       untilMs: steady.startMs + recordH * MS_PER_HOUR,
       since: words.sinceRecord,
-      why: [words.recordWait(record, print.wait(steadyH), longerH !== null, source)],
+      why: [words.recordWait(record, print.wait(steadyH), whoseWait(steady), source)],
       tooLong: words.recordTooLong(record, source),
     };
   }
@@ -88,8 +90,27 @@ function waitOf(input: SummaryInput, steady: SteadyFrom, cite: Citations, print:
     untilMs: steady.ms,
     since: words.sinceSteady,
     why: longerH === null ? [] : [words.longerWait(print.wait(longerH), typical)],
-    tooLong: words.tooLong(print.wait(steadyH), longerH === null ? null : typical),
+    tooLong:
+      ownH === null
+        ? words.tooLong(typical)
+        : words.tooLongOf(
+            longerH === null
+              ? { typical, own: print.wait(ownH), isOwnLonger: false }
+              : { typical, own: print.wait(longerH), isOwnLonger: true },
+          ),
   };
+}
+
+/** Whose time to 90 % of steady state the longer one is; null where there is the typical patient alone. */
+function whoseWait({ longerH, ownH }: SteadyFrom): "own" | "typical" | null {
+  return ownH === null ? null : longerH === null ? "typical" : "own";
+}
+
+/** The typical patient never settles and this one does: no hour of the pattern to count from, and the wait is long. */
+function typicalNever(input: SummaryInput, print: SummaryPrint): string | null {
+  const patient = shownPatient(input);
+  const own = patient.kind === "individual" ? patient.readings?.steadyState : null;
+  return own ? words.typicalNever(print.wait(own.timeTo90H.q95)) : null;
 }
 
 function neverSteady(input: SummaryInput): readonly string[] {

@@ -1,5 +1,4 @@
 import type { OptionReadings, OptionResult } from "../../core/analysis/index.ts";
-import { summaryReadingWords } from "../../core/messages/index.ts";
 import type { SummaryInput } from "./summaryInput.ts";
 import { chosenOption } from "./summaryOrder.ts";
 
@@ -13,16 +12,4 @@ export function shownReadings(input: SummaryInput): ShownReadings | null {
   const chosen = chosenOption(input.case);
   const option = input.analysis.options.find(({ id }) => id === chosen?.id);
   return option?.typical ? { option, readings: option.typical } : null;
-}
-
-/** Why an option has no steady state, in a sentence. */
-export function noSteadySentence(reason: OptionReadings["noSteadyState"]): string {
-  switch (reason) {
-    case "dose-rate-at-or-above-vmax":
-      return summaryReadingWords.neverSteady;
-    case "no-common-period":
-      return summaryReadingWords.noCommonPeriod;
-    default:
-      return summaryReadingWords.noRepeat;
-  }
 }

@@ -12,6 +12,8 @@ export interface SteadyFrom {
   /** This patient may take longer than the typical one: upper end of the 90 % interval, h; null where the typical patient's time holds. */
   readonly longerH: number | null;
   readonly typicalH: number;
+  /** This patient's upper end, h; null without a fit. */
+  readonly ownH: number | null;
 }
 
 /** The typical patient's 90 % of steady state, or this patient's where it may come later; null when the option has none. */
@@ -27,5 +29,6 @@ export function steadyFrom(input: SummaryInput, print: SummaryPrint): SteadyFrom
     startMs,
     longerH,
     typicalH: steady.timeTo90H,
+    ownH: own,
   };
 }

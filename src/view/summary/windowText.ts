@@ -2,6 +2,8 @@ import { type IndividualReadings, windowDrawH } from "../../core/analysis/index.
 import type { TargetWindow } from "../../core/case/index.ts";
 import {
   chanceWords,
+  lowestBeforeWords,
+  neverSteadyWords,
   summaryPatientWords as patientWords,
   SUMMARY_TITLES as titles,
   windowChanceWords,
@@ -59,6 +61,9 @@ function individualText(
         ? [patientWords.chanceOf(windowChanceWords(window.quantity, windowDrawH(input.case)))]
         : []),
       ...(overSpan || hasHours ? [patientWords.overSpan(spanWords(window, span, print, hasHours))] : []),
+      // With steady-state figures it stands beside those.
+      ...(readings.steadyState ? [] : sentence(neverSteadyWords(readings))),
+      ...sentence(lowestBeforeWords(window.quantity, span)),
     ].join(" "),
     columns: [
       ...(steady ? [patientWords.chanceSteady] : []),
@@ -78,6 +83,8 @@ function individualText(
     }),
   };
 }
+
+const sentence = (found: string | null): readonly string[] => (found === null ? [] : [found]);
 
 function spanWords(
   window: TargetWindow,

@@ -47,6 +47,35 @@ describe("this patient on the bench", () => {
     expect(await axeFaults(steady!)).toEqual([]);
   });
 
+  test("no steady-state figure of this patient: the reason at the table, the share counted beside the chance", async () => {
+    const { column } = await show((typical) => {
+      const made = fittedAnalysis(typical);
+      const options = made.options.map((option) => ({
+        ...option,
+        individual: {
+          ...option.individual!,
+          span: { ...option.individual!.span, lowestBeforeOption: 0.98 },
+          steadyState: null,
+          shareNeverSteady: 0.17,
+        },
+      }));
+      return { ...made, options };
+    });
+    const cell = column.querySelector("[data-reading=peak]")!;
+    expect(cell).toHaveTextContent("not given");
+    expect(
+      within(column).getByText(/^Option A, this patient: in 17 % of what the levels leave possible/),
+    ).toBeVisible();
+    const chances = within(column).getByRole("region", { name: /^Chance of the whole curve/ });
+    expect(
+      within(chances).getByText(/^Option A: with a chance of 17 % a steady state is never reached: counted as above/),
+    ).toBeVisible();
+    expect(chances).not.toHaveTextContent("left out of");
+    expect(
+      within(chances).getByText(/^Option A: in 98 % .* is the level now, before the option's first dose/),
+    ).toBeVisible();
+  });
+
   test("a figure of this patient opens its working: levels, draws, seed, method", async () => {
     const { user, column } = await show();
     const cell = column.querySelector<HTMLButtonElement>("[data-reading=peak] .readings-own")!;

@@ -161,6 +161,96 @@ describe("the sheet of this patient", () => {
     );
   });
 
+  describe("where so many draws never settle that no steady-state figure is given", () => {
+    const never = (change: object = {}) => {
+      const [option] = input.analysis.options;
+      const individual = { ...option!.individual!, steadyState: null, shareNeverSteady: 0.17, ...change };
+      return withFit({ options: [{ ...option!, individual }] });
+    };
+
+    it("gives the share as the reason, not that the option does not repeat; and says how the chance counts them", () => {
+      const { expected, hours, nextLevel } = never();
+      const reason =
+        "In 17 % of what the levels leave possible the level never settles under this dose: no steady-state figures are given.";
+      expect(expected!.title).toBe("Expected over the days shown, this patient");
+      expect(expected!.remark).toBe(`${reason} Median (90 % interval).`);
+      expect(hours!.span).toContain(
+        "With a chance of 17 % a steady state is never reached: counted as above in the chance at steady state.",
+      );
+      expect(nextLevel.sentences[0]).toBe(reason);
+      expect(nextLevel.sentences).toContain("Time the next level by the clinical question.");
+      expect(nextLevel.sentences.join(" ")).not.toContain("90 %");
+    });
+
+    it("an option that does not repeat keeps its own reason", () => {
+      const [option] = input.analysis.options;
+      const typical = { ...option!.typical!, steadyState: null, noSteadyState: "no-repeat" as const };
+      const individual = { ...option!.individual!, steadyState: null, steadyChance: null, shareNeverSteady: 0 };
+      const { expected, nextLevel } = withFit({ options: [{ ...option!, typical, individual }] });
+      expect(expected!.remark).toMatch(/^The option does not repeat/);
+      expect(nextLevel.sentences[0]).toMatch(/^The option does not repeat/);
+    });
+  });
+
+  it("few draws that never settle: left out of the figures, counted in the chance", () => {
+    const [option] = input.analysis.options;
+    const found = withFit({
+      options: [{ ...option!, individual: { ...option!.individual!, shareNeverSteady: 0.03 } }],
+    });
+    expect(found.expected!.remark).toContain(
+      "With a chance of 3 % a steady state is never reached: left out of the steady-state figures, counted as above in the chance at steady state.",
+    );
+    expect(found.hours!.span).not.toContain("never reached");
+  });
+
+  it("a typical patient who never settles does not speak for this one, who does", () => {
+    const [option] = input.analysis.options;
+    const typical = { ...option!.typical!, steadyState: null, noSteadyState: "dose-rate-at-or-above-vmax" as const };
+    const { expected, nextLevel } = withFit({ options: [{ ...option!, typical }] });
+    expect(expected!.title).toBe("Expected at steady state, this patient");
+    expect(nextLevel.sentences[0]).toMatch(
+      /^The typical patient never settles under this dose; this patient may take up to [\d.]+ (hours|days) to 90 % of steady state/,
+    );
+  });
+
+  it("names the typical patient where the longest wait is that one's", () => {
+    const [option] = input.analysis.options;
+    const { typical, individual } = option!;
+    const settled = typical!.steadyState!;
+    const startH = settled.steady90AtH - settled.timeTo90H;
+    const steady = { ...settled, timeTo90H: 807 * 24, steady90AtH: startH + 807 * 24 };
+    const own = { ...individual!.steadyState!, timeTo90H: { ...individual!.steadyState!.timeTo90H, q95: 480 } };
+    const { nextLevel } = withFit({
+      options: [
+        { ...option!, typical: { ...typical!, steadyState: steady }, individual: { ...individual!, steadyState: own } },
+      ],
+    });
+    expect(nextLevel.sentences[0]).toBe(
+      "90 % of steady state may take 807 days in the typical patient, up to 20 days in this one (upper end of the 90 % interval): too long to wait for it.",
+    );
+  });
+
+  it("says under the chances where the lowest is the level before the option acts", () => {
+    const [option] = input.analysis.options;
+    const { span } = option!.individual!;
+    const under = (lowestBeforeOption: number) =>
+      withFit({
+        options: [
+          {
+            ...option!,
+            individual: {
+              ...option!.individual!,
+              span: { ...span, chance: { below: 0.9, within: 0.1, above: 0 }, lowestBeforeOption },
+            },
+          },
+        ],
+      }).hours!.span;
+    expect(under(0.98)).toContain(
+      "In 98 % of what the levels leave possible the lowest of these days is the level now, before the option's first dose acts: the option can't change it.",
+    );
+    expect(under(0.2)).not.toContain("level now");
+  });
+
   it("draws the median thick, the bands, and the typical patient thin", () => {
     const scene = summaryScene(input, model.chart);
     expect(scene.curves.map(({ id, isThin }) => [id, isThin])).toEqual([
