@@ -76,6 +76,7 @@ export function recomputeIndividual(readings: IndividualReadings | null, fit: An
     hoursWithin: maybe(span.hoursWithin, "h"),
     hoursAbove: maybe(span.hoursAbove, "h"),
     chance: span.chance,
+    lowestBeforeOption: span.lowestBeforeOption,
     steadyState: steadyState && {
       peak: interval(steadyState.peak, "mg/L"),
       trough: interval(steadyState.lowest, "mg/L"),
@@ -93,6 +94,7 @@ export function recomputeIndividual(readings: IndividualReadings | null, fit: An
     },
     chanceAtSteadyState: readings.steadyChance,
     shareNeverSteady: readings.shareNeverSteady,
+    chanceToxic: readings.toxicChance,
   };
 }
 

@@ -89,6 +89,9 @@ function outsideChance(data: ConcernData, side: "above" | "below", other: "above
   };
 }
 
+/** Fewer draws that never settle make no difference to a chance in whole per cents. */
+const NEVER_SAID_FROM = 0.01;
+
 function chanceToxic(data: ConcernData): ConcernWords {
   const isTrough = data.at === "trough";
   const chance = number(data, "chance");
@@ -100,13 +103,17 @@ function chanceToxic(data: ConcernData): ConcernWords {
   const found =
     data.median === null
       ? ""
-      : `; ${isTrough || data.isSteady === true ? "" : "over the span shown "}median highest ${concentration(data, "median")}, 90 % between ${concentration(data, "low")} and ${concentration(data, "high")}`;
+      : `; median highest${isTrough || data.isSteady === true ? "" : " over the span shown"} ${concentration(data, "median")}, 90 % between ${concentration(data, "low")} and ${concentration(data, "high")}`;
+  const where = isTrough
+    ? " just before a dose at steady state"
+    : data.isSteadyCounted === true
+      ? ", over the span shown or at steady state,"
+      : " over the span shown";
   const never = number(data, "shareNeverSteady");
-  const counted =
-    never > 0 ? ` A level that never settles, chance ${chanceWords(never)}, counts as reaching it in the end.` : "";
+  const counted = never >= NEVER_SAID_FROM ? `, levels that never settle (${chanceWords(never)}) counted in,` : "";
   return {
     title: `Option ${text(data, "option")} ${words} the toxic limit in this patient`,
-    text: `With a chance of ${chanceWords(chance)} the highest${isTrough ? " just before a dose at steady state" : ""} reaches the record's toxic limit${isTrough ? " for that level" : ""}, ${concentration(data, "from")} (${text(data, "source")})${found}.${counted}`,
+    text: `With a chance of ${chanceWords(chance)}${counted} the highest${where} reaches the record's toxic limit${isTrough ? " for that level" : ""}, ${concentration(data, "from")} (${text(data, "source")})${found}.`,
   };
 }
 

@@ -243,7 +243,18 @@ describe("concerns about the fit", () => {
       "Option A almost certainly reaches the toxic limit in this patient",
       "Option A almost certainly reaches the toxic limit in this patient",
     ]);
-    expect(words(0.43).text).toMatch(/^With a chance of 43\u00a0% the highest reaches/);
+    expect(words(0.43).text).toMatch(
+      /^With a chance of 43\u00a0% the highest, over the span shown or at steady state, reaches the record's toxic limit/,
+    );
+    const settling = toxic(0.43).options.map((option) => ({
+      ...option,
+      individual: { ...option.individual!, shareNeverSteady: 0.17, steadyState: null },
+    }));
+    const { text } = concernMessage(found({ ...quiet, options: settling }, "option-chance-toxic")[0]!);
+    expect(text).toMatch(/^With a chance of 43\u00a0%, levels that never settle \(17\u00a0%\) counted in, the highest/);
+    expect(text).toContain("; median highest over the span shown ");
+    // A full stop after the symbol of a unit is read as a digit: no sentence follows the last figure.
+    expect(text).toMatch(/mg per L\.$/);
     expect([0.24, 0.25].map((share) => found(toxic(share), "option-chance-toxic")[0]!.gravity)).toEqual([
       "check",
       "stop",

@@ -32,6 +32,7 @@ export const optionChanceToxic: ConcernRule = ({ case: { medicine }, options }) 
           low: peak?.q05 ?? null,
           high: peak?.q95 ?? null,
           isSteady,
+          isSteadyCounted: individual.steadyState !== null || individual.shareNeverSteady > 0,
           shareNeverSteady: individual.shareNeverSteady,
           source: sourceText(medicine, limit.source),
         },
