@@ -89,9 +89,10 @@ test("every figure of this patient on the sheet is a rounding of one recompute p
   const parsed = caseParse(readFileSync(DEMO, "utf8"));
   if (!parsed.ok) throw new Error("the demo case does not parse");
   expect(out.thisPatient.use).toBe("individual");
+  const analysis = derive(parsed.value, { isFitted: true });
   const sheet = buildSummary({
     case: parsed.value,
-    analysis: derive(parsed.value, { isFitted: true }),
+    analysis,
     settings: { pageSize: "A4", microgram: "microgram", preparedBy: "" },
     revision: 1,
     saving: { status: "saved", savedAt: 0, detail: "" },
@@ -125,6 +126,12 @@ test("every figure of this patient on the sheet is a rounding of one recompute p
       shown(individual[`hours${side.charAt(0).toUpperCase()}${side.slice(1)}`]!, hours),
     ]),
   );
+
+  const own = analysis.options[0]!.individual!;
+  expect(own.toxicChance).not.toBeNull();
+  expect(individual.chanceToxic).toBe(own.toxicChance);
+  expect(individual.lowestBeforeOption).toBe(own.span.lowestBeforeOption);
+  expect(individual.shareNeverSteady).toBe(own.shareNeverSteady);
 
   const { parameters, halfLife } = out.thisPatient;
   expect(model.kinetics.rows.map(({ value }) => figuresOf(value))).toEqual([

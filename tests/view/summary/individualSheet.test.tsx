@@ -230,6 +230,25 @@ describe("the sheet of this patient", () => {
     );
   });
 
+  it("names whose 90 % of steady state the record's wait is held against", () => {
+    const [option] = input.analysis.options;
+    const { individual } = option!;
+    const source = Object.keys(value.medicine.sources)[0]!;
+    const steadyStateAfter = { value: 30, unit: "d", source, basis: "seen" } as const;
+    const waits = (q95: number) => {
+      const timeTo90H = { ...individual!.steadyState!.timeTo90H, q95 };
+      const own = { ...individual!, steadyState: { ...individual!.steadyState!, timeTo90H } };
+      const found = buildSummary({
+        ...input,
+        case: { ...value, medicine: { ...value.medicine, steadyStateAfter } },
+        analysis: { ...input.analysis, options: [{ ...option!, individual: own }] },
+      });
+      return plain(found).nextLevel.sentences[1];
+    };
+    expect(waits(1)).toMatch(/longer than 90 % of steady state \([\d.]+ hours in the typical patient\)/);
+    expect(waits(100)).toMatch(/longer than 90 % of steady state \(up to [\d.]+ (hours|days) in this patient/);
+  });
+
   it("says under the chances where the lowest is the level before the option acts", () => {
     const [option] = input.analysis.options;
     const { span } = option!.individual!;
