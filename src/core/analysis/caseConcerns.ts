@@ -59,6 +59,7 @@ import { recordUnreviewed } from "./concerns/recordUnreviewed.ts";
 import { roadsDiffer } from "./concerns/roadsDiffer.ts";
 import { typicalOnly } from "./concerns/typicalOnly.ts";
 import { valuesConfirmed } from "./concerns/valuesConfirmed.ts";
+import { windowHourNever } from "./concerns/windowHourNever.ts";
 import { windowMissing } from "./concerns/windowMissing.ts";
 import { windowSampling } from "./concerns/windowSampling.ts";
 
@@ -102,6 +103,7 @@ const RULES: readonly ConcernRule[] = [
   doseAboveLimit,
   productSwitch,
   optionOutsideWindow,
+  windowHourNever,
   windowSampling,
   levelNotSteady,
   firstDoseClose,

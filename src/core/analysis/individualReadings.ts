@@ -11,7 +11,7 @@ import { spreadOfEqual } from "./spreadOf.ts";
 import { toxicChance } from "./toxicChance.ts";
 import { type WindowFigures, windowChance } from "./windowChance.ts";
 import { windowLimits } from "./windowLimits.ts";
-import { BEFORE_NEXT_DOSE, timedLevels, windowDrawH } from "./windowTiming.ts";
+import { BEFORE_NEXT_DOSE, dueLevels, timedLevels, type WindowDraw, windowDraw } from "./windowTiming.ts";
 
 const STEADY_NAMES = ["peak", "lowest", "average", "accumulation", "swing", "fluctuation"] as const;
 
@@ -43,7 +43,7 @@ export function* individualReadings(
     return windowChance(value.window.quantity, limits, { ...own, auc24: own.average.map((level) => level * 24) });
   };
   // A window for a level at a time after the dose is not about the lowest level of a span. Chances first: spreads put a column in order.
-  const spanChance = settled.drawH === null ? chance(figures) : null;
+  const spanChance = settled.draw === null ? chance(figures) : null;
   const chanceSettled = steadyChance(settled, patients.count, value.window !== undefined, chance);
   const chanceToxic = toxicChance(value, {
     span: figures.peak,
@@ -78,8 +78,10 @@ export function* individualReadings(
 
 interface SteadyDraws {
   readonly isRepeating: boolean;
-  /** Hours after a dose the window asks for. */
-  readonly drawH: number | null;
+  /** When after a dose the window asks for its level. */
+  readonly draw: WindowDraw | null;
+  /** Whether a dose of the pattern is followed by so long a gap. */
+  readonly isHourComing: boolean;
   readonly isTroughToxic: boolean;
   /** How many settle at all; the columns have so many rows. */
   readonly count: number;
@@ -95,7 +97,8 @@ function* steadyDraws(
   { names, count, eta }: DrawnPatients,
 ): Generator<number, SteadyDraws> {
   const found = regimenPattern(value, lines);
-  const drawH = windowDrawH(value);
+  const draw = windowDraw(value);
+  let isHourComing = false;
   const isTroughToxic = value.medicine.toxicAt === "trough";
   const history: ModelHistory = {
     dispositions: [{ from: Number.NEGATIVE_INFINITY, disposition: finalDisposition(typical) }],
@@ -122,17 +125,18 @@ function* steadyDraws(
       if (state.status === "settled") {
         for (const name of STEADY_NAMES) columns[name][settled] = state[name];
         columns.timeTo90H[settled] = modelTimeToSteadyState(disposition, own.inputs, periodH, 0.9).hours;
-        if (drawH !== null) {
-          const timed = timedLevels(disposition, own.inputs, periodH, drawH);
+        const timed = draw && timedLevels(disposition, own.inputs, periodH, draw);
+        if (timed) {
+          isHourComing = true;
           columns.timedLowest[settled] = timed.lowest;
           columns.timedHighest[settled] = timed.highest;
         }
         if (isTroughToxic)
-          columns.highestTrough[settled] = timedLevels(
+          columns.highestTrough[settled] = dueLevels(
             disposition,
             own.inputs,
             periodH,
-            drawH ?? BEFORE_NEXT_DOSE,
+            draw?.afterDoseH ?? BEFORE_NEXT_DOSE,
           ).highest;
         highest[n] = isTroughToxic ? columns.highestTrough[settled]! : state.peak;
         settled++;
@@ -144,7 +148,8 @@ function* steadyDraws(
     columns[name] = columns[name].subarray(0, settled);
   return {
     isRepeating: found.ok,
-    drawH,
+    draw,
+    isHourComing,
     isTroughToxic,
     count: settled,
     columns,
@@ -157,7 +162,7 @@ type ChanceOf = (
 ) => WindowChance | null;
 
 function steadyReadings(
-  { columns, drawH, isTroughToxic, count, isRepeating }: SteadyDraws,
+  { columns, draw, isHourComing, isTroughToxic, count, isRepeating }: SteadyDraws,
   draws: number,
 ): IndividualReadings["steadyState"] {
   if (!isRepeating || draws - count > MOST_NEVER_STEADY * draws) return null;
@@ -173,25 +178,27 @@ function steadyReadings(
     fluctuation: spreadOfEqual(columns.fluctuation),
     timeTo90H: spreadOfEqual(columns.timeTo90H),
     timed:
-      drawH === null
+      draw === null || !isHourComing
         ? null
-        : { afterDoseH: drawH, lowest: spreadOfEqual(timedLowest), highest: spreadOfEqual(timedHighest) },
+        : { afterDoseH: draw.afterDoseH, lowest: spreadOfEqual(timedLowest), highest: spreadOfEqual(timedHighest) },
     highestTrough: isTroughToxic ? spreadOfEqual(columns.highestTrough) : null,
   };
 }
 
 /** Of what the window is about, before a spread puts the columns in order; also where too many draws never settle for any other figure. */
 function steadyChance(
-  { columns, drawH, count, isRepeating }: SteadyDraws,
+  { columns, draw, isHourComing, count, isRepeating }: SteadyDraws,
   draws: number,
   hasWindow: boolean,
   chanceOf: ChanceOf,
 ): WindowChance | null {
   if (!isRepeating || !hasWindow) return null;
   if (count === 0) return { below: 0, within: 0, above: 1 };
+  // The lowest is not what the window is about: where its hour never comes there is no chance of it.
+  if (draw !== null && !isHourComing) return null;
   const { peak, lowest, average, timedLowest, timedHighest } = columns;
   const settled = chanceOf(
-    drawH === null ? { peak, lowest, average } : { peak, lowest: timedLowest, timedHighest, average },
+    draw === null ? { peak, lowest, average } : { peak, lowest: timedLowest, timedHighest, average },
   );
   return withNeverSteady(settled, (draws - count) / draws);
 }

@@ -5,7 +5,7 @@ import { quantityConvert } from "../units/index.ts";
 import type { Model, OptionReadings, SpanReadings, SteadyStateReadings } from "./analysisTypes.ts";
 import { finalDisposition, modelHistory, modelInputs } from "./modelInputs.ts";
 import { type RegimenPattern, regimenPattern } from "./regimenPattern.ts";
-import { BEFORE_NEXT_DOSE, TOGETHER_H, timedLevels, windowDrawH } from "./windowTiming.ts";
+import { BEFORE_NEXT_DOSE, dueLevels, TOGETHER_H, timedLevels, type WindowDraw, windowDraw } from "./windowTiming.ts";
 
 const HOUR_MS = 3_600_000;
 
@@ -30,7 +30,7 @@ export function optionReadings(
   };
   const pattern = regimenPattern(value, lines);
   const settled = pattern.ok
-    ? steadyStateReadings(model, pattern.pattern, clock.originMs, windowDrawH(value), isTroughToxic)
+    ? steadyStateReadings(model, pattern.pattern, clock.originMs, windowDraw(value), isTroughToxic)
     : null;
   const hasSteadyState = settled !== null && settled !== "dose-rate-at-or-above-vmax";
   return {
@@ -90,7 +90,7 @@ function steadyStateReadings(
   model: Model,
   pattern: RegimenPattern,
   originMs: number,
-  drawH: number | null,
+  draw: WindowDraw | null,
   isTroughToxic: boolean,
 ): SteadyStateReadings | "dose-rate-at-or-above-vmax" {
   const disposition = finalDisposition(model);
@@ -116,9 +116,9 @@ function steadyStateReadings(
     timeTo90H: slowest.hours,
     steady90AtH: (waitFromMs - originMs) / HOUR_MS + slowest.hours,
     slower: slowest.slower,
-    timed: drawH === null ? null : timedLevels(disposition, inputs, pattern.periodH, drawH),
+    timed: draw && timedLevels(disposition, inputs, pattern.periodH, draw),
     highestTrough: isTroughToxic
-      ? timedLevels(disposition, inputs, pattern.periodH, drawH ?? BEFORE_NEXT_DOSE).highest
+      ? dueLevels(disposition, inputs, pattern.periodH, draw?.afterDoseH ?? BEFORE_NEXT_DOSE).highest
       : null,
   };
 }

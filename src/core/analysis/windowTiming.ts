@@ -15,7 +15,19 @@ export function windowDrawnAt({ quantity, drawFrom, drawTo }: TargetWindow): num
   return quantity === "trough" && drawFrom && drawTo ? (drawFrom.value + drawTo.value) / 2 : null;
 }
 
-/** Levels of a pattern at steady state so many hours after each dose: mg/L. */
+/** When a window's level is drawn, h after a dose: as meant, and at the earliest. */
+export interface WindowDraw {
+  readonly afterDoseH: number;
+  readonly fromH: number;
+}
+
+/** As windowDrawH, with the earliest hour. */
+export function windowDraw({ window }: Case): WindowDraw | null {
+  const afterDoseH = window ? windowDrawnAt(window) : null;
+  return afterDoseH === null ? null : { afterDoseH, fromH: window?.drawFrom?.value ?? afterDoseH };
+}
+
+/** Levels of a pattern at steady state so many hours after a dose: mg/L. */
 export interface TimedLevels {
   readonly afterDoseH: number;
   readonly lowest: number;
@@ -28,23 +40,55 @@ export const TOGETHER_H = 1e-9;
 /** In place of hours after a dose: the level just before the next one. */
 export const BEFORE_NEXT_DOSE = Number.POSITIVE_INFINITY;
 
-/** Where the next dose comes first, the level just before it: that is when it would be drawn. */
+/**
+ * Levels at the hour after a dose that a window is about, with no other dose between: after a dose whose next comes before the earliest hour
+ * there is none. Where the next comes within the hours the level may be drawn, the level just before it. null where no dose of the pattern is
+ * followed by so long a gap: the hour never comes.
+ * Example: 08:00, 14:00 and 20:00, a level 12 h after a dose: the one before 08:00.
+ */
 export function timedLevels(
   disposition: ModelDisposition,
   inputs: readonly ModelInput[],
   periodH: number,
+  { afterDoseH, fromH }: WindowDraw,
+): TimedLevels | null {
+  const times = gapsOf(inputs, periodH)
+    .filter(({ gapH }) => gapH >= fromH - TOGETHER_H)
+    .map(({ start, gapH }) => start + Math.min(afterDoseH, gapH));
+  return times.length === 0 ? null : { afterDoseH, ...levelsAt(disposition, inputs, periodH, times) };
+}
+
+/** Levels so many hours after every dose, or just before the next one where that comes first: mg/L. */
+export function dueLevels(
+  disposition: ModelDisposition,
+  inputs: readonly ModelInput[],
+  periodH: number,
   afterDoseH: number,
-): TimedLevels {
+): Pick<TimedLevels, "lowest" | "highest"> {
+  const times = gapsOf(inputs, periodH).map(({ start, gapH }) => start + Math.min(afterDoseH, gapH));
+  return levelsAt(disposition, inputs, periodH, times);
+}
+
+/** Each time at which doses are given, with the hours to the next. */
+function gapsOf(inputs: readonly ModelInput[], periodH: number): { start: number; gapH: number }[] {
   const starts = [...new Set(inputs.flatMap((input) => input.doses.map((dose) => dose.time)))].sort((a, b) => a - b);
-  const times = starts.flatMap((start, i) => {
+  return starts.flatMap((start, i) => {
     const next = i + 1 < starts.length ? starts[i + 1]! : starts[0]! + periodH;
-    return next - start < TOGETHER_H ? [] : [start + Math.min(afterDoseH, next - start)];
+    return next - start < TOGETHER_H ? [] : [{ start, gapH: next - start }];
   });
+}
+
+function levelsAt(
+  disposition: ModelDisposition,
+  inputs: readonly ModelInput[],
+  periodH: number,
+  times: readonly number[],
+): Pick<TimedLevels, "lowest" | "highest"> {
   const levels = modelSteadyProfile(
     disposition,
     inputs,
     periodH,
-    times.sort((a, b) => a - b),
+    [...times].sort((a, b) => a - b),
   );
-  return { afterDoseH, lowest: Math.min(...levels), highest: Math.max(...levels) };
+  return { lowest: Math.min(...levels), highest: Math.max(...levels) };
 }

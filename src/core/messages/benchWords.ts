@@ -39,6 +39,8 @@ export const benchWords = {
   steadyHead: "Readings at steady state",
   steadyHeadFinal: "Readings at steady state of the final kinetics",
   timed: (hours: string) => `${hours} h after a dose`,
+  timedNever: "never",
+  timedNeverWhy: "the next dose comes sooner",
   demoShort: "demo, invented",
   intended:
     "Supports, and does not replace, the judgement of a licensed professional and local policy. Check against current product information.",

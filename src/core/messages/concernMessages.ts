@@ -106,6 +106,10 @@ const concernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWor
     title: `The level of ${when(data)} is far from the prediction`,
     text: `Measured ${concentration(data, "measured")}, predicted${inTypical(data)} ${concentration(data, "predicted")}: ${figure(number(data, "ratio"))} times. Wrong time, missed dose, interaction, assay, or a patient unlike the typical one?`,
   }),
+  "window-hour-never": (data) => ({
+    title: `Option ${text(data, "option")}: no level is ${hours(number(data, "afterDoseH"))} after a dose`,
+    text: `The target window is for the level then, and here the next dose always comes sooner, so the option is not held against it. Compare the lowest${inTypical(data)}, ${concentration(data, "lowest")}, with ${concentration(data, "low")} to ${concentration(data, "high")}, knowing that it comes sooner after a dose and so lies higher; or hold a dose for the level, by local policy.`,
+  }),
   "option-above-window": (data) => outsideWindow(data, "above"),
   "option-below-window": (data) => outsideWindow(data, "below"),
   "first-dose-close": (data) => ({

@@ -43,6 +43,7 @@ export const fitWords = {
   chanceSteady: "at steady state",
   chanceBeside: (below: string, above: string) => `below ${below}, above ${above}`,
   chanceOption: (option: string) => `Option ${option}`,
+  chanceHourNever: "No chance is given: the next dose always comes before the hour the window is for.",
   chanceTaken: "Of this patient, from what the levels leave possible.",
   /** In the cell of a figure that is not given, and at the table why. */
   notGiven: "not given",

@@ -20,6 +20,8 @@ export const summaryNextLevelWords = {
     `The record waits ${record} after a regimen begins or changes: too long to wait for it. Source ${source}.`,
   longerWait: (own: string, typical: string) =>
     `This patient may take longer than the typical one (up to ${own} to 90 % of steady state, the upper end of the 90 % interval; typical ${typical}): the longer wait is used.`,
+  hourNever: (hours: string) =>
+    `Here no dose is followed by ${hours} without another: this sample comes sooner after one than the window is for. For a level at that hour a dose has to be held, by local policy.`,
   maybeNever: (share: string) => `With a chance of ${share} a steady state is never reached: do not wait for it alone.`,
   tooLong: (typical: string) => `90 % of steady state may take ${typical}: too long to wait for it.`,
   tooLongOf: ({ typical, own, isOwnLonger }: { typical: string; own: string; isOwnLonger: boolean }) =>

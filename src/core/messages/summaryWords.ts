@@ -195,6 +195,7 @@ export const summaryReadingWords = {
   lowestAt: (when: string) => `Lowest, ${when}`,
   timed: (hours: string) => `${capitalised(hours)} after a dose`,
   timedLowest: (hours: string) => `${capitalised(hours)} after a dose, the lowest`,
+  timedNever: "never: the next dose comes sooner",
   timedHighest: (hours: string) => `${capitalised(hours)} after a dose, the highest`,
   average: "Average",
   auc24: "AUC in 24 hours",

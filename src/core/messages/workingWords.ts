@@ -151,7 +151,7 @@ export function readingWorking(
           timedTitle(timed.afterDoseH),
           inUnit(
             settledSteps(
-              `read off it ${six(timed.afterDoseH)} h after each dose, or just before the next where that comes first`,
+              `read off it ${six(timed.afterDoseH)} h after each dose that no other follows sooner; where the next comes within the hours the level may be drawn, just before it`,
             ),
           ),
           timed.lowest === timed.highest ? level(timed.lowest) : `${level(timed.lowest)} to ${level(timed.highest)}`,

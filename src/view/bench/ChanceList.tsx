@@ -23,9 +23,14 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
   const { window } = value;
   if (!window || analysis.options.every((option) => option.individual === null)) return null;
   const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
+  const drawH = windowDrawH(value);
   const remarks = analysis.options.flatMap(({ id, individual }) =>
     individual
-      ? [neverSteadyWords(individual), lowestBeforeWords(window.quantity, individual.span)]
+      ? [
+          neverSteadyWords(individual),
+          lowestBeforeWords(window.quantity, individual.span),
+          drawH !== null && individual.steadyState?.timed === null ? fitWords.chanceHourNever : null,
+        ]
           .filter((sentence) => sentence !== null)
           .map((sentence) => fitWords.ofOption(id, sentence))
       : [],
@@ -33,7 +38,7 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
   return (
     <section className="chances" aria-labelledby="chances-head">
       <h2 className="readings-head" id="chances-head">
-        {fitWords.chanceHead(windowChanceWords(window.quantity, windowDrawH(value)))}
+        {fitWords.chanceHead(windowChanceWords(window.quantity, drawH))}
       </h2>
       <ul className="chances-list">
         {analysis.options.map(({ id, individual }, i) => {

@@ -1,4 +1,10 @@
-import type { Analysis, IndividualReadings, OptionResult, Spread } from "../../core/analysis/index.ts";
+import {
+  type Analysis,
+  type IndividualReadings,
+  type OptionResult,
+  type Spread,
+  windowDrawH,
+} from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { productOf } from "../../core/medicine/index.ts";
 import { benchWords, fitWords, summaryOrderWords, windowRemarkWords } from "../../core/messages/index.ts";
@@ -160,7 +166,7 @@ export function readingsGroups(value: Case, analysis: Analysis, unit: ShownUnit)
           (s) => s.lowest,
           (s) => s.lowest,
         ),
-        ...timedRows(analysis, concentration),
+        ...timedRows(analysis, windowDrawH(value), concentration),
         settled(
           "average",
           "Average",
@@ -295,24 +301,29 @@ function breaking(text: string): string {
   return text.replaceAll("\u00a0", " ");
 }
 
-/** Levels at the hour after a dose the window asks for: from the lowest to the highest where doses or gaps differ; no row where it asks for none. */
-function timedRows({ options }: Analysis, { figure, unit }: Print): readonly ReadingsRow[] {
-  const afterDoseH = options.find((option) => option.typical?.steadyState?.timed)?.typical?.steadyState?.timed
-    ?.afterDoseH;
-  if (afterDoseH === undefined) return [];
+/** Levels at the hour after a dose the window asks for: from the lowest to the highest where doses or gaps differ; no row where it asks for none, and in words where no dose is so long before the next. */
+function timedRows({ options }: Analysis, afterDoseH: number | null, { figure, unit }: Print): readonly ReadingsRow[] {
+  if (afterDoseH === null || options.every((option) => !option.typical?.steadyState)) return [];
+  const never = { text: benchWords.timedNever, sub: benchWords.timedNeverWhy };
   const range = (low: number, high: number) =>
     figure(low) === figure(high) ? figure(low) : `${figure(low)} to ${figure(high)}`;
   const cells = options.map((option): ReadingPair => {
     const typical = option.typical?.steadyState?.timed;
     const own = option.individual?.steadyState?.timed;
     return {
-      typical: typical ? { text: range(typical.lowest, typical.highest) + unit } : null,
+      typical: typical
+        ? { text: range(typical.lowest, typical.highest) + unit }
+        : option.typical?.steadyState
+          ? never
+          : null,
       individual: own
         ? {
             text: range(own.lowest.q50, own.highest.q50) + unit,
             sub: `${figure(own.lowest.q05)} to ${figure(own.highest.q95)}`,
           }
-        : null,
+        : option.individual?.steadyState
+          ? never
+          : null,
     };
   });
   return [{ id: "timed", name: benchWords.timed(numberPrint(afterDoseH)), cells }];

@@ -1,4 +1,4 @@
-import type { DoseMark, IndividualReadings, OptionReadings } from "../../core/analysis/index.ts";
+import { type DoseMark, type IndividualReadings, type OptionReadings, windowDrawH } from "../../core/analysis/index.ts";
 import {
   neverSteadyWords,
   summaryPatientWords as patientWords,
@@ -29,7 +29,7 @@ export function expectedText(input: SummaryInput, print: SummaryPrint): SummaryM
   return steadyState
     ? {
         title: words.titled(titles.expectedSteady, words.typical),
-        rows: steadyRows(steadyState, shown.option.doses, steadyFrom(input, print)?.ms ?? null, print),
+        rows: steadyRows(input, steadyState, shown.option.doses, steadyFrom(input, print)?.ms ?? null, print),
         remark: why,
       }
     : {
@@ -48,7 +48,7 @@ function individualText(input: SummaryInput, own: IndividualReadings, print: Sum
     const when = settled && typical ? [typicalWhen(settled, typical.option.doses, print)] : [];
     return {
       title: words.titled(titles.expectedSteady, words.individual),
-      rows: ownSteadyRows(steadyState, print),
+      rows: ownSteadyRows(input, steadyState, print),
       remark: [patientWords.spreadRemark, ...when, ...(never ? [never] : [])].join(" "),
     };
   }
@@ -59,12 +59,12 @@ function individualText(input: SummaryInput, own: IndividualReadings, print: Sum
   };
 }
 
-function ownSteadyRows(steady: OwnSteady, print: SummaryPrint): readonly SummaryRow[] {
+function ownSteadyRows(input: SummaryInput, steady: OwnSteady, print: SummaryPrint): readonly SummaryRow[] {
   const { timed } = steady;
   return [
     { label: patientWords.highest, value: print.spread(steady.peak, "mg/L") },
     { label: patientWords.lowest, value: print.spread(steady.lowest, "mg/L") },
-    ...(timed ? timedRows(timed.afterDoseH, print, (end) => print.spread(timed[end], "mg/L")) : []),
+    ...timedRows(input, timed, print, (spread) => print.spread(spread, "mg/L")),
     { label: words.average, value: print.spread(steady.average, "mg/L") },
     { label: words.auc24, value: print.spread(steady.auc24, "mg.h/L") },
     { label: words.accumulation, value: print.spread(steady.accumulation, "1", words.times) },
@@ -82,12 +82,16 @@ function ownSpanRows({ span }: IndividualReadings, print: SummaryPrint): readonl
 }
 
 /** The levels at the time after a dose that the window is about: one row where they are the same after every dose. */
-function timedRows(
-  afterDoseH: number,
+function timedRows<T>(
+  input: SummaryInput,
+  timed: Readonly<Record<"lowest" | "highest", T>> | null,
   print: SummaryPrint,
-  value: (end: "lowest" | "highest") => string,
+  printed: (found: T) => string,
 ): readonly SummaryRow[] {
-  const [lowest, highest] = [value("lowest"), value("highest")];
+  const afterDoseH = windowDrawH(input.case);
+  if (afterDoseH === null) return [];
+  if (!timed) return [{ label: words.timed(print.hours(afterDoseH)), value: words.timedNever }];
+  const [lowest, highest] = [printed(timed.lowest), printed(timed.highest)];
   const hours = print.hours(afterDoseH);
   return lowest === highest
     ? [{ label: words.timed(hours), value: lowest }]
@@ -98,6 +102,7 @@ function timedRows(
 }
 
 function steadyRows(
+  input: SummaryInput,
   steady: Steady,
   doses: readonly DoseMark[],
   steadyMs: number | null,
@@ -107,7 +112,7 @@ function steadyRows(
   return [
     { label: words.highest(print.hours(steady.peakAfterDoseH)), value: print.concentration(steady.peak) },
     { label: lowestWhen(steady, doses, print), value: print.concentration(steady.lowest) },
-    ...(timed ? timedRows(timed.afterDoseH, print, (end) => print.concentration(timed[end])) : []),
+    ...timedRows(input, timed, print, print.concentration),
     { label: words.average, value: print.concentration(steady.average) },
     { label: words.auc24, value: print.quantity(steady.auc24, "mg.h/L") },
     { label: words.accumulation, value: words.times(print.figure(steady.accumulation)) },

@@ -1,4 +1,4 @@
-import { BEFORE_DOSE_H } from "../../core/analysis/index.ts";
+import { BEFORE_DOSE_H, type SteadyStateReadings, windowDrawH } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
 import { chanceWords, SUMMARY_TITLES as titles, summaryNextLevelWords as words } from "../../core/messages/index.ts";
 import { type DoseLine, doseLineExpand } from "../../core/regimen/index.ts";
@@ -43,7 +43,11 @@ function sentences(input: SummaryInput, cite: Citations, print: SummaryPrint): r
   if (wait.untilMs - nowMs > LONGEST_DAYS * DAY_MS) return [wait.tooLong, words.byQuestion, words.writeTimes];
   const untilMs = Math.max(wait.untilMs, nowMs) + (steadyState.periodH + 24) * MS_PER_HOUR;
   const doses = doseInstants(option.lines, input.case.timeZone, untilMs);
-  const at = doses.findIndex((ms) => ms >= wait.untilMs && ms >= nowMs);
+  const { window } = input.case;
+  const isDue = (ms: number) => ms >= wait.untilMs && ms >= nowMs;
+  // Of several doses a day only some are followed by so long a gap as a timed window asks for.
+  const timed = doses.findIndex((ms, i) => isDue(ms) && window && timedDraw(window, ms, doses[i + 1] ?? ms) !== null);
+  const at = timed >= 0 ? timed : doses.findIndex(isDue);
   const doseMs = doses[at];
   if (doseMs === undefined) {
     const last = doses.at(-1);
@@ -53,13 +57,20 @@ function sentences(input: SummaryInput, cite: Citations, print: SummaryPrint): r
   }
   const since = wait.since(print.at(wait.untilMs, "dayClock"));
   return [
-    drawSentence(input.case.window, doseMs, doses[at + 1], since, print),
+    drawSentence(window, doseMs, doses[at + 1], since, print),
+    ...hourNever(input, steadyState, print),
     ...wait.why,
     ...neverSteady(input),
     ...farOff(doseMs - nowMs),
     ...distribution(input, print),
     words.writeTimes,
   ];
+}
+
+/** A window for a level so long after a dose, where the next dose always comes sooner. */
+function hourNever({ case: value }: SummaryInput, steady: SteadyStateReadings, print: SummaryPrint): readonly string[] {
+  const afterDoseH = windowDrawH(value);
+  return afterDoseH === null || steady.timed ? [] : [words.hourNever(print.hours(afterDoseH))];
 }
 
 interface Wait {

@@ -55,6 +55,16 @@ function digoxin(at: string): Case {
   };
 }
 
+/** An option every so many hours, the window for a level 11.5 to 12.5 h after a dose. */
+function everyHours(hours: number): Case {
+  const drawn = (value: number) => ({ value, unit: "h" as const });
+  return {
+    ...base,
+    window: { ...base.window!, quantity: "trough", drawFrom: drawn(11.5), drawTo: drawn(12.5) },
+    options: [option([line({ repeat: { every: { value: hours, unit: "h" } } })])],
+  };
+}
+
 const again = (given: Case["given"][number]) => ({ ...given, id: `${given.id}-again` });
 /** The same doses a minute on: near, but not at one time. */
 const later = (given: Case["given"][number]) => ({ ...again(given), start: "2026-03-01T08:01:00+00:00" });
@@ -128,6 +138,7 @@ const TABLE: readonly (readonly [code: string, raises: Case, doesNot: Case])[] =
     { ...base, options: [option([line({ start: "2026-03-04T11:00:00+00:00" })])] },
     { ...base, options: [option([line({ start: "2026-03-04T12:00:00+00:00" })])] },
   ],
+  ["window-hour-never", everyHours(8), everyHours(12)],
   ["phenytoin-albumin", phenytoinCase(8.4, 3.1), phenytoinCase(8.4, 4.5)],
   [
     "doses-same-time",

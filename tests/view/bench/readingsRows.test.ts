@@ -16,8 +16,8 @@ const typical = derive(value);
 const fitted = fittedAnalysis(typical);
 
 describe("readings of this patient", () => {
-  const row = (analysis: typeof typical, id: string) =>
-    readingsGroups(value, analysis, "mg/L")
+  const row = (analysis: typeof typical, id: string, ofCase = value) =>
+    readingsGroups(ofCase, analysis, "mg/L")
       .flatMap((group) => group.rows)
       .find((each) => each.id === id)!;
 
@@ -59,10 +59,15 @@ describe("readings of this patient", () => {
         individual: { ...option!.individual!, steadyState: { ...option!.individual!.steadyState!, timed: own } },
       },
     ];
-    const found = row({ ...fitted, options }, "timed");
+    const drawn = (hours: number) => ({ value: hours, unit: "h" as const });
+    const window = { ...value.window!, quantity: "trough" as const, drawFrom: drawn(11), drawTo: drawn(13) };
+    const found = row({ ...fitted, options }, "timed", { ...value, window });
     expect(found.name).toBe("12 h after a dose");
     // 6 / 1.21 and 8 · 1.21.
     expect(found.cells).toEqual([{ typical: { text: "5" }, individual: { text: "6 to 8", sub: "4.96 to 9.68" } }]);
+    // Both say so where the next dose always comes sooner (the fixture's own readings have no such level).
+    const never = { text: "never", sub: "the next dose comes sooner" };
+    expect(row(fitted, "timed", { ...value, window }).cells).toEqual([{ typical: never, individual: never }]);
   });
 
   it("follow the unit shown", () => {
