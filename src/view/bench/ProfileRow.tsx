@@ -1,7 +1,7 @@
 import { type KeyboardEvent, type PointerEvent, useId, useMemo, useState } from "react";
 import { type Analysis, concentrationWindow, type LevelResult } from "../../core/analysis/index.ts";
 import type { Case } from "../../core/case/index.ts";
-import { benchWords, fitWords } from "../../core/messages/index.ts";
+import { benchWords, chanceWords, fitWords } from "../../core/messages/index.ts";
 import { instantText } from "../../core/time/index.ts";
 import { numberPrint, unitSpoken } from "../../core/units/index.ts";
 import { valueAt } from "../chart/bandAt.ts";
@@ -179,11 +179,20 @@ function profileTitle(value: Case, analysis: Analysis, unit: ShownUnit): string 
   const options = analysis.options
     .flatMap((option) => {
       const settled = option.typical?.steadyState;
-      const own = option.individual?.steadyState;
+      const { individual } = option;
+      const own = individual?.steadyState;
       if (own) {
         return [
           `option ${option.id} settles in this patient between ${three(own.lowest.q50)} (${three(own.lowest.q05)} to ${three(own.lowest.q95)}) and ${three(own.peak.q50)} (${three(own.peak.q05)} to ${three(own.peak.q95)}) ${shown}`,
         ];
+      }
+      // The typical patient's levels would be taken for this one's.
+      if (individual) {
+        return individual.shareNeverSteady > 0
+          ? [
+              `option ${option.id} never settles in this patient with a chance of ${chanceWords(individual.shareNeverSteady)}`,
+            ]
+          : [];
       }
       return settled
         ? [`option ${option.id} settles between ${three(settled.lowest)} and ${three(settled.peak)} ${shown}`]

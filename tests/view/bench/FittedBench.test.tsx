@@ -71,6 +71,9 @@ describe("this patient on the bench", () => {
       within(chances).getByText(/^Option A: with a chance of 17 % a steady state is never reached: counted as above/),
     ).toBeVisible();
     expect(chances).not.toHaveTextContent("left out of");
+    // Read out too: not the typical patient's levels in its place.
+    expect(document.body.innerHTML).toMatch(/option A never settles in this patient with a chance of 17(&nbsp;|\s)%/);
+    expect(document.body.innerHTML).not.toMatch(/option A settles between/);
     expect(
       within(chances).getByText(/^Option A: in 98 % .* is the level now, before the option's first dose/),
     ).toBeVisible();
