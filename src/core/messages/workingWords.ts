@@ -196,7 +196,7 @@ export function readingWorking(
           "Accumulation",
           [
             ...settledSteps(),
-            `AUC over one pattern at steady state / AUC over the first pattern after starting from nothing`,
+            `AUC over one pattern at steady state / AUC over the first pattern, from its first dose on, after starting from nothing`,
           ],
           `${six(steadyState.accumulation)} times`,
         )
