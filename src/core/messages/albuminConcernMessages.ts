@@ -14,7 +14,7 @@ import { issueMessage } from "./issueMessage.ts";
 /** The concern about a level of phenytoin beside a low albumin. */
 export const albuminConcernMessages: Readonly<Record<string, (data: ConcernData) => ConcernWords>> = {
   "phenytoin-albumin": (data) => ({
-    title: `Low albumin: the level of ${when(data)}, corrected, is ${concentration(data, "corrected")}`,
+    title: `The level of ${when(data)}, corrected for albumin, is ${concentration(data, "corrected")}`,
     text: [
       `Measured ${concentration(data, "measured")} at albumin ${quantityPrint({ value: number(data, "albuminGPerDl"), unit: "g/dL" }, { style: "print", significant: 3 })}; with a normal albumin it would be ${concentration(data, "corrected")} (${FORM_WORDS[text(data, "form")]}: ${text(data, "formula")}; ${sentence(text(data, "source"))}; ${text(data, "basis")}).`,
       ...windowWords(data),

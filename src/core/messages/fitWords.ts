@@ -47,7 +47,8 @@ export const fitWords = {
   chanceTaken: "Of this patient, from what the levels leave possible.",
   /** In the cell of a figure that is not given, and at the table why. */
   notGiven: "not given",
-  ofOption: (option: string, sentence: string) => `Option ${option}: ${lowered(sentence)}`,
+  ofOptions: (options: readonly string[], sentence: string) =>
+    `${options.length === 1 ? "Option" : "Options"} ${wordList(options)}: ${lowered(sentence)}`,
   ofPatient: (option: string, sentence: string) => `Option ${option}, this patient: ${lowered(sentence)}`,
   typicalNever: (option: string) =>
     `Option ${option}, typical patient: more is taken than can be eliminated, so there is no steady state.`,

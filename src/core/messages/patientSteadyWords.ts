@@ -32,5 +32,5 @@ export function lowestBeforeWords(
 ): string | null {
   const isOfLowest = quantity === "trough" || quantity === "lowest-and-highest";
   if (!isOfLowest || !chance || chance.below === 0 || (lowestBeforeOption ?? 0) < MOSTLY) return null;
-  return `In ${chanceWords(lowestBeforeOption ?? 0)} of what the levels leave possible the lowest of these days is the level now, before the option's first dose acts: the option can't change it.`;
+  return `In ${chanceWords(lowestBeforeOption ?? 0)} of what the levels leave possible the lowest of these days comes before the option's first dose acts: the option can't change it.`;
 }

@@ -74,7 +74,7 @@ export const summaryHeadWords = {
   weightUnknown: "weight not recorded",
   heightUnknown: "height not recorded",
   printed: (when: string) => `printed ${when}`,
-  saved: (when: string) => `case saved ${when}`,
+  saved: (when: string) => `saved ${when}`,
   notSaved: "case not saved as shown",
   readOnly: "read-only copy",
   marks: (titles: readonly string[]) => titles.join(" · "),

@@ -24,17 +24,18 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
   if (!window || analysis.options.every((option) => option.individual === null)) return null;
   const clock = (h: number) => instantText(analysis.clock.originMs + h * 3_600_000, value.timeZone, "dayClock");
   const drawH = windowDrawH(value);
-  const remarks = analysis.options.flatMap(({ id, individual }) =>
-    individual
-      ? [
-          neverSteadyWords(individual),
-          lowestBeforeWords(window.quantity, individual.span),
-          drawH !== null && individual.steadyState?.timed === null ? fitWords.chanceHourNever : null,
-        ]
-          .filter((sentence) => sentence !== null)
-          .map((sentence) => fitWords.ofOption(id, sentence))
-      : [],
-  );
+  /** What is to be said beside the chances, each with the options it is said of. */
+  const remarks = new Map<string, string[]>();
+  for (const { id, individual } of analysis.options) {
+    if (!individual) continue;
+    for (const sentence of [
+      neverSteadyWords(individual),
+      lowestBeforeWords(window.quantity, individual.span),
+      drawH !== null && individual.steadyState?.timed === null ? fitWords.chanceHourNever : null,
+    ]) {
+      if (sentence !== null) remarks.set(sentence, [...(remarks.get(sentence) ?? []), id]);
+    }
+  }
   return (
     <section className="chances" aria-labelledby="chances-head">
       <h2 className="readings-head" id="chances-head">
@@ -76,9 +77,9 @@ export function ChanceList({ value, analysis, onLit }: ChanceListProps) {
           );
         })}
       </ul>
-      {remarks.map((sentence) => (
+      {[...remarks].map(([sentence, options]) => (
         <p key={sentence} className="chance-beside">
-          {sentence}
+          {fitWords.ofOptions(options, sentence)}
         </p>
       ))}
       <p className="chance-beside">{fitWords.chanceTaken}</p>

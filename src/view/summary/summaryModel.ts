@@ -109,7 +109,7 @@ export interface SummaryModel {
   /** "woman, 64 years, 58 kg, 162 cm" */
   readonly person: string;
   readonly printed: string;
-  /** "case saved Wed 4 March 2026 12:03, read-only copy" */
+  /** "saved Wed 4 March 2026 12:03, read-only copy" */
   readonly saved: string;
   /** In the margin of every sheet. */
   readonly running: string;

@@ -20,7 +20,7 @@ describe("phenytoin beside a low albumin", () => {
     // 8.4 / (0.2 · 3.1 + 0.1) = 8.4 / 0.72 = 11.67
     expect(one(value, "phenytoin-albumin")).toMatchObject({ gravity: "check", about: { kind: "level", id: "l" } });
     const { title, text } = words(value);
-    expect(title).toBe("Low albumin: the level of Wed 4 March, 07:30, corrected, is 11.7 mg per L");
+    expect(title).toBe("The level of Wed 4 March, 07:30, corrected for albumin, is 11.7 mg per L");
     expect(text).toContain(
       "Measured 8.4 mg per L at albumin 3.1 g per dL; with a normal albumin it would be 11.7 mg per L",
     );
@@ -52,6 +52,16 @@ describe("phenytoin beside a low albumin", () => {
     expect(codes(phenytoinCase(5, 3.1))).toContain("level-below-window");
     expect(words(phenytoinCase(21, 3.1)).text).toContain("Measured and corrected both lie above the target window");
     expect(codes(phenytoinCase(21, 3.1))).toContain("level-above-window");
+  });
+
+  it("an albumin that is usual but below 4.4 g/dL is told only where the correction changes the side of the window", () => {
+    // 8 / (0.2 · 4.1 + 0.1) = 8.7; 9.5 / 0.92 = 10.3
+    expect(codes(phenytoinCase(8, 4.1))).not.toContain("phenytoin-albumin");
+    expect(codes(phenytoinCase(8, 4.1))).toContain("level-below-window");
+    expect(words(phenytoinCase(9.5, 4.1)).text).toContain("Measured lies below, corrected inside the target window");
+    expect(codes(phenytoinCase(9.5, 4.1))).not.toContain("level-below-window");
+    expect(codes(phenytoinCase(7, 3.5))).not.toContain("phenytoin-albumin");
+    expect(codes(phenytoinCase(7, 3.4))).toContain("phenytoin-albumin");
   });
 
   it("a normal albumin or none leaves the window's own concern as it is", () => {

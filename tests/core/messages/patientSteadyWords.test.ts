@@ -40,7 +40,7 @@ describe("the lowest of a span that is the level before the option acts", () => 
 
   it("is said where the chance is about the lowest, any draw lies below, and most come before", () => {
     expect(plain(lowestBeforeWords("trough", span))).toBe(
-      "In 98 % of what the levels leave possible the lowest of these days is the level now, before the option's first dose acts: the option can't change it.",
+      "In 98 % of what the levels leave possible the lowest of these days comes before the option's first dose acts: the option can't change it.",
     );
     expect(lowestBeforeWords("lowest-and-highest", { ...span, lowestBeforeOption: 0.5 })).not.toBeNull();
   });

@@ -111,7 +111,7 @@ describe("SummaryScreen", () => {
     const { store } = show({ ...open, value });
     const margin = () => document.documentElement.style.getPropertyValue("--summary-running");
     expect(margin()).toMatch(
-      /^"Ward \\"3\\" \\\\ bed · case saved Wed 4 March 2026 12:03 · fingerprint [0-9a-f ]+ · demo — invented patient"$/,
+      /^"Ward \\"3\\" \\\\ bed · saved Wed 4 March 2026 12:03 · fingerprint [0-9a-f ]+ · demo — invented patient"$/,
     );
     act(() => store.setState({ open: null }));
     expect(margin()).toBe("");

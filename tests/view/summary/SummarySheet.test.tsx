@@ -48,7 +48,7 @@ describe("SummarySheet", () => {
     for (const head of heads) {
       expect(head).toContain("Harbour ward 3, bed 12 · woman, 64 years, 58 kg, 162 cm");
       expect(head).toContain("Wednesday 4 March 2026, 12:05");
-      expect(head).toContain("case saved Wed 4 March 2026 12:03");
+      expect(head).toContain("saved Wed 4 March 2026 12:03");
       expect(head).toContain("demo — invented patient");
     }
     expect(container.querySelectorAll(".summary-paper > .summary-watermark")).toHaveLength(2);

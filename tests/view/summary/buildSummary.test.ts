@@ -20,8 +20,8 @@ describe("who and when", () => {
     expect(model.label).toBe("Harbour ward 3, bed 12");
     expect(model.person).toBe("woman, 64 years, 58 kg, 162 cm");
     expect(model.printed).toBe("printed Wednesday 4 March 2026, 12:05");
-    expect(model.saved).toBe("case saved Wed 4 March 2026 12:03");
-    expect(summary({ timeZone: "America/New_York" }).saved).toBe("case saved Wed 4 March 2026 07:03");
+    expect(model.saved).toBe("saved Wed 4 March 2026 12:03");
+    expect(summary({ timeZone: "America/New_York" }).saved).toBe("saved Wed 4 March 2026 07:03");
     expect(summary({ timeZone: "America/New_York" }).printed).toBe("printed Wednesday 4 March 2026, 07:05");
   });
 
@@ -98,7 +98,7 @@ describe("who and when", () => {
   it("says that a read-only tab printed it", () => {
     const savedAt = Date.UTC(2026, 2, 4, 12, 3);
     expect(summary({}, { saving: { status: "read-only", savedAt, detail: "" }, hasChanges: false }).saved).toBe(
-      "case saved Wed 4 March 2026 12:03, read-only copy",
+      "saved Wed 4 March 2026 12:03, read-only copy",
     );
   });
 

@@ -265,7 +265,7 @@ describe("the sheet of this patient", () => {
         ],
       }).hours!.span;
     expect(under(0.98)).toContain(
-      "In 98 % of what the levels leave possible the lowest of these days is the level now, before the option's first dose acts: the option can't change it.",
+      "In 98 % of what the levels leave possible the lowest of these days comes before the option's first dose acts: the option can't change it.",
     );
     expect(under(0.2)).not.toContain("level now");
   });

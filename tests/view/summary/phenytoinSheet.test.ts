@@ -17,7 +17,9 @@ it("a level of phenytoin beside a low albumin is on the sheet corrected, with fo
   const number = Number(/^\((\d+)\) read$/.exec(row.source)![1]);
   expect(sheet.details.sources[number - 1]).toMatch(/^Sheiner LB, Tozer TN/);
   const titles = sheet.concerns.map(({ title }) => title);
-  expect(titles.some((title) => /^Low albumin: .* corrected, is 11\.7\s?mg per L$/.test(plain(title)))).toBe(true);
+  expect(
+    titles.some((title) => /^The level of .* corrected for albumin, is 11\.7\s?mg per L$/.test(plain(title))),
+  ).toBe(true);
   expect(titles.some((title) => title.includes("below the target window"))).toBe(false);
 });
 

@@ -22,7 +22,7 @@ test("an order under which many draws never settle: the share is the reason, whe
   expect(nextLevel.sentences[0]).toBe(reason);
   expect(JSON.stringify([expected, nextLevel])).not.toContain("does not repeat");
   expect(hours!.span).toContain("counted as above in the chance at steady state");
-  expect(hours!.span).toContain("the lowest of these days is the level now, before the option's first dose acts");
+  expect(hours!.span).toContain("the lowest of these days comes before the option's first dose acts");
   expect(steadyWithheldNotes(input.analysis)[0]).toBe(
     `Option B, this patient: ${reason.charAt(0).toLowerCase()}${reason.slice(1)}`,
   );

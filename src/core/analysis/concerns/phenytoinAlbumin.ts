@@ -5,6 +5,9 @@ import { windowDrawn } from "../windowDrawn.ts";
 
 export type WindowSide = "below" | "inside" | "above";
 
+/** Lower end of what is usual, g/dL (common practice): above it the correction is small, and told only where it changes what follows. */
+const USUAL_FROM_G_PER_DL = 3.5;
+
 /**
  * The latest level of phenytoin was measured beside a low albumin: as it would be with a normal one it may lie elsewhere in the target window, and
  * a dose raised on the measured figure would be too much. Levels drawn when the window is not meant are not held against it.
@@ -19,19 +22,23 @@ export const phenytoinAlbumin: ConcernRule = (context) => {
   const toxicMgPerL = toxicFrom && quantityConvert(toxicFrom, "mg/L", medicine.molarMass.value);
   const ends = concentrationWindow(context.case);
   const sides = windowSidesForAlbumin(context, level.id);
+  const isToxic = toxicMgPerL !== undefined && figure.value >= toxicMgPerL;
+  const albuminGPerDl = figure.inputs.find(({ name }) => name === "albumin")?.value;
+  const isSmall = albuminGPerDl !== undefined && albuminGPerDl >= USUAL_FROM_G_PER_DL;
+  if (isSmall && !isToxic && sides?.measuredSide === sides?.correctedSide) return [];
   const data = {
     atMs: clockMs(context, level.atH),
     zone: timeZone,
     measured: level.measured,
     corrected: figure.value,
-    albuminGPerDl: figure.inputs.find(({ name }) => name === "albumin")?.value,
+    albuminGPerDl,
     form,
     formula: figure.formula,
     source: figure.source,
     basis: figure.basis,
     remarks: figure.remarks ?? [],
     window: sides && ends ? { ...ends, ...sides } : null,
-    toxicMgPerL: toxicMgPerL !== undefined && figure.value >= toxicMgPerL ? toxicMgPerL : null,
+    toxicMgPerL: isToxic ? toxicMgPerL : null,
   };
   return [concern("phenytoin-albumin", "check", { kind: "level", id: level.id }, data)];
 };
