@@ -16,6 +16,8 @@ export default defineConfig({
   testDir: ".",
   testMatch: "*.spec.ts",
   outputDir: join(PROJECT, "test-results"),
+  // The least of this and the project's own counts.
+  workers: 2,
   projects: [
     { name: "together", grepInvert: ALONE, workers: 2 },
     // What measures times, or kills the browser again and again, has the two cores to itself: the projects are run one after the other.
