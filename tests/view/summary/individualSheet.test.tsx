@@ -154,7 +154,7 @@ describe("the sheet of this patient", () => {
     // The record's 3 days are longer than this patient's 70.5 hours.
     expect(steadyStateAfter).toMatchObject({ value: 3, unit: "d" });
     expect(waiting(slow, input.case.medicine)[1]).toContain(
-      "longer than 90 % of steady state (up to 70.5 hours in this patient, the upper end of the 90 % interval)".replace(
+      "longer than 90 % of steady state: up to 70.5 hours in this patient (90 % interval)".replace(
         "70.5",
         String(Number((steady.timeTo90H + 48).toFixed(1))),
       ),
@@ -245,8 +245,8 @@ describe("the sheet of this patient", () => {
       });
       return plain(found).nextLevel.sentences[1];
     };
-    expect(waits(1)).toMatch(/longer than 90 % of steady state \([\d.]+ hours in the typical patient\)/);
-    expect(waits(100)).toMatch(/longer than 90 % of steady state \(up to [\d.]+ (hours|days) in this patient/);
+    expect(waits(1)).toMatch(/longer than 90 % of steady state: [\d.]+ hours in the typical patient\.$/);
+    expect(waits(100)).toMatch(/longer than 90 % of steady state: up to [\d.]+ (hours|days) in this patient/);
   });
 
   it("says under the chances where the lowest is the level before the option acts", () => {
