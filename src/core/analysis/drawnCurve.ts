@@ -28,6 +28,20 @@ export interface DrawnFigures {
   readonly hoursAbove: Float64Array;
 }
 
+/** Figures of so many draws, all 0. */
+export function figureColumns(count: number): DrawnFigures {
+  const column = () => new Float64Array(count);
+  return {
+    peak: column(),
+    lowest: column(),
+    lowestAtH: column(),
+    average: column(),
+    hoursBelow: column(),
+    hoursWithin: column(),
+    hoursAbove: column(),
+  };
+}
+
 /**
  * The curves of all draws over [fromH, toH]: their band, and what each comes to up to `looked.toH`.
  * The figures are read from a grid of at most a quarter of an hour that has every corner of the curve on it: within 0.2 % of the exact
@@ -46,16 +60,7 @@ export function* drawnCurve(
   const inBand = Int32Array.from(bandTimes, (time) => times.indexOf(time));
   const { count } = patients;
   const rows = Float64Array.from({ length: bandTimes.length * count });
-  const column = () => new Float64Array(count);
-  const figures = {
-    peak: column(),
-    lowest: column(),
-    lowestAtH: column(),
-    average: column(),
-    hoursBelow: column(),
-    hoursWithin: column(),
-    hoursAbove: column(),
-  };
+  const figures = figureColumns(count);
   for (const { first, levels } of drawnLevels(history, patients, times)) {
     const few = levels[0]!.length;
     for (let n = 0; n < few; n++) {

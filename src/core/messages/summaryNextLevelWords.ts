@@ -15,7 +15,7 @@ export const summaryNextLevelWords = {
   sinceSteady: (when: string) => `90 % of steady state (${when})`,
   sinceRecord: (when: string) => `the end of the record's wait (${when})`,
   recordWait: (record: string, steady: string, whose: "own" | "typical" | null, source: string) =>
-    `It waits ${record} after a change (source ${source}), longer than 90 % of steady state: ${whose === "own" ? `up to ${steady} in this patient (90 % interval)` : `${steady}${whose === "typical" ? " in the typical patient" : ""}`}.`,
+    `The record waits ${record} (source ${source}), longer than 90 % of steady state: ${whose === "own" ? `up to ${steady} in this patient (90 % interval)` : `${steady}${whose === "typical" ? " in the typical patient" : ""}`}.`,
   recordTooLong: (record: string, source: string) =>
     `The record waits ${record} after a regimen begins or changes: too long to wait for it. Source ${source}.`,
   longerWait: (own: string, typical: string) =>

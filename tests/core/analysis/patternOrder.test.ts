@@ -1,4 +1,5 @@
 import { describe, expect, it } from "vitest";
+import { figureColumns } from "../../../src/core/analysis/drawnCurve.ts";
 import { derive } from "../../../src/core/analysis/index.ts";
 import { individualReadings } from "../../../src/core/analysis/individualReadings.ts";
 import type { Case } from "../../../src/core/case/index.ts";
@@ -73,7 +74,6 @@ describe("a pattern is taken in the order in which the option gives it", () => {
   });
 
   it("the draws take it in the same order", () => {
-    const column = () => new Float64Array(2);
     const value = morningAndEvening(EVENING);
     // Two draws that differ in nothing from the typical patient.
     const steps = individualReadings(
@@ -81,15 +81,7 @@ describe("a pattern is taken in the order in which the option gives it", () => {
       value.options[0]!.lines,
       evening.typical!,
       { names: [], count: 2, eta: [] },
-      {
-        peak: column(),
-        lowest: column(),
-        lowestAtH: column(),
-        average: column(),
-        hoursBelow: column(),
-        hoursWithin: column(),
-        hoursAbove: column(),
-      },
+      figureColumns(2),
       { fromH: 0, toH: 24, actsFromH: null },
       null,
     );

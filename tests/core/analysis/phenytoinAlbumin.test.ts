@@ -86,9 +86,16 @@ describe("phenytoin beside a low albumin", () => {
     };
     const value = phenytoinCase(8.4, 3.1);
     const [weight, , albumin] = value.patient.observations;
-    const failed = { ...value, patient: { ...value.patient, observations: [weight!, failing, albumin!] } };
+    const inFailure = (one: Case): Case => {
+      const [own, , ownAlbumin] = one.patient.observations;
+      return { ...one, patient: { ...one.patient, observations: [own!, failing, ownAlbumin!] } };
+    };
+    const failed = inFailure(value);
     // 8.4 / (0.1 · 3.1 + 0.1) = 20.5
     expect(words(failed).text).toMatch(/20\.5 mg per L \(form for kidney failure: .*; memory\)/);
+    // 4 / (0.1 · 4 + 0.1) = 8: twice the measured, said though albumin is usual and both lie below.
+    expect(words(inFailure(phenytoinCase(4, 4))).text).toContain("it would be 8 mg per L");
+    expect(codes(phenytoinCase(4, 4))).not.toContain("phenytoin-albumin");
     const unknown = { ...value, patient: { ...value.patient, observations: [weight!, albumin!] } };
     expect(words(unknown).text).toContain(
       "Kidney function is not known: below 20 mL per min another form would apply.",

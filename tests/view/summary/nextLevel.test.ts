@@ -99,7 +99,7 @@ describe("when to draw the next level", () => {
         "Saturday 7 March 2026, between 19:30 and 20:00, before the 20:00 dose: the first dose at or after the end of the record's wait (Sat 7 March, 20:00).",
       );
       expect(found[1]).toMatch(
-        /^It waits 72 hours after a change \(source \(\d+\) \w+\), longer than 90 % of steady state: 22\.5 hours\.$/,
+        /^The record waits 72 hours \(source \(\d+\) \w+\), longer than 90 % of steady state: 22\.5 hours\.$/,
       );
       const sources = buildSummary(summaryInputOf(summaryCase())).details.sources;
       const number = Number(/source \((\d+)\)/.exec(found[1]!)![1]);

@@ -5,7 +5,7 @@ import { windowDrawn } from "../windowDrawn.ts";
 
 export type WindowSide = "below" | "inside" | "above";
 
-/** Lower end of what is usual, g/dL (common practice): above it the correction is small, and told only where it changes what follows. */
+/** Lower end of what is usual, g/dL (common practice): from it on the usual form corrects by little, which is told only where it changes what follows. */
 const USUAL_FROM_G_PER_DL = 3.5;
 
 /**
@@ -24,7 +24,7 @@ export const phenytoinAlbumin: ConcernRule = (context) => {
   const sides = windowSidesForAlbumin(context, level.id);
   const isToxic = toxicMgPerL !== undefined && figure.value >= toxicMgPerL;
   const albuminGPerDl = figure.inputs.find(({ name }) => name === "albumin")?.value;
-  const isSmall = albuminGPerDl !== undefined && albuminGPerDl >= USUAL_FROM_G_PER_DL;
+  const isSmall = form === "usual" && albuminGPerDl !== undefined && albuminGPerDl >= USUAL_FROM_G_PER_DL;
   if (isSmall && !isToxic && sides?.measuredSide === sides?.correctedSide) return [];
   const data = {
     atMs: clockMs(context, level.atH),
